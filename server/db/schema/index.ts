@@ -1,0 +1,13 @@
+/** All tables, for drizzle-kit and the client's types; code imports a table from its own file. */
+export * from './auth.ts'
+export * from './studios.ts'
+export * from './shoots.ts'
+export * from './people.ts'
+export * from './uploads.ts'
+export * from './realtime.ts'
+export * from './sign-off.ts'
+export * from './comments.ts'
+export * from './private.ts'
+export * from './call-sheet.ts'
+export * from './money.ts'
+export * from './mail.ts'

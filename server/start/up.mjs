@@ -1,0 +1,146 @@
+import { ensureBuilt } from './build.mjs'
+import { PrivateCluster, ensurePostgres } from './cluster.mjs'
+import { startVite } from './dev.mjs'
+import { ensurePackages } from './packages.mjs'
+import { isRoot, openPlace, readSettings, rootDir, shortHash, writeSettings } from './place.mjs'
+import { addressesFor, anyFreePort, nextFreePort } from './ports.mjs'
+import { Plain, pause, say } from './say.mjs'
+import { Server, awaitOrphanedServer } from './serve.mjs'
+import { askHolder, tryHold } from './single.mjs'
+
+const DEFAULT_PORT = 4000
+
+/**
+ * @typedef {{ toStop: (stop: () => Promise<void>) => void, fail: (error: unknown) => void }} Life
+ */
+
+/** The name under which one start, backup or restore of this checkout excludes the others. */
+export const holdName = `run-${shortHash(`${rootDir} ${process.env['SCONCE_DATA_DIR'] ?? ''} ${isRoot ? 0 : process.getuid?.()}`)}`
+
+/**
+ * From a fresh clone to a served Sconce; returns once it is ready, and goes on watching.
+ *
+ * @param {Life & { isDev: boolean }} options
+ */
+export async function start({ isDev, toStop, fail }) {
+  const external = process.env['DATABASE_URL'] || undefined
+  const hold = external === undefined ? await holdOrSay() : undefined
+  if (external === undefined && hold === undefined) return
+  toStop(async () => hold?.release())
+
+  const place = openPlace()
+  await ensurePackages()
+  const settings = readSettings(place)
+
+  await awaitOrphanedServer(settings.serverPid)
+  // The build needs no database, and the database no build.
+  const building = isDev ? Promise.resolve() : ensureBuilt()
+  building.catch(() => {})
+  let databaseUrl = external
+  /** @type {number | undefined} */
+  let pgPort
+  if (databaseUrl === undefined) {
+    const { bin } = await ensurePostgres(place.pgData)
+    const cluster = new PrivateCluster(place, settings, bin)
+    toStop(async () => {
+      await cluster.stop()
+      say(`Stopped. The data is kept in ${place.dataDir}.`)
+    })
+    await cluster.start()
+    cluster.watch(fail)
+    const { urlFor } = await import('./sql.mjs')
+    databaseUrl = urlFor(cluster.appLogin)
+    pgPort = cluster.port
+  }
+  await migrate(databaseUrl)
+  await building
+
+  const { host, wantedPort, port } = await choosePort()
+  const serverPort = isDev ? await anyFreePort() : port
+  const publicUrl = process.env['PUBLIC_URL'] || undefined
+  const given = (process.env['TRUSTED_ORIGINS'] ?? '').split(/[\s,]+/).filter(Boolean)
+  const addresses = addressesFor({ host, port, wantedPort, publicUrl, trustedOrigins: given })
+  const server = new Server(
+    {
+      NODE_ENV: process.env['NODE_ENV'] || (isDev ? 'development' : 'production'),
+      LOG_LEVEL: process.env['LOG_LEVEL'] || 'warn',
+      DATABASE_URL: databaseUrl,
+      HOST: isDev ? '127.0.0.1' : host,
+      PORT: String(serverPort),
+      PUBLIC_URL: addresses.publicUrl,
+      TRUSTED_ORIGINS: addresses.trustedOrigins.join(' '),
+      BETTER_AUTH_SECRET: process.env['BETTER_AUTH_SECRET'] || settings.authSecret,
+      SCONCE_DEMO: external === undefined ? '1' : '0',
+      SCONCE_EMBEDDED: external === undefined ? '1' : '0',
+    },
+    {
+      giveUp: fail,
+      onPid: (pid) => {
+        settings.serverPid = pid
+        writeSettings(place, settings)
+      },
+    },
+  )
+  toStop(async () => {
+    hold?.tell({ doing: 'stopping' })
+    say('\nStopping: finishing what is under way …')
+    await server.stop()
+  })
+  await server.start()
+  if (isDev) {
+    const vite = await startVite({ host, port, serverPort, onServerChange: () => server.restart() })
+    toStop(vite.stop)
+  }
+  hold?.tell({ doing: 'running', url: addresses.publicUrl, ...(pgPort === undefined ? {} : { pgPort }) })
+  say(`\nSconce is ready at ${addresses.publicUrl}`)
+  say('Stop it with Ctrl-C.')
+}
+
+/** Takes this checkout for us, or says who has it. */
+async function holdOrSay() {
+  for (;;) {
+    const hold = await tryHold(holdName, { doing: 'starting' })
+    if (hold !== undefined) return hold
+    const holder = await askHolder(holdName)
+    if (holder?.doing === 'running') {
+      say(`Sconce is already running from this folder, at ${holder.url} (process ${holder.pid}).`)
+      return undefined
+    }
+    if (holder?.doing === 'starting') {
+      say(`Sconce is already being started from this folder (process ${holder.pid}); it prints its address there.`)
+      return undefined
+    }
+    if (holder?.doing === 'backup' || holder?.doing === 'restore') {
+      throw new Plain(`A ${holder.doing} of this folder's data is under way (process ${holder.pid}). Start again when it is done.`)
+    }
+    // It is stopping, or has just gone.
+    await pause(250)
+  }
+}
+
+/** @param {string} databaseUrl */
+async function migrate(databaseUrl) {
+  const { tsImport } = await import('tsx/esm/api')
+  const { migrateDatabase } = await tsImport('../db/migrate.ts', import.meta.url)
+  try {
+    await migrateDatabase(databaseUrl)
+  } catch (error) {
+    const { hostname, port, pathname } = new URL(databaseUrl)
+    const cause = error instanceof Error ? (error.cause instanceof Error ? error.cause : error) : undefined
+    throw new Plain(
+      `The database at ${hostname}:${port || 5432}${pathname} could not be brought up to date: ` +
+        `${cause?.message || (cause !== undefined && 'code' in cause ? String(cause.code) : String(error))}`,
+    )
+  }
+}
+
+async function choosePort() {
+  const host = process.env['HOST'] || '127.0.0.1'
+  const wantedPort = Number(process.env['PORT'] || DEFAULT_PORT)
+  if (!Number.isInteger(wantedPort) || wantedPort < 1 || wantedPort > 65535) {
+    throw new Plain(`PORT is "${process.env['PORT']}"; it has to be a whole number from 1 to 65535.`)
+  }
+  const port = await nextFreePort(wantedPort, host)
+  if (port !== wantedPort) say(`Port ${wantedPort} is taken by another program; using ${port}.`)
+  return { host, wantedPort, port }
+}

@@ -1,0 +1,16 @@
+import type { ComponentProps, ReactNode } from 'react'
+import { cn } from '#src/lib/cn.ts'
+
+export type SwingTagProps = Omit<ComponentProps<'div'>, 'title'> & { title?: ReactNode }
+
+/** A wardrobe tag: cut corners and an eyelet. Lists in it get hairlines. */
+export function SwingTag({ title, className, children, ...rest }: SwingTagProps) {
+  return (
+    <div {...rest} className={cn('swing-tag', className)}>
+      <div>
+        {title !== undefined && <h3 className="text-[1rem] leading-snug">{title}</h3>}
+        <div className="text-[0.78125rem] [&_ul]:mt-1.5 max-md:text-[0.8125rem]">{children}</div>
+      </div>
+    </div>
+  )
+}

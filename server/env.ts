@@ -33,9 +33,7 @@ const flag = z
   .default('0')
   .transform((value) => value === '1' || value === 'true')
 
-const origin = z
-  .url({ protocol: /^https?$/ })
-  .transform((value) => new URL(value).origin)
+const origin = z.url({ protocol: /^https?$/ }).transform((value) => new URL(value).origin)
 
 const postgresUrl = z.url({ protocol: /^postgres(ql)?$/, error: 'must be a postgres:// address' })
 const smtpUrl = z.url({ protocol: /^smtps?$/, error: 'must be an smtp:// or smtps:// address' })

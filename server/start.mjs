@@ -27,7 +27,9 @@ async function stopEverything(exitCode) {
 /** @param {unknown} error */
 function fail(error) {
   if (isStopping) return
-  process.stderr.write(`\n${error instanceof Plain ? error.message : error instanceof Error ? error.stack : String(error)}\n`)
+  process.stderr.write(
+    `\n${error instanceof Plain ? error.message : error instanceof Error ? error.stack : String(error)}\n`,
+  )
   void stopEverything(1)
 }
 

@@ -76,7 +76,8 @@ async function readManifest(file) {
     if (manifest.dumpBytes !== size - END_BYTES - length) throw new SyntaxError('wrong length')
     return manifest
   } catch (error) {
-    if (error instanceof SyntaxError) throw new Plain(`${file} is damaged: its manifest cannot be read. Nothing was changed.`)
+    if (error instanceof SyntaxError)
+      throw new Plain(`${file} is damaged: its manifest cannot be read. Nothing was changed.`)
     throw error
   } finally {
     await handle.close()

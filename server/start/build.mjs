@@ -23,7 +23,11 @@ export function fingerprintOf(base, names) {
     const entries = /** @type {string[]} */ ([name])
     for (let entry = entries.pop(); entry !== undefined; entry = entries.pop()) {
       const children = readFolder(join(base, entry))
-      if (children === undefined) hash.update(`${entry}\0`).update(readFileSync(join(base, entry))).update('\0')
+      if (children === undefined)
+        hash
+          .update(`${entry}\0`)
+          .update(readFileSync(join(base, entry)))
+          .update('\0')
       else entries.push(...children.map((child) => `${entry}/${child}`))
     }
   }

@@ -86,7 +86,8 @@ export class PrivateCluster {
         makeCluster({ bin: this.#bin, data: pgData, password: this.#settings.adminPassword, sync: true }),
       )
     }
-    if (await stopOrphan(pgData)) say('A database that an earlier start left running was stopped first; its data is whole.')
+    if (await stopOrphan(pgData))
+      say('A database that an earlier start left running was stopped first; its data is whole.')
     this.#turnLog()
     const kept = this.#settings.pgPort
     let port = kept !== undefined && (await isFree(kept, '127.0.0.1')) ? kept : await anyFreePort()
@@ -156,7 +157,9 @@ export class PrivateCluster {
     while (!this.#isStopping && performance.now() - startedAtMs < 60_000) {
       try {
         this.#running = await this.#run(this.#port)
-        say(`The database is back after ${((performance.now() - startedAtMs) / 1000).toFixed(1)} s; everything committed is there.`)
+        say(
+          `The database is back after ${((performance.now() - startedAtMs) / 1000).toFixed(1)} s; everything committed is there.`,
+        )
         return
       } catch (error) {
         reason = error

@@ -53,7 +53,8 @@ export function findInstallations() {
 function runsAs() {
   if (!isRoot) return undefined
   try {
-    const id = (/** @type {string} */ kind) => Number(execFileSync('id', [kind, 'postgres'], { encoding: 'utf8', stdio: 'pipe' }))
+    const id = (/** @type {string} */ kind) =>
+      Number(execFileSync('id', [kind, 'postgres'], { encoding: 'utf8', stdio: 'pipe' }))
     return { uid: id('-u'), gid: id('-g') }
   } catch {
     throw new Plain(
@@ -153,11 +154,15 @@ async function startOnce({ bin, data, log, port, durable }) {
     ...(durable ? safeSettings : fastSettings),
   ]
   // A session of its own: Ctrl-C reaches only us, and we stop the server before the database.
-  const child = spawn(join(bin, 'postgres'), ['-D', data, '-p', String(port), ...settings.flatMap((one) => ['-c', one])], {
-    ...asDatabaseUser(),
-    detached: true,
-    stdio: ['ignore', logFd, logFd],
-  })
+  const child = spawn(
+    join(bin, 'postgres'),
+    ['-D', data, '-p', String(port), ...settings.flatMap((one) => ['-c', one])],
+    {
+      ...asDatabaseUser(),
+      detached: true,
+      stdio: ['ignore', logFd, logFd],
+    },
+  )
   closeSync(logFd)
   /** @type {Exit | undefined} */
   let exit

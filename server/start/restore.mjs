@@ -35,7 +35,9 @@ export async function restore(name, life) {
   await ensurePackages()
   const manifest = await step(`Checking ${file}`, () => readArchive(file))
   if (manifest.lastMigrationMs > newestMigrationMs()) {
-    throw new Plain('This backup was made by a newer Sconce than this one. Update the checkout, then restore. Nothing was changed.')
+    throw new Plain(
+      'This backup was made by a newer Sconce than this one. Update the checkout, then restore. Nothing was changed.',
+    )
   }
   const place = openPlace()
   const { bin } = await ensurePostgres(place.pgData)
@@ -46,14 +48,19 @@ export async function restore(name, life) {
   const present = cluster.adminLogin()
   const fresh = cluster.adminLogin('sconce_restoring')
   await withConnection(urlFor(cluster.adminLogin('postgres')), async (admin) => {
-    for (const leftover of [fresh.database, REPLACED]) await admin.query(`drop database if exists ${leftover} with (force)`)
+    for (const leftover of [fresh.database, REPLACED])
+      await admin.query(`drop database if exists ${leftover} with (force)`)
     await admin.query(`create database ${fresh.database} owner ${cluster.appLogin.user} template template0`)
     try {
-      await step('Reading the backup into a fresh database', () => fill(bin, fresh, cluster.appLogin.user, file, manifest))
+      await step('Reading the backup into a fresh database', () =>
+        fill(bin, fresh, cluster.appLogin.user, file, manifest),
+      )
       const found = await step('Comparing it with what the backup says', () => contentsIn(urlFor(fresh)))
       const wrong = differences(manifest, found)
       if (wrong.length > 0) {
-        throw new Plain(`The restored data is not what was backed up:\n${wrong.join('\n')}\nThe present data was left as it is.`)
+        throw new Plain(
+          `The restored data is not what was backed up:\n${wrong.join('\n')}\nThe present data was left as it is.`,
+        )
       }
       const before = await contentsIn(urlFor(present))
       if (Object.keys(before.tables).length > 0) {
@@ -72,7 +79,9 @@ export async function restore(name, life) {
       throw error
     }
   })
-  say(`Restored ${describeTables(manifest.tables)}, made ${manifest.madeAt}; every table's rows and content match the backup.`)
+  say(
+    `Restored ${describeTables(manifest.tables)}, made ${manifest.madeAt}; every table's rows and content match the backup.`,
+  )
   say('Start Sconce again with npm start.')
 }
 
@@ -99,7 +108,13 @@ async function contentsIn(url) {
  * @param {import('./archive.mjs').Manifest} manifest
  */
 async function fill(bin, login, owner, file, manifest) {
-  const args = ['--no-owner', '--no-privileges', `--role=${owner}`, '--single-transaction', `--dbname=${login.database}`]
+  const args = [
+    '--no-owner',
+    '--no-privileges',
+    `--role=${owner}`,
+    '--single-transaction',
+    `--dbname=${login.database}`,
+  ]
   const child = spawn(join(bin, 'pg_restore'), args, { env: connectionEnv(login), stdio: ['pipe', 'ignore', 'pipe'] })
   let said = ''
   child.stderr.setEncoding('utf8').on('data', (text) => (said += text))

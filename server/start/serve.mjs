@@ -81,7 +81,9 @@ export class Server {
       if (!this.#isRestarting) {
         this.#endsAtMs = [...this.#endsAtMs.filter((atMs) => nowMs - atMs < 60_000), nowMs]
         if (this.#endsAtMs.length >= MOST_ENDS) {
-          this.#giveUp(new Plain(`The server ended ${MOST_ENDS} times within a minute (last: ${how}); what it said stands above.`))
+          this.#giveUp(
+            new Plain(`The server ended ${MOST_ENDS} times within a minute (last: ${how}); what it said stands above.`),
+          )
           return
         }
         say(`The server stopped by itself (${how}). Starting it again; what was saved is saved.`)

@@ -111,7 +111,9 @@ async function holdOrSay() {
       return undefined
     }
     if (holder?.doing === 'backup' || holder?.doing === 'restore') {
-      throw new Plain(`A ${holder.doing} of this folder's data is under way (process ${holder.pid}). Start again when it is done.`)
+      throw new Plain(
+        `A ${holder.doing} of this folder's data is under way (process ${holder.pid}). Start again when it is done.`,
+      )
     }
     // It is stopping, or has just gone.
     await pause(250)

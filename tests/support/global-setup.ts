@@ -4,7 +4,7 @@ import { startCluster, type Cluster } from '#tests/support/cluster.ts'
 import { TEMPLATE, databaseUrl, onCluster } from '#tests/support/template.ts'
 
 declare module 'vitest' {
-  // Vitest reads its provided values from this interface; only merging can add to it.
+  // eslint-disable-next-line @typescript-eslint/consistent-type-definitions -- only an interface can be added to
   export interface ProvidedContext {
     pgUrl: string
   }

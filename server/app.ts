@@ -1,0 +1,71 @@
+import { sql } from 'drizzle-orm'
+import express, { type Express, Router } from 'express'
+import type { Logger } from 'pino'
+import type { Documents } from '#server/adapters/documents.ts'
+import type { Auth } from '#server/auth/auth.ts'
+import { signedIn } from '#server/auth/session.ts'
+import type { Db } from '#server/db/client.ts'
+import { shootsRoutes } from '#server/features/shoots/routes.ts'
+import { signOffRoutes } from '#server/features/sign-off/routes.ts'
+import { studiosRoutes } from '#server/features/studios/routes.ts'
+import { uploadsRoutes } from '#server/features/uploads/routes.ts'
+import { authRoute } from '#server/http/auth-routes.ts'
+import { errorHandler, nothingHere } from '#server/http/errors.ts'
+import { HTTP_LIMITS, type HttpLimits } from '#server/http/limits.ts'
+import { logRequests } from '#server/http/log-requests.ts'
+import { pages } from '#server/http/pages.ts'
+import { withCtx } from '#server/http/request-ctx.ts'
+import { requireOwnOrigin, securityHeaders } from '#server/http/security.ts'
+
+export type AppDeps = {
+  db: Db
+  auth: Auth
+  documents: Documents
+  now: () => Date
+  /** Address as people reach it, without a slash at the end. */
+  publicUrl: string
+  trustedOrigins: readonly string[]
+  log: Logger
+  /** Folder of the built client. */
+  clientDir: string
+  /** Letters are caught here and shown at /letters. */
+  letters: boolean
+  /** False once the process is going down: balancers look elsewhere. */
+  isServing?: () => boolean
+  limits?: Partial<HttpLimits>
+}
+
+/** The whole HTTP side over its dependencies; never listens. */
+export function createApp(deps: AppDeps): Express {
+  const { db, auth, documents, now, publicUrl, trustedOrigins, log, letters } = deps
+  const limits = { ...HTTP_LIMITS, ...deps.limits }
+  const app = express()
+  app.set('trust proxy', 'loopback')
+  app.set('query parser', 'simple')
+  app.disable('x-powered-by')
+  app.use(logRequests(log), securityHeaders(publicUrl.startsWith('https:')))
+
+  app.get('/healthz', (_req, res) => void res.json({ ok: true }))
+  app.get('/readyz', async (_req, res) => {
+    const ok = (deps.isServing?.() ?? true) && (await db.execute(sql`select 1`).then(() => true, () => false))
+    res.status(ok ? 200 : 503).json({ ok })
+  })
+
+  const api = Router()
+  api.use((_req, res, next) => {
+    res.set('cache-control', 'no-store')
+    next()
+  })
+  api.use(requireOwnOrigin(trustedOrigins))
+  api.use(express.json({ limit: '1mb' }))
+  api.all('/auth/*path', authRoute(auth, publicUrl))
+  api.use(withCtx({ db, documents, now, publicUrl, actorOf: (req) => signedIn(auth, req.headers) }))
+  api.use(studiosRoutes({ letters }), shootsRoutes())
+  api.use(uploadsRoutes(limits.uploadsPerMin), signOffRoutes())
+
+  api.use(nothingHere)
+  app.use('/api', api)
+  app.use(pages(deps.clientDir))
+  app.use(errorHandler(log))
+  return app
+}

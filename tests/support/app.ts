@@ -1,0 +1,88 @@
+import { once } from 'node:events'
+import { mkdtempSync, rmSync, writeFileSync } from 'node:fs'
+import { type Server, createServer } from 'node:http'
+import { tmpdir } from 'node:os'
+import { join } from 'node:path'
+import type { Express } from 'express'
+import type pg from 'pg'
+import { pino } from 'pino'
+import { type AppDeps, createApp } from '#server/app.ts'
+import { makeAuth } from '#server/auth/auth.ts'
+import type { Ctx } from '#server/context.ts'
+import { type Db, connectDatabase } from '#server/db/client.ts'
+import { type Clock, clockAt } from '#tests/support/clock.ts'
+import { createTestDatabase } from '#tests/support/database.ts'
+import { type FakeDocuments, fakeDocuments } from '#tests/support/documents.ts'
+
+export type TestApp = {
+  app: Express
+  /** Where it listens. */
+  url: string
+  db: Db
+  pool: pg.Pool
+  clock: Clock
+  documents: FakeDocuments
+  /** A verb's world without anybody signed in. */
+  ctx: Ctx
+  close: () => Promise<void>
+}
+
+export const TEST_ORIGIN = 'http://localhost:4103'
+const GENEROUS = 100_000
+
+/** The real app on a database and a port of its own. The clock stands at the given time; sessions follow the real one. */
+export async function startTestApp(
+  more: Partial<AppDeps> & { clock?: Clock; signInsPerMin?: number } = {},
+): Promise<TestApp> {
+  const database = await createTestDatabase()
+  const { db, pool } = connectDatabase(database.url, () => undefined)
+  const clock = more.clock ?? clockAt(new Date().toISOString())
+  const documents = fakeDocuments(db)
+  const clientDir = mkdtempSync(join(tmpdir(), 'sconce-client-'))
+  writeFileSync(join(clientDir, 'index.html'), '<!doctype html><title>Sconce</title>')
+  const auth = makeAuth(db, {
+    secret: 'a secret that only these tests know, long enough',
+    publicUrl: TEST_ORIGIN,
+    trustedOrigins: [TEST_ORIGIN],
+    signInsPerMin: more.signInsPerMin ?? GENEROUS,
+  })
+  const app = createApp({
+    db,
+    auth,
+    documents,
+    now: clock.now,
+    publicUrl: TEST_ORIGIN,
+    trustedOrigins: [TEST_ORIGIN],
+    log: pino({ level: 'silent' }),
+    clientDir,
+    letters: true,
+    limits: { invitationsPerMin: GENEROUS, uploadsPerMin: GENEROUS },
+    ...more,
+  })
+  const server = createServer(app)
+  server.listen(0, '127.0.0.1')
+  await once(server, 'listening')
+  const ctx: Ctx = { db, actor: null, now: clock.now, documents, publicUrl: TEST_ORIGIN }
+  return {
+    app,
+    url: addressOf(server),
+    db,
+    pool,
+    clock,
+    documents,
+    ctx,
+    close: async () => {
+      server.closeAllConnections()
+      await new Promise((resolve) => server.close(resolve))
+      await pool.end()
+      await database.drop()
+      rmSync(clientDir, { recursive: true, force: true })
+    },
+  }
+}
+
+function addressOf(server: Server): string {
+  const address = server.address()
+  if (typeof address !== 'object' || address === null) throw new Error('The server does not listen on a port.')
+  return `http://127.0.0.1:${address.port}`
+}

@@ -17,11 +17,11 @@ const LARGEST_LOG_BYTES = 5_000_000
  *
  * The programs for this data: of the version that made it, or the newest for data yet to be made.
  *
- * @param {string} pgData
+ * @param {string} [pgData]
  */
 export async function ensurePostgres(pgData) {
-  const version = join(pgData, 'PG_VERSION')
-  const major = existsSync(version) ? Number(readFileSync(version, 'utf8').trim()) : undefined
+  const version = pgData === undefined ? undefined : join(pgData, 'PG_VERSION')
+  const major = version !== undefined && existsSync(version) ? Number(readFileSync(version, 'utf8').trim()) : undefined
   const find = () => findInstallations().find((one) => major === undefined || one.major === major)
   let found = find()
   if (found !== undefined) return found

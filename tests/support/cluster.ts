@@ -1,5 +1,5 @@
 import { randomBytes } from 'node:crypto'
-import { mkdirSync, mkdtempSync, readdirSync, rmSync } from 'node:fs'
+import { mkdtempSync, rmSync } from 'node:fs'
 import { tmpdir } from 'node:os'
 import { join } from 'node:path'
 import { anyFreePort } from '#server/start/ports.mjs'
@@ -9,8 +9,8 @@ import {
   giveToDatabaseUser,
   makeCluster,
   startPostgres,
-  stopOrphan,
 } from '#server/start/postgres.mjs'
+import { clusterPrefix, removeLeftovers } from '#tests/support/leftovers.mjs'
 
 export type Cluster = {
   /** The superuser's address of the database "postgres". */
@@ -21,8 +21,6 @@ export type Cluster = {
   /** Stops it and removes its folder. */
   stop: () => Promise<void>
 }
-
-const prefix = 'sconce-test-'
 
 /**
  * Starts a cluster of its own in a temporary folder. `durable` decides whether what is committed
@@ -35,7 +33,7 @@ export async function startCluster(options: { durable: boolean }): Promise<Clust
     throw new Error('PostgreSQL is not installed. `npm test` installs it; so does apt-get install postgresql.')
   }
   const { bin } = installation
-  const folder = mkdtempSync(join(tmpdir(), `${prefix}${process.pid}-`))
+  const folder = mkdtempSync(join(tmpdir(), `${clusterPrefix}${process.pid}-`))
   giveToDatabaseUser(folder)
   const data = join(folder, 'data')
   const password = randomBytes(16).toString('hex')
@@ -53,30 +51,5 @@ export async function startCluster(options: { durable: boolean }): Promise<Clust
     } catch (error) {
       if (!(error instanceof PortTaken) || attempt >= 5) throw error
     }
-  }
-}
-
-/** A run that was killed leaves its cluster running; the next one clears it away. */
-async function removeLeftovers(): Promise<void> {
-  mkdirSync(tmpdir(), { recursive: true })
-  for (const name of readdirSync(tmpdir())) {
-    const owner = new RegExp(`^${prefix}(\\d+)-`).exec(name)?.[1]
-    if (owner === undefined || isAlive(Number(owner))) continue
-    const folder = join(tmpdir(), name)
-    try {
-      await stopOrphan(join(folder, 'data'))
-      rmSync(folder, { recursive: true, force: true })
-    } catch {
-      // Somebody else's, and not ours to clear.
-    }
-  }
-}
-
-function isAlive(pid: number): boolean {
-  try {
-    process.kill(pid, 0)
-    return true
-  } catch (error) {
-    return error instanceof Error && 'code' in error && error.code === 'EPERM'
   }
 }

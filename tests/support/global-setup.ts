@@ -1,7 +1,6 @@
 import type { TestProject } from 'vitest/node'
-import { migrateDatabase } from '#server/db/migrate.ts'
-import { startCluster, type Cluster } from '#tests/support/cluster.ts'
-import { TEMPLATE, databaseUrl, onCluster } from '#tests/support/template.ts'
+import type { Cluster } from '#tests/support/cluster.ts'
+import { startMigratedCluster } from '#tests/support/migrated-cluster.ts'
 
 declare module 'vitest' {
   // eslint-disable-next-line @typescript-eslint/consistent-type-definitions -- only an interface can be added to
@@ -14,21 +13,9 @@ declare module 'vitest' {
 let starting: Promise<Cluster> | undefined
 let users = 0
 
-async function startMigrated(): Promise<Cluster> {
-  const cluster = await startCluster({ durable: false })
-  try {
-    await onCluster(cluster.url, `create database ${TEMPLATE}`)
-    await migrateDatabase(databaseUrl(cluster.url, TEMPLATE))
-    return cluster
-  } catch (error) {
-    await cluster.stop()
-    throw error
-  }
-}
-
 export async function setup(project: TestProject): Promise<() => Promise<void>> {
   users += 1
-  starting ??= startMigrated()
+  starting ??= startMigratedCluster()
   const cluster = await starting
   project.provide('pgUrl', cluster.url)
   return async () => {

@@ -96,8 +96,14 @@ function inside(picture: Sharp, longEdgePx: number): Sharp {
   return picture.resize(longEdgePx, longEdgePx, { fit: 'inside', withoutEnlargement: true })
 }
 
+/** Picked pixels, not averaged ones: averages along edges are colours that the picture has not. */
 async function smallRgb(picture: Sharp): Promise<Uint8Array> {
-  return inside(picture.flatten({ background: '#ffffff' }), PALETTE_EDGE_PX).toColourspace('srgb').removeAlpha().raw().toBuffer()
+  return picture
+    .flatten({ background: '#ffffff' })
+    .resize(PALETTE_EDGE_PX, PALETTE_EDGE_PX, { fit: 'inside', withoutEnlargement: true, kernel: 'nearest' })
+    .toColourspace('srgb')
+    .raw()
+    .toBuffer()
 }
 
 function broken(cause: unknown): AppError {

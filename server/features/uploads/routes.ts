@@ -7,7 +7,7 @@ import { endpoint } from '#server/http/endpoint.ts'
 import { HTTP_LIMITS, limitPerMin } from '#server/http/limits.ts'
 import { ctxOf } from '#server/http/request-ctx.ts'
 import { findRendition } from './find-rendition.ts'
-import { receiveFile } from './receive-file.ts'
+import { receiveFile } from '#server/http/receive-file.ts'
 import { requireUpload } from './require-upload.ts'
 import { storeUpload } from './store-upload.ts'
 

@@ -1,5 +1,5 @@
 import { checkNode } from './start/packages.mjs'
-import { Plain, say } from './start/say.mjs'
+import { Plain, say, stopWithNpm } from './start/say.mjs'
 
 // Everything from a fresh clone to a running Sconce. This file and ./start import nothing but Node's own
 // modules until the packages are in place.
@@ -45,6 +45,8 @@ for (const signal of /** @type {const} */ (['SIGINT', 'SIGTERM', 'SIGHUP'])) {
     }
   })
 }
+
+stopWithNpm(() => void stopEverything(0))
 
 /** @type {{ toStop: (stop: () => Promise<void>) => void, fail: (error: unknown) => void }} */
 const life = { toStop: (stop) => void toStop.push(stop), fail }

@@ -8,7 +8,7 @@ import { ensurePostgres } from '../server/start/cluster.mjs'
 import { debianPackages, installDebianPackages } from '../server/start/debian.mjs'
 import { checkNode, ensurePackages } from '../server/start/packages.mjs'
 import { rootDir } from '../server/start/place.mjs'
-import { Plain, pause, say, step, tail } from '../server/start/say.mjs'
+import { Plain, pause, say, step, stopWithNpm, tail } from '../server/start/say.mjs'
 import { removeLeftovers } from './support/leftovers.mjs'
 
 // Every check and test, from a fresh clone. `--check` leaves out what needs a database or a browser; any other
@@ -176,23 +176,29 @@ async function everything() {
 
 /** Leaves nothing running, whatever way the run ends. */
 async function cleanUp() {
+  const groups = [...children].flatMap(({ pid }) => pid ?? [])
   for (const child of children) child.kill('SIGINT')
   for (let tries = 0; tries < 50 && children.size > 0; tries += 1) await pause(200)
-  for (const child of children) {
-    if (child.pid !== undefined) process.kill(-child.pid, 'SIGKILL')
+  for (const group of groups) {
+    try {
+      process.kill(-group, 'SIGKILL')
+    } catch {
+      // All of it has ended by itself.
+    }
   }
   await removeLeftovers()
   rmSync(reports, { recursive: true, force: true })
 }
 
-for (const signal of /** @type {const} */ (['SIGINT', 'SIGTERM', 'SIGHUP'])) {
-  process.on(signal, () => {
-    if (isStopping) return
-    isStopping = true
-    say('Stopping the tests and what they started …')
-    void cleanUp().then(() => process.exit(1))
-  })
+function stopRun() {
+  if (isStopping) return
+  isStopping = true
+  say('Stopping the tests and what they started …')
+  void cleanUp().then(() => process.exit(1))
 }
+
+process.on('SIGINT', stopRun).on('SIGTERM', stopRun).on('SIGHUP', stopRun)
+stopWithNpm(stopRun)
 
 try {
   checkNode()

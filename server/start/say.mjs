@@ -65,3 +65,20 @@ export function run(command, args, options = {}) {
 export function tail(text, lines = 15) {
   return text.trimEnd().split('\n').slice(-lines).join('\n')
 }
+
+/**
+ * Under npm, this process is to end with npm however that ends; without it nobody would see that we
+ * are still there.
+ *
+ * @param {() => void} stop
+ */
+export function stopWithNpm(stop) {
+  if (process.env['npm_lifecycle_event'] === undefined) return
+  const parent = process.ppid
+  const timer = setInterval(() => {
+    if (process.ppid === parent) return
+    clearInterval(timer)
+    stop()
+  }, 300)
+  timer.unref()
+}

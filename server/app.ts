@@ -5,6 +5,11 @@ import type { Documents } from '#server/adapters/documents.ts'
 import type { Auth } from '#server/auth/auth.ts'
 import { signedIn } from '#server/auth/session.ts'
 import type { Db } from '#server/db/client.ts'
+import { commentsRoutes } from '#server/features/comments/routes.ts'
+import { kitRoutes } from '#server/features/kit/routes.ts'
+import { mailRoutes } from '#server/features/mail/routes.ts'
+import { peopleRoutes } from '#server/features/people/routes.ts'
+import { privateRoutes } from '#server/features/private/routes.ts'
 import { shootsRoutes } from '#server/features/shoots/routes.ts'
 import { signOffRoutes } from '#server/features/sign-off/routes.ts'
 import { studiosRoutes } from '#server/features/studios/routes.ts'
@@ -60,9 +65,10 @@ export function createApp(deps: AppDeps): Express {
   api.use(express.json({ limit: '1mb' }))
   api.all('/auth/*path', authRoute(auth, publicUrl))
   api.use(withCtx({ db, documents, now, publicUrl, actorOf: (req) => signedIn(auth, req.headers) }))
-  api.use(studiosRoutes({ letters }), shootsRoutes())
-  api.use(uploadsRoutes(limits.uploadsPerMin), signOffRoutes())
-
+  const { invitationsPerMin, uploadsPerMin } = limits
+  api.use(studiosRoutes({ letters, invitationsPerMin }), peopleRoutes({ auth, invitationsPerMin }), shootsRoutes(), kitRoutes())
+  api.use(commentsRoutes(), privateRoutes(), uploadsRoutes(uploadsPerMin), signOffRoutes())
+  if (letters) api.use(mailRoutes())
   api.use(nothingHere)
   app.use('/api', api)
   app.use(pages(deps.clientDir))

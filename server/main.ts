@@ -8,6 +8,8 @@ import { makeAuth } from '#server/auth/auth.ts'
 import { signedIn } from '#server/auth/session.ts'
 import { connectDatabase } from '#server/db/client.ts'
 import { migrateDatabase } from '#server/db/migrate.ts'
+import { createPerson } from '#server/auth/create-person.ts'
+import { ensureDemo } from '#server/demo/ensure-demo.ts'
 import { parseEnv } from '#server/env.ts'
 import { startMailWorker } from '#server/features/mail/mail-worker.ts'
 import { HTTP_LIMITS } from '#server/http/limits.ts'
@@ -27,7 +29,12 @@ const { db, pool } = connectDatabase(env.databaseUrl, (error) => log.warn({ err:
 const now = () => new Date()
 const { publicUrl, trustedOrigins } = env
 const auth = makeAuth(db, { secret: env.authSecret, publicUrl, trustedOrigins, signInsPerMin: HTTP_LIMITS.signInsPerMin })
-const realtime = createRealtime({ db, pool, databaseUrl: env.databaseUrl, auth: (headers) => signedIn(auth, headers), trustedOrigins, log })
+const realtime = createRealtime({ db, databaseUrl: env.databaseUrl, auth: (headers) => signedIn(auth, headers), trustedOrigins, log })
+
+if (env.demo) {
+  const put = await ensureDemo({ db, now, documents: realtime.documents, publicUrl, createUser: (person) => createPerson(auth, db, person) })
+  if (put) log.info('the demo shoot is in')
+}
 
 // Letters are caught here only where nobody else can come and read them.
 const letters = env.smtpUrl === undefined && isLoopback(env.host) && isLoopback(new URL(publicUrl).hostname)

@@ -47,8 +47,19 @@ export const shootSchema = z.object({
 })
 export type ShootView = z.infer<typeof shootSchema>
 
-/** PATCH /api/shoots/:shootId/brief → brief */
-export const briefPatchSchema = briefFieldsSchema.omit({ location: true }).partial()
+/** PATCH /api/shoots/:shootId/brief → brief. Without the defaults: what is not sent stays as it is. */
+const brief = briefFieldsSchema.shape
+export const briefPatchSchema = z
+  .object({
+    title: brief.title,
+    client: brief.client.unwrap(),
+    idea: brief.idea.unwrap(),
+    usage: brief.usage.unwrap(),
+    date: brief.date.unwrap(),
+    zone: brief.zone,
+    signOffByMs: brief.signOffByMs.unwrap(),
+  })
+  .partial()
 /** PUT /api/shoots/:shootId/location → brief */
 export const locationInputSchema = locationSchema
 /** POST /api/shoots/:shootId/rooms, PUT …/rooms/:roomId, DELETE …/rooms/:roomId → brief */

@@ -13,3 +13,9 @@ export async function getBrief(db: Db | Tx, shootId: ShootId): Promise<Brief> {
   const deliverables = await db.select().from(deliverable).where(eq(deliverable.shootId, shootId)).orderBy(asc(deliverable.position), asc(deliverable.id))
   return briefSchema.parse({ ...row.shoot, location: row.location ?? {}, rooms, deliverables })
 }
+
+/** Holds a shoot's row until the transaction ends, so that changes of its lists and people come one after another. */
+export async function lockShoot(tx: Tx, shootId: ShootId): Promise<void> {
+  const found = await tx.select({ id: shoot.id }).from(shoot).where(eq(shoot.id, shootId)).for('update')
+  if (found.length === 0) throw new AppError('NOT_FOUND', 'There is no such shoot, or you do not belong to it.')
+}

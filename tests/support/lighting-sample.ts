@@ -39,7 +39,15 @@ export function modifier(n: number, name: string, more: Record<string, unknown> 
     kitId: id(n),
     version: 1,
     name,
-    numbers: { shape: 'octa' as const, widthM: 0.9, heightM: 0.9, lossStops: stated(0), beamDeg: null, massKg: stated(1), ...more },
+    numbers: {
+      shape: 'octa' as const,
+      widthM: 0.9,
+      heightM: 0.9,
+      lossStops: stated(0),
+      beamDeg: null,
+      massKg: stated(1),
+      ...more,
+    },
   }
 }
 
@@ -52,19 +60,30 @@ export function gel(n: number, name: string, miredShift: number, transmission: n
     kitId: id(n),
     version: 1,
     name,
-    numbers: { miredShift: stated(miredShift), printedMired: null, transmission: stated(transmission), colour: '#ffffff' },
+    numbers: {
+      miredShift: stated(miredShift),
+      printedMired: null,
+      transmission: stated(transmission),
+      colour: '#ffffff',
+    },
   }
 }
 export const FULL_WARM = gel(921, 'Full warm +167', 167, 0.47)
 export const HALF_BLUE = gel(922, 'Half blue −68', -68, 0.52)
 
 export function support(n: number, name: string, kind: 'stand' | 'boom', maxHeightM = 2.4, maxLoadKg = 3) {
-  return { kitId: id(n), version: 1, name, numbers: { kind, maxHeightM: stated(maxHeightM), maxLoadKg: stated(maxLoadKg) } }
+  return {
+    kitId: id(n),
+    version: 1,
+    name,
+    numbers: { kind, maxHeightM: stated(maxHeightM), maxLoadKg: stated(maxLoadKg) },
+  }
 }
 export const STAND = support(931, '2.4 m stand', 'stand')
 export const BOOM = support(932, 'Boom arm', 'boom', 3)
 
-type LightInput = Omit<z.input<typeof lightSchema>, 'id' | 'setupId' | 'unit' | 'power'> & Partial<z.input<typeof lightSchema>>
+type LightInput = Omit<z.input<typeof lightSchema>, 'id' | 'setupId' | 'unit' | 'power'> &
+  Partial<z.input<typeof lightSchema>>
 
 export function light(n: number, input: LightInput): Light {
   return lightSchema.parse({ id: id(n), setupId: id(1), unit: unit(), power: 0.25, support: STAND, ...input })
@@ -85,14 +104,31 @@ export function whole(input: {
     setup: setupSchema.parse({
       id: setupId,
       name: 'Sample',
-      camera: { at: [0, 1.4, 3], focalMm: 85, fNumber: 8, iso: 100, shutterS: 1 / 160, whiteBalanceK: 5500, ...input.camera },
+      camera: {
+        at: [0, 1.4, 3],
+        focalMm: 85,
+        fNumber: 8,
+        iso: 100,
+        shutterS: 1 / 160,
+        whiteBalanceK: 5500,
+        ...input.camera,
+      },
       background: { zM: -2, widthM: 6, heightM: 3, colour: '#808080', what: 'grey wall', ...input.background },
       ambientLux: input.ambientLux ?? null,
     }),
     lights: (input.lights ?? []).map((entry) => lightSchema.parse({ ...entry, setupId })),
     places: [sitterPlaceSchema.parse({ id: id(801), setupId, at: [0, 0], eyeHeightM: input.eyeHeightM ?? 1.5 })],
     props: (input.props ?? []).map((prop, index) =>
-      propSchema.parse({ id: id(850 + index), setupId, kind: 'panel', name: 'White panel', at: [1, 0.75, 1], widthM: 1, heightM: 1.5, ...prop }),
+      propSchema.parse({
+        id: id(850 + index),
+        setupId,
+        kind: 'panel',
+        name: 'White panel',
+        at: [1, 0.75, 1],
+        widthM: 1,
+        heightM: 1.5,
+        ...prop,
+      }),
     ),
   }
 }

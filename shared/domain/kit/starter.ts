@@ -68,19 +68,29 @@ function modifier([name, quantity, shape, widthM, heightM, lossStops, beamDeg, m
         widthM,
         heightM,
         lossStops: assumed(lossStops, GUESS),
-        beamDeg: beamDeg === null ? null : assumed(beamDeg, shape === 'grid' ? 'nominal, as sold; measure yours' : GUESS),
+        beamDeg:
+          beamDeg === null ? null : assumed(beamDeg, shape === 'grid' ? 'nominal, as sold; measure yours' : GUESS),
         massKg: assumed(massKg, GUESS),
       },
     },
   }
 }
 
-function support(name: string, quantity: number, kind: SupportNumbers['kind'], maxHeightM: number, maxLoadKg: number): KitInput {
+function support(
+  name: string,
+  quantity: number,
+  kind: SupportNumbers['kind'],
+  maxHeightM: number,
+  maxLoadKg: number,
+): KitInput {
   return {
     name,
     quantity,
     note: 'Keep to the maker’s limits for height and load; weigh it down before anything goes up.',
-    body: { kind: 'support', numbers: { kind, maxHeightM: assumed(maxHeightM, LIMIT), maxLoadKg: assumed(maxLoadKg, LIMIT) } },
+    body: {
+      kind: 'support',
+      numbers: { kind, maxHeightM: assumed(maxHeightM, LIMIT), maxLoadKg: assumed(maxLoadKg, LIMIT) },
+    },
   }
 }
 
@@ -125,9 +135,42 @@ const UNITS: readonly KitInput[] = [
     remotePower: true,
     note: ON_BATTERIES,
   }),
-  unit({ name: 'Battery head 200 Ws', quantity: 2, guideNumberM: 52, minPowerDenominator: 128, flashColourK: 5600, fullPops: 450, fullRecycleS: 2.1, massKg: 0.9, remotePower: true, note: WITH_REFLECTOR }),
-  unit({ name: 'Battery head 400 Ws', quantity: 1, guideNumberM: 70, minPowerDenominator: 256, flashColourK: 5600, fullPops: 380, fullRecycleS: 1.2, massKg: 2.1, remotePower: true, note: WITH_REFLECTOR }),
-  unit({ name: 'Mains head 500 Ws', quantity: 1, guideNumberM: 76, minPowerDenominator: 64, flashColourK: 5600, fullPops: 100000, fullRecycleS: 1, massKg: 2.6, remotePower: false, note: `${WITH_REFLECTOR} Runs on mains: the venue’s circuit decides, ask a licensed electrician.` }),
+  unit({
+    name: 'Battery head 200 Ws',
+    quantity: 2,
+    guideNumberM: 52,
+    minPowerDenominator: 128,
+    flashColourK: 5600,
+    fullPops: 450,
+    fullRecycleS: 2.1,
+    massKg: 0.9,
+    remotePower: true,
+    note: WITH_REFLECTOR,
+  }),
+  unit({
+    name: 'Battery head 400 Ws',
+    quantity: 1,
+    guideNumberM: 70,
+    minPowerDenominator: 256,
+    flashColourK: 5600,
+    fullPops: 380,
+    fullRecycleS: 1.2,
+    massKg: 2.1,
+    remotePower: true,
+    note: WITH_REFLECTOR,
+  }),
+  unit({
+    name: 'Mains head 500 Ws',
+    quantity: 1,
+    guideNumberM: 76,
+    minPowerDenominator: 64,
+    flashColourK: 5600,
+    fullPops: 100000,
+    fullRecycleS: 1,
+    massKg: 2.6,
+    remotePower: false,
+    note: `${WITH_REFLECTOR} Runs on mains: the venue’s circuit decides, ask a licensed electrician.`,
+  }),
 ]
 
 const MODIFIERS: readonly KitInput[] = (

@@ -38,7 +38,8 @@ function assignSmaller(rows: number, columns: number, cost: (row: number, column
     layer = next
   }
   let winner: Best | null = null
-  for (const [, best] of [...layer].sort(([a], [b]) => a - b)) if (!winner || less(best.cost, winner.cost)) winner = best
+  for (const [, best] of [...layer].sort(([a], [b]) => a - b))
+    if (!winner || less(best.cost, winner.cost)) winner = best
   return winner?.pairs ?? []
 }
 

@@ -31,12 +31,18 @@ export function moveWords(
   const where = `${name} to ${side}, ${metresLabel(distanceBetween(after, toSitter))}`
   if (!sameRoom) return { what: where, detail: `${metresLabel(after[1])} up` }
   const onFloor = floorDistance(before, after)
-  if (onFloor < SAME_HEIGHT_M && height !== '') return { what: `${name} ${height}`, detail: `${metresLabel(after[1])} up` }
+  if (onFloor < SAME_HEIGHT_M && height !== '')
+    return { what: `${name} ${height}`, detail: `${metresLabel(after[1])} up` }
   const nearer = floorDistance(before, fromSitter) - floorDistance(after, toSitter)
   const sideways = Math.sqrt(Math.max(0, onFloor ** 2 - nearer ** 2))
   if (Math.abs(nearer) >= SAME_HEIGHT_M && sideways < 0.25 && sideOf(before, fromSitter) === side) {
     const what = `${name} ${metresLabel(Math.abs(nearer))} ${nearer > 0 ? 'closer' : 'further off'}`
-    return { what, detail: [`${metresLabel(distanceBetween(after, toSitter))} from the sitter`, height].filter((part) => part !== '').join(' · ') }
+    return {
+      what,
+      detail: [`${metresLabel(distanceBetween(after, toSitter))} from the sitter`, height]
+        .filter((part) => part !== '')
+        .join(' · '),
+    }
   }
   return { what: where, detail: [height, `moves ${metresLabel(onFloor)}`].filter((part) => part !== '').join(' · ') }
 }

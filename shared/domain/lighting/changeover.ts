@@ -2,7 +2,15 @@ import type { Minutes } from '#shared/domain/plan/minutes.ts'
 import type { WholeSetup } from '#shared/domain/plan/read-plan.ts'
 import { type Cost, cheapestPairs } from './assign.ts'
 import { angleBetweenDeg, distanceBetween, facePoint, minus } from './geometry.ts'
-import { type Place, addWords, aimWords, backgroundWords, cameraWords, moveWords, swapWords } from './changeover-words.ts'
+import {
+  type Place,
+  addWords,
+  aimWords,
+  backgroundWords,
+  cameraWords,
+  moveWords,
+  swapWords,
+} from './changeover-words.ts'
 import type { Background, Camera, Light, Prop } from './schema.ts'
 import { inSentence, powerLabel, purposeWord } from './words.ts'
 
@@ -48,7 +56,11 @@ function sameKit(a: { kitId: string; name: string } | null, b: { kitId: string; 
 }
 
 function sameGels(a: Light, b: Light): boolean {
-  const names = (light: Light) => light.gels.map((gel) => `${gel.kitId} ${gel.name}`).sort().join()
+  const names = (light: Light) =>
+    light.gels
+      .map((gel) => `${gel.kitId} ${gel.name}`)
+      .sort()
+      .join()
   return names(a) === names(b)
 }
 
@@ -78,12 +90,15 @@ function lightActions(before: Light, after: Light, around: Around): ChangeAction
   if (!sameGels(before, after)) {
     const off = before.gels.filter((gel) => !after.gels.some((other) => sameKit(gel, other)))
     const on = after.gels.filter((gel) => !before.gels.some((other) => sameKit(gel, other)))
-    const list = (gels: Light['gels']) => (gels.length === 0 ? undefined : gels.map((gel) => inSentence(gel.name)).join(' and '))
+    const list = (gels: Light['gels']) =>
+      gels.length === 0 ? undefined : gels.map((gel) => inSentence(gel.name)).join(' and ')
     const words = off.length + on.length === 0 ? 'change how many of each gel' : swapWords(list(off), list(on))
     add('gel', `${name}: ${words}`, '', minutes.gel)
   }
   if (!sameKit(before.support, after.support)) {
-    const words = after.support ? `onto ${inSentence(after.support.name)}` : `off ${inSentence(before.support?.name ?? 'its support')}`
+    const words = after.support
+      ? `onto ${inSentence(after.support.name)}`
+      : `off ${inSentence(before.support?.name ?? 'its support')}`
     add('support', `${name}: ${words}`, '', minutes.support)
   }
   const byHand = after.unit.numbers.remotePower ? minutes.powerRemote : minutes.powerByHand
@@ -96,7 +111,8 @@ function lightActions(before: Light, after: Light, around: Around): ChangeAction
     add('zoom', words, before.zoomMm === null ? how : `from ${before.zoomMm} mm, ${how}`, byHand)
   }
   if (before.group !== after.group) {
-    const words = after.group === null ? `${name}: out of group ${before.group ?? ''}` : `${name}: into group ${after.group}`
+    const words =
+      after.group === null ? `${name}: out of group ${before.group ?? ''}` : `${name}: into group ${after.group}`
     add('group', words, before.group === null ? '' : `from ${before.group}`, minutes.powerByHand)
   }
   return actions
@@ -130,7 +146,12 @@ function grouped<T>(items: readonly T[], keyOf: (item: T) => string): Map<string
 type Matched<T> = { stays: [before: T, after: T][]; added: T[]; struck: T[] }
 
 /** Pairs equal things of two setups at least cost; what has no partner is added or struck. */
-function match<T>(from: readonly T[], to: readonly T[], keyOf: (item: T) => string, cost: (a: T, b: T) => Cost): Matched<T> {
+function match<T>(
+  from: readonly T[],
+  to: readonly T[],
+  keyOf: (item: T) => string,
+  cost: (a: T, b: T) => Cost,
+): Matched<T> {
   const result: Matched<T> = { stays: [], added: [], struck: [] }
   const before = grouped(from, keyOf)
   const after = grouped(to, keyOf)
@@ -161,7 +182,10 @@ function propMoved(before: Prop, after: Prop, sameRoom: boolean): boolean {
 }
 
 function propActions(from: readonly Prop[], to: readonly Prop[], around: Around): ChangeAction[] {
-  const matched = match(from, to, propKey, (a, b) => [propMoved(a, b, around.sameRoom) ? 1 : 0, distanceBetween(a.at, b.at)])
+  const matched = match(from, to, propKey, (a, b) => [
+    propMoved(a, b, around.sameRoom) ? 1 : 0,
+    distanceBetween(a.at, b.at),
+  ])
   const action = (prop: Prop, verb: string, what: string, detail: string): ChangeAction => ({
     key: `${prop.id}:${verb}`,
     kind: prop.kind === 'prop' ? 'prop' : 'panel',
@@ -225,7 +249,14 @@ export function changeActions(
   const actions: ChangeAction[] = []
   for (const light of matched.struck) {
     const what = `${purposeWord(light.purpose)}: strike`
-    actions.push({ key: `${light.id}:strike`, kind: 'strike', group: light.group, what, detail: light.unit.name, minutes: minutes.strike })
+    actions.push({
+      key: `${light.id}:strike`,
+      kind: 'strike',
+      group: light.group,
+      what,
+      detail: light.unit.name,
+      minutes: minutes.strike,
+    })
   }
   for (const [before, after] of staying) actions.push(...lightActions(before, after, around))
   for (const light of to.lights.filter((candidate) => matched.added.includes(candidate))) {
@@ -244,7 +275,13 @@ export function changeActions(
   actions.push(...cameraActions(from?.setup.camera ?? null, to.setup.camera, to.setup.id, around))
   if (!from || !sameBackground(from.setup.background, to.setup.background)) {
     const words = backgroundWords(from?.setup.background ?? null, to.setup.background)
-    actions.push({ key: `${to.setup.id}:background`, kind: 'background', group: null, ...words, minutes: minutes.background })
+    actions.push({
+      key: `${to.setup.id}:background`,
+      kind: 'background',
+      group: null,
+      ...words,
+      minutes: minutes.background,
+    })
   }
   return actions
 }

@@ -36,7 +36,9 @@ export function mainPlace(places: readonly SitterPlace[]): SitterPlace | null {
   const reach = (place: SitterPlace) => Math.hypot(place.at[0], place.at[1])
   return places.reduce<SitterPlace | null>(
     (best, place) =>
-      best === null || reach(place) < reach(best) || (reach(place) === reach(best) && place.id < best.id) ? place : best,
+      best === null || reach(place) < reach(best) || (reach(place) === reach(best) && place.id < best.id)
+        ? place
+        : best,
     null,
   )
 }

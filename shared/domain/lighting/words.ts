@@ -3,9 +3,52 @@ import type { Light, LightPurpose, Point } from './schema.ts'
 
 /** Third stops as cameras and meters print them, from 2^(−1/2) up: index 3 is f/1. Labels, not values. */
 const NOMINAL_F_NUMBERS = [
-  '0.7', '0.8', '0.9', '1', '1.1', '1.2', '1.4', '1.6', '1.8', '2', '2.2', '2.5', '2.8', '3.2', '3.5', '4', '4.5', '5',
-  '5.6', '6.3', '7.1', '8', '9', '10', '11', '13', '14', '16', '18', '20', '22', '25', '29', '32', '36', '40', '45',
-  '51', '57', '64', '72', '81', '90', '102', '114', '128',
+  '0.7',
+  '0.8',
+  '0.9',
+  '1',
+  '1.1',
+  '1.2',
+  '1.4',
+  '1.6',
+  '1.8',
+  '2',
+  '2.2',
+  '2.5',
+  '2.8',
+  '3.2',
+  '3.5',
+  '4',
+  '4.5',
+  '5',
+  '5.6',
+  '6.3',
+  '7.1',
+  '8',
+  '9',
+  '10',
+  '11',
+  '13',
+  '14',
+  '16',
+  '18',
+  '20',
+  '22',
+  '25',
+  '29',
+  '32',
+  '36',
+  '40',
+  '45',
+  '51',
+  '57',
+  '64',
+  '72',
+  '81',
+  '90',
+  '102',
+  '114',
+  '128',
 ] as const
 const INDEX_OF_F1 = 3
 
@@ -71,7 +114,9 @@ export function sideOf(at: Point, sitter: Point): string {
 /** A name in the middle of a sentence: "60 cm softbox", "full warm +81". */
 export function inSentence(name: string): string {
   const second = name.charAt(1)
-  return second === second.toUpperCase() && second !== second.toLowerCase() ? name : name.charAt(0).toLowerCase() + name.slice(1)
+  return second === second.toUpperCase() && second !== second.toLowerCase()
+    ? name
+    : name.charAt(0).toLowerCase() + name.slice(1)
 }
 
 /** What a light is made of and set to: "Small flash · 90 cm octa · full warm · 1/4". */

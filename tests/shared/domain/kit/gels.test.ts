@@ -21,6 +21,10 @@ describe('GEL_ROWS', () => {
   it('computes three gels with their own spectrum and keeps the printed shift beside', () => {
     // LEE 205, 206, 223 print +109, +64, +26: the arithmetic of their nominal conversions, not of 5500 K.
     const corrected = GEL_ROWS.filter((row) => row.printedMired !== null)
-    expect(corrected.map((row) => [row.miredShift, row.printedMired])).toEqual([[79, 109], [44, 64], [24, 26]])
+    expect(corrected.map((row) => [row.miredShift, row.printedMired])).toEqual([
+      [79, 109],
+      [44, 64],
+      [24, 26],
+    ])
   })
 })

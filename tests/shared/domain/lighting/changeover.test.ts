@@ -3,14 +3,31 @@ import { describe, expect, it } from 'vitest'
 import { changeActions, changesLight, lightingMinutes } from '#shared/domain/lighting/changeover.ts'
 import { lightSchema, type Light } from '#shared/domain/lighting/schema.ts'
 import type { WholeSetup } from '#shared/domain/plan/read-plan.ts'
-import { BOOM, FULL_WARM, GRID, HALF_BLUE, MAINS_KIT, MINUTES, OCTA, SOFTBOX, STAND, id, light, unit, whole } from '#tests/support/lighting-sample.ts'
+import {
+  BOOM,
+  FULL_WARM,
+  GRID,
+  HALF_BLUE,
+  MAINS_KIT,
+  MINUTES,
+  OCTA,
+  SOFTBOX,
+  STAND,
+  id,
+  light,
+  unit,
+  whole,
+} from '#tests/support/lighting-sample.ts'
 
 const here = { sameRoom: true, minutes: MINUTES }
 const FACE: [number, number, number] = [0, 1.5, 0]
 const main = (more: Partial<Light> = {}) =>
   lightSchema.parse({ ...light(1, { purpose: 'main', at: [-1.2, 1.9, 1], aim: FACE, modifier: OCTA }), ...more })
 const rim = (more: Partial<Light> = {}) =>
-  lightSchema.parse({ ...light(2, { purpose: 'rim', at: [1.2, 1.9, -1.2], aim: FACE, unit: unit(MAINS_KIT, { remotePower: false }) }), ...more })
+  lightSchema.parse({
+    ...light(2, { purpose: 'rim', at: [1.2, 1.9, -1.2], aim: FACE, unit: unit(MAINS_KIT, { remotePower: false }) }),
+    ...more,
+  })
 
 /** The same setup with other ids, as a variation has. */
 function renamed(setup: WholeSetup, by: number): WholeSetup {
@@ -42,7 +59,17 @@ describe('changeActions', () => {
 
   it('names each thing that changes on one light, one action each', () => {
     const to = whole({
-      lights: [main({ at: [1.2, 1.9, 1], modifier: SOFTBOX, gels: [FULL_WARM], support: BOOM, power: 0.125, zoomMm: 50, group: 'A' } as Partial<Light>)],
+      lights: [
+        main({
+          at: [1.2, 1.9, 1],
+          modifier: SOFTBOX,
+          gels: [FULL_WARM],
+          support: BOOM,
+          power: 0.125,
+          zoomMm: 50,
+          group: 'A',
+        } as Partial<Light>),
+      ],
     })
     const actions = changeActions(whole({ lights: [main()] }), to, here)
     expect(actions.map(({ kind, what, minutes }) => [kind, what, minutes])).toEqual([
@@ -74,13 +101,18 @@ describe('changeActions', () => {
 
   it('turns a head that stays where it is', () => {
     const to = whole({ lights: [main({ aim: [0, 1.2, -2] })] })
-    expect(changeActions(whole({ lights: [main()] }), to, here)).toMatchObject([{ kind: 'aim', what: 'Main: turn to the background' }])
+    expect(changeActions(whole({ lights: [main()] }), to, here)).toMatchObject([
+      { kind: 'aim', what: 'Main: turn to the background' },
+    ])
   })
 
   it('asks half a minute for power by hand and none by remote', () => {
     const to = whole({ lights: [main({ power: 0.5 }), rim({ power: 0.5 })] })
     const actions = changeActions(whole({ lights: [main(), rim()] }), to, here)
-    expect(actions.map((action) => [action.kind, action.minutes])).toEqual([['power', 0], ['power', 0.5]])
+    expect(actions.map((action) => [action.kind, action.minutes])).toEqual([
+      ['power', 0],
+      ['power', 0.5],
+    ])
   })
 
   it('moves every light in another room, with its differences, and the camera and panels with it', () => {
@@ -90,12 +122,22 @@ describe('changeActions', () => {
   })
 
   it('rigs everything from nothing', () => {
-    expect(kinds(null, whole({ lights: [main(), rim()], props: [{}] }))).toEqual(['add', 'add', 'panel', 'camera', 'background'])
+    expect(kinds(null, whole({ lights: [main(), rim()], props: [{}] }))).toEqual([
+      'add',
+      'add',
+      'panel',
+      'camera',
+      'background',
+    ])
   })
 
   it('counts camera, lens and background, and no camera settings', () => {
     const from = whole({ lights: [main()] })
-    const to = whole({ lights: [main()], camera: { at: [0.5, 1.4, 3], focalMm: 50, fNumber: 4 }, background: { zM: -3 } })
+    const to = whole({
+      lights: [main()],
+      camera: { at: [0.5, 1.4, 3], focalMm: 50, fNumber: 4 },
+      background: { zM: -3 },
+    })
     expect(changeActions(from, to, here).map((action) => [action.kind, action.minutes])).toEqual([
       ['camera', 2],
       ['lens', 1],
@@ -106,7 +148,9 @@ describe('changeActions', () => {
   it('adds, moves and strikes panels and flags', () => {
     const bare = whole({})
     const there = whole({ props: [{}] })
-    expect(changeActions(bare, there, here)).toMatchObject([{ kind: 'panel', what: 'White panel: add, camera right, 1.6 m', minutes: 2 }])
+    expect(changeActions(bare, there, here)).toMatchObject([
+      { kind: 'panel', what: 'White panel: add, camera right, 1.6 m', minutes: 2 },
+    ])
     expect(changeActions(there, bare, here)).toMatchObject([{ kind: 'panel', what: 'White panel: strike', minutes: 2 }])
     expect(changeActions(there, whole({ props: [{ turnDeg: 20 }] }), here)).toHaveLength(1)
   })
@@ -115,7 +159,9 @@ describe('changeActions', () => {
     const a = light(1, { purpose: 'main', at: [-1, 1.9, 1], aim: FACE, modifier: OCTA })
     const b = light(2, { purpose: 'rim', at: [1, 1.9, -1], aim: FACE, modifier: GRID })
     const from = whole({ lights: [a, b] })
-    const swapped = whole({ lights: [lightSchema.parse({ ...b, id: id(1), rank: 'a0' }), lightSchema.parse({ ...a, id: id(2), rank: 'a1' })] })
+    const swapped = whole({
+      lights: [lightSchema.parse({ ...b, id: id(1), rank: 'a0' }), lightSchema.parse({ ...a, id: id(2), rank: 'a1' })],
+    })
     expect(changeActions(from, swapped, here)).toEqual([])
   })
 
@@ -161,17 +207,26 @@ describe('lightingMinutes', () => {
     power: fc.constantFrom(1, 0.5, 0.25),
     mains: fc.boolean(),
   })
-  const anySetup = fc.array(anyLight, { maxLength: 5 }).map((rows) =>
-    rows.map(({ mains, ...row }, n) =>
-      light(n + 1, { purpose: 'main', aim: FACE, unit: unit(mains ? MAINS_KIT : undefined, { remotePower: !mains }), ...row }),
-    ),
-  )
+  const anySetup = fc
+    .array(anyLight, { maxLength: 5 })
+    .map((rows) =>
+      rows.map(({ mains, ...row }, n) =>
+        light(n + 1, {
+          purpose: 'main',
+          aim: FACE,
+          unit: unit(mains ? MAINS_KIT : undefined, { remotePower: !mains }),
+          ...row,
+        }),
+      ),
+    )
 
   it('is never longer with more hands than with one', () => {
     fc.assert(
       fc.property(anySetup, anySetup, fc.integer({ min: 1, max: 6 }), (a, b, hands) => {
         const actions = changeActions(whole({ lights: a }), whole({ lights: b }), here)
-        expect(lightingMinutes(actions, hands, MINUTES)).toBeLessThanOrEqual(lightingMinutes(actions, 1, MINUTES) + 1e-9)
+        expect(lightingMinutes(actions, hands, MINUTES)).toBeLessThanOrEqual(
+          lightingMinutes(actions, 1, MINUTES) + 1e-9,
+        )
       }),
       { numRuns: 200 },
     )
@@ -179,15 +234,21 @@ describe('lightingMinutes', () => {
 
   it('does not depend on ids or on the order of the lights', () => {
     fc.assert(
-      fc.property(anySetup, anySetup, fc.integer({ min: 1, max: 3 }), fc.infiniteStream(fc.nat(1000)), (a, b, hands, stream) => {
-        const plain = changeActions(whole({ lights: a }), whole({ lights: b }), here)
-        const shuffled = b
-          .map((entry, n) => ({ entry, n, key: stream.next().value ?? 0 }))
-          .sort((x, y) => x.key - y.key || x.n - y.n)
-          .map(({ entry }, n) => lightSchema.parse({ ...entry, id: id(300 - n) }))
-        const other = changeActions(whole({ lights: a }), whole({ lights: shuffled }), here)
-        expect(lightingMinutes(other, hands, MINUTES)).toBeCloseTo(lightingMinutes(plain, hands, MINUTES), 9)
-      }),
+      fc.property(
+        anySetup,
+        anySetup,
+        fc.integer({ min: 1, max: 3 }),
+        fc.infiniteStream(fc.nat(1000)),
+        (a, b, hands, stream) => {
+          const plain = changeActions(whole({ lights: a }), whole({ lights: b }), here)
+          const shuffled = b
+            .map((entry, n) => ({ entry, n, key: stream.next().value ?? 0 }))
+            .sort((x, y) => x.key - y.key || x.n - y.n)
+            .map(({ entry }, n) => lightSchema.parse({ ...entry, id: id(300 - n) }))
+          const other = changeActions(whole({ lights: a }), whole({ lights: shuffled }), here)
+          expect(lightingMinutes(other, hands, MINUTES)).toBeCloseTo(lightingMinutes(plain, hands, MINUTES), 9)
+        },
+      ),
       { numRuns: 200 },
     )
   })
@@ -196,7 +257,8 @@ describe('lightingMinutes', () => {
     fc.assert(
       fc.property(anySetup, anySetup, (a, b) => {
         const count = (from: Light[], to: Light[], kind: string) =>
-          changeActions(whole({ lights: from }), whole({ lights: to }), here).filter((action) => action.kind === kind).length
+          changeActions(whole({ lights: from }), whole({ lights: to }), here).filter((action) => action.kind === kind)
+            .length
         expect(count(a, b, 'strike')).toBe(count(b, a, 'add'))
       }),
     )

@@ -1,0 +1,263 @@
+import type { WholeSetup } from '#shared/domain/plan/read-plan.ts'
+import type { Orientation } from './frame.ts'
+import { frameCautions } from './in-frame.ts'
+import { faceOf, faceRadiusM, outputOf } from './light-output.ts'
+import { counterweightKg, fullPopsFor, recycleS } from './power.ts'
+import { type SetupReading, readSetup } from './readings.ts'
+import type { Light } from './schema.ts'
+import { SOCKET_LIMIT_DEG } from './softness.ts'
+import { stopsBetween } from './stops.ts'
+import { fNumberLabel, inSentence, metresLabel, powerLabel, purposeWord } from './words.ts'
+
+/** `red`: must be put right (in frame, out of balance, over power). `mind`: take care. `fine`: settled, with its number. */
+export type Caution = {
+  key: string
+  tone: 'red' | 'mind' | 'fine'
+  title: string
+  words: string
+  lightId: string | null
+  /** How the number came about, and what is assumed. */
+  how: string
+}
+
+export type CautionOptions = {
+  /** Orientations of the shots that use the setup. */
+  orientations: readonly Orientation[]
+  /** Frames of all shots that use the setup; null leaves batteries out. */
+  frames: number | null
+}
+
+const DEFAULTS: CautionOptions = { orientations: ['upright'], frames: null }
+
+/** Heads above this stand with a bag, metres; faces larger than this catch draughts, m² (assumptions). */
+const BAG_ABOVE_M = 1.8
+const SAIL_M2 = 0.5
+/** Arm, counterweight arm and arm mass of a boom whose own are not known (assumption). */
+const BOOM = { loadArmM: 1.5, weightArmM: 0.5, armMassKg: 1 }
+/** Fastest shutter with ordinary flash when the camera's own is not known, seconds (assumption). */
+const SYNC_S = 1 / 200
+/** Nearer than this a strong flash is unkind to eyes and skin, metres (assumption). */
+const NEAR_M = 0.5
+
+function loadKg(light: Light): number {
+  return light.unit.numbers.massKg.value + (light.modifier?.numbers.massKg.value ?? 0)
+}
+
+function supportCautions(light: Light): Caution[] {
+  const { support } = light
+  if (!support) return []
+  const name = purposeWord(light.purpose).toLowerCase()
+  const load = loadKg(light)
+  const { kind, maxHeightM, maxLoadKg } = support.numbers
+  const cautions: Caution[] = []
+  const add = (key: string, tone: Caution['tone'], title: string, words: string, how: string) =>
+    cautions.push({ key: `${light.id}:${key}`, tone, title, words, lightId: light.id, how })
+  const massHow = `${light.unit.name} ${light.unit.numbers.massKg.value} kg (${light.unit.numbers.massKg.from})${light.modifier ? ` + ${light.modifier.name} ${light.modifier.numbers.massKg.value} kg (${light.modifier.numbers.massKg.from})` : ''}; support ${maxLoadKg.value} kg (${maxLoadKg.from}).`
+  if (load > maxLoadKg.value) {
+    add(
+      'load',
+      'red',
+      `Too heavy for its ${inSentence(support.name)}`,
+      `${load.toFixed(1)} kg on a support for ${maxLoadKg.value} kg. Take a stronger one; the maker’s limit decides.`,
+      massHow,
+    )
+  }
+  if (light.at[1] > maxHeightM.value + 0.05) {
+    add(
+      'height',
+      'red',
+      `Higher than its ${inSentence(support.name)} goes`,
+      `The ${name} is drawn at ${metresLabel(light.at[1])}; the support goes to ${metresLabel(maxHeightM.value)}. Never extend past the maker’s mark.`,
+      `Support height ${maxHeightM.value} m (${maxHeightM.from}).`,
+    )
+  }
+  if (kind === 'boom') {
+    const weight = counterweightKg(load, BOOM.loadArmM, BOOM.weightArmM, BOOM.armMassKg)
+    add(
+      'boom',
+      'mind',
+      `Balance and bag the ${name} boom`,
+      `${load.toFixed(1)} kg out at ${BOOM.loadArmM} m wants about ${weight.toFixed(1)} kg at ${BOOM.weightArmM} m, and a bag on the base. Nobody sits under it. The boom maker’s limits and the venue’s rules decide.`,
+      `W = (w·a + m(a − b)/2)/b with an arm of ${BOOM.armMassKg} kg, a = ${BOOM.loadArmM} m, b = ${BOOM.weightArmM} m (assumed: put in your boom’s own). ${massHow}`,
+    )
+  } else if (kind === 'stand') {
+    const { widthM, heightM } = faceOf(light)
+    const large = widthM * heightM >= SAIL_M2
+    if (light.at[1] >= BAG_ABOVE_M || large) {
+      const why = large
+        ? `A ${metresLabel(Math.max(widthM, heightM))} face is a sail`
+        : `A head at ${metresLabel(light.at[1])} on a light stand tips easily`
+      add(
+        'bag',
+        'mind',
+        `Bag the ${name} stand`,
+        `${why}. Bag it, tape the cable. Follow the stand maker’s limits and the venue’s rules.`,
+        `Asked from ${BAG_ABOVE_M} m up or ${SAIL_M2} m² of face (assumptions).`,
+      )
+    }
+  }
+  return cautions
+}
+
+function powerCautions(light: Light): Caution[] {
+  const name = purposeWord(light.purpose).toLowerCase()
+  const { numbers } = light.unit
+  const cautions: Caution[] = []
+  const least = 1 / numbers.minPowerDenominator
+  if (light.power < least * 0.99) {
+    cautions.push({
+      key: `${light.id}:under-power`,
+      tone: 'red',
+      title: `The ${name} cannot go that low`,
+      words: `It is set to ${powerLabel(light.power)}; the head goes down to ${powerLabel(least)}. Move it back, or add a gel or a diffuser.`,
+      lightId: light.id,
+      how: `Least power of ${light.unit.name}: 1/${numbers.minPowerDenominator}.`,
+    })
+  }
+  const closed =
+    light.modifier !== null &&
+    ['snoot', 'grid', 'softbox', 'octa', 'strip', 'lantern'].includes(light.modifier.numbers.shape)
+  if (light.power >= 0.5 && (light.gels.length > 0 || closed)) {
+    cautions.push({
+      key: `${light.id}:heat`,
+      tone: 'mind',
+      title: `The ${name} gets hot`,
+      words: `${powerLabel(light.power) === 'full' ? 'Full power' : `${powerLabel(light.power)} power`} behind ${light.gels.length > 0 ? 'a gel' : 'a closed modifier'} heats head, gel and bulb. Keep the pace the maker allows, let it cool before touching, and keep cloth off it.`,
+      lightId: light.id,
+      how: 'Asked from half power with a gel or a closed modifier (assumption). The maker’s limit on pops in a row decides.',
+    })
+  }
+  return cautions
+}
+
+function eyeCautions(reading: SetupReading, whole: WholeSetup): Caution[] {
+  const { main } = reading
+  const mainLight = whole.lights.find((light) => light.purpose === 'main')
+  if (!main || !mainLight) return []
+  const words = `The main stands ${Math.round(Math.abs(main.elevationDeg))}° ${main.elevationDeg >= 0 ? 'above' : 'below'} the eye line.`
+  const how = `atan(rise / distance on the floor). Pupils fall into the brow’s shadow above about ${Math.round(SOCKET_LIMIT_DEG)}°: a rule of thumb from assumed face measures (brow to pupil 12 mm, overhang 15 mm).`
+  const cautions: Caution[] = [
+    main.elevationDeg > SOCKET_LIMIT_DEG
+      ? {
+          key: 'eyes',
+          tone: 'mind',
+          title: 'Eyes may fall into shadow',
+          words: `${words} Lower it, take it further off, or let the sitter look up.`,
+          lightId: mainLight.id,
+          how,
+        }
+      : { key: 'eyes', tone: 'fine', title: 'Eyes stay open', words, lightId: mainLight.id, how },
+  ]
+  const near = reading.lights.find(
+    (light) =>
+      light.where === 'sitter' &&
+      light.distanceM - faceRadius(whole, light.lightId) < NEAR_M &&
+      light.fullGuideNumberM > 0,
+  )
+  if (near) {
+    cautions.push({
+      key: `${near.lightId}:near`,
+      tone: 'mind',
+      title: `The ${purposeWord(near.purpose).toLowerCase()} is close to the face`,
+      words: `${metresLabel(near.distanceM)} from the eyes. Tell the sitter before it flashes, begin low, and mind hair and lashes near a hot head.`,
+      lightId: near.lightId,
+      how: `Asked under ${NEAR_M} m (assumption).`,
+    })
+  }
+  return cautions
+}
+
+function faceRadius(whole: WholeSetup, lightId: string): number {
+  const light = whole.lights.find((candidate) => candidate.id === lightId)
+  return light ? faceRadiusM(light) : 0
+}
+
+function exposureCautions(reading: SetupReading, whole: WholeSetup): Caution[] {
+  const { camera } = whole.setup
+  const cautions: Caution[] = []
+  const main = whole.lights.find((light) => light.purpose === 'main')
+  if (main && reading.mainFNumber !== null && reading.mainFNumber > 0) {
+    const short = stopsBetween(camera.fNumber, reading.totalFNumber)
+    const room = stopsBetween(1, Math.sqrt(main.power))
+    const how = `Main, fill and ambient together read ${fNumberLabel(reading.totalFNumber)} at ISO ${camera.iso}; the main has ${Math.max(0, room).toFixed(1)} stops up to full power (guide number ${outputOf(main).fullGuideNumberM.toFixed(0)}, ${main.unit.numbers.guideNumberM.from}).`
+    if (short > room + 1 / 3) {
+      cautions.push({
+        key: 'over-power',
+        tone: 'red',
+        title: 'Not enough power',
+        words: `Even at full power the face stays ${(short - Math.max(0, room)).toFixed(1)} stops under the camera’s ${fNumberLabel(camera.fNumber)}. Come closer, open up, or raise the ISO.`,
+        lightId: main.id,
+        how,
+      })
+    } else if (Math.abs(short) > 1 / 2) {
+      cautions.push({
+        key: 'exposure',
+        tone: 'mind',
+        title: short > 0 ? 'The face comes out dark' : 'The face comes out bright',
+        words: `The light reads ${fNumberLabel(reading.totalFNumber)}, the camera is set to ${fNumberLabel(camera.fNumber)}: ${Math.abs(short).toFixed(1)} stops ${short > 0 ? 'under' : 'over'}.`,
+        lightId: null,
+        how,
+      })
+    }
+  }
+  if (whole.lights.length > 0 && camera.shutterS < SYNC_S * 0.95) {
+    cautions.push({
+      key: 'sync',
+      tone: 'mind',
+      title: 'Shutter may be faster than the flash',
+      words: 'Above the camera’s sync speed a part of the frame stays dark.',
+      lightId: null,
+      how: 'Sync speed taken as 1/200 s (assumed; your camera’s own decides).',
+    })
+  }
+  return cautions
+}
+
+function batteryCautions(whole: WholeSetup, frames: number): Caution[] {
+  let worst: { light: Light; share: number } | null = null
+  for (const light of whole.lights) {
+    const share = fullPopsFor(frames, light.power) / light.unit.numbers.fullPops.value
+    if (!worst || share > worst.share) worst = { light, share }
+  }
+  if (!worst) return []
+  const { light, share } = worst
+  const { fullPops, fullRecycleS } = light.unit.numbers
+  const name = purposeWord(light.purpose).toLowerCase()
+  const pops = Math.ceil(fullPopsFor(frames, light.power))
+  const words = `${frames} frames: ${pops} full pops of ${fullPops.value} from the ${name}. Ready again in ${recycleS(fullRecycleS.value, light.power).toFixed(1)} s.`
+  const how = `Frames × power; recycling = full recycle × power (assumption). Pops ${fullPops.from}, recycle ${fullRecycleS.from}. Cells give less when old or cold.`
+  return [
+    share > 0.8
+      ? { key: 'power', tone: 'mind', title: 'Bring fresh batteries', words, lightId: light.id, how }
+      : { key: 'power', tone: 'fine', title: 'Power to spare', words, lightId: light.id, how },
+  ]
+}
+
+const TONES = ['red', 'mind', 'fine'] as const
+
+/**
+ * What to mind about a setup, worst first: what stands in the picture, supports beyond their limits, power that is not
+ * there, eyes, heat, batteries. Where the work can hurt, makers' limits and the venue's rules decide.
+ */
+export function cautionsOf(
+  whole: WholeSetup,
+  options: Partial<CautionOptions> = {},
+  reading: SetupReading = readSetup(whole),
+): Caution[] {
+  const { orientations, frames } = { ...DEFAULTS, ...options }
+  const all = [
+    ...frameCautions(whole, orientations.length > 0 ? orientations : DEFAULTS.orientations),
+    ...whole.lights.flatMap((light) => [...supportCautions(light), ...powerCautions(light)]),
+    ...exposureCautions(reading, whole),
+    ...eyeCautions(reading, whole),
+    ...(frames === null ? [] : batteryCautions(whole, frames)),
+  ]
+  return TONES.flatMap((tone) => all.filter((caution) => caution.tone === tone))
+}
+
+/** The red cautions of a setup, one sentence each: what keeps the section's lamp from being lit. */
+export function redCautions(whole: WholeSetup, options: Partial<CautionOptions> = {}): string[] {
+  return cautionsOf(whole, options)
+    .filter((caution) => caution.tone === 'red')
+    .map((caution) => caution.title)
+}

@@ -9,7 +9,7 @@
  * | 1 | presence | both | y-protocols/awareness update; from a client only its own single state |
  * | 3 | query presence | to server | empty; answered with everybody's presence |
  * | 100 | saved | to client | varUint n: the first n update-carrying sync messages (step 2 or update) of this connection are durable |
- * | 101 | refused | to client | varUint n, varString reason (`Refusal`): message n was not taken |
+ * | 101 | refused | to client | varUint n, varString reason (`Refusal`): message n was not taken; with `database-down`: not stored yet, and a 100 follows once it is |
  * | 102 | hello | to client | varString JSON `Hello`; the first frame of every connection |
  * | 103 | changed | to client | varString JSON: array of query keys to fetch again; on the `board` socket only |
  *

@@ -14,7 +14,10 @@ export const FACE_COLOURS: readonly string[] = [
 
 /** One or two capital letters for a name: first and last word, or a question mark when it holds no letter or figure. */
 export function initialsOf(name: string): string {
-  const words = name.normalize('NFC').split(/[\s\u00a0]+/u).flatMap((word) => /[\p{L}\p{N}]/u.exec(word)?.[0] ?? [])
+  const words = name
+    .normalize('NFC')
+    .split(/[\s\u00a0]+/u)
+    .flatMap((word) => /[\p{L}\p{N}]/u.exec(word)?.[0] ?? [])
   const first = words[0]
   if (first === undefined) return '?'
   const last = words.length > 1 ? (words[words.length - 1] ?? '') : ''

@@ -30,7 +30,9 @@ function contrastWithWhite(colour: string): number {
 describe('FACE_COLOURS', () => {
   it('holds at least 8 different colours, most of them not led by red', () => {
     expect(new Set(FACE_COLOURS).size).toBeGreaterThanOrEqual(8)
-    const red = FACE_COLOURS.filter((c) => parseInt(c.slice(1, 3), 16) > Math.max(parseInt(c.slice(3, 5), 16), parseInt(c.slice(5, 7), 16)))
+    const red = FACE_COLOURS.filter(
+      (c) => parseInt(c.slice(1, 3), 16) > Math.max(parseInt(c.slice(3, 5), 16), parseInt(c.slice(5, 7), 16)),
+    )
     expect(red.length).toBeLessThanOrEqual(FACE_COLOURS.length / 2)
   })
 

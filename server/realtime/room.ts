@@ -1,0 +1,158 @@
+import type pg from 'pg'
+import * as Y from 'yjs'
+import type { DocId, ShootId, UserId } from '#shared/ids.ts'
+import type { DocumentKind } from '#shared/realtime/documents.ts'
+import { dropPending, hasPending } from './guard.ts'
+import { type BadPiece, LOG_ORIGIN, type Loaded, applyRows, rowsAfter } from './load.ts'
+import { type PresencePeer, RoomPresence } from './presence.ts'
+import type { RealtimeSettings } from './settings.ts'
+import { itemsTouchedBy } from './touched.ts'
+import type { Committed, UpdateLog } from './update-log.ts'
+import { updateFrame } from './wire.ts'
+
+/** Where a document belongs. */
+export type Place = { docId: DocId; shootId: ShootId; kind: DocumentKind }
+
+/** A connection, as far as a room knows it. */
+export type RoomPeer = PresencePeer & {
+  /** Whether it has asked for the document and so is told what changes. */
+  readonly isSynced: boolean
+  close(code: number, why: string): void
+}
+
+/** `nothing new`: known already. `incomplete`: part of it had to be left out. `broken`: the document cannot be trusted. */
+export type Taken = 'taken' | 'nothing new' | 'incomplete' | 'broken'
+
+const WEIGH_AGAIN_MS = 5_000
+
+/** One document in memory with the people in it. Everything that changes it goes through here. */
+export class Room {
+  readonly place: Place
+  readonly doc: Y.Doc
+  readonly peers = new Set<RoomPeer>()
+  readonly presence: RoomPresence
+  /** The document holds the log up to here. */
+  head: number
+  /** Its size by what went into it; above the truth, because deleted content is collected. Bytes. */
+  sizeBytes: number
+  isBroken = false
+  readonly #log: UpdateLog
+  readonly #pool: pg.Pool
+  readonly #onBad: (bad: BadPiece) => void
+  #captured: Uint8Array[] | null = null
+  readonly #touched = new Set<string>()
+  #catchingUp: Promise<void> | null = null
+  #weighedAtMs = 0
+  #growth = { structs: 0, sinceMs: 0 }
+
+  constructor(
+    place: Place,
+    loaded: Loaded,
+    outside: { log: UpdateLog; pool: pg.Pool; settings: RealtimeSettings; onBad: (bad: BadPiece) => void },
+  ) {
+    this.place = place
+    this.doc = loaded.doc
+    this.head = loaded.head
+    this.sizeBytes = loaded.sizeBytes
+    this.#log = outside.log
+    this.#pool = outside.pool
+    this.#onBad = outside.onBad
+    this.presence = new RoomPresence(outside.settings, () => this.peers)
+    this.doc.on('update', (update: Uint8Array, origin: unknown, _doc: Y.Doc, transaction: Y.Transaction) => {
+      if (this.#captured) {
+        this.#captured.push(update)
+        itemsTouchedBy(transaction, this.#touched)
+      } else if (origin === LOG_ORIGIN) this.#broadcast(update, null)
+    })
+  }
+
+  /**
+   * Runs a change of the document as one transaction, hands what was new in it to the peers at once and to the log.
+   * `settle` is called when all of it, or the copy that somebody else brought before, is committed.
+   */
+  change(
+    author: { userId: UserId | null; peer: RoomPeer | null },
+    fn: () => void,
+    settle: (stored: boolean) => void,
+  ): Taken {
+    this.#captured = []
+    this.#touched.clear()
+    let failed = false
+    try {
+      this.doc.transact(fn, author)
+    } catch {
+      failed = true
+    }
+    const captured = this.#captured
+    const items = [...this.#touched]
+    this.#captured = null
+    const isIncomplete = hasPending(this.doc)
+    if (isIncomplete) dropPending(this.doc)
+    if (failed && author.peer) {
+      // Changed half way by something that decoded well: what memory holds is no longer what the log makes.
+      this.isBroken = true
+      return 'broken'
+    }
+    const update = captured.length > 1 ? Y.mergeUpdates(captured) : (captured[0] ?? null)
+    if (update) {
+      this.sizeBytes += update.length
+      this.#broadcast(update, author.peer)
+    }
+    this.#log.enqueue({ docId: this.place.docId, userId: author.userId, update, items, queuedAtMs: Date.now(), settle })
+    return isIncomplete ? 'incomplete' : update ? 'taken' : 'nothing new'
+  }
+
+  /** The one way out for changes: everybody who has asked for the document, but not whom it came from. */
+  #broadcast(update: Uint8Array, author: RoomPeer | null): void {
+    const frame = updateFrame(update)
+    for (const peer of this.peers) if (peer.isSynced && peer !== author) peer.send(frame)
+  }
+
+  /** Counts structs against the growth of a minute; false, and not counted, when they would be too many. */
+  mayGrow(structs: number, perMinute: number, nowMs: number): boolean {
+    if (nowMs - this.#growth.sinceMs > 60_000) this.#growth = { structs: 0, sinceMs: nowMs }
+    if (this.#growth.structs + structs > perMinute) return false
+    this.#growth.structs += structs
+    return true
+  }
+
+  /** Whether so many bytes more fit. Weighs the document anew, now and then, before it says no. */
+  hasRoomFor(bytes: number, limitBytes: number, nowMs: number): boolean {
+    if (this.sizeBytes + bytes <= limitBytes) return true
+    if (nowMs - this.#weighedAtMs > WEIGH_AGAIN_MS) {
+      this.#weighedAtMs = nowMs
+      this.sizeBytes = Y.encodeStateAsUpdate(this.doc).length
+    }
+    return this.sizeBytes + bytes <= limitBytes
+  }
+
+  /** Own rows were committed. Rows of other processes before them are fetched. */
+  committed({ first, last }: Committed): void {
+    if (first <= this.head + 1) this.head = Math.max(this.head, last)
+    else this.catchUp().catch(() => undefined)
+  }
+
+  /** Brings the document up to the head of the log. */
+  catchUp(): Promise<void> {
+    this.#catchingUp ??= this.#readOn().finally(() => {
+      this.#catchingUp = null
+    })
+    return this.#catchingUp
+  }
+
+  async #readOn(): Promise<void> {
+    const rows = await rowsAfter(this.#pool, this.place.docId, this.head)
+    for (const bad of applyRows(this.doc, rows)) this.#onBad(bad)
+    this.head = Math.max(this.head, Number(rows[rows.length - 1]?.seq ?? 0))
+  }
+
+  get isIdle(): boolean {
+    return this.peers.size === 0 && this.#log.queuedFor(this.place.docId) === 0
+  }
+
+  /** Forgets the document. There is nothing to save: the log has it. */
+  close(): void {
+    this.presence.stop()
+    this.doc.destroy()
+  }
+}

@@ -1,0 +1,234 @@
+import type { IncomingMessage, Server } from 'node:http'
+import type { Duplex } from 'node:stream'
+import pg from 'pg'
+import { WebSocketServer } from 'ws'
+import { CLOSE } from '#shared/realtime/protocol.ts'
+import type { Documents } from '#server/adapters/documents.ts'
+import type { Db } from '#server/db/client.ts'
+import { type Admission, type Authenticate, admit } from './authorise.ts'
+import { Connection } from './connection.ts'
+import { createDocuments } from './documents.ts'
+import { createReceiver } from './inbound.ts'
+import { createRightsWatch } from './rights-watch.ts'
+import { UnknownDocument, createRooms } from './rooms.ts'
+import { DEFAULT_SETTINGS, type RealtimeLog, type RealtimeSettings } from './settings.ts'
+import { Strikes } from './strikes.ts'
+import { createUpdateLog, reasonOf } from './update-log.ts'
+import { warmUp } from './warm-up.ts'
+import { changedFrame, helloFrame } from './wire.ts'
+
+export type Realtime = {
+  documents: Documents
+  /** Takes the upgrades under `/rt/`; all other paths are left to others. */
+  attach(server: Server): void
+  /** Takes nobody new, waits for the queue, sends the last acknowledgements, closes everybody with 1012, lets go of everything. */
+  drain(): Promise<void>
+  stats(): RealtimeStats
+}
+
+export type RealtimeStats = {
+  connections: number
+  rooms: number
+  flagged: number
+  queuedEntries: number
+  queuedBytes: number
+  oldestMs: number
+  commits: number
+  rows: number
+  failures: number
+}
+
+/** Upgrades under way at the same time; each is a question to the database. */
+const MAX_ADMITTING = 500
+
+/** The realtime server of one process: rooms, sockets, log. */
+export function createRealtime(options: {
+  db: Db
+  databaseUrl: string
+  auth: Authenticate
+  trustedOrigins: readonly string[]
+  log: RealtimeLog
+  limits?: Partial<RealtimeSettings>
+}): Realtime {
+  const { db, databaseUrl, auth, trustedOrigins, log } = options
+  const settings: RealtimeSettings = { ...DEFAULT_SETTINGS, ...options.limits }
+  const connections = new Set<Connection>()
+  const perUser = new Map<string, number>()
+  const strikes = new Strikes(settings.strikeMemoryMs)
+  let isDraining = false
+  let admitting = 0
+  let nextNumber = 1
+
+  // Its own connections: a verb that holds one of the others while it waits for a document must not wait for itself.
+  const pool = new pg.Pool({
+    connectionString: databaseUrl,
+    max: 4,
+    connectionTimeoutMillis: 5_000,
+    query_timeout: settings.statementMs,
+    keepAlive: true,
+    options: '-c timezone=UTC -c synchronous_commit=on',
+  })
+  pool.on('error', (error) => log.warn({ error: reasonOf(error) }, 'idle database connection lost'))
+
+  const updateLog = createUpdateLog({
+    pool,
+    settings,
+    log,
+    onCommitted: (committed) => rooms.committed(committed),
+    onPressure: (isUnderPressure) => {
+      for (const connection of connections) {
+        if (!connection.mayWrite) continue
+        if (isUnderPressure) connection.pause('pressure')
+        else connection.resume('pressure')
+      }
+    },
+    onStalled: () => connections.forEach((connection) => connection.stalled()),
+  })
+  const rooms = createRooms({ pool, updateLog, settings, log })
+  const watch = createRightsWatch({ db, databaseUrl, settings, log, connections })
+  const documents = createDocuments({
+    pool,
+    rooms,
+    updateLog,
+    settings,
+    announce: (shootId, queryKeys) => {
+      const frame = changedFrame(queryKeys)
+      for (const connection of connections) {
+        if (connection.place.shootId === shootId && connection.place.kind === 'board') connection.sendExtra(frame)
+      }
+    },
+  })
+  const sockets = new WebSocketServer({ noServer: true, perMessageDeflate: false, maxPayload: settings.maxFrameBytes })
+
+  const keepAlive = setInterval(() => connections.forEach((connection) => connection.keepAlive()), settings.keepAliveMs)
+  const ping = setInterval(() => connections.forEach((connection) => connection.ping()), settings.pingMs)
+
+  async function onUpgrade(request: IncomingMessage, socket: Duplex, head: Buffer): Promise<void> {
+    socket.on('error', () => socket.destroy())
+    if (isDraining || admitting >= MAX_ADMITTING) return refuse(socket, 503)
+    admitting++
+    const noticesBefore = watch.notices()
+    let admission: Admission
+    try {
+      admission = await admit(request, { db, auth, trustedOrigins })
+    } catch (error) {
+      log.error({ error: reasonOf(error) }, 'upgrade not judged')
+      return refuse(socket, 503)
+    } finally {
+      admitting--
+    }
+    if (socket.destroyed) return
+    if (isDraining) return refuse(socket, 503)
+    if (admission.kind === 'http') {
+      log.warn({ status: admission.status }, 'upgrade refused')
+      return refuse(socket, admission.status)
+    }
+    const { url } = request
+    // Nothing a peer sends is read before this line.
+    sockets.handleUpgrade(request, socket, head, (ws) => {
+      if (admission.kind === 'close') {
+        ws.on('error', () => ws.terminate())
+        log.warn({ code: admission.code, why: admission.why }, 'connection closed')
+        ws.close(admission.code, admission.why)
+        setTimeout(() => ws.terminate(), 3_000).unref()
+        return
+      }
+      const { person, place, role } = admission
+      const wantsAcks = new URLSearchParams(url?.split('?')[1]).get('ack') === '1'
+      const connection = new Connection({ ws, number: nextNumber++, person, place, role, wantsAcks, settings, log })
+      const mine = (perUser.get(person.userId) ?? 0) + 1
+      perUser.set(person.userId, mine)
+      ws.on('close', () => {
+        const left = (perUser.get(person.userId) ?? 1) - 1
+        if (left > 0) perUser.set(person.userId, left)
+        else perUser.delete(person.userId)
+      })
+      if (mine > settings.socketsPerUser) return connection.close(CLOSE.crowded, 'too many sockets of one person')
+      connections.add(connection)
+      watch.add(connection)
+      if (watch.notices() !== noticesBefore) watch.judge(connection)
+      if (connection.mayWrite && updateLog.isUnderPressure()) connection.pause('pressure')
+      const { epoch, schema, frozen } = admission
+      connection.sendExtra(
+        helloFrame({ role, mayWrite: connection.mayWrite && frozen === null, epoch, schema, frozen }),
+      )
+      const leave = join(connection, frozen)
+      ws.on('close', () => {
+        connections.delete(connection)
+        watch.remove(connection)
+        leave()
+      })
+    })
+  }
+
+  /** Brings a connection into its room as soon as that is there. Returns what to do when it goes. */
+  function join(connection: Connection, frozen: string | null): () => void {
+    const hold = rooms.hold(connection.place)
+    let leave = hold.release
+    hold.room.then(
+      (room) => {
+        if (!connection.isOpen) return
+        if (room.peers.size >= settings.connectionsPerDocument) {
+          return connection.close(CLOSE.crowded, 'too many people in one document')
+        }
+        room.peers.add(connection)
+        leave = () => {
+          room.peers.delete(connection)
+          room.presence.leave(connection)
+          hold.release()
+        }
+        connection.start(createReceiver({ pool, rooms, strikes, settings, log, frozen }, connection, room))
+        connection.send(room.presence.everyoneBut(connection))
+      },
+      (error: unknown) => {
+        log.error({ ...connection.facts, error: reasonOf(error) }, 'document not loaded')
+        if (error instanceof UnknownDocument) connection.close(CLOSE.unknown, 'no such document')
+        else connection.close(CLOSE.tryAgain, 'the document could not be loaded')
+      },
+    )
+    return () => leave()
+  }
+
+  let draining: Promise<void> | null = null
+  async function drainOnce(): Promise<void> {
+    isDraining = true
+    for (const connection of connections) connection.pause('drain')
+    const isEmpty = await updateLog.drained(settings.drainMs)
+    if (!isEmpty) log.error({ ...updateLog.stats() }, 'drained with unstored updates; their authors were told nothing')
+    // Acknowledgements go out in a microtask of the commit; after this turn they are on their way.
+    await new Promise((resolve) => setImmediate(resolve))
+    const leaving = [...connections]
+    await Promise.all(
+      leaving.map(async (connection, i) => {
+        // Everybody at once would be everybody back at once.
+        await new Promise((resolve) => setTimeout(resolve, (i / leaving.length) * settings.drainSpreadMs))
+        connection.close(CLOSE.restart, 'restarting')
+      }),
+    )
+    clearInterval(keepAlive)
+    clearInterval(ping)
+    updateLog.stop()
+    rooms.stop()
+    await watch.stop()
+    // A connection that hangs has nothing left that anybody waits for.
+    await Promise.race([pool.end(), new Promise((resolve) => setTimeout(resolve, 2_000))])
+  }
+
+  return {
+    documents,
+    attach: (server) => {
+      server.on('upgrade', (request, socket, head) => {
+        if (request.url?.startsWith('/rt/')) void onUpgrade(request, socket, head)
+      })
+      if (settings.warmUp) setImmediate(warmUp)
+    },
+    drain: () => (draining ??= drainOnce()),
+    stats: () => ({ connections: connections.size, ...rooms.stats(), ...updateLog.stats() }),
+  }
+}
+
+const REASONS = { 401: 'Unauthorized', 403: 'Forbidden', 503: 'Service Unavailable' } as const
+
+function refuse(socket: Duplex, status: keyof typeof REASONS): void {
+  socket.end(`HTTP/1.1 ${status} ${REASONS[status]}\r\nConnection: close\r\nContent-Length: 0\r\n\r\n`)
+}

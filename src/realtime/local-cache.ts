@@ -19,10 +19,15 @@ function registered(): string[] {
   }
 }
 
+/** Remembers a database of this browser by name; `rt:<user>:` in front lets sign-out find and forget it. */
+export function registerCache(name: string): void {
+  localStorage.setItem(REGISTRY, JSON.stringify([...new Set([...registered(), name])]))
+}
+
 /** Opens the document's cache; resolves to undefined where the browser gives none. Gives up waiting after half a second. */
 export async function openCache(name: string, doc: Y.Doc): Promise<IndexeddbPersistence | undefined> {
   try {
-    localStorage.setItem(REGISTRY, JSON.stringify([...new Set([...registered(), name])]))
+    registerCache(name)
     const cache = new IndexeddbPersistence(name, doc)
     const opened = cache._db.then(() => true)
     const usable = await Promise.race([opened.catch(() => false), wait(500).then(() => true)])

@@ -1,4 +1,5 @@
 import { forgetPerson } from './local-cache.ts'
+import { closeOutboxes } from './outbox/outboxes.ts'
 
 const CHANNEL = 'sconce:sign-out'
 
@@ -7,7 +8,9 @@ export function listenForSignOut(userId: string, onSignOut: () => void): () => v
   if (!('BroadcastChannel' in window)) return () => undefined
   const channel = new BroadcastChannel(CHANNEL)
   channel.onmessage = (event: MessageEvent<unknown>) => {
-    if (event.data === userId) onSignOut()
+    if (event.data !== userId) return
+    closeOutboxes(userId)
+    onSignOut()
   }
   return () => channel.close()
 }
@@ -23,5 +26,6 @@ export async function signOutOfDevice(userId: string, endSession: () => Promise<
     channel.close()
   }
   await endSession()
+  closeOutboxes(userId)
   await forgetPerson(userId)
 }

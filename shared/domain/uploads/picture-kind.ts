@@ -6,7 +6,12 @@ export type FileKind =
 const KEEP = 'Nothing was kept.'
 const FORMATS = 'Save it as JPEG, PNG, WebP or AVIF and add that.'
 
-/** Names a file's type by content. Only the four picture types ever reach the decoder. */
+/**
+ * Names a file's type by content. Only the four picture types ever reach the server's decoder; for all others there is
+ * a sentence that says what the file is and what to do.
+ *
+ * @param bytes the file, or at least its first 1024 bytes.
+ */
 export function fileKind(bytes: Uint8Array): FileKind {
   const text = latin1(bytes.subarray(0, 1024))
   if (text.startsWith('\xff\xd8\xff')) return { kind: 'picture', mime: 'image/jpeg' }
@@ -18,7 +23,7 @@ export function fileKind(bytes: Uint8Array): FileKind {
 
 /** AVIF, HEIC and films share a container; its brands say which. */
 function boxedKind(bytes: Uint8Array, text: string): FileKind {
-  const sizeBytes = new DataView(bytes.buffer, bytes.byteOffset, Math.min(4, bytes.byteLength)).getUint32(0)
+  const sizeBytes = new DataView(bytes.buffer, bytes.byteOffset, 4).getUint32(0)
   const brands = text.slice(8, Math.min(Math.max(sizeBytes, 16), 256))
   if (/avi[fs]/.test(brands)) return { kind: 'picture', mime: 'image/avif' }
   if (/hei[cxms]|hev[cxms]|mif1|msf1/.test(brands)) {
@@ -46,7 +51,7 @@ function other(what: string): FileKind {
 }
 
 function latin1(bytes: Uint8Array): string {
-  return Buffer.from(bytes).toString('latin1')
+  return String.fromCharCode(...bytes)
 }
 
 function isText(bytes: Uint8Array): boolean {

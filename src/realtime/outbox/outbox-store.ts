@@ -1,0 +1,63 @@
+import { type DBSchema, type IDBPDatabase, openDB } from 'idb'
+import { cacheName, registerCache } from '../local-cache.ts'
+
+/** A picture that is on this device and not yet on the server. */
+export type OutboxEntry = {
+  uploadId: string
+  shootId: string
+  blob: Blob
+  name: string
+  widthPx: number
+  heightPx: number
+  addedAtMs: number
+  tries: number
+  /** `refused` by the server for good, with its sentence in `why`. */
+  state: 'waiting' | 'refused'
+  why?: string
+}
+
+export type OutboxStore = {
+  list(): Promise<OutboxEntry[]>
+  /** @throws DOMException QuotaExceededError when the device is full. */
+  put(entry: OutboxEntry): Promise<void>
+  remove(uploadId: string): Promise<void>
+}
+
+type Schema = DBSchema & { pictures: { key: string; value: OutboxEntry } }
+
+/** The database of one person's outbox in one shoot; its name lets sign-out find it among the caches. */
+export function outboxName(userId: string, shootId: string): string {
+  return cacheName(userId, shootId, 'outbox', 1)
+}
+
+/** Pictures kept in IndexedDB; in memory alone where the browser gives none. */
+export async function openOutboxStore(name: string): Promise<OutboxStore> {
+  let database: IDBPDatabase<Schema>
+  try {
+    registerCache(name)
+    database = await openDB<Schema>(name, 1, {
+      upgrade: (fresh) => void fresh.createObjectStore('pictures', { keyPath: 'uploadId' }),
+      // Sign-out in another tab wants to delete it.
+      blocking: (_current, _blocked, event) => {
+        if (event.target instanceof IDBDatabase) event.target.close()
+      },
+    })
+  } catch {
+    return memoryOutboxStore()
+  }
+  return {
+    list: () => database.getAll('pictures'),
+    put: async (entry) => void (await database.put('pictures', entry)),
+    remove: (uploadId) => database.delete('pictures', uploadId),
+  }
+}
+
+/** Pictures kept for this visit only. */
+export function memoryOutboxStore(): OutboxStore {
+  const entries = new Map<string, OutboxEntry>()
+  return {
+    list: () => Promise.resolve([...entries.values()]),
+    put: (entry) => Promise.resolve(void entries.set(entry.uploadId, entry)),
+    remove: (uploadId) => Promise.resolve(void entries.delete(uploadId)),
+  }
+}

@@ -1,0 +1,41 @@
+import { rememberUnsent } from '../local-cache.ts'
+import { type Outbox, createOutbox } from './outbox.ts'
+import { openOutboxStore, outboxName } from './outbox-store.ts'
+import { preparePicture } from './prepare-picture.ts'
+import { sendUpload } from './send-upload.ts'
+
+/** By database name; they live as long as the page: leaving a screen does not stop what is being sent. */
+const outboxes = new Map<string, Outbox>()
+
+/** The one outbox of a person in a shoot. */
+export function outboxOf(userId: string, shootId: string): Outbox {
+  const name = outboxName(userId, shootId)
+  const known = outboxes.get(name)
+  if (known) return known
+  const made = createOutbox({
+    shootId,
+    store: openOutboxStore(name),
+    send: sendUpload,
+    prepare: preparePicture,
+    now: Date.now,
+    random: Math.random,
+    onCount: (count) => rememberUnsent(name, count),
+  })
+  outboxes.set(name, made)
+  const wakeWhenSeen = () => {
+    if (document.visibilityState === 'visible') made.wake()
+  }
+  window.addEventListener('online', made.wake)
+  window.addEventListener('pageshow', made.wake)
+  document.addEventListener('visibilitychange', wakeWhenSeen)
+  return made
+}
+
+/** Stops sending for a person who signs out; what was still waiting is about to be forgotten. */
+export function closeOutboxes(userId: string): void {
+  for (const [name, outbox] of outboxes) {
+    if (!name.startsWith(`rt:${userId}:`)) continue
+    outbox.destroy()
+    outboxes.delete(name)
+  }
+}

@@ -1,0 +1,235 @@
+import { type Compiled, at } from './compiled.ts'
+import { construct } from './construct.ts'
+import { Evaluator, NO_SCORE, type Score, compareScores, compareTies } from './evaluate.ts'
+import type { Known } from './layers.ts'
+import { seededRandom } from './random.ts'
+
+/** Stands for minutes late, for each breach, while an order is being led towards keeping all rules. */
+const BREACH_MIN = 30
+
+/**
+ * Good orders for days of any length: seeded starts, then iterated local search. A move exchanges two neighbouring
+ * runs of shots (which moves any run anywhere, and is the asymmetric 3-opt that keeps directions); a move is only worked
+ * out in full when the changeovers alone, in constant time, do not already make it worse. Yields whenever the best
+ * gets better and every few thousand steps of work; ends when `work` is spent.
+ */
+export function* improveOrders(
+  c: Compiled,
+  options: { seed: number; work: number },
+): Generator<{ best: Known; spent: number }, Known> {
+  const search = new LocalSearch(c, options.seed)
+  search.begin()
+  yield { best: search.best, spent: search.spent }
+  let told = search.best
+  let reported = 0
+  while (search.spent < options.work && c.n > 1) {
+    search.round()
+    if (search.best !== told || search.spent - reported > 20_000) {
+      told = search.best
+      reported = search.spent
+      yield { best: told, spent: search.spent }
+    }
+  }
+  return search.best
+}
+
+class LocalSearch {
+  spent = 0
+  best: Known = { order: [], score: NO_SCORE }
+  private readonly c: Compiled
+  private readonly evaluator: Evaluator
+  private readonly random: () => number
+  private readonly fixed: number
+  private order: number[] = []
+  private score: Score = NO_SCORE
+  private trial: Score = { ...NO_SCORE }
+  private path = 0
+  private stale = 0
+  private readonly starts: number[][]
+  private readonly precedes: Uint8Array
+  private touched: Uint8Array
+
+  constructor(c: Compiled, seed: number) {
+    this.c = c
+    this.evaluator = new Evaluator(c)
+    this.random = seededRandom(seed)
+    this.fixed = c.lightsOn + c.minutes.reduce((sum, minutes) => sum + minutes, 0) + (c.hasMeal && c.n > 1 ? c.mealMin : 0)
+    this.starts = [construct(c, 0), construct(c, 0.2), construct(c, 1), construct(c, 5)]
+    this.precedes = new Uint8Array(c.n * c.n)
+    c.after.forEach((shots, shot) => {
+      for (const before of shots) this.precedes[before * c.n + shot] = 1
+    })
+    this.touched = new Uint8Array(c.n).fill(1)
+  }
+
+  /** The order as it stands, and the seeded starts, none of them improved yet. */
+  begin(): void {
+    const present = Array.from(this.c.minutes, (_, shot) => shot)
+    this.use(present)
+    for (const start of this.starts) {
+      const score = this.evaluator.score(start, { ...NO_SCORE })
+      this.spent += this.c.n
+      this.offer(start, score)
+      if (this.compare(score, this.score) < 0) this.use(start)
+    }
+  }
+
+  /** One local optimum, from a shaken order. */
+  round(): void {
+    const kept = { order: [...this.order], score: { ...this.score } }
+    if (this.stale > 0) this.shake()
+    this.descend()
+    const ahead = this.compare(this.score, kept.score)
+    if (ahead < 0) this.stale = 1
+    else {
+      this.stale++
+      const limit = kept.score.wrap + (kept.score.wrap - this.c.lightsOn) * 0.004
+      const drift = this.score.broken === kept.score.broken && this.score.wrap <= limit && this.random() < 0.1
+      if (ahead > 0 && !drift) this.use(kept.order)
+    }
+    if (this.stale > 60 + 4 * this.c.n) {
+      this.use([...this.best.order])
+      this.stale = 1
+    }
+  }
+
+  private use(order: number[]): void {
+    this.order = order
+    this.score = { ...this.evaluator.score(order, this.trial) }
+    this.spent += this.c.n
+    this.path = this.pathOf(order)
+    this.offer(order, this.score)
+  }
+
+  private offer(order: readonly number[], score: Score): void {
+    const ahead = compareScores(score, this.best.score)
+    if (ahead > 0 || (ahead === 0 && compareTies(this.c, order, this.best.order) >= 0)) return
+    this.best = { order: [...order], score: { ...score } }
+  }
+
+  /** As the objective while no rule is broken; before that by breaches and how late they are. */
+  private compare(a: Score, b: Score): number {
+    if (a.broken === 0 && b.broken === 0) return compareScores(a, b)
+    const strayed = a.broken * BREACH_MIN + a.lateMin - (b.broken * BREACH_MIN + b.lateMin)
+    return strayed || compareScores(a, b)
+  }
+
+  private way(from: number, to: number): number {
+    return to < 0 ? 0 : at(this.c.least, (from + 1) * this.c.n + to)
+  }
+
+  private pathOf(order: readonly number[]): number {
+    let path = 0
+    for (let i = 0; i < order.length; i++) path += this.way(i === 0 ? -1 : at(order, i - 1), at(order, i))
+    return path
+  }
+
+  private shake(): void {
+    const { n } = this.c
+    const times = this.random() < 0.7 ? 1 : 2
+    this.touched.fill(0)
+    for (let time = 0; time < times; time++) {
+      const reach = Math.min(n, 3 + Math.floor(this.random() * Math.min(n, 30)))
+      const first = Math.floor(this.random() * (n - reach + 1))
+      const cuts = [0, 0, 0].map(() => first + Math.floor(this.random() * (reach + 1))).sort((a, b) => a - b)
+      const [a, b, d] = [at(cuts, 0), at(cuts, 1), at(cuts, 2)]
+      if (a === b || b === d || (this.score.broken === 0 && !this.keepsAfter(a, b, d))) continue
+      this.swapRuns(a, b, d)
+    }
+    this.score = { ...this.evaluator.score(this.order, this.trial) }
+    this.spent += n
+    this.path = this.pathOf(this.order)
+  }
+
+  private keepsAfter(a: number, b: number, d: number): boolean {
+    for (let j = b; j < d; j++) if (this.barred(a, b, at(this.order, j))) return false
+    return true
+  }
+
+  /** Whether a shot of the run [a, b) has to come before `shot`. */
+  private barred(a: number, b: number, shot: number): boolean {
+    for (let i = a; i < b; i++) if (at(this.precedes, at(this.order, i) * this.c.n + shot) === 1) return true
+    return false
+  }
+
+  /** Exchanges the runs [a, b) and [b, d). */
+  private swapRuns(a: number, b: number, d: number): void {
+    const { order } = this
+    const first = order.slice(a, b)
+    const second = order.slice(b, d)
+    let to = a
+    for (const shot of second) order[to++] = shot
+    for (const shot of first) order[to++] = shot
+    for (const edge of [a - 1, a, a + second.length - 1, a + second.length, d - 1, d]) {
+      const shot = order[edge]
+      if (shot !== undefined) this.touched[shot] = 1
+    }
+  }
+
+  /** Improves by exchanging runs until no exchange near a changed place helps. */
+  private descend(): void {
+    const { n } = this.c
+    let going = true
+    while (going) {
+      going = false
+      for (let a = 0; a < n; a++) {
+        const shot = at(this.order, a)
+        const before = a === 0 ? -1 : at(this.order, a - 1)
+        if (at(this.touched, shot) === 0 && (before < 0 || at(this.touched, before) === 0)) continue
+        if (this.improveFrom(a)) {
+          going = true
+          break
+        }
+        this.touched[shot] = 0
+      }
+    }
+  }
+
+  /** Tries all exchanges with the cut before place `a`: as the first, the middle and the last of the three cuts. */
+  private improveFrom(a: number): boolean {
+    const { n } = this.c
+    for (let b = a + 1; b < n; b++) if (this.improveAt(a, b, b + 1, n)) return true
+    for (let first = a - 1; first >= 0; first--) if (this.improveAt(first, a, a + 1, n)) return true
+    for (let first = a - 2; first >= 0; first--) {
+      for (let b = first + 1; b < a; b++) if (this.improveAt(first, b, a, a)) return true
+    }
+    return false
+  }
+
+  /** Tries the exchanges of [a, b) with [b, d) for d from `from` to `to`. */
+  private improveAt(a: number, b: number, from: number, to: number): boolean {
+    const { order, score } = this
+    const { n } = this.c
+    const left = a === 0 ? -1 : at(order, a - 1)
+    const headA = at(order, a)
+    const tailA = at(order, b - 1)
+    const headB = at(order, b)
+    const base = this.path - this.way(left, headA) - this.way(tailA, headB) + this.way(left, headB)
+    const whole = score.broken === 0
+    if (whole && from > b + 1 && !this.keepsAfter(a, b, from - 1)) return false
+    for (let d = from; d <= to; d++) {
+      const tailB = at(order, d - 1)
+      if (whole && this.barred(a, b, tailB)) return false
+      const right = d === n ? -1 : at(order, d)
+      const path = base - this.way(tailB, right) + this.way(tailB, headA) + this.way(tailA, right)
+      this.spent += 0.05
+      if (whole && this.fixed + path > score.wrap) continue
+      if (this.tryExchange(a, b, d, path)) return true
+    }
+    return false
+  }
+
+  private tryExchange(a: number, b: number, d: number, path: number): boolean {
+    const order = this.order
+    const candidate = [...order.slice(0, a), ...order.slice(b, d), ...order.slice(a, b), ...order.slice(d)]
+    this.spent += this.c.n
+    const score = this.evaluator.score(candidate, this.trial)
+    this.offer(candidate, score)
+    const ahead = this.compare(score, this.score)
+    if (ahead > 0 || (ahead === 0 && compareTies(this.c, candidate, order) >= 0)) return false
+    this.swapRuns(a, b, d)
+    this.score = { ...score }
+    this.path = path
+    return true
+  }
+}

@@ -40,9 +40,9 @@ export type DaysAfter = (days: number) => string | null
 export function demoLooks(id: NamedIds, picture: (name: string) => string, daysAfter: DaysAfter, random: () => number): Uint8Array {
   const doc = new Y.Doc()
   putItems(doc, sitters, [
-    { id: id('astronomer'), name: 'Maud Ferrier', character: 'The Astronomer', hours: [600, 1110], chairMin: 30, travelMin: 40 },
-    { id: id('clockmaker'), name: 'Idris Vane', character: 'The Clockmaker', hours: [540, 1080], chairMin: 20, travelMin: 55 },
-    { id: id('botanist'), name: 'Lena Osei', character: 'The Botanist', hours: [660, 1110], chairMin: 35, travelMin: 40 },
+    { id: id('astronomer'), name: 'Maud Ferrier', character: 'The Astronomer', hours: [570, 1140], chairMin: 20, travelMin: 40 },
+    { id: id('clockmaker'), name: 'Idris Vane', character: 'The Clockmaker', hours: [480, 1140], chairMin: 15, travelMin: 55 },
+    { id: id('botanist'), name: 'Lena Osei', character: 'The Botanist', hours: [600, 1140], chairMin: 20, travelMin: 40 },
   ], random)
   putItems(
     doc,

@@ -34,14 +34,14 @@ export const DEMO_SHOTS: readonly DemoShot[] = [
   { name: 'shot-letters', title: 'Letters by the lamp', note: 'Only if the morning was kind.', need: 'could', set: 'set-dome', setup: 'setup-window', looks: ['look-sleeves'], minutes: 20, frames: 40, lens: '85 mm', orientation: 'upright', cover: 'undyed' },
   { name: 'shot-field', title: 'The Botanist, in from the hill', note: 'Caddy under the arm.', need: 'must', set: 'set-dome', setup: 'setup-broad', looks: ['look-field'], minutes: 25, frames: 60, lens: '50 mm', orientation: 'upright', cover: 'warm-cool' },
   { name: 'shot-star', title: 'First star through the slit', note: 'Slit open, dusk outside. Watch the edge of the platform.', need: 'must', set: 'set-dome', setup: 'setup-window', looks: ['look-cape'], minutes: 25, frames: 60, lens: '85 mm', orientation: 'upright', cover: 'cold-light' },
-  { name: 'shot-toast', title: 'All three, the toast', note: 'Cups up, and hold.', need: 'must', set: 'set-dome', setup: 'setup-broad', looks: ['look-night', 'look-sunday', 'look-line'], minutes: 30, frames: 90, lens: '50 mm', orientation: 'across', cover: 'dusk-distance' },
+  { name: 'shot-toast', title: 'All three, the toast', note: 'Cups up, and hold.', need: 'must', set: 'set-dome', setup: 'setup-broad', looks: ['look-cape', 'look-sunday', 'look-field'], minutes: 30, frames: 90, lens: '50 mm', orientation: 'across', cover: 'dusk-distance' },
 ]
 
 /** One day, two sets, the way between the rooms, what each shot needs, and three rules. */
 export function demoPlan(id: NamedIds, room: (name: string) => string, date: string, random: () => number): Uint8Array {
   const doc = new Y.Doc()
   putItems(doc, days, [
-    { id: id('day'), date, lightsOnMin: 540, hardOutMin: 1110, meal: { minutes: 45, latestAfterMin: 300 }, hands: 2, chairs: 1 },
+    { id: id('day'), date, lightsOnMin: 510, hardOutMin: 1140, meal: { minutes: 45, latestAfterMin: 300 }, hands: 2, chairs: 1 },
   ], random)
   putItems(doc, sets, [
     { id: id('set-gallery'), name: 'Clock wall', roomId: room('Long gallery'), background: 'Ochre lime plaster with the clock faces taken down', colour: '#8a6f56', dressMin: 6, strikeMin: 4, note: 'Bench, stool, tray of escapements.' },
@@ -62,7 +62,7 @@ export function demoPlan(id: NamedIds, room: (name: string) => string, date: str
   putItems(doc, rules, [
     { id: id('rule-toast'), rule: { kind: 'pin-place', shotId: id('shot-toast'), index: -1 } },
     { id: id('rule-open'), rule: { kind: 'after', shotId: id('shot-open'), afterShotId: id('shot-seated') } },
-    { id: id('rule-star'), rule: { kind: 'window', shotId: id('shot-star'), fromMin: 960, toMin: 1080 } },
+    { id: id('rule-star'), rule: { kind: 'window', shotId: id('shot-star'), fromMin: 960, toMin: 1095 } },
   ], random)
   return Y.encodeStateAsUpdate(doc)
 }

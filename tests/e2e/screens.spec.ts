@@ -1,0 +1,90 @@
+import { mkdirSync } from 'node:fs'
+import { join } from 'node:path'
+import AxeBuilder from '@axe-core/playwright'
+import { type Page, expect, test } from '@playwright/test'
+import type { Role } from '#shared/access/roles.ts'
+import { DESK, PHONE, openDemoShoot, signInDemo, visit } from '#tests/e2e/support/people.ts'
+
+/** With SCONCE_SCREENS=1 the pictures of the README are taken anew. */
+const TAKE = process.env['SCONCE_SCREENS'] === '1'
+const FOLDER = join(import.meta.dirname, 'screens')
+
+type Screen = { name: string; path: string; see: RegExp; role: Role }
+
+const SCREENS: readonly Screen[] = [
+  { name: 'shoots', path: '/', see: /^Shoots$/, role: 'photographer' },
+  { name: 'kit-room', path: '/studio/:studio/kit', see: /Kit room/, role: 'photographer' },
+  { name: 'studio-people', path: '/studio/:studio/people', see: /People/, role: 'photographer' },
+  { name: 'me', path: '/me', see: /Ines Marlow|You/, role: 'photographer' },
+  { name: 'brief', path: 'brief', see: /^Brief$/, role: 'photographer' },
+  { name: 'board', path: 'board', see: /^Board$/, role: 'photographer' },
+  { name: 'looks', path: 'looks', see: /^Looks$/, role: 'stylist' },
+  { name: 'lighting', path: 'lighting', see: /^Lighting$/, role: 'photographer' },
+  { name: 'setup', path: 'lighting/:setup', see: /Octa left/, role: 'photographer' },
+  { name: 'order', path: 'order', see: /^Running order$/, role: 'photographer' },
+  { name: 'people', path: 'people', see: /^People$/, role: 'photographer' },
+  { name: 'sign-off', path: 'sign-off', see: /Night coat|Work coat|Sign-off/, role: 'client' },
+  { name: 'day', path: 'day', see: /./, role: 'crew' },
+]
+
+async function settle(page: Page): Promise<void> {
+  await page.waitForLoadState('networkidle')
+  await page.evaluate(() => document.fonts.ready.then(() => undefined))
+}
+
+/** Nothing serious by axe, and nothing wider than the screen. */
+async function inspect(page: Page, name: string): Promise<void> {
+  const { violations } = await new AxeBuilder({ page }).analyze()
+  const serious = violations.filter(({ impact }) => impact === 'serious' || impact === 'critical')
+  expect(serious.map(({ id, nodes }) => `${name}: ${id} ${nodes.map((node) => node.target.join(' ')).join(' | ')}`)).toEqual([])
+  const { scroll, client } = await page.evaluate(() => ({ scroll: document.documentElement.scrollWidth, client: document.documentElement.clientWidth }))
+  expect(scroll, `${name} is wider than the screen`).toBeLessThanOrEqual(client)
+}
+
+async function take(page: Page, name: string, size: string): Promise<void> {
+  if (!TAKE) return
+  mkdirSync(FOLDER, { recursive: true })
+  await page.screenshot({ path: join(FOLDER, `${name}-${size}.png`) })
+}
+
+for (const [size, viewport] of [['desk', DESK], ['phone', PHONE]] as const) {
+  test.describe(`at ${viewport.width} × ${viewport.height}`, () => {
+    for (const role of ['photographer', 'stylist', 'client', 'crew'] as const) {
+      test(`the ${role}'s screens have nothing serious by axe and fit`, async ({ browser, baseURL }) => {
+        test.setTimeout(120_000)
+        const { page, context, errors } = await visit(browser, viewport, baseURL ?? '')
+        await signInDemo(page, role)
+        const session: { studios: { id: string }[] } = await page.evaluate(() => fetch('/api/session').then((answer) => answer.json()))
+        const shoot = await openDemoShoot(page)
+        let setup = ''
+        if (role === 'photographer') {
+          await page.goto(`${shoot}/lighting`)
+          const link = page.getByRole('link', { name: /Octa left, panel right/ }).first()
+          setup = (await link.getAttribute('href'))?.split('/').at(-1) ?? ''
+        }
+        for (const screen of SCREENS.filter((one) => one.role === role)) {
+          const path = screen.path.replace(':studio', session.studios[0]?.id ?? '').replace(':setup', setup)
+          await page.goto(path.startsWith('/') ? path : `${shoot}/${path}`)
+          await expect(page.getByRole('heading', { name: screen.see }).first()).toBeVisible()
+          await settle(page)
+          await inspect(page, screen.name)
+          await take(page, screen.name, size)
+        }
+        expect(errors).toEqual([])
+        await context.close()
+      })
+    }
+
+    test('the screens before signing in have nothing serious by axe and fit', async ({ browser, baseURL }) => {
+      const { page, context, errors } = await visit(browser, viewport, baseURL ?? '')
+      for (const path of ['/sign-in', '/reset', '/join/none-such', '/letters', '/nowhere']) {
+        await page.goto(path)
+        await settle(page)
+        await inspect(page, path)
+        await take(page, path.slice(1).replace('/', '-'), size)
+      }
+      expect(errors).toEqual([])
+      await context.close()
+    })
+  })
+}

@@ -10,7 +10,7 @@ import type { ShootId } from '#shared/ids.ts'
 import { readAll } from '#shared/realtime/collection.ts'
 import { dayShots } from '#shared/realtime/documents.ts'
 import type { Ctx } from '#server/context.ts'
-import { readLookVersions } from '#server/features/sign-off/look-versions.ts'
+import { readLookVersions } from '#server/features/sign-off/look-version-rows.ts'
 import { listAnswers } from '#server/features/sign-off/sign-off-rows.ts'
 
 /** The lamps of a shoot as every screen of it shows them. The caller has seen to access. */

@@ -9,7 +9,6 @@ import * as schema from '#server/db/schema/auth.ts'
 import { resetLetter, signInLetter } from '#server/features/mail/letters.ts'
 import { queueLetter } from '#server/features/mail/queue-letter.ts'
 import { invitedSignIn } from './invited-sign-in.ts'
-import { personName } from './person-name.ts'
 
 export type AuthOptions = {
   secret: string
@@ -59,7 +58,6 @@ export function makeAuth(db: Db, options: AuthOptions) {
         '/magic-link/verify': perMinute,
         '/request-password-reset': perMinute,
         '/reset-password': perMinute,
-        '/get-session': false,
       },
     },
     advanced: {
@@ -69,13 +67,6 @@ export function makeAuth(db: Db, options: AuthOptions) {
       ipAddress: { ipAddressHeaders: [CLIENT_IP_HEADER] },
     },
     databaseHooks: {
-      user: {
-        create: { before: (user) => Promise.resolve({ data: { ...user, name: personName(user.name) } }) },
-        update: {
-          before: (user) =>
-            Promise.resolve({ data: typeof user['name'] === 'string' ? { ...user, name: personName(user['name']) } : user }),
-        },
-      },
       session: {
         // Every process closes the sockets of a session that has ended.
         delete: { after: (session) => notifyAuth(db, { userId: session.userId, sessionId: session.id }) },

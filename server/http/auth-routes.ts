@@ -1,14 +1,15 @@
 import { fromNodeHeaders } from 'better-auth/node'
 import type { RequestHandler, Response as ExpressResponse } from 'express'
-import { AppError } from '#server/errors.ts'
 import { type Auth, CLIENT_IP_HEADER } from '#server/auth/auth.ts'
+import { personName } from '#server/auth/person-name.ts'
+import { AppError } from '#server/errors.ts'
 import { authError } from './auth-errors.ts'
 
 /** What of the sign-in library can be reached; everything else of it has no address here. */
 const OPEN = new Set([
   'POST /sign-up/email', 'POST /sign-in/email', 'POST /sign-in/magic-link', 'GET /magic-link/verify', 'POST /sign-out',
   'POST /request-password-reset', 'POST /reset-password', 'POST /change-password', 'POST /update-user',
-  'GET /get-session', 'GET /list-sessions', 'POST /revoke-session', 'POST /revoke-other-sessions',
+  'POST /revoke-other-sessions',
 ])
 
 /** Sign-in, sign-up, sign-out and passwords, with refusals in our own envelope. Comes after the JSON parser. */
@@ -19,7 +20,8 @@ export function authRoute(auth: Auth, publicUrl: string): RequestHandler {
     const headers = fromNodeHeaders(req.headers)
     headers.set(CLIENT_IP_HEADER, req.ip ?? '')
     headers.delete('content-length')
-    const body: unknown = req.body
+    const body = withCheckedName(req.body)
+    if (body === undefined) headers.delete('content-type')
     const answer = await auth.handler(
       new Request(new URL(req.originalUrl, publicUrl), {
         method: req.method,
@@ -31,11 +33,20 @@ export function authRoute(auth: Auth, publicUrl: string): RequestHandler {
   }
 }
 
-/** Hands a web response on, refusals as ours. A redirect means that the letter's link was no good. */
+/** A name goes into letters and everybody's screens, so it is one line of readable length. @throws BAD_REQUEST */
+function withCheckedName(body: unknown): unknown {
+  if (typeof body !== 'object' || body === null || !('name' in body) || typeof body.name !== 'string') return body
+  return { ...body, name: personName(body.name) }
+}
+
+/**
+ * Hands cookies on, and refusals as ours. What the library answers with would show the session's token to scripts, so
+ * nobody gets to read it. A redirect means that the letter's link was no good.
+ */
 async function pass(answer: Response, res: ExpressResponse): Promise<void> {
   if (answer.status >= 300) throw authError(answer.status, await answer.json().catch(() => undefined))
   sendCookies(answer.headers, res)
-  res.status(answer.status).set('cache-control', 'no-store').type('json').send(await answer.text())
+  res.json({ ok: true })
 }
 
 /** The session cookie of an answer of the sign-in library. */

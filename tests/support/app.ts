@@ -8,8 +8,9 @@ import type pg from 'pg'
 import { pino } from 'pino'
 import { type AppDeps, createApp } from '#server/app.ts'
 import { makeAuth } from '#server/auth/auth.ts'
-import type { Ctx } from '#server/context.ts'
+import type { Actor, Ctx } from '#server/context.ts'
 import { type Db, connectDatabase } from '#server/db/client.ts'
+import { type Client, TEST_ORIGIN, clientFor } from '#tests/support/client.ts'
 import { type Clock, clockAt } from '#tests/support/clock.ts'
 import { createTestDatabase } from '#tests/support/database.ts'
 import { type FakeDocuments, fakeDocuments } from '#tests/support/documents.ts'
@@ -22,12 +23,13 @@ export type TestApp = {
   pool: pg.Pool
   clock: Clock
   documents: FakeDocuments
-  /** A verb's world without anybody signed in. */
-  ctx: Ctx
+  /** A verb's world as this person, or without anybody signed in. */
+  ctxOf: (actor?: Actor) => Ctx
+  /** A browser signed in as this person, without the form. */
+  clientOf: (actor?: Actor) => Promise<Client>
   close: () => Promise<void>
 }
 
-export const TEST_ORIGIN = 'http://localhost:4103'
 const GENEROUS = 100_000
 
 /** The real app on a database and a port of its own. The clock stands at the given time; sessions follow the real one. */
@@ -62,15 +64,20 @@ export async function startTestApp(
   const server = createServer(app)
   server.listen(0, '127.0.0.1')
   await once(server, 'listening')
-  const ctx: Ctx = { db, actor: null, now: clock.now, documents, publicUrl: TEST_ORIGIN }
+  const url = addressOf(server)
   return {
     app,
-    url: addressOf(server),
+    url,
     db,
     pool,
     clock,
     documents,
-    ctx,
+    ctxOf: (actor) => ({ db, actor: actor ?? null, now: clock.now, documents, publicUrl: TEST_ORIGIN }),
+    clientOf: async (actor) => {
+      if (!actor) return clientFor(url)
+      const { headers } = await auth.api.signInInvited({ body: { userId: actor.userId }, headers: new Headers(), returnHeaders: true })
+      return clientFor(url, headers.getSetCookie().map((line) => line.split(';')[0] ?? '').join('; '))
+    },
     close: async () => {
       server.closeAllConnections()
       await new Promise((resolve) => server.close(resolve))

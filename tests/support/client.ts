@@ -1,4 +1,5 @@
-import { TEST_ORIGIN } from '#tests/support/app.ts'
+/** Where the tests' app says it lives. */
+export const TEST_ORIGIN = 'http://localhost:4103'
 
 export type Answer = { status: number; body: unknown; text: string; headers: Headers }
 

@@ -9,7 +9,7 @@ import type { Ctx } from '#server/context.ts'
 import { withTransaction } from '#server/db/client.ts'
 import { signOff } from '#server/db/schema/sign-off.ts'
 import { AppError } from '#server/errors.ts'
-import { readLookVersions } from './look-versions.ts'
+import { readLookVersions } from './look-version-rows.ts'
 import { listAnswers, toSignOff } from './sign-off-rows.ts'
 
 export type AnswerLook = SignOffInput & { shootId: ShootId; lookId: LookId }

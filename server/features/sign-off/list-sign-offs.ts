@@ -3,7 +3,7 @@ import { fingerprintOf, freezeLook } from '#shared/domain/sign-off/fingerprint.t
 import type { ShootId } from '#shared/ids.ts'
 import { requireShoot } from '#server/access/require.ts'
 import type { Ctx } from '#server/context.ts'
-import { readLookVersions } from './look-versions.ts'
+import { readLookVersions } from './look-version-rows.ts'
 import { listAnswers } from './sign-off-rows.ts'
 
 /** The complete history of a shoot's answers, newest first, and every look as the server sees it now. */

@@ -38,7 +38,10 @@ async function docRow() {
 
 async function storedDoc(): Promise<Y.Doc> {
   const { id } = await docRow()
-  const rows = await world.pool.query<{ update: Buffer }>('select update from rt_update where doc_id = $1 order by seq', [id])
+  const rows = await world.pool.query<{ update: Buffer }>(
+    'select update from rt_update where doc_id = $1 order by seq',
+    [id],
+  )
   const doc = new Y.Doc()
   for (const row of rows.rows) Y.applyUpdate(doc, row.update)
   return doc
@@ -228,7 +231,12 @@ describe('drain', () => {
   it('stores what is queued, sends the last acknowledgements, closes with 1012 and takes nobody new', async () => {
     const leaving = await startWorld({ databaseUrl: database.url })
     shoot = await addShoot(leaving.db, leaving.realtime.documents)
-    const at = { url: leaving.url, shootId: shoot.shootId, kind: 'board', sessionId: shoot.people.photographer.sessionId }
+    const at = {
+      url: leaving.url,
+      shootId: shoot.shootId,
+      kind: 'board',
+      sessionId: shoot.people.photographer.sessionId,
+    }
     const client = await new TestClient(at).ready()
     for (let i = 0; i < 200; i++) client.items.set(`k${i}`, i)
     await until(() => leaving.realtime.stats().queuedEntries > 0 || client.saved === client.sent)

@@ -169,7 +169,11 @@ describe('updates with a gap', () => {
 })
 
 describe('presence', () => {
-  const stamp = (role: keyof Shoot['people']) => ({ id: shoot.people[role].userId, name: shoot.people[role].name, role })
+  const stamp = (role: keyof Shoot['people']) => ({
+    id: shoot.people[role].userId,
+    name: shoot.people[role].name,
+    role,
+  })
 
   it('carries who it is from the session, whatever the client says', async () => {
     const client = await open('client').ready()

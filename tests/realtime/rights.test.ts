@@ -15,7 +15,16 @@ import { createTestDatabase } from '#tests/support/database.ts'
 import type { TestDatabase } from '#tests/support/template.ts'
 import { tryDocument } from './support.ts'
 import { TestClient, contentOf, pause, syncFrame, until } from './support/client.ts'
-import { ORIGIN, type Shoot, type Someone, type World, addPerson, addSession, addShoot, startWorld } from './support/world.ts'
+import {
+  ORIGIN,
+  type Shoot,
+  type Someone,
+  type World,
+  addPerson,
+  addSession,
+  addShoot,
+  startWorld,
+} from './support/world.ts'
 
 let database: TestDatabase
 let world: World
@@ -50,7 +59,9 @@ describe('who gets into a document', () => {
     it(`shows ${kind} to nobody without a role, who cannot tell it from what does not exist`, async () => {
       const stranger = await addPerson(world.db, 'Ada Nilsen')
       const studioOwner = await addPerson(world.db, 'Rosa Lind')
-      await world.db.insert(studioMember).values({ studioId: shoot.studioId, userId: studioOwner.userId, role: 'owner' })
+      await world.db
+        .insert(studioMember)
+        .values({ studioId: shoot.studioId, userId: studioOwner.userId, role: 'owner' })
       const removed = await addPerson(world.db, 'Piet Baas')
       await world.db.insert(shootMember).values({ shootId: shoot.shootId, userId: removed.userId, role: 'stylist' })
       await world.db
@@ -81,7 +92,9 @@ describe('who gets into a document', () => {
       const refused = (status: number) => ({ kind: 'upgrade refused', status })
       expect(await tryDocument(world.url, { origin: ORIGIN }, shootId, kind)).toEqual(refused(401))
       expect(await tryDocument(world.url, { ...mine, 'x-test-session': 'none' }, shootId, kind)).toEqual(refused(401))
-      expect(await tryDocument(world.url, { ...mine, origin: 'http://localhost:9' }, shootId, kind)).toEqual(refused(403))
+      expect(await tryDocument(world.url, { ...mine, origin: 'http://localhost:9' }, shootId, kind)).toEqual(
+        refused(403),
+      )
       const { origin: _, ...without } = mine
       expect(await tryDocument(world.url, without, shootId, kind)).toEqual(refused(403))
     })
@@ -89,7 +102,11 @@ describe('who gets into a document', () => {
 
   it('knows no other kinds and no other ids', async () => {
     const mine = headersOf(shoot.people.photographer)
-    for (const [id, kind] of [[shoot.shootId, 'money'], ['not-an-id', 'board'], [shoot.shootId, 'board/x']] as const) {
+    for (const [id, kind] of [
+      [shoot.shootId, 'money'],
+      ['not-an-id', 'board'],
+      [shoot.shootId, 'board/x'],
+    ] as const) {
       expect(await tryDocument(world.url, mine, id, kind)).toEqual({ kind: 'closed', code: CLOSE.unknown })
     }
   })
@@ -105,7 +122,10 @@ describe('who gets into a document', () => {
     await clients[0]?.ended
     await until(async () => {
       const next = new TestClient(at)
-      const isIn = await next.ready().then(() => true, () => false)
+      const isIn = await next.ready().then(
+        () => true,
+        () => false,
+      )
       next.close()
       return isIn
     })
@@ -192,7 +212,12 @@ describe('changed rights', () => {
   it('is not told of what is rolled back', async () => {
     const quiet = await startWorld({ databaseUrl: database.url })
     const { shootId, people } = shoot
-    const client = await new TestClient({ url: quiet.url, shootId, kind: 'board', sessionId: people.stylist.sessionId }).ready()
+    const client = await new TestClient({
+      url: quiet.url,
+      shootId,
+      kind: 'board',
+      sessionId: people.stylist.sessionId,
+    }).ready()
     await quiet.db
       .transaction(async (tx) => {
         await tx.update(shootMember).set({ role: 'crew' }).where(eq(shootMember.userId, people.stylist.userId))
@@ -220,7 +245,12 @@ describe('changed rights', () => {
     const { shootId } = shoot
     const someone = await addPerson(quiet.db, 'Ove Sand', 500)
     await quiet.db.insert(shootMember).values({ shootId, userId: someone.userId, role: 'stylist' })
-    const client = await new TestClient({ url: quiet.url, shootId, kind: 'board', sessionId: someone.sessionId }).ready()
+    const client = await new TestClient({
+      url: quiet.url,
+      shootId,
+      kind: 'board',
+      sessionId: someone.sessionId,
+    }).ready()
     await quiet.db
       .update(session)
       .set({ expiresAt: new Date(Date.now() + 1_500) })

@@ -106,7 +106,8 @@ export async function startWorld(options: {
   const own = connectDatabase(databaseUrl, () => undefined, 4)
   const theirs = connectDatabase(serverUrl, () => undefined, 4)
   const lines: LogLine[] = []
-  const say = (level: LogLine['level']) => (details: object, message: string) => void lines.push({ level, message, details })
+  const say = (level: LogLine['level']) => (details: object, message: string) =>
+    void lines.push({ level, message, details })
   const realtime = createRealtime({
     db: theirs.db,
     databaseUrl: serverUrl,

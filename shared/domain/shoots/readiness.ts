@@ -1,6 +1,7 @@
 import type { Frame } from '#shared/domain/board/schema.ts'
 import type { DayShot } from '#shared/domain/day/schema.ts'
 import type { Plan, PlannedShot, WholeSetup } from '#shared/domain/plan/read-plan.ts'
+import type { ShotPlan } from '#shared/domain/plan/schema.ts'
 import type { Brief } from './schema.ts'
 
 /** The lamp's three states: not begun or waiting, under way or changed since, ready. */
@@ -14,6 +15,9 @@ export type Section = (typeof SECTIONS)[number]
 /** One lamp with the reason for its state: what is missing next, or what is settled. */
 export type Readiness = { section: Section; lamp: Lamp; why: string }
 
+/** How the shots hold the camera with a setup, and the frames of them all. */
+export type SetupUse = { orientations: readonly ShotPlan['orientation'][]; frames: number }
+
 export type ReadinessInput = {
   plan: Plan
   /** Living frames of the board. */
@@ -22,8 +26,8 @@ export type ReadinessInput = {
   signOffs: ReadonlyMap<string, 'waiting' | 'signed off' | 'changed since' | 'change asked'>
   /** What happened on the day, by shot id. */
   dayShots: ReadonlyMap<string, DayShot>
-  /** The red cautions of a setup (in frame, out of balance, over power), in words; empty when there is none. */
-  redCautions: (setup: WholeSetup) => readonly string[]
+  /** The red cautions of a setup as its shots use it (in frame, out of balance, over power), in words; empty when there is none. */
+  redCautions: (setup: WholeSetup, use: SetupUse) => readonly string[]
   /** A day as it is ordered now: the rules it breaks, in words, and when it wraps, minutes since midnight. */
   schedule: (dayId: string) => { broken: readonly string[]; wrapMin: number }
 }
@@ -87,12 +91,17 @@ function looksReadiness({ plan, signOffs }: ReadinessInput): Omit<Readiness, 'se
 
 function lightingReadiness({ plan, redCautions }: ReadinessInput): Omit<Readiness, 'section'> {
   if (plan.setups.size === 0) return { lamp: 'unlit', why: 'Light the first setup' }
-  const used = new Map<string, WholeSetup>()
-  for (const { setup } of plan.shots.values()) if (setup) used.set(setup.setup.id, setup)
-  for (const setup of used.values()) {
+  const used = new Map<string, { setup: WholeSetup; use: SetupUse }>()
+  for (const { setup, plan: shot } of plan.shots.values()) {
+    if (!setup) continue
+    const before: SetupUse = used.get(setup.setup.id)?.use ?? { orientations: [], frames: 0 }
+    const orientations = before.orientations.includes(shot.orientation) ? before.orientations : [...before.orientations, shot.orientation]
+    used.set(setup.setup.id, { setup, use: { orientations, frames: before.frames + shot.frames } })
+  }
+  for (const { setup, use } of used.values()) {
     const { name } = setup.setup
     if (!setup.lights.some((light) => light.purpose === 'main')) return { lamp: 'half', why: `“${name}” has no main` }
-    const red = redCautions(setup)[0]
+    const red = redCautions(setup, use)[0]
     if (red !== undefined) return { lamp: 'half', why: `“${name}”: ${red}` }
   }
   const without = plan.days.flatMap((day) => day.shots).filter((shot) => !shot.setup)

@@ -1,0 +1,104 @@
+import { useEffect, useState } from 'react'
+import type { SaveState } from '#src/realtime/save-state.ts'
+import { useSaveState } from '#src/realtime/use-save-state.ts'
+import { cn } from '#src/lib/cn.ts'
+import { count } from '#src/lib/format.ts'
+import { Button } from '#src/ui/button.tsx'
+import { Lamp, type LampState } from '#src/ui/lamp.tsx'
+import { Popover } from '#src/ui/popover.tsx'
+
+const WORDS: Record<SaveState['kind'], string> = {
+  saved: 'Saved',
+  saving: 'Saving…',
+  offline: 'Offline – kept on this device',
+  'not-saved': 'Not saved',
+  reload: 'Reload needed',
+}
+
+const LAMPS: Record<SaveState['kind'], LampState> = { saved: 'lit', saving: 'half', offline: 'half', 'not-saved': 'unlit', reload: 'unlit' }
+
+/** Saving that takes less than a second is not worth a word. */
+const SAVING_SHOWN_AFTER_MS = 1000
+
+function useCalmSaveState(): SaveState {
+  const state = useSaveState()
+  const [waited, setWaited] = useState(false)
+  const isSaving = state.kind === 'saving'
+  useEffect(() => {
+    if (!isSaving) return
+    const timer = setTimeout(() => setWaited(true), SAVING_SHOWN_AFTER_MS)
+    return () => {
+      clearTimeout(timer)
+      setWaited(false)
+    }
+  }, [isSaving])
+  return isSaving && !waited ? { kind: 'saved' } : state
+}
+
+function explanation(state: SaveState): string {
+  switch (state.kind) {
+    case 'saved':
+      return 'Everything you did is on the server.'
+    case 'saving':
+      return 'What you did is on its way. It is kept on this device until the server has it.'
+    case 'offline':
+      return state.unsent === 0
+        ? 'There is no connection. You can go on working: it is kept on this device and sent as soon as there is a signal.'
+        : `There is no connection. ${count(state.unsent, 'change')} of yours ${state.unsent === 1 ? 'is' : 'are'} kept on this device and sent as soon as there is a signal.`
+    case 'not-saved':
+      return state.why
+    case 'reload':
+      return 'Sconce has been renewed. What you did is kept; load the page again to go on.'
+  }
+}
+
+export type SaveSignProps = { tone: 'night' | 'paper' }
+
+/** Says whether what was done is safe, in five words that are the same everywhere. One press says more. */
+export function SaveSign({ tone }: SaveSignProps) {
+  const state = useCalmSaveState()
+  const isTrouble = state.kind === 'not-saved' || state.kind === 'reload'
+  return (
+    <>
+      <Popover
+        label="What is saved where"
+        trigger={
+          <button
+            type="button"
+            className={cn(
+              'flex items-center gap-2 rounded-r text-left text-xs leading-tight max-md:min-h-11 max-md:max-w-36 max-md:flex-row-reverse max-md:text-right',
+              tone === 'night' ? 'text-bone-soft hover:text-bone' : 'text-ink-soft hover:text-ink',
+              isTrouble && (tone === 'night' ? '!font-semibold !text-glow-lit' : '!font-semibold !text-glow-ink'),
+            )}
+          >
+            <Lamp state={LAMPS[state.kind]} />
+            {WORDS[state.kind]}
+          </button>
+        }
+      >
+        <p className="font-semibold">{WORDS[state.kind]}</p>
+        <p className="mt-1 text-sm text-ink-soft">{explanation(state)}</p>
+        {state.kind === 'reload' && (
+          <Button variant="primary" className="mt-3" onClick={() => window.location.reload()}>
+            Load the page again
+          </Button>
+        )}
+      </Popover>
+      <Announcement state={state} />
+    </>
+  )
+}
+
+/** Speaks up for trouble, and once when it is over; ordinary saving is silent. */
+function Announcement({ state }: { state: SaveState }) {
+  const [spoken, setSpoken] = useState('')
+  const { kind } = state
+  const trouble = kind === 'offline' || kind === 'not-saved' || kind === 'reload'
+  const next = trouble ? WORDS[kind] : kind === 'saved' && spoken !== '' ? WORDS.saved : spoken
+  if (next !== spoken) setSpoken(next)
+  return (
+    <span role="status" className="sr-only">
+      {spoken}
+    </span>
+  )
+}

@@ -1,0 +1,92 @@
+import { useSuspenseQuery } from '@tanstack/react-query'
+import { Suspense } from 'react'
+import { Outlet, useLocation, useParams } from 'react-router-dom'
+import { shootQueries } from '#src/features/shoots/queries.ts'
+import { shortDate } from '#src/lib/format.ts'
+import { ShootRealtime, useClosed, useShoot } from '#src/realtime/shoot-realtime.tsx'
+import { ScreenBarAside } from '#src/ui/screen-bar.tsx'
+import { Waiting } from '#src/ui/waiting.tsx'
+import { Trouble } from '../error-view.tsx'
+import { sectionsFor } from '../sections.ts'
+import { useSession } from '../session.ts'
+import { useReadiness } from '../use-readiness.ts'
+import { Frame, Spine, SpineLink } from './frame.tsx'
+import { HereNow } from './here-now.tsx'
+import { SaveSign } from './save-sign.tsx'
+import { ShootBottomBar } from './shoot-bottom-bar.tsx'
+import { useSayWhere } from './use-say-where.ts'
+import { closedWords } from './closed-words.ts'
+
+/** Opens a shoot: its documents, its left column, who is here, what is saved. */
+export function ShootLayout() {
+  const { shootId = '' } = useParams()
+  const { user } = useSession()
+  const { data: shoot } = useSuspenseQuery(shootQueries.detail(shootId))
+  return (
+    <ShootRealtime shoot={shoot} userId={user.id} waiting={<Waiting label={`Opening ${shoot.brief.title}`} className="min-h-dvh" />}>
+      <OpenShoot />
+    </ShootRealtime>
+  )
+}
+
+function OpenShoot() {
+  const shoot = useShoot()
+  const closed = useClosed()
+  const readiness = useReadiness()
+  const { pathname } = useLocation()
+  const sections = sectionsFor(shoot.role)
+  const root = `/shoots/${shoot.id}`
+  const here = pathname.slice(root.length + 1).split('/')[0] ?? ''
+  useSayWhere(here)
+  const lamps = new Map(readiness.map((section) => [section.section, section]))
+  const links = [...sections.working, ...sections.beside]
+  const label = links.find((link) => link.path === here)?.label
+  const trouble = closed === null ? null : closedWords(closed)
+  if (trouble) return <Trouble {...trouble} />
+  const where = [shoot.brief.date === null ? 'No date yet' : shortDate(shoot.brief.date), shoot.brief.location.name].filter((part) => part.trim() !== '').join(' · ')
+  return (
+    <Frame
+      spine={
+        <Spine
+          label="Shoot"
+          head={
+            <>
+              <b className="block font-display text-[1rem] leading-tight font-semibold text-balance">{shoot.brief.title}</b>
+              <span className="text-xs text-bone-soft">{where}</span>
+            </>
+          }
+          foot={
+            <div className="flex flex-col gap-3">
+              <SaveSign tone="night" />
+              <HereNow />
+            </div>
+          }
+        >
+          {sections.working.map((link) => {
+            const lamp = link.lamp === null ? undefined : lamps.get(link.lamp)
+            return (
+              <SpineLink key={link.path} to={`${root}/${link.path}`} {...(lamp ? { lamp: lamp.lamp, lampWhy: lamp.why } : {})}>
+                {link.label}
+              </SpineLink>
+            )
+          })}
+          <div className="mt-3">
+            {sections.beside.map((link) => (
+              <SpineLink key={link.path} to={`${root}/${link.path}`}>
+                {link.label}
+              </SpineLink>
+            ))}
+          </div>
+        </Spine>
+      }
+      bottom={<ShootBottomBar root={root} sections={sections} lamps={lamps} title={shoot.brief.title} where={where} />}
+    >
+      <title>{`${label === undefined ? '' : `${label} · `}${shoot.brief.title} · Sconce`}</title>
+      <ScreenBarAside value={<SaveSign tone="paper" />}>
+        <Suspense fallback={<Waiting />}>
+          <Outlet />
+        </Suspense>
+      </ScreenBarAside>
+    </Frame>
+  )
+}

@@ -1,0 +1,29 @@
+import { useQueryClient } from '@tanstack/react-query'
+import { useNavigate } from 'react-router-dom'
+import { account } from '#src/features/people/account.ts'
+import { MeScreen } from '#src/features/people/components/me-screen.tsx'
+import { studioQueries } from '#src/features/studios/queries.ts'
+import { forgetDrafts } from '#src/lib/drafts.ts'
+import { unsentOnDevice } from '#src/realtime/local-cache.ts'
+import { signOutOfDevice } from '#src/realtime/sign-out.ts'
+import { useSession } from '../session.ts'
+
+export function Component() {
+  const { user } = useSession()
+  const queryClient = useQueryClient()
+  const navigate = useNavigate()
+  const signOut = async () => {
+    await signOutOfDevice(user.id, async () => void (await account.signOut()))
+    forgetDrafts(user.id)
+    await navigate('/sign-in', { replace: true })
+    queryClient.clear()
+  }
+  return (
+    <MeScreen
+      user={user}
+      unsent={unsentOnDevice(user.id)}
+      onSignOut={signOut}
+      onRenamed={() => void queryClient.invalidateQueries({ queryKey: studioQueries.session().queryKey })}
+    />
+  )
+}

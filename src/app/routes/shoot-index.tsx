@@ -1,0 +1,6 @@
+import { Navigate } from 'react-router-dom'
+
+/** A shoot opens on its board. */
+export function Component() {
+  return <Navigate to="board" replace />
+}

@@ -1,0 +1,3 @@
+import { SignOffScreen } from '#src/features/sign-off/components/sign-off-screen.tsx'
+
+export { SignOffScreen as Component }

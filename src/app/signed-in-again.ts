@@ -1,0 +1,17 @@
+import { useQueryClient } from '@tanstack/react-query'
+import { useNavigate } from 'react-router-dom'
+
+/** An address inside Sconce, or the start page: a letter cannot send anybody elsewhere. */
+export function safePath(to: string | null): string {
+  return to !== null && /^\/(?![/\\])/.test(to) ? to : '/'
+}
+
+/** Goes on as the person who has just signed in: nothing of who was here before stays. */
+export function useGoOn(): (to: string | null) => void {
+  const queryClient = useQueryClient()
+  const navigate = useNavigate()
+  return (to) => {
+    queryClient.clear()
+    void navigate(safePath(to), { replace: true })
+  }
+}

@@ -1,0 +1,63 @@
+import { type FormEvent, useId, useState } from 'react'
+import type { KitInput } from '#shared/domain/kit/schema.ts'
+import { Button } from '#src/ui/button.tsx'
+import { Dialog } from '#src/ui/dialog.tsx'
+import { Field } from '#src/ui/field.tsx'
+import { FormError } from '#src/ui/form-error.tsx'
+import { Input } from '#src/ui/input.tsx'
+import { NumberInput } from '#src/ui/number-input.tsx'
+import { Textarea } from '#src/ui/textarea.tsx'
+import { KitNumbers } from './kit-numbers.tsx'
+
+export type KitDialogProps = {
+  title: string
+  input: KitInput
+  isBusy: boolean
+  refusal: string | null
+  onClose: () => void
+  onSave: (input: KitInput) => void
+}
+
+export function KitDialog({ title, input, isBusy, refusal, onClose, onSave }: KitDialogProps) {
+  const [draft, setDraft] = useState<KitInput>({ name: input.name, quantity: input.quantity, note: input.note, body: input.body })
+  const [isNameMissing, setIsNameMissing] = useState(false)
+  const form = useId()
+  const handleSubmit = (event: FormEvent) => {
+    event.preventDefault()
+    const name = draft.name.trim()
+    setIsNameMissing(name === '')
+    if (name !== '') onSave({ ...draft, name })
+  }
+  return (
+    <Dialog
+      open
+      wide
+      onOpenChange={(open) => !open && onClose()}
+      title={title}
+      footer={
+        <>
+          <Button onClick={onClose}>Cancel</Button>
+          <Button type="submit" form={form} variant="primary" busy={isBusy}>
+            Save
+          </Button>
+        </>
+      }
+    >
+      <form id={form} noValidate onSubmit={handleSubmit} className="flex flex-col gap-4">
+        <FormError>{refusal}</FormError>
+        <div className="grid gap-4 sm:grid-cols-[minmax(0,1fr)_7rem]">
+          <Field label="Name" error={isNameMissing ? 'Give it a name' : undefined}>
+            <Input autoComplete="off" maxLength={120} value={draft.name} onChange={(event) => setDraft({ ...draft, name: event.target.value })} />
+          </Field>
+          <Field label="How many">
+            <NumberInput min={0} max={999} value={draft.quantity} onChange={(quantity) => setDraft({ ...draft, quantity: Math.round(quantity) })} />
+          </Field>
+        </div>
+        <KitNumbers body={draft.body} onChange={(body) => setDraft({ ...draft, body })} />
+        <Field label="Note">
+          <Textarea rows={2} maxLength={1000} value={draft.note} onChange={(event) => setDraft({ ...draft, note: event.target.value })} />
+        </Field>
+      </form>
+    </Dialog>
+  )
+}

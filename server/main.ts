@@ -5,14 +5,15 @@ import { createLetterCatcher } from '#server/adapters/letter-catcher.ts'
 import { createMailer } from '#server/adapters/mail.ts'
 import { createApp } from '#server/app.ts'
 import { makeAuth } from '#server/auth/auth.ts'
+import { createPerson } from '#server/auth/create-person.ts'
 import { signedIn } from '#server/auth/session.ts'
 import { connectDatabase } from '#server/db/client.ts'
 import { migrateDatabase } from '#server/db/migrate.ts'
-import { createPerson } from '#server/auth/create-person.ts'
 import { ensureDemo } from '#server/demo/ensure-demo.ts'
 import { parseEnv } from '#server/env.ts'
 import { startMailWorker } from '#server/features/mail/mail-worker.ts'
 import { HTTP_LIMITS } from '#server/http/limits.ts'
+import { loggable } from '#server/http/loggable.ts'
 import { createRealtime } from '#server/realtime/server.ts'
 import { isLoopback } from '#server/start/ports.mjs'
 
@@ -20,12 +21,12 @@ const DRAIN_MS = 15_000
 
 const env = parseEnv(process.env)
 // Standard output belongs to whoever started us; the log goes to standard error.
-const log = pino({ level: env.logLevel, base: null, redact: ['req.headers', 'email', 'token'] }, pino.destination(2))
+const log = pino({ level: env.logLevel, base: null }, pino.destination(2))
 
-process.on('unhandledRejection', (error) => log.error({ err: error }, 'a promise was left alone'))
+process.on('unhandledRejection', (error) => log.error({ failure: loggable(error) }, 'a promise was left alone'))
 
 await migrateDatabase(env.databaseUrl)
-const { db, pool } = connectDatabase(env.databaseUrl, (error) => log.warn({ err: error }, 'an idle database connection broke'))
+const { db, pool } = connectDatabase(env.databaseUrl, (error) => log.warn({ failure: loggable(error) }, 'an idle database connection broke'))
 const now = () => new Date()
 const { publicUrl, trustedOrigins } = env
 const auth = makeAuth(db, { secret: env.authSecret, publicUrl, trustedOrigins, signInsPerMin: HTTP_LIMITS.signInsPerMin })
@@ -52,7 +53,7 @@ const server = createServer(app)
 server.keepAliveTimeout = 75_000
 realtime.attach(server)
 server.on('error', (error) => {
-  log.fatal({ err: error }, 'cannot listen')
+  log.fatal({ failure: loggable(error) }, 'cannot listen')
   process.exit(1)
 })
 server.listen(env.port, env.host, () => {
@@ -82,7 +83,7 @@ async function drain(): Promise<void> {
 for (const signal of ['SIGTERM', 'SIGINT'] as const) {
   process.on(signal, () => {
     drain().catch((error: unknown) => {
-      log.error({ err: error }, 'draining failed')
+      log.error({ failure: loggable(error) }, 'draining failed')
       process.exit(1)
     })
   })

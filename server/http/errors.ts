@@ -2,6 +2,7 @@ import type { ErrorRequestHandler, RequestHandler } from 'express'
 import type { Logger } from 'pino'
 import type { ErrorEnvelope } from '#shared/api/errors.ts'
 import { AppError, STATUS } from '#server/errors.ts'
+import { loggable } from './loggable.ts'
 
 /** Everything that a request can end with, as the one envelope. The cause of what is not ours to tell goes to the log. */
 export function errorHandler(log: Logger): ErrorRequestHandler {
@@ -12,7 +13,7 @@ export function errorHandler(log: Logger): ErrorRequestHandler {
     }
     const known = toAppError(error)
     if (known.code === 'INTERNAL' || known.code === 'STARTING') {
-      log.error({ err: error, method: req.method, route: routeOf(req.route) }, 'a request failed')
+      log.error({ failure: loggable(error), method: req.method, route: routeOf(req.route) }, 'a request failed')
     }
     res.status(STATUS[known.code]).json(toEnvelope(known))
   }

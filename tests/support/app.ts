@@ -4,7 +4,6 @@ import { type Server, createServer } from 'node:http'
 import { tmpdir } from 'node:os'
 import { join } from 'node:path'
 import type { Express } from 'express'
-import type pg from 'pg'
 import { pino } from 'pino'
 import { type AppDeps, createApp } from '#server/app.ts'
 import { makeAuth } from '#server/auth/auth.ts'
@@ -20,7 +19,7 @@ export type TestApp = {
   /** Where it listens. */
   url: string
   db: Db
-  pool: pg.Pool
+  databaseUrl: string
   clock: Clock
   documents: FakeDocuments
   /** A verb's world as this person, or without anybody signed in. */
@@ -69,7 +68,7 @@ export async function startTestApp(
     app,
     url,
     db,
-    pool,
+    databaseUrl: database.url,
     clock,
     documents,
     ctxOf: (actor) => ({ db, actor: actor ?? null, now: clock.now, documents, publicUrl: TEST_ORIGIN }),

@@ -12,13 +12,14 @@ export function startMailWorker({ db, mailer, now, log, keepsText }: MailWorker)
   let isStopping = false
   let timer: NodeJS.Timeout | undefined
   let round = Promise.resolve()
-  const onFailure = (error: unknown, tries: number) => log.warn({ err: error, tries }, 'a letter was not taken')
+  // A mail server's words name the address; its code does not.
+  const onFailure = (error: unknown, tries: number) => log.warn({ code: codeOf(error), tries }, 'a letter was not taken')
 
   const work = async (): Promise<void> => {
     try {
       while (!isStopping && (await sendDue(db, mailer, { now, keepsText, onFailure }))) continue
     } catch (error) {
-      log.warn({ err: error }, 'the queue of letters cannot be read')
+      log.warn({ code: codeOf(error) }, 'the queue of letters cannot be read')
     }
     if (isStopping) return
     timer = setTimeout(() => {
@@ -33,4 +34,11 @@ export function startMailWorker({ db, mailer, now, log, keepsText }: MailWorker)
       await round
     },
   }
+}
+
+function codeOf(error: unknown): string {
+  if (!(error instanceof Error)) return 'unknown'
+  if ('responseCode' in error && typeof error.responseCode === 'number') return String(error.responseCode)
+  if ('code' in error && typeof error.code === 'string') return error.code
+  return error.cause === undefined ? error.name : codeOf(error.cause)
 }

@@ -23,7 +23,7 @@ export function readingOrder<T extends Placed>(items: readonly T[]): T[] {
  * Id of the area something hangs in: the smallest area that holds its middle; else the nearest one whose title stands
  * above it and whose line reaches over its middle, at most `reach` wall units up; else null.
  */
-export function areaOf(box: Box, areas: readonly Placed[], reach = 800): string | null {
+export function areaOf(box: Box, areas: readonly Placed[], reach = 1200): string | null {
   const middle = centreOf(box)
   let inside: Placed | null = null
   let above: Placed | null = null

@@ -1,0 +1,111 @@
+import { MoreHorizontal } from 'lucide-react'
+import { usePlan } from '#src/realtime/use-plan.ts'
+import { count } from '#src/lib/format.ts'
+import { useShoot } from '#src/realtime/shoot-realtime.tsx'
+import type { Undo } from '#src/realtime/use-undo.ts'
+import { IconButton } from '#src/ui/button.tsx'
+import { Menu } from '#src/ui/menu.tsx'
+import { ScreenBar } from '#src/ui/screen-bar.tsx'
+import { useIsPhone } from '#src/ui/use-media.ts'
+import { BoardPlanProvider } from '../board-plan.ts'
+import { useAddPictures } from '../use-add-pictures.ts'
+import { useClipboard } from '../use-clipboard.ts'
+import { useNewThings } from '../use-new-things.ts'
+import { useFirstView, useWallControl } from '../use-wall-control.ts'
+import { WallControlProvider, useWall } from '../wall-control.ts'
+import { type WallItems, useWallItems } from '../wall-item.ts'
+import { select } from '../wall-state.ts'
+import { EmptyBoard } from './empty-board.tsx'
+import { Inspector } from './inspector/inspector.tsx'
+import { PhoneBoard } from './phone/phone-board.tsx'
+import { PictureInputFields, usePictureInputs } from './picture-inputs.tsx'
+import { SearchBox } from './search-box.tsx'
+import { Strip } from './strip/strip.tsx'
+import { Wall } from './wall.tsx'
+import { ZoomBar } from './zoom-bar.tsx'
+
+/** The shared wall of references and the strip of shots. */
+export function BoardScreen() {
+  const shoot = useShoot()
+  const plan = usePlan()
+  const { control, mayWrite, undo } = useWallControl(plan)
+  const isPhone = useIsPhone()
+  const items = useWallItems()
+  const Board = isPhone ? PhoneBoard : WideBoard
+  return (
+    <WallControlProvider value={control}>
+      <BoardPlanProvider value={plan}>
+        <Board key={shoot.id} items={items} mayWrite={mayWrite} undo={undo} />
+      </BoardPlanProvider>
+    </WallControlProvider>
+  )
+}
+
+/** "14 frames, 6 tags" */
+function countWords(items: WallItems): string {
+  let frames = 0
+  let tags = 0
+  for (const entry of items.values()) {
+    if (entry.kind === 'frame') frames++
+    else if (entry.kind === 'tag') tags++
+  }
+  return `${count(frames, 'frame')}, ${count(tags, 'tag')}`
+}
+
+type BoardProps = { items: WallItems; mayWrite: boolean; undo: Undo }
+
+function WideBoard({ items, mayWrite, undo }: BoardProps) {
+  const control = useWall()
+  const shoot = useShoot()
+  const inputs = usePictureInputs()
+  const addPictures = useAddPictures()
+  const make = useNewThings(control)
+  useClipboard(control, shoot.id, addPictures)
+  useFirstView(control, shoot.id)
+  const openFiles = () => inputs.files.current?.click()
+  const more = (
+    <Menu
+      trigger={
+        <IconButton label="More for the wall" variant="plain">
+          <MoreHorizontal size={17} aria-hidden />
+        </IconButton>
+      }
+      items={[
+        { label: 'Mark an area', onSelect: () => make.area() },
+        { label: 'Hang a palette', onSelect: () => make.palette() },
+        'line',
+        { label: 'Select everything', hint: 'Ctrl A', onSelect: () => select(control.state, control.items().keys()) },
+      ]}
+    />
+  )
+  return (
+    <div className="flex h-full min-h-[560px] flex-col">
+      <ScreenBar
+        title="Board"
+        sub={countWords(items)}
+        actions={
+          mayWrite
+            ? [
+                { label: 'Write a note', onPress: () => make.note() },
+                { label: 'Hang a tag', onPress: () => make.tag() },
+                { label: 'Add pictures', variant: 'primary', onPress: openFiles },
+              ]
+            : []
+        }
+      >
+        <SearchBox items={items} />
+        {mayWrite && more}
+      </ScreenBar>
+      <PictureInputFields {...inputs} onAdd={addPictures} />
+      <div className="flex min-h-0 flex-1 border-y border-hair">
+        <div className="relative min-w-0 flex-1">
+          <Wall items={items} mayWrite={mayWrite} onDropFiles={(files, at) => void addPictures(files, { at })} />
+          {items.size === 0 && <EmptyBoard mayWrite={mayWrite} onAdd={openFiles} />}
+          <ZoomBar mayWrite={mayWrite} canUndo={undo.canUndo} canRedo={undo.canRedo} />
+        </div>
+        <Inspector items={items} mayWrite={mayWrite} />
+      </div>
+      <Strip mayWrite={mayWrite} />
+    </div>
+  )
+}

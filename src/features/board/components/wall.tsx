@@ -26,16 +26,16 @@ const HELP =
   'What is selected moves with the arrows at once; Escape lets go of it. F2 edits the words, Delete removes. Plus and minus zoom, 0 shows everything.'
 
 /** Keeps a layer at the view, without drawing anything again. */
-function useFollowsView(control: WallControl, layer: RefObject<HTMLElement | null>): void {
+function useFollowsView(control: WallControl, ref: RefObject<HTMLElement | null>): void {
   const { view } = control.state
   useLayoutEffect(() => {
     const apply = () => {
       const { x, y, zoom } = view.get()
-      if (layer.current) layer.current.style.transform = `scale(${zoom}) translate(${-x}px, ${-y}px)`
+      if (ref.current) ref.current.style.transform = `scale(${zoom}) translate(${-x}px, ${-y}px)`
     }
     apply()
     return view.subscribe(apply)
-  }, [view, layer])
+  }, [view, ref])
 }
 
 function useHands(control: WallControl, ref: RefObject<HTMLElement | null>): void {

@@ -9,6 +9,7 @@ import { mail } from '#server/db/schema/mail.ts'
 import { shootMember } from '#server/db/schema/shoots.ts'
 import { studioMember } from '#server/db/schema/studios.ts'
 import { invitePerson } from '#server/features/people/invite-person.ts'
+import { removePerson } from '#server/features/people/remove-person.ts'
 import { createShoot } from '#server/features/shoots/create-shoot.ts'
 import { createStudio } from '#server/features/studios/create-studio.ts'
 import type { TestApp } from '#tests/support/app.ts'
@@ -63,6 +64,8 @@ export async function makeWorld(app: TestApp): Promise<World> {
   await addToShoot(db, shootId, client, 'client')
   await addToShoot(db, shootId, crew, 'crew')
   await addToStudio(db, studioId, member, 'member')
+  await addToShoot(db, shootId, removed, 'stylist')
+  await removePerson(app.ctxOf(photographer), { shootId, userId: removed.userId })
   const people = await invitePerson(app.ctxOf(photographer), { shootId, email: invited.email, name: invited.name, role: 'stylist' })
   const id = people.invitations[0]?.id
   if (!id) throw new Error('an invitation is in the list')

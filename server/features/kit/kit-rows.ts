@@ -15,7 +15,7 @@ export async function loadKit(db: Db | Tx, studioId: StudioId): Promise<KitItem[
   const rows = await db.select().from(newest).where(sql`${newest.removedAt} is null`)
   return rows
     .map(({ id, version, input }) => kitItemSchema.parse({ ...input, id, version }))
-    .sort((a, b) => a.name.localeCompare(b.name, 'en') || (a.id < b.id ? -1 : 1))
+    .sort((a, b) => a.name.localeCompare(b.name, 'en', { numeric: true }) || (a.id < b.id ? -1 : 1))
 }
 
 export type NewestKitItem = { item: KitItem; isRemoved: boolean }

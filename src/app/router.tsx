@@ -40,6 +40,7 @@ export const router = createBrowserRouter([
                   { index: true, lazy: () => import('./routes/shoot-index.tsx') },
                   { path: 'brief', lazy: () => import('./routes/brief.tsx') },
                   { path: 'board', lazy: () => import('./routes/board.tsx') },
+                  { path: 'board', lazy: () => import('./routes/board.tsx') },
                   { path: 'sign-off', lazy: () => import('./routes/sign-off.tsx') },
                   { path: 'people', lazy: () => import('./routes/people.tsx') },
                 ],

@@ -11,7 +11,8 @@ export function useGoOn(): (to: string | null) => void {
   const queryClient = useQueryClient()
   const navigate = useNavigate()
   return (to) => {
-    queryClient.clear()
+    // An invitation that has just been used is not asked for again.
+    queryClient.removeQueries({ predicate: ({ queryKey }) => queryKey[0] !== 'invitations' })
     void navigate(safePath(to), { replace: true })
   }
 }

@@ -44,7 +44,7 @@ export type SpineProps = { head: ReactNode; foot: ReactNode; label: string; chil
 
 export function Spine({ head, foot, label, children }: SpineProps) {
   return (
-    <div className="on-night no-print flex min-h-0 flex-col bg-night pt-[18px] pb-3.5 text-bone">
+    <header className="on-night no-print flex min-h-0 flex-col bg-night pt-[18px] pb-3.5 text-bone">
       <NavLink to="/" className="flex items-center gap-[9px] px-[18px] pb-4 font-display text-xl font-semibold">
         <Mark />
         Sconce
@@ -54,7 +54,7 @@ export function Spine({ head, foot, label, children }: SpineProps) {
         {children}
       </nav>
       <div className="border-t border-night-3 px-[18px] pt-3">{foot}</div>
-    </div>
+    </header>
   )
 }
 

@@ -14,7 +14,7 @@ export function HereNow() {
   const people = [{ id: user.id, name: `${user.name} (you)`, initials: user.initials, colour: user.colour }, ...others.values()]
   return (
     <div className="flex items-center gap-1.5">
-      <Link to="/me" className="flex rounded-full" aria-label="You: name and signing out">
+      <Link to="/me" className="flex items-center rounded-full max-md:min-h-11" aria-label="You and this device">
         <Faces people={people.slice(0, SHOWN)} />
       </Link>
       <span className="ml-1 text-xs text-bone-soft">{people.length > SHOWN ? `+${people.length - SHOWN} · ${people.length} here` : people.length === 1 ? 'Only you here' : `${people.length} here now`}</span>

@@ -10,7 +10,7 @@ export function Component() {
         <Mark tone="paper" />
         <h1 className="text-2xl">Letters</h1>
         <span className="text-xs text-ink-soft">Kept on this machine, because no mail server is set</span>
-        <Link to="/" className="ml-auto py-2 text-sm font-semibold text-velvet underline underline-offset-2">
+        <Link to="/" className="ml-auto py-3 text-sm font-semibold text-velvet underline underline-offset-2">
           Go to your shoots
         </Link>
       </header>

@@ -9,7 +9,7 @@ import { signOutOfDevice } from '#src/realtime/sign-out.ts'
 import { useSession } from '../session.ts'
 
 export function Component() {
-  const { user } = useSession()
+  const { user, letters } = useSession()
   const queryClient = useQueryClient()
   const navigate = useNavigate()
   const signOut = async () => {
@@ -21,6 +21,7 @@ export function Component() {
   return (
     <MeScreen
       user={user}
+      letters={letters}
       unsent={unsentOnDevice(user.id)}
       onSignOut={signOut}
       onRenamed={() => void queryClient.invalidateQueries({ queryKey: studioQueries.session().queryKey })}

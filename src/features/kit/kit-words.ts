@@ -50,7 +50,8 @@ export type Reading = { label: string; value: string; stated: Stated | null }
 
 const plain = (label: string, value: string): Reading => ({ label, value, stated: null })
 const stated = (label: string, number: Stated, show: (value: number) => string): Reading => ({ label, value: show(number.value), stated: number })
-const digits = (value: number, most = 2) => new Intl.NumberFormat('en-GB', { maximumFractionDigits: most }).format(value)
+/** Thousands parted by a narrow space, so that no comma can be read as a decimal one. */
+const digits = (value: number, most = 2) => new Intl.NumberFormat('en-GB', { maximumFractionDigits: most }).format(value).replaceAll(',', '\u202f')
 const signed = (value: number) => `${value > 0 ? '+' : value < 0 ? '−' : ''}${digits(Math.abs(value), 0)}`
 
 /** Size of an emitting face: one diameter for a disc. */
@@ -67,7 +68,7 @@ export function readingsOf(body: KitBody): Reading[] {
       return [
         stated('Guide number', numbers.guideNumberM, (value) => `${digits(value, 1)} m`),
         plain('Power', `1/1 to 1/${numbers.minPowerDenominator}`),
-        stated('Colour', numbers.flashColourK, (value) => `${digits(value, 0).replace(',', ' ')} K`),
+        stated('Colour', numbers.flashColourK, (value) => `${digits(value, 0)} K`),
         stated('Full pops', numbers.fullPops, (value) => digits(value, 0)),
         stated('Recycles in', numbers.fullRecycleS, (value) => `${digits(value, 1)} s`),
         stated('Mass', numbers.massKg, (value) => `${digits(value)} kg`),

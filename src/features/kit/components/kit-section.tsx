@@ -93,7 +93,7 @@ function KitList({ items, ...rest }: KitSectionProps) {
       {items.map((item) => (
         <li key={item.id} className="px-3.5 py-2.5">
           <div className="flex items-start justify-between gap-2">
-            <div className="min-w-0 py-2">
+            <div className="min-w-0">
               <Name item={item} {...rest} />
               <span className="text-sm text-ink-soft"> × {item.quantity}</span>
             </div>
@@ -121,7 +121,7 @@ type RowProps = Omit<KitSectionProps, 'items' | 'kind' | 'onAdd'> & { item: KitI
 function Name({ item, mayChange, onEdit }: Pick<RowProps, 'item' | 'mayChange' | 'onEdit'>) {
   if (!mayChange) return <b className="font-semibold">{item.name}</b>
   return (
-    <button type="button" onClick={() => onEdit(item)} className="rounded-r text-left font-semibold underline decoration-hair underline-offset-3 hover:decoration-ink">
+    <button type="button" onClick={() => onEdit(item)} className="rounded-r text-left font-semibold max-md:min-h-11 underline decoration-hair underline-offset-3 hover:decoration-ink">
       {item.name}
     </button>
   )

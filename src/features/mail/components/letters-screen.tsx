@@ -22,7 +22,7 @@ export function LettersScreen() {
   }
   const open = data.letters.find((letter) => letter.id === openId) ?? first
   return (
-    <div className="grid items-start gap-4 md:grid-cols-[20rem_minmax(0,1fr)]">
+    <div className="grid grid-cols-[minmax(0,1fr)] items-start gap-4 md:grid-cols-[20rem_minmax(0,1fr)]">
       <ul aria-label="Letters" className="max-h-72 divide-y divide-hair-soft overflow-y-auto rounded-r border border-hair bg-paper md:max-h-[calc(100dvh-9rem)]">
         {data.letters.map((letter) => (
           <li key={letter.id}>

@@ -11,7 +11,7 @@ export function LetterSignIn({ token, onSignedIn, onAnotherWay }: LetterSignInPr
   return (
     <div className="flex flex-col gap-4">
       <FormError>{signIn.error ? signIn.error.message : null}</FormError>
-      <p>The letter has shown that the mailbox is yours.</p>
+      {!signIn.isError && <p>The letter has shown that the mailbox is yours.</p>}
       {signIn.isError ? (
         <Button variant="primary" size="large" onClick={onAnotherWay}>
           Ask for a new letter

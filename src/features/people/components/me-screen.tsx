@@ -20,13 +20,15 @@ export type MeScreenProps = {
   user: Session['user']
   /** Own edits that only this device holds. */
   unsent: number
+  /** Whether this machine keeps its letters itself. */
+  letters: boolean
   onSignOut: () => Promise<void>
   onRenamed: () => void
 }
 
 const CARD = 'rounded-r border border-hair bg-paper px-5 py-5'
 
-export function MeScreen({ user, unsent, onSignOut, onRenamed }: MeScreenProps) {
+export function MeScreen({ user, unsent, letters, onSignOut, onRenamed }: MeScreenProps) {
   const [isAsking, setIsAsking] = useState(false)
   const signOut = useMutation({ mutationFn: onSignOut })
   const elsewhere = useMutation({ mutationFn: account.signOutElsewhere, onSuccess: () => toast.say('Everybody else who was signed in as you is signed out.') })
@@ -55,6 +57,11 @@ export function MeScreen({ user, unsent, onSignOut, onRenamed }: MeScreenProps) 
             <Button busy={elsewhere.isPending} onClick={() => elsewhere.mutate()}>
               Sign out everywhere else
             </Button>
+            {letters && (
+              <Link to="/letters" className={buttonClass('quiet')}>
+                Letters of this machine
+              </Link>
+            )}
           </div>
         </section>
         <section className={CARD}>

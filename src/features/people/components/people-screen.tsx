@@ -42,7 +42,7 @@ export function PeopleScreen({ onLeft }: PeopleScreenProps) {
                 person={person}
                 mayChange={mayChange}
                 onRole={(next) => change.mutate({ kind: 'role', userId: person.userId, role: next })}
-                onRemove={() => (person.you ? setIsLeaving(true) : setRemoving(person))}
+                onRemove={() => setRemoving(person)}
               />
             ))}
           </ul>

@@ -40,6 +40,7 @@ export function MinutesForm({ studioId, mayChange }: MinutesFormProps) {
   const set = useSetMinutes(studioId)
   return (
     <div className="grid max-w-5xl items-start gap-6 lg:grid-cols-2">
+      <p className="max-w-3xl text-sm text-ink-soft lg:col-span-2">How long your people take. Every changeover and running order is counted with these minutes; until you change one it is an assumption.</p>
       {GROUPS.map((group) => (
         <section key={group.title} className="rounded-r border border-hair bg-paper">
           <h2 className="px-4 pt-3 pb-2 text-lg">{group.title}</h2>

@@ -84,10 +84,11 @@ export function useWallControl(plan: Plan): { control: WallControl; mayWrite: bo
   return { control, mayWrite, undo }
 }
 
-const LEAST_FIRST_ZOOM = 0.75
+/** Captions can be read at life size; a phone shows a little more at once. */
+const FIRST_ZOOM = { wide: 1, phone: 0.6 }
 const MARGIN_PX = { left: 24, top: 14 }
 
-/** Begins where one was in this tab, else at the upper left of what hangs there, as near to all of it as can still be read. */
+/** Begins where one was in this tab, else at the upper left of what hangs there, where captions can be read. */
 export function useFirstView({ state, items }: WallControl, shootId: string): void {
   useLayoutEffect(() => {
     const key = `wall:${shootId}`
@@ -96,7 +97,7 @@ export function useFirstView({ state, items }: WallControl, shootId: string): vo
     if (kept) setView(state, kept)
     else if (bounds) {
       const { widthPx } = state.viewport.get()
-      const zoom = Math.min(1, Math.max(LEAST_FIRST_ZOOM, (widthPx - 2 * MARGIN_PX.left) / bounds[2]))
+      const zoom = widthPx < 600 ? FIRST_ZOOM.phone : FIRST_ZOOM.wide
       setView(state, { x: bounds[0] - MARGIN_PX.left / zoom, y: bounds[1] - MARGIN_PX.top / zoom, zoom })
     }
     return () => sessionStorage.setItem(key, JSON.stringify(state.view.get()))

@@ -1,5 +1,5 @@
 import type { Box } from '#shared/domain/board/schema.ts'
-import type { Plan, PlannedLook } from '#shared/domain/plan/read-plan.ts'
+import type { PlannedLook } from '#shared/domain/plan/read-plan.ts'
 import type { WallItem, WallKind } from './wall-item.ts'
 
 export const KIND_WORDS: Readonly<Record<WallKind, string>> = {
@@ -15,14 +15,10 @@ export function wearerOf({ look, sitter }: PlannedLook): string {
   return sitter?.character || sitter?.name || look.name
 }
 
-export function looksByName(plan: Plan): PlannedLook[] {
-  return [...plan.looks.values()]
-}
-
-/** "The Astronomer · Night coat" */
+/** "Night coat · The Astronomer" */
 export function lookLabel(planned: PlannedLook): string {
   const wearer = wearerOf(planned)
-  return wearer === planned.look.name ? wearer : `${wearer} · ${planned.look.name}`
+  return wearer === planned.look.name ? wearer : `${planned.look.name} · ${wearer}`
 }
 
 function firstWords(text: string): string {

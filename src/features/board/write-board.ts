@@ -1,6 +1,6 @@
 import type * as Y from 'yjs'
 import type { z } from 'zod'
-import { tidyBox } from '#shared/domain/board/geometry.ts'
+import { overlaps, tidyBox } from '#shared/domain/board/geometry.ts'
 import type { Box, Made, Palette } from '#shared/domain/board/schema.ts'
 import { type Stacked, toBack, toFront, topOf } from '#shared/domain/board/stack.ts'
 import type { AreaId, FrameId, NoteId, PaletteId, TagId } from '#shared/ids.ts'
@@ -8,10 +8,13 @@ import { areaIdSchema, frameIdSchema, noteIdSchema, paletteIdSchema, tagIdSchema
 import { LOCAL_ORIGIN, patchItem, putItems, removeItems } from '#shared/realtime/collection.ts'
 import { areas, frames, notes, palettes, tags } from '#shared/realtime/documents.ts'
 import { newId } from '#src/lib/new-id.ts'
-import { COLLECTION_OF, type WallItem, type WallKind, readWallItems } from './wall-item.ts'
+import { COLLECTION_OF, type WallItem, type WallItems, type WallKind, readWallItems } from './wall-item.ts'
 
-/** New boxes of things on the wall, all in one transaction. Returns whether anything was written. */
-export function writeBoxes(doc: Y.Doc, boxes: ReadonlyMap<string, Box>): boolean {
+/**
+ * New boxes of things on the wall, all in one transaction. With `raise`, what then lies over something else comes to
+ * the front. Returns whether anything was written.
+ */
+export function writeBoxes(doc: Y.Doc, boxes: ReadonlyMap<string, Box>, raise = false): boolean {
   const items = readWallItems(doc)
   let written = false
   doc.transact(() => {
@@ -19,8 +22,16 @@ export function writeBoxes(doc: Y.Doc, boxes: ReadonlyMap<string, Box>): boolean
       const entry = items.get(id)
       if (entry && patchItem(doc, COLLECTION_OF[entry.kind], id, { box: tidyBox(box) })) written = true
     }
+    if (raise && written && liesOverOthers(items, boxes)) restack(doc, new Set(boxes.keys()), 'front')
   }, LOCAL_ORIGIN)
   return written
+}
+
+function liesOverOthers(items: WallItems, boxes: ReadonlyMap<string, Box>): boolean {
+  const moved = [...boxes].flatMap(([id, box]) => (items.get(id)?.kind === 'area' ? [] : [box]))
+  return [...items.values()].some(
+    (entry) => entry.kind !== 'area' && !boxes.has(entry.id) && moved.some((box) => overlaps(box, entry.box)),
+  )
 }
 
 /** Marks things as removed, all in one transaction. */

@@ -29,7 +29,7 @@ type WallItemViewProps = { entry: WallItem; name: string; mayWrite: boolean }
 
 const SHELL =
   'absolute top-0 left-0 cursor-grab rounded-sm outline-offset-2 select-none transition-transform duration-200 ease-out ' +
-  'data-held:cursor-grabbing data-held:transition-none motion-reduce:transition-none ' +
+  'data-held:z-[2000000]! data-held:cursor-grabbing data-held:transition-none motion-reduce:transition-none ' +
   'focus-visible:[outline:calc(2px/var(--detail))_dashed_var(--color-draft)] ' +
   'data-marked:[outline:calc(2px/var(--detail))_solid_var(--color-draft)] ' +
   'data-selected:[outline:calc(2.5px/var(--detail))_solid_var(--color-draft)] ' +

@@ -19,7 +19,7 @@ export function ZoomBar({ mayWrite, canUndo, canRedo }: ZoomBarProps) {
     setView(state, { x: middle.x - widthPx / 2, y: middle.y - heightPx / 2, zoom: 1 })
   }
   return (
-    <div className="absolute bottom-3 left-3 flex gap-2">
+    <div className="absolute bottom-3 left-3 flex items-start gap-2 max-md:flex-col-reverse">
       <div role="group" aria-label="Zoom" className="flex items-center rounded-r border border-hair bg-paper">
         <IconButton label="Zoom out" className="!size-8 max-md:!size-11" onClick={() => zoomBy(control, 0.8)}>
           <Minus size={15} aria-hidden />

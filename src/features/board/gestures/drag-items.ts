@@ -49,12 +49,12 @@ export function presentDrop(control: WallControl): void {
   control.setPresence({ dragging: undefined })
 }
 
-/** Writes what is held, once, as one undo step, and lets go. */
-export function dropHeld(control: WallControl): boolean {
+/** Writes what is held (to the front with `raise`, when it covers something), once, as one undo step, and lets go. */
+export function dropHeld(control: WallControl, raise = false): boolean {
   const { state } = control
   const held = state.own.all()
   control.stopUndo()
-  const written = held.size > 0 && control.mayWrite() && writeBoxes(control.doc, held)
+  const written = held.size > 0 && control.mayWrite() && writeBoxes(control.doc, held, raise)
   control.stopUndo()
   letGo(control)
   return written
@@ -95,7 +95,7 @@ export function startDrag(control: WallControl, ids: Iterable<string>): Drag {
     },
     drop() {
       const held = boundsOf(state.own.all().values())
-      if (dropHeld(control) && bounds && held) {
+      if (dropHeld(control, true) && bounds && held) {
         const entries = [...start.keys()].flatMap((id) => items.get(id) ?? [])
         announce(control, `${control.nameOf(entries)} moved to ${wayWords(bounds, held)}`)
       }

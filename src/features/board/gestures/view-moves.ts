@@ -19,7 +19,7 @@ export function fitAll({ state, items }: WallControl): void {
 /** Brings a box into the middle, at a zoom at which it can be read. */
 export function goTo({ state }: WallControl, box: Box): void {
   const view = fitBox(box, state.viewport.get(), 80)
-  const zoom = Math.min(view.zoom, Math.max(0.6, state.view.get().zoom))
+  const zoom = Math.min(view.zoom, Math.max(1, state.view.get().zoom))
   const { widthPx, heightPx } = state.viewport.get()
   setView(state, {
     x: box[0] + box[2] / 2 - widthPx / zoom / 2,

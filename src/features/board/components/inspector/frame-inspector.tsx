@@ -133,7 +133,7 @@ export function FrameInspector({ frame, mayWrite }: { frame: Frame; mayWrite: bo
           value={frame.exposure}
           maxLength={120}
           mayWrite={mayWrite}
-          placeholder="f/5.6 · 1/160"
+          placeholder="Not known"
           onWrite={(exposure) => write({ exposure })}
         />
         {frame.made && (

@@ -91,7 +91,9 @@ export function Inspector({ items, mayWrite }: InspectorProps) {
         <h2 className="font-sans text-base font-semibold">{title}</h2>
         {close}
       </div>
-      <InspectorBody items={items} mayWrite={mayWrite} />
+      <div>
+        <InspectorBody items={items} mayWrite={mayWrite} />
+      </div>
     </aside>
   )
 }

@@ -4,7 +4,7 @@ import { useDraft } from '../../use-draft.ts'
 
 /** A control that looks like what it says until the hand is on it. */
 export const QUIET =
-  'rounded-r border border-transparent bg-transparent px-1.5 py-[3px] text-[0.78125rem] hover:border-edge focus:border-edge max-md:min-h-11 max-md:border-edge max-md:bg-white'
+  'rounded-r border border-transparent bg-transparent px-1.5 py-[3px] text-[0.78125rem] hover:border-edge focus:border-edge max-md:min-h-11 max-md:border-edge max-md:bg-white max-md:py-2.5 max-md:text-[1rem]'
 
 /** A label at the left and its control or words at the right. */
 export function Row({ label, children, block = false }: { label: string; children: ReactNode; block?: boolean }) {
@@ -55,7 +55,11 @@ export function TextRow({
         placeholder={placeholder}
         onChange={(event) => draft.change(event.target.value)}
         onBlur={draft.leave}
-        className={cn(QUIET, 'block w-full min-w-0 resize-none field-sizing-content')}
+        className={cn(
+          QUIET,
+          'block w-full min-w-0 resize-none field-sizing-content',
+          block && 'mt-0.5 border-edge bg-white',
+        )}
       />
     </Row>
   )

@@ -49,6 +49,28 @@ export function examine(doc: Y.Doc, update: Uint8Array): Verdict {
   return { kind: 'fits', structs: decoded.structs.length }
 }
 
+/**
+ * Whether a step 2 holds nothing that the document lacks. It always lists every deletion its sender knows of, so a
+ * reader's answer is seldom empty though it brings nothing. Bytes that do not decode bring something.
+ */
+export function bringsNothing(doc: Y.Doc, update: Uint8Array): boolean {
+  let decoded: ReturnType<typeof Y.decodeUpdate>
+  try {
+    decoded = Y.decodeUpdate(update)
+  } catch {
+    return false
+  }
+  if (decoded.structs.length > 0) return false
+  const ours = Y.createDeleteSetFromStructStore(doc.store)
+  for (const [client, ranges] of decoded.ds.clients) {
+    const known = ours.clients.get(client) ?? []
+    const isKnown = ({ clock, len }: { clock: number; len: number }) =>
+      known.some((range) => range.clock <= clock && clock + len <= range.clock + range.len)
+    if (!ranges.every(isKnown)) return false
+  }
+  return true
+}
+
 /** Whether something waits in the document for what it lacks. `examine` lets nothing of the kind through. */
 export function hasPending(doc: Y.Doc): boolean {
   return doc.store.pendingStructs !== null || doc.store.pendingDs !== null

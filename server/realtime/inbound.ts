@@ -2,7 +2,7 @@ import type pg from 'pg'
 import * as Y from 'yjs'
 import { CLOSE, type Refusal } from '#shared/realtime/protocol.ts'
 import type { Connection } from './connection.ts'
-import { examine, withoutGaps } from './guard.ts'
+import { bringsNothing, examine, withoutGaps } from './guard.ts'
 import { quarantine } from './quarantine.ts'
 import type { Room } from './room.ts'
 import type { Rooms } from './rooms.ts'
@@ -84,8 +84,11 @@ export function createReceiver(context: Inbound, connection: Connection, room: R
       if (kind === 'step 2') connection.unhold()
       return store(() => undefined)
     }
-    // Before anything is decoded: a reader's bytes reach no parser.
-    if (!connection.mayWrite) return connection.refuse(n, 'read-only')
+    if (!connection.mayWrite) {
+      // The first byte counts the parts with content: anything but a list of deletions reaches no parser.
+      if (kind === 'step 2' && update[0] === 0 && bringsNothing(room.doc, update)) return store(() => undefined)
+      return connection.refuse(n, 'read-only')
+    }
     if (context.frozen !== null) return connection.refuse(n, 'frozen')
     if (kind === 'update' && update.length > settings.maxUpdateBytes) return putOff(n, 'too-large')
     const verdict = examine(room.doc, update)

@@ -157,6 +157,29 @@ describe('a reader', () => {
   })
 })
 
+describe('a reader of a document in which things were deleted', () => {
+  it('is acknowledged for the list of deletions in its step 2, and refused for one of its own', async () => {
+    const writer = await open(shoot.people.photographer, 'plan').ready()
+    writer.items.set('moved', 1)
+    writer.items.set('moved', 2)
+    await until(() => writer.saved === writer.sent)
+    const reader = await open(shoot.people.client, 'plan').ready()
+    await until(() => reader.saved === 1)
+    expect(reader.refusals).toEqual([])
+    // Coming back with a copy, as from the browser's cache.
+    const again = await new TestClient({ url: world.url, shootId: shoot.shootId, kind: 'plan', sessionId: shoot.people.client.sessionId, doc: reader.doc }).ready()
+    await until(() => again.saved === 1)
+    expect(again.refusals).toEqual([])
+    const own = new Y.Doc()
+    Y.applyUpdate(own, Y.encodeStateAsUpdate(again.doc))
+    own.getMap('items').delete('moved')
+    again.send(syncFrame(1, Y.encodeStateAsUpdate(own, Y.encodeStateVector(own))))
+    await until(() => again.refusals.length === 1)
+    expect(writer.items.get('moved')).toBe(2)
+    for (const client of [writer, reader, again]) client.close()
+  })
+})
+
 describe('changed rights', () => {
   const WITHIN_MS = 2_000
 

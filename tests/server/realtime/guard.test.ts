@@ -1,6 +1,6 @@
 import { describe, expect, it } from 'vitest'
 import * as Y from 'yjs'
-import { dropPending, examine, hasPending, withoutGaps } from '#server/realtime/guard.ts'
+import { bringsNothing, dropPending, examine, hasPending, withoutGaps } from '#server/realtime/guard.ts'
 
 /** A small seeded generator (mulberry32), so that a run can be repeated. */
 function randomFrom(seed: number): () => number {
@@ -188,5 +188,27 @@ describe('dropPending', () => {
     expect(hasPending(doc)).toBe(true)
     dropPending(doc)
     expect(Y.encodeStateAsUpdate(doc)).toEqual(Uint8Array.of(0, 0))
+  })
+})
+
+describe('bringsNothing', () => {
+  it('is true for what the document has already, deletions included', () => {
+    const doc = healthy()
+    doc.getMap('items').set('i1', 2)
+    const copy = docOf(12, Y.encodeStateAsUpdate(doc))
+    const answer = Y.encodeStateAsUpdate(copy, Y.encodeStateVector(doc))
+    expect(answer.length).toBeGreaterThan(2)
+    expect(bringsNothing(doc, answer)).toBe(true)
+  })
+
+  it('is false for a deletion of its own, for content and for rubbish', () => {
+    const doc = healthy()
+    const deletes = docOf(13, Y.encodeStateAsUpdate(doc))
+    deletes.getMap('items').delete('i1')
+    expect(bringsNothing(doc, Y.encodeStateAsUpdate(deletes, Y.encodeStateVector(doc)))).toBe(false)
+    const adds = docOf(14, Y.encodeStateAsUpdate(doc))
+    adds.getMap('items').set('mine', 1)
+    expect(bringsNothing(doc, Y.encodeStateAsUpdate(adds, Y.encodeStateVector(doc)))).toBe(false)
+    expect(bringsNothing(doc, Uint8Array.of(0, 255, 255))).toBe(false)
   })
 })

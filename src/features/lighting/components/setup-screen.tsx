@@ -1,0 +1,200 @@
+import { type KeyboardEvent, useMemo, useState } from 'react'
+import { Link } from 'react-router-dom'
+import { cautionsOf } from '#shared/domain/lighting/cautions.ts'
+import { frameSidesMm } from '#shared/domain/lighting/frame.ts'
+import { readSetup } from '#shared/domain/lighting/readings.ts'
+import { purposeWord } from '#shared/domain/lighting/words.ts'
+import type { Plan, WholeSetup } from '#shared/domain/plan/read-plan.ts'
+import { sitters as sittersOf } from '#shared/realtime/documents.ts'
+import { useMayWrite, useShoot } from '#src/realtime/shoot-realtime.tsx'
+import { useItems } from '#src/realtime/use-items.ts'
+import { usePlan } from '#src/realtime/use-plan.ts'
+import { Button, buttonClass } from '#src/ui/button.tsx'
+import { Empty } from '#src/ui/empty.tsx'
+import { ScreenBar } from '#src/ui/screen-bar.tsx'
+import { Sheet } from '#src/ui/sheet.tsx'
+import { useIsPhone } from '#src/ui/use-media.ts'
+import { type Part, partKey, partName, withMoves } from '../parts.ts'
+import { setupUse, widestOf } from '../setup-use.ts'
+import { useKit } from '../use-kit.ts'
+import { useMoving } from '../use-moving.ts'
+import { usePeerMoves } from '../use-peer-moves.ts'
+import { useSetupWriter } from '../use-setup-writer.ts'
+import { AddLight } from './add-light.tsx'
+import { PlanDrawing } from './plan/plan-drawing.tsx'
+import { SideDrawing } from './plan/side-drawing.tsx'
+import { Overview } from './readings/overview.tsx'
+import { SetupEditor, isPartOf } from './setup-editor.tsx'
+
+/** One lighting setup: drawn to scale, with its numbers beside. */
+export function SetupScreen({ setupId }: { setupId: string }) {
+  const plan = usePlan()
+  const shoot = useShoot()
+  const whole = plan.setups.get(setupId)
+  if (!whole) {
+    return (
+      <Empty
+        title="This setup is not here any more"
+        action={
+          <Link to={`/shoots/${shoot.id}/lighting`} className={buttonClass('plain')}>
+            All setups
+          </Link>
+        }
+      >
+        Somebody removed it, or the address is wrong. The other setups are as they were.
+      </Empty>
+    )
+  }
+  return <Setup key={setupId} plan={plan} whole={whole} />
+}
+
+function Setup({ plan, whole }: { plan: Plan; whole: WholeSetup }) {
+  const isPhone = useIsPhone()
+  const mayWrite = useMayWrite('lighting')
+  const kit = useKit()
+  const writer = useSetupWriter(whole)
+  const sitterItems = useItems('looks', sittersOf)
+  const [chosen, setChosen] = useState<string | null>(null)
+  const [isSheetOpen, setIsSheetOpen] = useState(false)
+  const [isAdding, setIsAdding] = useState(false)
+  const use = useMemo(() => setupUse(plan, whole.setup.id), [plan, whole.setup.id])
+
+  const sitters = [...sitterItems.values()].map((sitter) => ({
+    id: sitter.id,
+    label: sitter.character === '' ? sitter.name : `${sitter.name}, ${sitter.character}`,
+  }))
+  const nameOf = (part: Part) => {
+    const sitter =
+      part.kind === 'place' && part.place.sitterId !== null ? sitterItems.get(part.place.sitterId) : undefined
+    return partName(part, sitter?.name)
+  }
+  const chosenKey = chosen !== null && isPartOf(whole, chosen) ? chosen : null
+
+  const moving = useMoving({
+    whole,
+    mayWrite,
+    nameOf,
+    onChoose: (part) => setChosen(partKey(part)),
+    onDrop: writer.drop,
+  })
+  const peers = usePeerMoves(whole)
+  const ownMoves = useMemo(() => new Map(moving.held ? [[moving.held.key, moving.held.at]] : []), [moving.held])
+  const shown = useMemo(() => withMoves(withMoves(whole, peers.moves), ownMoves), [whole, peers.moves, ownMoves])
+  const reading = useMemo(() => readSetup(shown), [shown])
+  const cautions = useMemo(
+    () => cautionsOf(shown, { orientations: use.orientations, frames: use.frames }, reading),
+    [shown, use, reading],
+  )
+  const orientation = widestOf(use.orientations)
+  const drawing = { whole: shown, written: whole, chosenKey, moving, mayWrite, peers: peers.holds, nameOf }
+
+  function handleKeyDown(event: KeyboardEvent) {
+    if (!(event.ctrlKey || event.metaKey) || event.key.toLowerCase() !== 'z' || isTyping(event.target)) return
+    event.preventDefault()
+    if (event.shiftKey) writer.undo.redo()
+    else writer.undo.undo()
+  }
+  function open(key: string) {
+    setChosen(key)
+    if (isPhone) setIsSheetOpen(true)
+  }
+
+  const overview = (
+    <Overview
+      whole={shown}
+      reading={reading}
+      cautions={cautions}
+      writer={writer}
+      mayWrite={mayWrite}
+      chosenKey={chosenKey}
+      nameOfPlace={(id) => {
+        const place = whole.places.find((candidate) => candidate.id === id)
+        return place ? nameOf({ kind: 'place', place }) : 'Sitter'
+      }}
+      onChoose={open}
+    />
+  )
+  const editor = chosenKey !== null && (
+    <SetupEditor
+      chosenKey={chosenKey}
+      whole={shown}
+      reading={reading}
+      kit={kit}
+      writer={writer}
+      sitters={sitters}
+      mayWrite={mayWrite}
+      withBack={!isPhone}
+      onChoose={(key) => {
+        setChosen(key)
+        if (key === null) setIsSheetOpen(false)
+      }}
+    />
+  )
+  const chosenLight = whole.lights.find((light) => chosenKey === light.id || chosenKey === `${light.id}:aim`)
+  const actions = mayWrite
+    ? [
+        { label: 'Undo', variant: 'quiet' as const, disabled: !writer.undo.canUndo, onPress: writer.undo.undo },
+        { label: 'Redo', variant: 'quiet' as const, disabled: !writer.undo.canRedo, onPress: writer.undo.redo },
+        { label: 'Add a light', variant: 'primary' as const, onPress: () => setIsAdding(true) },
+      ]
+    : []
+
+  return (
+    <div className="flex min-h-full flex-col md:h-full" onKeyDown={handleKeyDown}>
+      <ScreenBar
+        title={whole.setup.name}
+        sub={mayWrite ? use.words : `${use.words} · to read only`}
+        actions={actions}
+      />
+      <div className="grid min-h-0 flex-1 md:grid-cols-[minmax(0,1fr)_clamp(20rem,28%,25rem)]">
+        <div className="flex min-w-0 flex-col gap-3 p-2.5 md:min-h-0 md:py-0 md:pr-5 md:pb-3.5 md:pl-6">
+          <div className="h-[min(52dvh,26rem)] md:h-auto md:min-h-0 md:flex-1">
+            <PlanDrawing
+              {...drawing}
+              tanAcross={frameSidesMm(orientation).widthMm / (2 * whole.setup.camera.focalMm)}
+              onChooseNothing={() => setChosen(null)}
+            />
+          </div>
+          {isPhone && chosenKey !== null && (
+            <div className="flex items-center gap-3 rounded-r border border-hair bg-paper py-1.5 pr-1.5 pl-3.5 text-base">
+              <span className="min-w-0 flex-1 truncate font-semibold">
+                {chosenLight ? purposeWord(chosenLight.purpose) : 'Chosen'}
+              </span>
+              <Button onClick={() => setIsSheetOpen(true)}>{mayWrite ? 'Change' : 'Look at it'}</Button>
+            </div>
+          )}
+          <div className="h-40 flex-none md:h-[clamp(8rem,24%,14rem)]">
+            <SideDrawing {...drawing} reading={reading} orientation={orientation} />
+          </div>
+        </div>
+        <aside
+          aria-label="Numbers of the setup"
+          className="bg-paper px-[18px] py-4 md:min-h-0 md:overflow-y-auto md:border-l md:border-hair md:px-5 md:py-3.5"
+        >
+          {isPhone || editor === false ? overview : editor}
+        </aside>
+      </div>
+      {isPhone && (
+        <Sheet open={isSheetOpen && chosenKey !== null} onOpenChange={setIsSheetOpen} title="Change">
+          {editor}
+        </Sheet>
+      )}
+      <AddLight
+        open={isAdding}
+        onOpenChange={setIsAdding}
+        lights={whole.lights}
+        kit={kit}
+        onAdd={(light) => setChosen(writer.addLight(light))}
+      />
+      <p role="status" aria-live="assertive" className="sr-only">
+        {moving.said}
+      </p>
+    </div>
+  )
+}
+
+function isTyping(target: EventTarget): boolean {
+  return (
+    target instanceof HTMLInputElement || target instanceof HTMLTextAreaElement || target instanceof HTMLSelectElement
+  )
+}

@@ -1,0 +1,157 @@
+import { lightIdSchema, placeIdSchema, propIdSchema, setupIdSchema, type LightId, type SetupId } from '#shared/ids.ts'
+import type { WholeSetup } from '#shared/domain/plan/read-plan.ts'
+import { facePoint } from '#shared/domain/lighting/geometry.ts'
+import {
+  type Light,
+  type LightModifier,
+  type LightPurpose,
+  type LightSupport,
+  type LightUnit,
+  type Point,
+  type Prop,
+  type PROP_KINDS,
+  type Setup,
+  type SitterPlace,
+} from '#shared/domain/lighting/schema.ts'
+import { fNumberOfThirds } from '#shared/domain/lighting/stops.ts'
+import { appendKey } from '#shared/realtime/order-keys.ts'
+import { newId } from '#src/lib/new-id.ts'
+
+export type NewLight = {
+  purpose: LightPurpose
+  unit: LightUnit
+  modifier: LightModifier | null
+  support: LightSupport | null
+}
+
+/** Where a light of this kind is usually begun, from the sitter's eyes; and what it looks at. */
+function start(purpose: LightPurpose, face: Point, wallM: number): { at: Point; aim: Point } {
+  const [x, y, z] = face
+  const from = (dx: number, height: number, dz: number): Point => [x + dx, Math.max(0.2, height), z + dz]
+  switch (purpose) {
+    case 'main':
+      // About four feet off, two feet above the eyes, 45° to the side: the start that manuals give.
+      return { at: from(-1, y + 0.55, 1), aim: face }
+    case 'fill':
+      return { at: from(1.1, y + 0.2, 1.8), aim: face }
+    case 'background': {
+      const depth = wallM - z
+      return { at: from(1.1, 0.7, depth * 0.5), aim: [x, y * 0.9, wallM] }
+    }
+    case 'rim':
+      return { at: from(1.2, y + 0.4, Math.max(-1.2, (wallM - z) * 0.7)), aim: face }
+    case 'accent':
+      return { at: from(-1.3, y, Math.max(-0.8, (wallM - z) * 0.6)), aim: face }
+  }
+}
+
+const round = (point: Point): Point => [
+  Math.round(point[0] * 20) / 20,
+  Math.round(point[1] * 20) / 20,
+  Math.round(point[2] * 20) / 20,
+]
+
+/** First letter no light of the setup uses. */
+function freeGroup(lights: readonly Light[]): string | null {
+  const taken = new Set(lights.map((light) => light.group))
+  return [...'ABCDEFGH'].find((letter) => !taken.has(letter)) ?? null
+}
+
+/** A light of this make at the usual place for its purpose, behind the others in the list. */
+export function newLight(whole: WholeSetup, input: NewLight, random: () => number): Light {
+  const { at, aim } = start(input.purpose, facePoint(whole), whole.setup.background.zM)
+  return {
+    ...input,
+    id: lightIdSchema.parse(newId()),
+    setupId: whole.setup.id,
+    group: freeGroup(whole.lights),
+    gels: [],
+    power: Math.max(1 / 16, 1 / input.unit.numbers.minPowerDenominator),
+    at: round(at),
+    aim: round(aim),
+    zoomMm: input.unit.numbers.zoom.length > 0 ? (input.unit.numbers.zoom.at(-1)?.focalMm ?? null) : null,
+    note: '',
+    rank: appendKey(
+      whole.lights.map((light) => light.rank),
+      random,
+    ),
+  }
+}
+
+/** A copy of a light half a metre beside it; undefined ids copy nothing. */
+export function duplicateLight(whole: WholeSetup, id: LightId, random: () => number): Light | null {
+  const light = whole.lights.find((candidate) => candidate.id === id)
+  if (!light) return null
+  return {
+    ...light,
+    id: lightIdSchema.parse(newId()),
+    group: freeGroup(whole.lights) ?? light.group,
+    at: [light.at[0] + 0.5, light.at[1], light.at[2]],
+    rank: appendKey(
+      whole.lights.map((other) => other.rank),
+      random,
+    ),
+  }
+}
+
+const PROPS = {
+  panel: { name: 'White panel', widthM: 1, heightM: 1.5, colour: '#ffffff' },
+  flag: { name: 'Black flag', widthM: 1, heightM: 1.5, colour: '#1f1c1a' },
+  prop: { name: 'Table', widthM: 0.8, heightM: 0.75, colour: '#8e6a22' },
+} as const
+
+export function newProp(whole: WholeSetup, kind: (typeof PROP_KINDS)[number]): Prop {
+  const [x, , z] = facePoint(whole)
+  const { name, widthM, heightM, colour } = PROPS[kind]
+  const same = whole.props.filter((prop) => prop.kind === kind).length
+  return {
+    id: propIdSchema.parse(newId()),
+    setupId: whole.setup.id,
+    kind,
+    name: same === 0 ? name : `${name} ${same + 1}`,
+    at: round([x + (kind === 'prop' ? 0.6 : 1.1), heightM / 2, z + (kind === 'prop' ? -0.2 : 0.7) + same * 0.3]),
+    turnDeg: kind === 'prop' ? 0 : -60,
+    widthM,
+    heightM,
+    colour,
+  }
+}
+
+/** A setup with a camera, one sitter and a wall, and no light yet. */
+export function newSetup(
+  name: string,
+  ranks: readonly string[],
+  random: () => number,
+): { setup: Setup; place: SitterPlace } {
+  const id = setupIdSchema.parse(newId())
+  return {
+    setup: {
+      id,
+      name,
+      camera: {
+        at: [0, 1.5, 2.8],
+        focalMm: 85,
+        fNumber: fNumberOfThirds(15),
+        iso: 100,
+        shutterS: 1 / 160,
+        whiteBalanceK: 5500,
+      },
+      background: { zM: -2.5, widthM: 5, heightM: 3, colour: '#8d8a85', what: '' },
+      ambientLux: null,
+      note: '',
+      rank: appendKey(ranks, random),
+    },
+    place: { id: placeIdSchema.parse(newId()), setupId: id, sitterId: null, at: [0, 0], eyeHeightM: 1.55 },
+  }
+}
+
+/** Everything of a setup with new ids under a new name: a variation. */
+export function copyOf(whole: WholeSetup, name: string, ranks: readonly string[], random: () => number): WholeSetup {
+  const setupId: SetupId = setupIdSchema.parse(newId())
+  return {
+    setup: { ...whole.setup, id: setupId, name, rank: appendKey(ranks, random) },
+    lights: whole.lights.map((light) => ({ ...light, id: lightIdSchema.parse(newId()), setupId })),
+    places: whole.places.map((place) => ({ ...place, id: placeIdSchema.parse(newId()), setupId })),
+    props: whole.props.map((prop) => ({ ...prop, id: propIdSchema.parse(newId()), setupId })),
+  }
+}

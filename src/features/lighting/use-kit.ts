@@ -1,0 +1,51 @@
+import { useQuery } from '@tanstack/react-query'
+import { useMemo } from 'react'
+import type { KitItem } from '#shared/api/kit.ts'
+import type { LightGel, LightModifier, LightSupport, LightUnit } from '#shared/domain/lighting/schema.ts'
+import { useShoot } from '#src/realtime/shoot-realtime.tsx'
+import { lightingQueries } from './queries.ts'
+
+export type Kit = {
+  units: LightUnit[]
+  modifiers: LightModifier[]
+  gels: LightGel[]
+  supports: LightSupport[]
+  /** Newest version in the kit room by id; unknown ids are no longer there. */
+  versions: ReadonlyMap<string, number>
+  state: 'there' | 'coming' | 'not there'
+}
+
+function sortKit(kit: readonly KitItem[]): Omit<Kit, 'state'> {
+  const units: LightUnit[] = []
+  const modifiers: LightModifier[] = []
+  const gels: LightGel[] = []
+  const supports: LightSupport[] = []
+  for (const { id: kitId, version, name, body } of kit) {
+    const own = { kitId, version, name }
+    switch (body.kind) {
+      case 'unit':
+        units.push({ ...own, numbers: body.numbers })
+        break
+      case 'modifier':
+        modifiers.push({ ...own, numbers: body.numbers })
+        break
+      case 'gel':
+        gels.push({ ...own, numbers: body.numbers })
+        break
+      case 'support':
+        supports.push({ ...own, numbers: body.numbers })
+        break
+    }
+  }
+  return { units, modifiers, gels, supports, versions: new Map(kit.map((item) => [item.id, item.version])) }
+}
+
+/** The studio's kit, sorted into what a light is made of. */
+export function useKit(): Kit {
+  const { id } = useShoot()
+  const { data, isPending } = useQuery(lightingQueries.kit(id))
+  return useMemo(
+    () => ({ ...sortKit(data?.kit ?? []), state: data ? 'there' : isPending ? 'coming' : 'not there' }),
+    [data, isPending],
+  )
+}

@@ -1,0 +1,99 @@
+import { useMemo } from 'react'
+import { placeIdSchema, type LightId, type PlaceId, type PropId, type SetupId } from '#shared/ids.ts'
+import type { Background, Camera, Point, PROP_KINDS } from '#shared/domain/lighting/schema.ts'
+import { lights, props, setups, sitterPlaces } from '#shared/realtime/documents.ts'
+import { type Patch, patchItem, putItems, removeItems } from '#shared/realtime/collection.ts'
+import type { WholeSetup } from '#shared/domain/plan/read-plan.ts'
+import { newId } from '#src/lib/new-id.ts'
+import { useDoc } from '#src/realtime/shoot-realtime.tsx'
+import { type Undo, useUndo } from '#src/realtime/use-undo.ts'
+import { duplicateLight, newLight, newProp, type NewLight } from './new-items.ts'
+import type { Part } from './parts.ts'
+
+export type SetupWriter = {
+  undo: Undo
+  patchSetup(patch: Patch<typeof setups>): void
+  patchCamera(patch: Partial<Camera>): void
+  patchBackground(patch: Partial<Background>): void
+  patchLight(id: LightId, patch: Patch<typeof lights>): void
+  patchPlace(id: PlaceId, patch: Patch<typeof sitterPlaces>): void
+  patchProp(id: PropId, patch: Patch<typeof props>): void
+  addLight(light: NewLight): LightId
+  duplicateLight(id: LightId): LightId | null
+  removeLight(id: LightId): void
+  addPlace(): PlaceId
+  removePlace(id: PlaceId): void
+  addProp(kind: (typeof PROP_KINDS)[number]): PropId
+  removeProp(id: PropId): void
+  /** Writes where a part was dropped: one change, one step of undo. */
+  drop(part: Part, at: Point): void
+}
+
+/** Changes of one setup; each is a step of undo of its own. */
+export function useSetupWriter(whole: WholeSetup): SetupWriter {
+  const doc = useDoc('lighting')
+  const undo = useUndo(['lighting'])
+  const { stop } = undo
+  const changes = useMemo(() => {
+    const setupId: SetupId = whole.setup.id
+    const { camera, background } = whole.setup
+    const step = (write: () => void) => {
+      stop()
+      write()
+      stop()
+    }
+    const patchSetup = (patch: Patch<typeof setups>) => step(() => patchItem(doc, setups, setupId, patch))
+    const patchLight = (id: LightId, patch: Patch<typeof lights>) => step(() => patchItem(doc, lights, id, patch))
+    const patchPlace = (id: PlaceId, patch: Patch<typeof sitterPlaces>) =>
+      step(() => patchItem(doc, sitterPlaces, id, patch))
+    const patchProp = (id: PropId, patch: Patch<typeof props>) => step(() => patchItem(doc, props, id, patch))
+    return {
+      patchSetup,
+      patchCamera: (patch: Partial<Camera>) => patchSetup({ camera: { ...camera, ...patch } }),
+      patchBackground: (patch: Partial<Background>) => patchSetup({ background: { ...background, ...patch } }),
+      patchLight,
+      patchPlace,
+      patchProp,
+      addLight(input: NewLight) {
+        const light = newLight(whole, input, Math.random)
+        step(() => putItems(doc, lights, [light], Math.random))
+        return light.id
+      },
+      duplicateLight(id: LightId) {
+        const light = duplicateLight(whole, id, Math.random)
+        if (!light) return null
+        step(() => putItems(doc, lights, [light], Math.random))
+        return light.id
+      },
+      removeLight: (id: LightId) => step(() => removeItems(doc, lights, [id], Date.now())),
+      addPlace() {
+        const id = placeIdSchema.parse(newId())
+        const x = whole.places.length === 0 ? 0 : Math.max(...whole.places.map((place) => place.at[0])) + 0.6
+        step(() => putItems(doc, sitterPlaces, [{ id, setupId, at: [x, 0], eyeHeightM: 1.55 }], Math.random))
+        return id
+      },
+      removePlace: (id: PlaceId) => step(() => removeItems(doc, sitterPlaces, [id], Date.now())),
+      addProp(kind: (typeof PROP_KINDS)[number]) {
+        const prop = newProp(whole, kind)
+        step(() => putItems(doc, props, [prop], Math.random))
+        return prop.id
+      },
+      removeProp: (id: PropId) => step(() => removeItems(doc, props, [id], Date.now())),
+      drop(part: Part, at: Point) {
+        switch (part.kind) {
+          case 'light':
+            return patchLight(part.light.id, { at })
+          case 'aim':
+            return patchLight(part.light.id, { aim: at })
+          case 'place':
+            return patchPlace(part.place.id, { at: [at[0], at[2]] })
+          case 'prop':
+            return patchProp(part.prop.id, { at })
+          case 'camera':
+            return patchSetup({ camera: { ...camera, at } })
+        }
+      },
+    }
+  }, [doc, stop, whole])
+  return { undo, ...changes }
+}

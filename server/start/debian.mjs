@@ -54,7 +54,8 @@ export async function installDebianPackages(wanted) {
   }
   for (const command of installCommands(wanted.packages, { dropInIsThere: existsSync(NO_MAIN_CLUSTER) })) {
     const [program = '', ...args] = isRoot ? command : ['sudo', '-n', ...command]
-    const done = await run(program, args)
+    // Cut off in the middle it would leave the system's package data to be repaired by hand.
+    const done = await run(program, args, { detached: true })
     // A failing update may only mean that one of several mirrors is away; the install decides.
     if (done.code !== 0 && !command.includes('update')) {
       throw new Plain(`${wanted.name} could not be installed:\n${tail(done.stdout + done.stderr)}\n\n${byHand}`)

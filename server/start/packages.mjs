@@ -50,7 +50,7 @@ export async function ensurePackages() {
   }
   await takeTurn(`packages-${shortHash(rootDir)}`, 'installing', async () => {
     if (packagesAreCurrent()) return
-    await step('Installing the packages; the first time takes about a minute', async () => {
+    await step('Installing the packages (about a minute)', async () => {
       const npm = process.env['npm_execpath']
       const [program, first] = npm?.endsWith('.js') ? [process.execPath, [npm]] : ['npm', []]
       const done = await run(program, [...first, 'ci', '--include=dev', '--no-audit', '--no-fund'], { cwd: rootDir })

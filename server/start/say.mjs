@@ -24,7 +24,7 @@ export async function step(what, work) {
   say(`${what} …`)
   const result = await work()
   const tookS = (performance.now() - startedAtMs) / 1000
-  if (tookS >= 1) say(`  done in ${tookS.toFixed(tookS < 10 ? 1 : 0)} s`)
+  if (tookS >= 1) say(`  ${what}: done in ${tookS.toFixed(tookS < 10 ? 1 : 0)} s`)
   return result
 }
 
@@ -37,7 +37,7 @@ export function pause(ms) {
  * @typedef {{ code: number, stdout: string, stderr: string }} Finished
  *
  * Runs a program to its end and hands back what it printed; never throws for its exit code.
- * A program that cannot be started at all has the code 127.
+ * A program that cannot be started at all has the code 127. It ends with us, unless it is `detached`.
  *
  * @param {string} command
  * @param {string[]} args
@@ -47,12 +47,17 @@ export function pause(ms) {
 export function run(command, args, options = {}) {
   return new Promise((resolve) => {
     const child = spawn(command, args, { ...options, stdio: ['ignore', 'pipe', 'pipe'] })
+    const endWithUs = () => void child.kill()
+    if (options.detached !== true) process.once('exit', endWithUs)
     let stdout = ''
     let stderr = ''
     child.stdout?.setEncoding('utf8').on('data', (text) => (stdout += text))
     child.stderr?.setEncoding('utf8').on('data', (text) => (stderr += text))
     child.on('error', (error) => resolve({ code: 127, stdout, stderr: stderr + error.message }))
-    child.on('close', (code) => resolve({ code: code ?? 1, stdout, stderr }))
+    child.on('close', (code) => {
+      process.off('exit', endWithUs)
+      resolve({ code: code ?? 1, stdout, stderr })
+    })
   })
 }
 

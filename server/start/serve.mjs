@@ -110,17 +110,13 @@ export class Server {
     this.#isStopping = true
     const child = this.#child
     if (child === undefined || child.exitCode !== null || child.signalCode !== null) return
+    say('\nStopping: finishing what is under way …')
     child.kill('SIGTERM')
     const drained = await Promise.race([endOf(child).then(() => true), pause(DRAIN_S * 1000).then(() => false)])
     if (drained) return
     say(`The server did not finish within ${DRAIN_S} s and was stopped; what it had acknowledged is saved.`)
     child.kill('SIGKILL')
     await endOf(child)
-  }
-
-  /** Does not wait for anything that is under way. */
-  kill() {
-    this.#child?.kill('SIGKILL')
   }
 }
 

@@ -12,7 +12,7 @@ function addressOf(name) {
 }
 
 /**
- * @typedef {{ doing: 'starting' | 'running' | 'stopping' | 'backup' | 'restore' | 'installing' | 'building', pid: number, url?: string, pgPort?: number }} Holder
+ * @typedef {{ doing: 'starting' | 'running' | 'stopping' | 'backup' | 'restore' | 'installing' | 'building', pid: number, url?: string, pgPort?: number | undefined }} Holder
  * @typedef {{ tell: (holder: Omit<Holder, 'pid'>) => void, release: () => Promise<void> }} Hold
  *
  * Takes the name for this process, or hands back undefined when somebody has it.

@@ -3,7 +3,7 @@ import { PrivateCluster, ensurePostgres } from './cluster.mjs'
 import { startVite } from './dev.mjs'
 import { ensurePackages } from './packages.mjs'
 import { isRoot, openPlace, readSettings, rootDir, shortHash, writeSettings } from './place.mjs'
-import { addressesFor, anyFreePort, nextFreePort } from './ports.mjs'
+import { addressesFor, anyFreePort, isFree, nextFreePort } from './ports.mjs'
 import { Plain, pause, say } from './say.mjs'
 import { Server, awaitOrphanedServer } from './serve.mjs'
 import { askHolder, tryHold } from './single.mjs'
@@ -22,80 +22,111 @@ export const holdName = `run-${shortHash(`${rootDir} ${process.env['SCONCE_DATA_
  *
  * @param {Life & { isDev: boolean }} options
  */
-export async function start({ isDev, toStop, fail }) {
+export async function start({ isDev, ...life }) {
   const external = externalDatabase()
   const wanted = wantedAddress()
   const hold = external === undefined ? await holdOrSay() : undefined
   if (external === undefined && hold === undefined) return
-  toStop(async () => hold?.release())
+  life.toStop(async () => hold?.release())
 
   const place = openPlace()
-  await ensurePackages()
+  const [installation] = await Promise.all([
+    external === undefined ? ensurePostgres(place.pgData) : undefined,
+    ensurePackages(),
+  ])
   const settings = readSettings(place)
-
   await awaitOrphanedServer(settings.serverPid)
   // The build needs no database, and the database no build.
-  const building = isDev ? Promise.resolve() : ensureBuilt()
-  building.catch(() => {})
-  let databaseUrl = external
-  /** @type {number | undefined} */
-  let pgPort
-  if (databaseUrl === undefined) {
-    const { bin } = await ensurePostgres(place.pgData)
-    const cluster = new PrivateCluster(place, settings, bin)
-    toStop(async () => {
-      await cluster.stop()
-      say(`Stopped. The data is kept in ${place.dataDir}.`)
-    })
-    await cluster.start()
-    cluster.watch(fail)
-    const { urlFor } = await import('./sql.mjs')
-    databaseUrl = urlFor(cluster.appLogin)
-    pgPort = cluster.port
-  }
+  const [databaseUrl] = await Promise.all([
+    external ?? openEmbedded(new PrivateCluster(place, settings, installation?.bin ?? ''), place, life),
+    isDev ? undefined : ensureBuilt(),
+  ])
   if (external !== undefined) await reach(external)
-  await building
 
-  const { host, wantedPort, port } = await choosePort(wanted)
-  const serverPort = isDev ? await anyFreePort() : port
-  const publicUrl = process.env['PUBLIC_URL'] || undefined
-  const given = (process.env['TRUSTED_ORIGINS'] ?? '').split(/[\s,]+/).filter(Boolean)
-  const addresses = addressesFor({ host, port, wantedPort, publicUrl, trustedOrigins: given })
-  const server = new Server(
-    {
-      NODE_ENV: process.env['NODE_ENV'] || (isDev ? 'development' : 'production'),
-      LOG_LEVEL: process.env['LOG_LEVEL'] || 'warn',
-      DATABASE_URL: databaseUrl,
-      HOST: isDev ? '127.0.0.1' : host,
-      PORT: String(serverPort),
-      PUBLIC_URL: addresses.publicUrl,
-      TRUSTED_ORIGINS: addresses.trustedOrigins.join(' '),
-      BETTER_AUTH_SECRET: process.env['BETTER_AUTH_SECRET'] || settings.authSecret,
-      SCONCE_DEMO: external === undefined ? '1' : '0',
-      SCONCE_EMBEDDED: external === undefined ? '1' : '0',
-    },
-    {
-      giveUp: fail,
-      onPid: (pid) => {
-        settings.serverPid = pid
-        writeSettings(place, settings)
-      },
-    },
-  )
-  toStop(async () => {
-    hold?.tell({ doing: 'stopping' })
-    say('\nStopping: finishing what is under way …')
-    await server.stop()
-  })
-  await server.start()
-  if (isDev) {
-    const vite = await startVite({ host, port, serverPort, onServerChange: () => server.restart() })
-    toStop(vite.stop)
+  const env = {
+    NODE_ENV: process.env['NODE_ENV'] || (isDev ? 'development' : 'production'),
+    LOG_LEVEL: process.env['LOG_LEVEL'] || 'warn',
+    DATABASE_URL: databaseUrl,
+    BETTER_AUTH_SECRET: process.env['BETTER_AUTH_SECRET'] || settings.authSecret,
+    SCONCE_DEMO: external === undefined ? '1' : '0',
+    SCONCE_EMBEDDED: external === undefined ? '1' : '0',
   }
-  hold?.tell({ doing: 'running', url: addresses.publicUrl, ...(pgPort === undefined ? {} : { pgPort }) })
-  say(`\nSconce is ready at ${addresses.publicUrl}`)
+  const onPid = (/** @type {number} */ pid) => {
+    settings.serverPid = pid
+    writeSettings(place, settings)
+  }
+  const publicUrl = await serve({
+    env,
+    isDev,
+    wanted,
+    onPid,
+    life,
+    onStopping: () => hold?.tell({ doing: 'stopping' }),
+  })
+  hold?.tell({ doing: 'running', url: publicUrl, pgPort: settings.pgPort })
+  say(`\nSconce is ready at ${publicUrl}`)
   if (external === undefined) await saySignIns(databaseUrl)
   say('\nStop it with Ctrl-C.')
+}
+
+/**
+ * @param {PrivateCluster} cluster
+ * @param {import('./place.mjs').Place} place
+ * @param {Life} life
+ */
+async function openEmbedded(cluster, place, life) {
+  life.toStop(async () => {
+    await cluster.stop()
+    say(`Stopped. The data is kept in ${place.dataDir}.`)
+  })
+  await cluster.start()
+  cluster.watch(life.fail)
+  const { urlFor } = await import('./sql.mjs')
+  return urlFor(cluster.appLogin)
+}
+
+/**
+ * Starts the server on the port wanted or the next free one, with Vite in front of it for development.
+ *
+ * @param {{
+ *   env: Record<string, string>, isDev: boolean, wanted: { host: string, port: number },
+ *   onPid: (pid: number) => void, onStopping: () => void, life: Life,
+ * }} options
+ * @returns {Promise<string>} the address people use
+ */
+async function serve({ env, isDev, wanted, onPid, onStopping, life }) {
+  const { host } = wanted
+  for (let attempt = 1; ; attempt += 1) {
+    const port = await nextFreePort(wanted.port, host)
+    if (port !== wanted.port) say(`Port ${wanted.port} is taken by another program; using ${port}.`)
+    const { publicUrl, trustedOrigins } = addressesFor({
+      host,
+      port,
+      wantedPort: wanted.port,
+      publicUrl: process.env['PUBLIC_URL'] || undefined,
+      trustedOrigins: (process.env['TRUSTED_ORIGINS'] ?? '').split(/[\s,]+/).filter(Boolean),
+    })
+    const serverPort = isDev ? await anyFreePort() : port
+    const address = { HOST: isDev ? '127.0.0.1' : host, PORT: String(serverPort), PUBLIC_URL: publicUrl }
+    const all = { ...env, ...address, TRUSTED_ORIGINS: trustedOrigins.join(' ') }
+    const server = new Server(all, { giveUp: life.fail, onPid })
+    life.toStop(async () => {
+      onStopping()
+      await server.stop()
+    })
+    try {
+      await server.start()
+    } catch (error) {
+      // Somebody may have taken the port between our look and the server's.
+      if (attempt < 5 && !(await isFree(serverPort, host))) continue
+      throw error
+    }
+    if (isDev) {
+      const vite = await startVite({ host, port, serverPort, onServerChange: () => server.restart() })
+      life.toStop(vite.stop)
+    }
+    return publicUrl
+  }
 }
 
 /** Takes this checkout for us, or says who has it. */
@@ -154,7 +185,7 @@ async function saySignIns(databaseUrl) {
   const emails = DEMO_PEOPLE.map((person) => person.email)
   const found = await withConnection(databaseUrl, (client) =>
     client.query('select email from "user" where email = any($1)', [emails]),
-  )
+  ).catch(() => ({ rows: [] }))
   const there = new Set(found.rows.map((row) => row.email))
   const people = DEMO_PEOPLE.filter((person) => there.has(person.email))
   if (people.length === 0) return
@@ -177,11 +208,4 @@ function wantedAddress() {
     throw new Plain(`PORT is "${process.env['PORT']}"; it has to be a whole number from 1 to 65535.`)
   }
   return { host, port }
-}
-
-/** @param {{ host: string, port: number }} wanted */
-async function choosePort({ host, port: wantedPort }) {
-  const port = await nextFreePort(wantedPort, host)
-  if (port !== wantedPort) say(`Port ${wantedPort} is taken by another program; using ${port}.`)
-  return { host, wantedPort, port }
 }

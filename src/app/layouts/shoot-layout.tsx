@@ -3,6 +3,7 @@ import { Suspense } from 'react'
 import { Outlet, useLocation, useParams } from 'react-router-dom'
 import { shootQueries } from '#src/features/shoots/queries.ts'
 import { shortDate } from '#src/lib/format.ts'
+import { useSettlePictures } from '#src/realtime/outbox/use-outbox.ts'
 import { ShootRealtime, useClosed, useShoot } from '#src/realtime/shoot-realtime.tsx'
 import { ScreenBarAside } from '#src/ui/screen-bar.tsx'
 import { Waiting } from '#src/ui/waiting.tsx'
@@ -38,6 +39,7 @@ function OpenShoot() {
   const root = `/shoots/${shoot.id}`
   const here = pathname.slice(root.length + 1).split('/')[0] ?? ''
   useSayWhere(here)
+  useSettlePictures()
   const lamps = new Map(readiness.map((section) => [section.section, section]))
   const links = [...sections.working, ...sections.beside]
   const label = links.find((link) => link.path === here)?.label

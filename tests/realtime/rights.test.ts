@@ -167,7 +167,13 @@ describe('a reader of a document in which things were deleted', () => {
     await until(() => reader.saved === 1)
     expect(reader.refusals).toEqual([])
     // Coming back with a copy, as from the browser's cache.
-    const again = await new TestClient({ url: world.url, shootId: shoot.shootId, kind: 'plan', sessionId: shoot.people.client.sessionId, doc: reader.doc }).ready()
+    const again = await new TestClient({
+      url: world.url,
+      shootId: shoot.shootId,
+      kind: 'plan',
+      sessionId: shoot.people.client.sessionId,
+      doc: reader.doc,
+    }).ready()
     await until(() => again.saved === 1)
     expect(again.refusals).toEqual([])
     const own = new Y.Doc()

@@ -40,6 +40,8 @@ export class TestClient {
   onUpdate: () => void = () => undefined
   /** When set, updates are not sent by themselves. */
   isSilent = false
+  /** Whether it answers the server's step 1. */
+  answers = true
 
   constructor(options: ClientOptions) {
     this.doc = options.doc ?? new Y.Doc()
@@ -77,6 +79,7 @@ export class TestClient {
     if (type === MESSAGE.sync) {
       const step = decoding.readVarUint(decoder)
       const body = decoding.readVarUint8Array(decoder)
+      if (step === 0 && !this.answers) return
       if (step === 0) {
         this.sent++
         this.send(syncFrame(1, Y.encodeStateAsUpdate(this.doc, body)))

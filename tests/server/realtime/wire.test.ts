@@ -48,4 +48,9 @@ describe('readPresence', () => {
     expect(readPresence(body([entry]))).toEqual(entry)
     expect(readPresence(body([entry, entry]))).toBe(2)
   })
+
+  it('does not read on beyond its end', () => {
+    const memory = Uint8Array.from([1, 5, 6, 9, 110, 117, 108, 108, 83, 69, 67, 82, 69, 84])
+    expect(() => readPresence(memory.subarray(0, 8))).toThrow('shorter')
+  })
 })

@@ -13,7 +13,7 @@ import type { LookStanding } from '../use-look-standings.ts'
 import { useWordsDraft } from '../use-words-draft.ts'
 import { DifferenceList } from './difference-list.tsx'
 
-export type AnswerFormProps = { shootId: string; standing: LookStanding; onAnswered: (words: string) => void }
+export type AnswerFormProps = { shootId: string; userId: string; standing: LookStanding; onAnswered: (words: string) => void }
 
 type Trouble = { lookId: string; message: string; differences: readonly LookDifference[] }
 
@@ -21,11 +21,11 @@ const QUESTION = 'Anything to change? Say what and why.'
 const KEPT = 'Your name, the time and this exact version are kept with your answer.'
 
 /** The client's two answers. What is typed stays until it is kept by the server, whatever goes wrong. */
-export function AnswerForm({ shootId, standing, onAnswered }: AnswerFormProps) {
+export function AnswerForm({ shootId, userId, standing, onAnswered }: AnswerFormProps) {
   const { look } = standing.planned
   const isPhone = useIsPhone()
   const answerLook = useAnswerLook(shootId)
-  const [words, setWords] = useWordsDraft(look.id)
+  const [words, setWords] = useWordsDraft(userId, look.id)
   const [missing, setMissing] = useState('')
   const [trouble, setTrouble] = useState<Trouble | null>(null)
   const [isAsking, setIsAsking] = useState(false)

@@ -72,7 +72,7 @@ export function SignOffScreen() {
   const sheet = (
     <LookSheet key={chosen.planned.look.id} standing={chosen} plan={plan} userId={userId}>
       {mayAnswer ? (
-        <AnswerForm shootId={shoot.id} standing={chosen} onAnswered={handleAnswered} />
+        <AnswerForm shootId={shoot.id} userId={userId} standing={chosen} onAnswered={handleAnswered} />
       ) : (
         chosen.state.kind !== 'signed off' && <p className="mt-3 text-sm text-ink-soft max-md:px-[18px] max-md:pb-6">The client answers here. Nobody signs off their own work.</p>
       )}

@@ -52,7 +52,12 @@ export function createApp(deps: AppDeps): Express {
 
   app.get('/healthz', (_req, res) => void res.json({ ok: true }))
   app.get('/readyz', async (_req, res) => {
-    const ok = (deps.isServing?.() ?? true) && (await db.execute(sql`select 1`).then(() => true, () => false))
+    const ok =
+      (deps.isServing?.() ?? true) &&
+      (await db.execute(sql`select 1`).then(
+        () => true,
+        () => false,
+      ))
     res.status(ok ? 200 : 503).json({ ok })
   })
 
@@ -66,7 +71,12 @@ export function createApp(deps: AppDeps): Express {
   api.all('/auth/*path', authRoute(auth, publicUrl))
   api.use(withCtx({ db, documents, now, publicUrl, actorOf: (req) => signedIn(auth, req.headers) }))
   const { invitationsPerMin, uploadsPerMin } = limits
-  api.use(studiosRoutes({ letters, invitationsPerMin }), peopleRoutes({ auth, invitationsPerMin }), shootsRoutes(), kitRoutes())
+  api.use(
+    studiosRoutes({ letters, invitationsPerMin }),
+    peopleRoutes({ auth, invitationsPerMin }),
+    shootsRoutes(),
+    kitRoutes(),
+  )
   api.use(commentsRoutes(), privateRoutes(), uploadsRoutes(uploadsPerMin), signOffRoutes())
   if (letters) api.use(mailRoutes())
   api.use(nothingHere)

@@ -26,14 +26,33 @@ const log = pino({ level: env.logLevel, base: null }, pino.destination(2))
 process.on('unhandledRejection', (error) => log.error({ failure: loggable(error) }, 'a promise was left alone'))
 
 await migrateDatabase(env.databaseUrl)
-const { db, pool } = connectDatabase(env.databaseUrl, (error) => log.warn({ failure: loggable(error) }, 'an idle database connection broke'))
+const { db, pool } = connectDatabase(env.databaseUrl, (error) =>
+  log.warn({ failure: loggable(error) }, 'an idle database connection broke'),
+)
 const now = () => new Date()
 const { publicUrl, trustedOrigins } = env
-const auth = makeAuth(db, { secret: env.authSecret, publicUrl, trustedOrigins, signInsPerMin: HTTP_LIMITS.signInsPerMin })
-const realtime = createRealtime({ db, databaseUrl: env.databaseUrl, auth: (headers) => signedIn(auth, headers), trustedOrigins, log })
+const auth = makeAuth(db, {
+  secret: env.authSecret,
+  publicUrl,
+  trustedOrigins,
+  signInsPerMin: HTTP_LIMITS.signInsPerMin,
+})
+const realtime = createRealtime({
+  db,
+  databaseUrl: env.databaseUrl,
+  auth: (headers) => signedIn(auth, headers),
+  trustedOrigins,
+  log,
+})
 
 if (env.demo) {
-  const put = await ensureDemo({ db, now, documents: realtime.documents, publicUrl, createUser: (person) => createPerson(auth, db, person) })
+  const put = await ensureDemo({
+    db,
+    now,
+    documents: realtime.documents,
+    publicUrl,
+    createUser: (person) => createPerson(auth, db, person),
+  })
   if (put) log.info('the demo shoot is in')
 }
 
@@ -41,13 +60,25 @@ if (env.demo) {
 const letters = env.smtpUrl === undefined && isLoopback(env.host) && isLoopback(new URL(publicUrl).hostname)
 const catcher = letters ? await createLetterCatcher() : undefined
 const smtpUrl = env.smtpUrl ?? catcher?.smtpUrl
-if (smtpUrl === undefined) log.warn('SMTP_URL is not set and the server is open to others: letters wait in the queue and are not sent')
+if (smtpUrl === undefined)
+  log.warn('SMTP_URL is not set and the server is open to others: letters wait in the queue and are not sent')
 const mailer = smtpUrl === undefined ? undefined : createMailer(smtpUrl, publicUrl)
 const mailWorker = mailer && startMailWorker({ db, mailer, now, log, keepsText: letters })
 
 let isServing = true
 const clientDir = fileURLToPath(new URL('../dist/client', import.meta.url))
-const app = createApp({ db, auth, documents: realtime.documents, now, publicUrl, trustedOrigins, log, clientDir, letters, isServing: () => isServing })
+const app = createApp({
+  db,
+  auth,
+  documents: realtime.documents,
+  now,
+  publicUrl,
+  trustedOrigins,
+  log,
+  clientDir,
+  letters,
+  isServing: () => isServing,
+})
 const server = createServer(app)
 // Longer than a balancer keeps its own, so that it never sends into a connection that is just closing.
 server.keepAliveTimeout = 75_000

@@ -39,7 +39,10 @@ export function makeAuth(db: Db, options: AuthOptions) {
       minPasswordLength: MIN_PASSWORD_LENGTH,
       revokeSessionsOnPasswordReset: true,
       sendResetPassword: async ({ user, token }) => {
-        await queueLetter(db, resetLetter({ to: user.email, name: user.name, url: `${publicUrl}/reset?token=${token}` }))
+        await queueLetter(
+          db,
+          resetLetter({ to: user.email, name: user.name, url: `${publicUrl}/reset?token=${token}` }),
+        )
       },
       // The letter has shown that the mailbox is theirs, and nobody else is signed in any more.
       onPasswordReset: async ({ user }) => {
@@ -78,9 +81,16 @@ export function makeAuth(db: Db, options: AuthOptions) {
         storeToken: 'hashed',
         disableSignUp: true,
         sendMagicLink: async ({ email, token }) => {
-          const [person] = await db.select({ name: schema.user.name, email: schema.user.email }).from(schema.user).where(eq(schema.user.email, email.toLowerCase()))
+          const [person] = await db
+            .select({ name: schema.user.name, email: schema.user.email })
+            .from(schema.user)
+            .where(eq(schema.user.email, email.toLowerCase()))
           // Whether there is an account is not told to whoever asks; a letter goes only where there is one.
-          if (person) await queueLetter(db, signInLetter({ to: person.email, name: person.name, url: `${publicUrl}/sign-in?letter=${token}` }))
+          if (person)
+            await queueLetter(
+              db,
+              signInLetter({ to: person.email, name: person.name, url: `${publicUrl}/sign-in?letter=${token}` }),
+            )
         },
       }),
       invitedSignIn(),

@@ -7,8 +7,15 @@ import { authError } from './auth-errors.ts'
 
 /** What of the sign-in library can be reached; everything else of it has no address here. */
 const OPEN = new Set([
-  'POST /sign-up/email', 'POST /sign-in/email', 'POST /sign-in/magic-link', 'GET /magic-link/verify', 'POST /sign-out',
-  'POST /request-password-reset', 'POST /reset-password', 'POST /change-password', 'POST /update-user',
+  'POST /sign-up/email',
+  'POST /sign-in/email',
+  'POST /sign-in/magic-link',
+  'GET /magic-link/verify',
+  'POST /sign-out',
+  'POST /request-password-reset',
+  'POST /reset-password',
+  'POST /change-password',
+  'POST /update-user',
   'POST /revoke-other-sessions',
 ])
 

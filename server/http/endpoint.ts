@@ -27,9 +27,12 @@ type Endpoint<P extends Any, B extends Any, Q extends Any, R extends Any> = {
  * Parse → verb → JSON. All issues of body and query come back with their paths; a path that does not parse is an
  * address that does not exist. An answer of undefined is 204; a handler that has answered by itself is left alone.
  */
-export function endpoint<P extends Any = z.ZodUnknown, B extends Any = z.ZodUnknown, Q extends Any = z.ZodUnknown, R extends Any = z.ZodUnknown>(
-  options: Endpoint<P, B, Q, R>,
-): RequestHandler {
+export function endpoint<
+  P extends Any = z.ZodUnknown,
+  B extends Any = z.ZodUnknown,
+  Q extends Any = z.ZodUnknown,
+  R extends Any = z.ZodUnknown,
+>(options: Endpoint<P, B, Q, R>): RequestHandler {
   return async (req, res) => {
     const params = options.params?.safeParse(req.params)
     if (params && !params.success) throw new AppError('NOT_FOUND', 'There is nothing at this address.')
@@ -40,7 +43,11 @@ export function endpoint<P extends Any = z.ZodUnknown, B extends Any = z.ZodUnkn
     const query = options.query?.safeParse(req.query)
     const issues = [...issuesOf(body), ...issuesOf(query)]
     if (issues.length > 0) {
-      throw new AppError('BAD_REQUEST', 'Some of what was sent does not fit. Nothing was changed; see what is marked.', { issues })
+      throw new AppError(
+        'BAD_REQUEST',
+        'Some of what was sent does not fit. Nothing was changed; see what is marked.',
+        { issues },
+      )
     }
     const input = { params: params?.data, body: body?.data, query: query?.data, req, res } as Input<P, B, Q>
     const result = await options.handle(ctxOf(req), input)

@@ -41,7 +41,8 @@ export function toAppError(error: unknown): AppError {
   if (error instanceof URIError) return new AppError('NOT_FOUND', 'There is nothing at this address.')
   const type = textOf(error, 'type')
   if (type === 'entity.parse.failed') return new AppError('NOT_JSON', 'What was sent is not JSON. Nothing was changed.')
-  if (type === 'entity.too.large') return new AppError('TOO_LARGE', 'This is more than one request may carry (1 MB). Nothing was changed.')
+  if (type === 'entity.too.large')
+    return new AppError('TOO_LARGE', 'This is more than one request may carry (1 MB). Nothing was changed.')
   if (type === 'charset.unsupported' || type === 'encoding.unsupported') {
     return new AppError('UNSUPPORTED', 'Text has to come as UTF-8. Nothing was changed.')
   }
@@ -51,10 +52,17 @@ export function toAppError(error: unknown): AppError {
   const state = sqlState(error)
   // A character that PostgreSQL cannot hold (NUL), in text and in JSON.
   if (state === '22021' || state === '22P05') {
-    return new AppError('BAD_REQUEST', 'The text holds a character that cannot be kept. Nothing was changed; take it out and try again.')
+    return new AppError(
+      'BAD_REQUEST',
+      'The text holds a character that cannot be kept. Nothing was changed; take it out and try again.',
+    )
   }
   if (state !== undefined && isDatabaseAway(state)) {
-    return new AppError('STARTING', 'The database cannot be reached just now. Nothing was changed; try again in a moment.', { cause: error })
+    return new AppError(
+      'STARTING',
+      'The database cannot be reached just now. Nothing was changed; try again in a moment.',
+      { cause: error },
+    )
   }
   return new AppError('INTERNAL', 'Something went wrong on our side. Nothing was changed; try again.', { cause: error })
 }
@@ -66,7 +74,10 @@ export function sqlState(error: unknown): string | undefined {
 }
 
 function isDatabaseAway(state: string): boolean {
-  return ['ECONNREFUSED', 'ECONNRESET', 'EPIPE', '57P01', '57P02', '57P03', '53300'].includes(state) || state.startsWith('08')
+  return (
+    ['ECONNREFUSED', 'ECONNRESET', 'EPIPE', '57P01', '57P02', '57P03', '53300'].includes(state) ||
+    state.startsWith('08')
+  )
 }
 
 function textOf(value: unknown, key: string): string | undefined {

@@ -18,5 +18,8 @@ export function logRequests(log: Logger): RequestHandler {
 
 /** An address as it may stand in a log. */
 export function pathWithoutTokens(url: string): string {
-  return (url.split('?')[0] ?? '').replace(/\/(invitations|join|link|reset-password)\/(?![0-9a-f-]{36}(?:\/|$))[^/]+/g, '/$1/…')
+  return (url.split('?')[0] ?? '').replace(
+    /\/(invitations|join|link|reset-password)\/(?![0-9a-f-]{36}(?:\/|$))[^/]+/g,
+    '/$1/…',
+  )
 }

@@ -32,13 +32,19 @@ export function receiveFile(whoOf: (req: Request) => string): RequestHandler {
 
 function toAppError(error: unknown): AppError {
   if (error instanceof MulterError && error.code === 'LIMIT_FILE_SIZE') return tooLarge()
-  if (error instanceof MulterError) return new AppError('BAD_REQUEST', 'One request carries one picture in the field “file”. Nothing was kept.')
-  return new AppError('BAD_REQUEST', 'The picture broke off on its way. Nothing was kept; it can be sent again.', { cause: error })
+  if (error instanceof MulterError)
+    return new AppError('BAD_REQUEST', 'One request carries one picture in the field “file”. Nothing was kept.')
+  return new AppError('BAD_REQUEST', 'The picture broke off on its way. Nothing was kept; it can be sent again.', {
+    cause: error,
+  })
 }
 
 function tooLarge(): AppError {
   const limitMb = MAX_UPLOAD_BYTES / 1024 / 1024
-  return new AppError('TOO_LARGE', `This file is larger than ${limitMb} MB, the most that can be kept. Nothing was kept. Save the picture smaller and add that.`)
+  return new AppError(
+    'TOO_LARGE',
+    `This file is larger than ${limitMb} MB, the most that can be kept. Nothing was kept. Save the picture smaller and add that.`,
+  )
 }
 
 type Waiting = { who: string; start: () => void }

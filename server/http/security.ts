@@ -42,7 +42,10 @@ export function requireOwnOrigin(trustedOrigins: readonly string[]): RequestHand
   return (req, _res, next) => {
     const { origin } = req.headers
     if (!SAFE.has(req.method) && (origin === undefined || !trusted.has(origin))) {
-      throw new AppError('WRONG_ORIGIN', 'This was sent from a page that is not ours, so nothing was changed. Open Sconce at its own address and try again.')
+      throw new AppError(
+        'WRONG_ORIGIN',
+        'This was sent from a page that is not ours, so nothing was changed. Open Sconce at its own address and try again.',
+      )
     }
     next()
   }

@@ -7,7 +7,14 @@ import { readTree } from '#tests/architecture/tree.ts'
 /** Files whose test stands elsewhere, each with the reason. Keep it short. */
 const exempt = new Map<string, string>([])
 
-const tests = new Set(readTree(['tests/shared', 'tests/server'], /\.test\.tsx?$/).keys())
+const testTexts = readTree(['tests/shared', 'tests/server'], /\.test\.tsx?$/)
+const tests = new Set(testTexts.keys())
+
+/** Small verbs of a feature may share one test file in the feature's folder; it counts for those it imports. */
+function isTestedInFolder(path: string): boolean {
+  const folder = `tests/${path.slice(0, path.lastIndexOf('/') + 1)}`
+  return [...testTexts].some(([test, text]) => test.startsWith(folder) && text.includes(`from '#${path}'`))
+}
 
 type Callable = { firstParameter: string | undefined }
 
@@ -50,7 +57,9 @@ describe('the mirror', () => {
     const verbs = [...readTree(['server/features'], /\.ts$/)]
       .filter(([path, text]) => isVerb(path, text))
       .map(([path]) => path)
-    expect(verbs.filter((path) => !exempt.has(path) && !tests.has(mirrorOf(path)))).toEqual([])
+    expect(verbs.filter((path) => !exempt.has(path) && !tests.has(mirrorOf(path)) && !isTestedInFolder(path))).toEqual(
+      [],
+    )
   })
 
   it('exempts only files that are there and have no test of their own', () => {

@@ -74,8 +74,18 @@ export async function startTestApp(
     ctxOf: (actor) => ({ db, actor: actor ?? null, now: clock.now, documents, publicUrl: TEST_ORIGIN }),
     clientOf: async (actor) => {
       if (!actor) return clientFor(url)
-      const { headers } = await auth.api.signInInvited({ body: { userId: actor.userId }, headers: new Headers(), returnHeaders: true })
-      return clientFor(url, headers.getSetCookie().map((line) => line.split(';')[0] ?? '').join('; '))
+      const { headers } = await auth.api.signInInvited({
+        body: { userId: actor.userId },
+        headers: new Headers(),
+        returnHeaders: true,
+      })
+      return clientFor(
+        url,
+        headers
+          .getSetCookie()
+          .map((line) => line.split(';')[0] ?? '')
+          .join('; '),
+      )
     },
     close: async () => {
       server.closeAllConnections()

@@ -55,22 +55,47 @@ export type World = {
 export async function makeWorld(app: TestApp): Promise<World> {
   const { db } = app
   const [photographer, stylist, client, crew, member, stranger, removed, invited] = await Promise.all(
-    ['Pia Lund', 'Sol Vance', 'Cleo Marsh', 'Cy Dorn', 'Mel Ward', 'Stu Fell', 'Ray Moss', 'Ivy Nash'].map((name) => makePerson(db, name)),
+    ['Pia Lund', 'Sol Vance', 'Cleo Marsh', 'Cy Dorn', 'Mel Ward', 'Stu Fell', 'Ray Moss', 'Ivy Nash'].map((name) =>
+      makePerson(db, name),
+    ),
   )
-  if (!photographer || !stylist || !client || !crew || !member || !stranger || !removed || !invited) throw new Error('eight names make eight people')
+  if (!photographer || !stylist || !client || !crew || !member || !stranger || !removed || !invited)
+    throw new Error('eight names make eight people')
   const { id: studioId } = await createStudio(app.ctxOf(photographer), { name: 'Harbour Studio' })
-  const { id: shootId } = await createShoot(app.ctxOf(photographer), { studioId, title: 'Salt and Linen', date: '2027-03-04', zone: 'Europe/London' })
+  const { id: shootId } = await createShoot(app.ctxOf(photographer), {
+    studioId,
+    title: 'Salt and Linen',
+    date: '2027-03-04',
+    zone: 'Europe/London',
+  })
   await addToShoot(db, shootId, stylist, 'stylist')
   await addToShoot(db, shootId, client, 'client')
   await addToShoot(db, shootId, crew, 'crew')
   await addToStudio(db, studioId, member, 'member')
   await addToShoot(db, shootId, removed, 'stylist')
   await removePerson(app.ctxOf(photographer), { shootId, userId: removed.userId })
-  const people = await invitePerson(app.ctxOf(photographer), { shootId, email: invited.email, name: invited.name, role: 'stylist' })
+  const people = await invitePerson(app.ctxOf(photographer), {
+    shootId,
+    email: invited.email,
+    name: invited.name,
+    role: 'stylist',
+  })
   const id = people.invitations[0]?.id
   if (!id) throw new Error('an invitation is in the list')
   const token = await newestToken(db, invited.email)
-  return { studioId, shootId, photographer, stylist, client, crew, studioMember: member, stranger, removed, invited, invitation: { id, token } }
+  return {
+    studioId,
+    shootId,
+    photographer,
+    stylist,
+    client,
+    crew,
+    studioMember: member,
+    stranger,
+    removed,
+    invited,
+    invitation: { id, token },
+  }
 }
 
 /** The token in the newest letter to this address: of `/join/…`, or of `?letter=…` and `?token=…`. */

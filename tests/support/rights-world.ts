@@ -17,10 +17,26 @@ import { deliverableInputSchema, roomInputSchema } from '#shared/domain/shoots/s
 import type { TestApp } from '#tests/support/app.ts'
 import { type World, makeWorld } from '#tests/support/factories.ts'
 
-export const EVERYBODY = ['signed out', 'stranger', 'photographer', 'stylist', 'client', 'crew', 'removed', 'invited', 'studio member'] as const
+export const EVERYBODY = [
+  'signed out',
+  'stranger',
+  'photographer',
+  'stylist',
+  'client',
+  'crew',
+  'removed',
+  'invited',
+  'studio member',
+] as const
 export type Who = (typeof EVERYBODY)[number]
 
-export const SECRETS = { sizes: 'sizes-Qm7xW', contact: 'contact-Zp4vR', cost: 918_273_645, size: 'pcsize-Kd9', note: 'note-Hb2tL' } as const
+export const SECRETS = {
+  sizes: 'sizes-Qm7xW',
+  contact: 'contact-Zp4vR',
+  cost: 918_273_645,
+  size: 'pcsize-Kd9',
+  note: 'note-Hb2tL',
+} as const
 
 /** A world with something of everything in it, secrets included. */
 export type FullWorld = World & {
@@ -50,19 +66,44 @@ export async function makeFullWorld(app: TestApp): Promise<FullWorld> {
     putItems(doc, looks, [{ id: lookId, sitterId, name: 'Harbour', pieceIds: [pieceId], rank: 'a0' }], Math.random)
   })
   await setSizes(ctx, { shootId, sitterId, sizes: SECRETS.sizes, contact: SECRETS.contact })
-  await setPieceCost(ctx, { shootId, pieceId, cost: { minor: SECRETS.cost, currency: 'GBP' }, deposit: null, size: SECRETS.size })
+  await setPieceCost(ctx, {
+    shootId,
+    pieceId,
+    cost: { minor: SECRETS.cost, currency: 'GBP' },
+    deposit: null,
+    size: SECRETS.size,
+  })
   await setPrivateNote(ctx, { shootId, text: SECRETS.note })
   const { rooms } = await addRoom(ctx, { shootId, room: roomInputSchema.parse({ name: 'Net loft' }) })
-  const { deliverables } = await addDeliverable(ctx, { shootId, deliverable: deliverableInputSchema.parse({ title: 'Cover' }) })
+  const { deliverables } = await addDeliverable(ctx, {
+    shootId,
+    deliverable: deliverableInputSchema.parse({ title: 'Cover' }),
+  })
   const kit = await loadKit(app.db, studioId)
-  const { invitations } = await inviteToStudio(ctx, { studioId, email: `guest.${randomUUID()}@example.com`, role: 'member' })
+  const { invitations } = await inviteToStudio(ctx, {
+    studioId,
+    email: `guest.${randomUUID()}@example.com`,
+    role: 'member',
+  })
   const said = async (role: 'photographer' | 'stylist' | 'client' | 'crew') => {
-    const { comments } = await addComment(app.ctxOf(world[role]), { shootId, subject: 'look', subjectId: lookId, text: `from ${role}` })
+    const { comments } = await addComment(app.ctxOf(world[role]), {
+      shootId,
+      subject: 'look',
+      subjectId: lookId,
+      text: `from ${role}`,
+    })
     return comments.find(({ userId }) => userId === world[role].userId)?.id ?? ''
   }
-  const commentIds = { photographer: await said('photographer'), stylist: await said('stylist'), client: await said('client'), crew: await said('crew') }
+  const commentIds = {
+    photographer: await said('photographer'),
+    stylist: await said('stylist'),
+    client: await said('client'),
+    crew: await said('crew'),
+  }
   const uploadId = uploadIdSchema.parse(randomUUID())
-  const stored = await (await app.clientOf(photographer)).send('PUT', `/api/shoots/${shootId}/uploads/${uploadId}`, await pictureForm())
+  const stored = await (
+    await app.clientOf(photographer)
+  ).send('PUT', `/api/shoots/${shootId}/uploads/${uploadId}`, await pictureForm())
   if (stored.status !== 200) throw new Error(`The picture was not taken: ${stored.text}`)
   const { current } = await listSignOffs(ctx, shootId)
   return {
@@ -92,7 +133,9 @@ export async function makeFullWorld(app: TestApp): Promise<FullWorld> {
 }
 
 export async function pictureForm(): Promise<FormData> {
-  const png = await sharp({ create: { width: 40, height: 30, channels: 3, background: '#7a5c3e' } }).png().toBuffer()
+  const png = await sharp({ create: { width: 40, height: 30, channels: 3, background: '#7a5c3e' } })
+    .png()
+    .toBuffer()
   const form = new FormData()
   form.set('file', new Blob([new Uint8Array(png)], { type: 'image/png' }), 'net-loft.png')
   return form

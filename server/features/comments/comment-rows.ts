@@ -9,7 +9,15 @@ import { comment } from '#server/db/schema/comments.ts'
 /** All comments of a shoot, oldest first; who left it keeps their name here. */
 export async function loadComments(db: Db | Tx, shootId: ShootId): Promise<Comments> {
   const rows = await db
-    .select({ id: comment.id, subject: comment.subject, subjectId: comment.subjectId, userId: comment.userId, name: user.name, text: comment.text, at: comment.at })
+    .select({
+      id: comment.id,
+      subject: comment.subject,
+      subjectId: comment.subjectId,
+      userId: comment.userId,
+      name: user.name,
+      text: comment.text,
+      at: comment.at,
+    })
     .from(comment)
     .innerJoin(user, eq(user.id, comment.userId))
     .where(eq(comment.shootId, shootId))

@@ -12,11 +12,26 @@ const ofComment = inShoot.extend({ commentId: commentIdSchema })
 
 export function commentsRoutes(): Router {
   const router = Router()
-  router.get('/shoots/:shootId/comments', endpoint({ params: inShoot, response: commentsSchema, handle: (ctx, { params }) => listComments(ctx, params.shootId) }))
+  router.get(
+    '/shoots/:shootId/comments',
+    endpoint({
+      params: inShoot,
+      response: commentsSchema,
+      handle: (ctx, { params }) => listComments(ctx, params.shootId),
+    }),
+  )
   router.post(
     '/shoots/:shootId/comments',
-    endpoint({ params: inShoot, body: commentInputSchema, response: commentsSchema, handle: (ctx, { params, body }) => addComment(ctx, { ...params, ...body }) }),
+    endpoint({
+      params: inShoot,
+      body: commentInputSchema,
+      response: commentsSchema,
+      handle: (ctx, { params, body }) => addComment(ctx, { ...params, ...body }),
+    }),
   )
-  router.delete('/shoots/:shootId/comments/:commentId', endpoint({ params: ofComment, response: commentsSchema, handle: (ctx, { params }) => removeComment(ctx, params) }))
+  router.delete(
+    '/shoots/:shootId/comments/:commentId',
+    endpoint({ params: ofComment, response: commentsSchema, handle: (ctx, { params }) => removeComment(ctx, params) }),
+  )
   return router
 }

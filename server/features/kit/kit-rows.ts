@@ -1,8 +1,10 @@
 import { and, asc, desc, eq, sql } from 'drizzle-orm'
 import type { KitItemId, StudioId } from '#shared/ids.ts'
 import { type KitItem, kitItemSchema } from '#shared/api/kit.ts'
+import type { Ctx } from '#server/context.ts'
 import type { Db, Tx } from '#server/db/client.ts'
 import { kitItem } from '#server/db/schema/studios.ts'
+import { announceToStudio } from '#server/features/studios/studio-rows.ts'
 
 /** A studio's kit as it stands: the newest version of each item, without what was removed, by name. */
 export async function loadKit(db: Db | Tx, studioId: StudioId): Promise<KitItem[]> {
@@ -12,7 +14,10 @@ export async function loadKit(db: Db | Tx, studioId: StudioId): Promise<KitItem[
     .where(eq(kitItem.studioId, studioId))
     .orderBy(asc(kitItem.id), desc(kitItem.version))
     .as('newest')
-  const rows = await db.select().from(newest).where(sql`${newest.removedAt} is null`)
+  const rows = await db
+    .select()
+    .from(newest)
+    .where(sql`${newest.removedAt} is null`)
   return rows
     .map(({ id, version, input }) => kitItemSchema.parse({ ...input, id, version }))
     .sort((a, b) => a.name.localeCompare(b.name, 'en', { numeric: true }) || (a.id < b.id ? -1 : 1))
@@ -28,5 +33,15 @@ export async function findKitItem(tx: Tx, studioId: StudioId, id: KitItemId): Pr
     .where(and(eq(kitItem.studioId, studioId), eq(kitItem.id, id)))
     .orderBy(desc(kitItem.version))
     .limit(1)
-  return row && { item: kitItemSchema.parse({ ...row.input, id, version: row.version }), isRemoved: row.removedAt !== null }
+  return (
+    row && { item: kitItemSchema.parse({ ...row.input, id, version: row.version }), isRemoved: row.removedAt !== null }
+  )
+}
+
+/** Tells everyone who has one of the studio's shoots open that its kit changed. */
+export async function announceKit(ctx: Ctx, studioId: StudioId): Promise<void> {
+  await announceToStudio(ctx, studioId, (shootId) => [
+    ['shoots', shootId, 'kit'],
+    ['studios', studioId, 'kit'],
+  ])
 }

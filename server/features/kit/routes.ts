@@ -15,10 +15,18 @@ const ofItem = inStudio.extend({ kitId: kitItemIdSchema })
 
 export function kitRoutes(): Router {
   const router = Router()
-  router.get('/studios/:studioId/kit', endpoint({ params: inStudio, response: kitListSchema, handle: (ctx, { params }) => listKit(ctx, params.studioId) }))
+  router.get(
+    '/studios/:studioId/kit',
+    endpoint({ params: inStudio, response: kitListSchema, handle: (ctx, { params }) => listKit(ctx, params.studioId) }),
+  )
   router.post(
     '/studios/:studioId/kit',
-    endpoint({ params: inStudio, body: kitInputSchema, response: kitListSchema, handle: (ctx, { params, body }) => addKitItem(ctx, { ...params, input: body }) }),
+    endpoint({
+      params: inStudio,
+      body: kitInputSchema,
+      response: kitListSchema,
+      handle: (ctx, { params, body }) => addKitItem(ctx, { ...params, input: body }),
+    }),
   )
   router.put(
     '/studios/:studioId/kit/:kitId',
@@ -29,10 +37,17 @@ export function kitRoutes(): Router {
       handle: (ctx, { params, body: { version, ...input } }) => updateKitItem(ctx, { ...params, version, input }),
     }),
   )
-  router.delete('/studios/:studioId/kit/:kitId', endpoint({ params: ofItem, response: kitListSchema, handle: (ctx, { params }) => removeKitItem(ctx, params) }))
+  router.delete(
+    '/studios/:studioId/kit/:kitId',
+    endpoint({ params: ofItem, response: kitListSchema, handle: (ctx, { params }) => removeKitItem(ctx, params) }),
+  )
   router.get(
     '/shoots/:shootId/kit',
-    endpoint({ params: z.object({ shootId: shootIdSchema }), response: kitListSchema, handle: (ctx, { params }) => listShootKit(ctx, params.shootId) }),
+    endpoint({
+      params: z.object({ shootId: shootIdSchema }),
+      response: kitListSchema,
+      handle: (ctx, { params }) => listShootKit(ctx, params.shootId),
+    }),
   )
   return router
 }

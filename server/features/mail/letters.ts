@@ -13,14 +13,31 @@ type Draft = {
 }
 
 /** What a person writes for an invitation: who invites whom to what, and one link. */
-export function invitationLetter(about: { to: string; name: string; inviter: string; title: string; role: string; kind: 'shoot' | 'studio'; url: string; days: number }): Letter {
+export function invitationLetter(about: {
+  to: string
+  name: string
+  inviter: string
+  title: string
+  role: string
+  kind: 'shoot' | 'studio'
+  url: string
+  days: number
+}): Letter {
   const to = about.kind === 'shoot' ? `the shoot “${about.title}”` : `the studio “${about.title}”`
-  const part = about.kind === 'shoot' ? ROLE_WORDS[about.role] : about.role === 'owner' ? 'You will be one of its owners.' : 'You can use its kit and start shoots there.'
+  const part =
+    about.kind === 'shoot'
+      ? ROLE_WORDS[about.role]
+      : about.role === 'owner'
+        ? 'You will be one of its owners.'
+        : 'You can use its kit and start shoots there.'
   return compose({
     to: about.to,
     subject: `${about.inviter} invites you to ${about.title}`,
     greeting: greeting(about.name),
-    lines: [`${about.inviter} would like you to join ${to} in Sconce, where it is planned together.`, ...(part ? [part] : [])],
+    lines: [
+      `${about.inviter} would like you to join ${to} in Sconce, where it is planned together.`,
+      ...(part ? [part] : []),
+    ],
     link: { words: about.kind === 'shoot' ? 'Open the shoot' : 'Join the studio', url: about.url },
     after: [
       `You need no password. The link is for you alone and works for ${about.days} days.`,
@@ -65,7 +82,13 @@ function greeting(name: string): string {
 }
 
 function compose(draft: Draft): Letter {
-  const text = [draft.greeting, ...draft.lines, `${draft.link.words}:\n${draft.link.url}`, ...draft.after, 'Sconce'].join('\n\n')
+  const text = [
+    draft.greeting,
+    ...draft.lines,
+    `${draft.link.words}:\n${draft.link.url}`,
+    ...draft.after,
+    'Sconce',
+  ].join('\n\n')
   const paragraph = (words: string) => `<p style="margin:0 0 16px">${escapeHtml(words)}</p>`
   const html = `<!doctype html>
 <html lang="en"><head><meta charset="utf-8"><title>${escapeHtml(oneLine(draft.subject))}</title></head>
@@ -83,9 +106,17 @@ ${draft.after.map(paragraph).join('\n')}
 
 /** A header never carries a line break, whatever was typed. */
 function oneLine(text: string): string {
-  return text.replace(/[\p{Cc}\u2028\u2029]+/gu, ' ').trim().slice(0, 200)
+  return text
+    .replace(/[\p{Cc}\u2028\u2029]+/gu, ' ')
+    .trim()
+    .slice(0, 200)
 }
 
 export function escapeHtml(text: string): string {
-  return text.replace(/&/g, '&amp;').replace(/</g, '&lt;').replace(/>/g, '&gt;').replace(/"/g, '&quot;').replace(/'/g, '&#39;')
+  return text
+    .replace(/&/g, '&amp;')
+    .replace(/</g, '&lt;')
+    .replace(/>/g, '&gt;')
+    .replace(/"/g, '&quot;')
+    .replace(/'/g, '&#39;')
 }

@@ -9,6 +9,13 @@ const MOST = 100
 export async function listLetters(ctx: Ctx): Promise<Letters> {
   const rows = await ctx.db.select().from(mail).orderBy(desc(mail.createdAt), desc(mail.id)).limit(MOST)
   return {
-    letters: rows.map(({ id, to, subject, text, createdAt }) => ({ id, to, subject, text, atMs: createdAt.getTime(), links: text.match(/https?:\/\/\S+/g) ?? [] })),
+    letters: rows.map(({ id, to, subject, text, createdAt }) => ({
+      id,
+      to,
+      subject,
+      text,
+      atMs: createdAt.getTime(),
+      links: text.match(/https?:\/\/\S+/g) ?? [],
+    })),
   }
 }

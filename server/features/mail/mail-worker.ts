@@ -13,7 +13,8 @@ export function startMailWorker({ db, mailer, now, log, keepsText }: MailWorker)
   let timer: NodeJS.Timeout | undefined
   let round = Promise.resolve()
   // A mail server's words name the address; its code does not.
-  const onFailure = (error: unknown, tries: number) => log.warn({ code: codeOf(error), tries }, 'a letter was not taken')
+  const onFailure = (error: unknown, tries: number) =>
+    log.warn({ code: codeOf(error), tries }, 'a letter was not taken')
 
   const work = async (): Promise<void> => {
     try {

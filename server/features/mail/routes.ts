@@ -14,7 +14,8 @@ export function mailRoutes(): Router {
     endpoint({
       response: lettersSchema,
       handle: (ctx, { req }) => {
-        if (!HERE.has(req.hostname) || req.headers['x-forwarded-for'] !== undefined) throw new AppError('NOT_FOUND', 'There is nothing at this address.')
+        if (!HERE.has(req.hostname) || req.headers['x-forwarded-for'] !== undefined)
+          throw new AppError('NOT_FOUND', 'There is nothing at this address.')
         return listLetters(ctx)
       },
     }),

@@ -38,7 +38,10 @@ export async function sendDue(db: Db, mailer: Mailer, { now, keepsText, onFailur
     const tries = letter.tries + 1
     try {
       await mailer.send(letter)
-      await tx.update(mail).set({ sentAt: now(), tries, ...(keepsText ? {} : { text: '', html: '' }) }).where(eq(mail.id, letter.id))
+      await tx
+        .update(mail)
+        .set({ sentAt: now(), tries, ...(keepsText ? {} : { text: '', html: '' }) })
+        .where(eq(mail.id, letter.id))
     } catch (error) {
       const failed = tries >= MOST_TRIES ? (error instanceof Error ? error.message : String(error)).slice(0, 500) : null
       const nextTryAt = new Date(now().getTime() + waitMs(tries))

@@ -43,16 +43,25 @@ export async function acceptInvitation(ctx: Ctx, { token, name }: { token: strin
     }
     requireOpen(row, at)
     if (actor && actor.email.toLowerCase() !== row.email) {
-      throw new AppError('CONFLICT', `You are signed in as ${actor.email}, and this invitation is for ${row.email}. Nothing was changed; sign out first, then open the letter again.`)
+      throw new AppError(
+        'CONFLICT',
+        `You are signed in as ${actor.email}, and this invitation is for ${row.email}. Nothing was changed; sign out first, then open the letter again.`,
+      )
     }
     const userId = actor?.userId ?? (await personFor(tx, row, name, at))
     if (actor) await tx.update(user).set({ emailVerified: true }).where(eq(user.id, actor.userId))
     if (row.shootId) {
-      await tx.insert(shootMember).values({ shootId: row.shootId, userId, role: roleFrom(row.role), createdAt: at }).onConflictDoNothing()
+      await tx
+        .insert(shootMember)
+        .values({ shootId: row.shootId, userId, role: roleFrom(row.role), createdAt: at })
+        .onConflictDoNothing()
       await audit(tx, { shootId: row.shootId, userId, what: 'invitation.accepted', subject: row.id, at })
       await notifyAuth(tx, { shootId: row.shootId, userId })
     } else if (row.studioId) {
-      await tx.insert(studioMember).values({ studioId: row.studioId, userId, role: studioRoleFrom(row.role), createdAt: at }).onConflictDoNothing()
+      await tx
+        .insert(studioMember)
+        .values({ studioId: row.studioId, userId, role: studioRoleFrom(row.role), createdAt: at })
+        .onConflictDoNothing()
       await audit(tx, { studioId: row.studioId, userId, what: 'invitation.accepted', subject: row.id, at })
     }
     await tx.update(invitation).set({ acceptedAt: at, acceptedBy: userId }).where(eq(invitation.id, row.id))
@@ -74,14 +83,24 @@ async function personFor(tx: Tx, row: InvitationRow, name: string, at: Date): Pr
   const known = await findPersonByEmail(tx, row.email)
   if (known) {
     // Whoever made this account never showed that the mailbox is theirs; its password must not open what the letter opens.
-    const [password] = known.emailVerified ? [] : await tx.select({ id: account.id }).from(account).where(and(eq(account.userId, known.id), eq(account.providerId, 'credential')))
+    const [password] = known.emailVerified
+      ? []
+      : await tx
+          .select({ id: account.id })
+          .from(account)
+          .where(and(eq(account.userId, known.id), eq(account.providerId, 'credential')))
     if (password) {
-      throw new AppError('CONFLICT', `There is an account for ${row.email} already. Nothing was changed; sign in to it (a letter can sign you in without the password), then open this letter again.`)
+      throw new AppError(
+        'CONFLICT',
+        `There is an account for ${row.email} already. Nothing was changed; sign in to it (a letter can sign you in without the password), then open this letter again.`,
+      )
     }
     if (!known.emailVerified) await tx.update(user).set({ emailVerified: true }).where(eq(user.id, known.id))
     return userIdSchema.parse(known.id)
   }
   const id = userIdSchema.parse(randomUUID())
-  await tx.insert(user).values({ id, name: personName(name), email: row.email, emailVerified: true, createdAt: at, updatedAt: at })
+  await tx
+    .insert(user)
+    .values({ id, name: personName(name), email: row.email, emailVerified: true, createdAt: at, updatedAt: at })
   return id
 }

@@ -18,18 +18,31 @@ import { requireAnotherPhotographer } from './photographers.ts'
  *
  * @throws SIGNED_OUT, NOT_FOUND, FORBIDDEN; CONFLICT when it would leave the shoot without a photographer
  */
-export async function changeRole(ctx: Ctx, { shootId, userId, role }: { shootId: ShootId; userId: UserId; role: Role }): Promise<People> {
+export async function changeRole(
+  ctx: Ctx,
+  { shootId, userId, role }: { shootId: ShootId; userId: UserId; role: Role },
+): Promise<People> {
   const { actor } = await requireShoot(ctx, shootId, 'people.write')
   await withTransaction(ctx.db, async (tx) => {
     await lockShoot(tx, shootId)
     const before = await findRole(tx, shootId, userId)
-    if (!before) throw new AppError('NOT_FOUND', 'This person is not in the shoot any more. Nothing was changed; look at the list again.')
+    if (!before)
+      throw new AppError(
+        'NOT_FOUND',
+        'This person is not in the shoot any more. Nothing was changed; look at the list again.',
+      )
     if (before === role) return
     if (before === 'photographer') await requireAnotherPhotographer(tx, shootId, userId)
-    await tx.update(shootMember).set({ role }).where(and(eq(shootMember.shootId, shootId), eq(shootMember.userId, userId)))
+    await tx
+      .update(shootMember)
+      .set({ role })
+      .where(and(eq(shootMember.shootId, shootId), eq(shootMember.userId, userId)))
     await audit(tx, { shootId, userId: actor.userId, what: `role.${role}`, subject: userId, at: ctx.now() })
     await notifyAuth(tx, { shootId, userId })
   })
-  ctx.documents.announce(shootId, [['shoots', shootId, 'people'], ['shoots', shootId]])
+  ctx.documents.announce(shootId, [
+    ['shoots', shootId, 'people'],
+    ['shoots', shootId],
+  ])
   return listPeople(ctx, shootId)
 }

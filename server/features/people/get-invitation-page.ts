@@ -10,5 +10,11 @@ export async function getInvitationPage(ctx: Ctx, token: string): Promise<Invita
   requireOpen(row, ctx.now())
   const [inviter] = await ctx.db.select({ name: user.name }).from(user).where(eq(user.id, row.invitedBy))
   const known = await titleOf(ctx.db, row)
-  return invitationPageSchema.parse({ ...known, inviter: inviter?.name ?? '', role: row.role, email: row.email, name: row.name })
+  return invitationPageSchema.parse({
+    ...known,
+    inviter: inviter?.name ?? '',
+    role: row.role,
+    email: row.email,
+    name: row.name,
+  })
 }

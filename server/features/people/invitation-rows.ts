@@ -33,10 +33,16 @@ export function joinUrl(publicUrl: string, token: string): string {
 
 /** The invitation a letter's token belongs to; `lock` holds its row until the transaction ends. @throws NOT_FOUND */
 export async function getInvitationByToken(db: Db | Tx, token: string, lock = false): Promise<InvitationRow> {
-  const query = db.select().from(invitation).where(eq(invitation.tokenHash, hashOf(token)))
+  const query = db
+    .select()
+    .from(invitation)
+    .where(eq(invitation.tokenHash, hashOf(token)))
   const [row] = await (lock ? query.for('update') : query)
   if (!row) {
-    throw new AppError('NOT_FOUND', 'This invitation is not known. Perhaps the link broke on its way, or a newer letter replaced it: look for the newest one, or ask for another.')
+    throw new AppError(
+      'NOT_FOUND',
+      'This invitation is not known. Perhaps the link broke on its way, or a newer letter replaced it: look for the newest one, or ask for another.',
+    )
   }
   return row
 }
@@ -45,21 +51,34 @@ export async function getInvitationByToken(db: Db | Tx, token: string, lock = fa
 export function requireOpen(row: InvitationRow, at: Date): void {
   if (row.revokedAt) throw new AppError('GONE', 'This invitation was withdrawn. Ask whoever invited you for a new one.')
   if (row.acceptedAt) throw new AppError('GONE', 'This invitation has been used. Sign in to open what it was for.')
-  if (row.expiresAt <= at) throw new AppError('GONE', `This invitation is more than ${INVITATION_DAYS} days old and has expired. Ask whoever invited you to send it again.`)
+  if (row.expiresAt <= at)
+    throw new AppError(
+      'GONE',
+      `This invitation is more than ${INVITATION_DAYS} days old and has expired. Ask whoever invited you to send it again.`,
+    )
 }
 
 /** What the invitation is into. */
-export async function titleOf(db: Db | Tx, row: Pick<InvitationRow, 'shootId' | 'studioId'>): Promise<{ kind: 'shoot' | 'studio'; title: string }> {
+export async function titleOf(
+  db: Db | Tx,
+  row: Pick<InvitationRow, 'shootId' | 'studioId'>,
+): Promise<{ kind: 'shoot' | 'studio'; title: string }> {
   if (row.shootId) {
     const [found] = await db.select({ title: shoot.title }).from(shoot).where(eq(shoot.id, row.shootId))
     return { kind: 'shoot', title: found?.title ?? '' }
   }
-  const [found] = row.studioId ? await db.select({ title: studio.name }).from(studio).where(eq(studio.id, row.studioId)) : []
+  const [found] = row.studioId
+    ? await db.select({ title: studio.name }).from(studio).where(eq(studio.id, row.studioId))
+    : []
   return { kind: 'studio', title: found?.title ?? '' }
 }
 
 /** Whether an invitation for this address into this shoot or studio waits to be accepted, expired or not. */
-export async function findWaiting(tx: Tx, home: { shootId: ShootId } | { studioId: StudioId }, email: string): Promise<InvitationRow | undefined> {
+export async function findWaiting(
+  tx: Tx,
+  home: { shootId: ShootId } | { studioId: StudioId },
+  email: string,
+): Promise<InvitationRow | undefined> {
   const into = 'shootId' in home ? eq(invitation.shootId, home.shootId) : eq(invitation.studioId, home.studioId)
   const [row] = await tx
     .select()
@@ -70,6 +89,9 @@ export async function findWaiting(tx: Tx, home: { shootId: ShootId } | { studioI
 
 /** The person with this address, whatever its case. */
 export async function findPersonByEmail(db: Db | Tx, email: string): Promise<typeof user.$inferSelect | undefined> {
-  const [row] = await db.select().from(user).where(eq(sql`lower(${user.email})`, email.toLowerCase()))
+  const [row] = await db
+    .select()
+    .from(user)
+    .where(eq(sql`lower(${user.email})`, email.toLowerCase()))
   return row
 }

@@ -14,7 +14,15 @@ import { AppError } from '#server/errors.ts'
 import { invitationLetter } from '#server/features/mail/letters.ts'
 import { queueLetter } from '#server/features/mail/queue-letter.ts'
 import { lockShoot } from '#server/features/shoots/brief-rows.ts'
-import { INVITATION_DAYS, expiryFrom, findPersonByEmail, findWaiting, joinUrl, newToken, titleOf } from './invitation-rows.ts'
+import {
+  INVITATION_DAYS,
+  expiryFrom,
+  findPersonByEmail,
+  findWaiting,
+  joinUrl,
+  newToken,
+  titleOf,
+} from './invitation-rows.ts'
 import { listPeople } from './list-people.ts'
 
 /**
@@ -22,7 +30,10 @@ import { listPeople } from './list-people.ts'
  *
  * @throws SIGNED_OUT, NOT_FOUND, FORBIDDEN; CONFLICT when the address belongs to somebody in the shoot or has an open invitation
  */
-export async function invitePerson(ctx: Ctx, { shootId, ...input }: z.output<typeof invitationInputSchema> & { shootId: ShootId }): Promise<People> {
+export async function invitePerson(
+  ctx: Ctx,
+  { shootId, ...input }: z.output<typeof invitationInputSchema> & { shootId: ShootId },
+): Promise<People> {
   const { actor } = await requireShoot(ctx, shootId, 'people.write')
   const email = input.email.toLowerCase()
   const name = input.name === '' ? '' : personName(input.name)
@@ -31,17 +42,48 @@ export async function invitePerson(ctx: Ctx, { shootId, ...input }: z.output<typ
   await withTransaction(ctx.db, async (tx) => {
     await lockShoot(tx, shootId)
     const person = await findPersonByEmail(tx, email)
-    const [member] = person ? await tx.select({ role: shootMember.role }).from(shootMember).where(and(eq(shootMember.shootId, shootId), eq(shootMember.userId, userIdSchema.parse(person.id)))) : []
-    if (member) throw new AppError('CONFLICT', `${person?.name ?? email} is in this shoot already, as ${member.role}. No letter was sent; change the role in the list instead.`)
+    const [member] = person
+      ? await tx
+          .select({ role: shootMember.role })
+          .from(shootMember)
+          .where(and(eq(shootMember.shootId, shootId), eq(shootMember.userId, userIdSchema.parse(person.id))))
+      : []
+    if (member)
+      throw new AppError(
+        'CONFLICT',
+        `${person?.name ?? email} is in this shoot already, as ${member.role}. No letter was sent; change the role in the list instead.`,
+      )
     if (await findWaiting(tx, { shootId }, email)) {
-      throw new AppError('CONFLICT', `${email} has an open invitation already. No second letter was sent; send that one again, or withdraw it first.`)
+      throw new AppError(
+        'CONFLICT',
+        `${email} has an open invitation already. No second letter was sent; send that one again, or withdraw it first.`,
+      )
     }
     const id = invitationIdSchema.parse(randomUUID())
-    await tx.insert(invitation).values({ id, shootId, email, name, role: input.role, tokenHash, invitedBy: actor.userId, sentAt: at, expiresAt: expiryFrom(at) })
+    await tx.insert(invitation).values({
+      id,
+      shootId,
+      email,
+      name,
+      role: input.role,
+      tokenHash,
+      invitedBy: actor.userId,
+      sentAt: at,
+      expiresAt: expiryFrom(at),
+    })
     const { title } = await titleOf(tx, { shootId, studioId: null })
     await queueLetter(
       tx,
-      invitationLetter({ to: email, name, inviter: actor.name, title, role: input.role, kind: 'shoot', url: joinUrl(ctx.publicUrl, token), days: INVITATION_DAYS }),
+      invitationLetter({
+        to: email,
+        name,
+        inviter: actor.name,
+        title,
+        role: input.role,
+        kind: 'shoot',
+        url: joinUrl(ctx.publicUrl, token),
+        days: INVITATION_DAYS,
+      }),
     )
     await audit(tx, { shootId, userId: actor.userId, what: 'invitation.sent', subject: id, at })
   })

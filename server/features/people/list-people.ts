@@ -26,7 +26,9 @@ export async function listPeople(ctx: Ctx, shootId: ShootId): Promise<People> {
     .innerJoin(user, eq(user.id, shootMember.userId))
     .where(eq(shootMember.shootId, shootId))
     .orderBy(asc(user.name), asc(user.id))
-  const onCallSheet = canInShoot(role, 'contacts.readCallSheet') ? await emailsOnCallSheet(ctx, shootId) : new Set<string>()
+  const onCallSheet = canInShoot(role, 'contacts.readCallSheet')
+    ? await emailsOnCallSheet(ctx, shootId)
+    : new Set<string>()
   const maySee = (member: { userId: string; role: Role; email: string }): boolean =>
     member.userId === actor.userId ||
     canInShoot(role, 'contacts.readAll') ||
@@ -50,7 +52,14 @@ export async function listPeople(ctx: Ctx, shootId: ShootId): Promise<People> {
 
 async function openInvitations(ctx: Ctx, shootId: ShootId): Promise<People['invitations']> {
   const rows = await ctx.db
-    .select({ id: invitation.id, email: invitation.email, name: invitation.name, role: invitation.role, sentAt: invitation.sentAt, expiresAt: invitation.expiresAt })
+    .select({
+      id: invitation.id,
+      email: invitation.email,
+      name: invitation.name,
+      role: invitation.role,
+      sentAt: invitation.sentAt,
+      expiresAt: invitation.expiresAt,
+    })
     .from(invitation)
     .where(and(eq(invitation.shootId, shootId), isNull(invitation.acceptedAt), isNull(invitation.revokedAt)))
     .orderBy(desc(invitation.sentAt))
@@ -64,7 +73,15 @@ async function openInvitations(ctx: Ctx, shootId: ShootId): Promise<People['invi
 }
 
 async function emailsOnCallSheet(ctx: Ctx, shootId: ShootId): Promise<Set<string>> {
-  const newest = ctx.db.select({ id: callSheet.id }).from(callSheet).where(eq(callSheet.shootId, shootId)).orderBy(desc(callSheet.number)).limit(1)
-  const rows = await ctx.db.select({ email: callSheetCopy.email }).from(callSheetCopy).where(inArray(callSheetCopy.callSheetId, newest))
+  const newest = ctx.db
+    .select({ id: callSheet.id })
+    .from(callSheet)
+    .where(eq(callSheet.shootId, shootId))
+    .orderBy(desc(callSheet.number))
+    .limit(1)
+  const rows = await ctx.db
+    .select({ email: callSheetCopy.email })
+    .from(callSheetCopy)
+    .where(inArray(callSheetCopy.callSheetId, newest))
   return new Set(rows.map((row) => row.email))
 }

@@ -12,6 +12,9 @@ export async function requireAnotherPhotographer(tx: Tx, shootId: ShootId, besid
     .where(and(eq(shootMember.shootId, shootId), eq(shootMember.role, 'photographer'), ne(shootMember.userId, besides)))
     .limit(1)
   if (others.length === 0) {
-    throw new AppError('CONFLICT', 'A shoot needs a photographer, and this is the only one. Nothing was changed; make somebody else photographer first, or remove the whole shoot.')
+    throw new AppError(
+      'CONFLICT',
+      'A shoot needs a photographer, and this is the only one. Nothing was changed; make somebody else photographer first, or remove the whole shoot.',
+    )
   }
 }

@@ -24,7 +24,13 @@ export async function removePerson(ctx: Ctx, { shootId, userId }: { shootId: Sho
     if (!before) return
     if (before === 'photographer') await requireAnotherPhotographer(tx, shootId, userId)
     await tx.delete(shootMember).where(and(eq(shootMember.shootId, shootId), eq(shootMember.userId, userId)))
-    await audit(tx, { shootId, userId: actor.userId, what: isLeaving ? 'person.left' : 'person.removed', subject: userId, at: ctx.now() })
+    await audit(tx, {
+      shootId,
+      userId: actor.userId,
+      what: isLeaving ? 'person.left' : 'person.removed',
+      subject: userId,
+      at: ctx.now(),
+    })
     await notifyAuth(tx, { shootId, userId })
   })
   ctx.documents.announce(shootId, [['shoots', shootId, 'people']])

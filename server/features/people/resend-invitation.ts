@@ -17,7 +17,10 @@ import { listPeople } from './list-people.ts'
  *
  * @throws SIGNED_OUT, NOT_FOUND, FORBIDDEN; CONFLICT when it was accepted or withdrawn meanwhile
  */
-export async function resendInvitation(ctx: Ctx, { shootId, invitationId }: { shootId: ShootId; invitationId: InvitationId }): Promise<People> {
+export async function resendInvitation(
+  ctx: Ctx,
+  { shootId, invitationId }: { shootId: ShootId; invitationId: InvitationId },
+): Promise<People> {
   const { actor } = await requireShoot(ctx, shootId, 'people.write')
   const at = ctx.now()
   const { token, tokenHash } = newToken()
@@ -25,13 +28,33 @@ export async function resendInvitation(ctx: Ctx, { shootId, invitationId }: { sh
     const [row] = await tx
       .update(invitation)
       .set({ tokenHash, sentAt: at, expiresAt: expiryFrom(at), invitedBy: actor.userId })
-      .where(and(eq(invitation.id, invitationId), eq(invitation.shootId, shootId), isNull(invitation.acceptedAt), isNull(invitation.revokedAt)))
+      .where(
+        and(
+          eq(invitation.id, invitationId),
+          eq(invitation.shootId, shootId),
+          isNull(invitation.acceptedAt),
+          isNull(invitation.revokedAt),
+        ),
+      )
       .returning()
-    if (!row) throw new AppError('CONFLICT', 'This invitation was accepted or withdrawn meanwhile. No letter was sent; look at the list again.')
+    if (!row)
+      throw new AppError(
+        'CONFLICT',
+        'This invitation was accepted or withdrawn meanwhile. No letter was sent; look at the list again.',
+      )
     const { title } = await titleOf(tx, row)
     await queueLetter(
       tx,
-      invitationLetter({ to: row.email, name: row.name, inviter: actor.name, title, role: row.role, kind: 'shoot', url: joinUrl(ctx.publicUrl, token), days: INVITATION_DAYS }),
+      invitationLetter({
+        to: row.email,
+        name: row.name,
+        inviter: actor.name,
+        title,
+        role: row.role,
+        kind: 'shoot',
+        url: joinUrl(ctx.publicUrl, token),
+        days: INVITATION_DAYS,
+      }),
     )
     await audit(tx, { shootId, userId: actor.userId, what: 'invitation.resent', subject: invitationId, at })
   })

@@ -14,15 +14,27 @@ import { listPeople } from './list-people.ts'
  *
  * @throws SIGNED_OUT, NOT_FOUND, FORBIDDEN; CONFLICT when it was accepted meanwhile (then remove the person)
  */
-export async function revokeInvitation(ctx: Ctx, { shootId, invitationId }: { shootId: ShootId; invitationId: InvitationId }): Promise<People> {
+export async function revokeInvitation(
+  ctx: Ctx,
+  { shootId, invitationId }: { shootId: ShootId; invitationId: InvitationId },
+): Promise<People> {
   const { actor } = await requireShoot(ctx, shootId, 'people.write')
   await withTransaction(ctx.db, async (tx) => {
     const mine = and(eq(invitation.id, invitationId), eq(invitation.shootId, shootId))
     const [row] = await tx.select({ acceptedAt: invitation.acceptedAt }).from(invitation).where(mine).for('update')
-    if (row?.acceptedAt) throw new AppError('CONFLICT', 'This invitation was accepted meanwhile. Nothing was changed; remove the person from the list instead.')
+    if (row?.acceptedAt)
+      throw new AppError(
+        'CONFLICT',
+        'This invitation was accepted meanwhile. Nothing was changed; remove the person from the list instead.',
+      )
     const at = ctx.now()
-    const changed = await tx.update(invitation).set({ revokedAt: at }).where(and(mine, isNull(invitation.revokedAt))).returning({ id: invitation.id })
-    if (changed.length > 0) await audit(tx, { shootId, userId: actor.userId, what: 'invitation.withdrawn', subject: invitationId, at })
+    const changed = await tx
+      .update(invitation)
+      .set({ revokedAt: at })
+      .where(and(mine, isNull(invitation.revokedAt)))
+      .returning({ id: invitation.id })
+    if (changed.length > 0)
+      await audit(tx, { shootId, userId: actor.userId, what: 'invitation.withdrawn', subject: invitationId, at })
   })
   ctx.documents.announce(shootId, [['shoots', shootId, 'people']])
   return listPeople(ctx, shootId)

@@ -2,7 +2,14 @@ import { fromNodeHeaders } from 'better-auth/node'
 import { Router } from 'express'
 import { z } from 'zod'
 import { invitationIdSchema, shootIdSchema, userIdSchema } from '#shared/ids.ts'
-import { acceptInvitationSchema, acceptedInvitationSchema, invitationInputSchema, invitationPageSchema, peopleSchema, roleInputSchema } from '#shared/api/people.ts'
+import {
+  acceptInvitationSchema,
+  acceptedInvitationSchema,
+  invitationInputSchema,
+  invitationPageSchema,
+  peopleSchema,
+  roleInputSchema,
+} from '#shared/api/people.ts'
 import type { Auth } from '#server/auth/auth.ts'
 import { sendCookies } from '#server/http/auth-routes.ts'
 import { endpoint } from '#server/http/endpoint.ts'
@@ -25,29 +32,60 @@ export function peopleRoutes({ auth, invitationsPerMin }: { auth: Auth; invitati
   const router = Router()
   const limited = limitPerMin(invitationsPerMin, 'That is a great many invitations at once')
 
-  router.get('/shoots/:shootId/people', endpoint({ params: inShoot, response: peopleSchema, handle: (ctx, { params }) => listPeople(ctx, params.shootId) }))
+  router.get(
+    '/shoots/:shootId/people',
+    endpoint({ params: inShoot, response: peopleSchema, handle: (ctx, { params }) => listPeople(ctx, params.shootId) }),
+  )
   router.patch(
     '/shoots/:shootId/people/:userId',
-    endpoint({ params: ofPerson, body: roleInputSchema, response: peopleSchema, handle: (ctx, { params, body }) => changeRole(ctx, { ...params, ...body }) }),
+    endpoint({
+      params: ofPerson,
+      body: roleInputSchema,
+      response: peopleSchema,
+      handle: (ctx, { params, body }) => changeRole(ctx, { ...params, ...body }),
+    }),
   )
-  router.delete('/shoots/:shootId/people/:userId', endpoint({ params: ofPerson, handle: (ctx, { params }) => removePerson(ctx, params) }))
+  router.delete(
+    '/shoots/:shootId/people/:userId',
+    endpoint({ params: ofPerson, handle: (ctx, { params }) => removePerson(ctx, params) }),
+  )
 
   router.post(
     '/shoots/:shootId/invitations',
     limited,
-    endpoint({ params: inShoot, body: invitationInputSchema, response: peopleSchema, handle: (ctx, { params, body }) => invitePerson(ctx, { ...params, ...body }) }),
+    endpoint({
+      params: inShoot,
+      body: invitationInputSchema,
+      response: peopleSchema,
+      handle: (ctx, { params, body }) => invitePerson(ctx, { ...params, ...body }),
+    }),
   )
   router.post(
     '/shoots/:shootId/invitations/:invitationId/resend',
     limited,
-    endpoint({ params: ofInvitation, response: peopleSchema, handle: (ctx, { params }) => resendInvitation(ctx, params) }),
+    endpoint({
+      params: ofInvitation,
+      response: peopleSchema,
+      handle: (ctx, { params }) => resendInvitation(ctx, params),
+    }),
   )
   router.delete(
     '/shoots/:shootId/invitations/:invitationId',
-    endpoint({ params: ofInvitation, response: peopleSchema, handle: (ctx, { params }) => revokeInvitation(ctx, params) }),
+    endpoint({
+      params: ofInvitation,
+      response: peopleSchema,
+      handle: (ctx, { params }) => revokeInvitation(ctx, params),
+    }),
   )
 
-  router.get('/invitations/:token', endpoint({ params: byToken, response: invitationPageSchema, handle: (ctx, { params }) => getInvitationPage(ctx, params.token) }))
+  router.get(
+    '/invitations/:token',
+    endpoint({
+      params: byToken,
+      response: invitationPageSchema,
+      handle: (ctx, { params }) => getInvitationPage(ctx, params.token),
+    }),
+  )
   router.post(
     '/invitations/:token/accept',
     limited,
@@ -58,7 +96,11 @@ export function peopleRoutes({ auth, invitationsPerMin }: { auth: Auth; invitati
       handle: async (ctx, { params, body, req, res }) => {
         const { to, userId, signsIn } = await acceptInvitation(ctx, { ...params, ...body })
         if (signsIn) {
-          const { headers } = await auth.api.signInInvited({ body: { userId }, headers: fromNodeHeaders(req.headers), returnHeaders: true })
+          const { headers } = await auth.api.signInInvited({
+            body: { userId },
+            headers: fromNodeHeaders(req.headers),
+            returnHeaders: true,
+          })
           sendCookies(headers, res)
         }
         return { to }

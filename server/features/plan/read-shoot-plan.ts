@@ -39,7 +39,11 @@ export async function readShootPlan(ctx: Ctx, shootId: ShootId): Promise<Plan> {
     }),
     ctx.documents.read(shootId, 'looks', (doc) => {
       const { sitters, looks, pieces } = COLLECTIONS.looks
-      return { sitters: readAll(doc, sitters).items, looks: readAll(doc, looks).items, pieces: readAll(doc, pieces).items }
+      return {
+        sitters: readAll(doc, sitters).items,
+        looks: readAll(doc, looks).items,
+        pieces: readAll(doc, pieces).items,
+      }
     }),
     ctx.documents.read(shootId, 'lighting', (doc) => {
       const { setups, lights, sitterPlaces, props } = COLLECTIONS.lighting

@@ -8,7 +8,11 @@ import { pieceCost } from '#server/db/schema/private.ts'
 /** What the pieces of a shoot cost, in minor units with a currency, and their sizes; for those who plan. @throws SIGNED_OUT, NOT_FOUND, FORBIDDEN */
 export async function listPieceCosts(ctx: Ctx, shootId: ShootId): Promise<PieceCosts> {
   await requireShoot(ctx, shootId, 'piece-costs.read')
-  const rows = await ctx.db.select().from(pieceCost).where(eq(pieceCost.shootId, shootId)).orderBy(asc(pieceCost.pieceId))
+  const rows = await ctx.db
+    .select()
+    .from(pieceCost)
+    .where(eq(pieceCost.shootId, shootId))
+    .orderBy(asc(pieceCost.pieceId))
   return {
     pieces: rows.map((row) => ({
       pieceId: row.pieceId,

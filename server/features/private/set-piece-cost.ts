@@ -9,7 +9,10 @@ import { listPieceCosts } from './list-piece-costs.ts'
 export type SetPieceCost = z.output<typeof pieceCostInputSchema> & { shootId: ShootId; pieceId: PieceId }
 
 /** Writes down what a piece costs, its deposit and its size; money in minor units with a currency. @throws SIGNED_OUT, NOT_FOUND, FORBIDDEN */
-export async function setPieceCost(ctx: Ctx, { shootId, pieceId, cost, deposit, size }: SetPieceCost): Promise<PieceCosts> {
+export async function setPieceCost(
+  ctx: Ctx,
+  { shootId, pieceId, cost, deposit, size }: SetPieceCost,
+): Promise<PieceCosts> {
   await requireShoot(ctx, shootId, 'piece-costs.write')
   const values = {
     costMinor: cost?.minor ?? null,

@@ -13,8 +13,16 @@ export async function addRoom(ctx: Ctx, input: { shootId: ShootId; room: RoomInp
   await requireShoot(ctx, input.shootId, 'brief.write')
   await withTransaction(ctx.db, async (tx) => {
     await lockShoot(tx, input.shootId)
-    const [last] = await tx.select({ position: sql<number>`coalesce(max(${room.position}), -1)::int` }).from(room).where(eq(room.shootId, input.shootId))
-    await tx.insert(room).values({ id: roomIdSchema.parse(randomUUID()), shootId: input.shootId, position: (last?.position ?? -1) + 1, ...input.room })
+    const [last] = await tx
+      .select({ position: sql<number>`coalesce(max(${room.position}), -1)::int` })
+      .from(room)
+      .where(eq(room.shootId, input.shootId))
+    await tx.insert(room).values({
+      id: roomIdSchema.parse(randomUUID()),
+      shootId: input.shootId,
+      position: (last?.position ?? -1) + 1,
+      ...input.room,
+    })
   })
   ctx.documents.announce(input.shootId, [['shoots', input.shootId]])
   return getBrief(ctx.db, input.shootId)

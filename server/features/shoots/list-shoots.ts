@@ -10,7 +10,7 @@ import { requireUser } from '#server/access/require.ts'
 import type { Ctx } from '#server/context.ts'
 import { shoot, shootMember } from '#server/db/schema/shoots.ts'
 import { readShootPlan } from '#server/features/plan/read-shoot-plan.ts'
-import { loadReadiness } from './shoot-readiness.ts'
+import { loadReadiness } from './readiness-rows.ts'
 
 const PICTURES_ON_A_CARD = 3
 
@@ -23,7 +23,14 @@ const PICTURES_ON_A_CARD = 3
 export async function listShoots(ctx: Ctx): Promise<{ shoots: ShootCard[] }> {
   const { userId } = requireUser(ctx)
   const rows = await ctx.db
-    .select({ id: shoot.id, studioId: shoot.studioId, date: shoot.date, zone: shoot.zone, role: shootMember.role, createdAt: shoot.createdAt })
+    .select({
+      id: shoot.id,
+      studioId: shoot.studioId,
+      date: shoot.date,
+      zone: shoot.zone,
+      role: shootMember.role,
+      createdAt: shoot.createdAt,
+    })
     .from(shootMember)
     .innerJoin(shoot, and(eq(shoot.id, shootMember.shootId), eq(shootMember.userId, userId)))
   const now = ctx.now()
@@ -46,7 +53,10 @@ function civilDateIn(zone: string, at: Date): string {
   return new Intl.DateTimeFormat('sv-SE', { timeZone: zone }).format(at)
 }
 
-async function cardOf(ctx: Ctx, row: Pick<ShootCard, 'id' | 'studioId' | 'date'> & { id: ShootId; role: Role }): Promise<ShootCard> {
+async function cardOf(
+  ctx: Ctx,
+  row: Pick<ShootCard, 'id' | 'studioId' | 'date'> & { id: ShootId; role: Role },
+): Promise<ShootCard> {
   const [plan, frames] = await Promise.all([
     readShootPlan(ctx, row.id),
     ctx.documents.read(row.id, 'board', (doc) => readAll(doc, framesOf).items),
@@ -68,6 +78,8 @@ async function cardOf(ctx: Ctx, row: Pick<ShootCard, 'id' | 'studioId' | 'date'>
 /** Pictures of the first shots, then whatever else hangs on the board. */
 function picturesOf(plan: Plan, frames: ReadonlyMap<string, Frame>): UploadId[] {
   const covers = plan.days.flatMap((day) => day.shots).flatMap(({ cover }) => (cover ? [cover] : []))
-  const pictures = [...covers, ...frames.values()].flatMap(({ picture }) => (picture.state === 'stored' ? [picture.uploadId] : []))
+  const pictures = [...covers, ...frames.values()].flatMap(({ picture }) =>
+    picture.state === 'stored' ? [picture.uploadId] : [],
+  )
   return [...new Set(pictures)].slice(0, PICTURES_ON_A_CARD)
 }

@@ -34,32 +34,77 @@ const response = briefResponseSchema
 export function shootsRoutes(): Router {
   const router = Router()
   router.get('/shoots', endpoint({ response: shootCardsSchema, handle: (ctx) => listShoots(ctx) }))
-  router.post('/shoots', endpoint({ body: createShootSchema, response: createdShootSchema, handle: (ctx, { body }) => createShoot(ctx, body) }))
-  router.get('/shoots/:shootId', endpoint({ params: inShoot, response: shootSchema, handle: (ctx, { params }) => getShoot(ctx, params.shootId) }))
-  router.delete('/shoots/:shootId', endpoint({ params: inShoot, handle: (ctx, { params }) => removeShoot(ctx, params.shootId) }))
+  router.post(
+    '/shoots',
+    endpoint({
+      body: createShootSchema,
+      response: createdShootSchema,
+      handle: (ctx, { body }) => createShoot(ctx, body),
+    }),
+  )
+  router.get(
+    '/shoots/:shootId',
+    endpoint({ params: inShoot, response: shootSchema, handle: (ctx, { params }) => getShoot(ctx, params.shootId) }),
+  )
+  router.delete(
+    '/shoots/:shootId',
+    endpoint({ params: inShoot, handle: (ctx, { params }) => removeShoot(ctx, params.shootId) }),
+  )
 
   router.patch(
     '/shoots/:shootId/brief',
-    endpoint({ params: inShoot, body: briefPatchSchema, response, handle: async (ctx, { params, body }) => ({ brief: await updateBrief(ctx, { ...params, patch: body }) }) }),
+    endpoint({
+      params: inShoot,
+      body: briefPatchSchema,
+      response,
+      handle: async (ctx, { params, body }) => ({ brief: await updateBrief(ctx, { ...params, patch: body }) }),
+    }),
   )
   router.put(
     '/shoots/:shootId/location',
-    endpoint({ params: inShoot, body: locationInputSchema, response, handle: async (ctx, { params, body }) => ({ brief: await setLocation(ctx, { ...params, location: body }) }) }),
+    endpoint({
+      params: inShoot,
+      body: locationInputSchema,
+      response,
+      handle: async (ctx, { params, body }) => ({ brief: await setLocation(ctx, { ...params, location: body }) }),
+    }),
   )
 
   router.post(
     '/shoots/:shootId/rooms',
-    endpoint({ params: inShoot, body: roomBodySchema, response, handle: async (ctx, { params, body }) => ({ brief: await addRoom(ctx, { ...params, room: body }) }) }),
+    endpoint({
+      params: inShoot,
+      body: roomBodySchema,
+      response,
+      handle: async (ctx, { params, body }) => ({ brief: await addRoom(ctx, { ...params, room: body }) }),
+    }),
   )
   router.put(
     '/shoots/:shootId/rooms/:roomId',
-    endpoint({ params: ofRoom, body: roomBodySchema, response, handle: async (ctx, { params, body }) => ({ brief: await updateRoom(ctx, { ...params, room: body }) }) }),
+    endpoint({
+      params: ofRoom,
+      body: roomBodySchema,
+      response,
+      handle: async (ctx, { params, body }) => ({ brief: await updateRoom(ctx, { ...params, room: body }) }),
+    }),
   )
-  router.delete('/shoots/:shootId/rooms/:roomId', endpoint({ params: ofRoom, response, handle: async (ctx, { params }) => ({ brief: await removeRoom(ctx, params) }) }))
+  router.delete(
+    '/shoots/:shootId/rooms/:roomId',
+    endpoint({
+      params: ofRoom,
+      response,
+      handle: async (ctx, { params }) => ({ brief: await removeRoom(ctx, params) }),
+    }),
+  )
 
   router.post(
     '/shoots/:shootId/deliverables',
-    endpoint({ params: inShoot, body: deliverableBodySchema, response, handle: async (ctx, { params, body }) => ({ brief: await addDeliverable(ctx, { ...params, deliverable: body }) }) }),
+    endpoint({
+      params: inShoot,
+      body: deliverableBodySchema,
+      response,
+      handle: async (ctx, { params, body }) => ({ brief: await addDeliverable(ctx, { ...params, deliverable: body }) }),
+    }),
   )
   router.put(
     '/shoots/:shootId/deliverables/:deliverableId',
@@ -67,12 +112,18 @@ export function shootsRoutes(): Router {
       params: ofDeliverable,
       body: deliverableBodySchema,
       response,
-      handle: async (ctx, { params, body }) => ({ brief: await updateDeliverable(ctx, { ...params, deliverable: body }) }),
+      handle: async (ctx, { params, body }) => ({
+        brief: await updateDeliverable(ctx, { ...params, deliverable: body }),
+      }),
     }),
   )
   router.delete(
     '/shoots/:shootId/deliverables/:deliverableId',
-    endpoint({ params: ofDeliverable, response, handle: async (ctx, { params }) => ({ brief: await removeDeliverable(ctx, params) }) }),
+    endpoint({
+      params: ofDeliverable,
+      response,
+      handle: async (ctx, { params }) => ({ brief: await removeDeliverable(ctx, params) }),
+    }),
   )
   return router
 }

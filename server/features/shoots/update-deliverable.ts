@@ -19,7 +19,10 @@ export async function updateDeliverable(
     .where(and(eq(deliverable.shootId, input.shootId), eq(deliverable.id, input.deliverableId)))
     .returning({ id: deliverable.id })
   if (changed.length === 0) {
-    throw new AppError('NOT_FOUND', 'This deliverable is gone; somebody took it out. Nothing was changed; add it again if it is needed.')
+    throw new AppError(
+      'NOT_FOUND',
+      'This deliverable is gone; somebody took it out. Nothing was changed; add it again if it is needed.',
+    )
   }
   ctx.documents.announce(input.shootId, [['shoots', input.shootId], ['shoots']])
   return getBrief(ctx.db, input.shootId)

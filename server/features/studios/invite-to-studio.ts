@@ -11,7 +11,15 @@ import { invitation } from '#server/db/schema/people.ts'
 import { AppError } from '#server/errors.ts'
 import { invitationLetter } from '#server/features/mail/letters.ts'
 import { queueLetter } from '#server/features/mail/queue-letter.ts'
-import { INVITATION_DAYS, expiryFrom, findPersonByEmail, findWaiting, joinUrl, newToken, titleOf } from '#server/features/people/invitation-rows.ts'
+import {
+  INVITATION_DAYS,
+  expiryFrom,
+  findPersonByEmail,
+  findWaiting,
+  joinUrl,
+  newToken,
+  titleOf,
+} from '#server/features/people/invitation-rows.ts'
 import { listStudioPeople } from './list-studio-people.ts'
 import { lockStudio } from './studio-rows.ts'
 
@@ -21,7 +29,10 @@ import { lockStudio } from './studio-rows.ts'
  *
  * @throws SIGNED_OUT, NOT_FOUND, FORBIDDEN; CONFLICT when the address belongs to somebody in the studio
  */
-export async function inviteToStudio(ctx: Ctx, { studioId, ...input }: z.output<typeof studioInvitationInputSchema> & { studioId: StudioId }): Promise<StudioPeople> {
+export async function inviteToStudio(
+  ctx: Ctx,
+  { studioId, ...input }: z.output<typeof studioInvitationInputSchema> & { studioId: StudioId },
+): Promise<StudioPeople> {
   const { actor } = await requireStudio(ctx, studioId, 'members.write')
   const email = input.email.toLowerCase()
   const at = ctx.now()
@@ -35,11 +46,29 @@ export async function inviteToStudio(ctx: Ctx, { studioId, ...input }: z.output<
     const waiting = await findWaiting(tx, { studioId }, email)
     if (waiting) await tx.update(invitation).set({ revokedAt: at }).where(eq(invitation.id, waiting.id))
     const id = invitationIdSchema.parse(randomUUID())
-    await tx.insert(invitation).values({ id, studioId, email, role: input.role, tokenHash, invitedBy: actor.userId, sentAt: at, expiresAt: expiryFrom(at) })
+    await tx.insert(invitation).values({
+      id,
+      studioId,
+      email,
+      role: input.role,
+      tokenHash,
+      invitedBy: actor.userId,
+      sentAt: at,
+      expiresAt: expiryFrom(at),
+    })
     const { title } = await titleOf(tx, { shootId: null, studioId })
     await queueLetter(
       tx,
-      invitationLetter({ to: email, name: person?.name ?? '', inviter: actor.name, title, role: input.role, kind: 'studio', url: joinUrl(ctx.publicUrl, token), days: INVITATION_DAYS }),
+      invitationLetter({
+        to: email,
+        name: person?.name ?? '',
+        inviter: actor.name,
+        title,
+        role: input.role,
+        kind: 'studio',
+        url: joinUrl(ctx.publicUrl, token),
+        days: INVITATION_DAYS,
+      }),
     )
     await audit(tx, { studioId, userId: actor.userId, what: 'invitation.sent', subject: id, at })
   })

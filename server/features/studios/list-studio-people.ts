@@ -21,13 +21,28 @@ export async function listStudioPeople(ctx: Ctx, studioId: StudioId): Promise<St
     .orderBy(desc(studioMember.role), asc(user.name), asc(user.id))
   const rows = canInStudio(role, 'members.write')
     ? await ctx.db
-        .select({ id: invitation.id, email: invitation.email, role: invitation.role, sentAt: invitation.sentAt, expiresAt: invitation.expiresAt })
+        .select({
+          id: invitation.id,
+          email: invitation.email,
+          role: invitation.role,
+          sentAt: invitation.sentAt,
+          expiresAt: invitation.expiresAt,
+        })
         .from(invitation)
         .where(and(eq(invitation.studioId, studioId), isNull(invitation.acceptedAt), isNull(invitation.revokedAt)))
         .orderBy(desc(invitation.sentAt))
     : []
   return {
-    people: members.map((member) => ({ ...member, initials: initialsOf(member.name), colour: colourOf(member.userId) })),
-    invitations: rows.map(({ sentAt, expiresAt, ...row }) => ({ ...row, role: studioRoleFrom(row.role), sentAtMs: sentAt.getTime(), expiresAtMs: expiresAt.getTime() })),
+    people: members.map((member) => ({
+      ...member,
+      initials: initialsOf(member.name),
+      colour: colourOf(member.userId),
+    })),
+    invitations: rows.map(({ sentAt, expiresAt, ...row }) => ({
+      ...row,
+      role: studioRoleFrom(row.role),
+      sentAtMs: sentAt.getTime(),
+      expiresAtMs: expiresAt.getTime(),
+    })),
   }
 }

@@ -6,6 +6,9 @@ import { minutesDefault } from '#server/db/schema/studios.ts'
 
 /** A studio's own minutes; the common ones for what it never set. */
 export async function loadMinutes(db: Db | Tx, studioId: StudioId): Promise<Minutes> {
-  const [row] = await db.select({ minutes: minutesDefault.minutes }).from(minutesDefault).where(eq(minutesDefault.studioId, studioId))
+  const [row] = await db
+    .select({ minutes: minutesDefault.minutes })
+    .from(minutesDefault)
+    .where(eq(minutesDefault.studioId, studioId))
   return minutesSchema.parse(row?.minutes ?? {})
 }

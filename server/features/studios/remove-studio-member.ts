@@ -13,7 +13,10 @@ import { lockStudio, requireAnotherOwner } from './studio-rows.ts'
  *
  * @throws SIGNED_OUT, NOT_FOUND, FORBIDDEN; CONFLICT for the last owner
  */
-export async function removeStudioMember(ctx: Ctx, { studioId, userId }: { studioId: StudioId; userId: UserId }): Promise<void> {
+export async function removeStudioMember(
+  ctx: Ctx,
+  { studioId, userId }: { studioId: StudioId; userId: UserId },
+): Promise<void> {
   const isLeaving = ctx.actor?.userId === userId
   const { actor } = await requireStudio(ctx, studioId, isLeaving ? 'studio.read' : 'members.write')
   await withTransaction(ctx.db, async (tx) => {
@@ -22,6 +25,12 @@ export async function removeStudioMember(ctx: Ctx, { studioId, userId }: { studi
     if (!before) return
     if (before === 'owner') await requireAnotherOwner(tx, studioId, userId)
     await tx.delete(studioMember).where(and(eq(studioMember.studioId, studioId), eq(studioMember.userId, userId)))
-    await audit(tx, { studioId, userId: actor.userId, what: isLeaving ? 'person.left' : 'person.removed', subject: userId, at: ctx.now() })
+    await audit(tx, {
+      studioId,
+      userId: actor.userId,
+      what: isLeaving ? 'person.left' : 'person.removed',
+      subject: userId,
+      at: ctx.now(),
+    })
   })
 }

@@ -1,8 +1,10 @@
 import { and, count, eq, ne } from 'drizzle-orm'
-import type { StudioId, UserId } from '#shared/ids.ts'
+import type { ShootId, StudioId, UserId } from '#shared/ids.ts'
 import type { StudioRole } from '#shared/access/roles.ts'
 import type { Studio } from '#shared/api/studios.ts'
+import type { Ctx } from '#server/context.ts'
 import type { Db, Tx } from '#server/db/client.ts'
+import { shoot } from '#server/db/schema/shoots.ts'
 import { studio, studioMember } from '#server/db/schema/studios.ts'
 import { AppError } from '#server/errors.ts'
 
@@ -27,6 +29,19 @@ export async function requireAnotherOwner(tx: Tx, studioId: StudioId, besides: U
     .where(and(eq(studioMember.studioId, studioId), eq(studioMember.role, 'owner'), ne(studioMember.userId, besides)))
     .limit(1)
   if (others.length === 0) {
-    throw new AppError('CONFLICT', 'A studio needs an owner, and this is the only one. Nothing was changed; make somebody else owner first.')
+    throw new AppError(
+      'CONFLICT',
+      'A studio needs an owner, and this is the only one. Nothing was changed; make somebody else owner first.',
+    )
   }
+}
+
+/** Tells everyone who has one of the studio's shoots open that these query keys changed; call it after the commit. */
+export async function announceToStudio(
+  ctx: Ctx,
+  studioId: StudioId,
+  keysOf: (shootId: ShootId) => readonly (readonly string[])[],
+): Promise<void> {
+  const shoots = await ctx.db.select({ id: shoot.id }).from(shoot).where(eq(shoot.studioId, studioId))
+  for (const { id } of shoots) ctx.documents.announce(id, keysOf(id))
 }

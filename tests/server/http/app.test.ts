@@ -75,30 +75,48 @@ describe('the headers', () => {
 })
 
 describe('a change', () => {
-  it.each([{ origin: 'https://elsewhere.example' }, { origin: 'null' }, { origin: '' }])('is refused from $origin', async (headers) => {
-    for (const [method, path] of [['POST', '/api/studios'], ['DELETE', `/api/shoots/${world.shootId}`], ['POST', '/api/auth/sign-out']] as const) {
-      const answer = await lead.send(method, path, { name: 'x' }, headers)
-      expect([path, answer.status]).toEqual([path, 403])
-      expect(refusal(answer.body)).toMatchObject({ code: 'WRONG_ORIGIN', message: expect.stringContaining('nothing was changed') })
-    }
-    expect((await lead.get(`/api/shoots/${world.shootId}`)).status).toBe(200)
-  })
+  it.each([{ origin: 'https://elsewhere.example' }, { origin: 'null' }, { origin: '' }])(
+    'is refused from $origin',
+    async (headers) => {
+      for (const [method, path] of [
+        ['POST', '/api/studios'],
+        ['DELETE', `/api/shoots/${world.shootId}`],
+        ['POST', '/api/auth/sign-out'],
+      ] as const) {
+        const answer = await lead.send(method, path, { name: 'x' }, headers)
+        expect([path, answer.status]).toEqual([path, 403])
+        expect(refusal(answer.body)).toMatchObject({
+          code: 'WRONG_ORIGIN',
+          message: expect.stringContaining('nothing was changed'),
+        })
+      }
+      expect((await lead.get(`/api/shoots/${world.shootId}`)).status).toBe(200)
+    },
+  )
 })
 
 describe('what is sent', () => {
   it('is refused when it is not JSON, in a sentence', async () => {
     const broken = await lead.send('POST', '/api/studios', '{"name":', { 'content-type': 'application/json' })
-    const plain = await lead.send('POST', '/api/studios', 'name=Harbour', { 'content-type': 'application/x-www-form-urlencoded' })
+    const plain = await lead.send('POST', '/api/studios', 'name=Harbour', {
+      'content-type': 'application/x-www-form-urlencoded',
+    })
     for (const answer of [broken, plain]) {
       expect(answer.status).toBe(400)
-      expect(refusal(answer.body)).toEqual({ code: 'NOT_JSON', message: 'What was sent is not JSON. Nothing was changed.' })
+      expect(refusal(answer.body)).toEqual({
+        code: 'NOT_JSON',
+        message: 'What was sent is not JSON. Nothing was changed.',
+      })
     }
   })
 
   it('is refused above 1 MB', async () => {
     const answer = await lead.send('POST', '/api/studios', { name: 'x'.repeat(1_100_000) })
     expect(answer.status).toBe(413)
-    expect(refusal(answer.body)).toEqual({ code: 'TOO_LARGE', message: 'This is more than one request may carry (1 MB). Nothing was changed.' })
+    expect(refusal(answer.body)).toEqual({
+      code: 'TOO_LARGE',
+      message: 'This is more than one request may carry (1 MB). Nothing was changed.',
+    })
   })
 
   it('is refused in another encoding than UTF-8', async () => {
@@ -107,11 +125,21 @@ describe('what is sent', () => {
   })
 
   it('comes back with every issue and its path', async () => {
-    const answer = await lead.send('PUT', `/api/shoots/${world.shootId}/location`, { name: 7, latitude: 91, longitude: 'east' })
+    const answer = await lead.send('PUT', `/api/shoots/${world.shootId}/location`, {
+      name: 7,
+      latitude: 91,
+      longitude: 'east',
+    })
     expect(answer.status).toBe(400)
     expect(refusal(answer.body).code).toBe('BAD_REQUEST')
-    expect(refusal(answer.body).message).toBe('Some of what was sent does not fit. Nothing was changed; see what is marked.')
-    expect(refusal(answer.body).issues?.map(({ path }) => path).sort()).toEqual(['latitude', 'longitude', 'name'])
+    expect(refusal(answer.body).message).toBe(
+      'Some of what was sent does not fit. Nothing was changed; see what is marked.',
+    )
+    expect(
+      refusal(answer.body)
+        .issues?.map(({ path }) => path)
+        .sort(),
+    ).toEqual(['latitude', 'longitude', 'name'])
     const none = await lead.send('POST', '/api/studios')
     expect([none.status, refusal(none.body).code]).toEqual([400, 'BAD_REQUEST'])
     const list = await lead.send('POST', '/api/studios', [1])
@@ -119,14 +147,23 @@ describe('what is sent', () => {
   })
 
   it('names the place inside what was sent', async () => {
-    const answer = await lead.send('PUT', `/api/shoots/${world.shootId}/piece-costs/${world.shootId}`, { cost: { minor: -1, currency: 'pounds' } })
-    expect(refusal(answer.body).issues?.map(({ path }) => path).sort()).toEqual(['cost.currency', 'cost.minor'])
+    const answer = await lead.send('PUT', `/api/shoots/${world.shootId}/piece-costs/${world.shootId}`, {
+      cost: { minor: -1, currency: 'pounds' },
+    })
+    expect(
+      refusal(answer.body)
+        .issues?.map(({ path }) => path)
+        .sort(),
+    ).toEqual(['cost.currency', 'cost.minor'])
   })
 
   it('may not hold a character that the database cannot', async () => {
     const answer = await lead.send('PATCH', `/api/shoots/${world.shootId}/brief`, { idea: 'a\u0000b' })
     expect(answer.status).toBe(400)
-    expect(refusal(answer.body)).toMatchObject({ code: 'BAD_REQUEST', message: expect.stringContaining('a character that cannot be kept') })
+    expect(refusal(answer.body)).toMatchObject({
+      code: 'BAD_REQUEST',
+      message: expect.stringContaining('a character that cannot be kept'),
+    })
   })
 })
 
@@ -144,11 +181,24 @@ describe('an id', () => {
     const stranger = await app.clientOf(other.photographer)
     const shoot = await stranger.get(`/api/shoots/${world.shootId}`)
     expect(shoot.status).toBe(404)
-    expect(refusal(shoot.body)).toEqual({ code: 'NOT_FOUND', message: 'There is no such shoot, or you do not belong to it.' })
+    expect(refusal(shoot.body)).toEqual({
+      code: 'NOT_FOUND',
+      message: 'There is no such shoot, or you do not belong to it.',
+    })
     const room = await stranger.send('PUT', `/api/shoots/${other.shootId}/rooms/${world.shootId}`, { name: 'x' })
-    expect(refusal(room.body)).toMatchObject({ code: 'NOT_FOUND', message: expect.stringContaining('This room is gone') })
-    const studio = await stranger.send('POST', '/api/shoots', { studioId: world.studioId, title: 'x', zone: 'Europe/London' })
-    expect(refusal(studio.body)).toEqual({ code: 'NOT_FOUND', message: 'There is no such studio, or you do not belong to it.' })
+    expect(refusal(room.body)).toMatchObject({
+      code: 'NOT_FOUND',
+      message: expect.stringContaining('This room is gone'),
+    })
+    const studio = await stranger.send('POST', '/api/shoots', {
+      studioId: world.studioId,
+      title: 'x',
+      zone: 'Europe/London',
+    })
+    expect(refusal(studio.body)).toEqual({
+      code: 'NOT_FOUND',
+      message: 'There is no such studio, or you do not belong to it.',
+    })
   })
 
   it('is taken in capitals too', async () => {
@@ -163,10 +213,24 @@ describe('too many', () => {
       const { photographer, shootId } = await makeWorld(strict)
       const client = await strict.clientOf(photographer)
       const statuses: number[] = []
-      for (const name of ['a', 'b', 'c']) statuses.push((await client.send('POST', `/api/shoots/${shootId}/invitations`, { email: `${name}@example.com`, role: 'crew' })).status)
+      for (const name of ['a', 'b', 'c'])
+        statuses.push(
+          (
+            await client.send('POST', `/api/shoots/${shootId}/invitations`, {
+              email: `${name}@example.com`,
+              role: 'crew',
+            })
+          ).status,
+        )
       expect(statuses).toEqual([200, 200, 429])
-      const answer = await client.send('POST', `/api/shoots/${shootId}/invitations`, { email: 'd@example.com', role: 'crew' })
-      expect(refusal(answer.body)).toEqual({ code: 'TOO_MANY', message: 'That is a great many invitations at once. Wait a minute and try again; nothing was changed.' })
+      const answer = await client.send('POST', `/api/shoots/${shootId}/invitations`, {
+        email: 'd@example.com',
+        role: 'crew',
+      })
+      expect(refusal(answer.body)).toEqual({
+        code: 'TOO_MANY',
+        message: 'That is a great many invitations at once. Wait a minute and try again; nothing was changed.',
+      })
       expect(Number(answer.headers.get('retry-after'))).toBeGreaterThan(0)
     } finally {
       await strict.close()

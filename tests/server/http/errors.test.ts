@@ -18,23 +18,33 @@ function failing(error: unknown): { app: express.Express; lines: string[] } {
 
 describe('errorHandler', () => {
   it.each(ERROR_CODES)('answers %s with its status and the one envelope', async (code) => {
-    const { app } = failing(new AppError(code, 'A sentence.', { issues: [{ path: 'a', message: 'b' }], details: { c: 1 } }))
+    const { app } = failing(
+      new AppError(code, 'A sentence.', { issues: [{ path: 'a', message: 'b' }], details: { c: 1 } }),
+    )
     const answer = await request(app).get('/things/1')
     expect(answer.status).toBe(STATUS[code])
-    expect(answer.body).toEqual({ error: { code, message: 'A sentence.', issues: [{ path: 'a', message: 'b' }], details: { c: 1 } } })
+    expect(answer.body).toEqual({
+      error: { code, message: 'A sentence.', issues: [{ path: 'a', message: 'b' }], details: { c: 1 } },
+    })
   })
 
   it('tells nothing of what is not for people, and puts the cause into the log', async () => {
     const { app, lines } = failing(new Error('relation "secret_table" does not exist'))
     const answer = await request(app).get('/things/1?email=rosa@example.com')
     expect(answer.status).toBe(500)
-    expect(answer.body).toEqual({ error: { code: 'INTERNAL', message: 'Something went wrong on our side. Nothing was changed; try again.' } })
+    expect(answer.body).toEqual({
+      error: { code: 'INTERNAL', message: 'Something went wrong on our side. Nothing was changed; try again.' },
+    })
     expect(lines.join('')).toContain('secret_table')
     expect(lines.join('')).not.toContain('rosa@example.com')
   })
 
   it('keeps what people typed out of the log when a query fails', async () => {
-    const failure = Object.assign(new Error('Failed query: insert … params: rosa@example.com'), { query: 'insert into "user"', params: ['rosa@example.com'], cause: Object.assign(new Error('value too long'), { code: '22001' }) })
+    const failure = Object.assign(new Error('Failed query: insert … params: rosa@example.com'), {
+      query: 'insert into "user"',
+      params: ['rosa@example.com'],
+      cause: Object.assign(new Error('value too long'), { code: '22001' }),
+    })
     const { app, lines } = failing(failure)
     await request(app).get('/things/1')
     expect(lines.join('')).toContain('22001')

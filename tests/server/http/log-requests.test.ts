@@ -7,7 +7,10 @@ describe('pathWithoutTokens', () => {
     ['/join/abcDEF_-123', '/join/…'],
     ['/link/abcDEF_-123?x=1', '/link/…'],
     ['/sign-in?letter=abcDEF', '/sign-in'],
-    ['/api/shoots/6072f48f-8394-4118-9865-53c729706f8b/invitations/79d2dcb0-b576-4735-b5ac-0139f75d602d/resend', '/api/shoots/6072f48f-8394-4118-9865-53c729706f8b/invitations/79d2dcb0-b576-4735-b5ac-0139f75d602d/resend'],
+    [
+      '/api/shoots/6072f48f-8394-4118-9865-53c729706f8b/invitations/79d2dcb0-b576-4735-b5ac-0139f75d602d/resend',
+      '/api/shoots/6072f48f-8394-4118-9865-53c729706f8b/invitations/79d2dcb0-b576-4735-b5ac-0139f75d602d/resend',
+    ],
   ])('makes of %s %s', (url, path) => {
     expect(pathWithoutTokens(url)).toBe(path)
   })

@@ -19,7 +19,8 @@ beforeEach(async () => {
   world = await makeWorld(app)
 })
 const subjectId = '0f4f0a0e-51a4-4a3c-8f0e-6f1f0b6f9d11'
-const say = (actor: World['client'], text: string) => addComment(app.ctxOf(actor), { shootId: world.shootId, subject: 'frame', subjectId, text })
+const say = (actor: World['client'], text: string) =>
+  addComment(app.ctxOf(actor), { shootId: world.shootId, subject: 'frame', subjectId, text })
 
 describe('addComment', () => {
   it('is the last of the list, with who and when, and screens hear of it', async () => {
@@ -31,7 +32,9 @@ describe('addComment', () => {
       ['Cleo Marsh', 'CM', 'Warmer?', clock.now().getTime() - 1000],
       ['Cy Dorn', 'CD', 'A quarter cut', clock.now().getTime()],
     ])
-    expect(app.documents.announced).toEqual([{ shootId: world.shootId, queryKeys: [['shoots', world.shootId, 'comments']] }])
+    expect(app.documents.announced).toEqual([
+      { shootId: world.shootId, queryKeys: [['shoots', world.shootId, 'comments']] },
+    ])
   })
 })
 
@@ -39,7 +42,9 @@ describe('listComments', () => {
   it('keeps the words and the name of who left the shoot', async () => {
     await say(world.client, 'Lovely')
     await removePerson(app.ctxOf(world.client), { shootId: world.shootId, userId: world.client.userId })
-    expect((await listComments(app.ctxOf(world.crew), world.shootId)).comments).toMatchObject([{ name: 'Cleo Marsh', text: 'Lovely' }])
+    expect((await listComments(app.ctxOf(world.crew), world.shootId)).comments).toMatchObject([
+      { name: 'Cleo Marsh', text: 'Lovely' },
+    ])
   })
 })
 
@@ -48,7 +53,10 @@ describe('removeComment', () => {
     const { comments } = await say(world.client, 'Oh')
     const commentId = comments[0]?.id ?? commentIdSchema.parse('')
     const remove = (actor: World['client']) => removeComment(app.ctxOf(actor), { shootId: world.shootId, commentId })
-    await expect(remove(world.photographer)).rejects.toMatchObject({ code: 'FORBIDDEN', message: 'This comment is somebody else’s, so it stays. Only who wrote it can take it back.' })
+    await expect(remove(world.photographer)).rejects.toMatchObject({
+      code: 'FORBIDDEN',
+      message: 'This comment is somebody else’s, so it stays. Only who wrote it can take it back.',
+    })
     expect(await remove(world.client)).toEqual({ comments: [] })
     expect(await remove(world.client)).toEqual({ comments: [] })
   })

@@ -29,7 +29,13 @@ beforeEach(async () => {
   if (!first) throw new Error('the starter kit is not empty')
   item = first
 })
-const update = (version: number, name: string, by = ctx) => updateKitItem(by, { studioId: world.studioId, kitId: item.id, version, input: kitInputSchema.parse({ ...item, name }) })
+const update = (version: number, name: string, by = ctx) =>
+  updateKitItem(by, {
+    studioId: world.studioId,
+    kitId: item.id,
+    version,
+    input: kitInputSchema.parse({ ...item, name }),
+  })
 
 describe('listKit', () => {
   it('is the newest version of each item, by name', async () => {
@@ -37,7 +43,9 @@ describe('listKit', () => {
     const { kit } = await listKit(ctx, world.studioId)
     expect(kit).toHaveLength(STARTER_KIT.length)
     expect(kit.find(({ id }) => id === item.id)).toMatchObject({ name: 'A renamed thing', version: 2 })
-    expect(kit.map(({ name }) => name)).toEqual(kit.map(({ name }) => name).sort((a, b) => a.localeCompare(b, 'en', { numeric: true })))
+    expect(kit.map(({ name }) => name)).toEqual(
+      kit.map(({ name }) => name).sort((a, b) => a.localeCompare(b, 'en', { numeric: true })),
+    )
   })
 })
 
@@ -46,16 +54,29 @@ describe('listShootKit', () => {
     for (const actor of [world.photographer, world.stylist, world.client, world.crew]) {
       expect(await listShootKit(app.ctxOf(actor), world.shootId)).toEqual(await listKit(ctx, world.studioId))
     }
-    await expect(listShootKit(app.ctxOf(world.studioMember), world.shootId)).rejects.toMatchObject({ code: 'NOT_FOUND' })
+    await expect(listShootKit(app.ctxOf(world.studioMember), world.shootId)).rejects.toMatchObject({
+      code: 'NOT_FOUND',
+    })
   })
 })
 
 describe('addKitItem', () => {
   it('puts it in as version 1 and tells the studio’s shoots', async () => {
     app.documents.announced.length = 0
-    const { kit } = await addKitItem(app.ctxOf(world.studioMember), { studioId: world.studioId, input: kitInputSchema.parse({ ...item, name: 'Zip ties' }) })
+    const { kit } = await addKitItem(app.ctxOf(world.studioMember), {
+      studioId: world.studioId,
+      input: kitInputSchema.parse({ ...item, name: 'Zip ties' }),
+    })
     expect(kit.at(-1)).toMatchObject({ name: 'Zip ties', version: 1 })
-    expect(app.documents.announced).toEqual([{ shootId: world.shootId, queryKeys: [['shoots', world.shootId, 'kit'], ['studios', world.studioId, 'kit']] }])
+    expect(app.documents.announced).toEqual([
+      {
+        shootId: world.shootId,
+        queryKeys: [
+          ['shoots', world.shootId, 'kit'],
+          ['studios', world.studioId, 'kit'],
+        ],
+      },
+    ])
   })
 })
 
@@ -64,15 +85,26 @@ describe('updateKitItem', () => {
     await update(1, 'Once')
     await update(2, 'Twice')
     const rows = await app.db.select().from(kitItem).where(eq(kitItem.id, item.id)).orderBy(asc(kitItem.version))
-    expect(rows.map(({ version, input }) => [version, input.name])).toEqual([[1, item.name], [2, 'Once'], [3, 'Twice']])
+    expect(rows.map(({ version, input }) => [version, input.name])).toEqual([
+      [1, item.name],
+      [2, 'Once'],
+      [3, 'Twice'],
+    ])
   })
 
   it('refuses an editor who saw an older version and shows the newer one', async () => {
     await update(1, 'Hers')
-    await expect(update(1, 'His', app.ctxOf(world.studioMember))).rejects.toMatchObject({ code: 'CONFLICT', message: expect.stringContaining('what you typed is still here'), details: { item: { id: item.id, name: 'Hers', version: 2 } } })
+    await expect(update(1, 'His', app.ctxOf(world.studioMember))).rejects.toMatchObject({
+      code: 'CONFLICT',
+      message: expect.stringContaining('what you typed is still here'),
+      details: { item: { id: item.id, name: 'Hers', version: 2 } },
+    })
     const client = await app.clientOf(world.studioMember)
     const answer = await client.send('PUT', `/api/studios/${world.studioId}/kit/${item.id}`, { ...item, version: 1 })
-    expect([answer.status, answer.body]).toMatchObject([409, { error: { code: 'CONFLICT', details: { item: { name: 'Hers', version: 2 } } } }])
+    expect([answer.status, answer.body]).toMatchObject([
+      409,
+      { error: { code: 'CONFLICT', details: { item: { name: 'Hers', version: 2 } } } },
+    ])
   })
 
   it('lets one of two who save at the same time through', async () => {
@@ -84,7 +116,9 @@ describe('updateKitItem', () => {
     const other = await makeWorld(app)
     const [theirs] = (await listKit(app.ctxOf(other.photographer), other.studioId)).kit
     const kitId = theirs?.id ?? kitItemIdSchema.parse('')
-    await expect(updateKitItem(ctx, { studioId: world.studioId, kitId, version: 1, input: kitInputSchema.parse(item) })).rejects.toMatchObject({ code: 'NOT_FOUND' })
+    await expect(
+      updateKitItem(ctx, { studioId: world.studioId, kitId, version: 1, input: kitInputSchema.parse(item) }),
+    ).rejects.toMatchObject({ code: 'NOT_FOUND' })
   })
 })
 
@@ -94,6 +128,9 @@ describe('removeKitItem', () => {
     expect((await remove()).kit.map(({ id }) => id)).not.toContain(item.id)
     await remove()
     expect(await app.db.select().from(kitItem).where(eq(kitItem.id, item.id))).toHaveLength(2)
-    await expect(update(2, 'Back')).rejects.toMatchObject({ code: 'NOT_FOUND', message: expect.stringContaining('taken out of the kit') })
+    await expect(update(2, 'Back')).rejects.toMatchObject({
+      code: 'NOT_FOUND',
+      message: expect.stringContaining('taken out of the kit'),
+    })
   })
 })

@@ -32,14 +32,27 @@ afterEach(async () => {
 })
 
 const LONG_URL = `https://sconce.example/join/${'aB3_-'.repeat(24)}`
-const about = { to: 'gwen@example.com', name: 'Gwen', inviter: 'Pia Lund', title: 'Salt and Linen', role: 'client', kind: 'shoot' as const, url: LONG_URL, days: 7 }
+const about = {
+  to: 'gwen@example.com',
+  name: 'Gwen',
+  inviter: 'Pia Lund',
+  title: 'Salt and Linen',
+  role: 'client',
+  kind: 'shoot' as const,
+  url: LONG_URL,
+  days: 7,
+}
 const settings = { now: clock.now, keepsText: true }
 const refusing: Mailer = { send: () => Promise.reject(new Error('mailbox on fire')), close: () => undefined }
 const rows = () => app.db.select().from(mail)
 
 describe('invitationLetter', () => {
   it('escapes in its HTML what people typed', () => {
-    const letter = invitationLetter({ ...about, inviter: '<img src=x onerror=alert(1)>', title: '"Tea" & <b>Stars</b>' })
+    const letter = invitationLetter({
+      ...about,
+      inviter: '<img src=x onerror=alert(1)>',
+      title: '"Tea" & <b>Stars</b>',
+    })
     expect(letter.html).not.toContain('<img')
     expect(letter.html).not.toContain('<b>')
     expect(letter.html).toContain('&quot;Tea&quot; &amp; &lt;b&gt;Stars&lt;/b&gt;')
@@ -60,7 +73,10 @@ describe('invitationLetter', () => {
 
 describe('signInLetter and resetLetter', () => {
   it('carry one link each and say how long it works', () => {
-    for (const [letter, time] of [[signInLetter(about), '15 minutes'], [resetLetter(about), 'an hour']] as const) {
+    for (const [letter, time] of [
+      [signInLetter(about), '15 minutes'],
+      [resetLetter(about), 'an hour'],
+    ] as const) {
       expect(letter.text.match(/https?:\/\/\S+/g)).toEqual([LONG_URL])
       expect(letter.text).toContain(time)
     }
@@ -122,16 +138,28 @@ describe('sendDue', () => {
   it('gives each letter to one process when several look', async () => {
     for (let i = 0; i < 6; i++) await queueLetter(app.db, signInLetter({ ...about, to: `several.${i}@example.com` }))
     const sent: string[] = []
-    const slow: Mailer = { send: async ({ to }) => { sent.push(to); await new Promise((resolve) => setTimeout(resolve, 20)) }, close: () => undefined }
-    await Promise.all([1, 2, 3].map(async () => { while (await sendDue(app.db, slow, settings)) continue }))
+    const slow: Mailer = {
+      send: async ({ to }) => {
+        sent.push(to)
+        await new Promise((resolve) => setTimeout(resolve, 20))
+      },
+      close: () => undefined,
+    }
+    await Promise.all(
+      [1, 2, 3].map(async () => {
+        while (await sendDue(app.db, slow, settings)) continue
+      }),
+    )
     expect([...sent].sort()).toEqual([0, 1, 2, 3, 4, 5].map((i) => `several.${i}@example.com`))
   })
 
   it('sends nothing of a transaction that failed', async () => {
-    await expect(app.db.transaction(async (tx) => {
-      await queueLetter(tx, signInLetter(about))
-      throw new Error('changed my mind')
-    })).rejects.toThrow('changed my mind')
+    await expect(
+      app.db.transaction(async (tx) => {
+        await queueLetter(tx, signInLetter(about))
+        throw new Error('changed my mind')
+      }),
+    ).rejects.toThrow('changed my mind')
     expect(await rows()).toEqual([])
   })
 })
@@ -141,7 +169,10 @@ describe('listLetters', () => {
     await queueLetter(app.db, signInLetter({ ...about, to: 'first@example.com' }))
     await queueLetter(app.db, signInLetter({ ...about, to: 'second@example.com' }))
     const { letters } = await listLetters(app.ctxOf())
-    expect(letters.map(({ to, links }) => [to, links])).toEqual([['second@example.com', [LONG_URL]], ['first@example.com', [LONG_URL]]])
+    expect(letters.map(({ to, links }) => [to, links])).toEqual([
+      ['second@example.com', [LONG_URL]],
+      ['first@example.com', [LONG_URL]],
+    ])
   })
 })
 
@@ -150,7 +181,9 @@ describe('startMailWorker', () => {
     await queueLetter(app.db, signInLetter(about))
     const log = pino({ level: 'silent' })
     const worker = startMailWorker({ db: app.db, mailer, now: clock.now, log, keepsText: true })
-    await vi.waitFor(async () => expect(await app.db.select().from(mail).where(isNull(mail.sentAt))).toEqual([]), { timeout: 5000 })
+    await vi.waitFor(async () => expect(await app.db.select().from(mail).where(isNull(mail.sentAt))).toEqual([]), {
+      timeout: 5000,
+    })
     await worker.stop()
     await queueLetter(app.db, signInLetter({ ...about, to: 'later@example.com' }))
     expect(await app.db.select().from(mail).where(eq(mail.to, 'later@example.com'))).toMatchObject([{ sentAt: null }])

@@ -51,8 +51,12 @@ describe('listPeople', () => {
   it('shows the crew the addresses on the newest call sheet', async () => {
     const issue = async (number: number, emails: string[]) => {
       const id = crypto.randomUUID()
-      await app.db.insert(callSheet).values({ id, shootId: world.shootId, number, content: {}, issuedBy: world.photographer.userId })
-      await app.db.insert(callSheetCopy).values(emails.map((email) => ({ id: crypto.randomUUID(), callSheetId: id, email })))
+      await app.db
+        .insert(callSheet)
+        .values({ id, shootId: world.shootId, number, content: {}, issuedBy: world.photographer.userId })
+      await app.db
+        .insert(callSheetCopy)
+        .values(emails.map((email) => ({ id: crypto.randomUUID(), callSheetId: id, email })))
     }
     await issue(1, [world.client.email])
     await issue(2, [world.stylist.email])
@@ -63,11 +67,25 @@ describe('listPeople', () => {
 
 describe('changeRole', () => {
   it('changes it, notes it, and tells sockets and screens', async () => {
-    const { people } = await changeRole(app.ctxOf(world.photographer), { shootId: world.shootId, userId: world.crew.userId, role: 'stylist' })
+    const { people } = await changeRole(app.ctxOf(world.photographer), {
+      shootId: world.shootId,
+      userId: world.crew.userId,
+      role: 'stylist',
+    })
     expect(people.find(({ userId }) => userId === world.crew.userId)).toMatchObject({ role: 'stylist' })
     expect(await told()).toEqual([{ shootId: world.shootId, userId: world.crew.userId }])
-    expect(app.documents.announced).toEqual([{ shootId: world.shootId, queryKeys: [['shoots', world.shootId, 'people'], ['shoots', world.shootId]] }])
-    expect(await app.db.select().from(auditEvent).where(eq(auditEvent.subject, world.crew.userId))).toMatchObject([{ what: 'role.stylist', userId: world.photographer.userId }])
+    expect(app.documents.announced).toEqual([
+      {
+        shootId: world.shootId,
+        queryKeys: [
+          ['shoots', world.shootId, 'people'],
+          ['shoots', world.shootId],
+        ],
+      },
+    ])
+    expect(await app.db.select().from(auditEvent).where(eq(auditEvent.subject, world.crew.userId))).toMatchObject([
+      { what: 'role.stylist', userId: world.photographer.userId },
+    ])
   })
 
   it('changes nothing and tells nobody when it is the same', async () => {
@@ -76,16 +94,34 @@ describe('changeRole', () => {
   })
 
   it('never leaves a shoot without a photographer, and says what to do', async () => {
-    const demote = () => changeRole(app.ctxOf(world.photographer), { shootId: world.shootId, userId: world.photographer.userId, role: 'crew' })
-    await expect(demote()).rejects.toMatchObject({ code: 'CONFLICT', message: expect.stringContaining('make somebody else photographer first') })
-    await changeRole(app.ctxOf(world.photographer), { shootId: world.shootId, userId: world.stylist.userId, role: 'photographer' })
+    const demote = () =>
+      changeRole(app.ctxOf(world.photographer), {
+        shootId: world.shootId,
+        userId: world.photographer.userId,
+        role: 'crew',
+      })
+    await expect(demote()).rejects.toMatchObject({
+      code: 'CONFLICT',
+      message: expect.stringContaining('make somebody else photographer first'),
+    })
+    await changeRole(app.ctxOf(world.photographer), {
+      shootId: world.shootId,
+      userId: world.stylist.userId,
+      role: 'photographer',
+    })
     expect((await demote()).people.find(({ you }) => you)).toMatchObject({ role: 'crew' })
   })
 
   it('keeps one of two photographers who step down at the same time', async () => {
-    await changeRole(app.ctxOf(world.photographer), { shootId: world.shootId, userId: world.stylist.userId, role: 'photographer' })
+    await changeRole(app.ctxOf(world.photographer), {
+      shootId: world.shootId,
+      userId: world.stylist.userId,
+      role: 'photographer',
+    })
     const both = await Promise.allSettled(
-      [world.photographer, world.stylist].map((person) => changeRole(app.ctxOf(person), { shootId: world.shootId, userId: person.userId, role: 'crew' })),
+      [world.photographer, world.stylist].map((person) =>
+        changeRole(app.ctxOf(person), { shootId: world.shootId, userId: person.userId, role: 'crew' }),
+      ),
     )
     expect(both.map(({ status }) => status).sort()).toEqual(['fulfilled', 'rejected'])
     const { people } = await listPeople(app.ctxOf(world.client), world.shootId)
@@ -93,7 +129,13 @@ describe('changeRole', () => {
   })
 
   it('does not know somebody who is not in the shoot', async () => {
-    await expect(changeRole(app.ctxOf(world.photographer), { shootId: world.shootId, userId: world.stranger.userId, role: 'crew' })).rejects.toMatchObject({ code: 'NOT_FOUND', message: expect.stringContaining('not in the shoot any more') })
+    await expect(
+      changeRole(app.ctxOf(world.photographer), {
+        shootId: world.shootId,
+        userId: world.stranger.userId,
+        role: 'crew',
+      }),
+    ).rejects.toMatchObject({ code: 'NOT_FOUND', message: expect.stringContaining('not in the shoot any more') })
   })
 })
 
@@ -102,15 +144,26 @@ describe('removePerson', () => {
     await removePerson(app.ctxOf(world.photographer), { shootId: world.shootId, userId: world.stylist.userId })
     expect(await told()).toEqual([{ shootId: world.shootId, userId: world.stylist.userId }])
     await expect(listPeople(app.ctxOf(world.stylist), world.shootId)).rejects.toMatchObject({ code: 'NOT_FOUND' })
-    expect(await app.db.select().from(auditEvent).where(eq(auditEvent.subject, world.stylist.userId))).toMatchObject([{ what: 'person.removed' }])
-    expect(await removePerson(app.ctxOf(world.photographer), { shootId: world.shootId, userId: world.stylist.userId })).toBeUndefined()
+    expect(await app.db.select().from(auditEvent).where(eq(auditEvent.subject, world.stylist.userId))).toMatchObject([
+      { what: 'person.removed' },
+    ])
+    expect(
+      await removePerson(app.ctxOf(world.photographer), { shootId: world.shootId, userId: world.stylist.userId }),
+    ).toBeUndefined()
   })
 
   it('lets anybody leave but the last photographer', async () => {
     await removePerson(app.ctxOf(world.client), { shootId: world.shootId, userId: world.client.userId })
-    expect(await app.db.select().from(auditEvent).where(eq(auditEvent.subject, world.client.userId))).toMatchObject([{ what: 'person.left' }])
-    const leave = () => removePerson(app.ctxOf(world.photographer), { shootId: world.shootId, userId: world.photographer.userId })
-    await expect(leave()).rejects.toMatchObject({ code: 'CONFLICT', message: 'A shoot needs a photographer, and this is the only one. Nothing was changed; make somebody else photographer first, or remove the whole shoot.' })
+    expect(await app.db.select().from(auditEvent).where(eq(auditEvent.subject, world.client.userId))).toMatchObject([
+      { what: 'person.left' },
+    ])
+    const leave = () =>
+      removePerson(app.ctxOf(world.photographer), { shootId: world.shootId, userId: world.photographer.userId })
+    await expect(leave()).rejects.toMatchObject({
+      code: 'CONFLICT',
+      message:
+        'A shoot needs a photographer, and this is the only one. Nothing was changed; make somebody else photographer first, or remove the whole shoot.',
+    })
     await addToShoot(app.db, world.shootId, world.stranger, 'photographer')
     await leave()
     await expect(listPeople(app.ctxOf(world.photographer), world.shootId)).rejects.toMatchObject({ code: 'NOT_FOUND' })

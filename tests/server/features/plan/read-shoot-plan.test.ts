@@ -23,10 +23,27 @@ describe('readShootPlan', () => {
     const id = crypto.randomUUID()
     await app.documents.write(shootId, 'looks', photographer.userId, (doc) => {
       putItems(doc, sitters, [{ id: sitterIdSchema.parse(id), name: 'Ada Wren' }], Math.random)
-      putItems(doc, looks, [{ id: lookIdSchema.parse(id), sitterId: sitterIdSchema.parse(id), name: 'Harbour' }], Math.random)
+      putItems(
+        doc,
+        looks,
+        [{ id: lookIdSchema.parse(id), sitterId: sitterIdSchema.parse(id), name: 'Harbour' }],
+        Math.random,
+      )
     })
     await app.documents.write(shootId, 'board', photographer.userId, (doc) => {
-      putItems(doc, shots, [{ id: shotIdSchema.parse(id), title: 'At the bollard', lookIds: [lookIdSchema.parse(id)], place: [dayIdSchema.parse(dayId), 'a0'] }], Math.random)
+      putItems(
+        doc,
+        shots,
+        [
+          {
+            id: shotIdSchema.parse(id),
+            title: 'At the bollard',
+            lookIds: [lookIdSchema.parse(id)],
+            place: [dayIdSchema.parse(dayId), 'a0'],
+          },
+        ],
+        Math.random,
+      )
       rootOf(doc, shots).set(crypto.randomUUID(), 'not a shot')
     })
     await app.documents.write(shootId, 'plan', photographer.userId, (doc) => {
@@ -37,7 +54,15 @@ describe('readShootPlan', () => {
     expect(plan.brief.title).toBe('Salt and Linen')
     expect(plan.minutes.standMove).toBeGreaterThan(0)
     expect(plan.days).toHaveLength(1)
-    expect(plan.days[0]?.shots).toMatchObject([{ number: 1, shot: { title: 'At the bollard' }, room: { name: 'Net loft' }, looks: [{ sitter: { name: 'Ada Wren' } }], missing: ['setup'] }])
+    expect(plan.days[0]?.shots).toMatchObject([
+      {
+        number: 1,
+        shot: { title: 'At the bollard' },
+        room: { name: 'Net loft' },
+        looks: [{ sitter: { name: 'Ada Wren' } }],
+        missing: ['setup'],
+      },
+    ])
   })
 
   it('is hidden from a stranger', async () => {

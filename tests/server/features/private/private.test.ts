@@ -26,10 +26,14 @@ describe('setSizes and listSizes', () => {
   it('are for those who plan', async () => {
     const { shootId } = world
     await setSizes(app.ctxOf(world.stylist), { shootId, sitterId, sizes: 'Coat 38', contact: '' })
-    expect(await setSizes(app.ctxOf(world.photographer), { shootId, sitterId, sizes: 'Coat 40', contact: 'by post' })).toEqual({ sitters: [{ sitterId, sizes: 'Coat 40', contact: 'by post' }] })
+    expect(
+      await setSizes(app.ctxOf(world.photographer), { shootId, sitterId, sizes: 'Coat 40', contact: 'by post' }),
+    ).toEqual({ sitters: [{ sitterId, sizes: 'Coat 40', contact: 'by post' }] })
     for (const actor of [world.client, world.crew]) {
       await expect(listSizes(app.ctxOf(actor), shootId)).rejects.toMatchObject(forbidden)
-      await expect(setSizes(app.ctxOf(actor), { shootId, sitterId, sizes: '', contact: '' })).rejects.toMatchObject(forbidden)
+      await expect(setSizes(app.ctxOf(actor), { shootId, sitterId, sizes: '', contact: '' })).rejects.toMatchObject(
+        forbidden,
+      )
     }
     expect((await listSizes(app.ctxOf(world.stylist), shootId)).sitters).toMatchObject([{ sizes: 'Coat 40' }])
   })
@@ -38,11 +42,17 @@ describe('setSizes and listSizes', () => {
 describe('setPieceCost and listPieceCosts', () => {
   it('keep money in minor units with its currency, or none', async () => {
     const { shootId } = world
-    const set = (cost: { minor: number; currency: string } | null) => setPieceCost(app.ctxOf(world.stylist), { shootId, pieceId, cost, deposit: null, size: '40' })
-    expect(await set({ minor: 0, currency: 'GBP' })).toEqual({ pieces: [{ pieceId, cost: { minor: 0, currency: 'GBP' }, deposit: null, size: '40' }] })
-    expect(await set({ minor: 999_999_999_999, currency: 'EUR' })).toMatchObject({ pieces: [{ cost: { minor: 999_999_999_999, currency: 'EUR' } }] })
+    const set = (cost: { minor: number; currency: string } | null) =>
+      setPieceCost(app.ctxOf(world.stylist), { shootId, pieceId, cost, deposit: null, size: '40' })
+    expect(await set({ minor: 0, currency: 'GBP' })).toEqual({
+      pieces: [{ pieceId, cost: { minor: 0, currency: 'GBP' }, deposit: null, size: '40' }],
+    })
+    expect(await set({ minor: 999_999_999_999, currency: 'EUR' })).toMatchObject({
+      pieces: [{ cost: { minor: 999_999_999_999, currency: 'EUR' } }],
+    })
     expect(await set(null)).toMatchObject({ pieces: [{ cost: null }] })
-    for (const actor of [world.client, world.crew]) await expect(listPieceCosts(app.ctxOf(actor), shootId)).rejects.toMatchObject(forbidden)
+    for (const actor of [world.client, world.crew])
+      await expect(listPieceCosts(app.ctxOf(actor), shootId)).rejects.toMatchObject(forbidden)
   })
 })
 

@@ -39,7 +39,9 @@ describe('createStudio', () => {
     const { kit } = await listKit(app.ctxOf(person), studio.id)
     expect(kit.map(({ name }) => name).sort()).toEqual(STARTER_KIT.map(({ name }) => name).sort())
     expect(await getMinutes(app.ctxOf(person), studio.id)).toEqual(DEFAULT_MINUTES)
-    expect(await app.db.select().from(auditEvent).where(eq(auditEvent.studioId, studio.id))).toMatchObject([{ what: 'studio.created', userId: person.userId }])
+    expect(await app.db.select().from(auditEvent).where(eq(auditEvent.studioId, studio.id))).toMatchObject([
+      { what: 'studio.created', userId: person.userId },
+    ])
   })
 
   it('is for people who are signed in', async () => {
@@ -51,16 +53,33 @@ describe('getSession', () => {
   it('says who one is and to which studios one belongs, by name', async () => {
     await createStudio(owner(), { name: 'Attic' })
     const session = await getSession(owner())
-    expect(session.user).toEqual({ id: world.photographer.userId, name: 'Pia Lund', email: world.photographer.email, initials: 'PL', colour: expect.stringMatching(/^#[0-9a-f]{6}$/) })
-    expect(session.studios.map(({ name, role }) => [name, role])).toEqual([['Attic', 'owner'], ['Harbour Studio', 'owner']])
+    expect(session.user).toEqual({
+      id: world.photographer.userId,
+      name: 'Pia Lund',
+      email: world.photographer.email,
+      initials: 'PL',
+      colour: expect.stringMatching(/^#[0-9a-f]{6}$/),
+    })
+    expect(session.studios.map(({ name, role }) => [name, role])).toEqual([
+      ['Attic', 'owner'],
+      ['Harbour Studio', 'owner'],
+    ])
     expect((await getSession(app.ctxOf(world.client))).studios).toEqual([])
   })
 })
 
 describe('renameStudio', () => {
   it('renames it for owners only', async () => {
-    expect(await renameStudio(owner(), { studioId: world.studioId, name: 'Quay Studio' })).toMatchObject({ name: 'Quay Studio', people: 2 })
-    await expect(renameStudio(app.ctxOf(world.studioMember), { studioId: world.studioId, name: 'x' })).rejects.toMatchObject({ code: 'FORBIDDEN', message: 'Only an owner of the studio may do this. Nothing was changed; ask one of them.' })
+    expect(await renameStudio(owner(), { studioId: world.studioId, name: 'Quay Studio' })).toMatchObject({
+      name: 'Quay Studio',
+      people: 2,
+    })
+    await expect(
+      renameStudio(app.ctxOf(world.studioMember), { studioId: world.studioId, name: 'x' }),
+    ).rejects.toMatchObject({
+      code: 'FORBIDDEN',
+      message: 'Only an owner of the studio may do this. Nothing was changed; ask one of them.',
+    })
   })
 })
 
@@ -68,7 +87,10 @@ describe('listStudioPeople', () => {
   it('has owners first, and open invitations for them alone', async () => {
     await inviteToStudio(owner(), { studioId: world.studioId, email: 'nora@example.com', role: 'owner' })
     const mine = await listStudioPeople(owner(), world.studioId)
-    expect(mine.people.map(({ name, role }) => [name, role])).toEqual([['Pia Lund', 'owner'], ['Mel Ward', 'member']])
+    expect(mine.people.map(({ name, role }) => [name, role])).toEqual([
+      ['Pia Lund', 'owner'],
+      ['Mel Ward', 'member'],
+    ])
     expect(mine.invitations).toMatchObject([{ email: 'nora@example.com', role: 'owner' }])
     expect((await listStudioPeople(app.ctxOf(world.studioMember), world.studioId)).invitations).toEqual([])
   })
@@ -85,7 +107,12 @@ describe('inviteToStudio', () => {
   })
 
   it('refuses somebody who belongs to it already', async () => {
-    await expect(inviteToStudio(owner(), { studioId: world.studioId, email: world.studioMember.email, role: 'owner' })).rejects.toMatchObject({ code: 'CONFLICT', message: 'Mel Ward belongs to this studio already. No letter was sent.' })
+    await expect(
+      inviteToStudio(owner(), { studioId: world.studioId, email: world.studioMember.email, role: 'owner' }),
+    ).rejects.toMatchObject({
+      code: 'CONFLICT',
+      message: 'Mel Ward belongs to this studio already. No letter was sent.',
+    })
   })
 })
 
@@ -94,8 +121,12 @@ describe('revokeStudioInvitation', () => {
     const email = 'not.now@example.com'
     const { invitations } = await inviteToStudio(owner(), { studioId: world.studioId, email, role: 'member' })
     const id = invitationIdSchema.parse(invitations[0]?.id)
-    expect((await revokeStudioInvitation(owner(), { studioId: world.studioId, invitationId: id })).invitations).toEqual([])
-    await expect(getInvitationPage(app.ctxOf(), await newestToken(app.db, email))).rejects.toMatchObject({ code: 'GONE' })
+    expect((await revokeStudioInvitation(owner(), { studioId: world.studioId, invitationId: id })).invitations).toEqual(
+      [],
+    )
+    await expect(getInvitationPage(app.ctxOf(), await newestToken(app.db, email))).rejects.toMatchObject({
+      code: 'GONE',
+    })
   })
 
   it('leaves a shoot’s invitation alone', async () => {
@@ -106,28 +137,45 @@ describe('revokeStudioInvitation', () => {
 
 describe('changeStudioRole', () => {
   it('makes owners, and never leaves a studio without one', async () => {
-    const change = (userId = world.studioMember.userId, role: 'owner' | 'member' = 'owner') => changeStudioRole(owner(), { studioId: world.studioId, userId, role })
-    await expect(change(world.photographer.userId, 'member')).rejects.toMatchObject({ code: 'CONFLICT', message: expect.stringContaining('make somebody else owner first') })
+    const change = (userId = world.studioMember.userId, role: 'owner' | 'member' = 'owner') =>
+      changeStudioRole(owner(), { studioId: world.studioId, userId, role })
+    await expect(change(world.photographer.userId, 'member')).rejects.toMatchObject({
+      code: 'CONFLICT',
+      message: expect.stringContaining('make somebody else owner first'),
+    })
     expect((await change()).people.map(({ role }) => role)).toEqual(['owner', 'owner'])
-    expect((await change(world.photographer.userId, 'member')).people.map(({ role }) => role)).toEqual(['owner', 'member'])
+    expect((await change(world.photographer.userId, 'member')).people.map(({ role }) => role)).toEqual([
+      'owner',
+      'member',
+    ])
   })
 
   it('does not know a stranger', async () => {
-    await expect(changeStudioRole(owner(), { studioId: world.studioId, userId: world.stranger.userId, role: 'owner' })).rejects.toMatchObject({ code: 'NOT_FOUND' })
+    await expect(
+      changeStudioRole(owner(), { studioId: world.studioId, userId: world.stranger.userId, role: 'owner' }),
+    ).rejects.toMatchObject({ code: 'NOT_FOUND' })
   })
 })
 
 describe('removeStudioMember', () => {
   it('takes a person out of the studio and leaves their shoots to them', async () => {
     await changeStudioRole(owner(), { studioId: world.studioId, userId: world.studioMember.userId, role: 'owner' })
-    await removeStudioMember(app.ctxOf(world.studioMember), { studioId: world.studioId, userId: world.photographer.userId })
+    await removeStudioMember(app.ctxOf(world.studioMember), {
+      studioId: world.studioId,
+      userId: world.photographer.userId,
+    })
     expect(await getShoot(owner(), world.shootId)).toMatchObject({ role: 'photographer', inStudio: false })
     await expect(listStudioPeople(owner(), world.studioId)).rejects.toMatchObject({ code: 'NOT_FOUND' })
   })
 
   it('lets a member leave, and the last owner not', async () => {
-    await removeStudioMember(app.ctxOf(world.studioMember), { studioId: world.studioId, userId: world.studioMember.userId })
-    await expect(removeStudioMember(owner(), { studioId: world.studioId, userId: world.photographer.userId })).rejects.toMatchObject({ code: 'CONFLICT', message: expect.stringContaining('A studio needs an owner') })
+    await removeStudioMember(app.ctxOf(world.studioMember), {
+      studioId: world.studioId,
+      userId: world.studioMember.userId,
+    })
+    await expect(
+      removeStudioMember(owner(), { studioId: world.studioId, userId: world.photographer.userId }),
+    ).rejects.toMatchObject({ code: 'CONFLICT', message: expect.stringContaining('A studio needs an owner') })
   })
 })
 
@@ -137,6 +185,14 @@ describe('setMinutes', () => {
     const minutes = { ...DEFAULT_MINUTES, standMove: 3.5 }
     expect(await setMinutes(app.ctxOf(world.studioMember), { studioId: world.studioId, minutes })).toEqual(minutes)
     expect((await getShoot(app.ctxOf(world.crew), world.shootId)).minutes.standMove).toBe(3.5)
-    expect(app.documents.announced).toEqual([{ shootId: world.shootId, queryKeys: [['shoots', world.shootId], ['studios', world.studioId, 'minutes']] }])
+    expect(app.documents.announced).toEqual([
+      {
+        shootId: world.shootId,
+        queryKeys: [
+          ['shoots', world.shootId],
+          ['studios', world.studioId, 'minutes'],
+        ],
+      },
+    ])
   })
 })

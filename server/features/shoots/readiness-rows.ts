@@ -14,7 +14,12 @@ import { readLookVersions } from '#server/features/sign-off/look-version-rows.ts
 import { listAnswers } from '#server/features/sign-off/sign-off-rows.ts'
 
 /** The lamps of a shoot as every screen of it shows them. The caller has seen to access. */
-export async function loadReadiness(ctx: Ctx, shootId: ShootId, plan: Plan, frames: ReadonlyMap<string, Frame>): Promise<Readiness[]> {
+export async function loadReadiness(
+  ctx: Ctx,
+  shootId: ShootId,
+  plan: Plan,
+  frames: ReadonlyMap<string, Frame>,
+): Promise<Readiness[]> {
   const [versions, answers, happened] = await Promise.all([
     readLookVersions(ctx, shootId),
     listAnswers(ctx.db, shootId),
@@ -34,7 +39,10 @@ export async function loadReadiness(ctx: Ctx, shootId: ShootId, plan: Plan, fram
     redCautions: (setup) => redCautions(setup),
     schedule: (dayId) => {
       const problem = orderProblem(plan, dayId)
-      const { broken, wrapMin } = schedule(problem, problem.shots.map(({ id }) => id))
+      const { broken, wrapMin } = schedule(
+        problem,
+        problem.shots.map(({ id }) => id),
+      )
       return { broken: broken.map(({ words }) => words), wrapMin }
     },
   })

@@ -1,6 +1,6 @@
 import { zodResolver } from '@hookform/resolvers/zod'
 import { useState } from 'react'
-import { Controller, useForm } from 'react-hook-form'
+import { Controller, useForm, useWatch } from 'react-hook-form'
 import { z } from 'zod'
 import { ROLES } from '#shared/access/roles.ts'
 import { showIssues } from '#src/lib/form-issues.ts'
@@ -29,8 +29,8 @@ export function InviteDialog({ open, onOpenChange, change }: InviteDialogProps) 
 
 function InviteForm({ change, onSent }: { change: InviteDialogProps['change']; onSent: () => void }) {
   const [refusal, setRefusal] = useState<string | null>(null)
-  const { register, control, handleSubmit, setError, watch, formState } = useForm<z.infer<typeof schema>>({ resolver: zodResolver(schema), defaultValues: { email: '', name: '', role: 'client' } })
-  const role = watch('role')
+  const { register, control, handleSubmit, setError, formState } = useForm<z.infer<typeof schema>>({ resolver: zodResolver(schema), defaultValues: { email: '', name: '', role: 'client' } })
+  const role = useWatch({ control, name: 'role' })
   const handleValues = (values: z.infer<typeof schema>) =>
     change.mutate(
       { kind: 'invite', ...values },

@@ -1,6 +1,6 @@
 import { zodResolver } from '@hookform/resolvers/zod'
 import { useState } from 'react'
-import { Controller, useForm } from 'react-hook-form'
+import { Controller, useForm, useWatch } from 'react-hook-form'
 import type { z } from 'zod'
 import { STUDIO_ROLES } from '#shared/access/roles.ts'
 import { studioInvitationInputSchema } from '#shared/api/studios.ts'
@@ -31,11 +31,11 @@ export function InviteToStudio({ open, onOpenChange, invite }: InviteToStudioPro
 
 function InviteForm({ invite, onSent }: { invite: InviteToStudioProps['invite']; onSent: () => void }) {
   const [refusal, setRefusal] = useState<string | null>(null)
-  const { register, control, handleSubmit, setError, watch, formState } = useForm<z.infer<typeof studioInvitationInputSchema>>({
+  const { register, control, handleSubmit, setError, formState } = useForm<z.infer<typeof studioInvitationInputSchema>>({
     resolver: zodResolver(studioInvitationInputSchema),
     defaultValues: { email: '', role: 'member' },
   })
-  const role = watch('role')
+  const role = useWatch({ control, name: 'role' })
   return (
     <form
       noValidate

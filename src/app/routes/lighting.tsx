@@ -1,0 +1,3 @@
+import { LightingScreen } from '#src/features/lighting/components/lighting-screen.tsx'
+
+export { LightingScreen as Component }

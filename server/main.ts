@@ -83,6 +83,10 @@ const server = createServer(app)
 // Longer than a balancer keeps its own, so that it never sends into a connection that is just closing.
 server.keepAliveTimeout = 75_000
 realtime.attach(server)
+// Whatever else wants to become a socket would hang here for ever.
+server.on('upgrade', (request, socket) => {
+  if (!request.url?.startsWith('/rt/')) socket.destroy()
+})
 server.on('error', (error) => {
   log.fatal({ failure: loggable(error) }, 'cannot listen')
   process.exit(1)

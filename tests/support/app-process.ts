@@ -9,10 +9,10 @@ export type AppProcess = {
   url: string
   port: number
   pid: number
-  /** Asks it to drain, and waits. */
-  stop: () => Promise<void>
+  /** Asks it to drain, waits, and answers its exit code. */
+  stop: () => Promise<number | null>
   /** kill -9, and waits until it is gone. */
-  kill: () => Promise<void>
+  kill: () => Promise<unknown>
 }
 
 export type AppProcessOptions = {
@@ -66,9 +66,10 @@ async function untilReady(child: ChildProcess): Promise<void> {
   if (!(await ready)) throw new Error(`The server did not start:\n${said}`)
 }
 
-async function end(child: ChildProcess, signal: NodeJS.Signals): Promise<void> {
-  if (child.exitCode !== null || child.signalCode !== null) return
+async function end(child: ChildProcess, signal: NodeJS.Signals): Promise<number | null> {
+  if (child.exitCode !== null || child.signalCode !== null) return child.exitCode
   const gone = once(child, 'exit')
   child.kill(signal)
   await gone
+  return child.exitCode
 }

@@ -81,7 +81,8 @@ function OpenShoot() {
           </div>
         </Spine>
       }
-      bottom={<ShootBottomBar root={root} sections={sections} lamps={lamps} title={shoot.brief.title} where={where} />}
+      // On the day a phone's foot is the bar with Got it.
+      bottom={here === 'day' ? null : <ShootBottomBar root={root} sections={sections} lamps={lamps} title={shoot.brief.title} where={where} />}
     >
       <title>{`${label === undefined ? '' : `${label} · `}${shoot.brief.title} · Sconce`}</title>
       <ScreenBarAside value={<SaveSign tone="paper" />}>

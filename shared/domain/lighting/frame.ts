@@ -4,7 +4,8 @@ import { FRAME_LONG_MM, FRAME_SHORT_MM } from './lens.ts'
 import type { Point } from './schema.ts'
 
 export type Orientation = 'upright' | 'across' | 'square'
-export type Edge = 'left' | 'right' | 'top' | 'bottom'
+const EDGES = ['left', 'right', 'top', 'bottom'] as const
+export type Edge = (typeof EDGES)[number]
 
 /** Sides of the picture in mm of the frame: a square is cut from the middle. */
 export function frameSidesMm(orientation: Orientation): { widthMm: number; heightMm: number } {
@@ -45,39 +46,52 @@ export function viewOf(whole: Pick<WholeSetup, 'setup' | 'places'>, orientation:
   return { at, forward, right, up, tanAcross, tanUp }
 }
 
-/** How far a ball of this radius stays outside the picture, metres at its own depth; negative when it is in. */
+/** How far a thing stays outside the picture, metres at its own depth; negative when it is in. */
 export type Clearance = { marginM: number; edge: Edge }
 
-/** Clearance of a ball around a point; null behind the camera, where nothing is seen. */
-export function clearanceOf(view: View, point: Point, radiusM: number): Clearance | null {
-  const offset = minus(point, view.at)
-  const depth = dot(offset, view.forward)
-  if (depth + radiusM <= 0.05) return null
-  const seen = Math.max(depth, 0.05)
-  const across = dot(offset, view.right)
-  const above = dot(offset, view.up)
-  const beyondAcross = Math.abs(across) - seen * view.tanAcross - radiusM
-  const beyondUp = Math.abs(above) - seen * view.tanUp - radiusM
-  return beyondAcross >= beyondUp
-    ? { marginM: beyondAcross, edge: across < 0 ? 'left' : 'right' }
-    : { marginM: beyondUp, edge: above < 0 ? 'bottom' : 'top' }
+/** Nearer to the lens than this nothing is looked at, metres. */
+const NEAREST_M = 0.05
+
+/**
+ * Clearance of a thing given by the corners of its hull: past the one edge of the picture that it clears best. Null
+ * where all of it is behind the camera and nothing is seen.
+ */
+export function clearanceOf(view: View, corners: readonly Point[]): Clearance | null {
+  const past: Record<Edge, number> = { left: Infinity, right: Infinity, top: Infinity, bottom: Infinity }
+  let isSeen = false
+  for (const corner of corners) {
+    const offset = minus(corner, view.at)
+    const depth = dot(offset, view.forward)
+    if (depth <= NEAREST_M) continue
+    isSeen = true
+    const across = dot(offset, view.right)
+    const above = dot(offset, view.up)
+    past.left = Math.min(past.left, -across - depth * view.tanAcross)
+    past.right = Math.min(past.right, across - depth * view.tanAcross)
+    past.top = Math.min(past.top, above - depth * view.tanUp)
+    past.bottom = Math.min(past.bottom, -above - depth * view.tanUp)
+  }
+  if (!isSeen) return null
+  return EDGES.map((edge) => ({ edge, marginM: past[edge] })).reduce((best, next) =>
+    next.marginM > best.marginM ? next : best,
+  )
 }
 
 /** Half the width of a sitter's body, and what rises above the eyes, metres (assumed measures). */
 const BODY_HALF_M = 0.2
 const CROWN_M = 0.12
 
-/** Whether a ball behind a sitter is hidden by the body, as seen from the camera. */
-export function hiddenBySitter(view: View, places: WholeSetup['places'], point: Point, radiusM: number): boolean {
-  const far = Math.hypot(point[0] - view.at[0], point[2] - view.at[2])
-  return places.some((place) => {
-    const near = Math.hypot(place.at[0] - view.at[0], place.at[1] - view.at[2])
-    if (far <= near + radiusM) return false
-    const share = near / far
-    const x = view.at[0] + (point[0] - view.at[0]) * share
-    const y = view.at[1] + (point[1] - view.at[1]) * share
-    const z = view.at[2] + (point[2] - view.at[2]) * share
-    const sideways = Math.hypot(x - place.at[0], z - place.at[1])
-    return sideways + radiusM * share < BODY_HALF_M && y + radiusM * share < place.eyeHeightM + CROWN_M
-  })
+/** Whether a sitter's body hides all corners of a thing behind it, as seen from the camera. */
+export function hiddenBySitter(view: View, places: WholeSetup['places'], corners: readonly Point[]): boolean {
+  return places.some((place) =>
+    corners.every((point) => {
+      const far = Math.hypot(point[0] - view.at[0], point[2] - view.at[2])
+      const near = Math.hypot(place.at[0] - view.at[0], place.at[1] - view.at[2])
+      if (far <= near) return false
+      const share = near / far
+      const along = (index: 0 | 1 | 2) => view.at[index] + (point[index] - view.at[index]) * share
+      const sideways = Math.hypot(along(0) - place.at[0], along(2) - place.at[1])
+      return sideways < BODY_HALF_M && along(1) < place.eyeHeightM + CROWN_M
+    }),
+  )
 }

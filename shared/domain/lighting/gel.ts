@@ -31,10 +31,10 @@ export function stackGels(gels: readonly GelNumbersRead[]): {
   return { miredShift, transmission, lossStops: stopsOfTransmission(transmission) }
 }
 
-/** "3800 K", "19 700 K": to the nearest hundred, with a thin space from ten thousand. */
+/** "3800 K", "19 700 K": to the nearest hundred, parted at the thousands from ten thousand. */
 export function kelvinLabel(kelvin: number): string {
   const rounded = Math.round(kelvin / 100) * 100
   return rounded < 10000
     ? `${rounded} K`
-    : `${Math.floor(rounded / 1000)}\u2009${String(rounded % 1000).padStart(3, '0')} K`
+    : `${Math.floor(rounded / 1000)}\u00a0${String(rounded % 1000).padStart(3, '0')} K`
 }

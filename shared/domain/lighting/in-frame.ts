@@ -2,59 +2,80 @@ import type { WholeSetup } from '#shared/domain/plan/read-plan.ts'
 import type { Caution } from './cautions.ts'
 import { type Clearance, type Orientation, type View, clearanceOf, hiddenBySitter, viewOf } from './frame.ts'
 import { faceOf } from './light-output.ts'
-import type { Point } from './schema.ts'
-import { metresLabel, purposeWord } from './words.ts'
+import { minus, panelNormal } from './geometry.ts'
+import type { Light, Point, Prop } from './schema.ts'
+import { inSentence, metresLabel, purposeWord } from './words.ts'
 
 /** How near one thing and its stand come to the picture. */
 export type Sight = { id: string; lightId: string | null; name: string; clearance: Clearance }
 
-/** A point of a thing with the radius of the ball around it, metres. */
-type Ball = { id: string; lightId: string | null; name: string; at: Point; radiusM: number }
+/** A thing by the corners of its hull. */
+type Body = { id: string; lightId: string | null; name: string; corners: Point[] }
 
-const HEAD_RADIUS_M = 0.12
-const POLE_RADIUS_M = 0.03
-const STEPS = 10
+/** Depth of a head behind its face, and half the height of a bare one, metres (assumptions). */
+const HEAD_DEPTH_M = 0.25
+const HEAD_HALF_M = 0.08
 
-function ballsOf(whole: WholeSetup): Ball[] {
-  const lights = whole.lights.flatMap((light): Ball[] => {
-    const { widthM, heightM } = faceOf(light)
+/** Corners of a head: its face turned to its aim, and the housing behind. */
+function headCorners(light: Light): Point[] {
+  const [dx, dy, dz] = minus(light.aim, light.at)
+  const length = Math.hypot(dx, dy, dz) || 1
+  const flat = Math.hypot(dx, dz)
+  const look: Point = [dx / length, dy / length, dz / length]
+  const side: Point = flat < 1e-6 ? [1, 0, 0] : [-dz / flat, 0, dx / flat]
+  const up: Point = [
+    side[1] * look[2] - side[2] * look[1],
+    side[2] * look[0] - side[0] * look[2],
+    side[0] * look[1] - side[1] * look[0],
+  ]
+  const { widthM, heightM } = faceOf(light)
+  const corner = (across: number, upward: number, back: number): Point => [
+    light.at[0] + side[0] * across + up[0] * upward - look[0] * back,
+    light.at[1] + side[1] * across + up[1] * upward - look[1] * back,
+    light.at[2] + side[2] * across + up[2] * upward - look[2] * back,
+  ]
+  const halfWidth = Math.max(HEAD_HALF_M, widthM / 2)
+  const halfHeight = Math.max(HEAD_HALF_M, heightM / 2)
+  const four = (x: number, y: number, back: number) => [
+    corner(-x, -y, back),
+    corner(x, -y, back),
+    corner(-x, y, back),
+    corner(x, y, back),
+  ]
+  return [...four(halfWidth, halfHeight, 0), ...four(HEAD_HALF_M, HEAD_HALF_M, HEAD_DEPTH_M)]
+}
+
+function panelCorners(prop: Prop): Point[] {
+  const [x, , z] = panelNormal(prop.turnDeg)
+  const half = prop.widthM / 2
+  return [-half, half].flatMap((across) =>
+    [-prop.heightM / 2, prop.heightM / 2].map((up): Point => [
+      prop.at[0] + z * across,
+      prop.at[1] + up,
+      prop.at[2] - x * across,
+    ]),
+  )
+}
+
+function bodiesOf(whole: WholeSetup): Body[] {
+  const lights = whole.lights.flatMap((light): Body[] => {
     const name = purposeWord(light.purpose).toLowerCase()
-    const head: Ball = {
-      id: light.id,
-      lightId: light.id,
-      name,
-      at: light.at,
-      radiusM: Math.max(HEAD_RADIUS_M, Math.hypot(widthM, heightM) / 2),
-    }
+    const head: Body = { id: light.id, lightId: light.id, name, corners: headCorners(light) }
     const kind = light.support?.numbers.kind
     if (kind !== 'stand' && kind !== 'floor stand') return [head]
-    const pole = Array.from({ length: STEPS }, (_, step): Ball => {
-      return {
-        ...head,
-        name: `${name}’s stand`,
-        at: [light.at[0], (light.at[1] * step) / STEPS, light.at[2]],
-        radiusM: POLE_RADIUS_M,
-      }
-    })
-    return [head, ...pole]
+    return [head, { ...head, name: `${name}’s stand`, corners: [light.at, [light.at[0], 0, light.at[2]]] }]
   })
   const panels = whole.props
     .filter((prop) => prop.kind !== 'prop')
-    .map((prop): Ball => ({
-      id: prop.id,
-      lightId: null,
-      name: prop.name.toLowerCase(),
-      at: prop.at,
-      radiusM: Math.min(prop.widthM, prop.heightM) / 2,
-    }))
+    .map((prop): Body => ({ id: prop.id, lightId: null, name: inSentence(prop.name), corners: panelCorners(prop) }))
   return [...lights, ...panels]
 }
 
-function sightOf(ball: Ball, whole: WholeSetup, view: View): Sight | null {
-  if (ball.at[2] < whole.setup.background.zM) return null
-  if (hiddenBySitter(view, whole.places, ball.at, ball.radiusM)) return null
-  const clearance = clearanceOf(view, ball.at, ball.radiusM)
-  return clearance && { id: ball.id, lightId: ball.lightId, name: ball.name, clearance }
+function sightOf(body: Body, whole: WholeSetup, view: View): Sight | null {
+  if (body.corners.every((corner) => corner[2] < whole.setup.background.zM)) return null
+  if (hiddenBySitter(view, whole.places, body.corners)) return null
+  const clearance = clearanceOf(view, body.corners)
+  return clearance && { id: body.id, lightId: body.lightId, name: body.name, clearance }
 }
 
 /**
@@ -65,17 +86,17 @@ export function sightsOf(whole: WholeSetup, orientations: readonly Orientation[]
   const worst = new Map<string, Sight>()
   for (const orientation of orientations) {
     const view = viewOf(whole, orientation)
-    for (const ball of ballsOf(whole)) {
-      const sight = sightOf(ball, whole, view)
-      const known = worst.get(ball.id)
-      if (sight && (!known || sight.clearance.marginM < known.clearance.marginM)) worst.set(ball.id, sight)
+    for (const body of bodiesOf(whole)) {
+      const sight = sightOf(body, whole, view)
+      const known = worst.get(body.id)
+      if (sight && (!known || sight.clearance.marginM < known.clearance.marginM)) worst.set(body.id, sight)
     }
   }
   return [...worst.values()].sort((a, b) => a.clearance.marginM - b.clearance.marginM)
 }
 
 const HOW =
-  'Every head, panel (a ball around its face) and stand (a line) is projected through the camera. Assumed: the camera looks at the sitters with the eyes a third below the top edge; a body hides what stands right behind it.'
+  'Every head, panel and stand is projected through the camera by its corners. Assumed: a head reaches 25 cm behind its face; the camera looks at the sitters with the eyes a third below the top edge; a body hides what stands right behind it.'
 
 /** What stands in the picture (red, one each), or else how far the nearest thing clears it (fine). */
 export function frameCautions(whole: WholeSetup, orientations: readonly Orientation[]): Caution[] {

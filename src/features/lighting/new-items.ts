@@ -110,7 +110,8 @@ export function newProp(whole: WholeSetup, kind: (typeof PROP_KINDS)[number]): P
     kind,
     name: same === 0 ? name : `${name} ${same + 1}`,
     at: round([x + (kind === 'prop' ? 0.6 : 1.1), heightM / 2, z + (kind === 'prop' ? -0.2 : 0.7) + same * 0.3]),
-    turnDeg: kind === 'prop' ? 0 : -60,
+    // Facing the sitter.
+    turnDeg: kind === 'prop' ? 0 : 57,
     widthM,
     heightM,
     colour,

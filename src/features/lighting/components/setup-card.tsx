@@ -1,7 +1,6 @@
 import { MoreHorizontal } from 'lucide-react'
 import { Link } from 'react-router-dom'
 import { redCautions } from '#shared/domain/lighting/cautions.ts'
-import { purposeWord } from '#shared/domain/lighting/words.ts'
 import type { WholeSetup } from '#shared/domain/plan/read-plan.ts'
 import { count } from '#src/lib/format.ts'
 import { IconButton } from '#src/ui/button.tsx'
@@ -30,9 +29,9 @@ function lampOf(whole: WholeSetup, use: SetupUse): { state: LampState; why: stri
 export function SetupCard({ whole, use, to, mayWrite, onDuplicate, onRemove }: SetupCardProps) {
   const { setup, lights } = whole
   const lamp = lampOf(whole, use)
-  const purposes = lights.map((light) => purposeWord(light.purpose).toLowerCase())
+  const purposes = lights.map((light) => light.purpose)
   return (
-    <article className="relative rounded-r border border-hair bg-paper hover:border-edge has-[a:focus-visible]:border-draft">
+    <article className="relative h-full rounded-r border border-hair bg-paper hover:border-edge has-[a:focus-visible]:border-draft">
       <PlanSketch whole={whole} />
       <div className="flex items-start gap-2 px-3.5 pt-3 pb-3.5">
         <div className="min-w-0 flex-1">

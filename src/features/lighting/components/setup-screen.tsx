@@ -146,7 +146,7 @@ function Setup({ plan, whole }: { plan: Plan; whole: WholeSetup }) {
         sub={mayWrite ? use.words : `${use.words} · to read only`}
         actions={actions}
       />
-      <div className="grid min-h-0 flex-1 md:grid-cols-[minmax(0,1fr)_clamp(20rem,28%,25rem)]">
+      <div className="grid min-h-0 flex-1 md:grid-cols-[minmax(0,1fr)_minmax(19rem,32%)] xl:grid-cols-[minmax(0,1fr)_25rem]">
         <div className="flex min-w-0 flex-col gap-3 p-2.5 md:min-h-0 md:py-0 md:pr-5 md:pb-3.5 md:pl-6">
           <div className="h-[min(52dvh,26rem)] md:h-auto md:min-h-0 md:flex-1">
             <PlanDrawing

@@ -29,23 +29,50 @@ describe('viewOf', () => {
 
 describe('clearanceOf', () => {
   const view = viewOf(setup, 'across')
-  it('is the distance past the edge at the point’s own depth, less the ball', () => {
+  it('is the distance past the edge at the point’s own depth', () => {
     const depth = dot([2, 0, -3], view.forward)
-    const clearance = clearanceOf(view, [2, 1.5, 0], 0.1)
+    const clearance = clearanceOf(view, [[2, 1.5, 0]])
     expect(clearance?.edge).toBe('right')
-    expect(clearance?.marginM).toBeCloseTo(2 - depth * (18 / 50) - 0.1, 9)
+    expect(clearance?.marginM).toBeCloseTo(2 - depth * (18 / 50), 9)
   })
-  it('is negative in the picture and null behind the camera', () => {
-    expect(clearanceOf(view, [0.1, 1.5, 0], 0.1)?.marginM).toBeLessThan(0)
-    expect(clearanceOf(view, [0, 1.5, 5], 0.1)).toBeNull()
+  it('is that of the corner nearest to the picture', () => {
+    const alone = clearanceOf(view, [[2, 1.5, 0]])?.marginM ?? 0
+    expect(
+      clearanceOf(view, [
+        [2, 1.5, 0],
+        [2.4, 1.5, 0],
+      ])?.marginM,
+    ).toBeCloseTo(alone, 9)
+  })
+  it('is negative for what reaches across an edge or over the whole picture', () => {
+    expect(clearanceOf(view, [[0.1, 1.5, 0]])?.marginM).toBeLessThan(0)
+    expect(
+      clearanceOf(view, [
+        [-4, 1.5, 0],
+        [4, 1.5, 0],
+      ])?.marginM,
+    ).toBeLessThan(0)
+  })
+  it('is null behind the camera', () => {
+    expect(clearanceOf(view, [[0, 1.5, 5]])).toBeNull()
   })
 })
 
 describe('hiddenBySitter', () => {
   const view = viewOf(setup, 'upright')
-  it('hides a small head right behind the body and not one beside it', () => {
-    expect(hiddenBySitter(view, setup.places, [0, 1, -1], 0.08)).toBe(true)
-    expect(hiddenBySitter(view, setup.places, [0.6, 1, -1], 0.08)).toBe(false)
-    expect(hiddenBySitter(view, setup.places, [0, 1, 1], 0.08)).toBe(false)
+  it('hides what is right behind the body and not what looks out beside it', () => {
+    expect(
+      hiddenBySitter(view, setup.places, [
+        [0, 1, -1],
+        [0.1, 1.1, -1],
+      ]),
+    ).toBe(true)
+    expect(
+      hiddenBySitter(view, setup.places, [
+        [0, 1, -1],
+        [0.6, 1.1, -1],
+      ]),
+    ).toBe(false)
+    expect(hiddenBySitter(view, setup.places, [[0, 1, 1]])).toBe(false)
   })
 })

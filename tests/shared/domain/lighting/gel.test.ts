@@ -71,6 +71,6 @@ describe('stackGels', () => {
 
 describe('kelvinLabel', () => {
   it('rounds to hundreds and parts thousands from ten thousand', () => {
-    expect([3805, 19685].map(kelvinLabel)).toEqual(['3800 K', '19\u2009700 K'])
+    expect([3805, 19685].map(kelvinLabel)).toEqual(['3800 K', '19\u00a0700 K'])
   })
 })

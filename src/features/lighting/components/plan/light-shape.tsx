@@ -30,8 +30,8 @@ export const LightShape = memo(function LightShape({ light, pxPerM, across, chos
     case 'octa':
     case 'strip':
     case 'beauty dish': {
-      const depth = Math.max(8, Math.min(18, half * 0.6))
-      const back = Math.max(4, half * 0.4)
+      const depth = Math.max(8, Math.min(16, half * 0.6))
+      const back = Math.max(half * 0.55, half - 14)
       return (
         <g>
           <path d={`M0 ${-half}V${half}L${-depth} ${back}V${-back}Z`} {...line} />

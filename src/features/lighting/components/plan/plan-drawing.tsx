@@ -1,7 +1,7 @@
 import { useState } from 'react'
 import type { WholeSetup } from '#shared/domain/plan/read-plan.ts'
 import { distanceBetween, facePoint } from '#shared/domain/lighting/geometry.ts'
-import type { Light } from '#shared/domain/lighting/schema.ts'
+import type { Light, Prop, SitterPlace } from '#shared/domain/lighting/schema.ts'
 import { inSentence, metresLabel, purposeWord } from '#shared/domain/lighting/words.ts'
 import { type Part, partKey } from '../../parts.ts'
 import { type Label, type PlanView, fitPlan, spreadLabels, toX, toZ } from '../../plan-view.ts'
@@ -65,7 +65,10 @@ function Plan({ width, height, written, whole, ...rest }: PlanDrawingProps & { w
       mayWrite,
     }
   }
-  const labels = spreadLabels(whole.lights.map((light) => labelOf(light, whole, view, isNarrow)))
+  const labels = spreadLabels([
+    ...whole.lights.map((light) => lightLabel(light, whole, view, isNarrow)),
+    ...whole.props.map((prop) => propLabel(prop, whole, view)),
+  ])
   return (
     <svg
       width={width}
@@ -103,17 +106,6 @@ function Plan({ width, height, written, whole, ...rest }: PlanDrawingProps & { w
               strokeWidth={5}
             />
           )}
-          <text
-            x={0}
-            y={prop.kind === 'prop' ? 4 : 24}
-            textAnchor="middle"
-            className="fill-draft text-xs"
-            stroke="#fff"
-            strokeWidth={3}
-            paintOrder="stroke"
-          >
-            {prop.name}
-          </text>
         </Handle>
       ))}
       {whole.places.map((place) => (
@@ -126,9 +118,7 @@ function Plan({ width, height, written, whole, ...rest }: PlanDrawingProps & { w
           <circle r={13} fill="#fff" stroke="var(--color-ink)" strokeWidth={1.6} />
           <path d="M0 13v7" stroke="var(--color-ink)" strokeWidth={1.6} />
           <text
-            x={-18}
-            y={-16}
-            textAnchor="end"
+            {...placeNameAt(whole.places, place)}
             className="fill-ink text-xs font-semibold"
             stroke="#fff"
             strokeWidth={3}
@@ -217,7 +207,7 @@ function Plan({ width, height, written, whole, ...rest }: PlanDrawingProps & { w
   )
 }
 
-function labelOf(light: Light, whole: WholeSetup, view: PlanView, isNarrow: boolean): Label {
+function lightLabel(light: Light, whole: WholeSetup, view: PlanView, isNarrow: boolean): Label {
   const side = light.at[0] < facePoint(whole)[0] ? 'left' : 'right'
   const sizePx = ((light.modifier?.numbers.widthM ?? 0) * view.pxPerM) / 2
   const away = Math.max(26, Math.min(60, sizePx + 12))
@@ -231,4 +221,22 @@ function labelOf(light: Light, whole: WholeSetup, view: PlanView, isNarrow: bool
         `${light.at[1].toFixed(2).replace(/0$/, '')} m up · ${metresLabel(distanceBetween(light.at, facePoint(whole)))} off`,
       ]
   return { key: light.id, x, y: toZ(view, light.at[2]) + 2, side, lines }
+}
+
+function propLabel(prop: Prop, whole: WholeSetup, view: PlanView): Label {
+  const side = prop.at[0] < facePoint(whole)[0] ? 'left' : 'right'
+  const halfM =
+    prop.kind === 'prop' ? prop.widthM / 2 : (prop.widthM / 2) * Math.abs(Math.cos((prop.turnDeg * Math.PI) / 180))
+  const away = Math.max(12, halfM * view.pxPerM + 10)
+  const x = toX(view, prop.at[0]) + (side === 'left' ? -away : away)
+  return { key: prop.id, x, y: toZ(view, prop.at[2]) + 4, side, lines: [prop.name] }
+}
+
+/** Where a sitter's name stands: outside at the two ends of a row, above in between. */
+function placeNameAt(places: readonly SitterPlace[], place: SitterPlace) {
+  const row = [...places].sort((a, b) => a.at[0] - b.at[0] || (a.id < b.id ? -1 : 1))
+  const index = row.findIndex((other) => other.id === place.id)
+  if (index === 0) return { x: -16, y: -14, textAnchor: 'end' as const }
+  if (index === row.length - 1) return { x: 16, y: -14, textAnchor: 'start' as const }
+  return { x: 0, y: -4 - 17 * index, textAnchor: 'middle' as const }
 }

@@ -154,15 +154,13 @@ function Side({
               strokeDasharray="3 4"
             />
             <text
-              x={X(main.at[2]) + 30}
-              y={Y(face[1]) - 6}
+              {...eyeWordsAt(X(main.at[2]), X(face[2]), X(camera.at[2]), Y(face[1]))}
               className="fill-glow-ink text-xs font-semibold"
               stroke="#fff"
               strokeWidth={4}
               paintOrder="stroke"
             >
-              {Math.round(Math.abs(reading.main.elevationDeg))}° {reading.main.elevationDeg < 0 ? 'below' : 'above'} the
-              eye line
+              {`${Math.round(Math.abs(reading.main.elevationDeg))}° ${reading.main.elevationDeg < 0 ? 'below' : 'above'} the eye line`}
             </text>
           </g>
         )}
@@ -237,4 +235,13 @@ function Stand({ x, y, floorY, kind }: { x: number; y: number; floorY: number; k
     default:
       return <path d={`M${x} ${y}V${floorY}`} {...line} strokeDasharray="2 5" opacity={0.5} />
   }
+}
+
+/** About how wide the words of the main's height are, CSS px. */
+const EYE_WORDS_PX = 150
+
+/** Over the eye line where there is room before the camera, else under it. */
+function eyeWordsAt(mainX: number, faceX: number, cameraX: number, eyeY: number): { x: number; y: number } {
+  const x = Math.max(mainX, faceX) + 30
+  return x + EYE_WORDS_PX < cameraX - 10 ? { x, y: eyeY - 6 } : { x: faceX + 16, y: eyeY + 17 }
 }

@@ -25,7 +25,7 @@ export function CautionList({
                 trigger={
                   <button
                     type="button"
-                    className="text-ink-soft underline decoration-dotted underline-offset-2 hover:text-ink max-md:min-h-8"
+                    className="text-ink-soft underline decoration-dotted underline-offset-2 hover:text-ink max-md:-my-2 max-md:inline-block max-md:px-1 max-md:py-2"
                     aria-label={`Why: ${caution.title}`}
                   >
                     Why

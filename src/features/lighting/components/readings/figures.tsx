@@ -1,6 +1,6 @@
 import type { SetupReading } from '#shared/domain/lighting/readings.ts'
 import { kelvinLabel } from '#shared/domain/lighting/gel.ts'
-import { FRAME_LONG_MM, FRAME_SHORT_MM, fieldM } from '#shared/domain/lighting/lens.ts'
+import { type Depth, FRAME_LONG_MM, FRAME_SHORT_MM, fieldM } from '#shared/domain/lighting/lens.ts'
 import { ratioLabel } from '#shared/domain/lighting/ratio.ts'
 import { fNumberLabel, metresLabel, stopsLabel } from '#shared/domain/lighting/words.ts'
 import type { WholeSetup } from '#shared/domain/plan/read-plan.ts'
@@ -87,9 +87,7 @@ export function Figures({ whole, reading }: { whole: WholeSetup; reading: SetupR
       )}
       <Figure
         label="In focus"
-        value={
-          depth.farM === null ? `${depth.nearM.toFixed(2)} m on` : `${Math.round((depth.farM - depth.nearM) * 100)} cm`
-        }
+        value={depthLabel(depth)}
         detail={
           <Workings
             formula="H = f²/(N·c) + f"
@@ -126,4 +124,10 @@ export function Figures({ whole, reading }: { whole: WholeSetup; reading: SetupR
       )}
     </div>
   )
+}
+
+function depthLabel({ nearM, farM }: Depth): string {
+  if (farM === null) return `${nearM.toFixed(1)} m on`
+  const sharpM = farM - nearM
+  return sharpM < 1 ? `${Math.round(sharpM * 100)} cm` : metresLabel(sharpM)
 }

@@ -19,9 +19,9 @@ export function How({ label, value, children }: HowProps) {
         <button
           type="button"
           aria-label={`${label}: how it is worked out`}
-          className="rounded-r border-b border-dotted border-edge whitespace-nowrap hover:border-ink max-md:min-h-11 max-md:min-w-9"
+          className="group rounded-r whitespace-nowrap max-md:min-h-11 max-md:min-w-9"
         >
-          {value}
+          <span className="border-b border-dotted border-edge group-hover:border-ink">{value}</span>
         </button>
       }
     >

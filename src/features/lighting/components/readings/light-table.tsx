@@ -65,7 +65,9 @@ export function LightTable({ whole, reading, chosenKey, onChoose }: LightTablePr
                       sub={`${metresLabel(panel.distanceM)} off`}
                     />
                   </td>
-                  <td className="py-1.5 pr-2 text-right text-ink-faint">gives back</td>
+                  <td className="py-1.5 pr-2 text-right text-ink-faint" title="It has no power of its own">
+                    –
+                  </td>
                   <td className="py-1.5 pr-2 text-right">
                     <How label={`${panel.name} reads`} value={fNumberLabel(panel.fNumber)}>
                       <Workings
@@ -116,7 +118,7 @@ export function LightTable({ whole, reading, chosenKey, onChoose }: LightTablePr
 function Head({ hidden = false }: { hidden?: boolean }) {
   return (
     <thead className={hidden ? 'sr-only' : ''}>
-      <tr className="text-xs text-ink-soft [&>th]:pb-1.5 [&>th]:font-semibold">
+      <tr className="text-xs whitespace-nowrap text-ink-soft [&>th]:pb-1.5 [&>th]:font-semibold">
         <th className="w-8">
           <span className="sr-only">Group</span>
         </th>

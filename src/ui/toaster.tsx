@@ -9,7 +9,7 @@ const SHOWN_MS = 6000
 export function Toaster() {
   const messages = useSyncExternalStore(toastStore.subscribe, toastStore.read)
   return (
-    <div role="region" aria-label="Messages" className="no-print pointer-events-none fixed right-4 bottom-4 z-60 flex w-[min(24rem,calc(100vw-2rem))] flex-col gap-2 max-md:bottom-20">
+    <div role="region" aria-label="Messages" className="no-print pointer-events-none fixed right-4 bottom-4 z-60 flex w-[min(24rem,calc(100vw-2rem))] flex-col gap-2 max-md:bottom-24">
       {messages.map((message) => (
         <Toast key={message.id} message={message} />
       ))}

@@ -69,7 +69,7 @@ export function demoLighting(id: NamedIds, kit: readonly KitItem[], random: () =
     { zM: -2.6, widthM: 6, heightM: 2.9, colour: '#8a6f56', what: 'Clock wall, ochre lime plaster' },
     [
       { purpose: 'main', group: 'A', unit: 'Battery head 200 Ws', modifier: '90 cm octa', support: '2.4 m stand', power: 1 / 4, at: [-1.25, 1.95, 1.15], aim: [0, 1.35, 0] },
-      { purpose: 'rim', group: 'B', unit: 'Small flash, guide number 58', modifier: 'Strip 30 × 120 cm', support: '2.4 m stand', power: 1 / 32, at: [1.3, 1.9, -1.1], aim: [0, 1.4, 0] },
+      { purpose: 'rim', group: 'B', unit: 'Small flash, guide number 58', modifier: 'Strip 30 × 120 cm', support: '2.4 m stand', power: 1 / 32, at: [1.75, 1.9, -1.1], aim: [0, 1.4, 0] },
     ], 'Soft and even enough to turn the head; the panel lifts the far cheek.')
   setup('setup-close', 'Octa close, brass edge', 'a1',
     { at: [0.1, 1.3, 2.6], focalMm: 85, fNumber: F5_6 },
@@ -91,7 +91,7 @@ export function demoLighting(id: NamedIds, kit: readonly KitItem[], random: () =
     { zM: -2.8, widthM: 7, heightM: 3.2, colour: '#6b7076', what: 'Dome drum, grey distemper' },
     [
       { purpose: 'main', group: 'A', unit: 'Battery head 400 Ws', modifier: 'White umbrella 110 cm', support: '3.3 m stand', power: 1 / 2, at: [-0.9, 2.3, 2.6], aim: [0, 1.2, 0] },
-      { purpose: 'rim', group: 'B', unit: 'Battery head 200 Ws', modifier: 'Strip 30 × 120 cm', support: '3.3 m stand', power: 1 / 8, at: [2, 2, -1.2], aim: [0, 1.3, 0] },
+      { purpose: 'rim', group: 'B', unit: 'Battery head 200 Ws', modifier: 'Strip 30 × 120 cm', support: '3.3 m stand', power: 1 / 8, at: [2.9, 2, -1.2], aim: [0, 1.3, 0] },
       { purpose: 'background', group: 'C', unit: 'Small flash, guide number 58', support: 'Floor stand', power: 1 / 16, at: [0, 0.5, -1.6], aim: [0, 1.6, -2.8], zoomMm: 24 },
     ], 'Room for three and for a raised cup.')
 

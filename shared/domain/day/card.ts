@@ -13,13 +13,18 @@ export function cardRows(changeover: Changeover, shot: PlannedShot | undefined):
   const { setMove, lighting, wardrobe } = changeover
   const rows: CardRow[] = []
   if (setMove) {
-    const detail = [
-      ...(setMove.strikeMin > 0 ? [`strike ${setMove.fromSetName}, ${minutesLabel(setMove.strikeMin)}`] : []),
-      ...(setMove.dressMin > 0 ? [`dress ${setMove.toSetName}, ${minutesLabel(setMove.dressMin)}`] : []),
-    ]
     const to = setMove.otherRoom && setMove.toRoomName !== '' ? setMove.toRoomName : setMove.toSetName
-    const what = setMove.fromSetId === null ? `Dress ${setMove.toSetName}` : `Move to ${to}`
-    rows.push({ key: `set:${setMove.toSetId ?? ''}`, sign: { kind: 'set' }, what, detail: detail.join(' · ') })
+    const dress = setMove.dressMin > 0 ? minutesLabel(setMove.dressMin) : ''
+    const isFirst = setMove.fromSetId === null
+    const what = isFirst ? `Dress ${setMove.toSetName}` : `Move to ${to}`
+    const parts = isFirst
+      ? [dress]
+      : [
+          setMove.strikeMin > 0 ? `strike ${setMove.fromSetName}, ${minutesLabel(setMove.strikeMin)}` : '',
+          dress === '' ? '' : `dress ${setMove.toSetName}, ${dress}`,
+        ]
+    const detail = parts.filter((part) => part !== '').join(' · ')
+    rows.push({ key: `set:${setMove.toSetId ?? ''}`, sign: { kind: 'set' }, what, detail })
   }
   for (const action of lighting) {
     const sign: CardSign = action.group === null ? { kind: 'plain' } : { kind: 'group', letter: action.group }

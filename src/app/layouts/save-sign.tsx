@@ -1,4 +1,4 @@
-import { useEffect, useState } from 'react'
+import { useState } from 'react'
 import type { SaveState } from '#src/realtime/save-state.ts'
 import { useSaveState } from '#src/realtime/use-save-state.ts'
 import { cn } from '#src/lib/cn.ts'
@@ -16,24 +16,6 @@ const WORDS: Record<SaveState['kind'], string> = {
 }
 
 const LAMPS: Record<SaveState['kind'], LampState> = { saved: 'lit', saving: 'half', offline: 'half', 'not-saved': 'unlit', reload: 'unlit' }
-
-/** Saving that takes less than a second is not worth a word. */
-const SAVING_SHOWN_AFTER_MS = 1000
-
-function useCalmSaveState(): SaveState {
-  const state = useSaveState()
-  const [waited, setWaited] = useState(false)
-  const isSaving = state.kind === 'saving'
-  useEffect(() => {
-    if (!isSaving) return
-    const timer = setTimeout(() => setWaited(true), SAVING_SHOWN_AFTER_MS)
-    return () => {
-      clearTimeout(timer)
-      setWaited(false)
-    }
-  }, [isSaving])
-  return isSaving && !waited ? { kind: 'saved' } : state
-}
 
 function explanation(state: SaveState): string {
   switch (state.kind) {
@@ -56,7 +38,7 @@ export type SaveSignProps = { tone: 'night' | 'paper' }
 
 /** Says whether what was done is safe, in five words that are the same everywhere. One press says more. */
 export function SaveSign({ tone }: SaveSignProps) {
-  const state = useCalmSaveState()
+  const state = useSaveState()
   const isTrouble = state.kind === 'not-saved' || state.kind === 'reload'
   return (
     <>

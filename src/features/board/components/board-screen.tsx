@@ -1,4 +1,5 @@
 import { MoreHorizontal } from 'lucide-react'
+import { Suspense, lazy } from 'react'
 import { usePlan } from '#src/realtime/use-plan.ts'
 import { count } from '#src/lib/format.ts'
 import { useShoot } from '#src/realtime/shoot-realtime.tsx'
@@ -7,6 +8,7 @@ import { IconButton } from '#src/ui/button.tsx'
 import { Menu } from '#src/ui/menu.tsx'
 import { ScreenBar } from '#src/ui/screen-bar.tsx'
 import { useIsPhone } from '#src/ui/use-media.ts'
+import { Waiting } from '#src/ui/waiting.tsx'
 import { BoardPlanProvider } from '../board-plan.ts'
 import { useAddPictures } from '../use-add-pictures.ts'
 import { useClipboard } from '../use-clipboard.ts'
@@ -16,13 +18,15 @@ import { WallControlProvider, useWall } from '../wall-control.ts'
 import { type WallItems, useWallItems } from '../wall-item.ts'
 import { select } from '../wall-state.ts'
 import { EmptyBoard } from './empty-board.tsx'
-import { Inspector } from './inspector/inspector.tsx'
-import { PhoneBoard } from './phone/phone-board.tsx'
 import { PictureInputFields, usePictureInputs } from './picture-inputs.tsx'
 import { SearchBox } from './search-box.tsx'
-import { Strip } from './strip/strip.tsx'
 import { Wall } from './wall.tsx'
 import { ZoomBar } from './zoom-bar.tsx'
+
+// The wall comes first; what stands around it follows while it is already in the hand.
+const Inspector = lazy(async () => ({ default: (await import('./inspector/inspector.tsx')).Inspector }))
+const Strip = lazy(async () => ({ default: (await import('./strip/strip.tsx')).Strip }))
+const PhoneBoard = lazy(async () => ({ default: (await import('./phone/phone-board.tsx')).PhoneBoard }))
 
 /** The shared wall of references and the strip of shots. */
 export function BoardScreen() {
@@ -35,7 +39,9 @@ export function BoardScreen() {
   return (
     <WallControlProvider value={control}>
       <BoardPlanProvider value={plan}>
-        <Board key={shoot.id} items={items} mayWrite={mayWrite} undo={undo} />
+        <Suspense fallback={<Waiting />}>
+          <Board key={shoot.id} items={items} mayWrite={mayWrite} undo={undo} />
+        </Suspense>
       </BoardPlanProvider>
     </WallControlProvider>
   )
@@ -103,9 +109,13 @@ function WideBoard({ items, mayWrite, undo }: BoardProps) {
           {items.size === 0 && <EmptyBoard mayWrite={mayWrite} onAdd={openFiles} />}
           <ZoomBar mayWrite={mayWrite} canUndo={undo.canUndo} canRedo={undo.canRedo} />
         </div>
-        <Inspector items={items} mayWrite={mayWrite} />
+        <Suspense fallback={<div className="w-[250px] flex-none border-l border-hair bg-paper" />}>
+          <Inspector items={items} mayWrite={mayWrite} />
+        </Suspense>
       </div>
-      <Strip mayWrite={mayWrite} />
+      <Suspense fallback={<div className="h-[211px] flex-none bg-night" />}>
+        <Strip mayWrite={mayWrite} />
+      </Suspense>
     </div>
   )
 }

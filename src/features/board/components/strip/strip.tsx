@@ -65,7 +65,7 @@ export function Strip({ mayWrite }: { mayWrite: boolean }) {
     plan.shots.size > 1 ? `${minutesWords(totalMin)} of changeover` : '',
   ].filter((part) => part !== '')
   return (
-    <section aria-label="Shots, in order" className="on-night flex-none bg-night pt-2.5 text-bone">
+    <section aria-label="Shots, in order" className="on-night min-h-[211px] flex-none bg-night pt-2.5 text-bone">
       <header className="flex items-baseline gap-3 px-6">
         <h2 className="text-lg">Shots, in order</h2>
         <span className="text-xs text-bone-soft">{hint.join(' · ')}</span>

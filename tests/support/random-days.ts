@@ -1,6 +1,7 @@
 import { dayIdSchema, lookIdSchema, roomIdSchema, ruleIdSchema, setIdSchema, setupIdSchema, shotIdSchema, sitterIdSchema } from '#shared/ids.ts'
 import type { OrderProblem, ProblemLook, ProblemShot, ProblemSitter, Transition } from '#shared/domain/order/problem.ts'
 import type { ProblemRule } from '#shared/domain/order/rules.ts'
+import { schedule } from '#shared/domain/order/schedule.ts'
 
 /** A readable id: the number in the last digits of a UUID. */
 export function idOf(kind: number, number: number): string {
@@ -80,18 +81,18 @@ export function randomDay(random: () => number, recipe: DayRecipe): OrderProblem
   }
   const most = recipe.rules ?? 2
   const rules: ProblemRule[] = []
-  const rule = (body: Omit<ProblemRule, 'ruleId'>) => rules.push({ ...body, ruleId: ruleIdSchema.parse(idOf(7, rules.length)) } as ProblemRule)
+  const rule = (body: DistributiveOmit<ProblemRule, 'ruleId'>) => rules.push({ ...body, ruleId: ruleIdSchema.parse(idOf(7, rules.length)) })
   const shot = () => upTo(n - 1)
   for (let count = n > 1 ? upTo(most) : 0; count > 0; count--) {
     const one = shot()
     const other = (one + 1 + upTo(n - 2)) % n
     const from = 600 + 15 * upTo(16)
     const kind = upTo(4)
-    if (kind === 0) rule({ kind: 'pin-place', shot: one, index: random() < 0.3 ? -1 : upTo(n) } as Omit<ProblemRule, 'ruleId'>)
-    else if (kind === 1) rule({ kind: 'pin-clock', shot: one, atMin: from, toleranceMin: 5 * upTo(6) } as Omit<ProblemRule, 'ruleId'>)
-    else if (kind === 2) rule({ kind: 'after', shot: one, after: other } as Omit<ProblemRule, 'ruleId'>)
-    else if (kind === 3) rule({ kind: 'together', shots: [...new Set([one, other, shot()])] } as Omit<ProblemRule, 'ruleId'>)
-    else rule({ kind: 'window', shot: one, fromMin: from, toMin: from + 60 + 15 * upTo(10) } as Omit<ProblemRule, 'ruleId'>)
+    if (kind === 0) rule({ kind: 'pin-place', shot: one, index: random() < 0.3 ? -1 : upTo(n) })
+    else if (kind === 1) rule({ kind: 'pin-clock', shot: one, atMin: from, toleranceMin: 5 * upTo(6) })
+    else if (kind === 2) rule({ kind: 'after', shot: one, after: other })
+    else if (kind === 3) rule({ kind: 'together', shots: [...new Set([one, other, shot()])] })
+    else rule({ kind: 'window', shot: one, fromMin: from, toMin: from + 60 + 15 * upTo(10) })
   }
   const withMeal = recipe.meal ?? random() < 0.6
   return {
@@ -118,3 +119,45 @@ export function* permutations<T>(items: readonly T[]): Generator<T[]> {
     for (const rest of permutations([...items.slice(0, index), ...items.slice(index + 1)])) yield [first, ...rest]
   }
 }
+
+/**
+ * A day on which all rules can be kept: rules of every kind are read off the times of a hidden order, with some give.
+ * Returned in another order than the hidden one.
+ */
+export function plannedDay(random: () => number, recipe: DayRecipe): OrderProblem {
+  const upTo = (most: number) => Math.floor(random() * (most + 1))
+  const bare = randomDay(random, { ...recipe, rules: 0, hours: false, hardOutMin: recipe.hardOutMin ?? 2000 })
+  const hidden = bare.shots.map((_, index) => index)
+  for (let at = hidden.length - 1; at > 0; at--) {
+    const other = upTo(at)
+    ;[hidden[at], hidden[other]] = [hidden[other] ?? 0, hidden[at] ?? 0]
+  }
+  const shotIds = hidden.flatMap((index) => bare.shots[index]?.id ?? [])
+  const day = schedule({ ...bare, meal: null }, shotIds)
+  const timesOf = (place: number) => ({ startMin: day.shots[place]?.startMin ?? 0, endMin: day.shots[place]?.endMin ?? 0 })
+  const give = 60 + (bare.meal?.minutes ?? 0)
+  const rules: ProblemRule[] = []
+  const rule = (body: DistributiveOmit<ProblemRule, 'ruleId'>) => rules.push({ ...body, ruleId: ruleIdSchema.parse(idOf(7, rules.length)) })
+  const n = hidden.length
+  for (let count = recipe.rules ?? 4; count > 0 && n > 2; count--) {
+    const place = upTo(n - 2)
+    const shot = hidden[place] ?? 0
+    const next = hidden[place + 1] ?? 0
+    const { startMin, endMin } = timesOf(place)
+    const kind = count % 5
+    if (kind === 0) rule({ kind: 'pin-place', shot: hidden[0] ?? 0, index: 0 })
+    else if (kind === 1) rule({ kind: 'after', shot: hidden[place + 1 + upTo(n - 2 - place)] ?? next, after: shot })
+    else if (kind === 2) rule({ kind: 'together', shots: [shot, next] })
+    else if (kind === 3) rule({ kind: 'window', shot, fromMin: startMin - 30, toMin: endMin + give })
+    else rule({ kind: 'pin-clock', shot, atMin: Math.ceil(startMin), toleranceMin: give })
+  }
+  const sitters = bare.sitters.map((sitter, s): ProblemSitter => {
+    const places = hidden.flatMap((index, place) => (bare.shots[index]?.wears.some((wear) => wear.sitter === s) ? [place] : []))
+    if (places.length === 0 || s % 2 === 1) return sitter
+    const from = timesOf(Math.min(...places)).startMin - 60
+    return { ...sitter, hours: [Math.floor(from), Math.ceil(timesOf(Math.max(...places)).endMin) + give] }
+  })
+  return { ...bare, rules, sitters, hardOutMin: recipe.hardOutMin ?? Math.ceil(day.wrapMin) + give }
+}
+
+type DistributiveOmit<T, K extends PropertyKey> = T extends unknown ? Omit<T, K> : never

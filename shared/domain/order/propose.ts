@@ -3,17 +3,17 @@ import { type Objective, compareObjectives, objectiveOf } from './objective.ts'
 import type { OrderProblem } from './problem.ts'
 import { schedule } from './schedule.ts'
 import { assignmentBound } from './search/assignment-bound.ts'
-import { type Compiled, at, compile } from './search/compiled.ts'
+import { type Compiled, compile } from './search/compiled.ts'
 import { type Conflict, findConflict } from './search/conflict.ts'
 import { compareScores, compareTies } from './search/evaluate.ts'
 import { improveOrders } from './search/improve.ts'
-import { type Known, LAYERS_MAX, searchLayers } from './search/layers.ts'
+import { type Known, LAYERS_MAX, earliestWrap, searchLayers } from './search/layers.ts'
 
 /** Up to this many shots the answer is proven (unless the budget is smaller than any day needs). */
 export const EXACT_SHOTS = 12
 
 /** Units of work (one shot placed once) that a screen allows by default: a few seconds. */
-export const DEFAULT_BUDGET = 16_000_000
+export const DEFAULT_BUDGET = 5_000_000
 
 export type ProposeOptions = { seed: number; budget: number }
 
@@ -157,12 +157,12 @@ class Run {
   }
 }
 
-/** No order wraps before: all shots, the meal and the cheapest way into each; or a shot that may not begin sooner. */
+/** No order wraps before: all shots, the meal and the cheapest ways in; or one shot after another as they become possible. */
 function leastWrapOf(c: Compiled): number {
   if (c.n === 0) return c.lightsOn
   const shots = c.minutes.reduce((sum, minutes) => sum + minutes, 0)
-  const held = c.minutes.reduce((latest, minutes, shot) => Math.max(latest, at(c.notBefore, shot) + minutes), 0)
-  return Math.max(held, c.lightsOn + shots + (c.hasMeal && c.n > 1 ? c.mealMin : 0) + assignmentBound(c))
+  const path = c.lightsOn + shots + (c.hasMeal && c.n > 1 ? c.mealMin : 0) + assignmentBound(c)
+  return Math.max(path, earliestWrap(c, 0, c.lightsOn))
 }
 
 /** Whether a proposal is better than the order as it stands, by the objective. */

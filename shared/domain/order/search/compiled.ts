@@ -38,6 +38,10 @@ export type Compiled = {
   leastIn: Float64Array
   light: Uint8Array
   notBefore: Float64Array
+  /** No shot begins sooner: windows, clock pins, and sitters' hours with their first chair and change. */
+  soonest: Float64Array
+  /** Shots by `soonest` less their cheapest way in. */
+  bySoonest: readonly number[]
   latestStart: readonly (readonly number[])[]
   latestEnd: readonly (readonly number[])[]
   /** Shots that have any latest start or end. */
@@ -93,6 +97,8 @@ export function compile(problem: OrderProblem): Compiled {
     ...rules.flatMap((rule) => (rule.kind === 'window' && rule.shot === shot ? [rule.toMin] : [])),
     ...item(problem.shots, shot).wears.flatMap((wear) => problem.sitters[wear.sitter]?.hours?.[1] ?? []),
   ])
+  const held = Float64Array.from(all, (shot) => Math.max(EVER, notBefore(problem, shot)))
+  const soonest = Float64Array.from(all, (shot) => Math.max(at(held, shot), ...item(problem.shots, shot).wears.map((wear) => firstReady(problem, wear.sitter))))
   const byId = [...all].sort((a, b) => (item(problem.shots, a).id < item(problem.shots, b).id ? -1 : 1))
   const idRank = new Uint16Array(n)
   byId.forEach((shot, rank) => {
@@ -111,7 +117,9 @@ export function compile(problem: OrderProblem): Compiled {
     least,
     leastIn,
     light,
-    notBefore: Float64Array.from(all, (shot) => Math.max(EVER, notBefore(problem, shot))),
+    notBefore: held,
+    soonest,
+    bySoonest: [...all].sort((a, b) => at(soonest, a) - at(leastIn, a) - at(soonest, b) + at(leastIn, b)),
     latestStart,
     latestEnd,
     timed: all.filter((shot) => item(latestStart, shot).length + item(latestEnd, shot).length > 0),
@@ -131,6 +139,13 @@ export function compile(problem: OrderProblem): Compiled {
 
 function placeOf(index: number, n: number): number {
   return index < 0 ? n - 1 : Math.min(index, n - 1)
+}
+
+/** When a sitter can be ready for a first look at the soonest. */
+function firstReady(problem: OrderProblem, sitter: number): number {
+  const work = problem.looks.flatMap((look, index) => (look.sitter === sitter ? [wardrobeWork(problem, -1, index)] : []))
+  const least = Math.min(...work.map((minutes) => minutes.chairMin + minutes.changeMin))
+  return (problem.sitters[sitter]?.hours?.[0] ?? EVER) + least
 }
 
 /** What a sitter of both shots needs between them, at least. */

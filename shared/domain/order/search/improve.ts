@@ -4,6 +4,9 @@ import { Evaluator, NO_SCORE, type Score, compareScores, compareTies } from './e
 import type { Known } from './layers.ts'
 import { seededRandom } from './random.ts'
 
+/** Up to this many shots every local search looks at the tiers below the wrap; beyond, only that of the best order. */
+const TIES_SHOTS = 16
+
 /** Stands for minutes late, for each breach, while an order is being led towards keeping all rules. */
 const BREACH_MIN = 30
 
@@ -47,7 +50,14 @@ class LocalSearch {
   private stale = 0
   private readonly starts: number[][]
   private readonly precedes: Uint8Array
-  private touched: Uint8Array
+  /** (n + 1) × (n + 1) minutes at least between two shots; row 0 is the start of the day, column n its end. */
+  private readonly ways: Float64Array
+  private readonly touched: Uint8Array
+  private readonly ordered: boolean
+  private readonly limit: Int16Array
+  private limitStale = true
+  /** Whether moves that leave the wrap as it is are worked out too, for the tiers below it. */
+  private tiesToo = true
 
   constructor(c: Compiled, seed: number) {
     this.c = c
@@ -60,6 +70,11 @@ class LocalSearch {
       for (const before of shots) this.precedes[before * c.n + shot] = 1
     })
     this.touched = new Uint8Array(c.n).fill(1)
+    const width = c.n + 1
+    this.ordered = c.after.some((shots) => shots.length > 0)
+    this.limit = new Int16Array(this.ordered ? c.n * width : 0)
+    this.ways = new Float64Array(width * width)
+    for (let from = 0; from <= c.n; from++) for (let to = 0; to < c.n; to++) this.ways[from * width + to] = at(c.least, from * c.n + to)
   }
 
   /** The order as it stands, and the seeded starts, none of them improved yet. */
@@ -79,6 +94,7 @@ class LocalSearch {
     const kept = { order: [...this.order], score: { ...this.score } }
     if (this.stale > 0) this.shake()
     this.descend()
+    this.tiesToo = this.c.n <= TIES_SHOTS
     const ahead = this.compare(this.score, kept.score)
     if (ahead < 0) this.stale = 1
     else {
@@ -87,14 +103,22 @@ class LocalSearch {
       const drift = this.score.broken === kept.score.broken && this.score.wrap <= limit && this.random() < 0.1
       if (ahead > 0 && !drift) this.use(kept.order)
     }
-    if (this.stale > 60 + 4 * this.c.n) {
-      this.use([...this.best.order])
-      this.stale = 1
-    }
+    if (this.stale > 60 + 4 * this.c.n) this.polish()
+  }
+
+  /** Back to the best order, and below its wrap to the other tiers. */
+  private polish(): void {
+    this.use([...this.best.order])
+    this.touched.fill(1)
+    this.tiesToo = true
+    this.descend()
+    this.tiesToo = this.c.n <= TIES_SHOTS
+    this.stale = 1
   }
 
   private use(order: number[]): void {
     this.order = order
+    this.limitStale = true
     this.score = { ...this.evaluator.score(order, this.trial) }
     this.spent += this.c.n
     this.path = this.pathOf(order)
@@ -114,47 +138,59 @@ class LocalSearch {
     return strayed || compareScores(a, b)
   }
 
-  private way(from: number, to: number): number {
-    return to < 0 ? 0 : at(this.c.least, (from + 1) * this.c.n + to)
-  }
-
   private pathOf(order: readonly number[]): number {
     let path = 0
-    for (let i = 0; i < order.length; i++) path += this.way(i === 0 ? -1 : at(order, i - 1), at(order, i))
+    for (let i = 0; i < order.length; i++) path += at(this.ways, (i === 0 ? 0 : at(order, i - 1) + 1) * (this.c.n + 1) + at(order, i))
     return path
   }
 
   private shake(): void {
     const { n } = this.c
-    const times = this.random() < 0.7 ? 1 : 2
     this.touched.fill(0)
-    for (let time = 0; time < times; time++) {
+    let wanted = this.random() < 0.7 ? 1 : 2
+    for (let tries = 0; tries < 40 && wanted > 0; tries++) {
       const reach = Math.min(n, 3 + Math.floor(this.random() * Math.min(n, 30)))
       const first = Math.floor(this.random() * (n - reach + 1))
       const cuts = [0, 0, 0].map(() => first + Math.floor(this.random() * (reach + 1))).sort((a, b) => a - b)
       const [a, b, d] = [at(cuts, 0), at(cuts, 1), at(cuts, 2)]
-      if (a === b || b === d || (this.score.broken === 0 && !this.keepsAfter(a, b, d))) continue
+      if (a === b || b === d || (this.score.broken === 0 && d > this.limitOf(a, b))) continue
       this.swapRuns(a, b, d)
+      wanted--
     }
     this.score = { ...this.evaluator.score(this.order, this.trial) }
     this.spent += n
     this.path = this.pathOf(this.order)
   }
 
-  private keepsAfter(a: number, b: number, d: number): boolean {
-    for (let j = b; j < d; j++) if (this.barred(a, b, at(this.order, j))) return false
-    return true
+  private limitOf(a: number, b: number): number {
+    return this.ordered ? at(this.limits(), a * (this.c.n + 1) + b) : this.c.n
   }
 
-  /** Whether a shot of the run [a, b) has to come before `shot`. */
-  private barred(a: number, b: number, shot: number): boolean {
-    for (let i = a; i < b; i++) if (at(this.precedes, at(this.order, i) * this.c.n + shot) === 1) return true
-    return false
+  /**
+   * For each run [a, b) the first place behind it whose shot has to come after one of the run: exchanges with [b, d)
+   * keep the `after` rules for d up to there.
+   */
+  private limits(): Int16Array {
+    const { limit, order } = this
+    const { n } = this.c
+    if (!this.limitStale) return limit
+    this.limitStale = false
+    const width = n + 1
+    for (let a = n - 1; a >= 0; a--) {
+      const row = at(order, a) * n
+      let first = n
+      for (let b = n; b > a; b--) {
+        if (b < n && at(this.precedes, row + at(order, b)) === 1) first = b
+        limit[a * width + b] = a + 1 < b ? Math.min(first, at(limit, (a + 1) * width + b)) : first
+      }
+    }
+    return limit
   }
 
   /** Exchanges the runs [a, b) and [b, d). */
   private swapRuns(a: number, b: number, d: number): void {
     const { order } = this
+    this.limitStale = true
     const first = order.slice(a, b)
     const second = order.slice(b, d)
     let to = a
@@ -169,20 +205,17 @@ class LocalSearch {
   /** Improves by exchanging runs until no exchange near a changed place helps. */
   private descend(): void {
     const { n } = this.c
-    let going = true
-    while (going) {
-      going = false
-      for (let a = 0; a < n; a++) {
-        const shot = at(this.order, a)
-        const before = a === 0 ? -1 : at(this.order, a - 1)
-        if (at(this.touched, shot) === 0 && (before < 0 || at(this.touched, before) === 0)) continue
-        if (this.improveFrom(a)) {
-          going = true
-          break
-        }
-        this.touched[shot] = 0
-      }
+    let quiet = 0
+    for (let a = 0; quiet < n; a = a + 1 < n ? a + 1 : 0) {
+      const shot = at(this.order, a)
+      const before = a === 0 ? -1 : at(this.order, a - 1)
+      const near = at(this.touched, shot) === 1 || (before >= 0 && at(this.touched, before) === 1)
+      if (near && this.improveFrom(a)) {
+        quiet = 0
+        a = Math.max(-1, a - 2)
+      } else quiet++
     }
+    this.touched.fill(0)
   }
 
   /** Tries all exchanges with the cut before place `a`: as the first, the middle and the last of the three cuts. */
@@ -198,23 +231,25 @@ class LocalSearch {
 
   /** Tries the exchanges of [a, b) with [b, d) for d from `from` to `to`. */
   private improveAt(a: number, b: number, from: number, to: number): boolean {
-    const { order, score } = this
+    const { order, score, ways } = this
     const { n } = this.c
-    const left = a === 0 ? -1 : at(order, a - 1)
+    const width = n + 1
+    const left = (a === 0 ? 0 : at(order, a - 1) + 1) * width
     const headA = at(order, a)
-    const tailA = at(order, b - 1)
+    const tailA = (at(order, b - 1) + 1) * width
     const headB = at(order, b)
-    const base = this.path - this.way(left, headA) - this.way(tailA, headB) + this.way(left, headB)
+    const base = this.path - at(ways, left + headA) - at(ways, tailA + headB) + at(ways, left + headB)
     const whole = score.broken === 0
-    if (whole && from > b + 1 && !this.keepsAfter(a, b, from - 1)) return false
-    for (let d = from; d <= to; d++) {
-      const tailB = at(order, d - 1)
-      if (whole && this.barred(a, b, tailB)) return false
-      const right = d === n ? -1 : at(order, d)
-      const path = base - this.way(tailB, right) + this.way(tailB, headA) + this.way(tailA, right)
-      this.spent += 0.05
-      if (whole && this.fixed + path > score.wrap) continue
-      if (this.tryExchange(a, b, d, path)) return true
+    const most = whole ? score.wrap - this.fixed - (this.tiesToo ? 0 : 1e-9) : Infinity
+    const until = whole ? Math.min(to, this.limitOf(a, b)) : to
+    this.spent += 0.02
+    for (let d = from; d <= until; d++) {
+      const last = at(order, d - 1)
+      const tailB = (last + 1) * width
+      const right = d === n ? n : at(order, d)
+      const path = base - at(ways, tailB + right) + at(ways, tailB + headA) + at(ways, tailA + right)
+      this.spent += 0.02
+      if (path <= most && this.tryExchange(a, b, d, path)) return true
     }
     return false
   }

@@ -17,6 +17,10 @@ export type LayersResult = {
   spent: number
 }
 
+/** What a label and a comparison of two cost, in units of one shot placed once by the local search (measured). */
+const CHILD_WORK = 5
+const COMPARE_WORK = 0.2
+
 type Options = {
   /** An order known already; only better ones are looked for. */
   known: Known | null
@@ -44,7 +48,7 @@ export function* searchLayers(c: Compiled, options: Options): Generator<number, 
     const next = new Map<number, Node>()
     for (const node of layer.values()) {
       for (const label of node.labels) search.expand(node, label, place, next)
-      if (search.spent - search.reported > 4000) {
+      if (search.spent - search.reported > 20_000) {
         search.reported = search.spent
         yield search.spent
       }
@@ -98,7 +102,7 @@ class Layers {
     for (let shot = 0; shot < c.n; shot++) {
       if ((node.mask & (1 << shot)) !== 0) continue
       if (this.allowed !== null && !this.allowed(node.mask, node.last, shot)) continue
-      this.spent++
+      this.spent += CHILD_WORK
       this.child(node, label, shot, place, into)
     }
   }
@@ -122,7 +126,7 @@ class Layers {
     const should = label.should + (at(c.need, shot) === 1 ? missed : 0)
     const light = label.light + at(c.light, (node.last + 1) * c.n + shot)
     const wait = label.wait + step.wait
-    const least = scratch.end + rest + (c.hasMeal && !scratch.fed && place < c.n - 1 ? c.mealMin : 0)
+    const least = Math.max(scratch.end + rest + (c.hasMeal && !scratch.fed && place < c.n - 1 ? c.mealMin : 0), earliestWrap(c, mask, scratch.end))
     low.broken = broken + this.surelyLate(mask, scratch.end)
     if (options.strict && low.broken > 0) return
     low.must = must
@@ -144,7 +148,7 @@ class Layers {
       shot, before: label, broken, split, must, should, light, wait, tails, ready: readyTimes(c, target, scratch), least,
     }
     if (place === c.n - 1) this.arrive(made)
-    else keep(c, target, made)
+    else this.spent += COMPARE_WORK * keep(c, target, made)
   }
 
   /** Whether the lower bounds in `low` leave a chance to beat the best order known. */
@@ -197,7 +201,7 @@ class Layers {
     let late = 0
     for (const shot of c.timed) {
       if ((mask & (1 << shot)) !== 0) continue
-      const start = Math.max(end + at(c.leastIn, shot), at(c.notBefore, shot))
+      const start = Math.max(end + at(c.leastIn, shot), at(c.soonest, shot))
       for (const latest of item(c.latestStart, shot)) if (start > latest) late++
       for (const latest of item(c.latestEnd, shot)) if (start + at(c.minutes, shot) > latest) late++
     }
@@ -209,7 +213,7 @@ class Layers {
     const { c, low } = this
     for (let shot = 0; shot < c.n; shot++) {
       if ((mask & (1 << shot)) !== 0 || at(c.need, shot) === 2) continue
-      const start = Math.max(end + at(c.leastIn, shot), at(c.notBefore, shot))
+      const start = Math.max(end + at(c.leastIn, shot), at(c.soonest, shot))
       if (start + at(c.minutes, shot) <= c.hardOut) continue
       if (at(c.need, shot) === 0) low.must++
       else low.should++
@@ -246,12 +250,29 @@ class Layers {
   }
 }
 
-/** Puts a label among those of its node unless one of them is as good; drops those it makes needless. */
-function keep(c: Compiled, node: Node, label: Label): void {
+/** Shots in `mask` done by `end`, no completion wraps before: one shot after another as they become possible, each by its cheapest way in. */
+export function earliestWrap(c: Compiled, mask: number, end: number): number {
+  let time = end
+  for (const shot of c.bySoonest) {
+    if ((mask & (1 << shot)) !== 0) continue
+    const way = at(c.leastIn, shot)
+    time = Math.max(time + way, at(c.soonest, shot)) + at(c.minutes, shot)
+  }
+  return time
+}
+
+/** Puts a label among those of its node unless one of them is as good; drops those it makes needless. Returns the comparisons. */
+function keep(c: Compiled, node: Node, label: Label): number {
   const { labels } = node
-  for (const other of labels) if (dominates(c, node, other, label)) return
+  let compared = 0
+  for (const other of labels) {
+    compared++
+    if (dominates(c, node, other, label)) return compared
+  }
+  compared += labels.length
   let kept = 0
   for (const other of labels) if (!dominates(c, node, label, other)) labels[kept++] = other
   labels.length = kept
   labels.push(label)
+  return compared
 }

@@ -15,7 +15,7 @@ export type PathBound = {
 
 /** `strict`: orders that break a rule about places (after, place pins, together) are no way on. */
 export function pathBound(c: Compiled, strict: boolean): PathBound {
-  return c.n <= PATH_BOUND_MAX ? exactBound(c, strict) : looseBound(c)
+  return c.n <= PATH_BOUND_MAX ? exactBound(c, strict) : looseBound(c, strict)
 }
 
 function exactBound(c: Compiled, strict: boolean): PathBound {
@@ -50,17 +50,52 @@ function exactBound(c: Compiled, strict: boolean): PathBound {
   return { minutes: (mask, last) => at(minutes, mask * n + last), lights: (mask, last) => at(lights, mask * n + last) }
 }
 
-/** For many shots: each of the rest comes by its cheapest way in. */
-function looseBound(c: Compiled): PathBound {
-  const alone = Float64Array.from(c.minutes, (minutes, shot) => minutes + at(c.leastIn, shot))
-  let knownMask = -1
-  let known = 0
-  const minutes = (mask: number) => {
-    if (mask === knownMask) return known
-    knownMask = mask
-    known = 0
-    for (let shot = 0; shot < c.n; shot++) if ((mask & (1 << shot)) === 0) known += at(alone, shot)
-    return known
+/**
+ * For many shots: every shot to come is entered once and all of them but one are left once, so the least ways in, and of
+ * what then remains the least ways out but the dearest, have to be paid (reduction of the matrix). Kept by set and last.
+ */
+function looseBound(c: Compiled, strict: boolean): PathBound {
+  const { n } = c
+  const ways = Float64Array.from(c.least)
+  if (strict) {
+    c.after.forEach((shots, shot) => {
+      for (const before of shots) ways[(shot + 1) * n + before] = Infinity
+    })
+  }
+  const known = new Map<number, number>()
+  const rest = new Int32Array(n)
+  const into = new Float64Array(n)
+  const compute = (mask: number, last: number): number => {
+    let count = 0
+    for (let shot = 0; shot < n; shot++) if ((mask & (1 << shot)) === 0) rest[count++] = shot
+    let total = 0
+    for (let j = 0; j < count; j++) {
+      const to = at(rest, j)
+      let least = at(ways, (last + 1) * n + to)
+      for (let i = 0; i < count; i++) if (i !== j) least = Math.min(least, at(ways, (at(rest, i) + 1) * n + to))
+      into[j] = least
+      total += least + at(c.minutes, to)
+    }
+    if (total === Infinity || count === 0) return total
+    let dearest = 0
+    for (let i = -1; i < count; i++) {
+      const from = i < 0 ? last : at(rest, i)
+      let least = Infinity
+      for (let j = 0; j < count; j++) if (i !== j) least = Math.min(least, at(ways, (from + 1) * n + at(rest, j)) - at(into, j))
+      if (least === Infinity) least = 0
+      total += least
+      if (i >= 0) dearest = Math.max(dearest, least)
+    }
+    return total - dearest
+  }
+  const minutes = (mask: number, last: number) => {
+    const key = mask * n + last
+    let value = known.get(key)
+    if (value === undefined) {
+      value = compute(mask, last)
+      known.set(key, value)
+    }
+    return value
   }
   return { minutes, lights: () => 0 }
 }

@@ -29,7 +29,20 @@ export type PictureProps = {
 const PAUSES_MS = [3000, 10_000, 30_000, 60_000]
 
 /** A stored picture in the size that fits; fills its box. Waiting, refused and missing are drawn, never a broken sign. */
-export function Picture({ uploadId, alt, state = 'stored', localUrl, sizes = '320px', size, tint, fit = 'cover', focus = '50% 30%', eager = false, why, className }: PictureProps) {
+export function Picture({
+  uploadId,
+  alt,
+  state = 'stored',
+  localUrl,
+  sizes = '320px',
+  size,
+  tint,
+  fit = 'cover',
+  focus = '50% 30%',
+  eager = false,
+  why,
+  className,
+}: PictureProps) {
   const source = localUrl ?? uploadId
   const [loaded, setLoaded] = useState('')
   const [failure, setFailure] = useState({ source: '', times: 0, isTrying: false })
@@ -50,7 +63,10 @@ export function Picture({ uploadId, alt, state = 'stored', localUrl, sizes = '32
 
   const words = state === 'refused' ? 'Not kept' : 'On its way'
   return (
-    <span className={cn('relative block overflow-hidden bg-ink/8', className)} style={tint === undefined ? undefined : { backgroundColor: tint }}>
+    <span
+      className={cn('relative block overflow-hidden bg-ink/8', className)}
+      style={tint === undefined ? undefined : { backgroundColor: tint }}
+    >
       {mayShow && !isMissing ? (
         <img
           key={`${source}:${times}`}
@@ -58,14 +74,24 @@ export function Picture({ uploadId, alt, state = 'stored', localUrl, sizes = '32
           draggable={false}
           decoding="async"
           loading={eager ? 'eager' : 'lazy'}
-          {...(localUrl === undefined ? { src: pictureUrl(uploadId, 960), srcSet: pictureSrcSet(uploadId, size), sizes } : { src: localUrl })}
+          {...(localUrl === undefined
+            ? { src: pictureUrl(uploadId, 960), srcSet: pictureSrcSet(uploadId, size), sizes }
+            : { src: localUrl })}
           onLoad={() => setLoaded(source)}
           onError={() => setFailure({ source, times: times + 1, isTrying: false })}
           style={{ objectFit: fit, objectPosition: focus }}
-          className={cn('absolute inset-0 size-full transition-opacity duration-[250ms]', loaded === source ? 'opacity-100' : 'opacity-0')}
+          className={cn(
+            'absolute inset-0 size-full transition-opacity duration-[250ms]',
+            loaded === source ? 'opacity-100' : 'opacity-0',
+          )}
         />
       ) : (
-        <span role="img" aria-label={`${alt}: ${words.toLowerCase()}`} title={why ?? words} className="absolute inset-0 flex flex-col items-center justify-center gap-1.5 bg-surround p-2 text-center text-xs text-ink-soft">
+        <span
+          role="img"
+          aria-label={`${alt}: ${words.toLowerCase()}`}
+          title={why ?? words}
+          className="absolute inset-0 flex flex-col items-center justify-center gap-1.5 bg-surround p-2 text-center text-xs text-ink-soft"
+        >
           <Lamp state={state === 'refused' ? 'unlit' : 'half'} />
           <span aria-hidden className="line-clamp-3">
             {why ?? words}

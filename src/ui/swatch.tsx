@@ -14,7 +14,11 @@ export function Swatch({ colour, sizePx = 14, className }: SwatchProps) {
       aria-hidden
       title={colour ?? 'No colour chosen'}
       style={{ width: sizePx, height: sizePx, ...(colour === null ? {} : { backgroundColor: colour }) }}
-      className={cn('inline-block flex-none rounded-sm', colour === null ? 'border border-dashed border-edge' : 'ring-1 ring-black/10 ring-inset', className)}
+      className={cn(
+        'inline-block flex-none rounded-sm',
+        colour === null ? 'border border-dashed border-edge' : 'ring-1 ring-black/10 ring-inset',
+        className,
+      )}
     />
   )
 }

@@ -71,6 +71,27 @@ export function SaveSign({ tone }: SaveSignProps) {
   )
 }
 
+/** On phones, above the bottom bar: whatever the screen shows, trouble is never out of sight. */
+export function SaveTrouble() {
+  const state = useSaveState()
+  if (state.kind === 'saved' || state.kind === 'saving') return null
+  return (
+    <div className="on-night no-print flex items-center gap-2.5 border-b border-night-3 bg-night-2 px-[18px] py-2 text-[0.8125rem] leading-tight text-bone">
+      <Lamp state={LAMPS[state.kind]} />
+      <span className="min-w-0 flex-1">
+        <b className="font-semibold">{WORDS[state.kind]}</b>
+        {state.kind === 'not-saved' && ` · ${state.why}`}
+        {state.kind === 'offline' && state.unsent > 0 && ` · ${count(state.unsent, 'change')} to send`}
+      </span>
+      {state.kind === 'reload' && (
+        <Button variant="glow" size="small" onClick={() => window.location.reload()}>
+          Load again
+        </Button>
+      )}
+    </div>
+  )
+}
+
 /** Speaks up for trouble, and once when it is over; ordinary saving is silent. */
 function Announcement({ state }: { state: SaveState }) {
   const [spoken, setSpoken] = useState('')

@@ -6,6 +6,7 @@ import { Sheet } from '#src/ui/sheet.tsx'
 import type { SectionLink, Sections } from '../sections.ts'
 import { BottomBar, BottomLink, SpineLink } from './frame.tsx'
 import { HereNow } from './here-now.tsx'
+import { SaveTrouble } from './save-sign.tsx'
 
 export type ShootBottomBarProps = {
   root: string
@@ -24,7 +25,8 @@ export function ShootBottomBar({ root, sections, lamps, title, where }: ShootBot
   const lampOf = (link: SectionLink) => (link.lamp === null ? undefined : lamps.get(link.lamp))
   const inMore = ![...sections.onPhone].some((link) => pathname.startsWith(`${root}/${link.path}`))
   return (
-    <>
+    <div>
+      <SaveTrouble />
       <BottomBar label="Shoot">
         {sections.onPhone.map((link) => {
           const lamp = lampOf(link)
@@ -58,6 +60,6 @@ export function ShootBottomBar({ root, sections, lamps, title, where }: ShootBot
           <HereNow />
         </div>
       </Sheet>
-    </>
+    </div>
   )
 }

@@ -45,6 +45,25 @@ function start(purpose: LightPurpose, face: Point, wallM: number): { at: Point; 
   }
 }
 
+/** Lights nearer to each other than this would be drawn over one another, metres. */
+const CLEAR_M = 0.4
+
+/** The first free place: as it is, on the other side of the sitter, then further and further out. */
+function freePlace(at: Point, face: Point, lights: readonly Light[]): Point {
+  const places = [0, 1, 2, 3].flatMap((step): Point[] => {
+    const out = (at[0] - face[0]) * (1 + step * 0.45)
+    return [
+      [face[0] + out, at[1], at[2]],
+      [face[0] - out, at[1], at[2]],
+    ]
+  })
+  return (
+    places.find((place) =>
+      lights.every((light) => Math.hypot(light.at[0] - place[0], light.at[2] - place[2]) > CLEAR_M),
+    ) ?? at
+  )
+}
+
 const round = (point: Point): Point => [
   Math.round(point[0] * 20) / 20,
   Math.round(point[1] * 20) / 20,
@@ -59,7 +78,8 @@ function freeGroup(lights: readonly Light[]): string | null {
 
 /** A light of this make at the usual place for its purpose, behind the others in the list. */
 export function newLight(whole: WholeSetup, input: NewLight, random: () => number): Light {
-  const { at, aim } = start(input.purpose, facePoint(whole), whole.setup.background.zM)
+  const face = facePoint(whole)
+  const { at, aim } = start(input.purpose, face, whole.setup.background.zM)
   return {
     ...input,
     id: lightIdSchema.parse(newId()),
@@ -67,7 +87,7 @@ export function newLight(whole: WholeSetup, input: NewLight, random: () => numbe
     group: freeGroup(whole.lights),
     gels: [],
     power: Math.max(1 / 16, 1 / input.unit.numbers.minPowerDenominator),
-    at: round(at),
+    at: round(freePlace(at, face, whole.lights)),
     aim: round(aim),
     zoomMm: input.unit.numbers.zoom.length > 0 ? (input.unit.numbers.zoom.at(-1)?.focalMm ?? null) : null,
     note: '',

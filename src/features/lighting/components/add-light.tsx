@@ -92,7 +92,7 @@ function AddLightForm({
                 checked={purpose === candidate}
                 onChange={() => setPurpose(candidate)}
               />
-              {purposeWord(candidate)}
+              {candidate.charAt(0).toUpperCase() + candidate.slice(1)}
               <span className="block text-xs font-normal text-ink-soft">{HINTS[candidate]}</span>
             </label>
           ))}

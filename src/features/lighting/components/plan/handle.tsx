@@ -26,12 +26,9 @@ export function Handle({ x, y, label, handlers, held, chosen, mayWrite, peer, ri
       tabIndex={0}
       aria-label={label}
       aria-pressed={chosen}
+      data-movable={mayWrite || undefined}
       aria-roledescription={mayWrite ? 'movable part' : undefined}
-      className={cn(
-        'group outline-none',
-        mayWrite ? (held ? 'cursor-grabbing' : 'cursor-grab') : 'cursor-pointer',
-        mayWrite && 'touch-none',
-      )}
+      className={cn('group outline-none', mayWrite ? (held ? 'cursor-grabbing' : 'cursor-grab') : 'cursor-pointer')}
       style={{ transform: `translate(${x}px, ${y}px)`, ...(peer ? { transition: 'transform 120ms linear' } : {}) }}
       {...handlers}
     >

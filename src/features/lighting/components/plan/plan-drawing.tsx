@@ -2,11 +2,12 @@ import { useState } from 'react'
 import type { WholeSetup } from '#shared/domain/plan/read-plan.ts'
 import { distanceBetween, facePoint } from '#shared/domain/lighting/geometry.ts'
 import type { Light, Prop, SitterPlace } from '#shared/domain/lighting/schema.ts'
-import { inSentence, metresLabel, purposeWord } from '#shared/domain/lighting/words.ts'
+import { inSentence, metresLabel } from '#shared/domain/lighting/words.ts'
 import { type Part, partKey } from '../../parts.ts'
 import { type Label, type PlanView, fitPlan, spreadLabels, toX, toZ } from '../../plan-view.ts'
 import { type Moving, handleLabel } from '../../use-moving.ts'
 import type { PeerHold } from '../../use-peer-moves.ts'
+import { holdTouch } from '../../hold-touch.ts'
 import { useSize } from '../../use-size.ts'
 import { Beam } from './beam.tsx'
 import { Handle } from './handle.tsx'
@@ -71,6 +72,7 @@ function Plan({ width, height, written, whole, ...rest }: PlanDrawingProps & { w
   ])
   return (
     <svg
+      ref={holdTouch}
       width={width}
       height={height}
       className="absolute inset-0 select-none"
@@ -207,29 +209,44 @@ function Plan({ width, height, written, whole, ...rest }: PlanDrawingProps & { w
   )
 }
 
+/** About how wide a word is, CSS px a letter, and how much the distances at the left take. */
+const LETTER_PX = 6.4
+const DIMENSION_PX = 76
+
+/** A label beside a point, outwards from the sitter, or inwards where it would be cut off. */
+function besideOf(
+  view: PlanView,
+  xM: number,
+  faceX: number,
+  away: number,
+  lines: readonly string[],
+): Pick<Label, 'x' | 'side'> {
+  const width = Math.max(...lines.map((line) => line.length)) * LETTER_PX
+  const x = toX(view, xM)
+  const left = { x: x - away, side: 'left' } as const
+  const right = { x: x + away, side: 'right' } as const
+  if (xM < faceX) return left.x - width < DIMENSION_PX ? right : left
+  return right.x + width > view.width - 4 ? left : right
+}
+
 function lightLabel(light: Light, whole: WholeSetup, view: PlanView, isNarrow: boolean): Label {
-  const side = light.at[0] < facePoint(whole)[0] ? 'left' : 'right'
+  const face = facePoint(whole)
   const sizePx = ((light.modifier?.numbers.widthM ?? 0) * view.pxPerM) / 2
-  const away = Math.max(26, Math.min(60, sizePx + 12))
-  const x = toX(view, light.at[0]) + (side === 'left' ? -away : away)
-  const name = `${light.group === null ? '' : `${light.group} · `}${inSentence(purposeWord(light.purpose))}`
+  const name = `${light.group === null ? '' : `${light.group} · `}${light.purpose}`
   const made = [light.modifier, ...light.gels].flatMap((part) => (part ? [inSentence(part.name)] : []))
+  const height = light.at[1].toFixed(2).replace(/0$/, '')
   const lines = isNarrow
     ? [name]
-    : [
-        [name, ...made].join(', '),
-        `${light.at[1].toFixed(2).replace(/0$/, '')} m up · ${metresLabel(distanceBetween(light.at, facePoint(whole)))} off`,
-      ]
-  return { key: light.id, x, y: toZ(view, light.at[2]) + 2, side, lines }
+    : [[name, ...made].join(', '), `${height} m up · ${metresLabel(distanceBetween(light.at, face))} off`]
+  const away = Math.max(26, Math.min(60, sizePx + 12))
+  return { key: light.id, ...besideOf(view, light.at[0], face[0], away, lines), y: toZ(view, light.at[2]) + 2, lines }
 }
 
 function propLabel(prop: Prop, whole: WholeSetup, view: PlanView): Label {
-  const side = prop.at[0] < facePoint(whole)[0] ? 'left' : 'right'
-  const halfM =
-    prop.kind === 'prop' ? prop.widthM / 2 : (prop.widthM / 2) * Math.abs(Math.cos((prop.turnDeg * Math.PI) / 180))
-  const away = Math.max(12, halfM * view.pxPerM + 10)
-  const x = toX(view, prop.at[0]) + (side === 'left' ? -away : away)
-  return { key: prop.id, x, y: toZ(view, prop.at[2]) + 4, side, lines: [prop.name] }
+  const turn = prop.kind === 'prop' ? 0 : (prop.turnDeg * Math.PI) / 180
+  const away = Math.max(12, (prop.widthM / 2) * Math.abs(Math.cos(turn)) * view.pxPerM + 10)
+  const beside = besideOf(view, prop.at[0], facePoint(whole)[0], away, [prop.name])
+  return { key: prop.id, ...beside, y: toZ(view, prop.at[2]) + 4, lines: [prop.name] }
 }
 
 /** Where a sitter's name stands: outside at the two ends of a row, above in between. */

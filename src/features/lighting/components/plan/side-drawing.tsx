@@ -8,6 +8,7 @@ import { type Part, partKey } from '../../parts.ts'
 import { beamTint } from '../../plan-view.ts'
 import { type Moving, handleLabel } from '../../use-moving.ts'
 import type { PeerHold } from '../../use-peer-moves.ts'
+import { holdTouch } from '../../hold-touch.ts'
 import { useSize } from '../../use-size.ts'
 import { Handle } from './handle.tsx'
 import { LightShape } from './light-shape.tsx'
@@ -88,6 +89,7 @@ function Side({
   }
   return (
     <svg
+      ref={holdTouch}
       width={width}
       height={height}
       className="absolute inset-0 select-none"

@@ -12,7 +12,10 @@ export const signOffInputSchema = z
     /** The version the person saw, so that a conflict can say what changed since; ignored unless it has this fingerprint. */
     saw: frozenLookSchema.optional(),
   })
-  .refine((input) => input.answer === 'signed off' || input.words.trim() !== '', { path: ['words'], message: 'say what should change' })
+  .refine((input) => input.answer === 'signed off' || input.words.trim() !== '', {
+    path: ['words'],
+    message: 'say what should change',
+  })
 export type SignOffInput = z.infer<typeof signOffInputSchema>
 
 export const signOffSchema = z.object({

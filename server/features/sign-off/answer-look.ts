@@ -24,13 +24,21 @@ export async function answerLook(ctx: Ctx, input: AnswerLook): Promise<SignOff> 
   const { shootId, lookId, answer, words } = input
   const { seq, looks, pictureHashes } = await readLookVersions(ctx, shootId)
   const planned = looks.get(lookId)
-  if (!planned) throw new AppError('NOT_FOUND', 'This look was taken out meanwhile. Your answer was not kept; what you typed is still here.')
+  if (!planned)
+    throw new AppError(
+      'NOT_FOUND',
+      'This look was taken out meanwhile. Your answer was not kept; what you typed is still here.',
+    )
   const frozen = freezeLook(planned, pictureHashes)
   const fingerprint = fingerprintOf(frozen)
   if (fingerprint !== input.fingerprint) {
-    throw new AppError('CONFLICT', 'This look changed while you had it open. Your answer was not kept; what you typed is still here. Look at what changed and answer again.', {
-      details: { fingerprint, differences: await sinceSeen(ctx, input, frozen) },
-    })
+    throw new AppError(
+      'CONFLICT',
+      'This look changed while you had it open. Your answer was not kept; what you typed is still here. Look at what changed and answer again.',
+      {
+        details: { fingerprint, differences: await sinceSeen(ctx, input, frozen) },
+      },
+    )
   }
   const kept = await withTransaction(ctx.db, async (tx) => {
     const [row] = await tx
@@ -57,7 +65,11 @@ export async function answerLook(ctx: Ctx, input: AnswerLook): Promise<SignOff> 
 }
 
 /** From what the person saw to what stands now: their own copy, a version on record, or the newest answer's. */
-async function sinceSeen(ctx: Ctx, { saw, fingerprint, shootId, lookId }: AnswerLook, now: FrozenLook): Promise<LookDifference[]> {
+async function sinceSeen(
+  ctx: Ctx,
+  { saw, fingerprint, shootId, lookId }: AnswerLook,
+  now: FrozenLook,
+): Promise<LookDifference[]> {
   if (saw && fingerprintOf(saw) === fingerprint) return differences(saw, now)
   const history = await listAnswers(ctx.db, shootId, lookId)
   const seen = history.find((answer) => answer.fingerprint === fingerprint) ?? history[0]

@@ -16,7 +16,10 @@ export type FoundRendition = {
 }
 
 /** A rendition of a picture, for members of its shoot; to everybody else it does not exist. */
-export async function findRendition(ctx: Ctx, input: { uploadId: UploadId; longEdgePx: RenditionPx }): Promise<FoundRendition> {
+export async function findRendition(
+  ctx: Ctx,
+  input: { uploadId: UploadId; longEdgePx: RenditionPx },
+): Promise<FoundRendition> {
   const { userId } = requireUser(ctx)
   const row = await findUpload(ctx.db, input.uploadId)
   const role = row ? await findRole(ctx.db, row.shootId, userId) : null

@@ -82,7 +82,10 @@ type Decoded = { data: Buffer; info: { width: number; height: number; channels: 
 async function decode(bytes: Uint8Array): Promise<Decoded> {
   const longest = Math.max(...RENDITIONS)
   try {
-    const { data, info } = await inside(sharp(bytes, { limitInputPixels: MAX_UPLOAD_PIXELS, failOn: 'error' }).autoOrient(), longest)
+    const { data, info } = await inside(
+      sharp(bytes, { limitInputPixels: MAX_UPLOAD_PIXELS, failOn: 'error' }).autoOrient(),
+      longest,
+    )
       .toColourspace('srgb')
       .raw()
       .toBuffer({ resolveWithObject: true })
@@ -107,5 +110,9 @@ async function smallRgb(picture: Sharp): Promise<Uint8Array> {
 }
 
 function broken(cause: unknown): AppError {
-  return new AppError('UNSUPPORTED', 'This picture is broken or not complete. Nothing was kept. Open it where it came from, save it again and add that.', { cause })
+  return new AppError(
+    'UNSUPPORTED',
+    'This picture is broken or not complete. Nothing was kept. Open it where it came from, save it again and add that.',
+    { cause },
+  )
 }

@@ -27,7 +27,10 @@ export async function readExif(bytes: Uint8Array): Promise<{ exif: KeptExif; exp
   const text = (tag: string): string | undefined => {
     const value = field(raw, tag)
     if (typeof value !== 'string') return undefined
-    const clean = value.replace(/\p{Cc}/gu, '').trim().slice(0, 80)
+    const clean = value
+      .replace(/\p{Cc}/gu, '')
+      .trim()
+      .slice(0, 80)
     return clean === '' ? undefined : clean
   }
   const number = (tag: string): number | undefined => {

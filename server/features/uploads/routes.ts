@@ -32,7 +32,11 @@ export function uploadsRoutes(uploadsPerMin: number = HTTP_LIMITS.uploadsPerMin)
       params: putParams,
       response: uploadSchema,
       handle: (ctx, { params, req }) => {
-        if (!req.file) throw new AppError('BAD_REQUEST', 'There was no picture in what was sent. Nothing was kept; choose a file and try again.')
+        if (!req.file)
+          throw new AppError(
+            'BAD_REQUEST',
+            'There was no picture in what was sent. Nothing was kept; choose a file and try again.',
+          )
         return storeUpload(ctx, { ...params, bytes: req.file.buffer })
       },
     }),

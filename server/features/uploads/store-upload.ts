@@ -65,5 +65,8 @@ export async function storeUpload(ctx: Ctx, { shootId, uploadId, bytes }: StoreU
 
 function sameOrConflict(row: UploadRow, shootId: ShootId, sha256: string): Upload {
   if (row.shootId === shootId && row.sha256 === sha256) return toUpload(row)
-  throw new AppError('CONFLICT', 'Another picture was already kept under this id. Nothing was changed; add the picture again.')
+  throw new AppError(
+    'CONFLICT',
+    'Another picture was already kept under this id. Nothing was changed; add the picture again.',
+  )
 }

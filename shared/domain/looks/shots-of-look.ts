@@ -1,10 +1,13 @@
 import type { Plan, PlannedShot } from '#shared/domain/plan/read-plan.ts'
 
+/** After every numbered shot. */
+const LAST = 1e9
+
 /** The shots a look is seen in: by number in the running order, then the loose ones. */
 export function shotsOfLook(plan: Plan, lookId: string): PlannedShot[] {
   return [...plan.shots.values()]
     .filter(({ looks }) => looks.some(({ look }) => look.id === lookId))
-    .sort((a, b) => (a.number ?? Infinity) - (b.number ?? Infinity) || (a.shot.id < b.shot.id ? -1 : 1))
+    .sort((a, b) => (a.number ?? LAST) - (b.number ?? LAST) || (a.shot.id < b.shot.id ? -1 : 1))
 }
 
 /** Shots in words: `shot 2`, `shots 3, 4 and 6`, loose ones by title; empty for none. */

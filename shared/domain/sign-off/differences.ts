@@ -8,7 +8,8 @@ type FrozenPiece = FrozenLook['pieces'][number]
  * A thing that was added has `after` equal to `what` and `before` empty; one taken out the other way round.
  */
 export function differences(before: FrozenLook, after: FrozenLook): LookDifference[] {
-  const line = (what: string, from: string, to: string): LookDifference[] => (from === to ? [] : [{ what, before: from, after: to }])
+  const line = (what: string, from: string, to: string): LookDifference[] =>
+    from === to ? [] : [{ what, before: from, after: to }]
   return [
     ...line('Sitter', before.sitter, after.sitter),
     ...line('Character', before.character, after.character),
@@ -48,7 +49,7 @@ function changedPiece(before: FrozenPiece, after: FrozenPiece): LookDifference[]
 function renamed(before: string, after: string): LookDifference {
   const [head, ...rest] = before.split(', ')
   const [newHead, ...newRest] = after.split(', ')
-  if (head !== undefined && head === newHead && rest.length > 0 && newRest.length > 0) {
+  if (head !== undefined && head === newHead) {
     return { what: head, before: rest.join(', '), after: newRest.join(', ') }
   }
   return { what: 'Piece', before, after }

@@ -11,7 +11,10 @@ import type { FrozenLook } from './schema.ts'
  *
  * @param pictureHashes SHA-256 in hex by upload id.
  */
-export function freezeLook({ look, sitter, pieces }: PlannedLook, pictureHashes: ReadonlyMap<string, string>): FrozenLook {
+export function freezeLook(
+  { look, sitter, pieces }: PlannedLook,
+  pictureHashes: ReadonlyMap<string, string>,
+): FrozenLook {
   const text = (value: string) => value.normalize('NFC')
   return {
     version: 1,
@@ -21,7 +24,12 @@ export function freezeLook({ look, sitter, pieces }: PlannedLook, pictureHashes:
     hair: text(look.hair),
     makeUp: text(look.makeUp),
     pieces: pieces
-      .map((piece) => ({ id: String(piece.id), kind: piece.kind, name: text(piece.name), colour: piece.colour?.toLowerCase() ?? null }))
+      .map((piece) => ({
+        id: String(piece.id),
+        kind: piece.kind,
+        name: text(piece.name),
+        colour: piece.colour?.toLowerCase() ?? null,
+      }))
       .sort((a, b) => (a.id < b.id ? -1 : a.id > b.id ? 1 : 0)),
     pictures: look.pictureIds.flatMap((id) => pictureHashes.get(id) ?? []),
   }

@@ -1,4 +1,14 @@
-import { type Oklab, type Rgb, converter, differenceCiede2000, formatHex, modeLab65, modeOklab, modeRgb, useMode } from 'culori/fn'
+import {
+  type Oklab,
+  type Rgb,
+  converter,
+  differenceCiede2000,
+  formatHex,
+  modeLab65,
+  modeOklab,
+  modeRgb,
+  useMode,
+} from 'culori/fn'
 
 useMode(modeRgb)
 useMode(modeOklab)

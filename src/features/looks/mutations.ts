@@ -1,6 +1,11 @@
 import { useMutation, useQueryClient } from '@tanstack/react-query'
 import type { z } from 'zod'
-import { type pieceCostInputSchema, pieceCostsSchema, type sitterPrivateInputSchema, sitterPrivatesSchema } from '#shared/api/private.ts'
+import {
+  type pieceCostInputSchema,
+  pieceCostsSchema,
+  type sitterPrivateInputSchema,
+  sitterPrivatesSchema,
+} from '#shared/api/private.ts'
 import { api } from '#src/lib/api.ts'
 import { lookQueries } from './queries.ts'
 
@@ -11,7 +16,8 @@ type SizesInput = z.input<typeof sitterPrivateInputSchema> & { sitterId: string 
 export function useSavePieceCost(shootId: string) {
   const queryClient = useQueryClient()
   return useMutation({
-    mutationFn: ({ pieceId, ...body }: CostInput) => api(`/shoots/${shootId}/piece-costs/${pieceId}`, { method: 'PUT', body, response: pieceCostsSchema }),
+    mutationFn: ({ pieceId, ...body }: CostInput) =>
+      api(`/shoots/${shootId}/piece-costs/${pieceId}`, { method: 'PUT', body, response: pieceCostsSchema }),
     onSuccess: (costs) => queryClient.setQueryData(lookQueries.costs(shootId).queryKey, costs),
   })
 }
@@ -20,7 +26,8 @@ export function useSavePieceCost(shootId: string) {
 export function useSaveSizes(shootId: string) {
   const queryClient = useQueryClient()
   return useMutation({
-    mutationFn: ({ sitterId, ...body }: SizesInput) => api(`/shoots/${shootId}/sizes/${sitterId}`, { method: 'PUT', body, response: sitterPrivatesSchema }),
+    mutationFn: ({ sitterId, ...body }: SizesInput) =>
+      api(`/shoots/${shootId}/sizes/${sitterId}`, { method: 'PUT', body, response: sitterPrivatesSchema }),
     onSuccess: (sizes) => queryClient.setQueryData(lookQueries.sizes(shootId).queryKey, sizes),
   })
 }

@@ -5,6 +5,9 @@ import { count } from '#src/lib/format.ts'
 
 export type Rail = { sitter: Sitter | null; looks: PlannedLook[] }
 
+/** After every numbered shot. */
+const NEVER = 1e9
+
 /** Rails in the order their sitters are first photographed, then by name; looks whose sitter is gone come last. */
 export function railsOf(plan: Plan, sitters: ReadonlyMap<string, Sitter>): Rail[] {
   const first = new Map<string, number>()
@@ -15,7 +18,10 @@ export function railsOf(plan: Plan, sitters: ReadonlyMap<string, Sitter>): Rail[
   const rails = new Map<string, Rail>([...sitters.values()].map((sitter) => [String(sitter.id), { sitter, looks: [] }]))
   const nobody: Rail = { sitter: null, looks: [] }
   for (const planned of plan.looks.values()) (rails.get(planned.look.sitterId) ?? nobody).looks.push(planned)
-  const sorted = [...rails].sort(([a, x], [b, y]) => (first.get(a) ?? Infinity) - (first.get(b) ?? Infinity) || (x.sitter?.name ?? '').localeCompare(y.sitter?.name ?? ''))
+  const sorted = [...rails].sort(
+    ([a, x], [b, y]) =>
+      (first.get(a) ?? NEVER) - (first.get(b) ?? NEVER) || (x.sitter?.name ?? '').localeCompare(y.sitter?.name ?? ''),
+  )
   return [...sorted.map(([, rail]) => rail), ...(nobody.looks.length > 0 ? [nobody] : [])]
 }
 
@@ -24,7 +30,9 @@ export function sharedPieces(looks: readonly PlannedLook[]): Map<string, Map<str
   const seen = new Map<string, string>()
   return new Map(
     looks.map(({ look, pieces }) => {
-      const shared = new Map<string, string>(pieces.flatMap(({ id }) => (seen.has(id) ? [[String(id), seen.get(id) ?? ''] as const] : [])))
+      const shared = new Map<string, string>(
+        pieces.flatMap(({ id }) => (seen.has(id) ? [[String(id), seen.get(id) ?? ''] as const] : [])),
+      )
       for (const { id } of pieces) if (!seen.has(id)) seen.set(id, look.name)
       return [look.id, shared]
     }),
@@ -39,6 +47,11 @@ export function sumOf(plan: Plan, rails: number, stateOf: (lookId: string) => Si
     const number = kinds.filter((other) => other === kind).length
     return number > 0 ? [`${number} ${words}`] : []
   }
-  const states = [...of('signed off', 'signed off'), ...of('changed since', 'changed since'), ...of('change asked', 'to change'), ...of('waiting', 'waiting')].join(', ')
+  const states = [
+    ...of('signed off', 'signed off'),
+    ...of('changed since', 'changed since'),
+    ...of('change asked', 'to change'),
+    ...of('waiting', 'waiting'),
+  ].join(', ')
   return `${count(plan.looks.size, 'look')} on ${count(rails, 'sitter')} · ${states}`
 }

@@ -61,7 +61,8 @@ export function mergeWarning(piece: Piece, plan: Plan): string {
     if (!set?.colour || !looks.some(({ look }) => look.pieceIds.includes(piece.id))) continue
     const wall = labOf(set.colour)
     const apart = wall ? deltaE2000(lab, wall) : Infinity
-    if (apart < MERGES_BELOW) return `Close to the colour of “${set.name}” (ΔE ${apart.toFixed(0)}): it may merge with it`
+    if (apart < MERGES_BELOW)
+      return `Close to the colour of “${set.name}” (ΔE ${apart.toFixed(0)}): it may merge with it`
   }
   return ''
 }

@@ -16,7 +16,9 @@ export function hangSitter(doc: Y.Doc, fields: Partial<Sitter> & { name: string 
 /** Hangs a look at the end of its sitter's rail and gives back the id. */
 export function hangLook(doc: Y.Doc, fields: Partial<Look> & { name: string; sitterId: SitterId }): LookId {
   const id = lookIdSchema.parse(newId())
-  const ranks = [...readAll(doc, looks).items.values()].filter((look) => look.sitterId === fields.sitterId).map((look) => look.rank)
+  const ranks = [...readAll(doc, looks).items.values()]
+    .filter((look) => look.sitterId === fields.sitterId)
+    .map((look) => look.rank)
   putItems(doc, looks, [{ ...fields, id, rank: appendKey(ranks, Math.random) }], Math.random)
   return id
 }
@@ -24,7 +26,11 @@ export function hangLook(doc: Y.Doc, fields: Partial<Look> & { name: string; sit
 /** A second look with the same pieces and pictures, as an alternative to the first. */
 export function copyLook(doc: Y.Doc, look: Look): LookId {
   const { id, name, ...rest } = look
-  return hangLook(doc, { ...rest, name: `${name}, second version`.slice(0, 80), alternativeOf: look.alternativeOf ?? id })
+  return hangLook(doc, {
+    ...rest,
+    name: `${name}, second version`.slice(0, 80),
+    alternativeOf: look.alternativeOf ?? id,
+  })
 }
 
 /** Adds a new piece to a look and gives back its id. */

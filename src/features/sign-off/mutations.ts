@@ -12,9 +12,13 @@ export function useAnswerLook(shootId: string) {
   return useMutation({
     // The screen shows a refusal beside the buttons.
     meta: { shown: true },
-    mutationFn: ({ lookId, ...body }: Answer) => api(`/shoots/${shootId}/looks/${lookId}/sign-offs`, { method: 'POST', body, response: signedOffSchema }),
+    mutationFn: ({ lookId, ...body }: Answer) =>
+      api(`/shoots/${shootId}/looks/${lookId}/sign-offs`, { method: 'POST', body, response: signedOffSchema }),
     onSuccess: ({ signOff }) => {
-      queryClient.setQueryData<SignOffs>(queryKey, (known) => known && { ...known, signOffs: [signOff, ...known.signOffs.filter(({ id }) => id !== signOff.id)] })
+      queryClient.setQueryData<SignOffs>(
+        queryKey,
+        (known) => known && { ...known, signOffs: [signOff, ...known.signOffs.filter(({ id }) => id !== signOff.id)] },
+      )
     },
     onSettled: () => queryClient.invalidateQueries({ queryKey }),
   })

@@ -28,13 +28,25 @@ const LOOK_AGAIN_MS = 15_000
 
 /** Every look of the plan with its state, worked out from what is on the screen and the answers on record. */
 export function standingsOf(plan: Plan, { signOffs, current }: SignOffs): Map<string, LookStanding> {
-  const hashes = new Map(current.flatMap(({ pictures }) => pictures.map(({ uploadId, sha256 }) => [String(uploadId), sha256] as const)))
+  const hashes = new Map(
+    current.flatMap(({ pictures }) => pictures.map(({ uploadId, sha256 }) => [String(uploadId), sha256] as const)),
+  )
   return new Map(
     [...plan.looks].map(([lookId, planned]) => {
       const frozen = freezeLook(planned, hashes)
       const history = signOffs.filter((answer) => answer.lookId === lookId)
       const picturesOnWay = planned.look.pictureIds.filter((id) => !hashes.has(id)).length
-      return [lookId, { planned, frozen, fingerprint: fingerprintOf(frozen), state: signOffState(history, frozen), history, picturesOnWay }]
+      return [
+        lookId,
+        {
+          planned,
+          frozen,
+          fingerprint: fingerprintOf(frozen),
+          state: signOffState(history, frozen),
+          history,
+          picturesOnWay,
+        },
+      ]
     }),
   )
 }
@@ -47,7 +59,10 @@ export function useLookStandings(): LookStandings {
   const { id } = useShoot()
   const { data, error } = useQuery({
     ...signOffQueries.ofShoot(id),
-    refetchInterval: ({ state }) => state.data !== undefined && [...standingsOf(plan, state.data).values()].some(({ picturesOnWay }) => picturesOnWay > 0) && LOOK_AGAIN_MS,
+    refetchInterval: ({ state }) =>
+      state.data !== undefined &&
+      [...standingsOf(plan, state.data).values()].some(({ picturesOnWay }) => picturesOnWay > 0) &&
+      LOOK_AGAIN_MS,
   })
   const standings = useMemo(() => (data ? standingsOf(plan, data) : NONE), [plan, data])
   return { standings, isKnown: data !== undefined, error }

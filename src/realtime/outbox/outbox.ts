@@ -79,7 +79,10 @@ export function createOutbox({ shootId, store, send, prepare, now, random, onCou
     const { uploadId, name, addedAtMs, widthPx, heightPx, state, why = '', blob } = entry
     entries.set(uploadId, entry)
     onCount(entries.size)
-    items.set([...items.get(), { uploadId, name, addedAtMs, widthPx, heightPx, state, progress: 0, why, localUrl: URL.createObjectURL(blob) }])
+    items.set([
+      ...items.get(),
+      { uploadId, name, addedAtMs, widthPx, heightPx, state, progress: 0, why, localUrl: URL.createObjectURL(blob) },
+    ])
   }
   const hide = (uploadId: string) => {
     const item = items.get().find((one) => one.uploadId === uploadId)
@@ -163,12 +166,22 @@ export function createOutbox({ shootId, store, send, prepare, now, random, onCou
     items,
     async add(file, name = file instanceof File ? file.name : 'picture') {
       const prepared = await prepare(file)
-      const entry: OutboxEntry = { uploadId: newId(), shootId, name, addedAtMs: now(), tries: 0, state: 'waiting', ...prepared }
+      const entry: OutboxEntry = {
+        uploadId: newId(),
+        shootId,
+        name,
+        addedAtMs: now(),
+        tries: 0,
+        state: 'waiting',
+        ...prepared,
+      }
       // Not among the entries before it is kept: nothing is sent that a reload would lose.
       try {
         await (await store).put(entry)
       } catch {
-        throw new NotAPicture('There is no room left on this device to keep the picture until it is sent. Nothing was added. Free some space and add it again.')
+        throw new NotAPicture(
+          'There is no room left on this device to keep the picture until it is sent. Nothing was added. Free some space and add it again.',
+        )
       }
       show(entry)
       pump()

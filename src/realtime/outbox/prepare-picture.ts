@@ -66,7 +66,9 @@ async function redrawn(bitmap: ImageBitmap): Promise<PreparedPicture> {
   }
   const blob = await new Promise<Blob | null>((resolve) => canvas.toBlob(resolve, 'image/jpeg', JPEG_QUALITY))
   if (!context || !blob || blob.size > MAX_UPLOAD_BYTES) {
-    throw new NotAPicture('This picture is too large to be made smaller on this device. Nothing was kept. Save it smaller and add that.')
+    throw new NotAPicture(
+      'This picture is too large to be made smaller on this device. Nothing was kept. Save it smaller and add that.',
+    )
   }
   return { blob, widthPx, heightPx }
 }

@@ -17,7 +17,13 @@ export const sendUpload: SendUpload = ({ shootId, uploadId, blob, name }, onProg
     request.upload.onprogress = (event) => {
       if (event.lengthComputable && event.total > 0) onProgress(event.loaded / event.total)
     }
-    const away = () => reject(new ApiError('OFFLINE', 'Sconce cannot be reached. The picture is kept on this device and will be sent by itself.'))
+    const away = () =>
+      reject(
+        new ApiError(
+          'OFFLINE',
+          'Sconce cannot be reached. The picture is kept on this device and will be sent by itself.',
+        ),
+      )
     request.onerror = away
     request.onabort = away
     request.ontimeout = away
@@ -28,7 +34,9 @@ export const sendUpload: SendUpload = ({ shootId, uploadId, blob, name }, onProg
         const { code, message } = errorEnvelopeSchema.parse(answer).error
         reject(new ApiError(code, message))
       } catch {
-        reject(new ApiError('INTERNAL', 'Sconce answered with something it should not. The picture is kept on this device.'))
+        reject(
+          new ApiError('INTERNAL', 'Sconce answered with something it should not. The picture is kept on this device.'),
+        )
       }
     }
     signal.addEventListener('abort', () => request.abort(), { once: true })

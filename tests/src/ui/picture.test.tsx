@@ -9,7 +9,9 @@ describe('Picture', () => {
   it('offers every rendition of a stored picture, by width', () => {
     render(<Picture uploadId="u1" alt="Night coat" size={{ widthPx: 1000, heightPx: 2000 }} sizes="50vw" />)
     const image = screen.getByRole('img', { name: 'Night coat' })
-    expect(image.getAttribute('srcset')).toBe('/api/uploads/u1/320 160w, /api/uploads/u1/960 480w, /api/uploads/u1/2048 1024w')
+    expect(image.getAttribute('srcset')).toBe(
+      '/api/uploads/u1/320 160w, /api/uploads/u1/960 480w, /api/uploads/u1/2048 1024w',
+    )
     expect(image.getAttribute('loading')).toBe('lazy')
   })
 

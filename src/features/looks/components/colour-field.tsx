@@ -30,7 +30,11 @@ export function ColourField({ value, onChange, from, readOnly }: ColourFieldProp
   const isColour = (text: string) => /^#[0-9a-f]{6}$/i.test(text)
   return (
     <div>
-      <Field label="Colour" hint={value === null ? 'Not chosen yet.' : colourWords(value)} error={typed !== null && typed !== '' && !isColour(typed) ? 'A colour is # and six of 0–9, a–f.' : undefined}>
+      <Field
+        label="Colour"
+        hint={value === null ? 'Not chosen yet.' : colourWords(value)}
+        error={typed !== null && typed !== '' && !isColour(typed) ? 'A colour is # and six of 0–9, a–f.' : undefined}
+      >
         <span className="flex items-stretch gap-2">
           <input
             type="color"
@@ -63,7 +67,14 @@ export function ColourField({ value, onChange, from, readOnly }: ColourFieldProp
         <div className="mt-1.5 flex flex-wrap items-center gap-1 text-xs text-ink-soft">
           From its pictures
           {from.map((colour) => (
-            <button key={colour} type="button" title={colourWords(colour)} aria-label={`Take ${colourWords(colour)}`} onClick={() => onChange(colour)} className="grid size-7 place-items-center rounded-r hover:bg-ink/8 max-md:size-11">
+            <button
+              key={colour}
+              type="button"
+              title={colourWords(colour)}
+              aria-label={`Take ${colourWords(colour)}`}
+              onClick={() => onChange(colour)}
+              className="grid size-7 place-items-center rounded-r hover:bg-ink/8 max-md:size-11"
+            >
               <Swatch colour={colour} sizePx={20} />
             </button>
           ))}

@@ -53,11 +53,24 @@ export function HangLookDialog({ sitters, onSitterId, onClose, onHung }: HangLoo
     >
       <form id="hang-look" onSubmit={submit} className="flex flex-col gap-4">
         <Field label="Name of the look" error={isTried && name.trim() === '' ? 'Give the look a name.' : undefined}>
-          <Input autoFocus value={name} maxLength={80} placeholder="Night coat" onChange={(event) => setName(event.target.value)} />
+          <Input
+            autoFocus
+            value={name}
+            maxLength={80}
+            placeholder="Night coat"
+            onChange={(event) => setName(event.target.value)}
+          />
         </Field>
         {sitters.length > 0 && (
           <Field label="On whom">
-            <Select value={sitterId} options={[...sitters.map((sitter) => ({ value: String(sitter.id), label: sitterTitle(sitter) })), { value: NEW, label: 'Somebody new' }]} onChange={setSitterId} />
+            <Select
+              value={sitterId}
+              options={[
+                ...sitters.map((sitter) => ({ value: String(sitter.id), label: sitterTitle(sitter) })),
+                { value: NEW, label: 'Somebody new' },
+              ]}
+              onChange={setSitterId}
+            />
           </Field>
         )}
         {isNew && (
@@ -66,7 +79,12 @@ export function HangLookDialog({ sitters, onSitterId, onClose, onHung }: HangLoo
               <Input value={newName} maxLength={80} onChange={(event) => setNewName(event.target.value)} />
             </Field>
             <Field label="Plays">
-              <Input value={character} maxLength={80} placeholder="The Astronomer" onChange={(event) => setCharacter(event.target.value)} />
+              <Input
+                value={character}
+                maxLength={80}
+                placeholder="The Astronomer"
+                onChange={(event) => setCharacter(event.target.value)}
+              />
             </Field>
           </div>
         )}

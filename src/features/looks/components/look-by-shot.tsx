@@ -8,9 +8,17 @@ export type LookByShotProps = { open: boolean; onOpenChange: (open: boolean) => 
 export function LookByShot({ open, onOpenChange, plan }: LookByShotProps) {
   const shots = [...plan.days.flatMap((day) => day.shots), ...plan.loose]
   return (
-    <Dialog wide open={open} onOpenChange={onOpenChange} title="Look by shot" description="Who wears what in which shot. Looks are given to shots on the board.">
+    <Dialog
+      wide
+      open={open}
+      onOpenChange={onOpenChange}
+      title="Look by shot"
+      description="Who wears what in which shot. Looks are given to shots on the board."
+    >
       {shots.length === 0 ? (
-        <p className="py-8 text-center text-ink-soft">No shots yet. Write them down on the board, and give each its looks.</p>
+        <p className="py-8 text-center text-ink-soft">
+          No shots yet. Write them down on the board, and give each its looks.
+        </p>
       ) : (
         <table className="w-full text-sm [&_td]:border-t [&_td]:border-hair-soft [&_td]:py-2 [&_td]:pr-3 [&_td]:align-top [&_th]:py-1.5 [&_th]:pr-3 [&_th]:text-left [&_th]:text-xs [&_th]:font-semibold [&_th]:text-ink-soft">
           <thead>

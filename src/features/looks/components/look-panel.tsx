@@ -31,17 +31,32 @@ export type LookPanelProps = {
 }
 
 /** Everything about one look. Who only reads sees it the same way, without the controls. */
-export function LookPanel({ planned, plan, state, sitters, pieces, mayWrite, onClose, onOpenLook, onOpenPiece }: LookPanelProps) {
+export function LookPanel({
+  planned,
+  plan,
+  state,
+  sitters,
+  pieces,
+  mayWrite,
+  onClose,
+  onOpenLook,
+  onOpenPiece,
+}: LookPanelProps) {
   const doc = useDoc('looks')
   const shoot = useShoot()
   const { look, sitter } = planned
   const patch = (change: Patch<typeof looks>) => patchItem(doc, looks, look.id, change)
-  const alternatives = [...plan.looks.values()].filter((other) => other.look.id !== look.id && other.look.sitterId === look.sitterId)
+  const alternatives = [...plan.looks.values()].filter(
+    (other) => other.look.id !== look.id && other.look.sitterId === look.sitterId,
+  )
 
   function takeDown() {
     removeItems(doc, looks, [look.id], Date.now())
     onClose()
-    toast.say(`“${look.name}” is taken down. Its pieces stay in the list.`, { label: 'Put it back', onPress: () => putBack(doc, looks, [look.id]) })
+    toast.say(`“${look.name}” is taken down. Its pieces stay in the list.`, {
+      label: 'Put it back',
+      onPress: () => putBack(doc, looks, [look.id]),
+    })
   }
 
   return (
@@ -52,7 +67,11 @@ export function LookPanel({ planned, plan, state, sitters, pieces, mayWrite, onC
         mayWrite && (
           <MoreMenu
             label="More about this look"
-            items={[{ label: 'Make a second version', onSelect: () => onOpenLook(copyLook(doc, look)) }, 'line', { label: 'Take it down', danger: true, onSelect: takeDown }]}
+            items={[
+              { label: 'Make a second version', onSelect: () => onOpenLook(copyLook(doc, look)) },
+              'line',
+              { label: 'Take it down', danger: true, onSelect: takeDown },
+            ]}
           />
         )
       }
@@ -61,7 +80,10 @@ export function LookPanel({ planned, plan, state, sitters, pieces, mayWrite, onC
         <Lamp state={signOffLamp(state)} />
         {signOffWords(state)}
         <span className="flex-1" />
-        <Link to={`/shoots/${shoot.id}/sign-off?look=${look.id}`} className="underline underline-offset-2 hover:text-ink">
+        <Link
+          to={`/shoots/${shoot.id}/sign-off?look=${look.id}`}
+          className="underline underline-offset-2 hover:text-ink"
+        >
           Sign-off
         </Link>
       </p>
@@ -70,13 +92,23 @@ export function LookPanel({ planned, plan, state, sitters, pieces, mayWrite, onC
         <LookPieces planned={planned} all={pieces} mayWrite={mayWrite} onOpen={onOpenPiece} />
       </PanelSection>
       <PanelSection title="The look">
-        <TextLine required label="Name" value={look.name} maxLength={80} readOnly={!mayWrite} onChange={(name) => patch({ name })} />
+        <TextLine
+          required
+          label="Name"
+          value={look.name}
+          maxLength={80}
+          readOnly={!mayWrite}
+          onChange={(name) => patch({ name })}
+        />
         <div className="grid grid-cols-2 gap-3">
           <Field label="On">
             <Select
               disabled={!mayWrite}
               value={String(look.sitterId)}
-              options={[...(sitter ? [] : [{ value: String(look.sitterId), label: 'Nobody yet' }]), ...sitters.map((one) => ({ value: String(one.id), label: sitterTitle(one) }))]}
+              options={[
+                ...(sitter ? [] : [{ value: String(look.sitterId), label: 'Nobody yet' }]),
+                ...sitters.map((one) => ({ value: String(one.id), label: sitterTitle(one) })),
+              ]}
               onChange={(id) => {
                 const chosen = sitters.find((one) => one.id === id)
                 if (chosen) patch({ sitterId: chosen.id })
@@ -84,19 +116,55 @@ export function LookPanel({ planned, plan, state, sitters, pieces, mayWrite, onC
             />
           </Field>
           <Field label="To change into it">
-            <NumberInput value={look.changeMin} unit="min" min={0} max={240} readOnly={!mayWrite} onChange={(changeMin) => patch({ changeMin })} />
+            <NumberInput
+              value={look.changeMin}
+              unit="min"
+              min={0}
+              max={240}
+              readOnly={!mayWrite}
+              onChange={(changeMin) => patch({ changeMin })}
+            />
           </Field>
         </div>
-        <TextLine label="Hair" value={look.hair} maxLength={300} readOnly={!mayWrite} onChange={(hair) => patch({ hair })} />
-        <TextLine label="Make-up" value={look.makeUp} maxLength={300} readOnly={!mayWrite} onChange={(makeUp) => patch({ makeUp })} />
-        <TextLine prose label="Note" value={look.note} maxLength={2000} readOnly={!mayWrite} onChange={(note) => patch({ note })} />
-        <Alternative look={look} options={alternatives} mayWrite={mayWrite} onChange={(alternativeOf) => patch({ alternativeOf })} />
+        <TextLine
+          label="Hair"
+          value={look.hair}
+          maxLength={300}
+          readOnly={!mayWrite}
+          onChange={(hair) => patch({ hair })}
+        />
+        <TextLine
+          label="Make-up"
+          value={look.makeUp}
+          maxLength={300}
+          readOnly={!mayWrite}
+          onChange={(makeUp) => patch({ makeUp })}
+        />
+        <TextLine
+          prose
+          label="Note"
+          value={look.note}
+          maxLength={2000}
+          readOnly={!mayWrite}
+          onChange={(note) => patch({ note })}
+        />
+        <Alternative
+          look={look}
+          options={alternatives}
+          mayWrite={mayWrite}
+          onChange={(alternativeOf) => patch({ alternativeOf })}
+        />
       </PanelSection>
     </Panel>
   )
 }
 
-type AlternativeProps = { look: Look; options: readonly PlannedLook[]; mayWrite: boolean; onChange: (lookId: Look['id'] | null) => void }
+type AlternativeProps = {
+  look: Look
+  options: readonly PlannedLook[]
+  mayWrite: boolean
+  onChange: (lookId: Look['id'] | null) => void
+}
 
 function Alternative({ look, options, mayWrite, onChange }: AlternativeProps) {
   if (options.length === 0) return null
@@ -105,7 +173,10 @@ function Alternative({ look, options, mayWrite, onChange }: AlternativeProps) {
       <Select
         disabled={!mayWrite}
         value={look.alternativeOf ?? ''}
-        options={[{ value: '', label: 'Nothing: a look of its own' }, ...options.map(({ look: other }) => ({ value: String(other.id), label: other.name }))]}
+        options={[
+          { value: '', label: 'Nothing: a look of its own' },
+          ...options.map(({ look: other }) => ({ value: String(other.id), label: other.name })),
+        ]}
         onChange={(id) => onChange(options.find(({ look: other }) => other.id === id)?.look.id ?? null)}
       />
     </Field>

@@ -47,11 +47,23 @@ export function LookPictures({ look, mayWrite }: LookPicturesProps) {
 
   return (
     <div>
-      {ids.length === 0 && <p className="rounded-r bg-surround px-4 py-6 text-center text-sm text-ink-soft">{mayWrite ? 'Pin what the look should be: a reference, a fitting, a drawing. The first picture is the one everybody sees.' : 'No picture pinned yet.'}</p>}
+      {ids.length === 0 && (
+        <p className="rounded-r bg-surround px-4 py-6 text-center text-sm text-ink-soft">
+          {mayWrite
+            ? 'Pin what the look should be: a reference, a fitting, a drawing. The first picture is the one everybody sees.'
+            : 'No picture pinned yet.'}
+        </p>
+      )}
       <ul className="grid grid-cols-2 gap-2">
         {ids.map((id, index) => (
           <li key={id} className={index === 0 ? 'relative col-span-2' : 'relative'}>
-            <WardrobePicture uploadId={id} alt={`${look.name}, picture ${index + 1}`} sizes="340px" focus="50% 20%" className={index === 0 ? 'h-56 rounded-sm' : 'h-28 rounded-sm'} />
+            <WardrobePicture
+              uploadId={id}
+              alt={`${look.name}, picture ${index + 1}`}
+              sizes="340px"
+              focus="50% 20%"
+              className={index === 0 ? 'h-56 rounded-sm' : 'h-28 rounded-sm'}
+            />
             {mayWrite && (
               <span className="absolute top-1 right-1 rounded-r bg-paper/90">
                 <MoreMenu
@@ -66,7 +78,10 @@ export function LookPictures({ look, mayWrite }: LookPicturesProps) {
                       danger: true,
                       onSelect: () => {
                         removeMember(doc, looks, look.id, 'pictureIds', id)
-                        toast.say('The picture is taken off the look.', { label: 'Put it back', onPress: () => addMember(doc, looks, look.id, 'pictureIds', id, Math.random) })
+                        toast.say('The picture is taken off the look.', {
+                          label: 'Put it back',
+                          onPress: () => addMember(doc, looks, look.id, 'pictureIds', id, Math.random),
+                        })
                       },
                     },
                   ]}
@@ -100,9 +115,16 @@ export function LookPictures({ look, mayWrite }: LookPicturesProps) {
           <div key={item.uploadId} className="mt-2 text-xs text-ink-soft">
             <span className="flex justify-between gap-2">
               <span className="truncate">{item.name}</span>
-              <span>{item.state === 'sending' ? `${Math.round(item.progress * 100)} %` : 'Kept here, waits for a signal'}</span>
+              <span>
+                {item.state === 'sending' ? `${Math.round(item.progress * 100)} %` : 'Kept here, waits for a signal'}
+              </span>
             </span>
-            <progress aria-label={`Sending ${item.name}`} max={1} value={item.progress} className="block h-1.5 w-full accent-glow" />
+            <progress
+              aria-label={`Sending ${item.name}`}
+              max={1}
+              value={item.progress}
+              className="block h-1.5 w-full accent-glow"
+            />
           </div>
         ),
       )}
@@ -122,8 +144,24 @@ export function LookPictures({ look, mayWrite }: LookPicturesProps) {
             <Images size={15} aria-hidden />
             From the board
           </Button>
-          <input ref={files} type="file" accept="image/*" multiple hidden aria-label="Picture files" onChange={(event) => void add(event)} />
-          <input ref={camera} type="file" accept="image/*" capture="environment" hidden aria-label="Camera" onChange={(event) => void add(event)} />
+          <input
+            ref={files}
+            type="file"
+            accept="image/*"
+            multiple
+            hidden
+            aria-label="Picture files"
+            onChange={(event) => void add(event)}
+          />
+          <input
+            ref={camera}
+            type="file"
+            accept="image/*"
+            capture="environment"
+            hidden
+            aria-label="Camera"
+            onChange={(event) => void add(event)}
+          />
         </div>
       )}
       <BoardPictures
@@ -131,7 +169,9 @@ export function LookPictures({ look, mayWrite }: LookPicturesProps) {
         onOpenChange={setIsChoosing}
         chosen={ids}
         onToggle={(id) =>
-          ids.some((known) => known === id) ? removeMember(doc, looks, look.id, 'pictureIds', id) : addMember(doc, looks, look.id, 'pictureIds', id, Math.random)
+          ids.some((known) => known === id)
+            ? removeMember(doc, looks, look.id, 'pictureIds', id)
+            : addMember(doc, looks, look.id, 'pictureIds', id, Math.random)
         }
       />
     </div>

@@ -23,25 +23,40 @@ export type LookPiecesProps = {
 export function LookPieces({ planned: { look, pieces }, all, mayWrite, onOpen }: LookPiecesProps) {
   const doc = useDoc('looks')
   const [name, setName] = useState('')
-  const others = [...all.values()].filter((piece) => !look.pieceIds.includes(piece.id)).sort((a, b) => a.name.localeCompare(b.name))
+  const others = [...all.values()]
+    .filter((piece) => !look.pieceIds.includes(piece.id))
+    .sort((a, b) => a.name.localeCompare(b.name))
   return (
     <>
       <ul className="-mt-1">
         {pieces.map((piece) => (
           <li key={piece.id} className="flex items-center gap-2 border-t border-hair-soft first:border-0">
-            <button type="button" onClick={() => onOpen(piece.id)} className="flex min-h-9 min-w-0 flex-1 items-center gap-2 rounded-r py-1.5 text-left hover:bg-ink/4 max-md:min-h-11">
+            <button
+              type="button"
+              onClick={() => onOpen(piece.id)}
+              className="flex min-h-9 min-w-0 flex-1 items-center gap-2 rounded-r py-1.5 text-left hover:bg-ink/4 max-md:min-h-11"
+            >
               <Swatch colour={piece.colour} sizePx={18} />
               <span className="min-w-0 flex-1">{piece.name}</span>
               <span className="text-sm text-ink-soft">{piece.status}</span>
             </button>
             {mayWrite && (
-              <Button size="small" variant="quiet" aria-label={`Take ${piece.name} off this look`} onClick={() => removeMember(doc, looks, look.id, 'pieceIds', piece.id)}>
+              <Button
+                size="small"
+                variant="quiet"
+                aria-label={`Take ${piece.name} off this look`}
+                onClick={() => removeMember(doc, looks, look.id, 'pieceIds', piece.id)}
+              >
                 Take off
               </Button>
             )}
           </li>
         ))}
-        {pieces.length === 0 && <li className="text-sm text-ink-soft">{mayWrite ? 'Write down the first piece: a coat, a ring, what is held.' : 'No pieces written down yet.'}</li>}
+        {pieces.length === 0 && (
+          <li className="text-sm text-ink-soft">
+            {mayWrite ? 'Write down the first piece: a coat, a ring, what is held.' : 'No pieces written down yet.'}
+          </li>
+        )}
       </ul>
       {mayWrite && (
         <form
@@ -54,7 +69,12 @@ export function LookPieces({ planned: { look, pieces }, all, mayWrite, onOpen }:
           }}
         >
           <Field label="New piece" className="flex-1">
-            <Input value={name} maxLength={120} placeholder="Gloves, grey wool" onChange={(event) => setName(event.target.value)} />
+            <Input
+              value={name}
+              maxLength={120}
+              placeholder="Gloves, grey wool"
+              onChange={(event) => setName(event.target.value)}
+            />
           </Field>
           <Button type="submit" disabled={name.trim() === ''}>
             Add
@@ -65,7 +85,10 @@ export function LookPieces({ planned: { look, pieces }, all, mayWrite, onOpen }:
         <Field label="Or a piece another look wears">
           <Select
             value=""
-            options={[{ value: '', label: 'Choose a piece' }, ...others.map((piece) => ({ value: String(piece.id), label: piece.name }))]}
+            options={[
+              { value: '', label: 'Choose a piece' },
+              ...others.map((piece) => ({ value: String(piece.id), label: piece.name })),
+            ]}
             onChange={(pieceId) => pieceId !== '' && addMember(doc, looks, look.id, 'pieceIds', pieceId, Math.random)}
           />
         </Field>

@@ -57,18 +57,34 @@ export function LooksScreen({ signOffs }: LooksScreenProps) {
 
   const isEmpty = plan.looks.size === 0 && sitters.size === 0 && pieces.size === 0
   const actions: ScreenAction[] = [
-    ...(isEmpty ? [] : [{ label: 'Look by shot', variant: 'quiet' as const, onPress: () => setOpened({ kind: 'by shot' }) }]),
+    ...(isEmpty
+      ? []
+      : [{ label: 'Look by shot', variant: 'quiet' as const, onPress: () => setOpened({ kind: 'by shot' }) }]),
     ...(isEmpty ? [] : [{ label: 'Pull list', onPress: () => setOpened({ kind: 'pull list' }) }]),
-    ...(mayWrite ? [{ label: 'Hang a look', variant: 'primary' as const, onPress: () => setOpened({ kind: 'hang', sitterId: null }) }] : []),
+    ...(mayWrite
+      ? [
+          {
+            label: 'Hang a look',
+            variant: 'primary' as const,
+            onPress: () => setOpened({ kind: 'hang', sitterId: null }),
+          },
+        ]
+      : []),
   ]
 
   return (
     <div className="flex min-h-full items-start">
       <div className="min-w-0 flex-1">
-        <ScreenBar title="Looks" sub={sumOf(plan, rails.length, stateOf)} actions={actions} float />
+        <ScreenBar title="Looks" sub={chosen ? '' : sumOf(plan, rails.length, stateOf)} actions={actions} float />
         {isEmpty ? (
-          <Empty title="Nothing hangs here yet" action={mayWrite && <Button onClick={() => setOpened({ kind: 'hang', sitterId: null })}>Begin with a look</Button>}>
-            A look is what one sitter wears, with hair and make-up. Each hangs on its sitter’s rail with its pictures and pieces, and the client signs it off.
+          <Empty
+            title="Nothing hangs here yet"
+            action={
+              mayWrite && <Button onClick={() => setOpened({ kind: 'hang', sitterId: null })}>Begin with a look</Button>
+            }
+          >
+            A look is what one sitter wears, with hair and make-up. Each hangs on its sitter’s rail with its pictures
+            and pieces, and the client signs it off.
           </Empty>
         ) : (
           <div className="flex flex-col gap-5 px-4 pt-4 pb-24 md:px-6 md:pt-0 md:pb-10">
@@ -96,7 +112,16 @@ export function LooksScreen({ signOffs }: LooksScreenProps) {
                 </SitterRail>
               ))}
             </div>
-            {pieces.size > 0 && <PieceTable plan={plan} pieces={[...pieces.values()]} costs={costs.data} today={today} chosen={chosen?.kind === 'piece' ? chosen.id : null} onOpen={open('piece')} />}
+            {pieces.size > 0 && (
+              <PieceTable
+                plan={plan}
+                pieces={[...pieces.values()]}
+                costs={costs.data}
+                today={today}
+                chosen={chosen?.kind === 'piece' ? chosen.id : null}
+                onOpen={open('piece')}
+              />
+            )}
           </div>
         )}
       </div>
@@ -113,7 +138,13 @@ export function LooksScreen({ signOffs }: LooksScreenProps) {
         />
       )}
       <LookByShot open={opened?.kind === 'by shot'} onOpenChange={() => setOpened(null)} plan={plan} />
-      <PullList open={opened?.kind === 'pull list'} onOpenChange={() => setOpened(null)} pieces={[...pieces.values()]} plan={plan} today={today} />
+      <PullList
+        open={opened?.kind === 'pull list'}
+        onOpenChange={() => setOpened(null)}
+        pieces={[...pieces.values()]}
+        plan={plan}
+        today={today}
+      />
     </div>
   )
 
@@ -124,16 +155,52 @@ export function LooksScreen({ signOffs }: LooksScreenProps) {
       case 'look': {
         const planned = plan.looks.get(chosen.id)
         const known = rails.flatMap(({ sitter }) => sitter ?? [])
-        return planned && <LookPanel {...common} key={chosen.id} planned={planned} plan={plan} state={stateOf(chosen.id)} sitters={known} pieces={pieces} onOpenLook={open('look')} onOpenPiece={open('piece')} />
+        return (
+          planned && (
+            <LookPanel
+              {...common}
+              key={chosen.id}
+              planned={planned}
+              plan={plan}
+              state={stateOf(chosen.id)}
+              sitters={known}
+              pieces={pieces}
+              onOpenLook={open('look')}
+              onOpenPiece={open('piece')}
+            />
+          )
+        )
       }
       case 'sitter': {
         const sitter = sitters.get(chosen.id)
         const theirs = rails.find((rail) => rail.sitter?.id === chosen.id)?.looks.map(({ look }) => look) ?? []
-        return sitter && <SitterPanel {...common} key={chosen.id} sitter={sitter} theirLooks={theirs} sizes={sizes.data} onOpen={open('sitter')} />
+        return (
+          sitter && (
+            <SitterPanel
+              {...common}
+              key={chosen.id}
+              sitter={sitter}
+              theirLooks={theirs}
+              sizes={sizes.data}
+              onOpen={open('sitter')}
+            />
+          )
+        )
       }
       case 'piece': {
         const piece = pieces.get(chosen.id)
-        return piece && <PiecePanel {...common} key={chosen.id} piece={piece} plan={plan} costs={costs.data} onOpen={open('piece')} />
+        return (
+          piece && (
+            <PiecePanel
+              {...common}
+              key={chosen.id}
+              piece={piece}
+              plan={plan}
+              costs={costs.data}
+              onOpen={open('piece')}
+            />
+          )
+        )
       }
     }
   }
@@ -144,7 +211,9 @@ function useUndoKeys() {
   const { undo, redo } = useUndo(['looks'])
   useEffect(() => {
     const handleKey = (event: KeyboardEvent) => {
-      const isTyping = event.target instanceof HTMLElement && event.target.closest('input, textarea, select, [contenteditable]') !== null
+      const isTyping =
+        event.target instanceof HTMLElement &&
+        event.target.closest('input, textarea, select, [contenteditable]') !== null
       if (isTyping || !(event.ctrlKey || event.metaKey) || event.key.toLowerCase() !== 'z') return
       event.preventDefault()
       if (event.shiftKey) redo()

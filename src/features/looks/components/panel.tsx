@@ -24,7 +24,10 @@ export function Panel({ title, onClose, aside, children }: PanelProps) {
     )
   }
   return (
-    <aside aria-label={title} className="sticky top-0 flex h-dvh w-[23rem] flex-none flex-col border-l border-hair bg-paper">
+    <aside
+      aria-label={title}
+      className="sticky top-0 flex h-dvh w-[23rem] flex-none flex-col border-l border-hair bg-paper"
+    >
       <header className="flex items-center gap-1 px-5 pt-4 pb-2">
         <h2 className="min-w-0 flex-1 text-xl">{title}</h2>
         {aside}

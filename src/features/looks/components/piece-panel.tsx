@@ -36,13 +36,22 @@ export function PiecePanel({ piece, plan, costs, mayWrite, onClose, onOpen }: Pi
   const patch = (change: Patch<typeof pieces>) => patchItem(doc, pieces, piece.id, change)
   const wearing = [...plan.looks.values()].filter(({ look }) => look.pieceIds.includes(piece.id))
   const pictures = new Set<string>(wearing.flatMap(({ look }) => look.pictureIds))
-  const palette = [...new Set([...boardFrames.values()].filter((frame) => pictures.has(frame.picture.uploadId)).flatMap((frame) => frame.palette))].slice(0, 10)
+  const palette = [
+    ...new Set(
+      [...boardFrames.values()]
+        .filter((frame) => pictures.has(frame.picture.uploadId))
+        .flatMap((frame) => frame.palette),
+    ),
+  ].slice(0, 10)
   const merges = mergeWarning(piece, plan)
 
   function remove() {
     removeItems(doc, pieces, [piece.id], Date.now())
     onClose()
-    toast.say(`“${piece.name}” is taken out of the wardrobe.`, { label: 'Put it back', onPress: () => putBack(doc, pieces, [piece.id]) })
+    toast.say(`“${piece.name}” is taken out of the wardrobe.`, {
+      label: 'Put it back',
+      onPress: () => putBack(doc, pieces, [piece.id]),
+    })
   }
 
   return (
@@ -53,29 +62,70 @@ export function PiecePanel({ piece, plan, costs, mayWrite, onClose, onOpen }: Pi
         mayWrite && (
           <MoreMenu
             label="More about this piece"
-            items={[{ label: 'Make a second one', onSelect: () => onOpen(copyPiece(doc, piece)) }, 'line', { label: 'Take it out', danger: true, onSelect: remove }]}
+            items={[
+              { label: 'Make a second one', onSelect: () => onOpen(copyPiece(doc, piece)) },
+              'line',
+              { label: 'Take it out', danger: true, onSelect: remove },
+            ]}
           />
         )
       }
     >
       {merges && <Caution>{merges}. A rim, a lighter wall or another cloth sets it apart.</Caution>}
-      <TextLine required label="Piece" value={piece.name} maxLength={120} readOnly={!mayWrite} onChange={(name) => patch({ name })} hint={mayWrite ? 'What it is, a comma, then what sets it apart: Gloves, grey wool.' : ''} />
+      <TextLine
+        required
+        label="Piece"
+        value={piece.name}
+        maxLength={120}
+        readOnly={!mayWrite}
+        onChange={(name) => patch({ name })}
+        hint={mayWrite ? 'What it is, a comma, then what sets it apart: Gloves, grey wool.' : ''}
+      />
       <div className="grid grid-cols-2 gap-3">
         <Field label="Kind">
-          <Select disabled={!mayWrite} value={piece.kind} options={PIECE_KINDS.map((kind) => ({ value: kind, label: kind }))} onChange={(kind) => patch({ kind })} />
+          <Select
+            disabled={!mayWrite}
+            value={piece.kind}
+            options={PIECE_KINDS.map((kind) => ({ value: kind, label: kind }))}
+            onChange={(kind) => patch({ kind })}
+          />
         </Field>
         <Field label="Status">
-          <Select disabled={!mayWrite} value={piece.status} options={PIECE_STATUSES.map((status) => ({ value: status, label: status }))} onChange={(status) => patch({ status })} />
+          <Select
+            disabled={!mayWrite}
+            value={piece.status}
+            options={PIECE_STATUSES.map((status) => ({ value: status, label: status }))}
+            onChange={(status) => patch({ status })}
+          />
         </Field>
       </div>
       <ColourField value={piece.colour} from={palette} readOnly={!mayWrite} onChange={(colour) => patch({ colour })} />
       <div className="grid grid-cols-2 gap-3">
-        <TextLine label="From" value={piece.source} maxLength={120} readOnly={!mayWrite} placeholder="Theatre hire" onChange={(source) => patch({ source })} />
+        <TextLine
+          label="From"
+          value={piece.source}
+          maxLength={120}
+          readOnly={!mayWrite}
+          placeholder="Theatre hire"
+          onChange={(source) => patch({ source })}
+        />
         <Field label="Back by">
-          <Input type="date" readOnly={!mayWrite} value={piece.dueBack ?? ''} onChange={(event) => patch({ dueBack: event.target.value === '' ? null : event.target.value })} />
+          <Input
+            type="date"
+            readOnly={!mayWrite}
+            value={piece.dueBack ?? ''}
+            onChange={(event) => patch({ dueBack: event.target.value === '' ? null : event.target.value })}
+          />
         </Field>
       </div>
-      <TextLine prose label="Note" value={piece.note} maxLength={1000} readOnly={!mayWrite} onChange={(note) => patch({ note })} />
+      <TextLine
+        prose
+        label="Note"
+        value={piece.note}
+        maxLength={1000}
+        readOnly={!mayWrite}
+        onChange={(note) => patch({ note })}
+      />
       <PanelSection title="Worn in">
         {mayWrite ? (
           <div>
@@ -83,7 +133,11 @@ export function PiecePanel({ piece, plan, costs, mayWrite, onClose, onOpen }: Pi
               <Checkbox
                 key={look.id}
                 checked={look.pieceIds.includes(piece.id)}
-                onChange={(isWorn) => (isWorn ? addMember(doc, looks, look.id, 'pieceIds', piece.id, Math.random) : removeMember(doc, looks, look.id, 'pieceIds', piece.id))}
+                onChange={(isWorn) =>
+                  isWorn
+                    ? addMember(doc, looks, look.id, 'pieceIds', piece.id, Math.random)
+                    : removeMember(doc, looks, look.id, 'pieceIds', piece.id)
+                }
               >
                 {look.name}
               </Checkbox>

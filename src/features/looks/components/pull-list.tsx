@@ -6,22 +6,36 @@ import { Swatch } from '#src/ui/swatch.tsx'
 import { toast } from '#src/ui/toast.ts'
 import { backBy } from '../words.ts'
 
-export type PullListProps = { open: boolean; onOpenChange: (open: boolean) => void; pieces: readonly Piece[]; plan: Plan; today: string }
+export type PullListProps = {
+  open: boolean
+  onOpenChange: (open: boolean) => void
+  pieces: readonly Piece[]
+  plan: Plan
+  today: string
+}
 
 /** What is to be fetched where: every piece under the place it comes from. */
 export function PullList({ open, onOpenChange, pieces, plan, today }: PullListProps) {
   const places = new Map<string, Piece[]>()
-  for (const piece of [...pieces].filter(({ status }) => status !== 'returned').sort((a, b) => a.name.localeCompare(b.name))) {
+  for (const piece of [...pieces]
+    .filter(({ status }) => status !== 'returned')
+    .sort((a, b) => a.name.localeCompare(b.name))) {
     const place = piece.source.trim() || 'Not said where from'
     places.set(place, [...(places.get(place) ?? []), piece])
   }
   const sorted = [...places].sort(([a], [b]) => a.localeCompare(b))
   const lineOf = (piece: Piece) => {
-    const worn = [...plan.looks.values()].filter(({ look }) => look.pieceIds.includes(piece.id)).map(({ look }) => look.name)
-    return [piece.status, worn.join(', '), piece.dueBack === null ? '' : `back by ${backBy(piece, today)}`].filter(Boolean).join(' · ')
+    const worn = [...plan.looks.values()]
+      .filter(({ look }) => look.pieceIds.includes(piece.id))
+      .map(({ look }) => look.name)
+    return [piece.status, worn.join(', '), piece.dueBack === null ? '' : `back by ${backBy(piece, today)}`]
+      .filter(Boolean)
+      .join(' · ')
   }
   const copy = () => {
-    const text = sorted.map(([place, list]) => `${place}\n${list.map((piece) => `- ${piece.name} (${lineOf(piece)})`).join('\n')}`).join('\n\n')
+    const text = sorted
+      .map(([place, list]) => `${place}\n${list.map((piece) => `- ${piece.name} (${lineOf(piece)})`).join('\n')}`)
+      .join('\n\n')
     const copied = navigator.clipboard?.writeText(text) ?? Promise.reject(new Error('no clipboard'))
     copied.then(
       () => toast.say('The pull list is copied.'),

@@ -62,9 +62,16 @@ export function SitterPanel({ sitter, theirLooks, sizes, mayWrite, onClose, onOp
           <MoreMenu
             label="More about this sitter"
             items={[
-              { label: 'Make a second one with the same looks', onSelect: () => onOpen(copySitter(doc, sitter, theirLooks)) },
+              {
+                label: 'Make a second one with the same looks',
+                onSelect: () => onOpen(copySitter(doc, sitter, theirLooks)),
+              },
               'line',
-              { label: 'Take them out', danger: true, onSelect: () => (theirLooks.length > 0 ? setIsRemoving(true) : remove()) },
+              {
+                label: 'Take them out',
+                danger: true,
+                onSelect: () => (theirLooks.length > 0 ? setIsRemoving(true) : remove()),
+              },
             ]}
           />
         )
@@ -72,12 +79,27 @@ export function SitterPanel({ sitter, theirLooks, sizes, mayWrite, onClose, onOp
     >
       {sitter.underAge && (
         <Caution title="Under age">
-          Child-performance law sets hours, breaks, schooling, a chaperone and often a licence, and it differs from place to place. Ask the local authority before the call is fixed; Sconce does not check it.
+          Child-performance law sets hours, breaks, schooling, a chaperone and often a licence, and it differs from
+          place to place. Ask the local authority before the call is fixed; Sconce does not check it.
         </Caution>
       )}
       <div className="grid grid-cols-2 gap-3">
-        <TextLine required label="Name" value={sitter.name} maxLength={80} readOnly={!mayWrite} onChange={(name) => patch({ name })} />
-        <TextLine label="Plays" value={sitter.character} maxLength={80} readOnly={!mayWrite} placeholder="The Astronomer" onChange={(character) => patch({ character })} />
+        <TextLine
+          required
+          label="Name"
+          value={sitter.name}
+          maxLength={80}
+          readOnly={!mayWrite}
+          onChange={(name) => patch({ name })}
+        />
+        <TextLine
+          label="Plays"
+          value={sitter.character}
+          maxLength={80}
+          readOnly={!mayWrite}
+          placeholder="The Astronomer"
+          onChange={(character) => patch({ character })}
+        />
       </div>
       {mayWrite ? (
         <div>
@@ -87,10 +109,18 @@ export function SitterPanel({ sitter, theirLooks, sizes, mayWrite, onClose, onOp
           {hours !== null && (
             <div className="mt-1 grid grid-cols-2 gap-3">
               <Field label="Here from">
-                <Input type="time" value={clockOf(hours[0])} onChange={(event) => patchHours(minutesOf(event.target.value), hours[1])} />
+                <Input
+                  type="time"
+                  value={clockOf(hours[0])}
+                  onChange={(event) => patchHours(minutesOf(event.target.value), hours[1])}
+                />
               </Field>
               <Field label="To" error={hours[1] <= hours[0] ? 'This is before the beginning.' : undefined}>
-                <Input type="time" value={clockOf(hours[1])} onChange={(event) => patchHours(hours[0], minutesOf(event.target.value))} />
+                <Input
+                  type="time"
+                  value={clockOf(hours[1])}
+                  onChange={(event) => patchHours(hours[0], minutesOf(event.target.value))}
+                />
               </Field>
             </div>
           )}
@@ -100,18 +130,40 @@ export function SitterPanel({ sitter, theirLooks, sizes, mayWrite, onClose, onOp
       )}
       <div className="grid grid-cols-2 gap-3">
         <Field label="Hair and make-up" hint={mayWrite ? 'For the first look, and again when they differ.' : ''}>
-          <NumberInput value={sitter.chairMin} unit="min" min={0} max={360} readOnly={!mayWrite} onChange={(chairMin) => patch({ chairMin })} />
+          <NumberInput
+            value={sitter.chairMin}
+            unit="min"
+            min={0}
+            max={360}
+            readOnly={!mayWrite}
+            onChange={(chairMin) => patch({ chairMin })}
+          />
         </Field>
         <Field label="Travel to the place" hint={mayWrite ? 'For their call.' : ''}>
-          <NumberInput value={sitter.travelMin} unit="min" min={0} max={720} readOnly={!mayWrite} onChange={(travelMin) => patch({ travelMin })} />
+          <NumberInput
+            value={sitter.travelMin}
+            unit="min"
+            min={0}
+            max={720}
+            readOnly={!mayWrite}
+            onChange={(travelMin) => patch({ travelMin })}
+          />
         </Field>
       </div>
       <Checkbox checked={sitter.underAge} disabled={!mayWrite} onChange={(underAge) => patch({ underAge })}>
         Under age
       </Checkbox>
       {sizes && <Sizes sitterId={sitter.id} sizes={sizes} />}
-      <Confirm open={isRemoving} onOpenChange={setIsRemoving} title={`Take ${sitter.name} out?`} action="Take them out" keep="Keep them" onConfirm={remove}>
-        {count(theirLooks.length, 'look')} on their rail come down too. The pieces stay in the list, and what the client signed stays on record.
+      <Confirm
+        open={isRemoving}
+        onOpenChange={setIsRemoving}
+        title={`Take ${sitter.name} out?`}
+        action="Take them out"
+        keep="Keep them"
+        onConfirm={remove}
+      >
+        {count(theirLooks.length, 'look')} on their rail come down too. The pieces stay in the list, and what the client
+        signed stays on record.
       </Confirm>
     </Panel>
   )
@@ -125,10 +177,18 @@ function Sizes({ sitterId, sizes }: { sitterId: string; sizes: SitterPrivates })
   const shoot = useShoot()
   const save = useSaveSizes(shoot.id)
   const own = sizes.sitters.find((one) => one.sitterId === sitterId) ?? { sizes: '', contact: '' }
-  const give = (change: { sizes?: string; contact?: string }) => save.mutate({ sitterId, sizes: own.sizes, contact: own.contact, ...change })
+  const give = (change: { sizes?: string; contact?: string }) =>
+    save.mutate({ sitterId, sizes: own.sizes, contact: own.contact, ...change })
   return (
     <PanelSection title="For photographer and stylist only">
-      <TextLine prose label="Sizes" value={own.sizes} maxLength={1000} placeholder="Height, chest, collar, shoe" onChange={(next) => give({ sizes: next })} />
+      <TextLine
+        prose
+        label="Sizes"
+        value={own.sizes}
+        maxLength={1000}
+        placeholder="Height, chest, collar, shoe"
+        onChange={(next) => give({ sizes: next })}
+      />
       <TextLine label="Contact" value={own.contact} maxLength={300} onChange={(contact) => give({ contact })} />
     </PanelSection>
   )

@@ -16,19 +16,33 @@ export type SitterRailProps = {
 /** A sitter's rail with their looks hanging from it; as wide as it has looks. */
 export function SitterRail({ sitter, looks, isChosen, onOpen, onHang, children }: SitterRailProps) {
   return (
-    <section aria-label={sitterTitle(sitter)} style={{ flexGrow: Math.max(1, looks), maxWidth: `${Math.max(1, looks) * 19}rem` }} className="min-w-0 max-md:!max-w-none">
-      <header className="flex min-h-9 items-baseline gap-2 pb-1.5 pl-0.5">
-        <h2 className="min-w-0 text-lg whitespace-nowrap">
-          {sitter ? (
-            <button type="button" aria-pressed={isChosen} onClick={onOpen} className="rounded-r text-left underline-offset-4 hover:underline max-md:min-h-11">
-              {sitterTitle(sitter)}
-            </button>
-          ) : (
-            sitterTitle(sitter)
+    <section
+      aria-label={sitterTitle(sitter)}
+      style={{ flexGrow: Math.max(1, looks), maxWidth: `${Math.max(1, looks) * 19}rem` }}
+      className="min-w-0 max-md:!max-w-none"
+    >
+      <header className="flex min-h-9 items-baseline gap-2 pb-1.5 pl-0.5 max-md:items-center">
+        <div className="flex min-w-0 flex-1 items-baseline gap-x-2 max-md:flex-col">
+          <h2 className="flex-none text-lg whitespace-nowrap max-md:max-w-full max-md:truncate">
+            {sitter ? (
+              <button
+                type="button"
+                aria-pressed={isChosen}
+                onClick={onOpen}
+                className="rounded-r text-left underline-offset-4 hover:underline max-md:min-h-8"
+              >
+                {sitterTitle(sitter)}
+              </button>
+            ) : (
+              sitterTitle(sitter)
+            )}
+          </h2>
+          {sitter && (
+            <span className="min-w-0 truncate text-xs text-ink-soft max-md:max-w-full max-md:text-[0.8125rem]">
+              {sitterLine(sitter)}
+            </span>
           )}
-        </h2>
-        {sitter && <span className="min-w-0 truncate text-xs text-ink-soft max-md:text-[0.8125rem]">{sitterLine(sitter)}</span>}
-        <span className="flex-1" />
+        </div>
         {onHang && (
           <button
             type="button"

@@ -31,7 +31,17 @@ function take(pending: { current: Pending | null }) {
 }
 
 /** A text of a shared document: taken over at a pause in typing and on leaving, not at every key. */
-export function TextLine({ label, value, onChange, maxLength, prose = false, required = false, readOnly = false, hint, placeholder }: TextLineProps) {
+export function TextLine({
+  label,
+  value,
+  onChange,
+  maxLength,
+  prose = false,
+  required = false,
+  readOnly = false,
+  hint,
+  placeholder,
+}: TextLineProps) {
   const [draft, setDraft] = useState<string | null>(null)
   const pending = useRef<Pending | null>(null)
   // What was typed last is not lost when the panel closes or shows something else.

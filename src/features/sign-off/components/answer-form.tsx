@@ -13,7 +13,12 @@ import type { LookStanding } from '../use-look-standings.ts'
 import { useWordsDraft } from '../use-words-draft.ts'
 import { DifferenceList } from './difference-list.tsx'
 
-export type AnswerFormProps = { shootId: string; userId: string; standing: LookStanding; onAnswered: (words: string) => void }
+export type AnswerFormProps = {
+  shootId: string
+  userId: string
+  standing: LookStanding
+  onAnswered: (words: string) => void
+}
 
 type Trouble = { lookId: string; message: string; differences: readonly LookDifference[] }
 
@@ -46,7 +51,11 @@ export function AnswerForm({ shootId, userId, standing, onAnswered }: AnswerForm
         onSuccess: () => {
           setWords('')
           setIsAsking(false)
-          onAnswered(kind === 'signed off' ? `“${look.name}” is signed off.` : `Your change to “${look.name}” is on its way to the studio.`)
+          onAnswered(
+            kind === 'signed off'
+              ? `“${look.name}” is signed off.`
+              : `Your change to “${look.name}” is on its way to the studio.`,
+          )
         },
         onError: (error) => setTrouble(troubleOf(look.id, error)),
       },
@@ -68,6 +77,7 @@ export function AnswerForm({ shootId, userId, standing, onAnswered }: AnswerForm
       <Textarea
         ref={field}
         rows={3}
+        className="min-h-16"
         maxLength={2000}
         value={words}
         onChange={(event) => {
@@ -84,11 +94,22 @@ export function AnswerForm({ shootId, userId, standing, onAnswered }: AnswerForm
         <div className="mt-3">{remark}</div>
         <div className="flex flex-wrap gap-2.5">
           {!isSignedOff && (
-            <Button variant="primary" busy={busy('signed off')} disabled={isBusy} onClick={() => answer('signed off')} className="px-5 py-[11px]">
+            <Button
+              variant="primary"
+              busy={busy('signed off')}
+              disabled={isBusy}
+              onClick={() => answer('signed off')}
+              className="px-5 py-[11px]"
+            >
               Sign off this look
             </Button>
           )}
-          <Button busy={busy('change asked')} disabled={isBusy} onClick={() => answer('change asked')} className="px-4 py-[11px]">
+          <Button
+            busy={busy('change asked')}
+            disabled={isBusy}
+            onClick={() => answer('change asked')}
+            className="px-4 py-[11px]"
+          >
             Ask for a change
           </Button>
         </div>
@@ -98,15 +119,27 @@ export function AnswerForm({ shootId, userId, standing, onAnswered }: AnswerForm
   }
   return (
     <>
-      <p className="px-[18px] pt-2 pb-4 text-[0.8125rem] text-ink-soft">{KEPT}</p>
-      <div className="sticky bottom-0 z-20 mt-auto border-t border-hair bg-paper px-[18px] pt-3 pb-4">
+      <p className="order-1 px-[18px] pt-2 pb-4 text-[0.8125rem] text-ink-soft">{KEPT}</p>
+      <div className="sticky bottom-0 z-20 order-1 mt-auto border-t border-hair bg-paper px-[18px] pt-3 pb-4">
         {!isAsking && remark}
         <div className="grid grid-cols-[1fr_1.3fr] gap-2.5">
-          <Button size="large" className={isSignedOff ? 'col-span-2' : ''} disabled={isBusy} onClick={() => setIsAsking(true)}>
+          <Button
+            size="large"
+            className={isSignedOff ? 'col-span-2' : ''}
+            disabled={isBusy}
+            onClick={() => setIsAsking(true)}
+          >
             Ask for a change
           </Button>
           {!isSignedOff && (
-            <Button size="large" variant="primary" aria-label="Sign off this look" busy={busy('signed off')} disabled={isBusy} onClick={() => answer('signed off')}>
+            <Button
+              size="large"
+              variant="primary"
+              aria-label="Sign off this look"
+              busy={busy('signed off')}
+              disabled={isBusy}
+              onClick={() => answer('signed off')}
+            >
               Sign off
             </Button>
           )}
@@ -117,7 +150,14 @@ export function AnswerForm({ shootId, userId, standing, onAnswered }: AnswerForm
         onOpenChange={setIsAsking}
         title={look.name}
         footer={
-          <Button size="large" variant="primary" className="w-full" busy={busy('change asked')} disabled={isBusy} onClick={() => answer('change asked')}>
+          <Button
+            size="large"
+            variant="primary"
+            className="w-full"
+            busy={busy('change asked')}
+            disabled={isBusy}
+            onClick={() => answer('change asked')}
+          >
             Ask for this change
           </Button>
         }
@@ -130,7 +170,12 @@ export function AnswerForm({ shootId, userId, standing, onAnswered }: AnswerForm
 }
 
 function troubleOf(lookId: string, error: unknown): Trouble {
-  if (!(error instanceof ApiError)) return { lookId, message: 'Something on this page went wrong. What you typed is still here; try again.', differences: [] }
+  if (!(error instanceof ApiError))
+    return {
+      lookId,
+      message: 'Something on this page went wrong. What you typed is still here; try again.',
+      differences: [],
+    }
   const conflict = error.code === 'CONFLICT' ? signOffConflictSchema.safeParse(error.details) : undefined
   return { lookId, message: error.message, differences: conflict?.success ? conflict.data.differences : [] }
 }

@@ -15,10 +15,12 @@ export function AnswerHistory({ history, fingerprint, zone }: AnswerHistoryProps
           <li key={answer.id} className="flex gap-2.5 border-t border-hair-soft py-2 first:border-0">
             <Lamp state={answer.answer === 'signed off' ? 'lit' : 'half'} className="mt-1" />
             <div className="min-w-0">
-              <b className="font-semibold">{answer.answer === 'signed off' ? 'Signed off' : 'Change asked for'}</b> by {answer.name}, {shortInstant(answer.atMs, zone)}
+              <b className="font-semibold">{answer.answer === 'signed off' ? 'Signed off' : 'Change asked for'}</b> by{' '}
+              {answer.name}, {shortInstant(answer.atMs, zone)}
               {answer.words !== '' && <p className="whitespace-pre-line">“{answer.words}”</p>}
               <p className="text-xs text-ink-soft">
-                {answer.fingerprint === fingerprint ? 'This version' : 'An earlier version'} · <span title={answer.fingerprint}>{answer.fingerprint.slice(0, 8)}</span>
+                {answer.fingerprint === fingerprint ? 'This version' : 'An earlier version'} ·{' '}
+                <span title={answer.fingerprint}>{answer.fingerprint.slice(0, 8)}</span>
               </p>
             </div>
           </li>

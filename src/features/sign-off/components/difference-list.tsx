@@ -34,8 +34,13 @@ function Line(difference: LookDifference) {
     case 'changed':
       return (
         <>
-          {what}: {before === '' ? <span className="text-ink-soft">not said</span> : <del className="text-ink-soft">{before}</del>} →{' '}
-          {after === '' ? 'not said any more' : <ins className="font-semibold no-underline">{after}</ins>}
+          {what}:{' '}
+          {before === '' ? (
+            <span className="text-ink-soft">not said</span>
+          ) : (
+            <del className="text-ink-soft">{before}</del>
+          )}{' '}
+          → {after === '' ? 'not said any more' : <ins className="font-semibold no-underline">{after}</ins>}
         </>
       )
   }

@@ -8,10 +8,12 @@ export type LookListProps = {
   looks: readonly LookStanding[]
   chosen: string
   onChoose: (lookId: string) => void
+  /** Whether the reader is the one who is waited for. */
+  isYours: boolean
 }
 
 /** All looks with their lamps; the way from one to the next. */
-export function LookList({ looks, chosen, onChoose }: LookListProps) {
+export function LookList({ looks, chosen, onChoose, isYours }: LookListProps) {
   return (
     <ul>
       {looks.map(({ planned: { look, sitter }, state }) => {
@@ -23,12 +25,26 @@ export function LookList({ looks, chosen, onChoose }: LookListProps) {
               type="button"
               aria-current={isChosen || undefined}
               onClick={() => onChoose(look.id)}
-              className={cn('-mx-2 flex w-[calc(100%+1rem)] items-center gap-2.5 rounded-r px-2 py-2.5 text-left', isChosen ? 'bg-paper' : 'hover:bg-ink/4')}
+              className={cn(
+                '-mx-2 flex w-[calc(100%+1rem)] items-center gap-2.5 rounded-r px-2 py-2.5 text-left',
+                isChosen ? 'bg-paper' : 'hover:bg-ink/4',
+              )}
             >
-              {hero === undefined ? <span className="h-[52px] w-11 flex-none rounded-sm bg-ink/8" /> : <LookPicture uploadId={hero} alt="" sizes="44px" className="h-[52px] w-11 flex-none rounded-sm" />}
+              {hero === undefined ? (
+                <span className="h-[52px] w-11 flex-none rounded-sm bg-ink/8" />
+              ) : (
+                <LookPicture uploadId={hero} alt="" sizes="44px" className="h-[52px] w-11 flex-none rounded-sm" />
+              )}
               <span className="min-w-0 flex-1">
                 <b className="block text-sm leading-snug font-semibold">{look.name}</b>
-                <span className={cn('block text-xs', state.kind === 'changed since' || state.kind === 'change asked' ? 'text-glow-ink' : 'text-ink-soft')}>{signOffWords(state)}</span>
+                <span
+                  className={cn(
+                    'block text-xs',
+                    state.kind === 'changed since' || state.kind === 'change asked' ? 'text-glow-ink' : 'text-ink-soft',
+                  )}
+                >
+                  {isYours && state.kind === 'waiting' ? 'Waiting for you' : signOffWords(state)}
+                </span>
                 <span className="sr-only">{sitter?.character || sitter?.name}</span>
               </span>
               <Lamp state={signOffLamp(state)} />

@@ -2,6 +2,8 @@ import { ChevronLeft, ChevronRight } from 'lucide-react'
 import { useState } from 'react'
 import { useSearchParams } from 'react-router-dom'
 import { canInShoot } from '#shared/access/roles.ts'
+import { shotsOfLook } from '#shared/domain/looks/shots-of-look.ts'
+import type { Plan } from '#shared/domain/plan/read-plan.ts'
 import { count, shortInstant } from '#src/lib/format.ts'
 import { useRole, useShootContext } from '#src/realtime/shoot-realtime.tsx'
 import { usePlan } from '#src/realtime/use-plan.ts'
@@ -26,18 +28,23 @@ export function SignOffScreen() {
   const [search, setSearch] = useSearchParams()
   const [isListing, setIsListing] = useState(false)
   const isPhone = useIsPhone()
-  const looks = [...standings.values()]
+  const looks = inShownOrder(standings, plan)
   const mayAnswer = canInShoot(role, 'sign-off.answer')
 
   if (!isKnown && error) throw error
   if (!isKnown) return <Waiting label="Fetching what was answered" />
   // Whoever is to answer begins where an answer is missing.
-  const chosen = standings.get(search.get('look') ?? '') ?? looks.find(({ state }) => state.kind !== 'signed off') ?? looks[0]
+  const chosen =
+    standings.get(search.get('look') ?? '') ?? looks.find(({ state }) => state.kind !== 'signed off') ?? looks[0]
   if (!chosen) {
     return (
       <>
         <ScreenBar title="Sign-off" />
-        <Empty title="No looks to sign off yet">{mayAnswer ? 'The stylist is still putting them together. You will find each look here, with its pictures and pieces, as soon as it hangs.' : 'Hang a look first; it can be signed off here as soon as it is there.'}</Empty>
+        <Empty title="No looks to sign off yet">
+          {mayAnswer
+            ? 'The stylist is still putting them together. You will find each look here, with its pictures and pieces, as soon as it hangs.'
+            : 'Hang a look first; it can be signed off here as soon as it is there.'}
+        </Empty>
       </>
     )
   }
@@ -45,10 +52,14 @@ export function SignOffScreen() {
   const signedOff = looks.filter(({ state }) => state.kind === 'signed off').length
   const due = shoot.brief.signOffByMs === null ? '' : `by ${shortInstant(shoot.brief.signOffByMs, shoot.brief.zone)}`
   const at = looks.indexOf(chosen)
-  const choose = (standing: LookStanding | undefined) => standing && setSearch({ look: standing.planned.look.id }, { replace: true })
+  const choose = (standing: LookStanding | undefined) =>
+    standing && setSearch({ look: standing.planned.look.id }, { replace: true })
   const handleAnswered = (words: string) => {
     const open = looks.find((standing) => standing !== chosen && standing.state.kind !== 'signed off')
-    toast.say(open ? words : `${words} Every other look is signed off already.`, open && { label: `Next: ${open.planned.look.name}`, onPress: () => choose(open) })
+    toast.say(
+      open ? words : `${words} Every other look is signed off already.`,
+      open && { label: `Next: ${open.planned.look.name}`, onPress: () => choose(open) },
+    )
   }
   const copyLink = () => {
     const address = `${location.origin}/shoots/${shoot.id}/sign-off`
@@ -62,6 +73,7 @@ export function SignOffScreen() {
   const list = (
     <LookList
       looks={looks}
+      isYours={mayAnswer}
       chosen={chosen.planned.look.id}
       onChoose={(lookId) => {
         choose(standings.get(lookId))
@@ -74,7 +86,11 @@ export function SignOffScreen() {
       {mayAnswer ? (
         <AnswerForm shootId={shoot.id} userId={userId} standing={chosen} onAnswered={handleAnswered} />
       ) : (
-        chosen.state.kind !== 'signed off' && <p className="mt-3 text-sm text-ink-soft max-md:px-[18px] max-md:pb-6">The client answers here. Nobody signs off their own work.</p>
+        chosen.state.kind !== 'signed off' && (
+          <p className="mt-3 text-sm text-ink-soft max-md:px-[18px] max-md:pb-6">
+            The client answers here. Nobody signs off their own work.
+          </p>
+        )
       )}
     </LookSheet>
   )
@@ -84,7 +100,9 @@ export function SignOffScreen() {
         <ScreenBar
           title="Sign-off"
           sub={`${sum}${due === '' ? '' : ` · ${mayAnswer ? 'for your answer' : 'due'} ${due}`}`}
-          actions={canInShoot(role, 'sign-off.ask') ? [{ label: 'Copy the link for the client', onPress: copyLink }] : []}
+          actions={
+            canInShoot(role, 'sign-off.ask') ? [{ label: 'Copy the link for the client', onPress: copyLink }] : []
+          }
         />
         <div className="grid max-w-6xl grid-cols-[13.125rem_minmax(0,1fr)] items-start gap-8 px-6 pt-2 pb-10">
           <nav aria-label="Looks">
@@ -101,12 +119,19 @@ export function SignOffScreen() {
       <header className="flex items-center gap-1 py-1 pr-1.5 pl-[18px]">
         <div className="min-w-0 flex-1 leading-tight">
           <h1 className="truncate text-lg">{shoot.brief.title}</h1>
-          <p className="truncate text-[0.8125rem] text-ink-soft">{due === '' ? sum : `${signedOff} signed off · ${due}`}</p>
+          <p className="truncate text-[0.8125rem] text-ink-soft">
+            {due === '' ? sum : `${signedOff} signed off · ${due}`}
+          </p>
         </div>
         <IconButton label="Look before" disabled={at <= 0} onClick={() => choose(looks[at - 1])}>
           <ChevronLeft size={20} aria-hidden />
         </IconButton>
-        <Button variant="quiet" className="!px-1" aria-label={`Look ${at + 1} of ${looks.length}: all looks`} onClick={() => setIsListing(true)}>
+        <Button
+          variant="quiet"
+          className="!px-1"
+          aria-label={`Look ${at + 1} of ${looks.length}: all looks`}
+          onClick={() => setIsListing(true)}
+        >
           {at + 1} of {looks.length}
         </Button>
         <IconButton label="Next look" disabled={at >= looks.length - 1} onClick={() => choose(looks[at + 1])}>
@@ -120,4 +145,13 @@ export function SignOffScreen() {
       </Sheet>
     </div>
   )
+}
+
+/** As they are first photographed; looks in no shot come last. */
+function inShownOrder(standings: ReadonlyMap<string, LookStanding>, plan: Plan): LookStanding[] {
+  const first = ({ planned }: LookStanding) => shotsOfLook(plan, planned.look.id)[0]?.number ?? Infinity
+  return [...standings.values()]
+    .map((standing) => ({ standing, at: first(standing) }))
+    .sort((a, b) => (a.at === b.at ? 0 : a.at - b.at))
+    .map(({ standing }) => standing)
 }

@@ -19,7 +19,14 @@ import { answerLook } from '#server/features/sign-off/answer-look.ts'
 import { readLookVersions } from '#server/features/sign-off/look-version-rows.ts'
 import { signOffRoutes } from '#server/features/sign-off/routes.ts'
 import { createTestDatabase } from '#tests/support/database.ts'
-import { type MemoryDocuments, makeApp, makeCtx, makePerson, makeShoot, memoryDocuments } from '#tests/support/media-world.ts'
+import {
+  type MemoryDocuments,
+  makeApp,
+  makeCtx,
+  makePerson,
+  makeShoot,
+  memoryDocuments,
+} from '#tests/support/media-world.ts'
 import type { TestDatabase } from '#tests/support/template.ts'
 
 let database: TestDatabase
@@ -77,8 +84,19 @@ async function shown(): Promise<{ frozen: FrozenLook; fingerprint: string }> {
   return { frozen, fingerprint: fingerprintOf(frozen) }
 }
 
-async function answer(fingerprint: string, more: Partial<Parameters<typeof answerLook>[1]> = {}, actor: Actor | null = client) {
-  return answerLook(makeCtx(db, documents, actor), { shootId, lookId, answer: 'signed off', fingerprint, words: '', ...more })
+async function answer(
+  fingerprint: string,
+  more: Partial<Parameters<typeof answerLook>[1]> = {},
+  actor: Actor | null = client,
+) {
+  return answerLook(makeCtx(db, documents, actor), {
+    shootId,
+    lookId,
+    answer: 'signed off',
+    fingerprint,
+    words: '',
+    ...more,
+  })
 }
 
 const rename = (name: string) => patchItem(documents.doc(shootId, 'looks'), pieces, glovesId, { name })
@@ -87,7 +105,14 @@ describe('answerLook', () => {
   it('keeps who, when, the version itself and where the log stood', async () => {
     const { frozen, fingerprint } = await shown()
     const kept = await answer(fingerprint)
-    expect(kept).toMatchObject({ lookId, answer: 'signed off', fingerprint, frozen, name: 'Thea Quill', atMs: Date.UTC(2026, 8, 29, 10) })
+    expect(kept).toMatchObject({
+      lookId,
+      answer: 'signed off',
+      fingerprint,
+      frozen,
+      name: 'Thea Quill',
+      atMs: Date.UTC(2026, 8, 29, 10),
+    })
     const [row] = await db.select().from(signOff).where(eq(signOff.id, kept.id))
     expect(row?.seq).toBeGreaterThan(1)
     expect(row?.frozen).toEqual(frozen)
@@ -119,17 +144,24 @@ describe('answerLook', () => {
 
   it('does not believe a version that has another fingerprint', async () => {
     const { frozen } = await shown()
-    await expect(answer('0'.repeat(64), { saw: { ...frozen, hair: 'made up' } })).rejects.toMatchObject({ details: { differences: [] } })
+    await expect(answer('0'.repeat(64), { saw: { ...frozen, hair: 'made up' } })).rejects.toMatchObject({
+      details: { differences: [] },
+    })
   })
 
   it('keeps a change asked for with its words', async () => {
-    const kept = await answer((await shown()).fingerprint, { answer: 'change asked', words: 'A softer edge on the collar.' })
+    const kept = await answer((await shown()).fingerprint, {
+      answer: 'change asked',
+      words: 'A softer edge on the collar.',
+    })
     expect(kept).toMatchObject({ answer: 'change asked', words: 'A softer edge on the collar.' })
   })
 
   it('does not know a look that was taken out', async () => {
     const { fingerprint } = await shown()
-    await expect(answer(fingerprint, { lookId: lookIdSchema.parse(randomUUID()) })).rejects.toMatchObject({ code: 'NOT_FOUND' })
+    await expect(answer(fingerprint, { lookId: lookIdSchema.parse(randomUUID()) })).rejects.toMatchObject({
+      code: 'NOT_FOUND',
+    })
   })
 
   it.each([
@@ -144,7 +176,8 @@ describe('answerLook', () => {
 })
 
 describe('POST /api/shoots/:shootId/looks/:lookId/sign-offs', () => {
-  const post = (body: object, who = client) => request(app).post(`/api/shoots/${shootId}/looks/${lookId}/sign-offs`).set('x-user', who.userId).send(body)
+  const post = (body: object, who = client) =>
+    request(app).post(`/api/shoots/${shootId}/looks/${lookId}/sign-offs`).set('x-user', who.userId).send(body)
 
   it('answers 200, and the history has it for everyone in the shoot', async () => {
     const { fingerprint } = await shown()
@@ -158,13 +191,18 @@ describe('POST /api/shoots/:shootId/looks/:lookId/sign-offs', () => {
     rename('Gloves, grey wool')
     const response = await post({ answer: 'signed off', fingerprint, saw: frozen })
     expect(response.status).toBe(409)
-    expect(signOffConflictSchema.parse(errorEnvelopeSchema.parse(response.body).error.details).differences).toHaveLength(1)
+    expect(
+      signOffConflictSchema.parse(errorEnvelopeSchema.parse(response.body).error.details).differences,
+    ).toHaveLength(1)
   })
 
   it('wants words with a change and a whole fingerprint, and says so with paths', async () => {
     const { fingerprint } = await shown()
     const noWords = await post({ answer: 'change asked', fingerprint, words: '  ' })
-    expect([noWords.status, errorEnvelopeSchema.parse(noWords.body).error.issues]).toEqual([400, [{ path: 'words', message: 'say what should change' }]])
+    expect([noWords.status, errorEnvelopeSchema.parse(noWords.body).error.issues]).toEqual([
+      400,
+      [{ path: 'words', message: 'say what should change' }],
+    ])
     expect((await post({ answer: 'signed off', fingerprint: 'abc' })).status).toBe(400)
   })
 

@@ -46,21 +46,40 @@ describe('listSignOffs', () => {
     const doc = documents.doc(shootId, 'looks')
     putItems(doc, sitters, [{ id: sitterId, name: 'Ada Finch' }], () => 0.5)
     // A picture that waits on a device, and one of another shoot, are not part of what the client saw.
-    putItems(doc, looks, [{ id: lookId, sitterId, name: 'Night coat', pictureIds: [waiting, stored, elsewhere] }], () => 0.5)
+    putItems(
+      doc,
+      looks,
+      [{ id: lookId, sitterId, name: 'Night coat', pictureIds: [waiting, stored, elsewhere] }],
+      () => 0.5,
+    )
 
     const [before] = (await listSignOffs(at(2), shootId)).current
     expect(before?.pictures).toEqual([{ uploadId: stored, sha256: picture.sha256 }])
     expect(before?.frozen).toMatchObject({ name: 'Night coat', pictures: [picture.sha256] })
-    const first = await answerLook(at(3), { shootId, lookId, answer: 'signed off', fingerprint: before?.fingerprint ?? '', words: '' })
+    const first = await answerLook(at(3), {
+      shootId,
+      lookId,
+      answer: 'signed off',
+      fingerprint: before?.fingerprint ?? '',
+      words: '',
+    })
     patchItem(doc, looks, lookId, { hair: 'pinned' })
     const [after] = (await listSignOffs(at(4), shootId)).current
     expect(after?.fingerprint).not.toBe(before?.fingerprint)
-    const second = await answerLook(at(5), { shootId, lookId, answer: 'change asked', fingerprint: after?.fingerprint ?? '', words: 'Loose, please.' })
+    const second = await answerLook(at(5), {
+      shootId,
+      lookId,
+      answer: 'change asked',
+      fingerprint: after?.fingerprint ?? '',
+      words: 'Loose, please.',
+    })
     expect((await listSignOffs(at(6), shootId)).signOffs).toEqual([second, first])
   })
 
   it('hides the shoot from a stranger', async () => {
     const shootId = await makeShoot(db, [[client, 'client']])
-    await expect(listSignOffs(makeCtx(db, memoryDocuments(), stranger), shootId)).rejects.toMatchObject({ code: 'NOT_FOUND' })
+    await expect(listSignOffs(makeCtx(db, memoryDocuments(), stranger), shootId)).rejects.toMatchObject({
+      code: 'NOT_FOUND',
+    })
   })
 })

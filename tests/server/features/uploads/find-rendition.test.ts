@@ -34,7 +34,11 @@ beforeAll(async () => {
   ])
   await makeShoot(db, [[stranger, 'photographer']])
   uploadId = uploadIdSchema.parse(randomUUID())
-  await storeUpload(makeCtx(db, documents, photographer), { shootId, uploadId, bytes: await twoTone('#8e6a22', '#23304a') })
+  await storeUpload(makeCtx(db, documents, photographer), {
+    shootId,
+    uploadId,
+    bytes: await twoTone('#8e6a22', '#23304a'),
+  })
 })
 
 afterAll(async () => {
@@ -50,14 +54,20 @@ describe('findRendition', () => {
 
   it('tells a stranger exactly what it says of a picture that is not there', async () => {
     const caught = (error: unknown) => error
-    const asStranger = await findRendition(makeCtx(db, documents, stranger), { uploadId, longEdgePx: 320 }).catch(caught)
+    const asStranger = await findRendition(makeCtx(db, documents, stranger), { uploadId, longEdgePx: 320 }).catch(
+      caught,
+    )
     const missing = uploadIdSchema.parse(randomUUID())
-    const notThere = await findRendition(makeCtx(db, documents, crew), { uploadId: missing, longEdgePx: 320 }).catch(caught)
+    const notThere = await findRendition(makeCtx(db, documents, crew), { uploadId: missing, longEdgePx: 320 }).catch(
+      caught,
+    )
     expect(asStranger).toMatchObject({ code: 'NOT_FOUND' })
     expect(asStranger).toEqual(notThere)
   })
 
   it('refuses who is signed out', async () => {
-    await expect(findRendition(makeCtx(db, documents, null), { uploadId, longEdgePx: 320 })).rejects.toMatchObject({ code: 'SIGNED_OUT' })
+    await expect(findRendition(makeCtx(db, documents, null), { uploadId, longEdgePx: 320 })).rejects.toMatchObject({
+      code: 'SIGNED_OUT',
+    })
   })
 })

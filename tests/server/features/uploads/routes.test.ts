@@ -81,18 +81,26 @@ describe('PUT /api/shoots/:shootId/uploads/:uploadId', () => {
       sent.write(`--${boundary}\r\ncontent-disposition: form-data; name="file"; filename="a.jpg"\r\n\r\n`)
       for (let part = 0; part < 30; part++) sent.write(large.subarray(0, 1024 * 1024))
       sent.write(`\r\n--${boundary}--\r\n`)
-      sent.end((error, response) => (response ? resolve(response) : reject(error instanceof Error ? error : new Error('no answer'))))
+      sent.end((error, response) =>
+        response ? resolve(response) : reject(error instanceof Error ? error : new Error('no answer')),
+      )
     })
     expect([untold.status, errorOf(untold.body).code]).toEqual([413, 'TOO_LARGE'])
   })
 
   it('refuses text named .jpg as what it is', async () => {
     const response = await put(client, Buffer.from('only words\n'), randomUUID(), 'portrait.jpg')
-    expect([response.status, errorOf(response.body)]).toEqual([415, { code: 'UNSUPPORTED', message: expect.stringContaining('a text file') }])
+    expect([response.status, errorOf(response.body)]).toEqual([
+      415,
+      { code: 'UNSUPPORTED', message: expect.stringContaining('a text file') },
+    ])
   })
 
   it('refuses a request without a file, or with two', async () => {
-    const none = await request(app).put(`/api/shoots/${shootId}/uploads/${randomUUID()}`).set('x-user', client.userId).send({})
+    const none = await request(app)
+      .put(`/api/shoots/${shootId}/uploads/${randomUUID()}`)
+      .set('x-user', client.userId)
+      .send({})
     expect(none.status).toBe(400)
     const bytes = await twoTone('#8e6a22', '#23304a', 40, 30)
     expect((await put(client, bytes).attach('file', bytes, 'second.png')).status).toBe(400)
@@ -100,7 +108,8 @@ describe('PUT /api/shoots/:shootId/uploads/:uploadId', () => {
 
   it('slows down who sends too many', async () => {
     const narrow = makeApp(db, memoryDocuments(), [client], uploadsRoutes(1))
-    const send = () => request(narrow).put(`/api/shoots/${shootId}/uploads/${randomUUID()}`).set('x-user', client.userId).send({})
+    const send = () =>
+      request(narrow).put(`/api/shoots/${shootId}/uploads/${randomUUID()}`).set('x-user', client.userId).send({})
     expect((await send()).status).toBe(400)
     expect((await send()).status).toBe(429)
   })
@@ -110,7 +119,10 @@ describe('GET /api/uploads/:uploadId/:rendition', () => {
   it('sends WebP that browsers may keep, and 304 when they have it', async () => {
     const id = randomUUID()
     await put(client, await cameraJpeg(), id)
-    const get = (who: Actor | null, edge: number | string = 960) => request(app).get(`/api/uploads/${id}/${edge}`).set('x-user', who?.userId ?? '')
+    const get = (who: Actor | null, edge: number | string = 960) =>
+      request(app)
+        .get(`/api/uploads/${id}/${edge}`)
+        .set('x-user', who?.userId ?? '')
     const response = await get(crew)
     expect(response.status).toBe(200)
     expect(response.headers).toMatchObject({

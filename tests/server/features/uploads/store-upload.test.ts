@@ -58,7 +58,11 @@ describe('storeUpload', () => {
     const kept = await store(await cameraJpeg())
     expect(kept).toMatchObject({ widthPx: 1200, heightPx: 800, exposure: 'f/5.6 · 1/200 · 85 mm · ISO 100' })
     expect(kept.palette).toHaveLength(2)
-    const rows = await db.select().from(rendition).where(eq(rendition.sha256, kept.sha256)).orderBy(rendition.longEdgePx)
+    const rows = await db
+      .select()
+      .from(rendition)
+      .where(eq(rendition.sha256, kept.sha256))
+      .orderBy(rendition.longEdgePx)
     expect(rows.map((row) => row.longEdgePx)).toEqual([320, 960, 2048])
     const sizes = await Promise.all(rows.map((row) => sharp(Buffer.from(row.bytes)).metadata()))
     // Never enlarged: the largest is the picture itself.
@@ -92,13 +96,19 @@ describe('storeUpload', () => {
   it('turns a picture upright', async () => {
     const kept = await store(await cameraJpeg(6))
     expect([kept.widthPx, kept.heightPx]).toEqual([800, 1200])
-    const [small] = await db.select().from(rendition).where(eq(rendition.sha256, kept.sha256)).orderBy(rendition.longEdgePx)
+    const [small] = await db
+      .select()
+      .from(rendition)
+      .where(eq(rendition.sha256, kept.sha256))
+      .orderBy(rendition.longEdgePx)
     const { width, height } = await sharp(Buffer.from(small?.bytes ?? [])).metadata()
     expect([width, height]).toEqual([213, 320])
   })
 
   it.each(['png', 'webp', 'avif'] as const)('takes %s', async (format) => {
-    const bytes = await sharp(await twoTone('#8e6a22', '#23304a', 200, 100)).toFormat(format).toBuffer()
+    const bytes = await sharp(await twoTone('#8e6a22', '#23304a', 200, 100))
+      .toFormat(format)
+      .toBuffer()
     const kept = await store(bytes)
     expect([kept.widthPx, kept.heightPx]).toEqual([200, 100])
   })
@@ -137,11 +147,19 @@ describe('storeUpload', () => {
   })
 
   it.each([
-    ['an SVG', Buffer.from('<?xml version="1.0"?><svg xmlns="http://www.w3.org/2000/svg"><script/></svg>'), /SVG drawing.*JPEG, PNG, WebP or AVIF/],
+    [
+      'an SVG',
+      Buffer.from('<?xml version="1.0"?><svg xmlns="http://www.w3.org/2000/svg"><script/></svg>'),
+      /SVG drawing.*JPEG, PNG, WebP or AVIF/,
+    ],
     ['a GIF', Buffer.from('GIF89a\x01\x00\x01\x00\x00\x00\x00;', 'latin1'), /a GIF/],
     ['text named .jpg', Buffer.from('Not a picture at all, only words.\n'), /a text file/],
     ['a ZIP archive renamed', Buffer.from('PK\x03\x04\x14\x00\x00\x00', 'latin1'), /ZIP archive/],
-    ['a HEIC picture', Buffer.from('\x00\x00\x00\x18ftypheic\x00\x00\x00\x00mif1heic', 'latin1'), /HEIC.*most compatible/],
+    [
+      'a HEIC picture',
+      Buffer.from('\x00\x00\x00\x18ftypheic\x00\x00\x00\x00mif1heic', 'latin1'),
+      /HEIC.*most compatible/,
+    ],
     ['a film', Buffer.from('\x00\x00\x00\x18ftypisom\x00\x00\x00\x00isommp42', 'latin1'), /a film/],
     ['an empty file', Buffer.alloc(0), /an empty file/],
     ['a JPEG of a header only', Buffer.from('\xff\xd8\xff\xe0', 'latin1'), /broken or not complete/],

@@ -14,8 +14,17 @@ const look = lookSchema.parse({ id: uuid(800), sitterId: uuid(700), name: 'Night
 /** A day of shots; those at these places wear the look, and loose ones by title. */
 function planWith(placed: readonly boolean[], loose: readonly string[] = []): Plan {
   const shots = [
-    ...placed.map((wears, index) => shotSchema.parse({ id: uuid(index + 1), title: `Shot ${index}`, place: [day.id, `a${index}`], lookIds: wears ? [look.id] : [] })),
-    ...loose.map((title, index) => shotSchema.parse({ id: uuid(index + 100), title, place: [LOOSE, 'a0'], lookIds: [look.id] })),
+    ...placed.map((wears, index) =>
+      shotSchema.parse({
+        id: uuid(index + 1),
+        title: `Shot ${index}`,
+        place: [day.id, `a${index}`],
+        lookIds: wears ? [look.id] : [],
+      }),
+    ),
+    ...loose.map((title, index) =>
+      shotSchema.parse({ id: uuid(index + 100), title, place: [LOOSE, 'a0'], lookIds: [look.id] }),
+    ),
   ]
   const none = new Map()
   return readPlan({

@@ -15,7 +15,8 @@ const base: FrozenLook = {
   ],
   pictures: ['p1', 'p2'],
 }
-const words = (after: Partial<FrozenLook>, before: FrozenLook = base) => differences(before, { ...base, ...after }).map(differenceWords)
+const words = (after: Partial<FrozenLook>, before: FrozenLook = base) =>
+  differences(before, { ...base, ...after }).map(differenceWords)
 const [coat, gloves] = base.pieces
 if (!coat || !gloves) throw new Error('the sample has two pieces')
 
@@ -25,12 +26,20 @@ describe('differences', () => {
   })
 
   it('names what changed within a piece by its first words', () => {
-    expect(words({ pieces: [coat, { ...gloves, name: 'Gloves, grey wool' }] })).toEqual(['Gloves: black kid → grey wool'])
-    expect(words({ pieces: [{ ...coat, name: 'Day coat' }, gloves] })).toEqual(['Piece: Night coat, boiled wool → Day coat'])
+    expect(words({ pieces: [coat, { ...gloves, name: 'Gloves, grey wool' }] })).toEqual([
+      'Gloves: black kid → grey wool',
+    ])
+    expect(words({ pieces: [coat, { ...gloves, name: 'Gloves' }] })).toEqual(['Gloves: black kid → not said'])
+    expect(words({ pieces: [{ ...coat, name: 'Day coat' }, gloves] })).toEqual([
+      'Piece: Night coat, boiled wool → Day coat',
+    ])
   })
 
   it('says hair and make-up, also where nothing was said before', () => {
-    expect(words({ hair: 'pinned under the collar', makeUp: 'bare' })).toEqual(['Hair: loose → pinned under the collar', 'Make-up: not said → bare'])
+    expect(words({ hair: 'pinned under the collar', makeUp: 'bare' })).toEqual([
+      'Hair: loose → pinned under the collar',
+      'Make-up: not said → bare',
+    ])
   })
 
   it('says what was added and taken out', () => {
@@ -44,8 +53,12 @@ describe('differences', () => {
   })
 
   it('says colours in words', () => {
-    expect(words({ pieces: [coat, { ...gloves, colour: '#6e7c84' }] })).toEqual(['Gloves, black kid, colour: black (#141414) → slate (#6e7c84)'])
-    expect(words({ pieces: [coat, { ...gloves, colour: null }] })).toEqual(['Gloves, black kid, colour: black (#141414) → not chosen'])
+    expect(words({ pieces: [coat, { ...gloves, colour: '#6e7c84' }] })).toEqual([
+      'Gloves, black kid, colour: black (#141414) → slate (#6e7c84)',
+    ])
+    expect(words({ pieces: [coat, { ...gloves, colour: null }] })).toEqual([
+      'Gloves, black kid, colour: black (#141414) → not chosen',
+    ])
   })
 
   it('counts pictures, and says when another one comes first', () => {
@@ -59,8 +72,16 @@ describe('differences', () => {
 
   it('finds a difference whenever the versions differ', () => {
     const changes: Partial<FrozenLook>[] = [
-      { sitter: 'x' }, { character: 'x' }, { name: 'x' }, { hair: '' }, { makeUp: 'x' }, { pieces: [] }, { pictures: [] },
-      { pieces: [coat, { ...gloves, kind: 'garment' }] }, { pictures: ['p3', 'p2'] }, { pictures: ['p1', 'p1'] },
+      { sitter: 'x' },
+      { character: 'x' },
+      { name: 'x' },
+      { hair: '' },
+      { makeUp: 'x' },
+      { pieces: [] },
+      { pictures: [] },
+      { pieces: [coat, { ...gloves, kind: 'garment' }] },
+      { pictures: ['p3', 'p2'] },
+      { pictures: ['p1', 'p1'] },
     ]
     for (const change of changes) expect(words(change), JSON.stringify(change)).not.toEqual([])
   })

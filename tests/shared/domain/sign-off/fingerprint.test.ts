@@ -12,10 +12,23 @@ const hashes = new Map([
 
 function nightCoat(): PlannedLook {
   return {
-    look: lookSchema.parse({ id: uuid(1), sitterId: uuid(2), name: 'Night coat', hair: 'pinned', pieceIds: [uuid(4), uuid(3)], pictureIds: [uuid(8), uuid(9)] }),
+    look: lookSchema.parse({
+      id: uuid(1),
+      sitterId: uuid(2),
+      name: 'Night coat',
+      hair: 'pinned',
+      pieceIds: [uuid(4), uuid(3)],
+      pictureIds: [uuid(8), uuid(9)],
+    }),
     sitter: sitterSchema.parse({ id: uuid(2), name: 'Ada Finch', character: 'The Astronomer' }),
     pieces: [
-      pieceSchema.parse({ id: uuid(4), name: 'Gloves, grey wool', kind: 'accessory', colour: '#6E7C84', status: 'pulled' }),
+      pieceSchema.parse({
+        id: uuid(4),
+        name: 'Gloves, grey wool',
+        kind: 'accessory',
+        colour: '#6E7C84',
+        status: 'pulled',
+      }),
       pieceSchema.parse({ id: uuid(3), name: 'Night coat, boiled wool', colour: '#23304A' }),
     ],
   }
@@ -49,7 +62,15 @@ describe('fingerprintOf', () => {
 
   it('does not change with status, source, dates, notes, minutes or the order of pieces', () => {
     const other = nightCoat()
-    other.pieces = other.pieces.map((piece) => ({ ...piece, status: 'packed' as const, source: 'Theatre hire', dueBack: '2026-10-16', note: 'private' })).reverse()
+    other.pieces = other.pieces
+      .map((piece) => ({
+        ...piece,
+        status: 'packed' as const,
+        source: 'Theatre hire',
+        dueBack: '2026-10-16',
+        note: 'private',
+      }))
+      .reverse()
     other.look = { ...other.look, note: 'for us', changeMin: 30, rank: 'b' }
     expect(of(other)).toBe(original)
   })

@@ -3,10 +3,26 @@ import { fingerprintOf } from '#shared/domain/sign-off/fingerprint.ts'
 import type { FrozenLook } from '#shared/domain/sign-off/schema.ts'
 import { type Answer, signOffLamp, signOffState, signOffWords } from '#shared/domain/sign-off/state.ts'
 
-const version = (hair: string): FrozenLook => ({ version: 1, sitter: '', character: '', name: 'Night coat', hair, makeUp: '', pieces: [], pictures: [] })
+const version = (hair: string): FrozenLook => ({
+  version: 1,
+  sitter: '',
+  character: '',
+  name: 'Night coat',
+  hair,
+  makeUp: '',
+  pieces: [],
+  pictures: [],
+})
 const answer = (kind: Answer['answer'], hair: string, atMs: number): Answer => {
   const frozen = version(hair)
-  return { answer: kind, fingerprint: fingerprintOf(frozen), frozen, words: kind === 'change asked' ? 'softer' : '', name: 'Thea Quill', atMs }
+  return {
+    answer: kind,
+    fingerprint: fingerprintOf(frozen),
+    frozen,
+    words: kind === 'change asked' ? 'softer' : '',
+    name: 'Thea Quill',
+    atMs,
+  }
 }
 
 describe('signOffState', () => {
@@ -33,7 +49,11 @@ describe('signOffState', () => {
 
   it('is change asked, and knows whether the look was altered after the asking', () => {
     const history = [answer('change asked', 'loose', 2), answer('signed off', 'loose', 1)]
-    expect(signOffState(history, version('loose'))).toMatchObject({ kind: 'change asked', changedSince: false, differences: [] })
+    expect(signOffState(history, version('loose'))).toMatchObject({
+      kind: 'change asked',
+      changedSince: false,
+      differences: [],
+    })
     expect(signOffState(history, version('pinned'))).toMatchObject({
       kind: 'change asked',
       changedSince: true,
@@ -42,7 +62,11 @@ describe('signOffState', () => {
   })
 
   it('goes by the newest answer to this version, in whatever order they come', () => {
-    const history = [answer('change asked', 'loose', 1), answer('signed off', 'loose', 3), answer('signed off', 'pinned', 2)]
+    const history = [
+      answer('change asked', 'loose', 1),
+      answer('signed off', 'loose', 3),
+      answer('signed off', 'pinned', 2),
+    ]
     expect(signOffState(history, version('loose'))).toMatchObject({ kind: 'signed off', answer: { atMs: 3 } })
     expect(signOffState(history, version('cropped'))).toMatchObject({ kind: 'changed since', answer: { atMs: 3 } })
   })

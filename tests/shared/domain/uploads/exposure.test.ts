@@ -5,7 +5,9 @@ const nothing = { fNumber: null, exposureTimeS: null, focalLengthMm: null, iso: 
 
 describe('exposureLine', () => {
   it('reads as photographers say it', () => {
-    expect(exposureLine({ fNumber: 5.6, exposureTimeS: 0.005, focalLengthMm: 85, iso: 100 })).toBe('f/5.6 · 1/200 · 85 mm · ISO 100')
+    expect(exposureLine({ fNumber: 5.6, exposureTimeS: 0.005, focalLengthMm: 85, iso: 100 })).toBe(
+      'f/5.6 · 1/200 · 85 mm · ISO 100',
+    )
   })
 
   it('leaves out what the camera did not write', () => {

@@ -26,7 +26,9 @@ describe('paletteOf', () => {
   })
 
   it('never gives more than it is asked for', () => {
-    const many = ['#c22020', '#2a56b0', '#2f8a45', '#f0d22e', '#e0781c', '#6b3a86', '#141414', '#fbfbfb'].map((colour) => [colour, 100] as const)
+    const many = ['#c22020', '#2a56b0', '#2f8a45', '#f0d22e', '#e0781c', '#6b3a86', '#141414', '#fbfbfb'].map(
+      (colour) => [colour, 100] as const,
+    )
     expect(paletteOf(pixels(...many), 5)).toHaveLength(5)
   })
 
@@ -41,7 +43,12 @@ describe('paletteOf', () => {
   })
 
   it('gives the same palette for the same pixels, in whatever order they come', () => {
-    const a = [['#23304a', 30], ['#8e6a22', 50], ['#d9d4c8', 20], ['#27503f', 25]] as const
+    const a = [
+      ['#23304a', 30],
+      ['#8e6a22', 50],
+      ['#d9d4c8', 20],
+      ['#27503f', 25],
+    ] as const
     expect(paletteOf(pixels(...a), 5)).toEqual(paletteOf(pixels(...[...a].reverse()), 5))
   })
 

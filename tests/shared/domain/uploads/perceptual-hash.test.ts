@@ -1,7 +1,8 @@
 import { describe, expect, it } from 'vitest'
 import { perceptualHash } from '#shared/domain/uploads/perceptual-hash.ts'
 
-const grey = (of: (column: number, row: number) => number) => Uint8Array.from({ length: 72 }, (_, at) => of(at % 9, Math.floor(at / 9)))
+const grey = (of: (column: number, row: number) => number) =>
+  Uint8Array.from({ length: 72 }, (_, at) => of(at % 9, Math.floor(at / 9)))
 
 describe('perceptualHash', () => {
   it('is all ones where every row gets brighter and all zeros where it gets darker', () => {

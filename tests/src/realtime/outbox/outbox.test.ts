@@ -8,7 +8,14 @@ import { NotAPicture } from '#src/realtime/outbox/prepare-picture.ts'
 import type { SendUpload } from '#src/realtime/outbox/send-upload.ts'
 
 const picture = () => new Blob(['a picture'])
-const uploaded = (id: string): Upload => ({ id: uploadIdSchema.parse(id), sha256: 'a'.repeat(64), widthPx: 40, heightPx: 30, palette: [], exposure: '' })
+const uploaded = (id: string): Upload => ({
+  id: uploadIdSchema.parse(id),
+  sha256: 'a'.repeat(64),
+  widthPx: 40,
+  heightPx: 30,
+  palette: [],
+  exposure: '',
+})
 
 type Sent = { uploadId: string; resolve: () => void; reject: (error: Error) => void; progress: (share: number) => void }
 
@@ -18,7 +25,9 @@ function hold(): { send: SendUpload; sent: Sent[] } {
   return {
     sent,
     send: ({ uploadId }, progress) =>
-      new Promise((resolve, reject) => sent.push({ uploadId, progress, reject, resolve: () => resolve(uploaded(uploadId)) })),
+      new Promise((resolve, reject) =>
+        sent.push({ uploadId, progress, reject, resolve: () => resolve(uploaded(uploadId)) }),
+      ),
   }
 }
 
@@ -29,12 +38,20 @@ function open(send: SendUpload, store: OutboxStore = memoryOutboxStore()) {
     shootId: 'shoot',
     store: Promise.resolve(store),
     send,
-    prepare: (blob) => (blob.size > 0 ? Promise.resolve({ blob, widthPx: 40, heightPx: 30 }) : Promise.reject(new NotAPicture('This is an empty file.'))),
+    prepare: (blob) =>
+      blob.size > 0
+        ? Promise.resolve({ blob, widthPx: 40, heightPx: 30 })
+        : Promise.reject(new NotAPicture('This is an empty file.')),
     now: Date.now,
     random: () => 0.5,
     onCount: (left) => (count = left),
   })
-  return { outbox, settled, left: () => count, listen: () => outbox.onSettled((id, { state }) => settled.push([id, state])) }
+  return {
+    outbox,
+    settled,
+    left: () => count,
+    listen: () => outbox.onSettled((id, { state }) => settled.push([id, state])),
+  }
 }
 
 const flush = () => vi.advanceTimersByTimeAsync(0)
@@ -48,7 +65,13 @@ describe('createOutbox', () => {
     const { outbox, left } = open(send)
     for (let n = 0; n < 5; n++) await outbox.add(picture(), `${n}.jpg`)
     expect(sent).toHaveLength(3)
-    expect(outbox.items.get().map(({ state }) => state)).toEqual(['sending', 'sending', 'sending', 'waiting', 'waiting'])
+    expect(outbox.items.get().map(({ state }) => state)).toEqual([
+      'sending',
+      'sending',
+      'sending',
+      'waiting',
+      'waiting',
+    ])
     expect(left()).toBe(5)
     sent[0]?.resolve()
     await flush()

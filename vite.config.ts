@@ -1,25 +1,40 @@
 /// <reference types="vitest/config" />
 import tailwindcss from '@tailwindcss/vite'
 import react from '@vitejs/plugin-react'
-import { type Plugin, defineConfig } from 'vite'
+import { type Plugin, build, defineConfig } from 'vite'
 import { injectManifest } from 'workbox-build'
 
 const onDatabase = { globalSetup: ['tests/support/global-setup.ts'], testTimeout: 30_000, hookTimeout: 60_000 }
 
 const outDir = 'dist/client'
 
-/** Lists the built files in the service worker, so that the shell opens without a signal. */
+/**
+ * The service worker, built by itself into one file (a worker of the plain kind cannot import), with the list of the
+ * built files in it, so that the shell opens without a signal.
+ */
 function offlineShell(): Plugin {
   return {
     name: 'offline-shell',
     apply: 'build',
-    async writeBundle() {
-      const worker = `${outDir}/service-worker.js`
+    async writeBundle({ dir = outDir }) {
+      const worker = `${dir}/service-worker.js`
+      await build({
+        configFile: false,
+        publicDir: false,
+        logLevel: 'warn',
+        build: {
+          outDir: dir,
+          emptyOutDir: false,
+          target: 'es2023',
+          rolldownOptions: { input: 'src/service-worker.ts', output: { format: 'iife', entryFileNames: 'service-worker.js' } },
+        },
+      })
       await injectManifest({
         swSrc: worker,
         swDest: worker,
-        globDirectory: outDir,
+        globDirectory: dir,
         globPatterns: ['index.html', 'manifest.webmanifest', '*.svg', 'assets/**/*.{js,css,woff2}'],
+        globIgnores: ['**/*-{cyrillic,vietnamese}-*'],
         dontCacheBustURLsMatching: /^assets\//,
       })
     },
@@ -34,8 +49,16 @@ export default defineConfig({
     target: 'es2023',
     chunkSizeWarningLimit: 700,
     rolldownOptions: {
-      input: { index: 'index.html', 'service-worker': 'src/service-worker.ts' },
-      output: { entryFileNames: (chunk) => (chunk.name === 'service-worker' ? 'service-worker.js' : 'assets/[name]-[hash].js') },
+      output: {
+        // What changes seldom, in files of their own: a new build leaves them in the browser's cache.
+        codeSplitting: {
+          groups: [
+            { name: 'react', test: /node_modules[\\/](react|react-dom|scheduler|react-router|react-router-dom|@tanstack)[\\/]/ },
+            { name: 'zod', test: /node_modules[\\/]zod[\\/]/ },
+            { name: 'yjs', test: /node_modules[\\/](yjs|lib0|y-protocols|y-websocket|y-indexeddb|fractional-indexing|idb)[\\/]/ },
+          ],
+        },
+      },
     },
   },
   test: {

@@ -1,4 +1,4 @@
-import { Link, useRouteError } from 'react-router-dom'
+import { Link } from 'react-router-dom'
 import { ApiError } from '#src/lib/api.ts'
 import { Button, buttonClass } from '#src/ui/button.tsx'
 import { Mark } from '#src/ui/mark.tsx'
@@ -28,9 +28,9 @@ function wordsOf(error: unknown): Words {
   return { title: 'Something on this page went wrong', text: 'What you typed is kept. Load the page again; if it stays, tell whoever looks after Sconce what you did last.', again: true }
 }
 
-/** What a route shows instead of itself when it fails. */
-export function ErrorView() {
-  return <Trouble {...wordsOf(useRouteError())} />
+/** What is shown instead of a screen that failed. */
+export function ErrorView({ error }: { error: unknown }) {
+  return <Trouble {...wordsOf(error)} />
 }
 
 export function NotFound() {

@@ -2,21 +2,25 @@ import '#src/styles/app.css'
 import { QueryClientProvider } from '@tanstack/react-query'
 import { StrictMode } from 'react'
 import { createRoot } from 'react-dom/client'
-import { RouterProvider } from 'react-router-dom'
+import { BrowserRouter } from 'react-router-dom'
 import { studioQueries } from '#src/features/studios/queries.ts'
 import { registerOffline } from '#src/lib/offline.ts'
 import { Toaster } from '#src/ui/toaster.tsx'
 import { createQueryClient } from './query-client.ts'
-import { router } from './router.tsx'
+import { Screen, fetchAhead } from './router.tsx'
 
 const queryClient = createQueryClient(() => queryClient.setQueryData(studioQueries.session().queryKey, null))
+
+fetchAhead(window.location.pathname)
 
 const root = document.getElementById('root')
 if (root) {
   createRoot(root).render(
     <StrictMode>
       <QueryClientProvider client={queryClient}>
-        <RouterProvider router={router} />
+        <BrowserRouter>
+          <Screen />
+        </BrowserRouter>
         <Toaster />
       </QueryClientProvider>
     </StrictMode>,

@@ -26,6 +26,8 @@ export function registerCache(name: string): void {
 
 /** Opens the document's cache; resolves to undefined where the browser gives none. Gives up waiting after half a second. */
 export async function openCache(name: string, doc: Y.Doc): Promise<IndexeddbPersistence | undefined> {
+  // Some private windows have none; the library would leave a rejected promise behind.
+  if (!('indexedDB' in globalThis)) return undefined
   try {
     registerCache(name)
     const cache = new IndexeddbPersistence(name, doc)

@@ -70,10 +70,10 @@ export const WallItemView = memo(function WallItemView({ entry, name, mayWrite }
 
   useEffect(() => {
     const element = ref.current
-    // Only when the hand is on the wall anyway: a field in the inspector keeps its focus.
-    if (focused && !editing && element && element.closest('[data-wall]')?.contains(document.activeElement)) {
-      element.focus({ preventScroll: true })
-    }
+    const active = document.activeElement
+    // Only when the hand is on the wall or nowhere: a field in the inspector keeps its focus.
+    const isFree = active === document.body || element?.closest('[data-wall]')?.contains(active)
+    if (focused && !editing && isFree) element?.focus({ preventScroll: true })
   }, [focused, editing])
 
   return (

@@ -10,6 +10,8 @@ const SLOP_PX = 4
 const TOUCH_SLOP_PX = 9
 /** How long a finger rests on a thing before it is picked up, ms. */
 const LONG_PRESS_MS = 380
+/** Two presses on the same thing within this time edit its words, ms. */
+const DOUBLE_PRESS_MS = 400
 /** Nearer than this to the edge, what is held pushes the wall along, screen pixels. */
 const EDGE_PX = 28
 
@@ -17,7 +19,7 @@ type Gesture =
   | { kind: 'none' }
   | { kind: 'pressed'; at: Point; id: string | null; wasSelected: boolean; additive: boolean; touch: boolean }
   | { kind: 'pan'; last: Point }
-  | { kind: 'drag'; drag: Drag; from: Point; last: Point; free: boolean }
+  | { kind: 'drag'; drag: Drag; view: View; from: Point; last: Point; free: boolean }
   | { kind: 'resize'; resize: Resize; from: Point }
   | { kind: 'marquee'; from: Point; last: Point; before: ReadonlySet<string> }
   | { kind: 'pinch'; view: View; from: readonly [Point, Point] }
@@ -49,6 +51,7 @@ export function attachPointer(element: HTMLElement, control: WallControl): () =>
   const { state } = control
   const fingers = new Map<number, Point>()
   let gesture: Gesture = { kind: 'none' }
+  let lastPress: { id: string | null; atMs: number } = { id: null, atMs: 0 }
   let pressTimer: ReturnType<typeof setTimeout> | undefined
   let edgeFrame = 0
   let edges = element.getBoundingClientRect()
@@ -77,7 +80,8 @@ export function attachPointer(element: HTMLElement, control: WallControl): () =>
 
   const pickedUp = (px: Point): Gesture => {
     edgeFrame = requestAnimationFrame(pushEdges)
-    return { kind: 'drag', drag: startDrag(control, state.selection.get()), from: wallPoint(px), last: px, free: false }
+    const drag = startDrag(control, state.selection.get())
+    return { kind: 'drag', drag, view: state.view.get(), from: wallPoint(px), last: px, free: false }
   }
 
   const apply = () => {
@@ -115,7 +119,8 @@ export function attachPointer(element: HTMLElement, control: WallControl): () =>
       at < EDGE_PX ? (EDGE_PX - at) / 3 : at > size - EDGE_PX ? (size - EDGE_PX - at) / 3 : 0
     const dx = push(x, widthPx)
     const dy = push(y, heightPx)
-    if (dx !== 0 || dy !== 0) {
+    // Outside of the wall it stays: over the strip a frame is being given to a shot.
+    if (isInside(gesture.last) && (dx !== 0 || dy !== 0)) {
       setView(state, panBy(state.view.get(), Math.max(-16, Math.min(16, dx)), Math.max(-16, Math.min(16, dy))))
       apply()
     }
@@ -233,11 +238,20 @@ export function attachPointer(element: HTMLElement, control: WallControl): () =>
     }
   }
 
+  const isSecondPress = (id: string, atMs: number): boolean => {
+    const isSecond = lastPress.id === id && atMs - lastPress.atMs < DOUBLE_PRESS_MS
+    lastPress = isSecond ? { id: null, atMs } : { id, atMs }
+    return isSecond
+  }
+
   const handleUp = (event: PointerEvent) => {
     fingers.delete(event.pointerId)
     switch (gesture.kind) {
       case 'pressed':
-        if (gesture.touch) {
+        // The wall has captured the pointer: a double click of the browser would name the wall, not the thing.
+        if (gesture.id !== null && !gesture.additive && isSecondPress(gesture.id, event.timeStamp)) {
+          if (control.mayWrite()) state.editing.set(gesture.id)
+        } else if (gesture.touch) {
           select(state, gesture.id === null ? [] : [gesture.id])
           state.focused.set(gesture.id)
         } else if (gesture.id === null) {
@@ -248,6 +262,7 @@ export function attachPointer(element: HTMLElement, control: WallControl): () =>
         const onShot = isInside(local(event)) ? null : shotUnder(control, event)
         if (onShot) {
           gesture.drag.cancel()
+          setView(state, gesture.view)
           control.coverShot(onShot.shotId, onShot.frameId)
         } else gesture.drag.drop()
         break
@@ -278,12 +293,6 @@ export function attachPointer(element: HTMLElement, control: WallControl): () =>
 
   const handleLeave = () => control.setPresence({ pointer: undefined })
 
-  const handleDouble = (event: MouseEvent) => {
-    if (closest(event.target, '[data-wall-ignore]') || !control.mayWrite()) return
-    const id = closest(event.target, '[data-wall-id]')?.dataset['wallId']
-    if (id) state.editing.set(id)
-  }
-
   const handleEscape = (event: KeyboardEvent) => {
     if (event.key !== 'Escape' || (gesture.kind !== 'drag' && gesture.kind !== 'resize')) return
     event.stopPropagation()
@@ -302,7 +311,6 @@ export function attachPointer(element: HTMLElement, control: WallControl): () =>
     ['pointerup', handleUp],
     ['pointercancel', handleCancel],
     ['pointerleave', handleLeave],
-    ['dblclick', handleDouble],
     ['contextmenu', stopMenu],
   ]
   for (const [name, listener] of listeners) element.addEventListener(name, listener as EventListener)

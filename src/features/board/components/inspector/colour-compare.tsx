@@ -38,6 +38,16 @@ function targetsOf(plan: Plan, wall: ReadonlyMap<string, Palette>, without: stri
   return [...looks, ...sets, ...hung].filter((target) => target.value !== without && target.colours.length > 0)
 }
 
+/** The target whose farthest colour is the least far. */
+function nearestTarget(palette: readonly string[], targets: readonly Target[]): Target | undefined {
+  let best: { target: Target; worst: number } | undefined
+  for (const target of targets) {
+    const worst = Math.max(...target.colours.map(({ hex }) => nearestIn(palette, hex)?.deltaE ?? Infinity))
+    if (!best || worst < best.worst) best = { target, worst }
+  }
+  return best?.target
+}
+
 /** From this on, two colours are not called near any more: common practice, no source. */
 const NEAR = 10
 

@@ -27,9 +27,9 @@ export function TagContent({ tag }: { tag: Tag }) {
           className="font-display text-[1rem] font-semibold"
         />
       ) : (
-        <h3 className="text-[1rem] leading-snug break-words">
+        <div className="font-display text-[1rem] leading-snug font-semibold break-words">
           {title || <span className="font-normal text-ink-faint">{tag.text ? '' : 'An empty tag'}</span>}
-        </h3>
+        </div>
       )}
       {planned && planned.look.name !== title && <div className="text-xs text-ink-soft">{planned.look.name}</div>}
       {tag.text !== '' && <p className="mt-1 break-words whitespace-pre-wrap">{tag.text}</p>}

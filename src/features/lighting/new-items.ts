@@ -121,17 +121,24 @@ const PROPS = {
 } as const
 
 export function newProp(whole: WholeSetup, kind: (typeof PROP_KINDS)[number]): Prop {
-  const [x, , z] = facePoint(whole)
+  const face = facePoint(whole)
   const { name, widthM, heightM, colour } = PROPS[kind]
+  // Away from the main.
+  const main = whole.lights.find((light) => light.purpose === 'main')
+  const side = main && main.at[0] > face[0] ? -1 : 1
   const same = whole.props.filter((prop) => prop.kind === kind).length
   return {
     id: propIdSchema.parse(newId()),
     setupId: whole.setup.id,
     kind,
     name: same === 0 ? name : `${name} ${same + 1}`,
-    at: round([x + (kind === 'prop' ? 0.6 : 1.1), heightM / 2, z + (kind === 'prop' ? -0.2 : 0.7) + same * 0.3]),
+    at: round([
+      face[0] + side * (kind === 'prop' ? 0.6 : 1.1),
+      heightM / 2,
+      face[2] + (kind === 'prop' ? -0.2 : 0.7) + same * 0.3,
+    ]),
     // Facing the sitter.
-    turnDeg: kind === 'prop' ? 0 : 57,
+    turnDeg: kind === 'prop' ? 0 : side * 57,
     widthM,
     heightM,
     colour,

@@ -8,6 +8,8 @@ import { lightingQueries } from './queries.ts'
 export type Kit = {
   units: LightUnit[]
   modifiers: LightModifier[]
+  /** Panels and flags that stand on their own. */
+  panels: LightModifier[]
   gels: LightGel[]
   supports: LightSupport[]
   /** Newest version in the kit room by id; unknown ids are no longer there. */
@@ -18,6 +20,7 @@ export type Kit = {
 function sortKit(kit: readonly KitItem[]): Omit<Kit, 'state'> {
   const units: LightUnit[] = []
   const modifiers: LightModifier[] = []
+  const panels: LightModifier[] = []
   const gels: LightGel[] = []
   const supports: LightSupport[] = []
   for (const { id: kitId, version, name, body } of kit) {
@@ -27,7 +30,8 @@ function sortKit(kit: readonly KitItem[]): Omit<Kit, 'state'> {
         units.push({ ...own, numbers: body.numbers })
         break
       case 'modifier':
-        modifiers.push({ ...own, numbers: body.numbers })
+        if (body.numbers.shape === 'panel') panels.push({ ...own, numbers: body.numbers })
+        else modifiers.push({ ...own, numbers: body.numbers })
         break
       case 'gel':
         gels.push({ ...own, numbers: body.numbers })
@@ -37,7 +41,7 @@ function sortKit(kit: readonly KitItem[]): Omit<Kit, 'state'> {
         break
     }
   }
-  return { units, modifiers, gels, supports, versions: new Map(kit.map((item) => [item.id, item.version])) }
+  return { units, modifiers, panels, gels, supports, versions: new Map(kit.map((item) => [item.id, item.version])) }
 }
 
 /** The studio's kit, sorted into what a light is made of. */

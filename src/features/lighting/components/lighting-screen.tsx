@@ -1,8 +1,6 @@
 import { useState } from 'react'
 import { useNavigate } from 'react-router-dom'
 import type { WholeSetup } from '#shared/domain/plan/read-plan.ts'
-import { putItems, removeItems } from '#shared/realtime/collection.ts'
-import { lights, props, setups, sitterPlaces } from '#shared/realtime/documents.ts'
 import { useDoc, useMayWrite, useShoot } from '#src/realtime/shoot-realtime.tsx'
 import { usePlan } from '#src/realtime/use-plan.ts'
 import { useUndo } from '#src/realtime/use-undo.ts'
@@ -13,6 +11,7 @@ import { ScreenBar } from '#src/ui/screen-bar.tsx'
 import { toast } from '#src/ui/toast.ts'
 import { copyOf, newSetup } from '../new-items.ts'
 import { setupUse } from '../setup-use.ts'
+import { putSetup, removeSetup, restoreSetup } from '../write-setups.ts'
 import { SetupCard } from './setup-card.tsx'
 
 /** All setups of the shoot. */
@@ -33,35 +32,28 @@ export function LightingScreen() {
     if (!names.has(wanted)) return wanted
     for (let number = 2; ; number++) if (!names.has(`${wanted} ${number}`)) return `${wanted} ${number}`
   }
+  function step(write: () => void) {
+    undo.stop()
+    write()
+    undo.stop()
+  }
   function add() {
     const { setup, place } = newSetup(freeName(`Setup ${all.length + 1}`), ranks, Math.random)
-    undo.stop()
-    putItems(doc, setups, [setup], Math.random)
-    putItems(doc, sitterPlaces, [place], Math.random)
-    undo.stop()
+    step(() => putSetup(doc, { setup, places: [place], lights: [], props: [] }))
     void navigate(address(setup.id))
   }
   function duplicate(whole: WholeSetup) {
     const copy = copyOf(whole, freeName(`${whole.setup.name}, variation`.slice(0, 76)), ranks, Math.random)
-    undo.stop()
-    putItems(doc, setups, [copy.setup], Math.random)
-    putItems(doc, lights, copy.lights, Math.random)
-    putItems(doc, sitterPlaces, copy.places, Math.random)
-    putItems(doc, props, copy.props, Math.random)
-    undo.stop()
+    step(() => putSetup(doc, copy))
     toast.say(`“${copy.setup.name}” is a setup of its own now.`)
   }
   function remove(whole: WholeSetup) {
-    const nowMs = Date.now()
-    const ids = (items: readonly { id: string }[]) => items.map((item) => item.id)
-    undo.stop()
-    removeItems(doc, lights, ids(whole.lights), nowMs)
-    removeItems(doc, sitterPlaces, ids(whole.places), nowMs)
-    removeItems(doc, props, ids(whole.props), nowMs)
-    removeItems(doc, setups, [whole.setup.id], nowMs)
-    undo.stop()
+    step(() => removeSetup(doc, whole))
     setRemoving(null)
-    toast.say(`“${whole.setup.name}” is removed.`, { label: 'Undo', onPress: undo.undo })
+    toast.say(`“${whole.setup.name}” is removed.`, {
+      label: 'Undo',
+      onPress: () => step(() => restoreSetup(doc, whole)),
+    })
   }
 
   const losing = removing ? setupUse(plan, removing.setup.id).shots : []

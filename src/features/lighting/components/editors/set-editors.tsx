@@ -5,6 +5,7 @@ import { Button } from '#src/ui/button.tsx'
 import { Field } from '#src/ui/field.tsx'
 import { NumberInput } from '#src/ui/number-input.tsx'
 import { Select } from '#src/ui/select.tsx'
+import type { Kit } from '../../use-kit.ts'
 import type { SetupWriter } from '../../use-setup-writer.ts'
 import { ColourInput } from './colour-input.tsx'
 import { CommitInput } from './commit-input.tsx'
@@ -145,9 +146,9 @@ export function PlaceEditor({ place, sitters, writer, mayWrite, onBack, onGone }
   )
 }
 
-type PropEditorProps = Common & { prop: Prop; onGone: () => void }
+type PropEditorProps = Common & { prop: Prop; kit: Kit; onGone: () => void }
 
-export function PropEditor({ prop, writer, mayWrite, onBack, onGone }: PropEditorProps) {
+export function PropEditor({ prop, kit, writer, mayWrite, onBack, onGone }: PropEditorProps) {
   const patch = (change: Parameters<SetupWriter['patchProp']>[1]) => writer.patchProp(prop.id, change)
   return (
     <EditorFrame
@@ -173,8 +174,8 @@ export function PropEditor({ prop, writer, mayWrite, onBack, onGone }: PropEdito
         <Field label="Kind">
           <Select
             options={[
-              { value: 'panel', label: 'Panel that gives light back' },
-              { value: 'flag', label: 'Flag that takes light away' },
+              { value: 'panel', label: 'Panel' },
+              { value: 'flag', label: 'Flag' },
               { value: 'prop', label: 'Part of the set' },
             ]}
             value={prop.kind}
@@ -218,6 +219,27 @@ export function PropEditor({ prop, writer, mayWrite, onBack, onGone }: PropEdito
           <ColourInput value={prop.colour} onCommit={(colour) => patch({ colour })} />
         </Field>
       </div>
+      {prop.kind !== 'prop' && kit.panels.length > 0 && (
+        <Field label="Name and size from the kit">
+          <Select
+            options={[
+              { value: '', label: 'Choose' },
+              ...kit.panels.map((item) => ({ value: String(item.kitId), label: item.name })),
+            ]}
+            value=""
+            onChange={(kitId) => {
+              const item = kit.panels.find((candidate) => candidate.kitId === kitId)
+              if (item)
+                patch({ name: item.name.slice(0, 80), widthM: item.numbers.widthM, heightM: item.numbers.heightM })
+            }}
+          />
+        </Field>
+      )}
+      {prop.kind === 'flag' && (
+        <p className="text-xs text-ink-soft">
+          Drawn, watched for the frame and counted in changeovers. What it shades is not worked out.
+        </p>
+      )}
       <FieldGroup title="Where its middle is, from the sitter’s mark">
         <PointFields point={prop.at} onChange={(at) => patch({ at })} />
       </FieldGroup>

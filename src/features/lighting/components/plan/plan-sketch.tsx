@@ -31,18 +31,21 @@ export function PlanSketch({ whole }: { whole: WholeSetup }) {
           view={view}
         />
       ))}
-      {whole.props.map((prop) => (
-        <g
-          key={prop.id}
-          transform={`translate(${toX(view, prop.at[0])} ${toZ(view, prop.at[2])}) rotate(${-prop.turnDeg})`}
-        >
-          <path
-            d={`M${(-prop.widthM / 2) * view.pxPerM} 0h${prop.widthM * view.pxPerM}`}
-            stroke="var(--color-draft)"
-            strokeWidth={prop.kind === 'prop' ? 1.5 : 3.5}
-          />
-        </g>
-      ))}
+      {whole.props.map((prop) => {
+        const half = (prop.widthM / 2) * view.pxPerM
+        return (
+          <g
+            key={prop.id}
+            transform={`translate(${toX(view, prop.at[0])} ${toZ(view, prop.at[2])}) rotate(${-prop.turnDeg})`}
+          >
+            {prop.kind === 'prop' ? (
+              <circle r={half} fill="none" stroke={prop.colour} strokeWidth={1.3} />
+            ) : (
+              <path d={`M${-half} 0h${half * 2}`} stroke="var(--color-draft)" strokeWidth={3.5} />
+            )}
+          </g>
+        )
+      })}
       {whole.places.map((place) => (
         <g
           key={place.id}

@@ -1,13 +1,13 @@
 import * as decoding from 'lib0/decoding'
 import { WebsocketProvider } from 'y-websocket'
 import * as Y from 'yjs'
-import { LOCAL_ORIGIN } from '#shared/realtime/collection.ts'
 import { COLLECTIONS, DOCUMENT_SCHEMA, type DocumentKind } from '#shared/realtime/documents.ts'
 import { CLOSE, type Hello, MESSAGE } from '#shared/realtime/protocol.ts'
 import { countAcknowledgements } from './acknowledgements.ts'
-import { openCache, rememberUnsent, unsentOf } from './local-cache.ts'
+import { openCache, rememberComplete, rememberUnsent, unsentOf, wasComplete } from './local-cache.ts'
 import { type SaveFacts, type SaveState, saveStateOf } from './save-state.ts'
 import { type Store, createStore } from './store.ts'
+import { createUndo } from './undo-manager.ts'
 
 export type OpenDocument = {
   kind: DocumentKind
@@ -109,7 +109,10 @@ export function openDocument({ kind, shootId, cacheName, onChanged }: Options): 
     update({ connected: status === 'connected' })
   })
   provider.on('sync', (synced) => {
-    if (synced) ready.set(true)
+    if (synced) {
+      rememberComplete(cacheName)
+      ready.set(true)
+    }
     update()
   })
   provider.on('closed', ({ code }) => {
@@ -147,13 +150,13 @@ export function openDocument({ kind, shootId, cacheName, onChanged }: Options): 
   void openCache(cacheName, doc).then((cache) => {
     if (destroyed) return
     update({ kept: cache !== undefined })
-    if (cache && doc.store.clients.size > 0) ready.set(true)
+    if (cache && (doc.store.clients.size > 0 || wasComplete(cacheName))) ready.set(true)
     provider.connect()
   })
 
-  const undo = new Y.UndoManager(
+  const undo = createUndo(
+    doc,
     Object.values(COLLECTIONS[kind]).map((c) => doc.getMap(c.root)),
-    { trackedOrigins: new Set([LOCAL_ORIGIN]), captureTimeout: 500 },
   )
 
   return {

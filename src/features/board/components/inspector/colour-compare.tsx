@@ -74,8 +74,9 @@ export function ColourCompare({ palette, prefer, without = '' }: ColourComparePr
   const wall = useItems('board', palettes)
   const [chosen, setChosen] = useState<string | null>(null)
   const targets = useMemo(() => targetsOf(plan, wall, without), [plan, wall, without])
+  const fallback = useMemo(() => nearestTarget(palette, targets), [palette, targets])
   const target =
-    targets.find(({ value }) => value === chosen) ?? targets.find(({ value }) => value === prefer) ?? targets[0]
+    targets.find(({ value }) => value === chosen) ?? targets.find(({ value }) => value === prefer) ?? fallback
   if (!target || palette.length === 0) return null
   const rows = target.colours.flatMap(({ name, hex }) => {
     const nearest = nearestIn(palette, hex)

@@ -63,6 +63,25 @@ export function rememberUnsent(name: string, unsent: number): void {
   }
 }
 
+const COMPLETE = 'sconce:complete:'
+
+/** Whether this device once had the whole document: an empty one is then known to be empty, not missing. */
+export function wasComplete(name: string): boolean {
+  try {
+    return localStorage.getItem(COMPLETE + name) !== null
+  } catch {
+    return false
+  }
+}
+
+export function rememberComplete(name: string): void {
+  try {
+    localStorage.setItem(COMPLETE + name, '1')
+  } catch {
+    // Storage is full or forbidden: the document opens with a signal only.
+  }
+}
+
 /** Own edits of this person that some cache on this device still holds. */
 export function unsentOnDevice(userId: string): number {
   return registered()
@@ -73,6 +92,7 @@ export function unsentOnDevice(userId: string): number {
 /** Forgets one cache, after its document has been closed. */
 export function forgetCache(name: string): Promise<void> {
   rememberUnsent(name, 0)
+  localStorage.removeItem(COMPLETE + name)
   localStorage.setItem(REGISTRY, JSON.stringify(registered().filter((other) => other !== name)))
   return new Promise((resolve) => {
     const request = indexedDB.deleteDatabase(name)

@@ -18,7 +18,7 @@ export function Panel({ title, onClose, aside, children }: PanelProps) {
   if (isPhone) {
     return (
       <Sheet open onOpenChange={(open) => !open && onClose()} title={title}>
-        {aside && <div className="-mt-1 mb-2 flex justify-end">{aside}</div>}
+        {aside && <div className="absolute top-3.5 right-14">{aside}</div>}
         <div className="flex flex-col gap-4">{children}</div>
       </Sheet>
     )

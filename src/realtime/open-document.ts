@@ -1,6 +1,7 @@
 import * as decoding from 'lib0/decoding'
 import { WebsocketProvider } from 'y-websocket'
 import * as Y from 'yjs'
+import { type Collection, rootOf } from '#shared/realtime/collection.ts'
 import { COLLECTIONS, DOCUMENT_SCHEMA, type DocumentKind } from '#shared/realtime/documents.ts'
 import { CLOSE, type Hello, MESSAGE } from '#shared/realtime/protocol.ts'
 import { countAcknowledgements } from './acknowledgements.ts'
@@ -154,9 +155,10 @@ export function openDocument({ kind, shootId, cacheName, onChanged }: Options): 
     provider.connect()
   })
 
+  const collections: readonly Collection[] = Object.values(COLLECTIONS[kind])
   const undo = createUndo(
     doc,
-    Object.values(COLLECTIONS[kind]).map((c) => doc.getMap(c.root)),
+    collections.map((c) => rootOf(doc, c)),
   )
 
   return {

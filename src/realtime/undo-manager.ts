@@ -15,9 +15,14 @@ type StackEvent = {
   changedParentTypes: { values(): Iterable<readonly { target: unknown; changes: { keys: ReadonlyMap<string, FieldChange> } }[]> }
 }
 
+function replacedIn({ meta }: StackEvent['stackItem']): Replaced {
+  const known = meta.get(REPLACED)
+  // Nobody else writes under this name.
+  return known instanceof Map ? (known as Replaced) : new Map()
+}
+
 function rememberReplaced({ stackItem, changedParentTypes }: StackEvent): void {
-  const known = stackItem.meta.get(REPLACED)
-  const replaced: Replaced = known instanceof Map ? known : new Map()
+  const replaced = replacedIn(stackItem)
   stackItem.meta.set(REPLACED, replaced)
   const events = new Set([...changedParentTypes.values()].flat())
   for (const event of events) {
@@ -41,13 +46,8 @@ export function createUndo(doc: Y.Doc, roots: Y.Map<unknown>[]): Y.UndoManager {
   undo.on('stack-item-added', rememberReplaced)
   undo.on('stack-item-updated', rememberReplaced)
   undo.on('stack-item-popped', ({ stackItem }) => {
-    const replaced: unknown = stackItem.meta.get(REPLACED)
-    if (!(replaced instanceof Map)) return
     doc.transact(() => {
-      for (const [map, fields] of replaced) {
-        if (!(map instanceof Y.Map) || !(fields instanceof Map)) continue
-        for (const [key, value] of fields) if (!map.has(String(key))) map.set(String(key), value)
-      }
+      for (const [map, fields] of replacedIn(stackItem)) for (const [key, value] of fields) if (!map.has(key)) map.set(key, value)
     }, REFILL_ORIGIN)
   })
   return undo

@@ -1,61 +1,57 @@
-import type { ShotId } from '#shared/ids.ts'
 import { movedShots } from './objective.ts'
 import type { OrderProblem } from './problem.ts'
 import { type RuleKey, ruleKeys } from './rules.ts'
 import type { DaySchedule } from './schedule-types.ts'
 
-/** One order in the figures that are put side by side. Minutes, or clock minutes since midnight. */
+/** What one order costs, in the figures that two orders are compared by. Minutes since midnight for `wrapMin`. */
 export type OrderFigures = {
-  /** Minutes spent changing over, the first rigging included. */
-  changeoverMin: number
+  /** Minutes spent changing over: lights, sets, moves and waiting for wardrobe, the first rigging included. */
+  changingMin: number
+  /** Minutes in which everything is ready and waits for a window to open or a fixed time. */
+  heldMin: number
   lightingChanges: number
   roomMoves: number
   /** Changeovers in which the clock waits for wardrobe. */
   wardrobeOnClock: number
   wrapMin: number
-  /** Minutes sitters wait between their own shots. */
-  waitingMin: number
   /** Shots that end after the hard out. */
-  notMade: readonly ShotId[]
-  /** Rules kept and broken, one entry a rule however often it is broken. */
-  kept: readonly RuleKey[]
+  notMade: number
+  /** Rules, hours and the meal that are not kept, each once. */
   broken: readonly RuleKey[]
 }
 
 export type OrderComparison = {
   present: OrderFigures
   proposed: OrderFigures
-  /** Shots taken out and put elsewhere to get from one to the other. */
+  /** Shots taken out and put back to come from one to the other. */
   moved: number
-  /** Minutes earlier that the proposed order wraps; negative when later. */
-  savedMin: number
+  /** Rules among shots, hours of sitters and the meal that the proposed order keeps. */
+  kept: readonly RuleKey[]
 }
 
-/** The figures of one order of a problem. */
-export function orderFigures(problem: OrderProblem, day: DaySchedule): OrderFigures {
-  const faults = new Set(problem.faults.map((fault) => fault.key))
-  const broken = new Set(day.broken.map((rule) => rule.key))
-  const keys = [...new Set([...ruleKeys(problem), ...faults])]
+/** The figures of one order of a day. Changing and held minutes, shots and meal add up to wrap less lights-on. */
+export function orderFigures(schedule: DaySchedule): OrderFigures {
+  const heldMin = schedule.shots.reduce((sum, { changeover }) => sum + changeover.holdWaitMin, 0)
   return {
-    changeoverMin: day.changeoverMin,
-    lightingChanges: day.lightingChanges,
-    roomMoves: day.roomMoves,
-    wardrobeOnClock: day.wardrobeOnClock,
-    wrapMin: day.wrapMin,
-    waitingMin: day.waitingMin,
-    notMade: day.shots.filter((shot) => !shot.made).map((shot) => shot.shotId),
-    kept: keys.filter((key) => !broken.has(key)),
-    broken: keys.filter((key) => broken.has(key)),
+    changingMin: schedule.changeoverMin - heldMin,
+    heldMin,
+    lightingChanges: schedule.lightingChanges,
+    roomMoves: schedule.roomMoves,
+    wardrobeOnClock: schedule.wardrobeOnClock,
+    wrapMin: schedule.wrapMin,
+    notMade: schedule.shots.filter((shot) => !shot.made).length,
+    broken: [...new Set(schedule.broken.map(({ key }) => key))],
   }
 }
 
-/** Two orders of the same day side by side: as it stands, and as proposed. */
+/** Two orders of the same day side by side: the one as it stands and a proposed one. */
 export function compareOrders(problem: OrderProblem, present: DaySchedule, proposed: DaySchedule): OrderComparison {
-  const ids = (day: DaySchedule) => day.shots.map((shot) => shot.shotId)
+  const after = orderFigures(proposed)
+  const ids = (day: DaySchedule) => day.shots.map(({ shotId }) => shotId)
   return {
-    present: orderFigures(problem, present),
-    proposed: orderFigures(problem, proposed),
+    present: orderFigures(present),
+    proposed: after,
     moved: movedShots(ids(present), ids(proposed)),
-    savedMin: present.wrapMin - proposed.wrapMin,
+    kept: ruleKeys(problem).filter((key) => !after.broken.includes(key)),
   }
 }

@@ -1,0 +1,48 @@
+import { X } from 'lucide-react'
+import type { ReactNode } from 'react'
+import { IconButton } from '#src/ui/button.tsx'
+import { Sheet } from '#src/ui/sheet.tsx'
+import { useIsPhone } from '#src/ui/use-media.ts'
+
+export type PanelProps = {
+  title: string
+  onClose: () => void
+  /** Beside the title: a menu of what else can be done. */
+  aside?: ReactNode
+  children: ReactNode
+}
+
+/** What is chosen or proposed, docked beside the day; on phones a sheet. */
+export function Panel({ title, onClose, aside, children }: PanelProps) {
+  const isPhone = useIsPhone()
+  if (isPhone) {
+    return (
+      <Sheet open onOpenChange={(open) => !open && onClose()} title={title}>
+        {aside !== undefined && aside !== false && <div className="-mt-1 mb-2 flex justify-end">{aside}</div>}
+        <div className="flex flex-col gap-4">{children}</div>
+      </Sheet>
+    )
+  }
+  return (
+    <aside aria-label={title} className="flex min-h-0 w-[26.25rem] flex-none flex-col border-l border-hair bg-paper max-lg:w-[21rem]">
+      <header className="flex items-start gap-1 px-[22px] pt-4 pb-1.5">
+        <h2 className="min-w-0 flex-1 text-xl">{title}</h2>
+        {aside}
+        <IconButton label="Close" className="-mt-1.5 -mr-2" onClick={onClose}>
+          <X size={18} aria-hidden />
+        </IconButton>
+      </header>
+      <div className="flex min-h-0 flex-1 flex-col gap-4 overflow-y-auto px-[22px] pt-1 pb-8">{children}</div>
+    </aside>
+  )
+}
+
+/** A part of a panel under a name of its own. */
+export function PanelSection({ title, children }: { title: string; children: ReactNode }) {
+  return (
+    <section aria-label={title} className="border-t border-hair pt-3">
+      <h3 className="label-small mb-2 font-sans">{title}</h3>
+      <div className="flex flex-col gap-3">{children}</div>
+    </section>
+  )
+}

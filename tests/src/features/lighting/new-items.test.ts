@@ -1,0 +1,79 @@
+import { describe, expect, it } from 'vitest'
+import {
+  lightModifierSchema,
+  lightSchema,
+  lightUnitSchema,
+  propSchema,
+  setupSchema,
+  sitterPlaceSchema,
+} from '#shared/domain/lighting/schema.ts'
+import { elevationDeg } from '#shared/domain/lighting/softness.ts'
+import { changeActions } from '#shared/domain/lighting/changeover.ts'
+import { copyOf, duplicateLight, newLight, newProp, newSetup } from '#src/features/lighting/new-items.ts'
+import { MINUTES, OCTA, light, unit, whole } from '#tests/support/lighting-sample.ts'
+
+const make = { unit: lightUnitSchema.parse(unit()), modifier: lightModifierSchema.parse(OCTA), support: null }
+const half = () => 0.5
+
+describe('newLight', () => {
+  it('begins the main where the manuals begin: about 26° up and 45° to the side', () => {
+    // NAVEDTRA 14209; US Army subcourse SS0510: 4 ft away, 2 ft above the eyes.
+    const main = newLight(whole({}), { ...make, purpose: 'main' }, half)
+    expect(lightSchema.parse(main)).toEqual(main)
+    expect(Math.atan2(-main.at[0], main.at[2]) * (180 / Math.PI)).toBeCloseTo(45, 9)
+    const elevation = elevationDeg(main.at[1] - 1.5, Math.hypot(main.at[0], main.at[2]))
+    expect(elevation).toBeGreaterThan(18)
+    expect(elevation).toBeLessThan(27)
+  })
+  it('does not put a second light of a kind on the first, and takes the next letter', () => {
+    const first = newLight(whole({}), { ...make, purpose: 'rim' }, half)
+    const second = newLight(whole({ lights: [first] }), { ...make, purpose: 'rim' }, half)
+    const third = newLight(whole({ lights: [first, second] }), { ...make, purpose: 'rim' }, half)
+    expect(new Set([first, second, third].map((rim) => rim.at.join())).size).toBe(3)
+    expect([first.group, second.group, third.group]).toEqual(['A', 'B', 'C'])
+    expect(second.rank > first.rank).toBe(true)
+  })
+  it('points a background light at the wall', () => {
+    expect(newLight(whole({}), { ...make, purpose: 'background' }, half).aim[2]).toBe(-2)
+  })
+})
+
+describe('duplicateLight', () => {
+  it('copies a light beside itself and nothing for an unknown one', () => {
+    const main = light(1, { purpose: 'main', at: [-1, 2, 1], aim: [0, 1.5, 0] })
+    const setup = whole({ lights: [main] })
+    const copy = duplicateLight(setup, main.id, half)
+    expect(copy).toMatchObject({ at: [-0.5, 2, 1], power: main.power })
+    expect(copy?.id).not.toBe(main.id)
+    expect(duplicateLight(whole({}), main.id, half)).toBeNull()
+  })
+})
+
+describe('newProp', () => {
+  it('stands a panel away from the main, facing the sitter', () => {
+    const main = light(1, { purpose: 'main', at: [1, 2, 1], aim: [0, 1.5, 0] })
+    const panel = newProp(whole({ lights: [main] }), 'panel')
+    expect(propSchema.parse(panel)).toEqual(panel)
+    expect(panel.at[0]).toBeLessThan(0)
+    expect(panel.turnDeg).toBeLessThan(0)
+  })
+})
+
+describe('newSetup', () => {
+  it('has a camera, a wall and one sitter', () => {
+    const { setup, place } = newSetup('Setup 1', [], half)
+    expect(setupSchema.parse(setup)).toEqual(setup)
+    expect(sitterPlaceSchema.parse(place)).toEqual(place)
+  })
+})
+
+describe('copyOf', () => {
+  it('is a variation: new ids, and nothing to do between the two', () => {
+    const setup = whole({ lights: [light(1, { purpose: 'main', at: [-1, 2, 1], aim: [0, 1.5, 0] })], props: [{}] })
+    const copy = copyOf(setup, 'Variation', [setup.setup.rank], half)
+    expect(copy.setup.id).not.toBe(setup.setup.id)
+    expect(copy.lights[0]?.setupId).toBe(copy.setup.id)
+    expect(copy.lights[0]?.id).not.toBe(setup.lights[0]?.id)
+    expect(changeActions(setup, copy, { sameRoom: true, minutes: MINUTES })).toEqual([])
+  })
+})

@@ -75,8 +75,10 @@ export function Strip({ mayWrite }: { mayWrite: boolean }) {
           {shown.map((list) => (
             <Fragment key={list.id}>
               {several && (
-                <div className="h-[122px] flex-none border-l border-night-edge pl-2 text-xs leading-tight text-bone-soft [writing-mode:sideways-lr] first:border-l-0 first:pl-0">
-                  {nameOfList(list.id)}
+                <div className="grid h-[122px] flex-none place-items-center border-l border-night-edge pl-2">
+                  <span className="rotate-180 text-xs leading-tight text-bone-soft [writing-mode:vertical-rl]">
+                    {nameOfList(list.id)}
+                  </span>
                 </div>
               )}
               <List list={list} lists={lists} joints={before} mayWrite={mayWrite} nameOfList={nameOfList} />

@@ -83,11 +83,9 @@ export function withMoves(whole: WholeSetup, moves: Moves): WholeSetup {
   }
 }
 
-export const SNAP_M = 0.05
-
 /** To the nearest five centimetres, within the drawing's limits. */
 export function snap(metres: number, min = -50, max = 50): number {
-  return Math.min(max, Math.max(min, Math.round(metres / SNAP_M) * SNAP_M + 0))
+  return Math.min(max, Math.max(min, Math.round(metres * 20) / 20 + 0))
 }
 
 /** A point's place as told aloud: "1.2 m left, 1.1 m towards the camera, 1.6 m from the sitter". */

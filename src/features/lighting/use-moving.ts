@@ -1,4 +1,4 @@
-import { type KeyboardEvent, type PointerEvent, useRef, useState } from 'react'
+import { type KeyboardEvent, type PointerEvent, useEffect, useRef, useState } from 'react'
 import type { WholeSetup } from '#shared/domain/plan/read-plan.ts'
 import type { Point } from '#shared/domain/lighting/schema.ts'
 import { useSetPresence } from '#src/realtime/use-presence.ts'
@@ -89,6 +89,8 @@ export function useMoving({ whole, mayWrite, nameOf, onChoose, onDrop }: MovingI
   const [held, setHeld] = useState<Held | null>(null)
   const [said, setSaid] = useState('')
   const grip = useRef<Grip | null>(null)
+  // Nobody holds anything on a screen that is gone.
+  useEffect(() => () => setPresence({ moving: {} }), [setPresence])
 
   function hold(next: Held) {
     setHeld(next)

@@ -166,8 +166,7 @@ export function RowButton({ onPress, title, sub }: { onPress: () => void; title:
       onClick={onPress}
       className="block w-full rounded-r text-left hover:text-draft max-md:min-h-11"
     >
-      {title}{' '}
-      <span className="block text-xs text-ink-soft">{sub}</span>
+      {title} <span className="block text-xs text-ink-soft">{sub}</span>
     </button>
   )
 }

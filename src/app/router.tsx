@@ -64,6 +64,7 @@ const routes: RouteObject[] = [
               { path: 'sign-off', ...screen(() => import('./routes/sign-off.tsx')) },
               { path: 'lighting', ...screen(() => import('./routes/lighting.tsx')) },
               { path: 'lighting/:setupId', ...screen(() => import('./routes/setup.tsx')) },
+              { path: 'order', ...screen(() => import('./routes/order.tsx')) },
               { path: 'day', ...screen(() => import('./routes/day.tsx')) },
               { path: 'people', ...screen(() => import('./routes/people.tsx')) },
             ],

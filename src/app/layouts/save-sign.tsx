@@ -48,7 +48,7 @@ export function SaveSign({ tone }: SaveSignProps) {
           <button
             type="button"
             className={cn(
-              'flex items-center gap-2 rounded-r text-left text-xs leading-tight max-md:min-h-11 max-md:max-w-36 max-md:flex-row-reverse max-md:text-right',
+              'save-sign flex items-center gap-2 rounded-r text-left text-xs leading-tight max-md:min-h-11 max-md:max-w-36 max-md:flex-row-reverse max-md:text-right',
               tone === 'night' ? 'text-bone-soft hover:text-bone' : 'text-ink-soft hover:text-ink',
               isTrouble && (tone === 'night' ? '!font-semibold !text-glow-lit' : '!font-semibold !text-glow-ink'),
             )}
@@ -71,15 +71,15 @@ export function SaveSign({ tone }: SaveSignProps) {
   )
 }
 
-/** On phones, above the bottom bar: whatever the screen shows, trouble is never out of sight. */
-export function SaveTrouble() {
+/** On phones, above the bottom bar, where the screen itself carries no sign (the style sheet sees to that). */
+export function SaveStrip() {
   const state = useSaveState()
-  if (state.kind === 'saved' || state.kind === 'saving') return null
+  const isTrouble = state.kind === 'not-saved' || state.kind === 'reload'
   return (
-    <div className="on-night no-print flex items-center gap-2.5 border-b border-night-3 bg-night-2 px-[18px] py-2 text-[0.8125rem] leading-tight text-bone">
+    <div className="save-strip on-night no-print flex items-center gap-2.5 border-b border-night-3 bg-night-2 px-[18px] py-1.5 text-[0.8125rem] leading-tight text-bone-soft">
       <Lamp state={LAMPS[state.kind]} />
-      <span className="min-w-0 flex-1">
-        <b className="font-semibold">{WORDS[state.kind]}</b>
+      <span className={cn('min-w-0 flex-1', isTrouble && 'font-semibold text-glow-lit')}>
+        {WORDS[state.kind]}
         {state.kind === 'not-saved' && ` · ${state.why}`}
         {state.kind === 'offline' && state.unsent > 0 && ` · ${count(state.unsent, 'change')} to send`}
       </span>

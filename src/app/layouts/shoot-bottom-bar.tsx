@@ -6,7 +6,7 @@ import { Sheet } from '#src/ui/sheet.tsx'
 import type { SectionLink, Sections } from '../sections.ts'
 import { BottomBar, BottomLink, SpineLink } from './frame.tsx'
 import { HereNow } from './here-now.tsx'
-import { SaveTrouble } from './save-sign.tsx'
+import { SaveStrip } from './save-sign.tsx'
 
 export type ShootBottomBarProps = {
   root: string
@@ -26,7 +26,7 @@ export function ShootBottomBar({ root, sections, lamps, title, where }: ShootBot
   const inMore = ![...sections.onPhone].some((link) => pathname.startsWith(`${root}/${link.path}`))
   return (
     <div>
-      <SaveTrouble />
+      <SaveStrip />
       <BottomBar label="Shoot">
         {sections.onPhone.map((link) => {
           const lamp = lampOf(link)

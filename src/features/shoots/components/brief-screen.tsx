@@ -21,7 +21,7 @@ export function BriefScreen({ userId }: BriefScreenProps) {
     <>
       <ScreenBar title="Brief" sub={readOnly ? 'The photographer writes it' : `${count(pictures, 'picture')} promised · every line is saved when you leave it`} />
       <div className="px-3 pt-3 pb-12 md:px-6 md:pt-0">
-        <article className="grid max-w-6xl rounded-r border border-hair bg-paper shadow-print lg:grid-cols-[minmax(0,1.45fr)_minmax(0,1fr)]">
+        <article aria-label="The brief" {...(readOnly ? { tabIndex: 0 } : {})} className="grid max-w-6xl rounded-r border border-hair bg-paper shadow-print lg:grid-cols-[minmax(0,1.45fr)_minmax(0,1fr)]">
           <div className="flex flex-col gap-6 px-5 py-6 md:px-9 md:py-8">
             <BriefLine {...line} field="title" label="Title" textClass="font-display !text-3xl !leading-tight font-semibold" />
             <BriefLine {...line} field="client" label="Client" placeholder="Who the pictures are for" textClass="!text-lg" autoComplete="organization" />

@@ -195,7 +195,7 @@ function parseHello(text: string): Hello | undefined {
 function parseQueryKeys(text: string): string[][] {
   try {
     const keys: unknown = JSON.parse(text)
-    return Array.isArray(keys) ? keys.filter((key) => Array.isArray(key)) : []
+    return Array.isArray(keys) ? keys.filter((key): key is string[] => Array.isArray(key)) : []
   } catch {
     return []
   }

@@ -82,6 +82,8 @@ export class PrivateCluster {
   async #start() {
     const { pgData } = this.#place
     if (!existsSync(pgData)) {
+      this.#settings.isUnserved = true
+      writeSettings(this.#place, this.#settings)
       await step('Making the database', () =>
         makeCluster({ bin: this.#bin, data: pgData, password: this.#settings.adminPassword, sync: true }),
       )
@@ -121,9 +123,18 @@ export class PrivateCluster {
       const password = client.escapeLiteral(this.#settings.appPassword)
       const roles = await client.query('select 1 from pg_roles where rolname = $1', [DATABASE])
       await client.query(`${roles.rowCount === 0 ? 'create' : 'alter'} role ${DATABASE} login password ${password}`)
+      // A first start that was cut off leaves half a demo shoot behind, in a database nobody has ever seen.
+      if (this.#settings.isUnserved === true) await client.query(`drop database if exists ${DATABASE} with (force)`)
       const databases = await client.query('select 1 from pg_database where datname = $1', [DATABASE])
       if (databases.rowCount === 0) await client.query(`create database ${DATABASE} owner ${DATABASE}`)
     })
+  }
+
+  /** From now on the database holds what somebody relies on. */
+  keep() {
+    if (this.#settings.isUnserved !== true) return
+    delete this.#settings.isUnserved
+    writeSettings(this.#place, this.#settings)
   }
 
   /**

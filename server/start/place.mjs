@@ -56,7 +56,10 @@ export function openPlace() {
 /**
  * What is remembered between starts. Holds passwords, so only the owner may read it.
  *
- * @typedef {{ checkout: string, authSecret: string, adminPassword: string, appPassword: string, pgPort?: number, serverPid?: number }} Settings
+ * @typedef {{
+ *   checkout: string, authSecret: string, adminPassword: string, appPassword: string, pgPort?: number, serverPid?: number,
+ *   isUnserved?: boolean,
+ * }} Settings `isUnserved` from the making of the cluster until the server has once been ready on it
  *
  * @param {Place} place
  * @returns {Settings}

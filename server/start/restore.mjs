@@ -72,6 +72,7 @@ export async function restore(name, life) {
       await admin.query(`alter database ${present.database} rename to ${REPLACED}`)
       await admin.query(`alter database ${fresh.database} rename to ${present.database}`)
       await admin.query('commit')
+      cluster.keep()
       await admin.query(`drop database ${REPLACED} with (force)`)
     } catch (error) {
       await admin.query('rollback')

@@ -4,7 +4,7 @@ import { startVite } from './dev.mjs'
 import { ensurePackages } from './packages.mjs'
 import { isRoot, openPlace, readSettings, rootDir, shortHash, writeSettings } from './place.mjs'
 import { addressesFor, anyFreePort, isFree, nextFreePort } from './ports.mjs'
-import { Plain, pause, say } from './say.mjs'
+import { Plain, pause, say, step } from './say.mjs'
 import { Server, awaitOrphanedServer } from './serve.mjs'
 import { askHolder, tryHold } from './single.mjs'
 
@@ -37,8 +37,9 @@ export async function start({ isDev, ...life }) {
   const settings = readSettings(place)
   await awaitOrphanedServer(settings.serverPid)
   // The build needs no database, and the database no build.
+  const cluster = installation && new PrivateCluster(place, settings, installation.bin)
   const [databaseUrl] = await Promise.all([
-    external ?? openEmbedded(new PrivateCluster(place, settings, installation?.bin ?? ''), place, life),
+    cluster === undefined ? (external ?? '') : openEmbedded(cluster, place, life),
     isDev ? undefined : ensureBuilt(),
   ])
   if (external !== undefined) await reach(external)
@@ -55,14 +56,9 @@ export async function start({ isDev, ...life }) {
     settings.serverPid = pid
     writeSettings(place, settings)
   }
-  const publicUrl = await serve({
-    env,
-    isDev,
-    wanted,
-    onPid,
-    life,
-    onStopping: () => hold?.tell({ doing: 'stopping' }),
-  })
+  const onStopping = () => hold?.tell({ doing: 'stopping' })
+  const publicUrl = await serve({ env, isDev, wanted, onPid, life, onStopping })
+  cluster?.keep()
   hold?.tell({ doing: 'running', url: publicUrl, pgPort: settings.pgPort })
   say(`\nSconce is ready at ${publicUrl}`)
   if (external === undefined) await saySignIns(databaseUrl)
@@ -115,7 +111,7 @@ async function serve({ env, isDev, wanted, onPid, onStopping, life }) {
       await server.stop()
     })
     try {
-      await server.start()
+      await step('Starting the server', () => server.start())
     } catch (error) {
       // Somebody may have taken the port between our look and the server's.
       if (attempt < 5 && !(await isFree(serverPort, host))) continue

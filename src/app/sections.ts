@@ -28,3 +28,10 @@ export function sectionsFor(role: Role): Sections {
     ? { working: [BOARD, LOOKS, { ...SIGN_OFF, lamp: 'looks' }, ORDER], beside: [PEOPLE], onPhone: [BOARD, LOOKS, { ...SIGN_OFF, lamp: 'looks' }, ORDER] }
     : { working: [BRIEF, BOARD, LOOKS, LIGHTING, ORDER, DAY], beside: [SIGN_OFF, PEOPLE], onPhone: [BOARD, LOOKS, ORDER, DAY] }
 }
+
+const ALL: readonly SectionLink[] = [BRIEF, BOARD, LOOKS, LIGHTING, ORDER, DAY, SIGN_OFF, PEOPLE]
+
+/** The name of a section, also of one that a role is not led to and opens by its address. */
+export function sectionLabel(path: string): string | undefined {
+  return ALL.find((link) => link.path === path)?.label
+}

@@ -27,7 +27,8 @@ export function ShootRealtime({ shoot, userId, children, waiting }: ShootRealtim
   const [documents, setDocuments] = useState<ShootDocuments | null>(null)
 
   useEffect(() => {
-    const known: Record<string, number> = JSON.parse(epochs)
+    // Our own text from two lines above.
+    const known = JSON.parse(epochs) as Record<string, number>
     const onChanged = (keys: string[][]) => {
       for (const queryKey of keys) void queryClient.invalidateQueries({ queryKey })
     }
@@ -49,10 +50,20 @@ export function ShootRealtime({ shoot, userId, children, waiting }: ShootRealtim
       if (DOCUMENT_KINDS.some((kind) => opened[kind].save.get().kind === 'not-saved')) event.preventDefault()
     }
     window.addEventListener('beforeunload', handleUnload)
-    // A role that the server says differs from the one this page was drawn for: fetch the shoot again.
-    const stop = DOCUMENT_KINDS.map((kind) =>
-      opened[kind].hello.subscribe(() => void queryClient.invalidateQueries({ queryKey: ['shoots', shootId], exact: true })),
-    )
+    const stop = DOCUMENT_KINDS.map((kind) => {
+      const { hello } = opened[kind]
+      let isFirst = true
+      return hello.subscribe(() => {
+        const queryKey = ['shoots', shootId]
+        if (kind === 'board') {
+          // What this page holds may come from this device; after a pause, news of other things were missed as well.
+          void queryClient.invalidateQueries({ queryKey, exact: isFirst })
+          isFirst = false
+        } else if (hello.get()?.role !== queryClient.getQueryData<ShootView>(queryKey)?.role) {
+          void queryClient.invalidateQueries({ queryKey, exact: true })
+        }
+      })
+    })
     // eslint-disable-next-line react-hooks/set-state-in-effect -- sockets are opened here and nowhere else; this hands them to the screens
     setDocuments(opened)
     return () => {

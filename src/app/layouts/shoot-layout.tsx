@@ -8,7 +8,7 @@ import { ShootRealtime, useClosed, useShoot } from '#src/realtime/shoot-realtime
 import { ScreenBarAside } from '#src/ui/screen-bar.tsx'
 import { Waiting } from '#src/ui/waiting.tsx'
 import { Trouble } from '../error-view.tsx'
-import { sectionsFor } from '../sections.ts'
+import { sectionLabel, sectionsFor } from '../sections.ts'
 import { useSession } from '../session.ts'
 import { useReadiness } from '../use-readiness.ts'
 import { Frame, Spine, SpineLink } from './frame.tsx'
@@ -41,8 +41,7 @@ function OpenShoot() {
   useSayWhere(here)
   useSettlePictures()
   const lamps = new Map(readiness.map((section) => [section.section, section]))
-  const links = [...sections.working, ...sections.beside]
-  const label = links.find((link) => link.path === here)?.label
+  const label = sectionLabel(here)
   const trouble = closed === null ? null : closedWords(closed)
   if (trouble) return <Trouble {...trouble} />
   const where = [shoot.brief.date === null ? 'No date yet' : shortDate(shoot.brief.date), shoot.brief.location.name].filter((part) => part.trim() !== '').join(' · ')

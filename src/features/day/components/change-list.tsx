@@ -41,7 +41,7 @@ function ChangeRow({ row, done, onTick }: ChangeRowProps) {
         {row.detail !== '' && <span className="block text-[0.8125rem] text-bone-soft">{row.detail}</span>}
       </span>
       <input type="checkbox" className="sr-only" checked={done} disabled={!onTick} onChange={(event) => onTick?.(row.key, event.target.checked)} />
-      <span aria-hidden className={cn('grid size-7 flex-none place-items-center rounded-r border-[1.5px]', done ? 'border-glow-lit bg-glow-lit text-[#221]' : 'border-night-edge')}>
+      <span aria-hidden className={cn('grid size-7 flex-none place-items-center rounded-r border-[1.5px]', done ? 'border-glow-lit bg-glow-lit text-[#221]' : onTick ? 'border-night-edge' : 'invisible')}>
         {done && <Check size={18} strokeWidth={2.5} />}
       </span>
     </label>

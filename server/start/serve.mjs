@@ -102,6 +102,7 @@ export class Server {
   /** For development: drains it and starts it again with the sources as they are now. */
   restart() {
     this.#isRestarting = true
+    say('A source of the server changed; starting it again.')
     this.#child?.kill('SIGTERM')
   }
 

@@ -76,7 +76,7 @@ export function SaveStrip() {
   const state = useSaveState()
   const isTrouble = state.kind === 'not-saved' || state.kind === 'reload'
   return (
-    <div className="save-strip on-night no-print flex items-center gap-2.5 border-b border-night-3 bg-night-2 px-[18px] py-1.5 text-[0.8125rem] leading-tight text-bone-soft">
+    <aside aria-label="What is saved" className="save-strip on-night no-print flex items-center gap-2.5 border-b border-night-3 bg-night-2 px-[18px] py-1.5 text-[0.8125rem] leading-tight text-bone-soft">
       <Lamp state={LAMPS[state.kind]} />
       <span className={cn('min-w-0 flex-1', isTrouble && 'font-semibold text-glow-lit')}>
         {WORDS[state.kind]}
@@ -88,7 +88,7 @@ export function SaveStrip() {
           Load again
         </Button>
       )}
-    </div>
+    </aside>
   )
 }
 

@@ -8,7 +8,7 @@ import { toast } from '#src/ui/toast.ts'
 import { isTyping } from './gestures/keyboard.ts'
 import { removeSelected } from './gestures/keys.ts'
 import { type AddPictures, occupiedBy, roomForNew } from './use-add-pictures.ts'
-import { type WallControl, announce, selectedItems } from './wall-control.ts'
+import { announce, asStep, selectedItems, type WallControl } from './wall-control.ts'
 import type { WallItem } from './wall-item.ts'
 import { select } from './wall-state.ts'
 import { addCopies, addNote } from './write-board.ts'
@@ -80,9 +80,7 @@ function pasteItems(control: WallControl, text: string, shootId: string): boolea
   const near = overlaps(seen, bounds)
   const dx = near ? 24 : seen[0] + (seen[2] - bounds[2]) / 2 - bounds[0]
   const dy = near ? 24 : seen[1] + (seen[3] - bounds[3]) / 2 - bounds[1]
-  control.stopUndo()
-  const ids = addCopies(control.doc, entries, dx, dy, control.made())
-  control.stopUndo()
+  const ids = asStep(control, () => addCopies(control.doc, entries, dx, dy, control.made()))
   select(control.state, ids)
   control.state.focused.set(ids[0] ?? null)
   announce(control, `${control.nameOf(entries)} pasted`)
@@ -96,9 +94,7 @@ export function pasteText(control: WallControl, text: string): void {
   const lines = Math.ceil(words.length / 24)
   const [box] = arrangeNew([{ w: 230, h: Math.min(600, 26 + lines * 24) }], occupiedBy(control), start, width)
   if (!box || words === '') return
-  control.stopUndo()
-  const id = addNote(control.doc, box, words, control.made())
-  control.stopUndo()
+  const id = asStep(control, () => addNote(control.doc, box, words, control.made()))
   select(control.state, [id])
   control.state.focused.set(id)
   announce(control, 'The words are a note now')

@@ -2,7 +2,7 @@ import { useMemo } from 'react'
 import { arrangeNew } from '#shared/domain/board/arrange.ts'
 import { reveal } from '#shared/domain/board/view.ts'
 import { occupiedBy, roomForNew } from './use-add-pictures.ts'
-import { type WallControl, announce } from './wall-control.ts'
+import { announce, asStep, type WallControl } from './wall-control.ts'
 import { select, setView } from './wall-state.ts'
 import { addArea, addNote, addPalette, addTag } from './write-board.ts'
 
@@ -22,9 +22,7 @@ export function useNewThings(control: WallControl): NewThings {
       const { start, width } = roomForNew(control)
       const [box] = arrangeNew([size], occupiedBy(control), start, width)
       const { state } = control
-      control.stopUndo()
-      const id = add(box ?? [start.x, start.y, size.w, size.h])
-      control.stopUndo()
+      const id = asStep(control, () => add(box ?? [start.x, start.y, size.w, size.h]))
       select(state, [id])
       state.focused.set(id)
       if (box && state.viewport.get().widthPx > 0)

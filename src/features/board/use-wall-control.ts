@@ -11,7 +11,7 @@ import { type Store, createStore } from '#src/realtime/store.ts'
 import { useSetPresence } from '#src/realtime/use-presence.ts'
 import { type Undo, useUndo } from '#src/realtime/use-undo.ts'
 import { boardQueries } from './queries.ts'
-import { type PresencePatch, type WallControl, announce } from './wall-control.ts'
+import { type PresencePatch, type WallControl, announce, asStep } from './wall-control.ts'
 import { readWallItems } from './wall-item.ts'
 import { createWallState, setView } from './wall-state.ts'
 import { nameOfAll } from './words.ts'
@@ -49,9 +49,7 @@ function createControl(doc: Y.Doc, now: Store<Now>): WallControl {
       return { by: id, name, initials, atMs: Date.now() }
     },
     coverShot(shotId, frameId) {
-      control.stopUndo()
-      patchItem(doc, shots, shotId, { coverFrameId: frameId })
-      control.stopUndo()
+      asStep(control, () => patchItem(doc, shots, shotId, { coverFrameId: frameId }))
       announce(control, `Cover of shot ${now.get().plan.shots.get(shotId)?.shot.title ?? ''}`)
     },
     nameOf: (entries) => nameOfAll(entries, now.get().plan.looks),

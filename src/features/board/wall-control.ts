@@ -47,3 +47,11 @@ export function announce(control: WallControl, words: string): void {
   const again = control.state.announcement.get() === words
   control.state.announcement.set(again ? `${words}\u00a0` : words)
 }
+
+/** Does something as an undo step of its own. */
+export function asStep<T>(control: WallControl, write: () => T): T {
+  control.stopUndo()
+  const result = write()
+  control.stopUndo()
+  return result
+}

@@ -2,7 +2,7 @@ import { areaOf } from '#shared/domain/board/reading-order.ts'
 import { boundsOf, moveBox } from '#shared/domain/board/geometry.ts'
 import type { Box } from '#shared/domain/board/schema.ts'
 import { snapBox } from '#shared/domain/board/snap.ts'
-import { type WallControl, announce } from '../wall-control.ts'
+import { announce, asStep, type WallControl } from '../wall-control.ts'
 import type { WallItems } from '../wall-item.ts'
 import { wayWords } from '../words.ts'
 import { isDrawn } from '../wall-state.ts'
@@ -53,9 +53,7 @@ export function presentDrop(control: WallControl): void {
 export function dropHeld(control: WallControl, raise = false): boolean {
   const { state } = control
   const held = state.own.all()
-  control.stopUndo()
-  const written = held.size > 0 && control.mayWrite() && writeBoxes(control.doc, held, raise)
-  control.stopUndo()
+  const written = asStep(control, () => held.size > 0 && control.mayWrite() && writeBoxes(control.doc, held, raise))
   letGo(control)
   return written
 }

@@ -2,7 +2,7 @@ import type { Box } from '#shared/domain/board/schema.ts'
 import { boundsOf, moveBox } from '#shared/domain/board/geometry.ts'
 import { type Direction, byArea, nextInDirection } from '#shared/domain/board/reading-order.ts'
 import { reveal } from '#shared/domain/board/view.ts'
-import { type WallControl, announce, selectedItems } from '../wall-control.ts'
+import { announce, asStep, selectedItems, type WallControl } from '../wall-control.ts'
 import type { WallItem, WallItems } from '../wall-item.ts'
 import { select, setView } from '../wall-state.ts'
 import { wayWords } from '../words.ts'
@@ -133,9 +133,7 @@ export function removeSelected(control: WallControl): void {
       .slice(0, at)
       .reverse()
       .find(({ id }) => !gone.has(id))
-  control.stopUndo()
-  removeFromWall(control.doc, gone, Date.now())
-  control.stopUndo()
+  asStep(control, () => removeFromWall(control.doc, gone, Date.now()))
   select(control.state, [])
   control.state.focused.set(next?.id ?? null)
   announce(control, `${control.nameOf(entries)} removed. Ctrl+Z brings it back.`)
@@ -144,9 +142,7 @@ export function removeSelected(control: WallControl): void {
 export function duplicateSelected(control: WallControl): void {
   const entries = selectedItems(control)
   if (entries.length === 0 || !control.mayWrite()) return
-  control.stopUndo()
-  const ids = addCopies(control.doc, entries, COPY_OFFSET, COPY_OFFSET, control.made())
-  control.stopUndo()
+  const ids = asStep(control, () => addCopies(control.doc, entries, COPY_OFFSET, COPY_OFFSET, control.made()))
   select(control.state, ids)
   control.state.focused.set(ids[0] ?? null)
   announce(control, `${control.nameOf(entries)} copied`)

@@ -1,16 +1,14 @@
 import { ArrowDownToLine, ArrowUpToLine, Copy, Trash2 } from 'lucide-react'
 import { IconButton } from '#src/ui/button.tsx'
 import { duplicateSelected, removeSelected } from '../../gestures/keys.ts'
-import { useWall } from '../../wall-control.ts'
+import { asStep, useWall } from '../../wall-control.ts'
 import { restack } from '../../write-board.ts'
 
 /** What can be done with whatever is selected. */
 export function ArrangeBar({ stacks }: { stacks: boolean }) {
   const control = useWall()
   const stack = (to: 'front' | 'back') => {
-    control.stopUndo()
-    restack(control.doc, control.state.selection.get(), to)
-    control.stopUndo()
+    asStep(control, () => restack(control.doc, control.state.selection.get(), to))
   }
   return (
     <div role="group" aria-label="Arrange" className="-mx-1.5 flex gap-0.5">

@@ -6,7 +6,7 @@ import { frames, shots } from '#shared/realtime/documents.ts'
 import { Button } from '#src/ui/button.tsx'
 import { useBoardPlan } from '../../board-plan.ts'
 import { goTo } from '../../gestures/view-moves.ts'
-import { announce, useWall } from '../../wall-control.ts'
+import { announce, asStep, useWall } from '../../wall-control.ts'
 import { select } from '../../wall-state.ts'
 import { lookLabel } from '../../words.ts'
 import { addPalette } from '../../write-board.ts'
@@ -58,9 +58,9 @@ export function FrameInspector({ frame, mayWrite }: { frame: Frame; mayWrite: bo
       20,
     )
     if (!box) return
-    control.stopUndo()
-    const id = addPalette(doc, box, { title: frame.caption.slice(0, 100), colours: frame.palette }, control.made())
-    control.stopUndo()
+    const id = asStep(control, () =>
+      addPalette(doc, box, { title: frame.caption.slice(0, 100), colours: frame.palette }, control.made()),
+    )
     select(control.state, [id])
     goTo(control, box)
     announce(control, 'The palette hangs on the wall')

@@ -12,7 +12,7 @@ import {
 import { type Alignment, type Axis, align, distribute } from '#shared/domain/board/align.ts'
 import type { Box } from '#shared/domain/board/schema.ts'
 import { IconButton } from '#src/ui/button.tsx'
-import { announce, selectedItems, useWall } from '../../wall-control.ts'
+import { announce, asStep, selectedItems, useWall } from '../../wall-control.ts'
 import { writeBoxes } from '../../write-board.ts'
 
 const EDGES: readonly [Alignment, string, LucideIcon][] = [
@@ -32,9 +32,7 @@ const GAPS: readonly [Axis, string, LucideIcon][] = [
 export function ManyInspector({ count }: { count: number }) {
   const control = useWall()
   const write = (words: string, boxes: ReadonlyMap<string, Box>) => {
-    control.stopUndo()
-    writeBoxes(control.doc, boxes)
-    control.stopUndo()
+    asStep(control, () => writeBoxes(control.doc, boxes))
     announce(control, words)
   }
   return (

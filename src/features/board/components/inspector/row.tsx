@@ -91,7 +91,7 @@ export function ChoiceRow<Value extends string>({ label, value, options, mayWrit
           const chosen = options.find((option) => option.value === event.target.value)
           if (chosen) onWrite(chosen.value)
         }}
-        className={cn(QUIET, 'w-full min-w-0 text-ellipsis')}
+        className={cn(QUIET, 'w-full min-w-0 pl-0.5 text-ellipsis max-md:pl-2')}
       >
         {options.map((option) => (
           <option key={option.value} value={option.value}>

@@ -1,6 +1,8 @@
+import { useEffect, useRef } from 'react'
 import { byArea } from '#shared/domain/board/reading-order.ts'
 import { SwingTag } from '#src/ui/swing-tag.tsx'
 import { useBoardPlan } from '../../board-plan.ts'
+import { useStore } from '../../use-wall-state.ts'
 import { useWall } from '../../wall-control.ts'
 import type { WallItem, WallItems } from '../../wall-item.ts'
 import { select } from '../../wall-state.ts'
@@ -58,6 +60,15 @@ function Body({ entry }: { entry: WallItem }) {
 export function PhoneAreas({ items, onOpen }: { items: WallItems; onOpen: () => void }) {
   const control = useWall()
   const plan = useBoardPlan()
+  const list = useRef<HTMLDivElement>(null)
+  const focused = useStore(control.state.focused)
+  const shown = useRef(focused)
+  // What has just been pinned hangs below everything else: it is brought into sight.
+  useEffect(() => {
+    if (focused === shown.current) return
+    shown.current = focused
+    if (focused !== null) list.current?.querySelector(`[data-hung="${focused}"]`)?.scrollIntoView({ block: 'center' })
+  }, [focused])
   const all = [...items.values()]
   const groups = byArea(
     all.flatMap((entry) => (entry.kind === 'area' ? [entry] : [])),
@@ -68,7 +79,7 @@ export function PhoneAreas({ items, onOpen }: { items: WallItems; onOpen: () => 
     onOpen()
   }
   return (
-    <div className="pb-24">
+    <div ref={list} className="pb-24">
       {groups.map(({ area, items: hung }) => (
         <section
           key={area?.id ?? 'rest'}
@@ -90,6 +101,7 @@ export function PhoneAreas({ items, onOpen }: { items: WallItems; onOpen: () => 
               <button
                 key={entry.id}
                 type="button"
+                data-hung={entry.id}
                 aria-label={nameOf(entry, plan.looks)}
                 className="mb-2.5 block w-full break-inside-avoid"
                 onClick={() => open(entry.id)}

@@ -1,4 +1,4 @@
-import { DndContext, useDroppable } from '@dnd-kit/core'
+import { DndContext, DragOverlay, useDroppable } from '@dnd-kit/core'
 import { SortableContext, useSortable, verticalListSortingStrategy } from '@dnd-kit/sortable'
 import { CSS } from '@dnd-kit/utilities'
 import { GripVertical } from 'lucide-react'
@@ -12,6 +12,7 @@ import { minutesWords } from '../../words.ts'
 import type { ShotList } from '../../write-shots.ts'
 import { FramePicture } from '../frame-picture.tsx'
 import { AddShot } from '../strip/add-shot.tsx'
+import { CarriedShot } from '../strip/shot-face.tsx'
 import { ShotMenu } from '../strip/shot-menu.tsx'
 import { ShotTitle } from '../strip/shot-title.tsx'
 import { useNameOfList } from '../strip/use-name-of-list.ts'
@@ -36,7 +37,7 @@ function ShotRow({ planned, beforeMin, mayWrite, lists, nameOfList }: RowProps) 
     <li
       ref={setNodeRef}
       style={{ transform: CSS.Translate.toString(transform), transition }}
-      className={cn('relative', isDragging && 'z-10')}
+      className={cn('relative', isDragging && 'opacity-35')}
     >
       {beforeMin !== undefined && beforeMin > 0 && (
         <div className={cn('py-1 pl-[66px] text-[0.8125rem] text-glow-lit', isDragging && 'invisible')}>
@@ -96,7 +97,8 @@ export function PhoneShots({ mayWrite }: { mayWrite: boolean }) {
   const plan = useBoardPlan()
   const { before, totalMin } = useChangeovers(plan)
   const nameOfList = useNameOfList()
-  const { lists, context } = useStripSorting(nameOfList)
+  const { lists, activeId, context } = useStripSorting(nameOfList)
+  const carried = activeId === null ? undefined : plan.shots.get(activeId)
   const shown = lists.filter((list) => list.id !== LOOSE || list.shots.length > 0)
   return (
     <section aria-label="Shots, in order" className="on-night min-h-full bg-night px-3 pt-3 pb-8 text-bone">
@@ -131,6 +133,7 @@ export function PhoneShots({ mayWrite }: { mayWrite: boolean }) {
             </List>
           </div>
         ))}
+        <DragOverlay dropAnimation={null}>{carried && <CarriedShot planned={carried} />}</DragOverlay>
       </DndContext>
       {mayWrite && (
         <div className="pt-4">

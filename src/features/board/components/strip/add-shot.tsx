@@ -2,7 +2,7 @@ import { Plus } from 'lucide-react'
 import { type FormEvent, useState } from 'react'
 import { cn } from '#src/lib/cn.ts'
 import { Button } from '#src/ui/button.tsx'
-import { announce, useWall } from '../../wall-control.ts'
+import { announce, asStep, useWall } from '../../wall-control.ts'
 import { type ShotList, addShot } from '../../write-shots.ts'
 
 /** Writes down a shot: its title is all that is needed; it stands at the end of the first day. */
@@ -13,9 +13,7 @@ export function AddShot({ lists, className }: { lists: readonly ShotList[]; clas
     event.preventDefault()
     const words = title?.trim() ?? ''
     if (words === '') return
-    control.stopUndo()
-    addShot(control.doc, lists, words)
-    control.stopUndo()
+    asStep(control, () => addShot(control.doc, lists, words))
     announce(control, `Shot ${words} added`)
     setTitle('')
   }

@@ -8,7 +8,7 @@ import { useStore } from '../../use-wall-state.ts'
 import { useWall } from '../../wall-control.ts'
 import { minutesWords } from '../../words.ts'
 import type { ShotList } from '../../write-shots.ts'
-import { FramePicture } from '../frame-picture.tsx'
+import { ShotFace } from './shot-face.tsx'
 import { ShotMenu } from './shot-menu.tsx'
 import { ShotTitle } from './shot-title.tsx'
 
@@ -23,35 +23,29 @@ type ShotCardProps = {
 
 /** One shot of the strip, and the joint to the next. */
 export function ShotCard({ planned, jointMin, mayWrite, lists, nameOfList }: ShotCardProps) {
-  const { shot, number, cover } = planned
+  const { shot, number } = planned
   const { state } = useWall()
   const isOver = useStore(state.overShot, (id) => id === shot.id)
   const [renaming, setRenaming] = useState(false)
-  const { attributes, listeners, setNodeRef, setActivatorNodeRef, transform, transition, isDragging } = useSortable({
-    id: shot.id,
-    disabled: !mayWrite,
-  })
+  const sortable = useSortable({ id: shot.id, disabled: !mayWrite })
+  const { attributes, listeners, setNodeRef, setActivatorNodeRef, transform, transition, isDragging } = sortable
+  const isTarget = sortable.isOver
   return (
     <li
       ref={setNodeRef}
       data-shot-id={shot.id}
-      className={cn('group flex flex-none', isDragging && 'relative z-10')}
+      className={cn('group flex flex-none', isDragging && 'opacity-35')}
       style={{ transform: CSS.Translate.toString(transform), transition }}
       {...(renaming ? {} : listeners)}
     >
       <div className="w-28">
-        <div
+        <ShotFace
+          planned={planned}
           className={cn(
-            'relative h-[122px] overflow-hidden rounded-sm border border-night-3 bg-night-2',
-            isOver && 'outline-2 outline-glow-lit',
+            (isOver || (isTarget && !isDragging)) && 'outline-2 outline-glow-lit',
             mayWrite && 'cursor-grab',
-            isDragging && 'cursor-grabbing shadow-float',
           )}
         >
-          {cover && <FramePicture frame={cover} widthPx={112} className="size-full [&_img]:object-[50%_25%]" />}
-          <span className="absolute bottom-px left-1.5 font-display text-2xl font-semibold text-white [text-shadow:0_1px_4px_#000]">
-            {number ?? '–'}
-          </span>
           {isOver && (
             <span className="absolute inset-x-0 top-0 bg-glow-lit p-1 text-center text-xs font-semibold text-[#1f1508]">
               As cover
@@ -77,7 +71,7 @@ export function ShotCard({ planned, jointMin, mayWrite, lists, nameOfList }: Sho
               />
             </>
           )}
-        </div>
+        </ShotFace>
         <div onDoubleClick={() => mayWrite && setRenaming(true)}>
           <ShotTitle
             shot={shot}

@@ -1,11 +1,11 @@
 import { MoreHorizontal } from 'lucide-react'
 import { LOOSE, NEEDS, type Shot } from '#shared/domain/board/schema.ts'
-import { patchItem, removeItems } from '#shared/realtime/collection.ts'
+import { type Patch, patchItem, removeItems } from '#shared/realtime/collection.ts'
 import { shots } from '#shared/realtime/documents.ts'
 import { cn } from '#src/lib/cn.ts'
 import { Menu, type MenuItem } from '#src/ui/menu.tsx'
 import { toast } from '#src/ui/toast.ts'
-import { selectedItems, useWall } from '../../wall-control.ts'
+import { asStep, selectedItems, useWall } from '../../wall-control.ts'
 import { type ShotList, placeShot } from '../../write-shots.ts'
 
 type ShotMenuProps = {
@@ -23,15 +23,14 @@ export function ShotMenu({ shot, lists, nameOfList, onRename, className }: ShotM
   const control = useWall()
   const { doc } = control
   const own = lists.find((list) => list.shots.some(({ id }) => id === shot.id))
+  const patch = (change: Patch<typeof shots>) => asStep(control, () => patchItem(doc, shots, shot.id, change))
   const cover = () => {
     const frame = selectedItems(control).find((entry) => entry.kind === 'frame')
-    if (frame?.kind === 'frame') patchItem(doc, shots, shot.id, { coverFrameId: frame.item.id })
+    if (frame?.kind === 'frame') patch({ coverFrameId: frame.item.id })
     else toast.say('Select a frame on the wall first, or drag one onto the shot.')
   }
   const remove = () => {
-    control.stopUndo()
-    removeItems(doc, shots, [shot.id], Date.now())
-    control.stopUndo()
+    asStep(control, () => removeItems(doc, shots, [shot.id], Date.now()))
     toast.say(`“${shot.title}” was removed.`, { label: 'Undo', onPress: () => control.undo() })
   }
   const items: MenuItem[] = [
@@ -39,19 +38,19 @@ export function ShotMenu({ shot, lists, nameOfList, onRename, className }: ShotM
     { label: 'Selected frame as cover', onSelect: cover },
     ...(shot.coverFrameId === null
       ? []
-      : [{ label: 'Take the cover off', onSelect: () => patchItem(doc, shots, shot.id, { coverFrameId: null }) }]),
+      : [{ label: 'Take the cover off', onSelect: () => patch({ coverFrameId: null }) }]),
     'line',
     ...NEEDS.map((need) => ({
       label: NEED_WORDS[need],
       checked: shot.need === need,
-      onSelect: () => patchItem(doc, shots, shot.id, { need }),
+      onSelect: () => patch({ need }),
     })),
     'line',
     ...lists
       .filter((list) => list.id !== own?.id)
       .map((list) => ({
         label: list.id === LOOSE ? 'Put with the loose shots' : `Move to ${nameOfList(list.id)}`,
-        onSelect: () => placeShot(doc, list, shot.id, list.shots.at(-1)?.id ?? null),
+        onSelect: () => asStep(control, () => placeShot(doc, list, shot.id, list.shots.at(-1)?.id ?? null)),
       })),
     { label: 'Remove', danger: true, onSelect: remove },
   ]

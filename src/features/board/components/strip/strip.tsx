@@ -1,13 +1,15 @@
-import { DndContext, useDroppable } from '@dnd-kit/core'
+import { DndContext, DragOverlay, useDroppable } from '@dnd-kit/core'
 import { SortableContext, horizontalListSortingStrategy } from '@dnd-kit/sortable'
 import { Fragment } from 'react'
 import { LOOSE } from '#shared/domain/board/schema.ts'
+import { cn } from '#src/lib/cn.ts'
 import { useBoardPlan } from '../../board-plan.ts'
 import { useChangeovers } from '../../use-changeovers.ts'
 import { minutesWords } from '../../words.ts'
 import type { ShotList } from '../../write-shots.ts'
 import { AddShot } from './add-shot.tsx'
 import { ShotCard } from './shot-card.tsx'
+import { CarriedShot } from './shot-face.tsx'
 import { useNameOfList } from './use-name-of-list.ts'
 import { listDropId, useStripSorting } from './use-strip-sorting.ts'
 
@@ -24,7 +26,11 @@ function List({ list, lists, joints, mayWrite, nameOfList }: ListProps) {
   const { setNodeRef, isOver } = useDroppable({ id: listDropId(list.id) })
   return (
     <SortableContext items={list.shots.map((shot) => shot.id)} strategy={horizontalListSortingStrategy}>
-      <ol ref={setNodeRef} aria-label={nameOfList(list.id)} className="flex flex-none items-stretch">
+      <ol
+        ref={setNodeRef}
+        aria-label={nameOfList(list.id)}
+        className={cn('flex flex-none items-stretch', list.id === LOOSE && 'gap-3')}
+      >
         {list.shots.map((shot, index) => {
           const planned = plan.shots.get(shot.id)
           const next = list.shots[index + 1]
@@ -57,7 +63,8 @@ export function Strip({ mayWrite }: { mayWrite: boolean }) {
   const plan = useBoardPlan()
   const { before, totalMin } = useChangeovers(plan)
   const nameOfList = useNameOfList()
-  const { lists, context } = useStripSorting(nameOfList)
+  const { lists, activeId, context } = useStripSorting(nameOfList)
+  const carried = activeId === null ? undefined : plan.shots.get(activeId)
   const shown = lists.filter((list) => list.id !== LOOSE || list.shots.length > 0)
   const several = shown.length > 1
   const hint = [
@@ -89,6 +96,7 @@ export function Strip({ mayWrite }: { mayWrite: boolean }) {
             <p className="py-8 text-sm text-bone-soft">No shots are written down yet.</p>
           )}
         </div>
+        <DragOverlay dropAnimation={null}>{carried && <CarriedShot planned={carried} />}</DragOverlay>
       </DndContext>
     </section>
   )

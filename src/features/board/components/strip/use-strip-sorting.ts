@@ -12,7 +12,7 @@ import {
 import { sortableKeyboardCoordinates } from '@dnd-kit/sortable'
 import { useState } from 'react'
 import { useBoardPlan } from '../../board-plan.ts'
-import { useWall } from '../../wall-control.ts'
+import { asStep, useWall } from '../../wall-control.ts'
 import { type ShotList, dropBehind, listsOf, placeShot } from '../../write-shots.ts'
 
 const LIST = 'list:'
@@ -66,9 +66,9 @@ export function useStripSorting(nameOfList: (listId: string) => string) {
     const isOwnList = place.list.shots.some((shot) => shot.id === active.id)
     // Let go over the list around it: nothing was meant.
     if (place.shotId === null && isOwnList) return
-    control.stopUndo()
-    placeShot(control.doc, place.list, String(active.id), dropBehind(place.list, String(active.id), place.shotId))
-    control.stopUndo()
+    asStep(control, () =>
+      placeShot(control.doc, place.list, String(active.id), dropBehind(place.list, String(active.id), place.shotId)),
+    )
   }
 
   return {

@@ -20,8 +20,10 @@ export function createQueryClient(onSignedOut: () => void): QueryClient {
     defaultOptions: {
       queries: {
         staleTime: 10_000,
-        retry: (failures, error) => failures < 2 && !(error instanceof ApiError && !isAway(error)),
+        retry: (failures, error) => failures < 2 && navigator.onLine && !(error instanceof ApiError && !isAway(error)),
         networkMode: 'always',
+        // What was shown meanwhile may have come from this device.
+        refetchOnReconnect: 'always',
       },
       mutations: { networkMode: 'always' },
     },

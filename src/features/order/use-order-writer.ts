@@ -1,4 +1,5 @@
 import { useMemo } from 'react'
+import type { Shot } from '#shared/domain/board/schema.ts'
 import type { PlannedShot } from '#shared/domain/plan/read-plan.ts'
 import type { Day, RuleBody, Set as ShootSet } from '#shared/domain/plan/schema.ts'
 import type { DayId, SetId, ShotId } from '#shared/ids.ts'
@@ -6,7 +7,7 @@ import { type Patch, addMember, patchItem, removeItems, removeMember, upsertItem
 import { days, moves, rules, sets, shotPlans, shots } from '#shared/realtime/documents.ts'
 import { useDoc, useMayWrite } from '#src/realtime/shoot-realtime.tsx'
 import { type Undo, useUndo } from '#src/realtime/use-undo.ts'
-import { addDay, addRule, addSet, addShot, copyShot, moveShot, placeAtEnd, writeSequence } from './write-order.ts'
+import { addDay, addRule, addSet, addShot, copyShot, listNow, moveShot, placeAtEnd, writeSequence } from './write-order.ts'
 
 /** The shots of a list in their order. */
 export type List = { id: string; shots: readonly PlannedShot[] }
@@ -16,11 +17,13 @@ export type OrderWriter = {
   mayPlan: boolean
   undo: Undo
   move(list: List, shotId: string, index: number): void
-  use(list: List, sequence: readonly ShotId[]): void
+  /** Puts the shots of a day into this order, whatever their order is now. */
+  use(dayId: string, sequence: readonly ShotId[]): void
   placeAtEnd(list: List, shotId: ShotId): void
   addShot(list: List, title: string): ShotId
   copyShot(list: List, of: PlannedShot): ShotId
   removeShot(shotId: ShotId): void
+  putShotBack(shot: Shot): void
   patchShot(shotId: ShotId, patch: Patch<typeof shots>): void
   patchPlan(shotId: ShotId, patch: Patch<typeof shotPlans>): void
   wear(shotId: ShotId, lookId: string): void
@@ -33,6 +36,7 @@ export type OrderWriter = {
   addSet(fields: Partial<ShootSet> & { name: string }): SetId
   patchSet(setId: SetId, patch: Patch<typeof sets>): void
   removeSet(setId: SetId): void
+  putSetBack(set: ShootSet): void
   setMove(moveId: string, minutes: number): void
 }
 
@@ -55,11 +59,17 @@ export function useOrderWriter(): OrderWriter {
     const listed = (list: List) => list.shots.map(({ shot }) => shot)
     return {
       move: (list: List, shotId: string, index: number) => step(() => moveShot(board, list.id, listed(list), shotId, index)),
-      use: (list: List, sequence: readonly ShotId[]) => step(() => writeSequence(board, list.id, listed(list), sequence)),
+      use(dayId: string, sequence: readonly ShotId[]) {
+        const now = listNow(board, dayId)
+        step(() => writeSequence(board, dayId, now, sequence.filter((id) => now.some((shot) => shot.id === id))))
+      },
       placeAtEnd: (list: List, shotId: ShotId) => step(() => placeAtEnd(board, list.id, listed(list), shotId)),
       addShot: (list: List, title: string) => step(() => addShot(docs, list.id, listed(list), title)),
       copyShot: (list: List, of: PlannedShot) => step(() => copyShot(docs, listed(list), of)),
       removeShot: (shotId: ShotId) => step(() => removeItems(board, shots, [shotId], Date.now())),
+      // Writing to something that was taken out brings it back.
+      putShotBack: ({ id, title, place }: Shot) => step(() => upsertItem(board, shots, { id, title, place })),
+      putSetBack: (set: ShootSet) => step(() => upsertItem(plan, sets, set)),
       patchShot: (shotId: ShotId, patch: Patch<typeof shots>) => step(() => void patchItem(board, shots, shotId, patch)),
       patchPlan: (shotId: ShotId, patch: Patch<typeof shotPlans>) => step(() => upsertItem(plan, shotPlans, { ...patch, id: shotId })),
       wear: (shotId: ShotId, lookId: string) => step(() => addMember(board, shots, shotId, 'lookIds', lookId, Math.random)),

@@ -3,7 +3,7 @@ import type { Shot } from '#shared/domain/board/schema.ts'
 import type { PlannedShot } from '#shared/domain/plan/read-plan.ts'
 import type { Day, RuleBody, Set as ShootSet } from '#shared/domain/plan/schema.ts'
 import { type DayId, type RuleId, type SetId, type ShotId, dayIdSchema, ruleIdSchema, setIdSchema, shotIdSchema } from '#shared/ids.ts'
-import { BIRTH_ORIGIN, LOCAL_ORIGIN, patchItem, putItems, upsertItem } from '#shared/realtime/collection.ts'
+import { BIRTH_ORIGIN, LOCAL_ORIGIN, patchItem, putItems, readAll, upsertItem } from '#shared/realtime/collection.ts'
 import { days, rules, sets, shotPlans, shots } from '#shared/realtime/documents.ts'
 import { type Placed, appendKey, byKey, keysToPlace } from '#shared/realtime/order-keys.ts'
 import { newId } from '#src/lib/new-id.ts'
@@ -45,6 +45,12 @@ export function writeSequence(board: Y.Doc, dayId: string, list: Listed, sequenc
     placed = placed.map((item) => ({ ...item, key: keys.get(item.id) ?? item.key })).sort(byKey)
   })
   writePlaces(board, dayId, changed)
+}
+
+/** The shots that stand on a day now, in their order. */
+export function listNow(board: Y.Doc, dayId: string): Shot[] {
+  const all = [...readAll(board, shots).items.values()].filter((shot) => shot.place[0] === dayId)
+  return all.sort((a, b) => byKey({ id: a.id, key: a.place[1] }, { id: b.id, key: b.place[1] }))
 }
 
 /** Puts a shot at the end of a day (or among those not placed yet). */

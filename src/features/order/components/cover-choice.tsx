@@ -33,7 +33,7 @@ export function CoverChoice({ planned, mayWrite, onChange }: CoverChoiceProps) {
           </Button>
         )}
       </div>
-      <Dialog wide open={isOpen} onOpenChange={setIsOpen} title="Choose the cover frame" description="From the pictures on the board." footer={cover && <Button onClick={() => choose(null)}>No cover</Button>}>
+      <Dialog wide open={isOpen} onOpenChange={setIsOpen} title="Choose the cover frame" description="From the pictures on the board." {...(cover ? { footer: <Button onClick={() => choose(null)}>No cover</Button> } : {})}>
         {frames.length === 0 ? (
           <p className="py-6 text-center text-ink-soft">There is no picture on the board yet. Pin one there first.</p>
         ) : (

@@ -15,7 +15,10 @@ import { SITTER_RAIL_PX, SitterHours } from './sitter-hours.tsx'
 const PX_PER_MIN = 2.6
 const HEAD_PX = 10
 const LABEL_PX = 17
-const GUTTER_PX = 178
+/** The least height in which a line of 12 px stands whole. */
+const FIT_PX = 13
+/** Room for what does not fit on the rail, by its width. */
+const GUTTER = 'clamp(150px, 22%, 300px)'
 
 export type DayRailProps = {
   plan: Plan
@@ -34,10 +37,10 @@ export function DayRail({ plan, shown, chosenId, mayMove, dropLine, onOpen }: Da
   const topOf = (atMin: number) => HEAD_PX + (atMin - day.lightsOnMin) * PX_PER_MIN
   const segments = segmentsOf(day)
   const heightOf = ({ startMin, endMin: to }: Segment) => Math.max(2, (to - startMin) * PX_PER_MIN - 1)
-  const beside = segments.filter((segment) => segment.kind !== 'shot' ? heightOf(segment) < LABEL_PX : heightOf(segment) < ONE_LINE_PX)
+  const beside = segments.filter((segment) => segment.kind !== 'shot' ? heightOf(segment) < FIT_PX : heightOf(segment) < ONE_LINE_PX)
   const tops = spreadLabels(beside.map((segment) => topOf(segment.startMin) + heightOf(segment) / 2 - LABEL_PX / 2), LABEL_PX)
   const sittersPx = problem.sitters.length * SITTER_RAIL_PX + (problem.sitters.length > 0 ? 12 : 0)
-  const gutterPx = beside.length > 0 ? GUTTER_PX : 0
+  const gutter = beside.length > 0 ? GUTTER : '0px'
   const hours = Array.from({ length: Math.floor(endMin / 60) - Math.ceil(day.lightsOnMin / 60) + 1 }, (_, k) => (Math.ceil(day.lightsOnMin / 60) + k) * 60)
   const brokenOf = (shotId: string) => day.broken.filter((rule) => rule.shotId === shotId).map(({ words }) => words)
   return (
@@ -52,7 +55,7 @@ export function DayRail({ plan, shown, chosenId, mayMove, dropLine, onOpen }: Da
           Hard out {clockLabel(day.hardOutMin)}
         </div>
       )}
-      <ol aria-label="The day in order" className="absolute inset-y-0 left-0" style={{ right: 12 + gutterPx + sittersPx }}>
+      <ol aria-label="The day in order" className="absolute inset-y-0 left-0" style={{ right: `calc(${12 + sittersPx}px + ${gutter})` }}>
         {segments.map((segment) => {
           const box = { top: topOf(segment.startMin), height: heightOf(segment) }
           if (segment.kind === 'shot') {
@@ -77,13 +80,13 @@ export function DayRail({ plan, shown, chosenId, mayMove, dropLine, onOpen }: Da
           }
           return (
             <li key={keyOf(segment)} className="absolute right-0 left-[76px]" style={box}>
-              <Between segment={segment} hands={planned.day.hands} isNarrow={box.height < LABEL_PX} />
+              <Between segment={segment} hands={planned.day.hands} heightPx={box.height} />
             </li>
           )
         })}
       </ol>
       {beside.map((segment, index) => (
-        <div key={keyOf(segment)} className="absolute flex items-center gap-1.5 text-xs" style={{ top: tops[index] ?? 0, height: LABEL_PX, right: 12 + sittersPx, width: GUTTER_PX - 6 }}>
+        <div key={keyOf(segment)} className="absolute flex items-center gap-1.5 text-xs" style={{ top: tops[index] ?? 0, height: LABEL_PX, right: 8 + sittersPx, width: GUTTER }}>
           <span aria-hidden className="w-2 flex-none border-t border-edge" />
           <GutterLabel segment={segment} plan={plan} hands={planned.day.hands} onOpen={onOpen} />
         </div>
@@ -101,10 +104,11 @@ function wordsOf(segment: Segment): string {
   return segment.kind === 'meal' ? 'Meal' : segment.kind === 'shot' ? '' : segment.words
 }
 
-type BetweenProps = { segment: Exclude<Segment, { kind: 'shot' }>; hands: number; isNarrow: boolean }
+type BetweenProps = { segment: Exclude<Segment, { kind: 'shot' }>; hands: number; heightPx: number }
 
 /** What lies between two shots; pressing a changeover spells it out. */
-function Between({ segment, hands, isNarrow }: BetweenProps) {
+function Between({ segment, hands, heightPx }: BetweenProps) {
+  const isNarrow = heightPx < FIT_PX
   const minutes = minutesLabel(segment.endMin - segment.startMin)
   if (segment.kind === 'meal' || segment.kind === 'wait') {
     return (
@@ -122,12 +126,12 @@ function Between({ segment, hands, isNarrow }: BetweenProps) {
   }
   return (
     <Hatch tone={segment.tone} className="h-full">
-      <Spelled segment={segment} hands={hands} className="flex size-full items-center gap-2 px-3.5 text-left text-xs hover:brightness-97">
+      <Spelled segment={segment} hands={hands} className="flex size-full items-center gap-2 px-3.5 text-left text-xs leading-[1.3] hover:brightness-97">
         {isNarrow ? (
           <span className="sr-only">{`${segment.words}, ${minutes}`}</span>
         ) : (
           <>
-            <span className="min-w-0 flex-1 truncate">{segment.words}</span>
+            <span className={cn('min-w-0 flex-1', heightPx >= 2.5 * LABEL_PX ? 'line-clamp-2' : 'truncate')}>{segment.words}</span>
             <b className="font-semibold whitespace-nowrap">{minutes}</b>
           </>
         )}

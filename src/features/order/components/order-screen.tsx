@@ -67,9 +67,10 @@ export function OrderScreen() {
 
   const use = (proposal: Proposal, comparison: OrderComparison) => {
     if (!list) return
-    writer.use(list, proposal.sequence)
+    const before = list.shots.map(({ shot }) => shot.id)
+    writer.use(list.id, proposal.sequence)
     asked.close()
-    toast.say(usedWords(comparison), { label: 'Undo', onPress: writer.undo.undo })
+    toast.say(usedWords(comparison), { label: 'Undo', onPress: () => writer.use(list.id, before) })
   }
 
   return (

@@ -9,15 +9,17 @@ export type PanelProps = {
   onClose: () => void
   /** Beside the title: a menu of what else can be done. */
   aside?: ReactNode
+  /** Stays in sight at the foot. */
+  footer?: ReactNode
   children: ReactNode
 }
 
 /** What is chosen or proposed, docked beside the day; on phones a sheet. */
-export function Panel({ title, onClose, aside, children }: PanelProps) {
+export function Panel({ title, onClose, aside, footer, children }: PanelProps) {
   const isPhone = useIsPhone()
   if (isPhone) {
     return (
-      <Sheet open onOpenChange={(open) => !open && onClose()} title={title}>
+      <Sheet open onOpenChange={(open) => !open && onClose()} title={title} footer={footer}>
         {aside !== undefined && aside !== false && <div className="-mt-1 mb-2 flex justify-end">{aside}</div>}
         <div className="flex flex-col gap-4">{children}</div>
       </Sheet>
@@ -33,6 +35,7 @@ export function Panel({ title, onClose, aside, children }: PanelProps) {
         </IconButton>
       </header>
       <div className="flex min-h-0 flex-1 flex-col gap-4 overflow-y-auto px-[22px] pt-1 pb-8">{children}</div>
+      {footer !== undefined && <footer className="flex gap-2 border-t border-hair px-[22px] py-3">{footer}</footer>}
     </aside>
   )
 }

@@ -84,12 +84,12 @@ type PhoneShotProps = {
 }
 
 function PhoneShot({ planned, startMin, minutes, broken, mayMove, dropSide, onOpen }: PhoneShotProps) {
-  const sortable = useSortable({ id: planned.shot.id, disabled: !mayMove })
+  const { attributes, listeners, setNodeRef, setActivatorNodeRef, transform, isDragging } = useSortable({ id: planned.shot.id, disabled: !mayMove })
   return (
     <li
-      ref={sortable.setNodeRef}
-      style={{ transform: CSS.Translate.toString(sortable.transform) }}
-      className={cn('relative flex items-stretch rounded-r border bg-print', broken === undefined ? 'border-hair' : 'border-glow', sortable.isDragging && 'z-20 opacity-90 shadow-float')}
+      ref={setNodeRef}
+      style={{ transform: CSS.Translate.toString(transform) }}
+      className={cn('relative flex items-stretch rounded-r border bg-print', broken === undefined ? 'border-hair' : 'border-glow', isDragging && 'z-20 opacity-90 shadow-float')}
     >
       <button type="button" onClick={onOpen} className="flex min-h-[66px] min-w-0 flex-1 items-stretch text-left">
         <span className="flex w-[62px] flex-none items-center justify-end pr-2.5 text-sm font-semibold">{clockLabel(startMin)}</span>
@@ -108,7 +108,7 @@ function PhoneShot({ planned, startMin, minutes, broken, mayMove, dropSide, onOp
           )}
         </span>
       </button>
-      {mayMove && <Handle lines name={handleName(planned)} sortable={sortable} className="w-11 flex-none" />}
+      {mayMove && <Handle lines name={handleName(planned)} nodeRef={setActivatorNodeRef} attributes={attributes} listeners={listeners} className="w-11 flex-none" />}
       {dropSide && <span aria-hidden className={cn('absolute inset-x-0 z-30 h-[3px] bg-velvet', dropSide === 'above' ? '-top-[3px]' : '-bottom-[3px]')} />}
     </li>
   )

@@ -7,6 +7,7 @@ import type { OrderProblem } from '#shared/domain/order/problem.ts'
 import { type Proposal, isBetter } from '#shared/domain/order/propose.ts'
 import { type RuleKey, ruleWords } from '#shared/domain/order/rules.ts'
 import { schedule } from '#shared/domain/order/schedule.ts'
+import type { DaySchedule } from '#shared/domain/order/schedule-types.ts'
 import { cn } from '#src/lib/cn.ts'
 import { useShoot } from '#src/realtime/shoot-realtime.tsx'
 import { Button } from '#src/ui/button.tsx'
@@ -60,7 +61,8 @@ type FoundProps = Omit<ProposalPanelProps, 'asked'> & {
   isStale: boolean
 }
 
-const STRIP_PX = 340
+/** High enough for twenty minutes to carry their words on a long day. */
+const STRIP_PX = 400
 
 function Found({ asked, problem, present, proposal, thinking, isStale, onUse, onOpenShot, onOpenDay }: FoundProps) {
   const { before, after, comparison, better } = useMemo(() => {
@@ -68,12 +70,22 @@ function Found({ asked, problem, present, proposal, thinking, isStale, onUse, on
     const second = schedule(problem, proposal.sequence)
     return { before: first, after: second, comparison: compareOrders(problem, first, second), better: isBetter(problem, proposal) }
   }, [problem, proposal])
-  const span = Math.max(before.wrapMin, after.wrapMin) - problem.lightsOnMin
-  const pxPerMin = Math.min(0.98, STRIP_PX / Math.max(1, span))
   const title = thinking === null ? proposalTitle(comparison, better, proposal.proven) : better ? 'A shorter day, so far' : 'Looking for a shorter day'
+  const footer = (
+    <>
+      <Button variant={better ? 'quiet' : 'plain'} onClick={asked.close}>
+        Leave it
+      </Button>
+      {better && (
+        <Button variant="primary" disabled={isStale} className="flex-1" onClick={() => onUse(proposal, comparison)}>
+          Use this order
+        </Button>
+      )}
+    </>
+  )
   return (
-    <Panel title={title} onClose={asked.close}>
-      <p className="-mt-3 text-xs text-ink-soft">{keptWords(problem, comparison)}</p>
+    <Panel title={title} onClose={asked.close} {...(thinking === null ? { footer } : {})}>
+      <p className=" text-xs text-ink-soft">{keptWords(problem, comparison)}</p>
       {isStale && (
         <Caution title="The plan has changed since this was worked out">
           <Button size="small" className="mt-1.5" onClick={() => asked.ask(present)}>
@@ -81,6 +93,33 @@ function Found({ asked, problem, present, proposal, thinking, isStale, onUse, on
           </Button>
         </Caution>
       )}
+      {thinking === null && !better ? (
+        <p>
+          The day as it stands spends {whole(comparison.present.changingMin)} minutes changing over and wraps at {clockLabel(comparison.present.wrapMin)}. Leave it as it is.
+        </p>
+      ) : (
+        <SideBySide problem={problem} before={before} after={after} comparison={comparison} />
+      )}
+      {thinking === null ? (
+        <>
+          <Broken proposal={proposal} problem={problem} comparison={comparison} onOpenShot={onOpenShot} onOpenDay={onOpenDay} />
+          <p className="text-xs text-ink-soft">{provenWords(proposal)}</p>
+        </>
+      ) : (
+        <Thinking share={thinking} onCancel={asked.close} onStop={better ? asked.stop : null} />
+      )}
+    </Panel>
+  )
+}
+
+type SideBySideProps = { problem: OrderProblem; before: DaySchedule; after: DaySchedule; comparison: OrderComparison }
+
+/** The figures and the strips of both orders. */
+function SideBySide({ problem, before, after, comparison }: SideBySideProps) {
+  const span = Math.max(before.wrapMin, after.wrapMin) - problem.lightsOnMin
+  const pxPerMin = Math.min(0.98, STRIP_PX / Math.max(1, span))
+  return (
+    <>
       <div className="grid grid-cols-[1fr_auto_1fr] items-baseline gap-x-3">
         <span className="label-small">As it stands</span>
         <ArrowRight size={14} aria-hidden className="self-center text-ink-faint" />
@@ -95,25 +134,7 @@ function Found({ asked, problem, present, proposal, thinking, isStale, onUse, on
         <ProposalStrip label="The day as proposed" problem={problem} day={after} pxPerMin={pxPerMin} />
       </div>
       <Table comparison={comparison} />
-      {thinking === null ? (
-        <>
-          <Broken proposal={proposal} problem={problem} comparison={comparison} onOpenShot={onOpenShot} onOpenDay={onOpenDay} />
-          <p className="text-xs text-ink-soft">{provenWords(proposal)}</p>
-          <div className="flex flex-col gap-2">
-            {better && (
-              <Button variant="primary" disabled={isStale} onClick={() => onUse(proposal, comparison)}>
-                Use this order
-              </Button>
-            )}
-            <Button variant={better ? 'quiet' : 'plain'} onClick={asked.close}>
-              Leave it
-            </Button>
-          </div>
-        </>
-      ) : (
-        <Thinking share={thinking} onCancel={asked.close} onStop={better ? asked.stop : null} />
-      )}
-    </Panel>
+    </>
   )
 }
 

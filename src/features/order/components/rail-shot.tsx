@@ -29,17 +29,17 @@ export const ONE_LINE_PX = 21
 
 /** One shot on the rail, as high as it is long. */
 export function RailShot({ planned, startMin, minutes, topPx, heightPx, broken, isChosen, isLate, mayMove, dropSide, onOpen }: RailShotProps) {
-  const sortable = useSortable({ id: planned.shot.id, disabled: !mayMove })
+  const { attributes, listeners, setNodeRef, setActivatorNodeRef, transform, isDragging } = useSortable({ id: planned.shot.id, disabled: !mayMove })
   const two = heightPx >= TWO_LINES_PX
   const one = heightPx >= ONE_LINE_PX
   const { title } = planned.shot
   return (
     <li
-      ref={sortable.setNodeRef}
-      style={{ top: topPx, height: heightPx, transform: CSS.Translate.toString(sortable.transform) }}
-      className={cn('absolute inset-x-0', sortable.isDragging && 'z-20 opacity-90')}
+      ref={setNodeRef}
+      style={{ top: topPx, height: heightPx, transform: CSS.Translate.toString(transform) }}
+      className={cn('absolute inset-x-0', isDragging && 'z-20 opacity-90')}
     >
-      {mayMove && <Handle name={handleName(planned)} sortable={sortable} className={cn('absolute top-1/2 left-[50px] w-6 -translate-y-1/2', two ? 'h-9' : 'h-6')} />}
+      {mayMove && <Handle name={handleName(planned)} nodeRef={setActivatorNodeRef} attributes={attributes} listeners={listeners} className={cn('absolute top-1/2 left-[50px] w-6 -translate-y-1/2', two ? 'h-9' : 'h-6')} />}
       <button
         type="button"
         onClick={onOpen}
@@ -47,7 +47,7 @@ export function RailShot({ planned, startMin, minutes, topPx, heightPx, broken, 
         className={cn(
           'absolute inset-y-0 right-0 left-[76px] flex items-center gap-3 overflow-hidden rounded-r border bg-print text-left hover:border-edge',
           isChosen ? 'border-velvet ring-1 ring-velvet' : broken.length > 0 || isLate ? 'border-glow' : 'border-hair',
-          sortable.isDragging && 'shadow-float',
+          isDragging && 'shadow-float',
         )}
       >
         {one && <Cover shot={planned} className={cn('h-full', two ? 'w-[74px]' : 'w-10')} />}

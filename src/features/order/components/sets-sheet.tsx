@@ -34,7 +34,7 @@ export function SetsSheet({ plan, writer, onClose }: SetsSheetProps) {
   const remove = (set: ShootSet) => {
     writer.removeSet(set.id)
     setRemoving(null)
-    toast.say(`“${set.name}” is taken out.`, { label: 'Undo', onPress: writer.undo.undo })
+    toast.say(`“${set.name}” is taken out.`, { label: 'Undo', onPress: () => writer.putSetBack(set) })
   }
 
   return (

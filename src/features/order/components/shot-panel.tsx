@@ -45,7 +45,7 @@ export function ShotPanel({ planned, plan, shown, lists, writer, onClose, onOpen
   const remove = () => {
     writer.removeShot(shot.id)
     onClose()
-    toast.say(`“${shot.title}” is taken out.`, { label: 'Undo', onPress: writer.undo.undo })
+    toast.say(`“${shot.title}” is taken out.`, { label: 'Undo', onPress: () => writer.putShotBack(shot) })
   }
   const moveTo = (target: List): MenuItem => {
     const dayIndex = plan.days.findIndex(({ day }) => day.id === target.id)
@@ -54,7 +54,7 @@ export function ShotPanel({ planned, plan, shown, lists, writer, onClose, onOpen
       label: day ? `Move to ${dayName(day, dayIndex)}` : 'Take off the day',
       onSelect: () => {
         writer.placeAtEnd(target, shot.id)
-        toast.say(`“${shot.title}” ${day ? `is now the last shot of ${dayName(day, dayIndex)}` : 'is not placed any more'}.`, { label: 'Undo', onPress: writer.undo.undo })
+        toast.say(`“${shot.title}” ${day ? `is now the last shot of ${dayName(day, dayIndex)}` : 'is not placed any more'}.`, { label: 'Undo', onPress: () => writer.patchShot(shot.id, { place: shot.place }) })
       },
     }
   }

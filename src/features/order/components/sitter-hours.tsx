@@ -9,7 +9,7 @@ export type SitterHoursProps = {
   topOf: (atMin: number) => number
 }
 
-export const SITTER_RAIL_PX = 22
+export const SITTER_RAIL_PX = 27
 
 /** When each sitter is here, as a thin rail each, and when they are in front of the camera, as the thick parts of it. */
 export function SitterHours({ problem, day, endMin, topOf }: SitterHoursProps) {

@@ -23,22 +23,41 @@ export type HandDay = {
   light?: (from: number, to: number) => number
 }
 
-export const ruleId = (number: number) => ruleIdSchema.parse(`00000000-0000-4000-8001-${String(number).padStart(12, '0')}`)
-export const sitterId = (number: number) => sitterIdSchema.parse(`00000000-0000-4000-8002-${String(number).padStart(12, '0')}`)
+export const ruleId = (number: number) =>
+  ruleIdSchema.parse(`00000000-0000-4000-8001-${String(number).padStart(12, '0')}`)
+export const sitterId = (number: number) =>
+  sitterIdSchema.parse(`00000000-0000-4000-8002-${String(number).padStart(12, '0')}`)
 
 /** A day to work out by hand, lights on at 9:00 (540). Shots are written by their index from 0; looks and sitters by name. */
 export function handDay(day: HandDay): OrderProblem {
-  const bare = plainDay(day.shots.map((shot) => shot.need ?? 'must'), day.hardOutMin ?? 1200)
-  const sitterNames = [...new Set([...Object.keys(day.sitters ?? {}), ...Object.values(day.looks ?? {}).map((look) => look.sitter)])]
+  const bare = plainDay(
+    day.shots.map((shot) => shot.need ?? 'must'),
+    day.hardOutMin ?? 1200,
+  )
+  const sitterNames = [
+    ...new Set([...Object.keys(day.sitters ?? {}), ...Object.values(day.looks ?? {}).map((look) => look.sitter)]),
+  ]
   const lookNames = Object.keys(day.looks ?? {})
   const sitters = sitterNames.map((name, index): ProblemSitter => {
     const sitter = day.sitters?.[name]
-    return { id: sitterId(index), name, hours: sitter?.hours ?? null, chairMin: sitter?.chairMin ?? 0, travelMin: sitter?.travelMin ?? 0 }
+    return {
+      id: sitterId(index),
+      name,
+      hours: sitter?.hours ?? null,
+      chairMin: sitter?.chairMin ?? 0,
+      travelMin: sitter?.travelMin ?? 0,
+    }
   })
   const looks = lookNames.map((name, index) => {
     const look = day.looks?.[name]
     const id = lookIdSchema.parse(`00000000-0000-4000-8003-${String(index).padStart(12, '0')}`)
-    return { id, sitter: sitterNames.indexOf(look?.sitter ?? ''), name, changeMin: look?.changeMin ?? 0, style: look?.style ?? '' }
+    return {
+      id,
+      sitter: sitterNames.indexOf(look?.sitter ?? ''),
+      name,
+      changeMin: look?.changeMin ?? 0,
+      style: look?.style ?? '',
+    }
   })
   const light = day.light ?? ((from: number) => (from < 0 ? 20 : 10))
   const transition = (from: number, to: number): Transition => {

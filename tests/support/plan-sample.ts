@@ -31,20 +31,34 @@ export const DOME = id(12)
 /** The items of a small shoot in two rooms, the gallery and the dome, as `readPlan` takes them. */
 export function planSample(sample: PlanSample): ReadPlanInput {
   const brief = briefSchema.parse({
-    title: 'Leaf and brass', zone: 'Europe/London', location: {}, deliverables: [],
-    rooms: [{ id: GALLERY, name: 'Long gallery' }, { id: DOME, name: 'Dome' }],
+    title: 'Leaf and brass',
+    zone: 'Europe/London',
+    location: {},
+    deliverables: [],
+    rooms: [
+      { id: GALLERY, name: 'Long gallery' },
+      { id: DOME, name: 'Dome' },
+    ],
   })
   const setups = (sample.setups ?? []).map((setupId) =>
     setupSchema.parse({
-      id: setupId, name: `Setup ${setupId.slice(-2)}`,
+      id: setupId,
+      name: `Setup ${setupId.slice(-2)}`,
       camera: { at: [0, 1.5, 3], focalMm: 85, fNumber: 8, iso: 100, shutterS: 0.005, whiteBalanceK: 5500 },
       background: { zM: -2, widthM: 4, heightM: 3, colour: '#806040' },
     }),
   )
   const lights = setups.map((setup, index) =>
     lightSchema.parse({
-      id: id(700 + index), setupId: setup.id, purpose: 'main', unit: unit(), modifier: OCTA, support: STAND, power: 0.25,
-      at: [1 + index, 1.8, 1], aim: [0, 1.5, 0],
+      id: id(700 + index),
+      setupId: setup.id,
+      purpose: 'main',
+      unit: unit(),
+      modifier: OCTA,
+      support: STAND,
+      power: 0.25,
+      at: [1 + index, 1.8, 1],
+      aim: [0, 1.5, 0],
     }),
   )
   return {
@@ -68,6 +82,9 @@ export function planSample(sample: PlanSample): ReadPlanInput {
   }
 }
 
-function byId<Schema extends z.ZodObject<{ id: z.ZodType<string> }>>(schema: Schema, items: readonly z.input<Schema>[] = []) {
+function byId<Schema extends z.ZodObject<{ id: z.ZodType<string> }>>(
+  schema: Schema,
+  items: readonly z.input<Schema>[] = [],
+) {
   return new Map(items.map((item) => schema.parse(item)).map((item) => [String(item.id), item]))
 }

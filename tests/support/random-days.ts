@@ -1,4 +1,13 @@
-import { dayIdSchema, lookIdSchema, roomIdSchema, ruleIdSchema, setIdSchema, setupIdSchema, shotIdSchema, sitterIdSchema } from '#shared/ids.ts'
+import {
+  dayIdSchema,
+  lookIdSchema,
+  roomIdSchema,
+  ruleIdSchema,
+  setIdSchema,
+  setupIdSchema,
+  shotIdSchema,
+  sitterIdSchema,
+} from '#shared/ids.ts'
 import type { OrderProblem, ProblemLook, ProblemShot, ProblemSitter, Transition } from '#shared/domain/order/problem.ts'
 import type { ProblemRule } from '#shared/domain/order/rules.ts'
 import { schedule } from '#shared/domain/order/schedule.ts'
@@ -33,33 +42,54 @@ export function randomDay(random: () => number, recipe: DayRecipe): OrderProblem
   const sitters: ProblemSitter[] = Array.from({ length: sitterCount }, (_, s) => {
     const from = 570 + 15 * upTo(6)
     const hours = recipe.hours !== false && random() < 0.4 ? ([from, from + 120 + 15 * upTo(20)] as const) : null
-    return { id: sitterIdSchema.parse(idOf(1, s)), name: `Sitter ${s}`, hours, chairMin: 5 * upTo(6), travelMin: 10 * upTo(3) }
+    return {
+      id: sitterIdSchema.parse(idOf(1, s)),
+      name: `Sitter ${s}`,
+      hours,
+      chairMin: 5 * upTo(6),
+      travelMin: 10 * upTo(3),
+    }
   })
   const looks: ProblemLook[] = []
   const looksOf = sitters.map((_, s) =>
     Array.from({ length: 1 + upTo(2) }, () => {
       const id = lookIdSchema.parse(idOf(2, looks.length))
-      return looks.push({ id, sitter: s, name: `Look ${looks.length}`, changeMin: 5 * upTo(4), style: String(upTo(1)) }) - 1
+      return (
+        looks.push({ id, sitter: s, name: `Look ${looks.length}`, changeMin: 5 * upTo(4), style: String(upTo(1)) }) - 1
+      )
     }),
   )
   const setups = recipe.setups ?? 3
   const sets = recipe.sets ?? 3
-  const places = Array.from({ length: sets }, (_, set) => ({ set, room: upTo(1), dressMin: 5 * upTo(2), strikeMin: 5 * upTo(2) }))
+  const places = Array.from({ length: sets }, (_, set) => ({
+    set,
+    room: upTo(1),
+    dressMin: 5 * upTo(2),
+    strikeMin: 5 * upTo(2),
+  }))
   const shots: ProblemShot[] = Array.from({ length: n }, (_, index) => {
     const place = pick(places)
     const setup = upTo(setups - 1)
     const wears = sitters.flatMap((_sitter, s) => {
       if (random() < 0.45) return []
       const own = looksOf[s] ?? []
-      return [{ sitter: s, firstLook: pick(own), lastLook: pick(own) }].map((wear) => (random() < 0.8 ? { ...wear, lastLook: wear.firstLook } : wear))
+      return [{ sitter: s, firstLook: pick(own), lastLook: pick(own) }].map((wear) =>
+        random() < 0.8 ? { ...wear, lastLook: wear.firstLook } : wear,
+      )
     })
     return {
       // Ids run against the order for every other shot, so that the last tier of the objective has something to do.
       id: shotIdSchema.parse(idOf(3, (index * 7 + 3) % 1000)),
-      number: index + 1, title: `Shot ${index + 1}`, minutes: 5 + 5 * upTo(7), need: pick(NEEDS),
-      setId: setIdSchema.parse(idOf(4, place.set)), setName: `Set ${place.set}`,
-      roomId: roomIdSchema.parse(idOf(5, place.room)), roomName: `Room ${place.room}`,
-      setupId: setupIdSchema.parse(idOf(6, setup)), setupName: `Setup ${setup}`,
+      number: index + 1,
+      title: `Shot ${index + 1}`,
+      minutes: 5 + 5 * upTo(7),
+      need: pick(NEEDS),
+      setId: setIdSchema.parse(idOf(4, place.set)),
+      setName: `Set ${place.set}`,
+      roomId: roomIdSchema.parse(idOf(5, place.room)),
+      roomName: `Room ${place.room}`,
+      setupId: setupIdSchema.parse(idOf(6, setup)),
+      setupName: `Setup ${setup}`,
       wears,
     }
   })
@@ -71,9 +101,13 @@ export function randomDay(random: () => number, recipe: DayRecipe): OrderProblem
     const after = places[placeIndex(to)]
     const sameSet = before?.set === after?.set
     const sameSetup = from !== null && setupIndex(from) === setupIndex(to) && before?.room === after?.room
-    const lightingMin = sameSetup ? 0 : (lightingOf[((from ? setupIndex(from) : -1) + 1) * setups + setupIndex(to)] ?? 0)
+    const lightingMin = sameSetup
+      ? 0
+      : (lightingOf[((from ? setupIndex(from) : -1) + 1) * setups + setupIndex(to)] ?? 0)
     return {
-      lightingMin, changesLight: lightingMin > 0, actions: 0,
+      lightingMin,
+      changesLight: lightingMin > 0,
+      actions: 0,
       moveMin: before && before.room !== after?.room ? 15 : 0,
       strikeMin: sameSet ? 0 : (before?.strikeMin ?? 0),
       dressMin: sameSet ? 0 : (after?.dressMin ?? 0),
@@ -81,7 +115,8 @@ export function randomDay(random: () => number, recipe: DayRecipe): OrderProblem
   }
   const most = recipe.rules ?? 2
   const rules: ProblemRule[] = []
-  const rule = (body: DistributiveOmit<ProblemRule, 'ruleId'>) => rules.push({ ...body, ruleId: ruleIdSchema.parse(idOf(7, rules.length)) })
+  const rule = (body: DistributiveOmit<ProblemRule, 'ruleId'>) =>
+    rules.push({ ...body, ruleId: ruleIdSchema.parse(idOf(7, rules.length)) })
   const shot = () => upTo(n - 1)
   for (let count = n > 1 ? upTo(most) : 0; count > 0; count--) {
     const one = shot()
@@ -97,7 +132,10 @@ export function randomDay(random: () => number, recipe: DayRecipe): OrderProblem
   const withMeal = recipe.meal ?? random() < 0.6
   return {
     dayId: dayIdSchema.parse(idOf(8, 0)),
-    shots, sitters, looks, lightsOnMin,
+    shots,
+    sitters,
+    looks,
+    lightsOnMin,
     hardOutMin: recipe.hardOutMin ?? 720 + 30 * upTo(14),
     meal: withMeal ? { minutes: 30 + 15 * upTo(1), latestAfterMin: 60 + 30 * upTo(5) } : null,
     hands: 2,
@@ -134,10 +172,14 @@ export function plannedDay(random: () => number, recipe: DayRecipe): OrderProble
   }
   const shotIds = hidden.flatMap((index) => bare.shots[index]?.id ?? [])
   const day = schedule({ ...bare, meal: null }, shotIds)
-  const timesOf = (place: number) => ({ startMin: day.shots[place]?.startMin ?? 0, endMin: day.shots[place]?.endMin ?? 0 })
+  const timesOf = (place: number) => ({
+    startMin: day.shots[place]?.startMin ?? 0,
+    endMin: day.shots[place]?.endMin ?? 0,
+  })
   const give = 60 + (bare.meal?.minutes ?? 0)
   const rules: ProblemRule[] = []
-  const rule = (body: DistributiveOmit<ProblemRule, 'ruleId'>) => rules.push({ ...body, ruleId: ruleIdSchema.parse(idOf(7, rules.length)) })
+  const rule = (body: DistributiveOmit<ProblemRule, 'ruleId'>) =>
+    rules.push({ ...body, ruleId: ruleIdSchema.parse(idOf(7, rules.length)) })
   const n = hidden.length
   for (let count = recipe.rules ?? 4; count > 0 && n > 2; count--) {
     const place = upTo(n - 2)
@@ -152,7 +194,9 @@ export function plannedDay(random: () => number, recipe: DayRecipe): OrderProble
     else rule({ kind: 'pin-clock', shot, atMin: Math.ceil(startMin), toleranceMin: give })
   }
   const sitters = bare.sitters.map((sitter, s): ProblemSitter => {
-    const places = hidden.flatMap((index, place) => (bare.shots[index]?.wears.some((wear) => wear.sitter === s) ? [place] : []))
+    const places = hidden.flatMap((index, place) =>
+      bare.shots[index]?.wears.some((wear) => wear.sitter === s) ? [place] : [],
+    )
     if (places.length === 0 || s % 2 === 1) return sitter
     const from = timesOf(Math.min(...places)).startMin - 60
     return { ...sitter, hours: [Math.floor(from), Math.ceil(timesOf(Math.max(...places)).endMin) + give] }

@@ -59,16 +59,25 @@ function breachOf(
   if (rule.kind === 'pin-clock') {
     const lateMin = where.startMin - rule.atMin
     if (lateMin <= rule.toleranceMin) return null
-    return { shot: rule.shot, words: `${name} starts at ${clockLabel(rule.atMin)}, but cannot before ${clockLabel(where.startMin)}, ${minutesLabel(lateMin)} late.` }
+    return {
+      shot: rule.shot,
+      words: `${name} starts at ${clockLabel(rule.atMin)}, but cannot before ${clockLabel(where.startMin)}, ${minutesLabel(lateMin)} late.`,
+    }
   }
   if (where.endMin <= rule.toMin) return null
   const late = minutesLabel(where.endMin - rule.toMin)
-  return { shot: rule.shot, words: `${name} lies between ${clockLabel(rule.fromMin)} and ${clockLabel(rule.toMin)}, but ends at ${clockLabel(where.endMin)}, ${late} late.` }
+  return {
+    shot: rule.shot,
+    words: `${name} lies between ${clockLabel(rule.fromMin)} and ${clockLabel(rule.toMin)}, but ends at ${clockLabel(where.endMin)}, ${late} late.`,
+  }
 }
 
 function firstOf(shots: readonly number[], placed: ReadonlyMap<number, Placed>): number {
   const here = shots.filter((shot) => placed.has(shot))
-  return here.reduce((first, shot) => ((placed.get(shot)?.at ?? 0) < (placed.get(first)?.at ?? 0) ? shot : first), here[0] ?? -1)
+  return here.reduce(
+    (first, shot) => ((placed.get(shot)?.at ?? 0) < (placed.get(first)?.at ?? 0) ? shot : first),
+    here[0] ?? -1,
+  )
 }
 
 function hoursBroken(problem: OrderProblem, shot: number, where: Placed | undefined): BrokenRule[] {

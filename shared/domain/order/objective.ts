@@ -30,7 +30,10 @@ export function objectiveOf(problem: OrderProblem, schedule: DaySchedule): Objec
     wrapMin: schedule.wrapMin,
     lightingChanges: schedule.lightingChanges,
     waitingMin: schedule.waitingMin,
-    moved: movedShots(problem.shots.map((shot) => shot.id), sequence),
+    moved: movedShots(
+      problem.shots.map((shot) => shot.id),
+      sequence,
+    ),
     sequence,
   }
 }

@@ -44,7 +44,8 @@ export function* proposalSteps(problem: OrderProblem, options: ProposeOptions): 
   const c = compile(problem)
   const run = new Run(problem, c)
   const small = c.n <= EXACT_SHOTS
-  yield* run.improve(options.seed, small ? Math.min(options.budget / 4, 1500 * c.n) : options.budget / 8)
+  const share = small ? Math.min(options.budget / 4, 1500 * c.n) : options.budget / 8
+  yield* run.improve(options.seed, c.n > LAYERS_MAX ? options.budget : share)
   if (run.best.score.broken > 0) yield* run.proveBreaches(options)
   let width = small ? Infinity : 2000
   for (let pass = 1; !run.proven && c.n <= LAYERS_MAX && run.spent < options.budget; pass++) {
@@ -53,7 +54,6 @@ export function* proposalSteps(problem: OrderProblem, options: ProposeOptions): 
     width *= 5
     yield* run.improve(options.seed + pass, Math.min(options.budget / 10, options.budget - run.spent))
   }
-  if (c.n > LAYERS_MAX) yield* run.improve(options.seed + 1, options.budget - run.spent)
   return run.proposal()
 }
 
@@ -88,7 +88,10 @@ class Run {
     this.problem = problem
     this.c = c
     this.leastWrap = leastWrapOf(c)
-    this.best = { order: problem.shots.map((_, shot) => shot), score: { broken: Infinity, must: 0, should: 0, wrap: Infinity, light: 0, wait: 0, lateMin: 0 } }
+    this.best = {
+      order: problem.shots.map((_, shot) => shot),
+      score: { broken: Infinity, must: 0, should: 0, wrap: Infinity, light: 0, wait: 0, lateMin: 0 },
+    }
     this.answer = this.answerOf(this.best)
   }
 
@@ -107,7 +110,10 @@ class Run {
     const whole = yield* this.layers(true, this.c.n <= EXACT_SHOTS ? Infinity : 50_000, options.budget / 2)
     if (!whole || this.best.score.broken === 0) return
     this.proven = false
-    const filter = findConflict(this.problem, { seed: options.seed, work: options.budget / 4 })
+    const filter = findConflict(this.problem, {
+      seed: options.seed,
+      work: this.c.n <= EXACT_SHOTS ? options.budget : options.budget / 4,
+    })
     for (;;) {
       const turn = filter.next()
       if (turn.done) {
@@ -143,7 +149,15 @@ class Run {
     if (this.answer.of !== this.best) this.answer = this.answerOf(this.best)
     const { sequence, objective } = this.answer
     const leastWrapMin = this.proven ? objective.wrapMin : Math.min(this.leastWrap, objective.wrapMin)
-    return { sequence, objective, proven: this.proven, leastWrapMin, gapMin: objective.wrapMin - leastWrapMin, conflict: this.conflict, spent: Math.round(this.spent) }
+    return {
+      sequence,
+      objective,
+      proven: this.proven,
+      leastWrapMin,
+      gapMin: objective.wrapMin - leastWrapMin,
+      conflict: this.conflict,
+      spent: Math.round(this.spent),
+    }
   }
 
   private take(known: Known): void {

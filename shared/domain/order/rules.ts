@@ -26,10 +26,7 @@ export type BrokenRule = {
 }
 
 /** The rules that hold among this day's shots, and those that cannot be kept because another day holds one of their shots. */
-export function problemRules(
-  plan: Plan,
-  planned: PlannedDay,
-): { rules: ProblemRule[]; faults: BrokenRule[] } {
+export function problemRules(plan: Plan, planned: PlannedDay): { rules: ProblemRule[]; faults: BrokenRule[] } {
   const at = new Map<string, number>(planned.shots.map((shot, index) => [shot.shot.id, index]))
   const dayOf = new Map<string, number>()
   plan.days.forEach((day, index) => day.shots.forEach((shot) => dayOf.set(shot.shot.id, index)))
@@ -46,7 +43,10 @@ export function problemRules(
       const first = living.find((id) => at.has(id))
       if (here.length > 1) rules.push({ ruleId, kind: 'together', shots: [...new Set(here)] })
       if (first !== undefined && here.length < living.length) {
-        fault(first, `${listLabel(living.map((id) => `“${titleOf(id)}”`))} belong together, but not all of them are on this day.`)
+        fault(
+          first,
+          `${listLabel(living.map((id) => `“${titleOf(id)}”`))} belong together, but not all of them are on this day.`,
+        )
       }
       continue
     }
@@ -104,7 +104,8 @@ export function ruleWords(problem: OrderProblem, key: RuleKey): string {
     return `The meal begins no later than ${clockLabel(latest)}`
   }
   const sitter = problem.sitters.find((candidate) => key === `hours:${candidate.id}`)
-  if (sitter?.hours) return `${sitter.name} is here from ${clockLabel(sitter.hours[0])} to ${clockLabel(sitter.hours[1])}`
+  if (sitter?.hours)
+    return `${sitter.name} is here from ${clockLabel(sitter.hours[0])} to ${clockLabel(sitter.hours[1])}`
   const rule = problem.rules.find((candidate) => key === `rule:${candidate.ruleId}`)
   if (!rule) return 'A rule that is no longer there'
   if (rule.kind === 'pin-place') return capital(`${shot(rule.shot)} stays ${placeLabel(rule.index)}`)

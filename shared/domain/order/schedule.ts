@@ -105,7 +105,17 @@ function takeStep(problem: OrderProblem, clock: Clock, before: number, shot: num
     const { chairMin, changeMin } = wardrobeWork(problem, fromLook, wear.firstLook)
     const seat = chairs.seat(freeMin[wear.sitter] ?? -Infinity, chairMin, clock.meal)
     const readyMin = doneAt(seat.endMin, changeMin, clock.meal)
-    return { sitter: wear.sitter, shot, fromLook, toLook: wear.firstLook, chair: seat.chair, chairMin, changeMin, beginMin: seat.beginMin, readyMin }
+    return {
+      sitter: wear.sitter,
+      shot,
+      fromLook,
+      toLook: wear.firstLook,
+      chair: seat.chair,
+      chairMin,
+      changeMin,
+      beginMin: seat.beginMin,
+      readyMin,
+    }
   })
   const readyMin = Math.max(-Infinity, ...turns.map((turn) => turn.readyMin))
   const startMin = Math.max(lightMin, readyMin, notBefore(problem, shot))

@@ -59,7 +59,11 @@ export class Chairs {
   }
 
   /** Seats somebody who is free at `freeMin` for `chairMin` minutes; returns chair, begin and end. */
-  seat(freeMin: number, chairMin: number, meal: MealBreak | null): { chair: number | null; beginMin: number; endMin: number } {
+  seat(
+    freeMin: number,
+    chairMin: number,
+    meal: MealBreak | null,
+  ): { chair: number | null; beginMin: number; endMin: number } {
     if (chairMin === 0 || this.freeMin === null) {
       return { chair: null, beginMin: freeMin, endMin: doneAt(freeMin, chairMin, meal) }
     }
@@ -79,7 +83,11 @@ export class Chairs {
  * The latest begin of each turn that still lets its shot start on time, with the chairs as they were given out: each
  * turn ends before its shot and leaves its chair to the next turn on it. `startMin` is the start of each turn's shot.
  */
-export function latestTurns(turns: readonly Turn[], startMin: (turn: Turn) => number, meal: MealBreak | null): number[] {
+export function latestTurns(
+  turns: readonly Turn[],
+  startMin: (turn: Turn) => number,
+  meal: MealBreak | null,
+): number[] {
   const begins = turns.map(() => 0)
   const takenFrom = new Map<number, number>()
   for (let at = turns.length - 1; at >= 0; at--) {

@@ -80,7 +80,9 @@ export function compile(problem: OrderProblem): Compiled {
       least[cell] = Math.max(at(delta, cell), sharedWork(problem, from, to))
     }
   }
-  const leastIn = Float64Array.from(all, (to) => Math.min(...rows.filter((from) => from !== to).map((from) => at(least, (from + 1) * n + to))))
+  const leastIn = Float64Array.from(all, (to) =>
+    Math.min(...rows.filter((from) => from !== to).map((from) => at(least, (from + 1) * n + to))),
+  )
   const looks = problem.looks.length
   const change = new Float64Array((looks + 1) * looks)
   const chair = new Float64Array((looks + 1) * looks)
@@ -92,13 +94,17 @@ export function compile(problem: OrderProblem): Compiled {
     }
   }
   const rules = problem.rules
-  const latestStart = all.map((shot) => rules.flatMap((rule) => (rule.kind === 'pin-clock' && rule.shot === shot ? [rule.atMin + rule.toleranceMin] : [])))
+  const latestStart = all.map((shot) =>
+    rules.flatMap((rule) => (rule.kind === 'pin-clock' && rule.shot === shot ? [rule.atMin + rule.toleranceMin] : [])),
+  )
   const latestEnd = all.map((shot) => [
     ...rules.flatMap((rule) => (rule.kind === 'window' && rule.shot === shot ? [rule.toMin] : [])),
     ...item(problem.shots, shot).wears.flatMap((wear) => problem.sitters[wear.sitter]?.hours?.[1] ?? []),
   ])
   const held = Float64Array.from(all, (shot) => Math.max(EVER, notBefore(problem, shot)))
-  const soonest = Float64Array.from(all, (shot) => Math.max(at(held, shot), ...item(problem.shots, shot).wears.map((wear) => firstReady(problem, wear.sitter))))
+  const soonest = Float64Array.from(all, (shot) =>
+    Math.max(at(held, shot), ...item(problem.shots, shot).wears.map((wear) => firstReady(problem, wear.sitter))),
+  )
   const byId = [...all].sort((a, b) => (item(problem.shots, a).id < item(problem.shots, b).id ? -1 : 1))
   const idRank = new Uint16Array(n)
   byId.forEach((shot, rank) => {
@@ -123,10 +129,16 @@ export function compile(problem: OrderProblem): Compiled {
     latestStart,
     latestEnd,
     timed: all.filter((shot) => item(latestStart, shot).length + item(latestEnd, shot).length > 0),
-    after: all.map((shot) => rules.flatMap((rule) => (rule.kind === 'after' && rule.shot === shot ? [rule.after] : []))),
-    places: all.map((shot) => rules.flatMap((rule) => (rule.kind === 'pin-place' && rule.shot === shot ? [placeOf(rule.index, n)] : []))),
+    after: all.map((shot) =>
+      rules.flatMap((rule) => (rule.kind === 'after' && rule.shot === shot ? [rule.after] : [])),
+    ),
+    places: all.map((shot) =>
+      rules.flatMap((rule) => (rule.kind === 'pin-place' && rule.shot === shot ? [placeOf(rule.index, n)] : [])),
+    ),
     together: rules.flatMap((rule) => (rule.kind === 'together' ? [rule.shots] : [])),
-    wears: problem.shots.map((shot) => shot.wears.map((wear) => ({ sitter: wear.sitter, first: wear.firstLook, last: wear.lastLook }))),
+    wears: problem.shots.map((shot) =>
+      shot.wears.map((wear) => ({ sitter: wear.sitter, first: wear.firstLook, last: wear.lastLook })),
+    ),
     sitters: problem.sitters.length,
     looks,
     available: Float64Array.from(problem.sitters, (sitter) => sitter.hours?.[0] ?? EVER),
@@ -143,7 +155,9 @@ function placeOf(index: number, n: number): number {
 
 /** When a sitter can be ready for a first look at the soonest. */
 function firstReady(problem: OrderProblem, sitter: number): number {
-  const work = problem.looks.flatMap((look, index) => (look.sitter === sitter ? [wardrobeWork(problem, -1, index)] : []))
+  const work = problem.looks.flatMap((look, index) =>
+    look.sitter === sitter ? [wardrobeWork(problem, -1, index)] : [],
+  )
   const least = Math.min(...work.map((minutes) => minutes.chairMin + minutes.changeMin))
   return (problem.sitters[sitter]?.hours?.[0] ?? EVER) + least
 }

@@ -15,13 +15,19 @@ const WIDTH = 200_000
  * rest still cannot be kept (deletion filter). Where the work allowed does not decide, the rule stays and the set is
  * not called minimal. Yields the work spent.
  */
-export function* findConflict(problem: OrderProblem, options: { seed: number; work: number }): Generator<number, Conflict> {
+export function* findConflict(
+  problem: OrderProblem,
+  options: { seed: number; work: number },
+): Generator<number, Conflict> {
   let keys = ruleKeys(problem)
   let minimal = true
   let spent = 0
   for (const key of [...keys]) {
     const without = keys.filter((other) => other !== key)
-    const answer = yield* canKeep(withOnlyRules(problem, new Set(without)), { seed: options.seed, work: options.work - spent })
+    const answer = yield* canKeep(withOnlyRules(problem, new Set(without)), {
+      seed: options.seed,
+      work: options.work - spent,
+    })
     spent += answer.spent
     if (answer.kind === 'no') keys = without
     if (answer.kind === 'unknown') minimal = false

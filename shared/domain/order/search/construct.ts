@@ -42,6 +42,10 @@ function costOf(c: Compiled, { from, shot, end, place, done, urgency }: Choice):
     const open = block.includes(from) && block.some((member) => at(done, member) === 0)
     if (open && !block.includes(shot)) cost += BREACH
   }
-  const latest = Math.min(...item(c.latestStart, shot), ...item(c.latestEnd, shot).map((end) => end - at(c.minutes, shot)), 1e4)
+  const latest = Math.min(
+    ...item(c.latestStart, shot),
+    ...item(c.latestEnd, shot).map((end) => end - at(c.minutes, shot)),
+    1e4,
+  )
   return cost + urgency * Math.max(0, latest - end)
 }

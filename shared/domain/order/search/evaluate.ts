@@ -13,7 +13,15 @@ export type Score = {
   lateMin: number
 }
 
-export const NO_SCORE: Score = { broken: Infinity, must: 0, should: 0, wrap: Infinity, light: 0, wait: 0, lateMin: Infinity }
+export const NO_SCORE: Score = {
+  broken: Infinity,
+  must: 0,
+  should: 0,
+  wrap: Infinity,
+  light: 0,
+  wait: 0,
+  lateMin: Infinity,
+}
 
 /** Works out whole orders (arrays of shot indices) on reused buffers. */
 export class Evaluator {
@@ -80,7 +88,14 @@ export class Evaluator {
 
 /** Less than zero when `a` is better in the tiers of a score. */
 export function compareScores(a: Score, b: Score): number {
-  return a.broken - b.broken || a.must - b.must || a.should - b.should || a.wrap - b.wrap || a.light - b.light || a.wait - b.wait
+  return (
+    a.broken - b.broken ||
+    a.must - b.must ||
+    a.should - b.should ||
+    a.wrap - b.wrap ||
+    a.light - b.light ||
+    a.wait - b.wait
+  )
 }
 
 /** Shots of an order that have to be moved to get it from the order as it stands (0, 1, 2 …). */

@@ -4,6 +4,9 @@ import { Evaluator, NO_SCORE, type Score, compareScores, compareTies } from './e
 import type { Known } from './layers.ts'
 import { seededRandom } from './random.ts'
 
+/** Units of work between two chances to stop. */
+const SLICE_WORK = 20_000
+
 /** Up to this many shots every local search looks at the tiers below the wrap; beyond, only that of the best order. */
 const TIES_SHOTS = 16
 
@@ -26,8 +29,8 @@ export function* improveOrders(
   let told = search.best
   let reported = 0
   while (search.spent < options.work && c.n > 1) {
-    search.round()
-    if (search.best !== told || search.spent - reported > 20_000) {
+    search.round(Math.min(options.work, search.spent + SLICE_WORK))
+    if (search.best !== told || search.spent - reported > SLICE_WORK) {
       told = search.best
       reported = search.spent
       yield { best: told, spent: search.spent }
@@ -56,6 +59,10 @@ class LocalSearch {
   private readonly ordered: boolean
   private readonly limit: Int16Array
   private limitStale = true
+  /** Where the present round began; null between rounds. */
+  private from: Known | null = null
+  private cursor = 0
+  private quiet = 0
   /** Whether moves that leave the wrap as it is are worked out too, for the tiers below it. */
   private tiesToo = true
 
@@ -63,7 +70,8 @@ class LocalSearch {
     this.c = c
     this.evaluator = new Evaluator(c)
     this.random = seededRandom(seed)
-    this.fixed = c.lightsOn + c.minutes.reduce((sum, minutes) => sum + minutes, 0) + (c.hasMeal && c.n > 1 ? c.mealMin : 0)
+    this.fixed =
+      c.lightsOn + c.minutes.reduce((sum, minutes) => sum + minutes, 0) + (c.hasMeal && c.n > 1 ? c.mealMin : 0)
     this.starts = [construct(c, 0), construct(c, 0.2), construct(c, 1), construct(c, 5)]
     this.precedes = new Uint8Array(c.n * c.n)
     c.after.forEach((shots, shot) => {
@@ -74,7 +82,8 @@ class LocalSearch {
     this.ordered = c.after.some((shots) => shots.length > 0)
     this.limit = new Int16Array(this.ordered ? c.n * width : 0)
     this.ways = new Float64Array(width * width)
-    for (let from = 0; from <= c.n; from++) for (let to = 0; to < c.n; to++) this.ways[from * width + to] = at(c.least, from * c.n + to)
+    for (let from = 0; from <= c.n; from++)
+      for (let to = 0; to < c.n; to++) this.ways[from * width + to] = at(c.least, from * c.n + to)
   }
 
   /** The order as it stands, and the seeded starts, none of them improved yet. */
@@ -89,31 +98,35 @@ class LocalSearch {
     }
   }
 
-  /** One local optimum, from a shaken order. */
-  round(): void {
-    const kept = { order: [...this.order], score: { ...this.score } }
-    if (this.stale > 0) this.shake()
-    this.descend()
+  /** Goes on towards the next local optimum, from a shaken order; stops early once `until` units are spent. */
+  round(until: number): void {
+    if (this.from === null) {
+      this.from = { order: [...this.order], score: { ...this.score } }
+      if (this.stale > 0) this.shake()
+      this.cursor = 0
+      this.quiet = 0
+    }
+    if (!this.descend(until)) return
+    const { from } = this
+    this.from = null
     this.tiesToo = this.c.n <= TIES_SHOTS
-    const ahead = this.compare(this.score, kept.score)
+    const ahead = this.compare(this.score, from.score)
     if (ahead < 0) this.stale = 1
     else {
       this.stale++
-      const limit = kept.score.wrap + (kept.score.wrap - this.c.lightsOn) * 0.004
-      const drift = this.score.broken === kept.score.broken && this.score.wrap <= limit && this.random() < 0.1
-      if (ahead > 0 && !drift) this.use(kept.order)
+      const limit = from.score.wrap + (from.score.wrap - this.c.lightsOn) * 0.004
+      const drift = this.score.broken === from.score.broken && this.score.wrap <= limit && this.random() < 0.1
+      if (ahead > 0 && !drift) this.use([...from.order])
     }
     if (this.stale > 60 + 4 * this.c.n) this.polish()
   }
 
-  /** Back to the best order, and below its wrap to the other tiers. */
+  /** Back to the best order; the next round looks below its wrap at the other tiers. */
   private polish(): void {
     this.use([...this.best.order])
     this.touched.fill(1)
     this.tiesToo = true
-    this.descend()
-    this.tiesToo = this.c.n <= TIES_SHOTS
-    this.stale = 1
+    this.stale = 0
   }
 
   private use(order: number[]): void {
@@ -140,7 +153,8 @@ class LocalSearch {
 
   private pathOf(order: readonly number[]): number {
     let path = 0
-    for (let i = 0; i < order.length; i++) path += at(this.ways, (i === 0 ? 0 : at(order, i - 1) + 1) * (this.c.n + 1) + at(order, i))
+    for (let i = 0; i < order.length; i++)
+      path += at(this.ways, (i === 0 ? 0 : at(order, i - 1) + 1) * (this.c.n + 1) + at(order, i))
     return path
   }
 
@@ -202,20 +216,25 @@ class LocalSearch {
     }
   }
 
-  /** Improves by exchanging runs until no exchange near a changed place helps. */
-  private descend(): void {
+  /** Improves by exchanging runs until no exchange near a changed place helps; false when stopped before that. */
+  private descend(until: number): boolean {
     const { n } = this.c
-    let quiet = 0
-    for (let a = 0; quiet < n; a = a + 1 < n ? a + 1 : 0) {
+    while (this.quiet < n) {
+      if (this.spent > until) return false
+      const a = this.cursor
       const shot = at(this.order, a)
       const before = a === 0 ? -1 : at(this.order, a - 1)
       const near = at(this.touched, shot) === 1 || (before >= 0 && at(this.touched, before) === 1)
       if (near && this.improveFrom(a)) {
-        quiet = 0
-        a = Math.max(-1, a - 2)
-      } else quiet++
+        this.quiet = 0
+        this.cursor = Math.max(0, a - 1)
+      } else {
+        this.quiet++
+        this.cursor = a + 1 < n ? a + 1 : 0
+      }
     }
     this.touched.fill(0)
+    return true
   }
 
   /** Tries all exchanges with the cut before place `a`: as the first, the middle and the last of the three cuts. */
@@ -223,10 +242,38 @@ class LocalSearch {
     const { n } = this.c
     for (let b = a + 1; b < n; b++) if (this.improveAt(a, b, b + 1, n)) return true
     for (let first = a - 1; first >= 0; first--) if (this.improveAt(first, a, a + 1, n)) return true
-    for (let first = a - 2; first >= 0; first--) {
-      for (let b = first + 1; b < a; b++) if (this.improveAt(first, b, a, a)) return true
+    return this.improveBefore(a)
+  }
+
+  /** Tries the exchanges of runs that end before place `d`. */
+  private improveBefore(d: number): boolean {
+    const { order, score, ways } = this
+    const { n } = this.c
+    const width = n + 1
+    const tailB = d === 0 ? 0 : (at(order, d - 1) + 1) * width
+    const right = d === n ? n : at(order, d)
+    const whole = score.broken === 0
+    const most = this.mostPath()
+    for (let b = d - 1; b > 0; b--) {
+      const headB = at(order, b)
+      const tailA = (at(order, b - 1) + 1) * width
+      const base = this.path - at(ways, tailA + headB) - at(ways, tailB + right) + at(ways, tailA + right)
+      this.spent += 0.02
+      for (let a = b - 1; a >= 0; a--) {
+        if (whole && this.limitOf(a, b) < d) break
+        const headA = at(order, a)
+        const left = (a === 0 ? 0 : at(order, a - 1) + 1) * width
+        const path = base - at(ways, left + headA) + at(ways, left + headB) + at(ways, tailB + headA)
+        this.spent += 0.02
+        if (path <= most && this.tryExchange(a, b, d, path)) return true
+      }
     }
     return false
+  }
+
+  /** Minutes of changeovers above which an order cannot be better than this one, whatever else it waits for. */
+  private mostPath(): number {
+    return this.score.broken === 0 ? this.score.wrap - this.fixed - (this.tiesToo ? 0 : 1e-9) : Infinity
   }
 
   /** Tries the exchanges of [a, b) with [b, d) for d from `from` to `to`. */
@@ -240,7 +287,7 @@ class LocalSearch {
     const headB = at(order, b)
     const base = this.path - at(ways, left + headA) - at(ways, tailA + headB) + at(ways, left + headB)
     const whole = score.broken === 0
-    const most = whole ? score.wrap - this.fixed - (this.tiesToo ? 0 : 1e-9) : Infinity
+    const most = this.mostPath()
     const until = whole ? Math.min(to, this.limitOf(a, b)) : to
     this.spent += 0.02
     for (let d = from; d <= until; d++) {

@@ -42,7 +42,11 @@ export type Node = {
   complete: number
 }
 
-export type LabelTables = { wants: readonly { sitter: number; look: number; shots: number }[]; ofSitter: Int32Array; blocks: readonly number[] }
+export type LabelTables = {
+  wants: readonly { sitter: number; look: number; shots: number }[]
+  ofSitter: Int32Array
+  blocks: readonly number[]
+}
 
 export function labelTables(c: Compiled): LabelTables {
   const wants: { sitter: number; look: number; shots: number }[] = []
@@ -68,7 +72,8 @@ export function makeNode(c: Compiled, tables: LabelTables, mask: number, last: n
     if (left === 0) continue
     const started = (at(tables.ofSitter, want.sitter) & mask) !== 0
     if (limited) {
-      if (!needs.some((need) => need.sitter === want.sitter)) needs.push({ sitter: want.sitter, look: -1, notWithin: -Infinity, started })
+      if (!needs.some((need) => need.sitter === want.sitter))
+        needs.push({ sitter: want.sitter, look: -1, notWithin: -Infinity, started })
       continue
     }
     if (!started && at(c.available, want.sitter) <= -1e6) continue

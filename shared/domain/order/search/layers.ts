@@ -1,7 +1,18 @@
 import { type Clock, Stepper, firstClock } from './clock.ts'
 import { type Compiled, at, item } from './compiled.ts'
 import { type Score, compareScores, compareTies, movedIn } from './evaluate.ts'
-import { type Label, type LabelTables, type Node, dominates, extendTails, labelTables, leastMoved, makeNode, orderOf, readyTimes } from './labels.ts'
+import {
+  type Label,
+  type LabelTables,
+  type Node,
+  dominates,
+  extendTails,
+  labelTables,
+  leastMoved,
+  makeNode,
+  orderOf,
+  readyTimes,
+} from './labels.ts'
 import { type PathBound, bitCount, orderRules, pathBound } from './path-bound.ts'
 
 /** Above this many shots sets of shots do not fit the bits used here. */
@@ -90,8 +101,18 @@ class Layers {
   root(): Node {
     const node: Node = { mask: 0, last: -1, labels: [], needs: [], growing: 0, complete: 0 }
     const label: Label = {
-      ...firstClock(this.c), shot: -1, before: null, broken: 0, split: 0, must: 0, should: 0, light: 0, wait: 0,
-      tails: new Uint8Array(0), ready: new Float64Array(0), least: this.c.lightsOn,
+      ...firstClock(this.c),
+      shot: -1,
+      before: null,
+      broken: 0,
+      split: 0,
+      must: 0,
+      should: 0,
+      light: 0,
+      wait: 0,
+      tails: new Uint8Array(0),
+      ready: new Float64Array(0),
+      least: this.c.lightsOn,
     }
     node.labels.push(label)
     return node
@@ -119,14 +140,20 @@ class Layers {
     scratch.chairs.set(label.chairs)
     const step = this.stepper.step(scratch, node.last, shot, place)
     const split = options.strict ? 0 : this.splitBy(node, label, shot)
-    const broken = label.broken + step.late + (options.strict ? 0 : this.orderBreaches(node, shot, place) + bitCount(split & ~label.split))
+    const broken =
+      label.broken +
+      step.late +
+      (options.strict ? 0 : this.orderBreaches(node, shot, place) + bitCount(split & ~label.split))
     if (options.strict && broken > 0) return
     const missed = step.end > c.hardOut ? 1 : 0
     const must = label.must + (at(c.need, shot) === 0 ? missed : 0)
     const should = label.should + (at(c.need, shot) === 1 ? missed : 0)
     const light = label.light + at(c.light, (node.last + 1) * c.n + shot)
     const wait = label.wait + step.wait
-    const least = Math.max(scratch.end + rest + (c.hasMeal && !scratch.fed && place < c.n - 1 ? c.mealMin : 0), earliestWrap(c, mask, scratch.end))
+    const least = Math.max(
+      scratch.end + rest + (c.hasMeal && !scratch.fed && place < c.n - 1 ? c.mealMin : 0),
+      earliestWrap(c, mask, scratch.end),
+    )
     low.broken = broken + this.surelyLate(mask, scratch.end)
     if (options.strict && low.broken > 0) return
     low.must = must
@@ -144,8 +171,22 @@ class Layers {
       into.set(key, target)
     }
     const made: Label = {
-      end: scratch.end, fed: scratch.fed, free: scratch.free.slice(), look: scratch.look.slice(), chairs: scratch.chairs.slice(),
-      shot, before: label, broken, split, must, should, light, wait, tails, ready: readyTimes(c, target, scratch), least,
+      end: scratch.end,
+      fed: scratch.fed,
+      free: scratch.free.slice(),
+      look: scratch.look.slice(),
+      chairs: scratch.chairs.slice(),
+      shot,
+      before: label,
+      broken,
+      split,
+      must,
+      should,
+      light,
+      wait,
+      tails,
+      ready: readyTimes(c, target, scratch),
+      least,
     }
     if (place === c.n - 1) this.arrive(made)
     else this.spent += COMPARE_WORK * keep(c, target, made)
@@ -170,7 +211,13 @@ class Layers {
   private arrive(label: Label): void {
     const order = orderOf(label).slice(1)
     const score: Score = {
-      broken: label.broken, must: label.must, should: label.should, wrap: label.end, light: label.light, wait: label.wait, lateMin: 0,
+      broken: label.broken,
+      must: label.must,
+      should: label.should,
+      wrap: label.end,
+      light: label.light,
+      wait: label.wait,
+      lateMin: 0,
     }
     const ahead = this.best ? compareScores(score, this.best.score) || compareTies(this.c, order, this.best.order) : -1
     if (ahead >= 0) return
@@ -226,7 +273,17 @@ class Layers {
     for (const node of layer.values()) count += node.labels.length
     if (count <= this.options.width) return
     const all = [...layer.values()].flatMap((node) => node.labels.map((label) => ({ node, label })))
-    all.sort((a, b) => a.label.broken - b.label.broken || a.label.must - b.label.must || a.label.should - b.label.should || a.label.least - b.label.least || a.label.light - b.label.light || a.label.wait - b.label.wait || a.node.mask - b.node.mask || a.node.last - b.node.last)
+    all.sort(
+      (a, b) =>
+        a.label.broken - b.label.broken ||
+        a.label.must - b.label.must ||
+        a.label.should - b.label.should ||
+        a.label.least - b.label.least ||
+        a.label.light - b.label.light ||
+        a.label.wait - b.label.wait ||
+        a.node.mask - b.node.mask ||
+        a.node.last - b.node.last,
+    )
     for (const node of layer.values()) node.labels = []
     all.forEach(({ node, label }, index) => {
       if (index < this.options.width) node.labels.push(label)
@@ -246,7 +303,12 @@ class Layers {
 
   finish(): LayersResult {
     const wrap = this.best?.score.wrap ?? Infinity
-    return { best: this.found, complete: this.complete, spent: this.spent, leastWrap: this.complete ? wrap : Math.min(wrap, this.leastWrap) }
+    return {
+      best: this.found,
+      complete: this.complete,
+      spent: this.spent,
+      leastWrap: this.complete ? wrap : Math.min(wrap, this.leastWrap),
+    }
   }
 }
 

@@ -81,7 +81,8 @@ function looseBound(c: Compiled, strict: boolean): PathBound {
     for (let i = -1; i < count; i++) {
       const from = i < 0 ? last : at(rest, i)
       let least = Infinity
-      for (let j = 0; j < count; j++) if (i !== j) least = Math.min(least, at(ways, (from + 1) * n + at(rest, j)) - at(into, j))
+      for (let j = 0; j < count; j++)
+        if (i !== j) least = Math.min(least, at(ways, (from + 1) * n + at(rest, j)) - at(into, j))
       if (least === Infinity) least = 0
       total += least
       if (i >= 0) dearest = Math.max(dearest, least)

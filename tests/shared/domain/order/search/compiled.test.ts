@@ -7,7 +7,10 @@ const c = compile(
     shots: [{ looks: ['coat'] }, { looks: ['gown'], need: 'could' }],
     looks: { coat: { sitter: 'Ada', changeMin: 5 }, gown: { sitter: 'Ada', changeMin: 25 } },
     sitters: { Ada: { hours: [600, 900], chairMin: 20 } },
-    rules: [{ kind: 'pin-place', shot: 1, index: 7 }, { kind: 'pin-clock', shot: 0, atMin: 610, toleranceMin: 5 }],
+    rules: [
+      { kind: 'pin-place', shot: 1, index: 7 },
+      { kind: 'pin-clock', shot: 0, atMin: 610, toleranceMin: 5 },
+    ],
   }),
 )
 

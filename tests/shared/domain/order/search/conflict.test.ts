@@ -13,7 +13,10 @@ const LATE_FOR_ADA = handDay({
   shots: [{ looks: ['coat'] }, {}],
   looks: { coat: { sitter: 'Ada', changeMin: 5 } },
   sitters: { Ada: { hours: [540, 600] } },
-  rules: [{ kind: 'pin-place', shot: 0, index: -1 }, { kind: 'window', shot: 1, fromMin: 540, toMin: 900 }],
+  rules: [
+    { kind: 'pin-place', shot: 0, index: -1 },
+    { kind: 'window', shot: 1, fromMin: 540, toMin: 900 },
+  ],
 })
 
 describe('findConflict', () => {

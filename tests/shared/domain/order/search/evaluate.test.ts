@@ -14,12 +14,28 @@ describe('Evaluator', () => {
       const problem = randomDay(random, { shots: 2 + (seed % 9), rules: 6, sitters: 1 + (seed % 4) })
       const order = problem.shots.map((_, shot) => shot).sort(() => random() - 0.5)
       const { broken, must, should, wrap, light, wait } = new Evaluator(compile(problem)).score(order, { ...NO_SCORE })
-      const objective = objectiveOf(problem, schedule(problem, order.flatMap((shot) => problem.shots[shot]?.id ?? [])))
+      const objective = objectiveOf(
+        problem,
+        schedule(
+          problem,
+          order.flatMap((shot) => problem.shots[shot]?.id ?? []),
+        ),
+      )
       expect({ seed, broken, must, should, wrap, light, wait }).toEqual({
-        seed, broken: objective.broken, must: objective.mustNotMade, should: objective.shouldNotMade,
-        wrap: objective.wrapMin, light: objective.lightingChanges, wait: objective.waitingMin,
+        seed,
+        broken: objective.broken,
+        must: objective.mustNotMade,
+        should: objective.shouldNotMade,
+        wrap: objective.wrapMin,
+        light: objective.lightingChanges,
+        wait: objective.waitingMin,
       })
-      expect(movedIn(order)).toBe(movedShots(problem.shots.map((shot) => shot.id), objective.sequence))
+      expect(movedIn(order)).toBe(
+        movedShots(
+          problem.shots.map((shot) => shot.id),
+          objective.sequence,
+        ),
+      )
     }
   })
 })

@@ -11,7 +11,11 @@ describe('improveOrders', () => {
   const all = [...improveOrders(c, { seed: 1, work: 30_000 })]
 
   it('gets better from answer to answer and scores them rightly', () => {
-    all.slice(1).forEach(({ best }, index) => expect(compareScores(best.score, all[index]?.best.score ?? best.score)).toBeLessThanOrEqual(0))
+    all
+      .slice(1)
+      .forEach(({ best }, index) =>
+        expect(compareScores(best.score, all[index]?.best.score ?? best.score)).toBeLessThanOrEqual(0),
+      )
     const last = all.at(-1)?.best
     expect(last && new Evaluator(c).score(last.order, { ...NO_SCORE })).toEqual(last?.score)
   })

@@ -1,13 +1,33 @@
 import { describe, expect, it } from 'vitest'
 import { firstClock } from '#shared/domain/order/search/clock.ts'
 import { type Compiled, compile } from '#shared/domain/order/search/compiled.ts'
-import { type Label, dominates, extendTails, labelTables, leastMoved, makeNode, orderOf, readyTimes } from '#shared/domain/order/search/labels.ts'
+import {
+  type Label,
+  dominates,
+  extendTails,
+  labelTables,
+  leastMoved,
+  makeNode,
+  orderOf,
+  readyTimes,
+} from '#shared/domain/order/search/labels.ts'
 import { handDay } from '#tests/support/hand-day.ts'
 
 function label(c: Compiled, shot: number, more: Partial<Label> = {}): Label {
   return {
-    ...firstClock(c), shot, before: null, broken: 0, split: 0, must: 0, should: 0, light: 0, wait: 0,
-    tails: new Uint8Array(0), ready: new Float64Array(0), least: 0, ...more,
+    ...firstClock(c),
+    shot,
+    before: null,
+    broken: 0,
+    split: 0,
+    must: 0,
+    should: 0,
+    light: 0,
+    wait: 0,
+    tails: new Uint8Array(0),
+    ready: new Float64Array(0),
+    least: 0,
+    ...more,
   }
 }
 
@@ -18,7 +38,9 @@ describe('makeNode and readyTimes', () => {
   it('asks when sitters would be ready for what is to come', () => {
     const node = makeNode(c, labelTables(c), 0b001, 0)
     expect(node.needs).toEqual([{ sitter: 0, look: 1, notWithin: 10, started: true }])
-    expect([...readyTimes(c, node, { ...firstClock(c), free: Float64Array.of(590), look: Int16Array.of(0) })]).toEqual([615])
+    expect([...readyTimes(c, node, { ...firstClock(c), free: Float64Array.of(590), look: Int16Array.of(0) })]).toEqual([
+      615,
+    ])
   })
 
   it('asks for nobody who is not needed any more', () => {
@@ -28,7 +50,8 @@ describe('makeNode and readyTimes', () => {
 
 describe('dominates', () => {
   const node = makeNode(c, labelTables(c), 0b011, 1)
-  const made = (end: number, ready: number, more: Partial<Label> = {}) => label(c, 1, { end, ready: Float64Array.of(ready), ...more })
+  const made = (end: number, ready: number, more: Partial<Label> = {}) =>
+    label(c, 1, { end, ready: Float64Array.of(ready), ...more })
 
   it('takes the earlier with everybody ready no later', () => {
     expect(dominates(c, node, made(600, 620), made(605, 620, { light: 1 }))).toBe(true)

@@ -16,14 +16,20 @@ function run(problem: OrderProblem, strict: boolean, width = Infinity, work = In
 }
 
 function bruteForce(problem: OrderProblem) {
-  const all = [...permutations(problem.shots.map((shot) => shot.id))].map((ids) => objectiveOf(problem, schedule(problem, ids)))
+  const all = [...permutations(problem.shots.map((shot) => shot.id))].map((ids) =>
+    objectiveOf(problem, schedule(problem, ids)),
+  )
   return all.reduce((best, objective) => (compareObjectives(objective, best) < 0 ? objective : best))
 }
 
 describe('searchLayers', () => {
   it('finds by itself what trying all orders finds, strictly where no rule need be broken', () => {
     for (let seed = 0; seed < 60; seed++) {
-      const problem = randomDay(seededRandom(seed + 9000), { shots: 2 + (seed % 5), rules: seed % 6, sitters: 1 + (seed % 4) })
+      const problem = randomDay(seededRandom(seed + 9000), {
+        shots: 2 + (seed % 5),
+        rules: seed % 6,
+        sitters: 1 + (seed % 4),
+      })
       const best = bruteForce(problem)
       const loose = run(problem, false)
       expect(loose.best?.order.map((shot) => problem.shots[shot]?.id)).toEqual(best.sequence)

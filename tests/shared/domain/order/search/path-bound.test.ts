@@ -30,13 +30,23 @@ describe('pathBound', () => {
       const evaluator = new Evaluator(c)
       const first = order[0] ?? 0
       const whole = evaluator.score(order, { ...NO_SCORE })
-      expect((c.delta[first] ?? 0) + c.lightsOn + (c.minutes[first] ?? 0) + bound.minutes(1, 0)).toBeLessThanOrEqual(whole.wrap)
+      expect((c.delta[first] ?? 0) + c.lightsOn + (c.minutes[first] ?? 0) + bound.minutes(1, 0)).toBeLessThanOrEqual(
+        whole.wrap,
+      )
       expect(bound.lights(1, 0)).toBeLessThanOrEqual(whole.light)
     }
   })
 
   it('knows no way on where places contradict one another', () => {
-    const c = compile(handDay({ shots: [{}, {}, {}], rules: [{ kind: 'after', shot: 1, after: 2 }, { kind: 'pin-place', shot: 1, index: 1 }] }))
+    const c = compile(
+      handDay({
+        shots: [{}, {}, {}],
+        rules: [
+          { kind: 'after', shot: 1, after: 2 },
+          { kind: 'pin-place', shot: 1, index: 1 },
+        ],
+      }),
+    )
     expect(pathBound(c, true).minutes(0b001, 0)).toBe(Infinity)
     expect(pathBound(c, true).minutes(0b100, 2)).toBeLessThan(Infinity)
     expect(pathBound(c, false).minutes(0b001, 0)).toBeLessThan(Infinity)

@@ -27,11 +27,19 @@ describe('brokenRules', () => {
 
   it('finds no gap for a meal on a day of one long shot', () => {
     const problem = handDay({ shots: [{ minutes: 200 }], meal: { minutes: 30, latestAfterMin: 120 } })
-    expect(wordsOf(problem, 0)).toEqual(['The meal begins no later than 11:00, but there is no gap between two shots before that.'])
+    expect(wordsOf(problem, 0)).toEqual([
+      'The meal begins no later than 11:00, but there is no gap between two shots before that.',
+    ])
   })
 
   it('looks only at rules whose shots are in the order', () => {
-    const problem = handDay({ shots: [{}, {}], rules: [{ kind: 'after', shot: 0, after: 1 }, { kind: 'together', shots: [0, 1] }] })
+    const problem = handDay({
+      shots: [{}, {}],
+      rules: [
+        { kind: 'after', shot: 0, after: 1 },
+        { kind: 'together', shots: [0, 1] },
+      ],
+    })
     expect(wordsOf(problem, 0)).toEqual([])
   })
 })

@@ -15,7 +15,16 @@ describe('movedShots', () => {
 })
 
 describe('compareObjectives', () => {
-  const plain: Objective = { broken: 0, mustNotMade: 0, shouldNotMade: 0, wrapMin: 0, lightingChanges: 0, waitingMin: 0, moved: 0, sequence: inOrder(0, 1) }
+  const plain: Objective = {
+    broken: 0,
+    mustNotMade: 0,
+    shouldNotMade: 0,
+    wrapMin: 0,
+    lightingChanges: 0,
+    waitingMin: 0,
+    moved: 0,
+    sequence: inOrder(0, 1),
+  }
   const tiers = ['broken', 'mustNotMade', 'shouldNotMade', 'wrapMin', 'lightingChanges', 'waitingMin', 'moved'] as const
 
   it('compares its tiers from top to bottom', () => {
@@ -33,9 +42,20 @@ describe('compareObjectives', () => {
 
 describe('objectiveOf', () => {
   it('reads an order off its schedule', () => {
-    const problem = handDay({ shots: [{}, { need: 'should' }, { need: 'could' }], hardOutMin: 600, rules: [{ kind: 'after', shot: 0, after: 1 }] })
+    const problem = handDay({
+      shots: [{}, { need: 'should' }, { need: 'could' }],
+      hardOutMin: 600,
+      rules: [{ kind: 'after', shot: 0, after: 1 }],
+    })
     expect(objectiveOf(problem, schedule(problem, inOrder(0, 1, 2)))).toEqual({
-      broken: 1, mustNotMade: 0, shouldNotMade: 1, wrapMin: 670, lightingChanges: 2, waitingMin: 0, moved: 0, sequence: inOrder(0, 1, 2),
+      broken: 1,
+      mustNotMade: 0,
+      shouldNotMade: 1,
+      wrapMin: 670,
+      lightingChanges: 2,
+      waitingMin: 0,
+      moved: 0,
+      sequence: inOrder(0, 1, 2),
     })
   })
 })

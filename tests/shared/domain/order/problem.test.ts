@@ -5,7 +5,12 @@ import { moveId, readPlan } from '#shared/domain/plan/read-plan.ts'
 import { id } from '#tests/support/lighting-sample.ts'
 import { DAY, DOME, GALLERY, planSample } from '#tests/support/plan-sample.ts'
 
-const shot = (n: number, lookIds: string[] = []) => ({ id: id(100 + n), title: `Shot ${n}`, place: [DAY, `a${n}`] as [string, string], lookIds })
+const shot = (n: number, lookIds: string[] = []) => ({
+  id: id(100 + n),
+  title: `Shot ${n}`,
+  place: [DAY, `a${n}`] as [string, string],
+  lookIds,
+})
 
 const SAMPLE = {
   shots: [shot(1, [id(301)]), shot(2, [id(302)]), shot(3)],
@@ -29,7 +34,11 @@ const SAMPLE = {
 describe('orderProblem', () => {
   it('takes the given move, the strike of the old set and the dressing of the new', () => {
     const input = planSample({ ...SAMPLE, moves: [{ id: moveId(GALLERY, DOME), minutes: 22 }] })
-    expect(orderProblem(readPlan(input), DAY).transitions[1]?.[1]).toMatchObject({ moveMin: 22, strikeMin: 5, dressMin: 20 })
+    expect(orderProblem(readPlan(input), DAY).transitions[1]?.[1]).toMatchObject({
+      moveMin: 22,
+      strikeMin: 5,
+      dressMin: 20,
+    })
   })
 
   it('falls back to the studio’s minutes between rooms', () => {
@@ -37,13 +46,19 @@ describe('orderProblem', () => {
   })
 
   it('dresses the first set and strikes nothing', () => {
-    expect(orderProblem(readPlan(planSample(SAMPLE)), DAY).transitions[0]?.[0]).toMatchObject({ moveMin: 0, strikeMin: 0, dressMin: 10 })
+    expect(orderProblem(readPlan(planSample(SAMPLE)), DAY).transitions[0]?.[0]).toMatchObject({
+      moveMin: 0,
+      strikeMin: 0,
+      dressMin: 10,
+    })
   })
 
   it('moves every light to another room although the setup is the same', () => {
     const problem = orderProblem(readPlan(planSample(SAMPLE)), DAY)
     const there = problem.transitions[1]?.[1]
-    expect(problem.actionLists[there?.actions ?? 0]?.map((action) => action.kind)).toEqual(expect.arrayContaining(['move', 'camera']))
+    expect(problem.actionLists[there?.actions ?? 0]?.map((action) => action.kind)).toEqual(
+      expect.arrayContaining(['move', 'camera']),
+    )
     // Stand and camera at the same time by two hands, 2 minutes each, and 2 of test frames.
     expect(there).toMatchObject({ lightingMin: 4, changesLight: true })
   })
@@ -68,8 +83,16 @@ describe('orderProblem', () => {
   it('is plain data that a worker can be sent, and schedules', () => {
     const problem = orderProblem(readPlan(planSample(SAMPLE)), DAY)
     expect(JSON.parse(JSON.stringify(problem))).toEqual(problem)
-    const day = schedule(problem, problem.shots.map((one) => one.id))
-    expect(day.shots[1]?.changeover.setMove).toMatchObject({ fromSetName: 'Bench', toSetName: 'Pier', otherRoom: true, toRoomName: 'Dome' })
+    const day = schedule(
+      problem,
+      problem.shots.map((one) => one.id),
+    )
+    expect(day.shots[1]?.changeover.setMove).toMatchObject({
+      fromSetName: 'Bench',
+      toSetName: 'Pier',
+      otherRoom: true,
+      toRoomName: 'Dome',
+    })
   })
 
   it('knows no day that is not in the plan', () => {

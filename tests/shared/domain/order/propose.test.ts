@@ -29,7 +29,10 @@ describe('proposeOrder', () => {
         const shots = 2 + Math.floor(random() * 5)
         const problem = randomDay(random, { shots, rules: 4 })
         const proposal = proposeOrder(problem, OPTIONS)
-        expect({ day: [block, number], ...proposal.objective }).toEqual({ day: [block, number], ...bruteForce(problem) })
+        expect({ day: [block, number], ...proposal.objective }).toEqual({
+          day: [block, number],
+          ...bruteForce(problem),
+        })
         expect(proposal.proven).toBe(true)
       }
     },
@@ -48,7 +51,13 @@ describe('proposeOrder, beyond small days', () => {
   it('never answers worse than the order as it stands, and says how much earlier a better one might wrap', () => {
     const problem = plannedDay(seededRandom(5), { shots: 20, rules: 8, sitters: 4, setups: 5, meal: true })
     const proposal = proposeOrder(problem, { seed: 1, budget: 200_000 })
-    const present = objectiveOf(problem, schedule(problem, problem.shots.map((shot) => shot.id)))
+    const present = objectiveOf(
+      problem,
+      schedule(
+        problem,
+        problem.shots.map((shot) => shot.id),
+      ),
+    )
     expect(compareObjectives(proposal.objective, present)).toBeLessThanOrEqual(0)
     expect(proposal.leastWrapMin + proposal.gapMin).toBe(proposal.objective.wrapMin)
     expect(new Set(proposal.sequence)).toEqual(new Set(problem.shots.map((shot) => shot.id)))
@@ -70,8 +79,16 @@ describe('proposeOrder, beyond small days', () => {
   it('tells of better and better orders and can be stopped after any', () => {
     const problem = plannedDay(seededRandom(8), { shots: 14, rules: 6, sitters: 3 })
     const told: Objective[] = []
-    const last = proposeOrder(problem, { seed: 1, budget: 100_000, onBetter: (proposal) => told.push(proposal.objective) })
-    told.slice(1).forEach((objective, index) => expect(compareObjectives(objective, told[index] ?? objective)).toBeLessThanOrEqual(0))
+    const last = proposeOrder(problem, {
+      seed: 1,
+      budget: 100_000,
+      onBetter: (proposal) => told.push(proposal.objective),
+    })
+    told
+      .slice(1)
+      .forEach((objective, index) =>
+        expect(compareObjectives(objective, told[index] ?? objective)).toBeLessThanOrEqual(0),
+      )
     expect(told.at(-1)).toEqual(last.objective)
     expect(proposalSteps(problem, { seed: 1, budget: 100_000 }).next().value.sequence).toHaveLength(14)
   })
@@ -118,11 +135,17 @@ describe('proposeOrder, beyond small days', () => {
     const minutes = [2, 4, 1, 3, 3, 2, 5, 7, 7]
     const players = plays.map((_, player) => `Player ${player}`)
     const problem = handDay({
-      shots: minutes.map((length, piece) => ({ minutes: length, looks: players.filter((_, player) => plays[player]?.[piece] === '1') })),
+      shots: minutes.map((length, piece) => ({
+        minutes: length,
+        looks: players.filter((_, player) => plays[player]?.[piece] === '1'),
+      })),
       looks: Object.fromEntries(players.map((name) => [name, { sitter: name, changeMin: 0 }])),
       light: () => 0,
     })
-    const present = schedule(problem, problem.shots.map((shot) => shot.id))
+    const present = schedule(
+      problem,
+      problem.shots.map((shot) => shot.id),
+    )
     expect(present.waitingMin).toBe(49)
     expect(proposeOrder(problem, OPTIONS)).toMatchObject({ proven: true, objective: { waitingMin: 17 } })
   })

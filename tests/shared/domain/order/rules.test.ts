@@ -1,6 +1,13 @@
 import { describe, expect, it } from 'vitest'
 import { orderProblem } from '#shared/domain/order/problem.ts'
-import { type RuleKey, placeLabel, problemRules, ruleKeys, ruleWords, withOnlyRules } from '#shared/domain/order/rules.ts'
+import {
+  type RuleKey,
+  placeLabel,
+  problemRules,
+  ruleKeys,
+  ruleWords,
+  withOnlyRules,
+} from '#shared/domain/order/rules.ts'
 import { readPlan } from '#shared/domain/plan/read-plan.ts'
 import { type RuleBody, handDay, ruleId, sitterId } from '#tests/support/hand-day.ts'
 import { id } from '#tests/support/lighting-sample.ts'
@@ -16,8 +23,11 @@ const RULES: readonly RuleBody[] = [
 ]
 
 const problem = handDay({
-  shots: [{ looks: ['coat'] }, {}, {}], rules: RULES, meal: { minutes: 30, latestAfterMin: 300 },
-  looks: { coat: { sitter: 'Ada', changeMin: 5 } }, sitters: { Ada: { hours: [600, 900] } },
+  shots: [{ looks: ['coat'] }, {}, {}],
+  rules: RULES,
+  meal: { minutes: 30, latestAfterMin: 300 },
+  looks: { coat: { sitter: 'Ada', changeMin: 5 } },
+  sitters: { Ada: { hours: [600, 900] } },
 })
 
 describe('ruleWords', () => {
@@ -51,12 +61,22 @@ describe('placeLabel', () => {
 })
 
 describe('problemRules', () => {
-  const shot = (n: number, list: string) => ({ id: id(100 + n), title: `Shot ${n}`, place: [list, `a${n}`] as [string, string] })
+  const shot = (n: number, list: string) => ({
+    id: id(100 + n),
+    title: `Shot ${n}`,
+    place: [list, `a${n}`] as [string, string],
+  })
   const faultsOf = (after: string, rule: 'after' | 'together' = 'after') => {
-    const body = rule === 'after' ? { kind: 'after' as const, shotId: id(101), afterShotId: id(102) } : { kind: 'together' as const, shotIds: [id(101), id(102)] }
+    const body =
+      rule === 'after'
+        ? { kind: 'after' as const, shotId: id(101), afterShotId: id(102) }
+        : { kind: 'together' as const, shotIds: [id(101), id(102)] }
     const plan = readPlan(
       planSample({
-        days: [{ id: DAY, date: '2026-12-03' }, { id: OTHER_DAY, date: '2026-12-04' }],
+        days: [
+          { id: DAY, date: '2026-12-03' },
+          { id: OTHER_DAY, date: '2026-12-04' },
+        ],
         shots: [shot(1, DAY), shot(2, after)],
         rules: [{ id: id(601), rule: body }],
       }),
@@ -71,13 +91,18 @@ describe('problemRules', () => {
   })
 
   it('cannot keep shots together that are on two days', () => {
-    expect(faultsOf(OTHER_DAY, 'together')).toEqual(['“Shot 1” and “Shot 2” belong together, but not all of them are on this day.'])
+    expect(faultsOf(OTHER_DAY, 'together')).toEqual([
+      '“Shot 1” and “Shot 2” belong together, but not all of them are on this day.',
+    ])
   })
 
   it('holds “after” a shot of an earlier day for kept', () => {
     const plan = readPlan(
       planSample({
-        days: [{ id: DAY, date: '2026-12-03' }, { id: OTHER_DAY, date: '2026-12-04' }],
+        days: [
+          { id: DAY, date: '2026-12-03' },
+          { id: OTHER_DAY, date: '2026-12-04' },
+        ],
         shots: [shot(1, OTHER_DAY), shot(2, DAY)],
         rules: [{ id: id(601), rule: { kind: 'after', shotId: id(101), afterShotId: id(102) } }],
       }),

@@ -38,8 +38,13 @@ describe('latestBegin', () => {
 
 describe('wardrobeWork', () => {
   const problem = handDay({
-    shots: [{ looks: ['a'] }], sitters: { Ada: { chairMin: 40 } },
-    looks: { a: { sitter: 'Ada', changeMin: 10, style: 'x' }, b: { sitter: 'Ada', changeMin: 15, style: 'x' }, c: { sitter: 'Ada', changeMin: 5, style: 'y' } },
+    shots: [{ looks: ['a'] }],
+    sitters: { Ada: { chairMin: 40 } },
+    looks: {
+      a: { sitter: 'Ada', changeMin: 10, style: 'x' },
+      b: { sitter: 'Ada', changeMin: 15, style: 'x' },
+      c: { sitter: 'Ada', changeMin: 5, style: 'y' },
+    },
   })
 
   it('asks for the chair at first and where the style differs, and for nothing while the look stays', () => {
@@ -73,7 +78,17 @@ describe('Chairs', () => {
 
 describe('latestTurns', () => {
   it('ends each turn before its shot and before the next turn on its chair', () => {
-    const turn = (shot: number, chairMin: number) => ({ sitter: 0, shot, fromLook: -1, toLook: 0, chair: 0, chairMin, changeMin: 5, beginMin: 0, readyMin: 0 })
+    const turn = (shot: number, chairMin: number) => ({
+      sitter: 0,
+      shot,
+      fromLook: -1,
+      toLook: 0,
+      chair: 0,
+      chairMin,
+      changeMin: 5,
+      beginMin: 0,
+      readyMin: 0,
+    })
     expect(latestTurns([turn(0, 30), turn(1, 20)], ({ shot }) => [100, 110][shot] ?? 0, null)).toEqual([55, 85])
   })
 })

@@ -8,12 +8,19 @@ export function logRequests(log: Logger): RequestHandler {
     logger: log,
     quietReqLogger: true,
     autoLogging: { ignore: (req) => req.url === '/healthz' || req.url === '/readyz' },
-    customLogLevel: (_req, res) => (res.statusCode >= 500 ? 'error' : 'debug'),
+    customLogLevel: (req, res) => levelOf(req.method ?? 'GET', res.statusCode),
+    customSuccessMessage: (_req, res) => (res.statusCode >= 400 ? 'a request was refused' : 'a request was answered'),
     serializers: {
       req: (req: { method: string; url: string }) => ({ method: req.method, path: pathWithoutTokens(req.url) }),
       res: (res: { statusCode: number }) => ({ status: res.statusCode }),
     },
   })
+}
+
+/** What was refused leaves a line; that a page asks whether somebody is signed in is no such thing. */
+export function levelOf(method: string, status: number): 'error' | 'warn' | 'debug' {
+  if (status >= 500) return 'error'
+  return status >= 400 && !(method === 'GET' && status === 401) ? 'warn' : 'debug'
 }
 
 /** An address as it may stand in a log. */

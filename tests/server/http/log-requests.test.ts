@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest'
-import { pathWithoutTokens } from '#server/http/log-requests.ts'
+import { levelOf, pathWithoutTokens } from '#server/http/log-requests.ts'
 
 describe('pathWithoutTokens', () => {
   it.each([
@@ -13,5 +13,18 @@ describe('pathWithoutTokens', () => {
     ],
   ])('makes of %s %s', (url, path) => {
     expect(pathWithoutTokens(url)).toBe(path)
+  })
+})
+
+describe('levelOf', () => {
+  it.each([
+    ['PUT', 500, 'error'],
+    ['PUT', 413, 'warn'],
+    ['POST', 401, 'warn'],
+    ['GET', 404, 'warn'],
+    ['GET', 401, 'debug'],
+    ['GET', 200, 'debug'],
+  ] as const)('gives a %s that ends with %i the level %s', (method, status, level) => {
+    expect(levelOf(method, status)).toBe(level)
   })
 })

@@ -33,7 +33,7 @@ export function PhoneWall({ items, mayWrite, onDetail, onDropFiles, bar }: Phone
         </div>
       ) : (
         items.size > 0 && (
-          <p className="pointer-events-none absolute inset-x-3 top-3 text-center text-[0.8125rem] text-ink-soft">
+          <p className="pointer-events-none absolute top-0 left-1/2 -translate-x-1/2 rounded-b-r bg-paper px-3 py-1 text-[0.8125rem] whitespace-nowrap text-ink-soft">
             {mayWrite ? 'Press long to pick up, two fingers to zoom' : 'Two fingers to zoom'}
           </p>
         )

@@ -26,7 +26,10 @@ function offlineShell(): Plugin {
           outDir: dir,
           emptyOutDir: false,
           target: 'es2023',
-          rolldownOptions: { input: 'src/service-worker.ts', output: { format: 'iife', entryFileNames: 'service-worker.js' } },
+          rolldownOptions: {
+            input: 'src/service-worker.ts',
+            output: { format: 'iife', entryFileNames: 'service-worker.js' },
+          },
         },
       })
       await injectManifest({
@@ -53,9 +56,15 @@ export default defineConfig({
         // What changes seldom, in files of their own: a new build leaves them in the browser's cache.
         codeSplitting: {
           groups: [
-            { name: 'react', test: /node_modules[\\/](react|react-dom|scheduler|react-router|react-router-dom|@tanstack)[\\/]/ },
+            {
+              name: 'react',
+              test: /node_modules[\\/](react|react-dom|scheduler|react-router|react-router-dom|@tanstack)[\\/]/,
+            },
             { name: 'zod', test: /node_modules[\\/]zod[\\/]/ },
-            { name: 'yjs', test: /node_modules[\\/](yjs|lib0|y-protocols|y-websocket|y-indexeddb|fractional-indexing|idb)[\\/]/ },
+            {
+              name: 'yjs',
+              test: /node_modules[\\/](yjs|lib0|y-protocols|y-websocket|y-indexeddb|fractional-indexing|idb)[\\/]/,
+            },
           ],
         },
       },

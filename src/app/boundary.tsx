@@ -4,17 +4,17 @@ import { useLocation } from 'react-router-dom'
 import { ErrorView } from './error-view.tsx'
 
 /** Shows what went wrong in place of a screen; going to another address tries again. */
-export function Boundary({ children }: { children: ReactNode }) {
+export function Boundary({ inFrame = false, children }: { inFrame?: boolean; children: ReactNode }) {
   const { reset } = useQueryErrorResetBoundary()
   const { pathname } = useLocation()
   return (
-    <Catcher key={pathname} onCatch={reset}>
+    <Catcher key={pathname} inFrame={inFrame} onCatch={reset}>
       {children}
     </Catcher>
   )
 }
 
-type CatcherProps = { onCatch: () => void; children: ReactNode }
+type CatcherProps = { inFrame: boolean; onCatch: () => void; children: ReactNode }
 
 class Catcher extends Component<CatcherProps, { error: unknown; hasFailed: boolean }> {
   override state = { error: undefined, hasFailed: false }
@@ -29,6 +29,10 @@ class Catcher extends Component<CatcherProps, { error: unknown; hasFailed: boole
   }
 
   override render() {
-    return this.state.hasFailed ? <ErrorView error={this.state.error} /> : this.props.children
+    return this.state.hasFailed ? (
+      <ErrorView error={this.state.error} inFrame={this.props.inFrame} />
+    ) : (
+      this.props.children
+    )
   }
 }

@@ -9,12 +9,20 @@ function wordsOf(error: unknown): Words {
   if (error instanceof ApiError) {
     switch (error.code) {
       case 'NOT_FOUND':
-        return { title: 'There is nothing here for you', text: 'The address is wrong, or you are not in this shoot or studio (any more). Ask whoever sent you here.', again: false }
+        return {
+          title: 'There is nothing here for you',
+          text: 'The address is wrong, or you are not in this shoot or studio (any more). Ask whoever sent you here.',
+          again: false,
+        }
       case 'FORBIDDEN':
         return { title: 'This is not yours to open', text: error.message, again: false }
       case 'OFFLINE':
       case 'STARTING':
-        return { title: 'Sconce cannot be reached', text: 'This page is not kept on this device yet. What you typed elsewhere is still here; try again when you have a signal.', again: true }
+        return {
+          title: 'Sconce cannot be reached',
+          text: 'This page is not kept on this device yet. What you typed elsewhere is still here; try again when you have a signal.',
+          again: true,
+        }
       case 'BAD_REQUEST':
         return { title: 'This address does not fit', text: 'Check that the link was copied whole.', again: false }
       default:
@@ -23,14 +31,22 @@ function wordsOf(error: unknown): Words {
   }
   // A page of an earlier build asks for a file that is gone, or the signal went while it was fetched.
   if (error instanceof TypeError && /import|module|fetch/i.test(error.message)) {
-    return { title: 'This screen could not be fetched', text: 'There is no signal, or Sconce has been renewed meanwhile. What you typed is kept; load the page again.', again: true }
+    return {
+      title: 'This screen could not be fetched',
+      text: 'There is no signal, or Sconce has been renewed meanwhile. What you typed is kept; load the page again.',
+      again: true,
+    }
   }
-  return { title: 'Something on this page went wrong', text: 'What you typed is kept. Load the page again; if it stays, tell whoever looks after Sconce what you did last.', again: true }
+  return {
+    title: 'Something on this page went wrong',
+    text: 'What you typed is kept. Load the page again; if it stays, tell whoever looks after Sconce what you did last.',
+    again: true,
+  }
 }
 
 /** What is shown instead of a screen that failed. */
-export function ErrorView({ error }: { error: unknown }) {
-  return <Trouble {...wordsOf(error)} />
+export function ErrorView({ error, inFrame }: { error: unknown; inFrame: boolean }) {
+  return <Trouble {...wordsOf(error)} inFrame={inFrame} />
 }
 
 export function NotFound() {
@@ -38,9 +54,15 @@ export function NotFound() {
 }
 
 /** A screen that cannot be shown: what happened, what was kept, what to do. */
-export function Trouble({ title, text, again }: Words) {
+export function Trouble({
+  title,
+  text,
+  again,
+  inFrame = false,
+}: Words & { /** Whether it stands inside a frame's own main part. */ inFrame?: boolean }) {
+  const Part = inFrame ? 'div' : 'main'
   return (
-    <main className="mx-auto flex min-h-full max-w-lg flex-col items-start justify-center px-6 py-20">
+    <Part className="mx-auto flex min-h-[75dvh] max-w-lg flex-col items-start justify-center px-6 py-12">
       <title>{`${title} · Sconce`}</title>
       <Mark tone="paper" />
       <h1 className="mt-4 text-2xl">{title}</h1>
@@ -55,6 +77,6 @@ export function Trouble({ title, text, again }: Words) {
           Go to your shoots
         </Link>
       </div>
-    </main>
+    </Part>
   )
 }

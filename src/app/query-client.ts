@@ -12,7 +12,8 @@ export function createQueryClient(onSignedOut: () => void): QueryClient {
   return new QueryClient({
     queryCache: new QueryCache({
       // The first answer's failure is the screen's to show; a later one must not pass unseen, except for lack of signal, which the save sign tells.
-      onError: (error, query) => handleError(error, !isSignedOut(error) && (query.state.data === undefined || isAway(error))),
+      onError: (error, query) =>
+        handleError(error, !isSignedOut(error) && (query.state.data === undefined || isAway(error))),
     }),
     mutationCache: new MutationCache({
       onError: (error, _variables, _context, mutation) => handleError(error, mutation.meta?.['shown'] === true),
@@ -40,5 +41,7 @@ function isAway(error: unknown): boolean {
 
 /** A refusal in a sentence. */
 export function wordsFor(error: unknown): string {
-  return error instanceof ApiError ? error.message : 'Something on this page went wrong. What you typed is still here; load the page again if it stays.'
+  return error instanceof ApiError
+    ? error.message
+    : 'Something on this page went wrong. What you typed is still here; load the page again if it stays.'
 }

@@ -6,7 +6,11 @@ import { type Readiness, type ReadinessInput, readinessOf } from '#shared/domain
 import { standingsOf } from '#src/features/sign-off/use-look-standings.ts'
 
 /** The lamps of a shoot from what is on this device and the answers on record. */
-export function readinessOfShoot({ plan, signOffs, ...rest }: Pick<ReadinessInput, 'plan' | 'frames' | 'dayShots'> & { signOffs: SignOffs | undefined }): Readiness[] {
+export function readinessOfShoot({
+  plan,
+  signOffs,
+  ...rest
+}: Pick<ReadinessInput, 'plan' | 'frames' | 'dayShots'> & { signOffs: SignOffs | undefined }): Readiness[] {
   const standings = signOffs ? [...standingsOf(plan, signOffs)] : []
   return readinessOf({
     ...rest,
@@ -15,7 +19,10 @@ export function readinessOfShoot({ plan, signOffs, ...rest }: Pick<ReadinessInpu
     redCautions,
     schedule: (dayId) => {
       const problem = orderProblem(plan, dayId)
-      const { broken, wrapMin } = schedule(problem, problem.shots.map(({ id }) => id))
+      const { broken, wrapMin } = schedule(
+        problem,
+        problem.shots.map(({ id }) => id),
+      )
       return { broken: broken.map(({ words }) => words), wrapMin }
     },
   })

@@ -21,7 +21,7 @@ function screen(load: Load): { element: ReactElement } {
 /** A frame around screens: what fails in one of them leaves the frame standing. */
 function Screens(): ReactNode {
   return (
-    <Boundary>
+    <Boundary inFrame>
       <Outlet />
     </Boundary>
   )
@@ -82,7 +82,9 @@ const routes: RouteObject[] = [
  */
 export function fetchAhead(pathname: string): void {
   for (const { route } of matchRoutes(routes, pathname) ?? []) {
-    loads.get(route.element)?.().catch(() => undefined)
+    loads
+      .get(route.element)?.()
+      .catch(() => undefined)
   }
 }
 

@@ -20,13 +20,25 @@ const DAY: SectionLink = { path: 'day', label: 'On the day', short: 'Day', lamp:
 const SIGN_OFF: SectionLink = { path: 'sign-off', label: 'Sign-off', short: 'Sign-off', lamp: null }
 const PEOPLE: SectionLink = { path: 'people', label: 'People', short: 'People', lamp: null }
 
-export type Sections = { working: readonly SectionLink[]; beside: readonly SectionLink[]; onPhone: readonly SectionLink[] }
+export type Sections = {
+  working: readonly SectionLink[]
+  beside: readonly SectionLink[]
+  onPhone: readonly SectionLink[]
+}
 
 /** The sections of a shoot in working order, as a role sees them. */
 export function sectionsFor(role: Role): Sections {
   return role === 'client'
-    ? { working: [BOARD, LOOKS, { ...SIGN_OFF, lamp: 'looks' }, ORDER], beside: [PEOPLE], onPhone: [BOARD, LOOKS, { ...SIGN_OFF, lamp: 'looks' }, ORDER] }
-    : { working: [BRIEF, BOARD, LOOKS, LIGHTING, ORDER, DAY], beside: [SIGN_OFF, PEOPLE], onPhone: [BOARD, LOOKS, ORDER, DAY] }
+    ? {
+        working: [BOARD, LOOKS, { ...SIGN_OFF, lamp: 'looks' }, ORDER],
+        beside: [PEOPLE],
+        onPhone: [BOARD, LOOKS, { ...SIGN_OFF, lamp: 'looks' }, ORDER],
+      }
+    : {
+        working: [BRIEF, BOARD, LOOKS, LIGHTING, ORDER, DAY],
+        beside: [SIGN_OFF, PEOPLE],
+        onPhone: [BOARD, LOOKS, ORDER, DAY],
+      }
 }
 
 const ALL: readonly SectionLink[] = [BRIEF, BOARD, LOOKS, LIGHTING, ORDER, DAY, SIGN_OFF, PEOPLE]

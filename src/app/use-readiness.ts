@@ -29,5 +29,8 @@ export function useReadiness(): readonly Readiness[] {
       isShown = false
     }
   }, [])
-  return useMemo(() => compute?.({ plan, frames: boardFrames, dayShots: events, signOffs }) ?? [], [compute, plan, boardFrames, events, signOffs])
+  return useMemo(
+    () => compute?.({ plan, frames: boardFrames, dayShots: events, signOffs }) ?? [],
+    [compute, plan, boardFrames, events, signOffs],
+  )
 }

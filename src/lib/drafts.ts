@@ -7,7 +7,9 @@ export function readDraft(userId: string, place: string): Draft {
   try {
     const kept: unknown = JSON.parse(localStorage.getItem(`${PREFIX}${userId}:${place}`) ?? '{}')
     if (typeof kept !== 'object' || kept === null) return {}
-    return Object.fromEntries(Object.entries(kept).filter((entry): entry is [string, string] => typeof entry[1] === 'string'))
+    return Object.fromEntries(
+      Object.entries(kept).filter((entry): entry is [string, string] => typeof entry[1] === 'string'),
+    )
   } catch {
     return {}
   }

@@ -35,7 +35,15 @@ export function dateParts(civilDate: string): { day: string; rest: string; year:
 
 /** "Fri 8 Oct, 18:00" in a zone; the browser's when none is given. */
 export function shortInstant(atMs: number, zone?: string): string {
-  const parts = new Intl.DateTimeFormat(LOCALE, { weekday: 'short', day: 'numeric', month: 'short', hour: '2-digit', minute: '2-digit', hourCycle: 'h23', ...(zone === undefined ? {} : { timeZone: zone }) })
+  const parts = new Intl.DateTimeFormat(LOCALE, {
+    weekday: 'short',
+    day: 'numeric',
+    month: 'short',
+    hour: '2-digit',
+    minute: '2-digit',
+    hourCycle: 'h23',
+    ...(zone === undefined ? {} : { timeZone: zone }),
+  })
   const part = new Map(parts.formatToParts(atMs).map(({ type, value }) => [type, value]))
   return `${part.get('weekday')} ${part.get('day')} ${part.get('month')}, ${part.get('hour')}:${part.get('minute')}`
 }

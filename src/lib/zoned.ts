@@ -1,6 +1,15 @@
 /** Minutes a zone's clock is ahead of UTC at an instant. */
 function offsetMin(atMs: number, zone: string): number {
-  const parts = new Intl.DateTimeFormat('en-GB', { timeZone: zone, year: 'numeric', month: 'numeric', day: 'numeric', hour: 'numeric', minute: 'numeric', second: 'numeric', hourCycle: 'h23' })
+  const parts = new Intl.DateTimeFormat('en-GB', {
+    timeZone: zone,
+    year: 'numeric',
+    month: 'numeric',
+    day: 'numeric',
+    hour: 'numeric',
+    minute: 'numeric',
+    second: 'numeric',
+    hourCycle: 'h23',
+  })
   const part = new Map(parts.formatToParts(atMs).map(({ type, value }) => [type, Number(value)]))
   const of = (type: Intl.DateTimeFormatPartTypes) => part.get(type) ?? 0
   const asUtc = Date.UTC(of('year'), of('month') - 1, of('day'), of('hour'), of('minute'), of('second'))

@@ -35,7 +35,15 @@ export function buttonClass(variant: ButtonVariant = 'plain', size: keyof typeof
   )
 }
 
-export function Button({ variant = 'plain', size = 'normal', busy = false, className, onClick, type = 'button', ...rest }: ButtonProps) {
+export function Button({
+  variant = 'plain',
+  size = 'normal',
+  busy = false,
+  className,
+  onClick,
+  type = 'button',
+  ...rest
+}: ButtonProps) {
   return (
     <button
       {...rest}
@@ -55,5 +63,13 @@ export type IconButtonProps = Omit<ButtonProps, 'aria-label'> & { label: string 
 
 /** A square button with a sign instead of a word; `label` is its name and its tooltip. */
 export function IconButton({ label, variant = 'quiet', className, ...rest }: IconButtonProps) {
-  return <Button {...rest} variant={variant} aria-label={label} title={label} className={cn('size-9 !p-0 max-md:size-11', className)} />
+  return (
+    <Button
+      {...rest}
+      variant={variant}
+      aria-label={label}
+      title={label}
+      className={cn('size-9 !p-0 max-md:size-11', className)}
+    />
+  )
 }

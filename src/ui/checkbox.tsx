@@ -10,7 +10,12 @@ export type CheckboxProps = Omit<ComponentProps<'input'>, 'type' | 'checked' | '
 
 export function Checkbox({ checked, onChange, children, className, ...rest }: CheckboxProps) {
   return (
-    <label className={cn('flex cursor-pointer items-start gap-2.5 py-1 text-base max-md:min-h-11 max-md:items-center', className)}>
+    <label
+      className={cn(
+        'flex cursor-pointer items-start gap-2.5 py-1 text-base max-md:min-h-11 max-md:items-center',
+        className,
+      )}
+    >
       <input
         {...rest}
         type="checkbox"

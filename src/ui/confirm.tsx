@@ -16,7 +16,16 @@ export type ConfirmProps = {
 }
 
 /** Asks before something that is hard to take back. The safe answer has the focus. */
-export function Confirm({ open, onOpenChange, title, children, action, onConfirm, keep = 'Keep it', busy = false }: ConfirmProps) {
+export function Confirm({
+  open,
+  onOpenChange,
+  title,
+  children,
+  action,
+  onConfirm,
+  keep = 'Keep it',
+  busy = false,
+}: ConfirmProps) {
   return (
     <AlertDialog.Root open={open} onOpenChange={onOpenChange}>
       <AlertDialog.Portal>

@@ -32,7 +32,9 @@ export function Dialog({ open, onOpenChange, title, description, footer, wide = 
           <header className="flex items-start gap-3 px-5 pt-4 pb-2 md:px-6 md:pt-5">
             <div className="min-w-0 flex-1">
               <Base.Title className="text-xl">{title}</Base.Title>
-              {description !== undefined && <Base.Description className="mt-1 text-sm text-ink-soft">{description}</Base.Description>}
+              {description !== undefined && (
+                <Base.Description className="mt-1 text-sm text-ink-soft">{description}</Base.Description>
+              )}
             </div>
             <Base.Close asChild>
               <IconButton label="Close" className="-mt-1 -mr-2">
@@ -42,7 +44,9 @@ export function Dialog({ open, onOpenChange, title, description, footer, wide = 
           </header>
           <div className="min-h-0 flex-1 overflow-y-auto px-5 pt-1 pb-5 md:px-6">{children}</div>
           {footer !== undefined && (
-            <footer className="flex flex-wrap justify-end gap-2 border-t border-hair px-5 py-3 max-md:pb-6 md:px-6">{footer}</footer>
+            <footer className="flex flex-wrap justify-end gap-2 border-t border-hair px-5 py-3 max-md:pb-6 md:px-6">
+              {footer}
+            </footer>
           )}
         </Base.Content>
       </Base.Portal>

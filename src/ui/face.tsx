@@ -21,7 +21,11 @@ export function Face({ initials, name, colour, sizePx = 26, ring = 'none', class
       aria-label={name}
       title={name}
       style={{ width: sizePx, height: sizePx, background: colour, fontSize: Math.max(11, Math.round(sizePx * 0.4)) }}
-      className={cn('inline-grid flex-none place-items-center rounded-full leading-none font-bold text-white select-none', RINGS[ring], className)}
+      className={cn(
+        'inline-grid flex-none place-items-center rounded-full leading-none font-bold text-white select-none',
+        RINGS[ring],
+        className,
+      )}
     >
       {initials}
     </span>

@@ -31,7 +31,11 @@ export function Field({ label, hint, error, hideLabel = false, aside, className,
   const hasError = error !== undefined && error !== null && error !== ''
   const control = useMemo<FieldControl>(() => {
     const described = [hasError && errorId, hasHint && hintId].filter(Boolean).join(' ')
-    return { id, ...(described ? { 'aria-describedby': described } : {}), ...(hasError ? { 'aria-invalid': true as const } : {}) }
+    return {
+      id,
+      ...(described ? { 'aria-describedby': described } : {}),
+      ...(hasError ? { 'aria-invalid': true as const } : {}),
+    }
   }, [id, hintId, errorId, hasHint, hasError])
   return (
     <div className={cn('flex min-w-0 flex-col', className)}>

@@ -18,9 +18,24 @@ export type FigureProps = {
 const TONES = { ink: 'text-ink', bottle: 'text-bottle', glow: 'text-glow-ink', velvet: 'text-velvet' }
 
 /** One of the few large numbers of a screen, with its name above it. */
-export function Figure({ label, value, unit, tone = 'ink', size = 'normal', assumed = false, detail, className }: FigureProps) {
+export function Figure({
+  label,
+  value,
+  unit,
+  tone = 'ink',
+  size = 'normal',
+  assumed = false,
+  detail,
+  className,
+}: FigureProps) {
   const number = (
-    <span className={cn('font-display font-semibold whitespace-nowrap', TONES[tone], size === 'large' ? 'text-3xl' : 'text-[1.4375rem] leading-tight')}>
+    <span
+      className={cn(
+        'font-display font-semibold whitespace-nowrap',
+        TONES[tone],
+        size === 'large' ? 'text-3xl' : 'text-[1.4375rem] leading-tight',
+      )}
+    >
       {value}
       {unit !== undefined && <span className="pl-1 font-sans text-sm font-normal text-ink-soft">{unit}</span>}
     </span>
@@ -37,7 +52,11 @@ export function Figure({ label, value, unit, tone = 'ink', size = 'normal', assu
         <Popover
           label={`How ${label} is worked out`}
           trigger={
-            <button type="button" aria-label={`${label}: how it is worked out`} className="rounded-r border-b border-dotted border-edge text-left hover:border-ink max-md:min-h-11">
+            <button
+              type="button"
+              aria-label={`${label}: how it is worked out`}
+              className="rounded-r border-b border-dotted border-edge text-left hover:border-ink max-md:min-h-11"
+            >
               {number}
             </button>
           }

@@ -3,7 +3,15 @@ import type { ReactNode } from 'react'
 import { cn } from '#src/lib/cn.ts'
 
 export type MenuItem =
-  | { label: string; onSelect: () => void; hint?: string; icon?: ReactNode; danger?: boolean; disabled?: boolean; checked?: boolean }
+  | {
+      label: string
+      onSelect: () => void
+      hint?: string
+      icon?: ReactNode
+      danger?: boolean
+      disabled?: boolean
+      checked?: boolean
+    }
   | 'line'
 
 export type MenuProps = {

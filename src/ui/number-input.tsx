@@ -31,7 +31,20 @@ function shown(value: number | null, decimals: number): string {
 
 /** A number that is taken over on Enter, on leaving, and by the arrow keys. Escape brings the old one back. */
 export function NumberInput(props: NumberInputProps) {
-  const { value, onChange, allowEmpty, unit, min = -Infinity, max = Infinity, step = 1, decimals = 3, className, onBlur, onKeyDown, ...rest } = props
+  const {
+    value,
+    onChange,
+    allowEmpty,
+    unit,
+    min = -Infinity,
+    max = Infinity,
+    step = 1,
+    decimals = 3,
+    className,
+    onBlur,
+    onKeyDown,
+    ...rest
+  } = props
   const [draft, setDraft] = useState<string | null>(null)
   const [remark, setRemark] = useState('')
 
@@ -53,7 +66,13 @@ export function NumberInput(props: NumberInputProps) {
       return
     }
     const kept = Math.min(max, Math.max(min, typed))
-    setRemark(kept === typed ? '' : kept === max ? `${shown(max, decimals)} is the most.` : `${shown(min, decimals)} is the least.`)
+    setRemark(
+      kept === typed
+        ? ''
+        : kept === max
+          ? `${shown(max, decimals)} is the most.`
+          : `${shown(min, decimals)} is the least.`,
+    )
     give(kept)
   }
   function nudge(by: number) {
@@ -93,13 +112,18 @@ export function NumberInput(props: NumberInputProps) {
             event.stopPropagation()
           } else if (event.key === 'ArrowUp' || event.key === 'ArrowDown') {
             event.preventDefault()
-            if (!rest.readOnly && !rest.disabled) nudge((event.key === 'ArrowUp' ? step : -step) * (event.shiftKey ? 10 : 1))
+            if (!rest.readOnly && !rest.disabled)
+              nudge((event.key === 'ArrowUp' ? step : -step) * (event.shiftKey ? 10 : 1))
           }
           onKeyDown?.(event)
         }}
         className={cn(CONTROL, unit !== undefined && (unit.length > 3 ? 'pr-14' : 'pr-9'))}
       />
-      {unit !== undefined && <span className="pointer-events-none absolute top-[8px] right-2.5 text-sm text-ink-faint max-md:top-[11px]">{unit}</span>}
+      {unit !== undefined && (
+        <span className="pointer-events-none absolute top-[8px] right-2.5 text-sm text-ink-faint max-md:top-[11px]">
+          {unit}
+        </span>
+      )}
       <span role="status" className={cn('block text-xs text-glow-ink', remark && 'mt-1')}>
         {remark}
       </span>

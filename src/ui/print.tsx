@@ -12,7 +12,15 @@ export type PrintProps = ComponentProps<'figure'> & {
 export function Print({ caption, by, selected = false, className, children, ...rest }: PrintProps) {
   const bare = caption === undefined && by === undefined
   return (
-    <figure {...rest} className={cn('rounded-sm bg-print px-1.5 pt-1.5 shadow-print', bare && 'pb-1.5', selected && 'outline-2 outline-offset-2 outline-draft', className)}>
+    <figure
+      {...rest}
+      className={cn(
+        'rounded-sm bg-print px-1.5 pt-1.5 shadow-print',
+        bare && 'pb-1.5',
+        selected && 'outline-2 outline-offset-2 outline-draft',
+        className,
+      )}
+    >
       {children}
       {!bare && (
         <figcaption className="flex justify-between gap-2 px-0.5 pt-[5px] pb-[7px] text-xs leading-[1.3] max-md:text-[0.8125rem]">

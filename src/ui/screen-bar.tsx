@@ -5,7 +5,14 @@ import { Button, type ButtonVariant, IconButton } from './button.tsx'
 import { Menu } from './menu.tsx'
 import { useIsPhone } from './use-media.ts'
 
-export type ScreenAction = { label: string; onPress: () => void; variant?: ButtonVariant; disabled?: boolean; busy?: boolean; icon?: ReactNode }
+export type ScreenAction = {
+  label: string
+  onPress: () => void
+  variant?: ButtonVariant
+  disabled?: boolean
+  busy?: boolean
+  icon?: ReactNode
+}
 
 /** What the frame around a screen puts at the end of its bar on phones: the save sign. */
 export const ScreenBarAside = createContext<ReactNode>(null)
@@ -29,7 +36,14 @@ export function ScreenBar({ title, sub, actions = [], children, float = false, c
   const primary = actions.find((action) => action.variant === 'primary')
   const others = actions.filter((action) => action !== primary)
   const button = (action: ScreenAction, extra?: string) => (
-    <Button key={action.label} variant={action.variant ?? 'plain'} disabled={action.disabled} busy={action.busy ?? false} onClick={action.onPress} className={extra}>
+    <Button
+      key={action.label}
+      variant={action.variant ?? 'plain'}
+      disabled={action.disabled}
+      busy={action.busy ?? false}
+      onClick={action.onPress}
+      className={extra}
+    >
       {action.icon}
       {action.label}
     </Button>
@@ -52,7 +66,12 @@ export function ScreenBar({ title, sub, actions = [], children, float = false, c
           <MoreHorizontal size={18} aria-hidden />
         </IconButton>
       }
-      items={others.map((action) => ({ label: action.label, onSelect: action.onPress, disabled: action.disabled ?? false, danger: action.variant === 'danger' }))}
+      items={others.map((action) => ({
+        label: action.label,
+        onSelect: action.onPress,
+        disabled: action.disabled ?? false,
+        danger: action.variant === 'danger',
+      }))}
     />
   )
   return (
@@ -66,7 +85,10 @@ export function ScreenBar({ title, sub, actions = [], children, float = false, c
       {children !== undefined && <div className="mt-2 flex flex-wrap items-center gap-2">{children}</div>}
       {primary &&
         (float ? (
-          button(primary, 'fixed right-4 bottom-[5.25rem] z-30 !h-[52px] !rounded-full !px-5 !text-[0.9375rem] shadow-float')
+          button(
+            primary,
+            'fixed right-4 bottom-[5.25rem] z-30 !h-[52px] !rounded-full !px-5 !text-[0.9375rem] shadow-float',
+          )
         ) : (
           <div className="mt-2.5 flex gap-2">
             {button(primary, 'flex-1')}

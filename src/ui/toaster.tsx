@@ -9,7 +9,11 @@ const SHOWN_MS = 6000
 export function Toaster() {
   const messages = useSyncExternalStore(toastStore.subscribe, toastStore.read)
   return (
-    <div role="region" aria-label="Messages" className="no-print pointer-events-none fixed right-4 bottom-4 z-60 flex w-[min(24rem,calc(100vw-2rem))] flex-col gap-2 max-md:bottom-24">
+    <div
+      role="region"
+      aria-label="Messages"
+      className="no-print pointer-events-none fixed right-4 bottom-4 z-60 flex w-[min(24rem,calc(100vw-2rem))] flex-col gap-2 max-md:bottom-24"
+    >
       {messages.map((message) => (
         <Toast key={message.id} message={message} />
       ))}
@@ -50,7 +54,12 @@ function Toast({ message }: { message: ToastMessage }) {
           {message.action.label}
         </button>
       )}
-      <button type="button" aria-label="Put this message away" className="grid size-9 flex-none place-items-center rounded-r text-bone-soft hover:bg-night-3 hover:text-bone max-md:size-11" onClick={() => toast.dismiss(message.id)}>
+      <button
+        type="button"
+        aria-label="Put this message away"
+        className="grid size-9 flex-none place-items-center rounded-r text-bone-soft hover:bg-night-3 hover:text-bone max-md:size-11"
+        onClick={() => toast.dismiss(message.id)}
+      >
         <X size={16} aria-hidden />
       </button>
     </div>

@@ -11,7 +11,10 @@ export function useMedia(query: string): boolean {
     },
     [query],
   )
-  return useSyncExternalStore(subscribe, () => typeof window.matchMedia === 'function' && window.matchMedia(query).matches)
+  return useSyncExternalStore(
+    subscribe,
+    () => typeof window.matchMedia === 'function' && window.matchMedia(query).matches,
+  )
 }
 
 /** Narrow enough for the bottom bar; the same width as the style sheets' `md`. */

@@ -41,7 +41,15 @@ function counted(count: number, one: string, many = `${one}s`): string {
 
 /** "Friday 18:00" in the shoot's zone. */
 function instantInWords(atMs: number, zone: string): string {
-  const parts = new Intl.DateTimeFormat('en-GB', { timeZone: zone, weekday: 'long', day: 'numeric', month: 'short', hour: '2-digit', minute: '2-digit', hourCycle: 'h23' })
+  const parts = new Intl.DateTimeFormat('en-GB', {
+    timeZone: zone,
+    weekday: 'long',
+    day: 'numeric',
+    month: 'short',
+    hour: '2-digit',
+    minute: '2-digit',
+    hourCycle: 'h23',
+  })
   const part = new Map(parts.formatToParts(atMs).map(({ type, value }) => [type, value]))
   return `${part.get('weekday')} ${part.get('day')} ${part.get('month')}, ${part.get('hour')}:${part.get('minute')}`
 }
@@ -70,7 +78,13 @@ function boardReadiness({ plan, frames }: ReadinessInput): Omit<Readiness, 'sect
   const without = [...plan.looks.values()].filter(({ look }) => !shown.has(look.id))
   const first = without[0]
   if (!first) return { lamp: 'lit', why: 'Every look has a picture on the board' }
-  return { lamp: 'half', why: without.length === 1 ? `No picture on the board for “${first.look.name}”` : `${counted(without.length, 'look')} without a picture on the board` }
+  return {
+    lamp: 'half',
+    why:
+      without.length === 1
+        ? `No picture on the board for “${first.look.name}”`
+        : `${counted(without.length, 'look')} without a picture on the board`,
+  }
 }
 
 function looksReadiness({ plan, signOffs }: ReadinessInput): Omit<Readiness, 'section'> {
@@ -78,11 +92,26 @@ function looksReadiness({ plan, signOffs }: ReadinessInput): Omit<Readiness, 'se
   const used = new Map<string, string>()
   for (const shot of plan.shots.values()) for (const { look } of shot.looks) used.set(look.id, look.name)
   if (used.size === 0) return { lamp: 'half', why: 'No shot uses a look yet' }
-  const open = (state: string) => [...used].filter(([id]) => (signOffs.get(id) ?? 'waiting') === state).map(([, name]) => name)
+  const open = (state: string) =>
+    [...used].filter(([id]) => (signOffs.get(id) ?? 'waiting') === state).map(([, name]) => name)
   const asked = open('change asked')
-  if (asked[0] !== undefined) return { lamp: 'half', why: asked.length === 1 ? `The client asks for a change to “${asked[0]}”` : `The client asks for changes to ${asked.length} looks` }
+  if (asked[0] !== undefined)
+    return {
+      lamp: 'half',
+      why:
+        asked.length === 1
+          ? `The client asks for a change to “${asked[0]}”`
+          : `The client asks for changes to ${asked.length} looks`,
+    }
   const changed = open('changed since')
-  if (changed[0] !== undefined) return { lamp: 'half', why: changed.length === 1 ? `“${changed[0]}” changed since it was signed off` : `${counted(changed.length, 'look')} changed since they were signed off` }
+  if (changed[0] !== undefined)
+    return {
+      lamp: 'half',
+      why:
+        changed.length === 1
+          ? `“${changed[0]}” changed since it was signed off`
+          : `${counted(changed.length, 'look')} changed since they were signed off`,
+    }
   const waiting = open('waiting')
   if (waiting.length === 0) return { lamp: 'lit', why: 'Every look in a shot is signed off' }
   const by = plan.brief.signOffByMs === null ? '' : `, by ${instantInWords(plan.brief.signOffByMs, plan.brief.zone)}`
@@ -95,7 +124,9 @@ function lightingReadiness({ plan, redCautions }: ReadinessInput): Omit<Readines
   for (const { setup, plan: shot } of plan.shots.values()) {
     if (!setup) continue
     const before: SetupUse = used.get(setup.setup.id)?.use ?? { orientations: [], frames: 0 }
-    const orientations = before.orientations.includes(shot.orientation) ? before.orientations : [...before.orientations, shot.orientation]
+    const orientations = before.orientations.includes(shot.orientation)
+      ? before.orientations
+      : [...before.orientations, shot.orientation]
     used.set(setup.setup.id, { setup, use: { orientations, frames: before.frames + shot.frames } })
   }
   for (const { setup, use } of used.values()) {
@@ -105,7 +136,14 @@ function lightingReadiness({ plan, redCautions }: ReadinessInput): Omit<Readines
     if (red !== undefined) return { lamp: 'half', why: `“${name}”: ${red}` }
   }
   const without = plan.days.flatMap((day) => day.shots).filter((shot) => !shot.setup)
-  if (without[0]) return { lamp: 'half', why: without.length === 1 ? `No setup yet for “${without[0].shot.title}”` : `${counted(without.length, 'shot')} without a setup` }
+  if (without[0])
+    return {
+      lamp: 'half',
+      why:
+        without.length === 1
+          ? `No setup yet for “${without[0].shot.title}”`
+          : `${counted(without.length, 'shot')} without a setup`,
+    }
   if (used.size === 0) return { lamp: 'half', why: 'No shot uses a setup yet' }
   return { lamp: 'lit', why: 'Every setup has a main and nothing in its way' }
 }
@@ -115,11 +153,19 @@ function orderReadiness({ plan, schedule }: ReadinessInput): Omit<Readiness, 'se
   const placed = plan.days.filter((day) => day.shots.length > 0)
   if (placed.length === 0) return { lamp: 'unlit', why: 'Put the shots into a day' }
   const loose = plan.loose.filter(({ shot }) => shot.need === 'must')
-  if (loose[0]) return { lamp: 'half', why: loose.length === 1 ? `“${loose[0].shot.title}” must be made and is in no day` : `${counted(loose.length, 'shot')} that must be made are in no day` }
+  if (loose[0])
+    return {
+      lamp: 'half',
+      why:
+        loose.length === 1
+          ? `“${loose[0].shot.title}” must be made and is in no day`
+          : `${counted(loose.length, 'shot')} that must be made are in no day`,
+    }
   for (const { day } of placed) {
     const { broken, wrapMin } = schedule(day.id)
     if (broken[0] !== undefined) return { lamp: 'half', why: broken[0] }
-    if (wrapMin > day.hardOutMin) return { lamp: 'half', why: `Wrap at ${clock(wrapMin)} is after the hard out at ${clock(day.hardOutMin)}` }
+    if (wrapMin > day.hardOutMin)
+      return { lamp: 'half', why: `Wrap at ${clock(wrapMin)} is after the hard out at ${clock(day.hardOutMin)}` }
   }
   return { lamp: 'lit', why: 'Every rule is kept and the day ends in time' }
 }
@@ -131,7 +177,10 @@ function dayReadiness({ plan, dayShots }: ReadinessInput): Omit<Readiness, 'sect
   if (must.length > 0 && got === must.length) return { lamp: 'lit', why: 'Every must-have shot is got' }
   const begun = [...plan.shots.values()].some((shot) => stateOf(shot) !== 'waiting')
   if (!begun) return { lamp: 'unlit', why: 'The day has not begun' }
-  return { lamp: 'half', why: must.length === 0 ? 'No shot is marked as a must' : `${got} of ${must.length} must-have shots got` }
+  return {
+    lamp: 'half',
+    why: must.length === 0 ? 'No shot is marked as a must' : `${got} of ${must.length} must-have shots got`,
+  }
 }
 
 /**

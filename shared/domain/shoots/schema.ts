@@ -3,7 +3,10 @@ import { deliverableIdSchema, roomIdSchema } from '#shared/ids.ts'
 import { civilDateSchema, lineSchema, proseSchema } from '#shared/domain/text.ts'
 
 /** An IANA time zone that this engine knows. */
-export const zoneSchema = z.string().max(64).refine(isZone, 'this time zone is not known; use a name like Europe/London')
+export const zoneSchema = z
+  .string()
+  .max(64)
+  .refine(isZone, 'this time zone is not known; use a name like Europe/London')
 
 function isZone(zone: string): boolean {
   try {

@@ -28,11 +28,19 @@ export function Frame({ spine, bottom, children }: FrameProps) {
   }, [pathname])
   return (
     <div className="grid h-dvh grid-rows-[minmax(0,1fr)_auto] md:grid-cols-[13rem_minmax(0,1fr)] md:grid-rows-1 print:block print:h-auto">
-      <a href="#screen" className="sr-only focus:not-sr-only focus:fixed focus:top-2 focus:left-2 focus:z-60 focus:rounded-r focus:bg-paper focus:px-4 focus:py-2">
+      <a
+        href="#screen"
+        className="sr-only focus:not-sr-only focus:fixed focus:top-2 focus:left-2 focus:z-60 focus:rounded-r focus:bg-paper focus:px-4 focus:py-2"
+      >
         Skip to the screen
       </a>
       {!isPhone && spine}
-      <main id="screen" ref={main} tabIndex={-1} className="relative min-w-0 overflow-x-hidden overflow-y-auto outline-none print:overflow-visible">
+      <main
+        id="screen"
+        ref={main}
+        tabIndex={-1}
+        className="relative min-w-0 overflow-x-hidden overflow-y-auto outline-none print:overflow-visible"
+      >
         {children}
       </main>
       {isPhone && bottom}
@@ -70,7 +78,9 @@ export function SpineLink({ to, children, lamp, lampWhy, end = false }: SpineLin
       className={({ isActive }) =>
         cn(
           'flex items-center justify-between gap-2 border-l-3 px-[18px] py-[7.5px] text-base font-medium max-md:min-h-12',
-          isActive ? 'border-glow-lit bg-night-2 text-white' : 'border-transparent text-bone-soft hover:bg-night-2 hover:text-bone',
+          isActive
+            ? 'border-glow-lit bg-night-2 text-white'
+            : 'border-transparent text-bone-soft hover:bg-night-2 hover:text-bone',
         )
       }
     >
@@ -104,7 +114,11 @@ export type BottomLinkProps = { to: string; children: ReactNode; lamp?: LampStat
 
 export function BottomLink({ to, children, lamp, end = false }: BottomLinkProps) {
   return (
-    <NavLink to={to} end={end} className={({ isActive }) => (isActive ? 'text-white shadow-[inset_0_2px_0_var(--color-glow-lit)]' : '')}>
+    <NavLink
+      to={to}
+      end={end}
+      className={({ isActive }) => (isActive ? 'text-white shadow-[inset_0_2px_0_var(--color-glow-lit)]' : '')}
+    >
       {lamp && <Lamp state={lamp} />}
       <span>{children}</span>
       {lamp && <span className="sr-only">{LAMP_WORDS[lamp]}</span>}

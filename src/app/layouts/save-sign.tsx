@@ -15,7 +15,13 @@ const WORDS: Record<SaveState['kind'], string> = {
   reload: 'Reload needed',
 }
 
-const LAMPS: Record<SaveState['kind'], LampState> = { saved: 'lit', saving: 'half', offline: 'half', 'not-saved': 'unlit', reload: 'unlit' }
+const LAMPS: Record<SaveState['kind'], LampState> = {
+  saved: 'lit',
+  saving: 'half',
+  offline: 'half',
+  'not-saved': 'unlit',
+  reload: 'unlit',
+}
 
 function explanation(state: SaveState): string {
   switch (state.kind) {
@@ -76,7 +82,10 @@ export function SaveStrip() {
   const state = useSaveState()
   const isTrouble = state.kind === 'not-saved' || state.kind === 'reload'
   return (
-    <aside aria-label="What is saved" className="save-strip on-night no-print flex items-center gap-2.5 border-b border-night-3 bg-night-2 px-[18px] py-1.5 text-[0.8125rem] leading-tight text-bone-soft">
+    <aside
+      aria-label="What is saved"
+      className="save-strip on-night no-print flex items-center gap-2.5 border-b border-night-3 bg-night-2 px-[18px] py-1.5 text-[0.8125rem] leading-tight text-bone-soft"
+    >
       <Lamp state={LAMPS[state.kind]} />
       <span className={cn('min-w-0 flex-1', isTrouble && 'font-semibold text-glow-lit')}>
         {WORDS[state.kind]}

@@ -36,7 +36,12 @@ export function ShootBottomBar({ root, sections, lamps, title, where }: ShootBot
             </BottomLink>
           )
         })}
-        <button type="button" aria-expanded={isOpen} onClick={() => setOpenAt(pathname)} className={cn(inMore && 'text-white shadow-[inset_0_2px_0_var(--color-glow-lit)]')}>
+        <button
+          type="button"
+          aria-expanded={isOpen}
+          onClick={() => setOpenAt(pathname)}
+          className={cn(inMore && 'text-white shadow-[inset_0_2px_0_var(--color-glow-lit)]')}
+        >
           More
         </button>
       </BottomBar>
@@ -46,7 +51,11 @@ export function ShootBottomBar({ root, sections, lamps, title, where }: ShootBot
           {[...sections.working, ...sections.beside].map((link) => {
             const lamp = lampOf(link)
             return (
-              <SpineLink key={link.path} to={`${root}/${link.path}`} {...(lamp ? { lamp: lamp.lamp, lampWhy: lamp.why } : {})}>
+              <SpineLink
+                key={link.path}
+                to={`${root}/${link.path}`}
+                {...(lamp ? { lamp: lamp.lamp, lampWhy: lamp.why } : {})}
+              >
                 {link.label}
               </SpineLink>
             )

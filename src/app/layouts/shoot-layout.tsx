@@ -24,7 +24,11 @@ export function ShootLayout() {
   const { user } = useSession()
   const { data: shoot } = useSuspenseQuery(shootQueries.detail(shootId))
   return (
-    <ShootRealtime shoot={shoot} userId={user.id} waiting={<Waiting label={`Opening ${shoot.brief.title}`} className="min-h-dvh" />}>
+    <ShootRealtime
+      shoot={shoot}
+      userId={user.id}
+      waiting={<Waiting label={`Opening ${shoot.brief.title}`} className="min-h-dvh" />}
+    >
       <OpenShoot />
     </ShootRealtime>
   )
@@ -44,7 +48,9 @@ function OpenShoot() {
   const label = sectionLabel(here)
   const trouble = closed === null ? null : closedWords(closed)
   if (trouble) return <Trouble {...trouble} />
-  const where = [shoot.brief.date === null ? 'No date yet' : shortDate(shoot.brief.date), shoot.brief.location.name].filter((part) => part.trim() !== '').join(' · ')
+  const where = [shoot.brief.date === null ? 'No date yet' : shortDate(shoot.brief.date), shoot.brief.location.name]
+    .filter((part) => part.trim() !== '')
+    .join(' · ')
   return (
     <Frame
       spine={
@@ -52,7 +58,9 @@ function OpenShoot() {
           label="Shoot"
           head={
             <>
-              <b className="block font-display text-[1rem] leading-tight font-semibold text-balance">{shoot.brief.title}</b>
+              <b className="block font-display text-[1rem] leading-tight font-semibold text-balance">
+                {shoot.brief.title}
+              </b>
               <span className="text-xs text-bone-soft">{where}</span>
             </>
           }
@@ -66,7 +74,11 @@ function OpenShoot() {
           {sections.working.map((link) => {
             const lamp = link.lamp === null ? undefined : lamps.get(link.lamp)
             return (
-              <SpineLink key={link.path} to={`${root}/${link.path}`} {...(lamp ? { lamp: lamp.lamp, lampWhy: lamp.why } : {})}>
+              <SpineLink
+                key={link.path}
+                to={`${root}/${link.path}`}
+                {...(lamp ? { lamp: lamp.lamp, lampWhy: lamp.why } : {})}
+              >
                 {link.label}
               </SpineLink>
             )
@@ -81,7 +93,11 @@ function OpenShoot() {
         </Spine>
       }
       // On the day a phone's foot is the bar with Got it.
-      bottom={here === 'day' ? null : <ShootBottomBar root={root} sections={sections} lamps={lamps} title={shoot.brief.title} where={where} />}
+      bottom={
+        here === 'day' ? null : (
+          <ShootBottomBar root={root} sections={sections} lamps={lamps} title={shoot.brief.title} where={where} />
+        )
+      }
     >
       <title>{`${label === undefined ? '' : `${label} · `}${shoot.brief.title} · Sconce`}</title>
       <ScreenBarAside value={<SaveSign tone="paper" />}>

@@ -80,7 +80,15 @@ export function StudioLayout() {
   )
 }
 
-function StudioName({ studio, studios, name }: { studio: Studio | undefined; studios: readonly Studio[]; name: string }) {
+function StudioName({
+  studio,
+  studios,
+  name,
+}: {
+  studio: Studio | undefined
+  studios: readonly Studio[]
+  name: string
+}) {
   const navigate = useNavigate()
   if (!studio) return <b className="font-display text-[1rem] leading-tight font-semibold">{name}</b>
   const title = (
@@ -99,7 +107,11 @@ function StudioName({ studio, studios, name }: { studio: Studio | undefined; stu
           <span className="text-xs text-glow-lit"> · change</span>
         </button>
       }
-      items={studios.map((other) => ({ label: other.name, checked: other.id === studio.id, onSelect: () => void navigate(`/studio/${other.id}/kit`) }))}
+      items={studios.map((other) => ({
+        label: other.name,
+        checked: other.id === studio.id,
+        onSelect: () => void navigate(`/studio/${other.id}/kit`),
+      }))}
     />
   )
 }

@@ -30,10 +30,17 @@ function CannotJoin({ error, onAgain }: { error: Error; onAgain: () => void }) {
   return (
     <AccountPage title={isOver ? 'This invitation is not open' : 'The invitation cannot be read'}>
       <div className="flex flex-col gap-4">
-        <Caution tone="glow">{code === 'NOT_FOUND' || code === 'BAD_REQUEST' ? 'There is no such invitation. The link may have been cut short on its way.' : error.message}</Caution>
+        <Caution tone="glow">
+          {code === 'NOT_FOUND' || code === 'BAD_REQUEST'
+            ? 'There is no such invitation. The link may have been cut short on its way.'
+            : error.message}
+        </Caution>
         {isOver ? (
           <>
-            <p className="text-ink-soft">Ask whoever invited you for a new letter: it takes them one press. If you have joined already, sign in, or have a letter sent that signs you in.</p>
+            <p className="text-ink-soft">
+              Ask whoever invited you for a new letter: it takes them one press. If you have joined already, sign in, or
+              have a letter sent that signs you in.
+            </p>
             <Link to="/sign-in" className={buttonClass('primary', 'large')}>
               Sign in
             </Link>

@@ -24,8 +24,16 @@ export function Component() {
           value={tab}
           onChange={setTab}
           tabs={[
-            { value: 'kit', label: 'Kit', content: <KitTable studioId={studio.id} mayChange={canInStudio(studio.role, 'kit.write')} /> },
-            { value: 'minutes', label: 'Minutes', content: <MinutesForm studioId={studio.id} mayChange={canInStudio(studio.role, 'minutes.write')} /> },
+            {
+              value: 'kit',
+              label: 'Kit',
+              content: <KitTable studioId={studio.id} mayChange={canInStudio(studio.role, 'kit.write')} />,
+            },
+            {
+              value: 'minutes',
+              label: 'Minutes',
+              content: <MinutesForm studioId={studio.id} mayChange={canInStudio(studio.role, 'minutes.write')} />,
+            },
           ]}
         />
       </div>

@@ -42,7 +42,11 @@ export function Component() {
   }
   return (
     <AccountPage title={sentTo === null ? 'Forgotten the password' : 'A letter is on its way'} foot={back}>
-      {sentTo === null ? <AskForReset email="" onSent={setSentTo} /> : <LetterSent email={sentTo} what="Its link lets you set a new password within the hour." />}
+      {sentTo === null ? (
+        <AskForReset email="" onSent={setSentTo} />
+      ) : (
+        <LetterSent email={sentTo} what="Its link lets you set a new password within the hour." />
+      )}
     </AccountPage>
   )
 }

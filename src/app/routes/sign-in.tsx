@@ -23,14 +23,25 @@ export function Component() {
   if (letter !== null) {
     return (
       <AccountPage title="Sign in">
-        <LetterSignIn token={letter} onSignedIn={() => goOn(to)} onAnotherWay={() => setSearch(to === null ? {} : { to })} />
+        <LetterSignIn
+          token={letter}
+          onSignedIn={() => goOn(to)}
+          onAnotherWay={() => setSearch(to === null ? {} : { to })}
+        />
       </AccountPage>
     )
   }
   if (session) return <Navigate to={safePath(to)} replace />
   if (sentTo !== null) {
     return (
-      <AccountPage title="A letter is on its way" foot={<button type="button" className={LINK} onClick={() => setSentTo(null)}>Back to signing in</button>}>
+      <AccountPage
+        title="A letter is on its way"
+        foot={
+          <button type="button" className={LINK} onClick={() => setSentTo(null)}>
+            Back to signing in
+          </button>
+        }
+      >
         <LetterSent email={sentTo} what="Its link signs you in; it works once, within a quarter of an hour." />
       </AccountPage>
     )

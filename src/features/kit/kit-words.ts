@@ -2,9 +2,21 @@ import type { KitBody, KitInput, KitKind, Provenance, Stated } from '#shared/dom
 
 export const KIND_WORDS: Readonly<Record<KitKind, { one: string; many: string; empty: string }>> = {
   unit: { one: 'Flash unit', many: 'Flash units', empty: 'Heads with their guide number, colour and charge.' },
-  modifier: { one: 'Modifier', many: 'Modifiers', empty: 'Softboxes, umbrellas, grids and panels, with their size and what they swallow.' },
-  gel: { one: 'Gel', many: 'Gels', empty: 'Filters with how far they shift the colour and how much light they let through.' },
-  support: { one: 'Support', many: 'Supports', empty: 'Stands, booms and clamps with their height and what they carry.' },
+  modifier: {
+    one: 'Modifier',
+    many: 'Modifiers',
+    empty: 'Softboxes, umbrellas, grids and panels, with their size and what they swallow.',
+  },
+  gel: {
+    one: 'Gel',
+    many: 'Gels',
+    empty: 'Filters with how far they shift the colour and how much light they let through.',
+  },
+  support: {
+    one: 'Support',
+    many: 'Supports',
+    empty: 'Stands, booms and clamps with their height and what they carry.',
+  },
 }
 
 export const PROVENANCE_WORDS: Readonly<Record<Provenance, string>> = {
@@ -37,9 +49,22 @@ function blankBody(kind: KitKind): KitBody {
         },
       }
     case 'modifier':
-      return { kind, numbers: { shape: 'softbox', widthM: 0.6, heightM: 0.6, lossStops: assumed(1.5), beamDeg: null, massKg: assumed(0.8) } }
+      return {
+        kind,
+        numbers: {
+          shape: 'softbox',
+          widthM: 0.6,
+          heightM: 0.6,
+          lossStops: assumed(1.5),
+          beamDeg: null,
+          massKg: assumed(0.8),
+        },
+      }
     case 'gel':
-      return { kind, numbers: { miredShift: assumed(0), printedMired: null, transmission: assumed(0.8), colour: '#ffffff' } }
+      return {
+        kind,
+        numbers: { miredShift: assumed(0), printedMired: null, transmission: assumed(0.8), colour: '#ffffff' },
+      }
     case 'support':
       return { kind, numbers: { kind: 'stand', maxHeightM: assumed(2.6), maxLoadKg: assumed(3) } }
   }
@@ -49,9 +74,14 @@ function blankBody(kind: KitKind): KitBody {
 export type Reading = { label: string; value: string; stated: Stated | null }
 
 const plain = (label: string, value: string): Reading => ({ label, value, stated: null })
-const stated = (label: string, number: Stated, show: (value: number) => string): Reading => ({ label, value: show(number.value), stated: number })
+const stated = (label: string, number: Stated, show: (value: number) => string): Reading => ({
+  label,
+  value: show(number.value),
+  stated: number,
+})
 /** Thousands parted by a narrow space, so that no comma can be read as a decimal one. */
-const digits = (value: number, most = 2) => new Intl.NumberFormat('en-GB', { maximumFractionDigits: most }).format(value).replaceAll(',', '\u202f')
+const digits = (value: number, most = 2) =>
+  new Intl.NumberFormat('en-GB', { maximumFractionDigits: most }).format(value).replaceAll(',', '\u202f')
 const signed = (value: number) => `${value > 0 ? '+' : value < 0 ? '−' : ''}${digits(Math.abs(value), 0)}`
 
 /** Size of an emitting face: one diameter for a disc. */

@@ -4,7 +4,10 @@ import type { KitInput } from '#shared/domain/kit/schema.ts'
 import { api } from '#src/lib/api.ts'
 import { kitQueries } from './queries.ts'
 
-export type KitChange = { kind: 'add'; input: KitInput } | { kind: 'update'; item: KitItem; input: KitInput } | { kind: 'remove'; item: KitItem }
+export type KitChange =
+  | { kind: 'add'; input: KitInput }
+  | { kind: 'update'; item: KitItem; input: KitInput }
+  | { kind: 'remove'; item: KitItem }
 
 function send(studioId: string, change: KitChange) {
   const at = `/studios/${studioId}/kit`
@@ -13,7 +16,11 @@ function send(studioId: string, change: KitChange) {
     case 'add':
       return api(at, { method: 'POST', body: change.input, response })
     case 'update':
-      return api(`${at}/${change.item.id}`, { method: 'PUT', body: { ...change.input, version: change.item.version }, response })
+      return api(`${at}/${change.item.id}`, {
+        method: 'PUT',
+        body: { ...change.input, version: change.item.version },
+        response,
+      })
     case 'remove':
       return api(`${at}/${change.item.id}`, { method: 'DELETE', response })
   }

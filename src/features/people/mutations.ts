@@ -21,13 +21,21 @@ async function send(shootId: string, change: PeopleChange): Promise<People> {
   const response = peopleSchema
   switch (change.kind) {
     case 'invite':
-      return api(`${at}/invitations`, { method: 'POST', body: { email: change.email, name: change.name, role: change.role }, response })
+      return api(`${at}/invitations`, {
+        method: 'POST',
+        body: { email: change.email, name: change.name, role: change.role },
+        response,
+      })
     case 'resend':
       return api(`${at}/invitations/${change.invitationId}/resend`, { method: 'POST', body: {}, response })
     case 'withdraw':
       return api(`${at}/invitations/${change.invitationId}`, { method: 'DELETE', response })
     case 'role':
-      return api(`${at}/people/${encodeURIComponent(change.userId)}`, { method: 'PATCH', body: { role: change.role }, response })
+      return api(`${at}/people/${encodeURIComponent(change.userId)}`, {
+        method: 'PATCH',
+        body: { role: change.role },
+        response,
+      })
     case 'remove':
       await removeFrom(shootId, change.userId)
       return api(`${at}/people`, { response })

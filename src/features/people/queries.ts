@@ -11,7 +11,8 @@ export const peopleQueries = {
   invitation: (token: string) =>
     queryOptions({
       queryKey: ['invitations', token],
-      queryFn: ({ signal }) => api(`/invitations/${encodeURIComponent(token)}`, { response: invitationPageSchema, signal }),
+      queryFn: ({ signal }) =>
+        api(`/invitations/${encodeURIComponent(token)}`, { response: invitationPageSchema, signal }),
       retry: false,
     }),
 }

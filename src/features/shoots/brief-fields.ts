@@ -4,7 +4,20 @@ import { fromWallTime, toWallTime } from '#src/lib/zoned.ts'
 import type { BriefChange } from './mutations.ts'
 
 /** The brief's single fields as they are typed. */
-export const BRIEF_FIELDS = ['title', 'client', 'idea', 'usage', 'date', 'zone', 'signOffBy', 'place', 'address', 'coordinates', 'parking', 'access'] as const
+export const BRIEF_FIELDS = [
+  'title',
+  'client',
+  'idea',
+  'usage',
+  'date',
+  'zone',
+  'signOffBy',
+  'place',
+  'address',
+  'coordinates',
+  'parking',
+  'access',
+] as const
 export type BriefField = (typeof BRIEF_FIELDS)[number]
 export type BriefValues = Record<BriefField, string>
 
@@ -20,7 +33,8 @@ export function toValues(brief: Brief): BriefValues {
     signOffBy: brief.signOffByMs === null ? '' : toWallTime(brief.signOffByMs, brief.zone),
     place: location.name,
     address: location.address,
-    coordinates: location.latitude === null || location.longitude === null ? '' : `${location.latitude}, ${location.longitude}`,
+    coordinates:
+      location.latitude === null || location.longitude === null ? '' : `${location.latitude}, ${location.longitude}`,
     parking: location.parking,
     access: location.access,
   }
@@ -28,9 +42,12 @@ export function toValues(brief: Brief): BriefValues {
 
 /** Reads "54.601, -3.134", with or without degree signs and compass letters. Undefined when it is no place on earth. */
 export function parseCoordinates(text: string): { latitude: number; longitude: number } | undefined {
-  const match = /^\s*([+-−]?\d+(?:\.\d+)?)\s*°?\s*([NS])?\s*[,;\s]\s*([+-−]?\d+(?:\.\d+)?)\s*°?\s*([EW])?\s*$/iu.exec(text)
+  const match = /^\s*([+-−]?\d+(?:\.\d+)?)\s*°?\s*([NS])?\s*[,;\s]\s*([+-−]?\d+(?:\.\d+)?)\s*°?\s*([EW])?\s*$/iu.exec(
+    text,
+  )
   if (!match) return undefined
-  const signed = (digits: string, letter: string | undefined) => Number(digits.replace('−', '-')) * (letter && /[SW]/i.test(letter) ? -1 : 1)
+  const signed = (digits: string, letter: string | undefined) =>
+    Number(digits.replace('−', '-')) * (letter && /[SW]/i.test(letter) ? -1 : 1)
   const latitude = signed(match[1] ?? '', match[2])
   const longitude = signed(match[3] ?? '', match[4])
   return Math.abs(latitude) <= 90 && Math.abs(longitude) <= 180 ? { latitude, longitude } : undefined
@@ -60,7 +77,9 @@ export function problemOf(field: BriefField, value: string): string | null {
     case 'zone':
       return zoneSchema.safeParse(value).success ? null : 'This time zone is not known; use a name like Europe/London.'
     case 'coordinates':
-      return value.trim() === '' || parseCoordinates(value) ? null : 'Write latitude and longitude in degrees, like 54.601, -3.134.'
+      return value.trim() === '' || parseCoordinates(value)
+        ? null
+        : 'Write latitude and longitude in degrees, like 54.601, -3.134.'
     default:
       return null
   }

@@ -1,5 +1,5 @@
 import { useMutation, useQueryClient } from '@tanstack/react-query'
-import type { z } from 'zod'
+import { z } from 'zod'
 import { type ShootView, briefResponseSchema, type createShootSchema, createdShootSchema } from '#shared/api/shoots.ts'
 import type { DeliverableInput, Location, RoomInput } from '#shared/domain/shoots/schema.ts'
 import { api } from '#src/lib/api.ts'
@@ -9,7 +9,8 @@ import { shootQueries } from './queries.ts'
 export function useCreateShoot() {
   const queryClient = useQueryClient()
   return useMutation({
-    mutationFn: (body: z.input<typeof createShootSchema>) => api('/shoots', { method: 'POST', body, response: createdShootSchema }),
+    mutationFn: (body: z.input<typeof createShootSchema>) =>
+      api('/shoots', { method: 'POST', body, response: createdShootSchema }),
     meta: { shown: true },
     onSuccess: () => queryClient.invalidateQueries({ queryKey: shootQueries.list().queryKey, exact: true }),
   })
@@ -39,7 +40,11 @@ function send(shootId: string, change: BriefChange) {
     case 'deliverable':
       return change.id === null
         ? api(`${at}/deliverables`, { method: 'POST', body: change.deliverable, response: briefResponseSchema })
-        : api(`${at}/deliverables/${change.id}`, { method: 'PUT', body: change.deliverable, response: briefResponseSchema })
+        : api(`${at}/deliverables/${change.id}`, {
+            method: 'PUT',
+            body: change.deliverable,
+            response: briefResponseSchema,
+          })
     case 'no-deliverable':
       return api(`${at}/deliverables/${change.id}`, { method: 'DELETE', response: briefResponseSchema })
   }
@@ -54,8 +59,16 @@ export function useChangeBrief(shootId: string) {
     // One after the other: an older answer must not take the place of a newer one.
     scope: { id: `brief:${shootId}` },
     onSuccess: ({ brief }) => {
-      queryClient.setQueryData(shootQueries.detail(shootId).queryKey, (shoot: ShootView | undefined) => shoot && { ...shoot, brief })
+      queryClient.setQueryData(
+        shootQueries.detail(shootId).queryKey,
+        (shoot: ShootView | undefined) => shoot && { ...shoot, brief },
+      )
       void queryClient.invalidateQueries({ queryKey: shootQueries.list().queryKey, exact: true })
     },
   })
+}
+
+/** Removes the shoot for everybody, for good. */
+export function useRemoveShoot(shootId: string) {
+  return useMutation({ mutationFn: () => api(`/shoots/${shootId}`, { method: 'DELETE', response: z.unknown() }) })
 }

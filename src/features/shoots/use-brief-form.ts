@@ -26,12 +26,16 @@ export function useBriefForm(brief: Brief, shootId: string, userId: string) {
   useEffect(() => {
     const next = toValues(brief)
     for (const field of BRIEF_FIELDS) {
-      if (getValues(field) === shown.current[field] && next[field] !== shown.current[field]) setValue(field, next[field])
+      if (getValues(field) === shown.current[field] && next[field] !== shown.current[field])
+        setValue(field, next[field])
     }
     shown.current = next
   }, [brief, getValues, setValue])
 
-  const setState = useCallback((field: BriefField, state: FieldState) => setStates((before) => ({ ...before, [field]: state })), [])
+  const setState = useCallback(
+    (field: BriefField, state: FieldState) => setStates((before) => ({ ...before, [field]: state })),
+    [],
+  )
 
   const keep = useCallback(
     (field: BriefField, value: string | null) =>

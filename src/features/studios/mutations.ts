@@ -20,7 +20,8 @@ export function useCreateStudio() {
 export function useRenameStudio(studioId: string) {
   const queryClient = useQueryClient()
   return useMutation({
-    mutationFn: (name: string) => api(`/studios/${studioId}`, { method: 'PATCH', body: { name }, response: studioSchema }),
+    mutationFn: (name: string) =>
+      api(`/studios/${studioId}`, { method: 'PATCH', body: { name }, response: studioSchema }),
     onSuccess: () => queryClient.invalidateQueries({ queryKey: studioQueries.session().queryKey }),
   })
 }
@@ -40,7 +41,11 @@ async function sendPeople(studioId: string, change: PeopleChange): Promise<Studi
     case 'withdraw':
       return api(`${at}/invitations/${change.invitationId}`, { method: 'DELETE', response })
     case 'role':
-      return api(`${at}/people/${encodeURIComponent(change.userId)}`, { method: 'PATCH', body: { role: change.role }, response })
+      return api(`${at}/people/${encodeURIComponent(change.userId)}`, {
+        method: 'PATCH',
+        body: { role: change.role },
+        response,
+      })
     case 'remove':
       await api(`${at}/people/${encodeURIComponent(change.userId)}`, { method: 'DELETE', response: z.unknown() })
       return api(`${at}/people`, { response })
@@ -60,7 +65,8 @@ export function useChangeStudioPeople(studioId: string) {
 export function useSetMinutes(studioId: string) {
   const queryClient = useQueryClient()
   return useMutation({
-    mutationFn: (minutes: Minutes) => api(`/studios/${studioId}/minutes`, { method: 'PUT', body: { minutes }, response: minutesResponseSchema }),
+    mutationFn: (minutes: Minutes) =>
+      api(`/studios/${studioId}/minutes`, { method: 'PUT', body: { minutes }, response: minutesResponseSchema }),
     scope: { id: `minutes:${studioId}` },
     onMutate: (minutes) => queryClient.setQueryData(studioQueries.minutes(studioId).queryKey, { minutes }),
     onError: () => queryClient.invalidateQueries({ queryKey: studioQueries.minutes(studioId).queryKey }),

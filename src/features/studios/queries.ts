@@ -14,7 +14,8 @@ async function fetchSession(signal: AbortSignal): Promise<Session | null> {
 }
 
 export const studioQueries = {
-  session: () => queryOptions({ queryKey: ['session'], queryFn: ({ signal }) => fetchSession(signal), staleTime: 60_000 }),
+  session: () =>
+    queryOptions({ queryKey: ['session'], queryFn: ({ signal }) => fetchSession(signal), staleTime: 60_000 }),
   people: (studioId: string) =>
     queryOptions({
       queryKey: ['studios', studioId, 'people'],

@@ -3,7 +3,9 @@ import { fileURLToPath } from 'node:url'
 import { describe, expect, it } from 'vitest'
 
 const css = readFileSync(fileURLToPath(new URL('../../../src/styles/app.css', import.meta.url)), 'utf8')
-const tokens = new Map([...css.matchAll(/--color-([\w-]+):\s*(#[0-9a-f]{6})/gi)].map(([, name = '', value = '']) => [name, value]))
+const tokens = new Map(
+  [...css.matchAll(/--color-([\w-]+):\s*(#[0-9a-f]{6})/gi)].map(([, name = '', value = '']) => [name, value]),
+)
 
 /** Relative luminance of an sRGB colour. WCAG 2.2, definition of "relative luminance". */
 function luminance(hex: string): number {
@@ -29,7 +31,9 @@ const PAPERS = ['ground', 'paper', 'print', 'tag']
 
 /** [text, on], 4.5: WCAG 2.2, 1.4.3. */
 const TEXT: [string, string][] = [
-  ...PAPERS.flatMap((on): [string, string][] => ['ink', 'ink-soft', 'ink-faint', 'glow-ink', 'velvet', 'bottle', 'draft'].map((text) => [text, on])),
+  ...PAPERS.flatMap((on): [string, string][] =>
+    ['ink', 'ink-soft', 'ink-faint', 'glow-ink', 'velvet', 'bottle', 'draft'].map((text) => [text, on]),
+  ),
   ['ink', 'surround'],
   ['ink-soft', 'surround'],
   ...['glow-wash', 'velvet-wash', 'bottle-wash', 'draft-wash'].map((on): [string, string] => ['ink', on]),

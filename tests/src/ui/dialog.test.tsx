@@ -31,7 +31,9 @@ async function open() {
 describe('Dialog', () => {
   it('is named by its title and described by its description', async () => {
     const { dialog } = await open()
-    expect(document.getElementById(dialog.getAttribute('aria-describedby') ?? '')?.textContent).toBe('Its size decides what fits.')
+    expect(document.getElementById(dialog.getAttribute('aria-describedby') ?? '')?.textContent).toBe(
+      'Its size decides what fits.',
+    )
   })
 
   it('takes the focus in', async () => {
@@ -57,7 +59,13 @@ describe('Confirm', () => {
   it('puts the focus on the safe answer and acts only on the other', async () => {
     const done: string[] = []
     render(
-      <Confirm open onOpenChange={() => done.push('closed')} title="Remove it?" action="Remove" onConfirm={() => done.push('removed')}>
+      <Confirm
+        open
+        onOpenChange={() => done.push('closed')}
+        title="Remove it?"
+        action="Remove"
+        onConfirm={() => done.push('removed')}
+      >
         It is gone then.
       </Confirm>,
     )

@@ -19,7 +19,12 @@ export type KitDialogProps = {
 }
 
 export function KitDialog({ title, input, isBusy, refusal, onClose, onSave }: KitDialogProps) {
-  const [draft, setDraft] = useState<KitInput>({ name: input.name, quantity: input.quantity, note: input.note, body: input.body })
+  const [draft, setDraft] = useState<KitInput>({
+    name: input.name,
+    quantity: input.quantity,
+    note: input.note,
+    body: input.body,
+  })
   const [isNameMissing, setIsNameMissing] = useState(false)
   const form = useId()
   const handleSubmit = (event: FormEvent) => {
@@ -47,15 +52,30 @@ export function KitDialog({ title, input, isBusy, refusal, onClose, onSave }: Ki
         <FormError>{refusal}</FormError>
         <div className="grid gap-4 sm:grid-cols-[minmax(0,1fr)_7rem]">
           <Field label="Name" error={isNameMissing ? 'Give it a name' : undefined}>
-            <Input autoComplete="off" maxLength={120} value={draft.name} onChange={(event) => setDraft({ ...draft, name: event.target.value })} />
+            <Input
+              autoComplete="off"
+              maxLength={120}
+              value={draft.name}
+              onChange={(event) => setDraft({ ...draft, name: event.target.value })}
+            />
           </Field>
           <Field label="How many">
-            <NumberInput min={0} max={999} value={draft.quantity} onChange={(quantity) => setDraft({ ...draft, quantity: Math.round(quantity) })} />
+            <NumberInput
+              min={0}
+              max={999}
+              value={draft.quantity}
+              onChange={(quantity) => setDraft({ ...draft, quantity: Math.round(quantity) })}
+            />
           </Field>
         </div>
         <KitNumbers body={draft.body} onChange={(body) => setDraft({ ...draft, body })} />
         <Field label="Note">
-          <Textarea rows={2} maxLength={1000} value={draft.note} onChange={(event) => setDraft({ ...draft, note: event.target.value })} />
+          <Textarea
+            rows={2}
+            maxLength={1000}
+            value={draft.note}
+            onChange={(event) => setDraft({ ...draft, note: event.target.value })}
+          />
         </Field>
       </form>
     </Dialog>

@@ -32,7 +32,9 @@ export function KitSection(props: KitSectionProps) {
         )}
       </div>
       {items.length === 0 ? (
-        <p className="rounded-r border border-dashed border-edge px-4 py-5 text-sm text-ink-soft">None yet. {words.empty}</p>
+        <p className="rounded-r border border-dashed border-edge px-4 py-5 text-sm text-ink-soft">
+          None yet. {words.empty}
+        </p>
       ) : isPhone ? (
         <KitList {...props} />
       ) : (
@@ -121,7 +123,11 @@ type RowProps = Omit<KitSectionProps, 'items' | 'kind' | 'onAdd'> & { item: KitI
 function Name({ item, mayChange, onEdit }: Pick<RowProps, 'item' | 'mayChange' | 'onEdit'>) {
   if (!mayChange) return <b className="font-semibold">{item.name}</b>
   return (
-    <button type="button" onClick={() => onEdit(item)} className="rounded-r text-left font-semibold max-md:min-h-11 underline decoration-hair underline-offset-3 hover:decoration-ink">
+    <button
+      type="button"
+      onClick={() => onEdit(item)}
+      className="rounded-r text-left font-semibold max-md:min-h-11 underline decoration-hair underline-offset-3 hover:decoration-ink"
+    >
       {item.name}
     </button>
   )
@@ -132,7 +138,10 @@ function From({ reading }: { reading: Reading }) {
   if (!reading.stated) return null
   const { from, source } = reading.stated
   return (
-    <span title={source || undefined} className={cn('block text-xs', from === 'assumed' ? 'text-glow-ink' : 'text-ink-soft')}>
+    <span
+      title={source || undefined}
+      className={cn('block text-xs', from === 'assumed' ? 'text-glow-ink' : 'text-ink-soft')}
+    >
       {PROVENANCE_WORDS[from]}
     </span>
   )

@@ -24,7 +24,9 @@ export function KitTable({ studioId, mayChange }: KitTableProps) {
   return (
     <div className="flex flex-col gap-7">
       <p className="max-w-3xl text-sm text-ink-soft">
-        Setups copy these numbers when a light is picked. A change here is offered to open shoots and never made in them by itself. <b className="font-semibold text-ink">Assumed</b> is a guess until a meter or a maker’s sheet replaces it.
+        Setups copy these numbers when a light is picked. A change here is offered to open shoots and never made in them
+        by itself. <b className="font-semibold text-ink">Assumed</b> is a guess until a meter or a maker’s sheet
+        replaces it.
       </p>
       {KIT_KINDS.map((kind) => (
         <KitSection
@@ -39,12 +41,15 @@ export function KitTable({ studioId, mayChange }: KitTableProps) {
         />
       ))}
       <Caution className="max-w-3xl" title="Loads and heights are the makers’ to set">
-        What a stand carries here is for planning. Follow the maker’s limits, bag and tape what stands high, and leave mains work to licensed electricians.
+        What a stand carries here is for planning. Follow the maker’s limits, bag and tape what stands high, and leave
+        mains work to licensed electricians.
       </Caution>
       {editing && (
         <KitDialog
           key={editing.item?.id ?? 'new'}
-          title={editing.item === null ? `Add: ${KIND_WORDS[editing.input.body.kind].one.toLowerCase()}` : editing.item.name}
+          title={
+            editing.item === null ? `Add: ${KIND_WORDS[editing.input.body.kind].one.toLowerCase()}` : editing.item.name
+          }
           input={editing.input}
           isBusy={change.isPending}
           refusal={change.error?.message ?? null}
@@ -65,7 +70,8 @@ export function KitTable({ studioId, mayChange }: KitTableProps) {
         title={`Remove “${removing?.name ?? ''}” from the kit room?`}
         action="Remove"
         onConfirm={() => {
-          if (removing) change.mutate({ kind: 'remove', item: removing }, { onError: (error) => toast.error(error.message) })
+          if (removing)
+            change.mutate({ kind: 'remove', item: removing }, { onError: (error) => toast.error(error.message) })
           setRemoving(null)
         }}
       >

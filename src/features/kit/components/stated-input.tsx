@@ -19,8 +19,21 @@ export function StatedInput({ label, unit, min = 0, max, step = 1, value, onChan
   return (
     <fieldset className="grid min-w-0 content-start grid-cols-[minmax(0,1fr)_8.5rem] items-start gap-x-2 gap-y-1.5">
       <legend className="label-small mb-1">{label}</legend>
-      <NumberInput aria-label={label} value={value.value} onChange={(next) => onChange({ ...value, value: next })} min={min} step={step} {...(max === undefined ? {} : { max })} {...(unit === undefined ? {} : { unit })} />
-      <Select aria-label={`${label}: where it comes from`} options={PROVENANCES.map((from) => ({ value: from, label: PROVENANCE_WORDS[from] }))} value={value.from} onChange={(from) => onChange({ ...value, from })} />
+      <NumberInput
+        aria-label={label}
+        value={value.value}
+        onChange={(next) => onChange({ ...value, value: next })}
+        min={min}
+        step={step}
+        {...(max === undefined ? {} : { max })}
+        {...(unit === undefined ? {} : { unit })}
+      />
+      <Select
+        aria-label={`${label}: where it comes from`}
+        options={PROVENANCES.map((from) => ({ value: from, label: PROVENANCE_WORDS[from] }))}
+        value={value.from}
+        onChange={(from) => onChange({ ...value, from })}
+      />
       {value.from !== 'assumed' && (
         <Input
           aria-label={`${label}: source`}

@@ -1,7 +1,11 @@
 import type { ReactNode } from 'react'
 import { Mark } from '#src/ui/mark.tsx'
 
-export type AccountPageProps = { title: string; children: ReactNode; /** Under the form: other ways in. */ foot?: ReactNode }
+export type AccountPageProps = {
+  title: string
+  children: ReactNode
+  /** Under the form: other ways in. */ foot?: ReactNode
+}
 
 /** The page of people who are not in yet: the lamp on its wall beside one sheet of paper. */
 export function AccountPage({ title, children, foot }: AccountPageProps) {
@@ -14,7 +18,9 @@ export function AccountPage({ title, children, foot }: AccountPageProps) {
           <Mark />
           Sconce
         </div>
-        <p className="relative mt-auto max-w-xs font-display text-2xl leading-snug font-semibold max-md:hidden">Agree on the picture, light it, and run the day from one list.</p>
+        <p className="relative mt-auto max-w-xs font-display text-2xl leading-snug font-semibold max-md:hidden">
+          Agree on the picture, light it, and run the day from one list.
+        </p>
       </header>
       <main className="flex flex-col items-center px-5 py-8 md:justify-center md:py-12">
         <div className="w-full max-w-sm">
@@ -30,7 +36,12 @@ export function AccountPage({ title, children, foot }: AccountPageProps) {
 /** Light thrown up a wall by the lamp. */
 function WallLamp() {
   return (
-    <svg aria-hidden viewBox="0 0 400 600" preserveAspectRatio="xMidYMid slice" className="absolute inset-0 size-full max-md:hidden">
+    <svg
+      aria-hidden
+      viewBox="0 0 400 600"
+      preserveAspectRatio="xMidYMid slice"
+      className="absolute inset-0 size-full max-md:hidden"
+    >
       <defs>
         <radialGradient id="thrown" cx="50%" cy="98%" r="92%">
           <stop offset="0" stopColor="#FFE3B8" />
@@ -43,7 +54,11 @@ function WallLamp() {
           <feGaussianBlur stdDeviation="9" />
         </filter>
       </defs>
-      <path d="M166 396 C150 300 70 150 -20 40 V-40 H420 V40 C330 150 250 300 234 396 Z" fill="url(#thrown)" filter="url(#soft)" />
+      <path
+        d="M166 396 C150 300 70 150 -20 40 V-40 H420 V40 C330 150 250 300 234 396 Z"
+        fill="url(#thrown)"
+        filter="url(#soft)"
+      />
       <ellipse cx="200" cy="392" rx="35" ry="5" fill="#FFE9C9" />
       <path d="M164 392h72l-18 34h-36z" fill="#F3EEE6" />
       <path d="M196 426h8v20h-8z" fill="#B8B0A5" />

@@ -18,7 +18,10 @@ export type CreateAccountFormProps = { onCreated: () => void }
 
 export function CreateAccountForm({ onCreated }: CreateAccountFormProps) {
   const [refusal, setRefusal] = useState<string | null>(null)
-  const { register, handleSubmit, setError, formState } = useForm<Values>({ resolver: zodResolver(schema), defaultValues: { name: '', email: '', password: '' } })
+  const { register, handleSubmit, setError, formState } = useForm<Values>({
+    resolver: zodResolver(schema),
+    defaultValues: { name: '', email: '', password: '' },
+  })
   const create = useMutation({
     mutationFn: account.create,
     meta: { shown: true },
@@ -41,7 +44,11 @@ export function CreateAccountForm({ onCreated }: CreateAccountFormProps) {
       <Field label="E-mail" error={formState.errors.email?.message}>
         <Input type="email" autoComplete="username" inputMode="email" autoCapitalize="none" {...register('email')} />
       </Field>
-      <Field label="Password" hint={`At least ${MIN_PASSWORD_LENGTH} characters; a few words are easier than signs.`} error={formState.errors.password?.message}>
+      <Field
+        label="Password"
+        hint={`At least ${MIN_PASSWORD_LENGTH} characters; a few words are easier than signs.`}
+        error={formState.errors.password?.message}
+      >
         <PasswordInput autoComplete="new-password" {...register('password')} />
       </Field>
       <Button type="submit" variant="primary" size="large" busy={create.isPending} className="mt-1">

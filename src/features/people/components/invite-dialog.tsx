@@ -15,13 +15,26 @@ import { toast } from '#src/ui/toast.ts'
 import { emailSchema } from '../account.ts'
 import type { useChangePeople } from '../mutations.ts'
 
-const schema = z.object({ email: emailSchema, name: z.string().trim().max(80, 'At most 80 characters'), role: z.enum(ROLES) })
+const schema = z.object({
+  email: emailSchema,
+  name: z.string().trim().max(80, 'At most 80 characters'),
+  role: z.enum(ROLES),
+})
 
-export type InviteDialogProps = { open: boolean; onOpenChange: (open: boolean) => void; change: ReturnType<typeof useChangePeople> }
+export type InviteDialogProps = {
+  open: boolean
+  onOpenChange: (open: boolean) => void
+  change: ReturnType<typeof useChangePeople>
+}
 
 export function InviteDialog({ open, onOpenChange, change }: InviteDialogProps) {
   return (
-    <Dialog open={open} onOpenChange={onOpenChange} title="Invite by letter" description="They get a letter with a link that works for seven days. They need no password.">
+    <Dialog
+      open={open}
+      onOpenChange={onOpenChange}
+      title="Invite by letter"
+      description="They get a letter with a link that works for seven days. They need no password."
+    >
       <InviteForm change={change} onSent={() => onOpenChange(false)} />
     </Dialog>
   )
@@ -29,7 +42,10 @@ export function InviteDialog({ open, onOpenChange, change }: InviteDialogProps) 
 
 function InviteForm({ change, onSent }: { change: InviteDialogProps['change']; onSent: () => void }) {
   const [refusal, setRefusal] = useState<string | null>(null)
-  const { register, control, handleSubmit, setError, formState } = useForm<z.infer<typeof schema>>({ resolver: zodResolver(schema), defaultValues: { email: '', name: '', role: 'client' } })
+  const { register, control, handleSubmit, setError, formState } = useForm<z.infer<typeof schema>>({
+    resolver: zodResolver(schema),
+    defaultValues: { email: '', name: '', role: 'client' },
+  })
   const role = useWatch({ control, name: 'role' })
   const handleValues = (values: z.infer<typeof schema>) =>
     change.mutate(
@@ -55,11 +71,25 @@ function InviteForm({ change, onSent }: { change: InviteDialogProps['change']; o
       <Field label="E-mail" error={formState.errors.email?.message}>
         <Input type="email" autoComplete="off" inputMode="email" autoCapitalize="none" {...register('email')} />
       </Field>
-      <Field label="Name" hint="So that the letter can greet them. May stay empty." error={formState.errors.name?.message}>
+      <Field
+        label="Name"
+        hint="So that the letter can greet them. May stay empty."
+        error={formState.errors.name?.message}
+      >
         <Input autoComplete="off" {...register('name')} />
       </Field>
       <Field label="Role" hint={ROLE_LINES[role]}>
-        <Controller control={control} name="role" render={({ field }) => <Select options={ROLES.map((value) => ({ value, label: roleName(value) }))} value={field.value} onChange={field.onChange} />} />
+        <Controller
+          control={control}
+          name="role"
+          render={({ field }) => (
+            <Select
+              options={ROLES.map((value) => ({ value, label: roleName(value) }))}
+              value={field.value}
+              onChange={field.onChange}
+            />
+          )}
+        />
       </Field>
       <div className="flex justify-end">
         <Button type="submit" variant="primary" busy={change.isPending}>

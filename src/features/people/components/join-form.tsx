@@ -27,9 +27,17 @@ export type JoinFormProps = {
 /** An invitation: who asks, what for, as what; a name and one button. */
 export function JoinForm({ token, invitation, signedInAs, onJoined }: JoinFormProps) {
   const [refusal, setRefusal] = useState<string | null>(null)
-  const { register, handleSubmit, setError, formState } = useForm<Values>({ resolver: zodResolver(acceptInvitationSchema), defaultValues: { name: invitation.name } })
+  const { register, handleSubmit, setError, formState } = useForm<Values>({
+    resolver: zodResolver(acceptInvitationSchema),
+    defaultValues: { name: invitation.name },
+  })
   const join = useMutation({
-    mutationFn: (body: Values) => api(`/invitations/${encodeURIComponent(token)}/accept`, { method: 'POST', body, response: acceptedInvitationSchema }),
+    mutationFn: (body: Values) =>
+      api(`/invitations/${encodeURIComponent(token)}/accept`, {
+        method: 'POST',
+        body,
+        response: acceptedInvitationSchema,
+      }),
     meta: { shown: true },
     onSuccess: ({ to }) => onJoined(to),
     onError: (error) => setRefusal(showIssues(error, setError, ['name'])),
@@ -46,7 +54,8 @@ export function JoinForm({ token, invitation, signedInAs, onJoined }: JoinFormPr
       }}
     >
       <p className="text-lg leading-snug">
-        <b className="font-semibold">{invitation.inviter}</b> invites you to the {invitation.kind} <b className="font-semibold">{invitation.title}</b> as {asRole(invitation.role)}.
+        <b className="font-semibold">{invitation.inviter}</b> invites you to the {invitation.kind}{' '}
+        <b className="font-semibold">{invitation.title}</b> as {asRole(invitation.role)}.
       </p>
       <div className="border-y border-hair py-3 text-sm">
         <b className="block font-semibold">{roleName(invitation.role)}</b>
@@ -54,11 +63,16 @@ export function JoinForm({ token, invitation, signedInAs, onJoined }: JoinFormPr
       </div>
       {signedInAs !== null && signedInAs.toLowerCase() !== invitation.email.toLowerCase() && (
         <Caution>
-          You are signed in as {signedInAs}. The invitation is for {invitation.email}; joining signs you in with that address.
+          You are signed in as {signedInAs}. The invitation is for {invitation.email}; joining signs you in with that
+          address.
         </Caution>
       )}
       <FormError>{refusal}</FormError>
-      <Field label="Your name" hint={`You join as ${invitation.email}. No password is needed.`} error={formState.errors.name?.message}>
+      <Field
+        label="Your name"
+        hint={`You join as ${invitation.email}. No password is needed.`}
+        error={formState.errors.name?.message}
+      >
         <Input autoComplete="name" {...register('name')} />
       </Field>
       <Button type="submit" variant="primary" size="large" busy={join.isPending}>

@@ -7,7 +7,11 @@ export type LetterSignInProps = { token: string; onSignedIn: () => void; onAnoth
 
 /** Where the letter's link leads: one button, so that a program that only looks at links uses nothing up. */
 export function LetterSignIn({ token, onSignedIn, onAnotherWay }: LetterSignInProps) {
-  const signIn = useMutation({ mutationFn: () => account.signInByLetter(token), meta: { shown: true }, onSuccess: onSignedIn })
+  const signIn = useMutation({
+    mutationFn: () => account.signInByLetter(token),
+    meta: { shown: true },
+    onSuccess: onSignedIn,
+  })
   return (
     <div className="flex flex-col gap-4">
       <FormError>{signIn.error ? signIn.error.message : null}</FormError>

@@ -31,7 +31,10 @@ const CARD = 'rounded-r border border-hair bg-paper px-5 py-5'
 export function MeScreen({ user, unsent, letters, onSignOut, onRenamed }: MeScreenProps) {
   const [isAsking, setIsAsking] = useState(false)
   const signOut = useMutation({ mutationFn: onSignOut })
-  const elsewhere = useMutation({ mutationFn: account.signOutElsewhere, onSuccess: () => toast.say('Everybody else who was signed in as you is signed out.') })
+  const elsewhere = useMutation({
+    mutationFn: account.signOutElsewhere,
+    onSuccess: () => toast.say('Everybody else who was signed in as you is signed out.'),
+  })
   return (
     <>
       <title>You · Sconce</title>
@@ -49,7 +52,9 @@ export function MeScreen({ user, unsent, letters, onSignOut, onRenamed }: MeScre
         </section>
         <section className={CARD}>
           <h2 className="text-lg">Signing in</h2>
-          <p className="mt-1 mb-3 text-sm text-ink-soft">A letter with a link lets you set a password, or another one.</p>
+          <p className="mt-1 mb-3 text-sm text-ink-soft">
+            A letter with a link lets you set a password, or another one.
+          </p>
           <div className="flex flex-wrap gap-2">
             <Link to="/reset" className={buttonClass()}>
               Set a password
@@ -85,7 +90,8 @@ export function MeScreen({ user, unsent, letters, onSignOut, onRenamed }: MeScre
         busy={signOut.isPending}
         onConfirm={() => signOut.mutate()}
       >
-        {unsent === 1 ? 'It is' : 'They are'} on this device only. Signing out now forgets {unsent === 1 ? 'it' : 'them'} for good.
+        {unsent === 1 ? 'It is' : 'They are'} on this device only. Signing out now forgets{' '}
+        {unsent === 1 ? 'it' : 'them'} for good.
       </Confirm>
     </>
   )
@@ -94,7 +100,10 @@ export function MeScreen({ user, unsent, letters, onSignOut, onRenamed }: MeScre
 const schema = z.object({ name: nameSchema })
 
 function NameForm({ name, onRenamed }: { name: string; onRenamed: () => void }) {
-  const { register, handleSubmit, setError, formState } = useForm<z.infer<typeof schema>>({ resolver: zodResolver(schema), values: { name } })
+  const { register, handleSubmit, setError, formState } = useForm<z.infer<typeof schema>>({
+    resolver: zodResolver(schema),
+    values: { name },
+  })
   const rename = useMutation({
     mutationFn: account.rename,
     meta: { shown: true },
@@ -105,7 +114,11 @@ function NameForm({ name, onRenamed }: { name: string; onRenamed: () => void }) 
     onError: (error) => setError('name', { message: showIssues(error, setError, ['name']) }),
   })
   return (
-    <form noValidate onSubmit={(event) => void handleSubmit((values) => rename.mutate(values))(event)} className="flex flex-wrap items-end gap-2">
+    <form
+      noValidate
+      onSubmit={(event) => void handleSubmit((values) => rename.mutate(values))(event)}
+      className="flex flex-wrap items-end gap-2"
+    >
       <Field label="Your name" error={formState.errors.name?.message} className="min-w-48 flex-1">
         <Input autoComplete="name" {...register('name')} />
       </Field>

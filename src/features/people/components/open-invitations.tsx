@@ -19,16 +19,34 @@ export function OpenInvitations({ invitations, change }: OpenInvitationsProps) {
               <div className="text-xs text-ink-soft">
                 {invitation.name && <span className="break-all">{invitation.email} · </span>}
                 {roleName(invitation.role)} · sent {shortInstant(invitation.sentAtMs)} ·{' '}
-                {invitation.expired ? <span className="font-semibold text-glow-ink">has run out</span> : `works until ${shortInstant(invitation.expiresAtMs)}`}
+                {invitation.expired ? (
+                  <span className="font-semibold text-glow-ink">has run out</span>
+                ) : (
+                  `works until ${shortInstant(invitation.expiresAtMs)}`
+                )}
               </div>
             </div>
             <Button
               aria-label={`Send the letter to ${invitation.email} again`}
-              onClick={() => change.mutate({ kind: 'resend', invitationId: invitation.id }, { onSuccess: () => toast.say(`A new letter is on its way to ${invitation.email}; the link in the old one is closed.`) })}
+              onClick={() =>
+                change.mutate(
+                  { kind: 'resend', invitationId: invitation.id },
+                  {
+                    onSuccess: () =>
+                      toast.say(
+                        `A new letter is on its way to ${invitation.email}; the link in the old one is closed.`,
+                      ),
+                  },
+                )
+              }
             >
               Send again
             </Button>
-            <Button variant="quiet" aria-label={`Withdraw the invitation of ${invitation.email}`} onClick={() => change.mutate({ kind: 'withdraw', invitationId: invitation.id })}>
+            <Button
+              variant="quiet"
+              aria-label={`Withdraw the invitation of ${invitation.email}`}
+              onClick={() => change.mutate({ kind: 'withdraw', invitationId: invitation.id })}
+            >
               Withdraw
             </Button>
           </li>

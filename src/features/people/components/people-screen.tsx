@@ -32,7 +32,13 @@ export function PeopleScreen({ onLeft }: PeopleScreenProps) {
   const mayChange = canInShoot(role, 'people.write')
   return (
     <>
-      <ScreenBar title="People" sub={`${count(data.people.length, 'person', 'people')} in this shoot`} actions={mayChange ? [{ label: 'Invite by letter', variant: 'primary', onPress: () => setIsInviting(true) }] : []} />
+      <ScreenBar
+        title="People"
+        sub={`${count(data.people.length, 'person', 'people')} in this shoot`}
+        actions={
+          mayChange ? [{ label: 'Invite by letter', variant: 'primary', onPress: () => setIsInviting(true) }] : []
+        }
+      />
       <div className="grid max-w-6xl items-start gap-5 px-4 pt-4 pb-10 md:px-6 md:pt-1 xl:grid-cols-[minmax(0,1fr)_19rem]">
         <div className="flex flex-col gap-5">
           <ul className="divide-y divide-hair-soft rounded-r border border-hair bg-paper">
@@ -46,7 +52,9 @@ export function PeopleScreen({ onLeft }: PeopleScreenProps) {
               />
             ))}
           </ul>
-          {mayChange && data.invitations.length > 0 && <OpenInvitations invitations={data.invitations} change={change} />}
+          {mayChange && data.invitations.length > 0 && (
+            <OpenInvitations invitations={data.invitations} change={change} />
+          )}
         </div>
         <aside className="rounded-r border border-hair bg-paper px-4 py-3.5">
           <h2 className="text-lg">What a role may do</h2>
@@ -79,7 +87,15 @@ export function PeopleScreen({ onLeft }: PeopleScreenProps) {
       >
         The shoot closes for them at once, on every device. What they made and signed stays.
       </Confirm>
-      <Confirm open={isLeaving} onOpenChange={setIsLeaving} title="Leave this shoot?" action="Leave" keep="Stay" busy={leave.isPending} onConfirm={() => leave.mutate(undefined, { onSuccess: onLeft, onSettled: () => setIsLeaving(false) })}>
+      <Confirm
+        open={isLeaving}
+        onOpenChange={setIsLeaving}
+        title="Leave this shoot?"
+        action="Leave"
+        keep="Stay"
+        busy={leave.isPending}
+        onConfirm={() => leave.mutate(undefined, { onSuccess: onLeft, onSettled: () => setIsLeaving(false) })}
+      >
         You cannot open it any more; what you made stays. A photographer can invite you again.
       </Confirm>
     </>

@@ -20,15 +20,29 @@ export function PersonRow({ person, mayChange, onRole, onRemove }: PersonRowProp
         <b className="font-semibold">{person.name}</b>
         {person.you && <span className="text-ink-soft"> (you)</span>}
         {person.email !== null && (
-          <a href={`mailto:${person.email}`} className="block text-xs break-all text-ink-soft underline-offset-2 hover:underline max-md:py-3">
+          <a
+            href={`mailto:${person.email}`}
+            className="block text-xs break-all text-ink-soft underline-offset-2 hover:underline max-md:py-3"
+          >
             {person.email}
           </a>
         )}
       </div>
       {mayChange ? (
         <>
-          <Select aria-label={`Role of ${person.name}`} className="!w-40" options={ROLES.map((value) => ({ value, label: roleName(value) }))} value={person.role} onChange={onRole} />
-          <Button variant="quiet" aria-label={`Remove ${person.name}`} className={person.you ? 'invisible' : ''} onClick={onRemove}>
+          <Select
+            aria-label={`Role of ${person.name}`}
+            className="!w-40"
+            options={ROLES.map((value) => ({ value, label: roleName(value) }))}
+            value={person.role}
+            onChange={onRole}
+          />
+          <Button
+            variant="quiet"
+            aria-label={`Remove ${person.name}`}
+            className={person.you ? 'invisible' : ''}
+            onClick={onRemove}
+          >
             Remove
           </Button>
         </>

@@ -18,7 +18,10 @@ export type AskForResetProps = { email: string; onSent: (email: string) => void 
 
 export function AskForReset({ email, onSent }: AskForResetProps) {
   const [refusal, setRefusal] = useState<string | null>(null)
-  const { register, handleSubmit, setError, formState } = useForm<z.infer<typeof askSchema>>({ resolver: zodResolver(askSchema), defaultValues: { email } })
+  const { register, handleSubmit, setError, formState } = useForm<z.infer<typeof askSchema>>({
+    resolver: zodResolver(askSchema),
+    defaultValues: { email },
+  })
   const send = useMutation({
     mutationFn: account.sendResetLetter,
     meta: { shown: true },
@@ -50,7 +53,10 @@ export type SetPasswordProps = { token: string; onSet: () => void }
 
 export function SetPassword({ token, onSet }: SetPasswordProps) {
   const [refusal, setRefusal] = useState<string | null>(null)
-  const { register, handleSubmit, setError, formState } = useForm<z.infer<typeof setSchema>>({ resolver: zodResolver(setSchema), defaultValues: { password: '' } })
+  const { register, handleSubmit, setError, formState } = useForm<z.infer<typeof setSchema>>({
+    resolver: zodResolver(setSchema),
+    defaultValues: { password: '' },
+  })
   const set = useMutation({
     mutationFn: (values: z.infer<typeof setSchema>) => account.setPassword({ token, newPassword: values.password }),
     meta: { shown: true },
@@ -67,7 +73,11 @@ export function SetPassword({ token, onSet }: SetPasswordProps) {
       }}
     >
       <FormError>{refusal}</FormError>
-      <Field label="New password" hint={`At least ${MIN_PASSWORD_LENGTH} characters. Everybody signed in with the old one is signed out.`} error={formState.errors.password?.message}>
+      <Field
+        label="New password"
+        hint={`At least ${MIN_PASSWORD_LENGTH} characters. Everybody signed in with the old one is signed out.`}
+        error={formState.errors.password?.message}
+      >
         <PasswordInput autoComplete="new-password" {...register('password')} />
       </Field>
       <Button type="submit" variant="primary" size="large" busy={set.isPending}>

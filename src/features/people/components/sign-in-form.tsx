@@ -19,10 +19,18 @@ export type SignInFormProps = { onSignedIn: () => void; onLetterSent: (email: st
 /** E-mail and password, or a letter that signs one in. */
 export function SignInForm({ onSignedIn, onLetterSent }: SignInFormProps) {
   const [refusal, setRefusal] = useState<string | null>(null)
-  const { register, handleSubmit, setError, getValues, trigger, formState } = useForm<Values>({ resolver: zodResolver(schema), defaultValues: { email: '', password: '' } })
+  const { register, handleSubmit, setError, getValues, trigger, formState } = useForm<Values>({
+    resolver: zodResolver(schema),
+    defaultValues: { email: '', password: '' },
+  })
   const onError = (error: unknown) => setRefusal(showIssues(error, setError, ['email', 'password']))
   const signIn = useMutation({ mutationFn: account.signIn, meta: { shown: true }, onSuccess: onSignedIn, onError })
-  const letter = useMutation({ mutationFn: account.sendSignInLetter, meta: { shown: true }, onSuccess: (_answer, { email }) => onLetterSent(email), onError })
+  const letter = useMutation({
+    mutationFn: account.sendSignInLetter,
+    meta: { shown: true },
+    onSuccess: (_answer, { email }) => onLetterSent(email),
+    onError,
+  })
   return (
     <form
       noValidate

@@ -25,16 +25,38 @@ export type BriefLineProps = {
 }
 
 /** On paper a control is a line to write on. */
-const PAPER = '!rounded-none !border-0 !border-b !border-edge !bg-transparent !px-0 hover:!border-ink focus:!border-draft'
+const PAPER =
+  '!rounded-none !border-0 !border-b !border-edge !bg-transparent !px-0 hover:!border-ink focus:!border-draft'
 
 /** One thing the brief says: a line to write on, or the words for those who only read. */
-export function BriefLine({ form, field, label, hint, none = 'Not said yet', kind = 'line', readOnly, shown, placeholder, autoComplete = 'off', className, textClass }: BriefLineProps) {
+export function BriefLine({
+  form,
+  field,
+  label,
+  hint,
+  none = 'Not said yet',
+  kind = 'line',
+  readOnly,
+  shown,
+  placeholder,
+  autoComplete = 'off',
+  className,
+  textClass,
+}: BriefLineProps) {
   const value = form.form.watch(field)
   if (readOnly) {
     return (
       <div className={className}>
         <div className="label-small">{label}</div>
-        <div className={cn('mt-0.5 min-h-6 break-words whitespace-pre-wrap', textClass, value === '' && '!font-sans !text-base !not-italic text-ink-faint')}>{value === '' ? none : (shown ?? value)}</div>
+        <div
+          className={cn(
+            'mt-0.5 min-h-6 break-words whitespace-pre-wrap',
+            textClass,
+            value === '' && '!font-sans !text-base !not-italic text-ink-faint',
+          )}
+        >
+          {value === '' ? none : (shown ?? value)}
+        </div>
       </div>
     )
   }
@@ -45,7 +67,13 @@ export function BriefLine({ form, field, label, hint, none = 'Not said yet', kin
     ...(kind === 'date' ? { onChange: () => form.save(field) } : {}),
   })
   return (
-    <Field label={label} hint={hint} error={state.kind === 'failed' ? <Failure why={state.why} onAgain={() => form.save(field)} /> : undefined} aside={<FieldSign state={state} />} className={className ?? ''}>
+    <Field
+      label={label}
+      hint={hint}
+      error={state.kind === 'failed' ? <Failure why={state.why} onAgain={() => form.save(field)} /> : undefined}
+      aside={<FieldSign state={state} />}
+      className={className ?? ''}
+    >
       {kind === 'lines' ? (
         <Textarea rows={2} placeholder={placeholder} className={cn(PAPER, 'resize-none', textClass)} {...registered} />
       ) : (
@@ -79,7 +107,11 @@ function Failure({ why, onAgain }: { why: string; onAgain: () => void }) {
 export function FieldSign({ state }: { state: FieldState }) {
   return (
     <span role="status" className="text-xs text-bottle">
-      {state.kind === 'saved' ? <span className="fade-in">Saved</span> : state.kind === 'saving' ? <span className="text-ink-soft">Saving…</span> : null}
+      {state.kind === 'saved' ? (
+        <span className="fade-in">Saved</span>
+      ) : state.kind === 'saving' ? (
+        <span className="text-ink-soft">Saving…</span>
+      ) : null}
     </span>
   )
 }

@@ -39,9 +39,17 @@ export function DeliverableDialog({ deliverable, shootId, onClose }: Deliverable
       dueOn: deliverable?.dueOn ?? '',
     },
   })
-  const onError = (error: unknown) => setRefusal(showIssues(error, setError, ['title', 'count', 'orientation', 'use', 'dueOn']))
+  const onError = (error: unknown) =>
+    setRefusal(showIssues(error, setError, ['title', 'count', 'orientation', 'use', 'dueOn']))
   const handleValues = ({ dueOn, ...values }: Values) =>
-    change.mutate({ kind: 'deliverable', id: deliverable?.id ?? null, deliverable: { ...values, dueOn: dueOn === '' ? null : dueOn } }, { onSuccess: onClose, onError })
+    change.mutate(
+      {
+        kind: 'deliverable',
+        id: deliverable?.id ?? null,
+        deliverable: { ...values, dueOn: dueOn === '' ? null : dueOn },
+      },
+      { onSuccess: onClose, onError },
+    )
   return (
     <Dialog
       open
@@ -50,7 +58,14 @@ export function DeliverableDialog({ deliverable, shootId, onClose }: Deliverable
       footer={
         <>
           {deliverable && (
-            <Button variant="danger" className="mr-auto" busy={change.isPending} onClick={() => change.mutate({ kind: 'no-deliverable', id: deliverable.id }, { onSuccess: onClose, onError })}>
+            <Button
+              variant="danger"
+              className="mr-auto"
+              busy={change.isPending}
+              onClick={() =>
+                change.mutate({ kind: 'no-deliverable', id: deliverable.id }, { onSuccess: onClose, onError })
+              }
+            >
               Remove
             </Button>
           )}
@@ -61,11 +76,27 @@ export function DeliverableDialog({ deliverable, shootId, onClose }: Deliverable
         </>
       }
     >
-      <form id={formId} noValidate className="flex flex-col gap-4" onSubmit={(event) => void handleSubmit(handleValues)(event)}>
+      <form
+        id={formId}
+        noValidate
+        className="flex flex-col gap-4"
+        onSubmit={(event) => void handleSubmit(handleValues)(event)}
+      >
         <FormError>{refusal}</FormError>
         <div className="grid grid-cols-[5.5rem_minmax(0,1fr)] gap-3">
           <Field label="How many">
-            <Controller control={control} name="count" render={({ field }) => <NumberInput min={1} max={999} value={field.value} onChange={(count) => field.onChange(Math.round(count))} />} />
+            <Controller
+              control={control}
+              name="count"
+              render={({ field }) => (
+                <NumberInput
+                  min={1}
+                  max={999}
+                  value={field.value}
+                  onChange={(count) => field.onChange(Math.round(count))}
+                />
+              )}
+            />
           </Field>
           <Field label="What" error={formState.errors.title?.message}>
             <Input autoComplete="off" placeholder="Portrait of each character" {...register('title')} />
@@ -73,7 +104,17 @@ export function DeliverableDialog({ deliverable, shootId, onClose }: Deliverable
         </div>
         <div className="grid gap-3 sm:grid-cols-2">
           <Field label="How it is held">
-            <Controller control={control} name="orientation" render={({ field }) => <Select options={DELIVERABLE_ORIENTATIONS.map((value) => ({ value, label: value }))} value={field.value} onChange={field.onChange} />} />
+            <Controller
+              control={control}
+              name="orientation"
+              render={({ field }) => (
+                <Select
+                  options={DELIVERABLE_ORIENTATIONS.map((value) => ({ value, label: value }))}
+                  value={field.value}
+                  onChange={field.onChange}
+                />
+              )}
+            />
           </Field>
           <Field label="Due on" error={formState.errors.dueOn?.message}>
             <Input type="date" {...register('dueOn')} />

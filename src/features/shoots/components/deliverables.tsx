@@ -20,11 +20,17 @@ export function Deliverables({ deliverables, readOnly, shootId }: DeliverablesPr
         )}
       </div>
       {deliverables.length === 0 ? (
-        <p className="mt-2 border-t border-hair py-3 text-sm text-ink-soft">Nothing yet. {readOnly ? '' : 'Write down each picture or set of pictures the client gets.'}</p>
+        <p className="mt-2 border-t border-hair py-3 text-sm text-ink-soft">
+          Nothing yet. {readOnly ? '' : 'Write down each picture or set of pictures the client gets.'}
+        </p>
       ) : (
         <ul className="mt-2">
           {deliverables.map((deliverable) => {
-            const facts = [deliverable.orientation === 'any' ? '' : deliverable.orientation, deliverable.use, deliverable.dueOn === null ? '' : `by ${civilShort(deliverable.dueOn)}`].filter((fact) => fact !== '')
+            const facts = [
+              deliverable.orientation === 'any' ? '' : deliverable.orientation,
+              deliverable.use,
+              deliverable.dueOn === null ? '' : `by ${civilShort(deliverable.dueOn)}`,
+            ].filter((fact) => fact !== '')
             const row = (
               <>
                 <b className="w-10 flex-none text-right font-display text-2xl font-semibold">{deliverable.count}</b>
@@ -39,7 +45,12 @@ export function Deliverables({ deliverables, readOnly, shootId }: DeliverablesPr
                 {readOnly ? (
                   <div className="flex items-baseline gap-4 py-2">{row}</div>
                 ) : (
-                  <button type="button" className="flex w-full items-baseline gap-4 rounded-r py-2 text-left hover:bg-white" onClick={() => setEditing(deliverable)} aria-label={`Change: ${deliverable.count} × ${deliverable.title}`}>
+                  <button
+                    type="button"
+                    className="flex w-full items-baseline gap-4 rounded-r py-2 text-left hover:bg-white"
+                    onClick={() => setEditing(deliverable)}
+                    aria-label={`Change: ${deliverable.count} × ${deliverable.title}`}
+                  >
                     {row}
                   </button>
                 )}
@@ -48,7 +59,14 @@ export function Deliverables({ deliverables, readOnly, shootId }: DeliverablesPr
           })}
         </ul>
       )}
-      {editing && <DeliverableDialog key={editing === 'new' ? 'new' : editing.id} deliverable={editing === 'new' ? null : editing} shootId={shootId} onClose={() => setEditing(null)} />}
+      {editing && (
+        <DeliverableDialog
+          key={editing === 'new' ? 'new' : editing.id}
+          deliverable={editing === 'new' ? null : editing}
+          shootId={shootId}
+          onClose={() => setEditing(null)}
+        />
+      )}
     </section>
   )
 }

@@ -24,13 +24,18 @@ export function PastShoots({ shoots }: PastShootsProps) {
             <tr key={shoot.id} className="border-t border-hair-soft hover:bg-white">
               <td className="px-4 py-2.5 whitespace-nowrap">{shoot.date === null ? '' : civilShort(shoot.date)}</td>
               <td className="px-4 py-2.5 font-semibold">
-                <Link to={`/shoots/${shoot.id}`} className="underline-offset-2 hover:underline max-md:inline-flex max-md:min-h-11 max-md:items-center">
+                <Link
+                  to={`/shoots/${shoot.id}`}
+                  className="underline-offset-2 hover:underline max-md:inline-flex max-md:min-h-11 max-md:items-center"
+                >
                   {shoot.title}
                 </Link>
               </td>
               <td className="px-4 py-2.5 max-md:hidden">{shoot.place}</td>
               <td className="px-4 py-2.5 max-md:hidden">{shoot.shots}</td>
-              <td className="px-4 py-2.5">{shoot.readiness.find(({ section }) => section === 'day')?.why ?? nextStep(shoot.readiness)?.why}</td>
+              <td className="px-4 py-2.5">
+                {shoot.readiness.find(({ section }) => section === 'day')?.why ?? nextStep(shoot.readiness)?.why}
+              </td>
             </tr>
           ))}
         </tbody>

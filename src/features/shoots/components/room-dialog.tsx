@@ -43,7 +43,8 @@ export function RoomDialog({ room, shootId, onClose }: RoomDialogProps) {
     },
   })
   const { errors } = formState
-  const onError = (error: unknown) => setRefusal(showIssues(error, setError, ['name', 'widthM', 'depthM', 'ceilingM', 'power', 'windows', 'note']))
+  const onError = (error: unknown) =>
+    setRefusal(showIssues(error, setError, ['name', 'widthM', 'depthM', 'ceilingM', 'power', 'windows', 'note']))
   return (
     <Dialog
       open
@@ -52,7 +53,12 @@ export function RoomDialog({ room, shootId, onClose }: RoomDialogProps) {
       footer={
         <>
           {room && (
-            <Button variant="danger" className="mr-auto" busy={change.isPending} onClick={() => change.mutate({ kind: 'no-room', id: room.id }, { onSuccess: onClose, onError })}>
+            <Button
+              variant="danger"
+              className="mr-auto"
+              busy={change.isPending}
+              onClick={() => change.mutate({ kind: 'no-room', id: room.id }, { onSuccess: onClose, onError })}
+            >
               Remove
             </Button>
           )}
@@ -67,7 +73,11 @@ export function RoomDialog({ room, shootId, onClose }: RoomDialogProps) {
         id={formId}
         noValidate
         className="flex flex-col gap-4"
-        onSubmit={(event) => void handleSubmit((values) => change.mutate({ kind: 'room', id: room?.id ?? null, room: values }, { onSuccess: onClose, onError }))(event)}
+        onSubmit={(event) =>
+          void handleSubmit((values) =>
+            change.mutate({ kind: 'room', id: room?.id ?? null, room: values }, { onSuccess: onClose, onError }),
+          )(event)
+        }
       >
         <FormError>{refusal}</FormError>
         <Field label="Name" error={errors.name?.message}>
@@ -78,10 +88,18 @@ export function RoomDialog({ room, shootId, onClose }: RoomDialogProps) {
           <Metres control={control} name="depthM" label="Depth" max={200} />
           <Metres control={control} name="ceilingM" label="Ceiling" max={60} />
         </div>
-        <Field label="Power" hint="Sockets and breakers as the venue tells them; ask the venue, and leave mains work to licensed electricians." error={errors.power?.message}>
+        <Field
+          label="Power"
+          hint="Sockets and breakers as the venue tells them; ask the venue, and leave mains work to licensed electricians."
+          error={errors.power?.message}
+        >
           <Textarea rows={2} {...register('power')} />
         </Field>
-        <Field label="Windows" hint="Which way they look, how big, whether they can be covered." error={errors.windows?.message}>
+        <Field
+          label="Windows"
+          hint="Which way they look, how big, whether they can be covered."
+          error={errors.windows?.message}
+        >
           <Textarea rows={2} {...register('windows')} />
         </Field>
         <Field label="Note" error={errors.note?.message}>
@@ -92,10 +110,26 @@ export function RoomDialog({ room, shootId, onClose }: RoomDialogProps) {
   )
 }
 
-function Metres({ control, name, label, max }: { control: Control<Values>; name: 'widthM' | 'depthM' | 'ceilingM'; label: string; max: number }) {
+function Metres({
+  control,
+  name,
+  label,
+  max,
+}: {
+  control: Control<Values>
+  name: 'widthM' | 'depthM' | 'ceilingM'
+  label: string
+  max: number
+}) {
   return (
     <Field label={label}>
-      <Controller control={control} name={name} render={({ field }) => <NumberInput allowEmpty unit="m" min={0} max={max} step={0.1} value={field.value} onChange={field.onChange} />} />
+      <Controller
+        control={control}
+        name={name}
+        render={({ field }) => (
+          <NumberInput allowEmpty unit="m" min={0} max={max} step={0.1} value={field.value} onChange={field.onChange} />
+        )}
+      />
     </Field>
   )
 }

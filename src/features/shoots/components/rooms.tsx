@@ -9,7 +9,14 @@ const metres = (value: number) => `${value} m`
 
 /** Size and ceiling in one line, as far as they are known. */
 function sizeOf(room: Room): string {
-  const floor = room.widthM !== null && room.depthM !== null ? `${room.widthM} × ${metres(room.depthM)}` : room.widthM !== null ? `${metres(room.widthM)} wide` : room.depthM !== null ? `${metres(room.depthM)} deep` : ''
+  const floor =
+    room.widthM !== null && room.depthM !== null
+      ? `${room.widthM} × ${metres(room.depthM)}`
+      : room.widthM !== null
+        ? `${metres(room.widthM)} wide`
+        : room.depthM !== null
+          ? `${metres(room.depthM)} deep`
+          : ''
   const ceiling = room.ceilingM === null ? '' : `ceiling ${metres(room.ceilingM)}`
   return [floor, ceiling].filter((part) => part !== '').join(' · ')
 }
@@ -27,7 +34,9 @@ export function Rooms({ rooms, readOnly, shootId }: RoomsProps) {
         )}
       </div>
       {rooms.length === 0 ? (
-        <p className="mt-1 text-sm text-ink-soft">None yet. {readOnly ? '' : 'Size and ceiling decide which stands fit and where the light can go.'}</p>
+        <p className="mt-1 text-sm text-ink-soft">
+          None yet. {readOnly ? '' : 'Size and ceiling decide which stands fit and where the light can go.'}
+        </p>
       ) : (
         <ul className="mt-2">
           {rooms.map((room) => (
@@ -37,7 +46,12 @@ export function Rooms({ rooms, readOnly, shootId }: RoomsProps) {
                   <RoomFacts room={room} />
                 </div>
               ) : (
-                <button type="button" aria-label={`Change: ${room.name}`} className="block w-full rounded-r py-2 text-left hover:bg-white" onClick={() => setEditing(room)}>
+                <button
+                  type="button"
+                  aria-label={`Change: ${room.name}`}
+                  className="block w-full rounded-r py-2 text-left hover:bg-white"
+                  onClick={() => setEditing(room)}
+                >
                   <RoomFacts room={room} />
                 </button>
               )}
@@ -45,7 +59,14 @@ export function Rooms({ rooms, readOnly, shootId }: RoomsProps) {
           ))}
         </ul>
       )}
-      {editing && <RoomDialog key={editing === 'new' ? 'new' : editing.id} room={editing === 'new' ? null : editing} shootId={shootId} onClose={() => setEditing(null)} />}
+      {editing && (
+        <RoomDialog
+          key={editing === 'new' ? 'new' : editing.id}
+          room={editing === 'new' ? null : editing}
+          shootId={shootId}
+          onClose={() => setEditing(null)}
+        />
+      )}
     </section>
   )
 }

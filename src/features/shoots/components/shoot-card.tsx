@@ -7,13 +7,21 @@ import { roleName } from '#src/lib/role-words.ts'
 import { cn } from '#src/lib/cn.ts'
 import { Lamp, LampRow } from '#src/ui/lamp.tsx'
 
-export type ShootCardProps = { shoot: Card; /** Wider, with a larger first picture. */ lead: boolean; todayYear: string }
+export type ShootCardProps = {
+  shoot: Card
+  /** Wider, with a larger first picture. */ lead: boolean
+  todayYear: string
+}
 
 /** A shoot on the studio's wall: three pictures, the date, how ready it is, and what comes next. */
 export function ShootCard({ shoot, lead, todayYear }: ShootCardProps) {
   const next = nextStep(shoot.readiness)
   const date = shoot.date === null ? null : dateParts(shoot.date)
-  const facts = [shoot.place || 'No place yet', shoot.shots === 0 ? 'no shots yet' : `${shoot.shots} ${shoot.shots === 1 ? 'shot' : 'shots'}`, roleName(shoot.role).toLowerCase()]
+  const facts = [
+    shoot.place || 'No place yet',
+    shoot.shots === 0 ? 'no shots yet' : `${shoot.shots} ${shoot.shots === 1 ? 'shot' : 'shots'}`,
+    roleName(shoot.role).toLowerCase(),
+  ]
   return (
     <article className="group relative flex flex-col overflow-hidden rounded-r border border-hair bg-paper hover:border-edge">
       <CardPictures pictures={shoot.pictures} lead={lead} />
@@ -61,12 +69,20 @@ function CardPictures({ pictures, lead }: { pictures: Card['pictures']; lead: bo
       </div>
     )
   }
-  const columns = third !== undefined ? 'grid-cols-[2fr_1fr_1fr]' : second !== undefined ? 'grid-cols-[2fr_1fr]' : 'grid-cols-1'
+  const columns =
+    third !== undefined ? 'grid-cols-[2fr_1fr_1fr]' : second !== undefined ? 'grid-cols-[2fr_1fr]' : 'grid-cols-1'
   return (
     <div className={cn('grid h-44 gap-[3px] bg-surround p-[3px] md:h-63', columns)}>
       {[first, second, third].map((id, index) =>
         id === undefined ? null : (
-          <img key={id} src={pictureUrl(id, lead && index === 0 ? 960 : 320)} alt="" loading="lazy" decoding="async" className="size-full min-h-0 object-cover object-[50%_22%]" />
+          <img
+            key={id}
+            src={pictureUrl(id, lead && index === 0 ? 960 : 320)}
+            alt=""
+            loading="lazy"
+            decoding="async"
+            className="size-full min-h-0 object-cover object-[50%_22%]"
+          />
         ),
       )}
     </div>

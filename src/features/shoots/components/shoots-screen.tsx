@@ -34,8 +34,20 @@ export function ShootsScreen({ studios, today, nameStudio }: ShootsScreenProps) 
   return (
     <>
       <title>Shoots · Sconce</title>
-      <ScreenBar title="Shoots" actions={mayStart ? [{ label: 'Start a shoot', variant: 'primary', onPress: () => setIsStarting(true) }] : []}>
-        {data.shoots.length >= SEARCH_FROM && <Input type="search" aria-label="Search the shoots" placeholder="Search" value={sought} onChange={(event) => setSought(event.target.value)} className="!w-52 max-md:!w-full" />}
+      <ScreenBar
+        title="Shoots"
+        actions={mayStart ? [{ label: 'Start a shoot', variant: 'primary', onPress: () => setIsStarting(true) }] : []}
+      >
+        {data.shoots.length >= SEARCH_FROM && (
+          <Input
+            type="search"
+            aria-label="Search the shoots"
+            placeholder="Search"
+            value={sought}
+            onChange={(event) => setSought(event.target.value)}
+            className="!w-52 max-md:!w-full"
+          />
+        )}
       </ScreenBar>
       <div className="px-4 pt-4 pb-10 md:px-6 md:pt-1.5">
         {data.shoots.length === 0 &&
@@ -53,10 +65,15 @@ export function ShootsScreen({ studios, today, nameStudio }: ShootsScreenProps) 
           ) : (
             <>
               {nameStudio}
-              <p className="mx-auto mt-4 max-w-xl text-sm text-ink-soft">Were you invited to a shoot? Then you need no studio: open the link in your letter, or ask the photographer to send it again.</p>
+              <p className="mx-auto mt-4 max-w-xl text-sm text-ink-soft">
+                Were you invited to a shoot? Then you need no studio: open the link in your letter, or ask the
+                photographer to send it again.
+              </p>
             </>
           ))}
-        {data.shoots.length > 0 && found.length === 0 && <Empty title="No shoot fits">Nothing has “{sought}” in its title or place.</Empty>}
+        {data.shoots.length > 0 && found.length === 0 && (
+          <Empty title="No shoot fits">Nothing has “{sought}” in its title or place.</Empty>
+        )}
         {coming.length > 0 && (
           <div className="grid gap-4.5 md:grid-cols-2 xl:grid-cols-[1.35fr_1fr_1fr]">
             {coming.map((shoot, index) => (
@@ -66,7 +83,12 @@ export function ShootsScreen({ studios, today, nameStudio }: ShootsScreenProps) 
         )}
         {past.length > 0 && <PastShoots shoots={past} />}
       </div>
-      <StartShootDialog open={isStarting} onOpenChange={setIsStarting} studios={studios} onStarted={(id) => void navigate(`/shoots/${id}/brief`)} />
+      <StartShootDialog
+        open={isStarting}
+        onOpenChange={setIsStarting}
+        studios={studios}
+        onStarted={(id) => void navigate(`/shoots/${id}/brief`)}
+      />
     </>
   )
 }

@@ -29,7 +29,12 @@ export type StartShootDialogProps = {
 
 export function StartShootDialog({ open, onOpenChange, studios, onStarted }: StartShootDialogProps) {
   return (
-    <Dialog open={open} onOpenChange={onOpenChange} title="Start a shoot" description="A title is enough; everything else can wait for the brief.">
+    <Dialog
+      open={open}
+      onOpenChange={onOpenChange}
+      title="Start a shoot"
+      description="A title is enough; everything else can wait for the brief."
+    >
       <StartShootForm studios={studios} onStarted={onStarted} />
     </Dialog>
   )
@@ -45,8 +50,16 @@ function StartShootForm({ studios, onStarted }: Pick<StartShootDialogProps, 'stu
   const create = useCreateShoot()
   const handleValues = (values: Values) =>
     create.mutate(
-      { studioId: values.studioId, title: values.title, date: values.date === '' ? null : values.date, zone: values.zone },
-      { onSuccess: ({ id }) => onStarted(id), onError: (error) => setRefusal(showIssues(error, setError, ['title', 'date', 'zone'])) },
+      {
+        studioId: values.studioId,
+        title: values.title,
+        date: values.date === '' ? null : values.date,
+        zone: values.zone,
+      },
+      {
+        onSuccess: ({ id }) => onStarted(id),
+        onError: (error) => setRefusal(showIssues(error, setError, ['title', 'date', 'zone'])),
+      },
     )
   return (
     <form
@@ -63,7 +76,17 @@ function StartShootForm({ studios, onStarted }: Pick<StartShootDialogProps, 'stu
       </Field>
       {studios.length > 1 && (
         <Field label="Studio">
-          <Controller control={control} name="studioId" render={({ field }) => <Select options={studios.map(({ id, name }) => ({ value: id, label: name }))} value={field.value} onChange={field.onChange} />} />
+          <Controller
+            control={control}
+            name="studioId"
+            render={({ field }) => (
+              <Select
+                options={studios.map(({ id, name }) => ({ value: id, label: name }))}
+                value={field.value}
+                onChange={field.onChange}
+              />
+            )}
+          />
         </Field>
       )}
       <div className="grid gap-4 sm:grid-cols-2">
@@ -71,7 +94,17 @@ function StartShootForm({ studios, onStarted }: Pick<StartShootDialogProps, 'stu
           <Input type="date" {...register('date')} />
         </Field>
         <Field label="Time zone" hint="Where the shoot happens." error={formState.errors.zone?.message}>
-          <Controller control={control} name="zone" render={({ field }) => <Select options={zones(zone).map((name) => ({ value: name, label: name.replaceAll('_', ' ') }))} value={field.value} onChange={field.onChange} />} />
+          <Controller
+            control={control}
+            name="zone"
+            render={({ field }) => (
+              <Select
+                options={zones(zone).map((name) => ({ value: name, label: name.replaceAll('_', ' ') }))}
+                value={field.value}
+                onChange={field.onChange}
+              />
+            )}
+          />
         </Field>
       </div>
       <div className="flex justify-end pt-1">

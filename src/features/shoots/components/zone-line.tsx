@@ -19,7 +19,11 @@ export function ZoneLine({ form, readOnly }: ZoneLineProps) {
   }
   const state = form.stateOf('zone')
   return (
-    <Field label="Time zone" aside={<FieldSign state={state} />} error={state.kind === 'failed' ? state.why : undefined}>
+    <Field
+      label="Time zone"
+      aside={<FieldSign state={state} />}
+      error={state.kind === 'failed' ? state.why : undefined}
+    >
       <Select
         className="!rounded-none !border-0 !border-b !border-edge !bg-transparent !pl-0"
         options={zones(zone).map((name) => ({ value: name, label: name.replaceAll('_', ' ') }))}

@@ -23,7 +23,12 @@ export type InviteToStudioProps = {
 
 export function InviteToStudio({ open, onOpenChange, invite }: InviteToStudioProps) {
   return (
-    <Dialog open={open} onOpenChange={onOpenChange} title="Invite somebody to the studio" description="They get a letter with a link that works for seven days.">
+    <Dialog
+      open={open}
+      onOpenChange={onOpenChange}
+      title="Invite somebody to the studio"
+      description="They get a letter with a link that works for seven days."
+    >
       <InviteForm invite={invite} onSent={() => onOpenChange(false)} />
     </Dialog>
   )
@@ -31,10 +36,12 @@ export function InviteToStudio({ open, onOpenChange, invite }: InviteToStudioPro
 
 function InviteForm({ invite, onSent }: { invite: InviteToStudioProps['invite']; onSent: () => void }) {
   const [refusal, setRefusal] = useState<string | null>(null)
-  const { register, control, handleSubmit, setError, formState } = useForm<z.infer<typeof studioInvitationInputSchema>>({
-    resolver: zodResolver(studioInvitationInputSchema),
-    defaultValues: { email: '', role: 'member' },
-  })
+  const { register, control, handleSubmit, setError, formState } = useForm<z.infer<typeof studioInvitationInputSchema>>(
+    {
+      resolver: zodResolver(studioInvitationInputSchema),
+      defaultValues: { email: '', role: 'member' },
+    },
+  )
   const role = useWatch({ control, name: 'role' })
   return (
     <form
@@ -61,7 +68,17 @@ function InviteForm({ invite, onSent }: { invite: InviteToStudioProps['invite'];
         <Input type="email" autoComplete="off" inputMode="email" autoCapitalize="none" {...register('email')} />
       </Field>
       <Field label="As" hint={STUDIO_ROLE_LINES[role]}>
-        <Controller control={control} name="role" render={({ field }) => <Select options={STUDIO_ROLES.map((value) => ({ value, label: roleName(value) }))} value={field.value} onChange={field.onChange} />} />
+        <Controller
+          control={control}
+          name="role"
+          render={({ field }) => (
+            <Select
+              options={STUDIO_ROLES.map((value) => ({ value, label: roleName(value) }))}
+              value={field.value}
+              onChange={field.onChange}
+            />
+          )}
+        />
       </Field>
       <div className="flex justify-end">
         <Button type="submit" variant="primary" busy={invite.isPending}>

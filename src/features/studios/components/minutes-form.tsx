@@ -40,7 +40,10 @@ export function MinutesForm({ studioId, mayChange }: MinutesFormProps) {
   const set = useSetMinutes(studioId)
   return (
     <div className="grid max-w-5xl items-start gap-6 lg:grid-cols-2">
-      <p className="max-w-3xl text-sm text-ink-soft lg:col-span-2">How long your people take. Every changeover and running order is counted with these minutes; until you change one it is an assumption.</p>
+      <p className="max-w-3xl text-sm text-ink-soft lg:col-span-2">
+        How long your people take. Every changeover and running order is counted with these minutes; until you change
+        one it is an assumption.
+      </p>
       {GROUPS.map((group) => (
         <section key={group.title} className="rounded-r border border-hair bg-paper">
           <h2 className="px-4 pt-3 pb-2 text-lg">{group.title}</h2>
@@ -52,9 +55,21 @@ export function MinutesForm({ studioId, mayChange }: MinutesFormProps) {
                 <li key={key} className="flex items-center gap-3 border-t border-hair-soft px-4 py-2">
                   <label htmlFor={`minutes-${key}`} className="min-w-0 flex-1">
                     {words}
-                    <span className="block text-xs text-ink-soft">{isDefault ? 'common practice, no source' : `yours (common practice: ${DEFAULT_MINUTES[key]})`}</span>
+                    <span className="block text-xs text-ink-soft">
+                      {isDefault ? 'common practice, no source' : `yours (common practice: ${DEFAULT_MINUTES[key]})`}
+                    </span>
                   </label>
-                  <NumberInput id={`minutes-${key}`} className="w-26 flex-none" unit="min" min={0} max={240} step={0.5} value={value} readOnly={!mayChange} onChange={(next) => set.mutate({ ...data.minutes, [key]: next })} />
+                  <NumberInput
+                    id={`minutes-${key}`}
+                    className="w-26 flex-none"
+                    unit="min"
+                    min={0}
+                    max={240}
+                    step={0.5}
+                    value={value}
+                    readOnly={!mayChange}
+                    onChange={(next) => set.mutate({ ...data.minutes, [key]: next })}
+                  />
                 </li>
               )
             })}

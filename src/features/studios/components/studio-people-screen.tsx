@@ -27,7 +27,13 @@ export function StudioPeopleScreen({ studioId, name, role, userId }: StudioPeopl
   return (
     <>
       <title>{`People · ${name} · Sconce`}</title>
-      <ScreenBar title="People" sub={`${count(data.people.length, 'person', 'people')} in ${name}`} actions={mayChange ? [{ label: 'Invite somebody', variant: 'primary', onPress: () => setIsInviting(true) }] : []} />
+      <ScreenBar
+        title="People"
+        sub={`${count(data.people.length, 'person', 'people')} in ${name}`}
+        actions={
+          mayChange ? [{ label: 'Invite somebody', variant: 'primary', onPress: () => setIsInviting(true) }] : []
+        }
+      />
       <div className="flex max-w-4xl flex-col gap-5 px-4 pt-4 pb-10 md:px-6 md:pt-1">
         <ul className="divide-y divide-hair-soft rounded-r border border-hair bg-paper">
           {data.people.map((person) => (
@@ -40,7 +46,13 @@ export function StudioPeopleScreen({ studioId, name, role, userId }: StudioPeopl
               </div>
               {mayChange && person.userId !== userId ? (
                 <>
-                  <Select aria-label={`Role of ${person.name}`} className="!w-36" options={STUDIO_ROLES.map((value) => ({ value, label: roleName(value) }))} value={person.role} onChange={(next) => change.mutate({ kind: 'role', userId: person.userId, role: next })} />
+                  <Select
+                    aria-label={`Role of ${person.name}`}
+                    className="!w-36"
+                    options={STUDIO_ROLES.map((value) => ({ value, label: roleName(value) }))}
+                    value={person.role}
+                    onChange={(next) => change.mutate({ kind: 'role', userId: person.userId, role: next })}
+                  />
                   <Button variant="quiet" onClick={() => setRemoving(person)}>
                     Remove
                   </Button>
@@ -62,7 +74,10 @@ export function StudioPeopleScreen({ studioId, name, role, userId }: StudioPeopl
                     {roleName(invitation.role)} · until {shortInstant(invitation.expiresAtMs)}
                   </span>
                   {mayChange && (
-                    <Button variant="quiet" onClick={() => change.mutate({ kind: 'withdraw', invitationId: invitation.id })}>
+                    <Button
+                      variant="quiet"
+                      onClick={() => change.mutate({ kind: 'withdraw', invitationId: invitation.id })}
+                    >
                       Withdraw
                     </Button>
                   )}
@@ -79,7 +94,10 @@ export function StudioPeopleScreen({ studioId, name, role, userId }: StudioPeopl
             </div>
           ))}
         </dl>
-        <p className="text-sm text-ink-soft">Belonging to the studio gives nobody a look inside a shoot: people are invited into each shoot by its photographer.</p>
+        <p className="text-sm text-ink-soft">
+          Belonging to the studio gives nobody a look inside a shoot: people are invited into each shoot by its
+          photographer.
+        </p>
       </div>
       <InviteToStudio open={isInviting} onOpenChange={setIsInviting} invite={change} />
       <Confirm

@@ -6,20 +6,49 @@ import { lookSchema } from '#shared/domain/looks/schema.ts'
 import { DEFAULT_MINUTES } from '#shared/domain/plan/minutes.ts'
 import { type ReadPlanInput, readPlan } from '#shared/domain/plan/read-plan.ts'
 import { daySchema, shotPlanSchema } from '#shared/domain/plan/schema.ts'
-import { type Readiness, type ReadinessInput, type Section, nextStep, readinessOf } from '#shared/domain/shoots/readiness.ts'
+import {
+  type Readiness,
+  type ReadinessInput,
+  type Section,
+  nextStep,
+  readinessOf,
+} from '#shared/domain/shoots/readiness.ts'
 import { type Brief, briefSchema } from '#shared/domain/shoots/schema.ts'
 
 const id = (n: number) => `00000000-0000-4000-8000-${String(n).padStart(12, '0')}`
-const [DAY, SHOT, SECOND, LOOK, SETUP, SITTER, UPLOAD, FRAME] = [1, 2, 3, 4, 5, 6, 7, 8].map(id) as [string, string, string, string, string, string, string, string]
+const [DAY, SHOT, SECOND, LOOK, SETUP, SITTER, UPLOAD, FRAME] = [1, 2, 3, 4, 5, 6, 7, 8].map(id) as [
+  string,
+  string,
+  string,
+  string,
+  string,
+  string,
+  string,
+  string,
+]
 
 const assumed = (value: number) => ({ value, from: 'assumed' as const })
 const unit = {
   kitId: id(20),
   version: 1,
   name: 'Small flash',
-  numbers: { guideNumberM: assumed(58), flashColourK: assumed(5600), fullPops: assumed(150), fullRecycleS: assumed(3.5), massKg: assumed(0.5) },
+  numbers: {
+    guideNumberM: assumed(58),
+    flashColourK: assumed(5600),
+    fullPops: assumed(150),
+    fullRecycleS: assumed(3.5),
+    massKg: assumed(0.5),
+  },
 }
-const aMain = lightSchema.parse({ id: id(9), setupId: SETUP, purpose: 'main', unit, power: 0.25, at: [-1, 2, 1], aim: [0, 1.5, 0] })
+const aMain = lightSchema.parse({
+  id: id(9),
+  setupId: SETUP,
+  purpose: 'main',
+  unit,
+  power: 0.25,
+  at: [-1, 2, 1],
+  aim: [0, 1.5, 0],
+})
 const aSetup = setupSchema.parse({
   id: SETUP,
   name: 'Window side',
@@ -29,7 +58,12 @@ const aSetup = setupSchema.parse({
 const aLook = lookSchema.parse({ id: LOOK, sitterId: SITTER, name: 'Night coat' })
 const aDay = daySchema.parse({ id: DAY, hardOutMin: 990 })
 const aShot = shotSchema.parse({ id: SHOT, title: 'At the eyepiece', place: [DAY, 'a0'], lookIds: [LOOK] })
-const aFrame = frameSchema.parse({ id: FRAME, box: [0, 0, 100, 100], picture: { uploadId: UPLOAD, state: 'stored', widthPx: 10, heightPx: 10 }, lookId: LOOK })
+const aFrame = frameSchema.parse({
+  id: FRAME,
+  box: [0, 0, 100, 100],
+  picture: { uploadId: UPLOAD, state: 'stored', widthPx: 10, heightPx: 10 },
+  lookId: LOOK,
+})
 
 const fullBrief = briefSchema.parse({
   title: 'Leaf, Brass & Star',
@@ -41,11 +75,23 @@ const fullBrief = briefSchema.parse({
   rooms: [],
   deliverables: [{ id: id(30), title: 'Portraits', count: 3 }],
 })
-const emptyBrief = briefSchema.parse({ title: 'Thaw', zone: 'Europe/London', location: {}, rooms: [], deliverables: [] })
+const emptyBrief = briefSchema.parse({
+  title: 'Thaw',
+  zone: 'Europe/London',
+  location: {},
+  rooms: [],
+  deliverables: [],
+})
 
 const byId = <Item extends { id: string }>(...items: Item[]) => new Map(items.map((item) => [String(item.id), item]))
 
-type Parts = Partial<Omit<ReadinessInput, 'plan'>> & { brief?: Brief; board?: Partial<ReadPlanInput['board']>; plan?: Partial<ReadPlanInput['plan']>; looks?: Partial<ReadPlanInput['looks']>; lighting?: Partial<ReadPlanInput['lighting']> }
+type Parts = Partial<Omit<ReadinessInput, 'plan'>> & {
+  brief?: Brief
+  board?: Partial<ReadPlanInput['board']>
+  plan?: Partial<ReadPlanInput['plan']>
+  looks?: Partial<ReadPlanInput['looks']>
+  lighting?: Partial<ReadPlanInput['lighting']>
+}
 
 /** A shoot in which everything is ready, except what the parts say. */
 function shoot(parts: Parts = {}): Readiness[] {
@@ -56,7 +102,14 @@ function shoot(parts: Parts = {}): Readiness[] {
       brief: parts.brief ?? fullBrief,
       minutes: DEFAULT_MINUTES,
       board: { frames, shots: byId(aShot), ...parts.board },
-      plan: { days: byId(aDay), sets: none, moves: none, shotPlans: byId(shotPlanSchema.parse({ id: SHOT, setupId: SETUP, frames: 40 })), rules: none, ...parts.plan },
+      plan: {
+        days: byId(aDay),
+        sets: none,
+        moves: none,
+        shotPlans: byId(shotPlanSchema.parse({ id: SHOT, setupId: SETUP, frames: 40 })),
+        rules: none,
+        ...parts.plan,
+      },
       looks: { sitters: none, looks: byId(aLook), pieces: none, ...parts.looks },
       lighting: { setups: byId(aSetup), lights: byId(aMain), sitterPlaces: none, props: none, ...parts.lighting },
     }),
@@ -91,7 +144,14 @@ const nothing: Parts = {
 // What makes each lamp lit: the product's own rules, section by section.
 describe('readinessOf', () => {
   it('lights every lamp of a shoot that is ready, in working order', () => {
-    expect(shoot().map(({ section, lamp }) => `${section} ${lamp}`)).toEqual(['brief lit', 'board lit', 'looks lit', 'lighting lit', 'order lit', 'day lit'])
+    expect(shoot().map(({ section, lamp }) => `${section} ${lamp}`)).toEqual([
+      'brief lit',
+      'board lit',
+      'looks lit',
+      'lighting lit',
+      'order lit',
+      'day lit',
+    ])
   })
 
   it('lights none of a shoot with nothing in it, and says what to begin with', () => {
@@ -115,7 +175,9 @@ describe('readinessOf', () => {
   })
 
   it('half lights a board without a picture for a look', () => {
-    expect(of('board', { frames: byId({ ...aFrame, lookId: null }) })).toBe('half: No picture on the board for “Night coat”')
+    expect(of('board', { frames: byId({ ...aFrame, lookId: null }) })).toBe(
+      'half: No picture on the board for “Night coat”',
+    )
   })
 
   it.each([
@@ -132,7 +194,9 @@ describe('readinessOf', () => {
   })
 
   it('half lights a setup without a main', () => {
-    expect(of('lighting', { lighting: { lights: byId({ ...aMain, purpose: 'rim' as const }) } })).toBe('half: “Window side” has no main')
+    expect(of('lighting', { lighting: { lights: byId({ ...aMain, purpose: 'rim' as const }) } })).toBe(
+      'half: “Window side” has no main',
+    )
   })
 
   it('half lights a setup with a red caution, judged as its shots use it', () => {
@@ -161,14 +225,18 @@ describe('readinessOf', () => {
 
   it('half lights an order that leaves a must-have shot out', () => {
     const loose = shotSchema.parse({ id: SECOND, title: 'The toast', place: ['loose', 'a0'] })
-    expect(of('order', { board: { shots: byId(aShot, loose) } })).toBe('half: “The toast” must be made and is in no day')
+    expect(of('order', { board: { shots: byId(aShot, loose) } })).toBe(
+      'half: “The toast” must be made and is in no day',
+    )
     expect(of('order', { board: { shots: byId(aShot, { ...loose, need: 'could' as const }) } })).toMatch(/^lit/)
   })
 
   it('counts the must-have shots that are got', () => {
     const second = shotSchema.parse({ id: SECOND, title: 'The toast', place: [DAY, 'a1'] })
     expect(of('day', { board: { shots: byId(aShot, second) } })).toBe('half: 1 of 2 must-have shots got')
-    expect(of('day', { board: { shots: byId(aShot, { ...second, need: 'should' as const }) } })).toBe('lit: Every must-have shot is got')
+    expect(of('day', { board: { shots: byId(aShot, { ...second, need: 'should' as const }) } })).toBe(
+      'lit: Every must-have shot is got',
+    )
   })
 })
 

@@ -41,7 +41,10 @@ describe('changeOf', () => {
   })
 
   it('reads the deadline on the clock of the shoot', () => {
-    expect(changeOf('signOffBy', '2027-12-08T18:00', brief)).toEqual({ kind: 'brief', patch: { signOffByMs: Date.parse('2027-12-08T18:00Z') } })
+    expect(changeOf('signOffBy', '2027-12-08T18:00', brief)).toEqual({
+      kind: 'brief',
+      patch: { signOffByMs: Date.parse('2027-12-08T18:00Z') },
+    })
   })
 
   it('takes an emptied date away', () => {

@@ -9,6 +9,8 @@ export default defineConfig({
   timeout: 60_000,
   expect: { timeout: 10_000 },
   use: {
+    actionTimeout: 15_000,
+    navigationTimeout: 20_000,
     // Set by the global setup before the workers read this file.
     baseURL: process.env['SCONCE_E2E_URL'] ?? 'http://localhost',
     trace: 'retain-on-failure',

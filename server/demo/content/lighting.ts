@@ -69,7 +69,7 @@ export function demoLighting(id: NamedIds, kit: readonly KitItem[], random: () =
     { zM: -2.6, widthM: 6, heightM: 2.9, colour: '#8a6f56', what: 'Clock wall, ochre lime plaster' },
     [
       { purpose: 'main', group: 'A', unit: 'Battery head 200 Ws', modifier: '90 cm octa', support: '2.4 m stand', power: 1 / 4, at: [-1.25, 1.95, 1.15], aim: [0, 1.35, 0] },
-      { purpose: 'rim', group: 'B', unit: 'Small flash, guide number 58', modifier: 'Strip 30 × 120 cm', support: '2.4 m stand', power: 1 / 32, at: [1.75, 1.9, -1.1], aim: [0, 1.4, 0] },
+      { purpose: 'rim', group: 'B', unit: 'Small flash, guide number 58', modifier: 'Strip 30 × 120 cm', support: '2.4 m stand', power: 1 / 8, at: [2.0, 1.9, -1.1], aim: [0, 1.4, 0] },
     ], 'Soft and even enough to turn the head; the panel lifts the far cheek.')
   setup('setup-close', 'Octa close, brass edge', 'a1',
     { at: [0.1, 1.3, 2.6], focalMm: 85, fNumber: F5_6 },
@@ -82,7 +82,7 @@ export function demoLighting(id: NamedIds, kit: readonly KitItem[], random: () =
     { at: [-0.1, 1.4, 3.1], focalMm: 85, fNumber: F5_6 },
     { zM: -2.8, widthM: 7, heightM: 3.2, colour: '#6b7076', what: 'Dome drum, grey distemper' },
     [
-      { purpose: 'main', group: 'A', unit: 'Battery head 200 Ws', modifier: '60 cm softbox', support: '2.4 m stand', power: 1 / 4, at: [1.5, 1.9, 0.6], aim: [0, 1.4, 0] },
+      { purpose: 'main', group: 'A', unit: 'Battery head 200 Ws', modifier: '60 cm softbox', support: '2.4 m stand', power: 1 / 8, at: [1.5, 1.9, 0.6], aim: [0, 1.4, 0] },
       { purpose: 'rim', group: 'B', unit: 'Small flash, guide number 58', modifier: '10° grid', support: '2.4 m stand', power: 1 / 32, at: [-1.3, 2, -0.9], aim: [0, 1.45, 0], zoomMm: 105 },
       { purpose: 'background', group: 'C', unit: 'Small flash, guide number 58', gels: ['Full blue −131'], support: 'Floor stand', power: 1 / 8, at: [-1.2, 0.4, -1.4], aim: [0.2, 1.6, -2.8], zoomMm: 28, note: 'Low, behind the pier.' },
     ], 'The softbox stands where a window would.')
@@ -90,8 +90,8 @@ export function demoLighting(id: NamedIds, kit: readonly KitItem[], random: () =
     { at: [0, 1.4, 4.6], focalMm: 50, fNumber: F8 },
     { zM: -2.8, widthM: 7, heightM: 3.2, colour: '#6b7076', what: 'Dome drum, grey distemper' },
     [
-      { purpose: 'main', group: 'A', unit: 'Battery head 400 Ws', modifier: 'White umbrella 110 cm', support: '3.3 m stand', power: 1 / 2, at: [-0.9, 2.3, 2.6], aim: [0, 1.2, 0] },
-      { purpose: 'rim', group: 'B', unit: 'Battery head 200 Ws', modifier: 'Strip 30 × 120 cm', support: '3.3 m stand', power: 1 / 8, at: [2.9, 2, -1.2], aim: [0, 1.3, 0] },
+      { purpose: 'main', group: 'A', unit: 'Battery head 400 Ws', modifier: 'White umbrella 110 cm', support: '3.3 m stand', power: 1 / 2, at: [-1.7, 2.3, 2.9], aim: [0, 1.2, 0] },
+      { purpose: 'rim', group: 'B', unit: 'Battery head 200 Ws', modifier: 'Strip 30 × 120 cm', support: '3.3 m stand', power: 1 / 2, at: [3.3, 2, -1.2], aim: [0, 1.3, 0] },
       { purpose: 'background', group: 'C', unit: 'Small flash, guide number 58', support: 'Floor stand', power: 1 / 16, at: [0, 0.5, -1.6], aim: [0, 1.6, -2.8], zoomMm: 24 },
     ], 'Room for three and for a raised cup.')
 
@@ -105,7 +105,7 @@ export function demoLighting(id: NamedIds, kit: readonly KitItem[], random: () =
     { id: id('place-broad-3'), setupId: id('setup-broad'), sitterId: id('botanist'), at: [0.6, 0.1], eyeHeightM: 1.56 },
   ], random)
   putItems(doc, props, [
-    { id: id('panel-octa'), setupId: id('setup-octa'), kind: 'panel', name: 'White panel 1 × 1.5 m', at: [1.25, 0.95, 0.8], turnDeg: -55, widthM: 1, heightM: 1.5, colour: '#ffffff' },
+    { id: id('panel-octa'), setupId: id('setup-octa'), kind: 'panel', name: 'White panel 1 × 1.5 m', at: [1.25, 0.95, 0.8], turnDeg: 57, widthM: 1, heightM: 1.5, colour: '#ffffff' },
     { id: id('globe-window'), setupId: id('setup-window'), kind: 'prop', name: 'Brass armillary', at: [0.7, 1.1, -0.2], turnDeg: 0, widthM: 0.5, heightM: 0.7, colour: '#8e6a22' },
     { id: id('table-broad'), setupId: id('setup-broad'), kind: 'prop', name: 'Tea table', at: [0, 0.7, 0.6], turnDeg: 0, widthM: 1.2, heightM: 0.7, colour: '#5d3f23' },
   ], random)

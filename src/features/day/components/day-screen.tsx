@@ -65,6 +65,11 @@ function TheDay({ day, userName }: { day: ShownDay; userName: string }) {
     const words = { got: 'got', skipped: 'skipped', 'under way': 'begun', waiting: 'back to waiting' }[state]
     toast.say(`Shot ${shotOf(id)?.number ?? ''} ${words}.`, { label: 'Undo', onPress: () => write.setState(id, before) })
   }
+  const setFromList = (id: ShotId, state: ShotState) => {
+    setState(id, state)
+    // Begun from the list: what changes for it is what one wants to see.
+    if (state === 'under way') setAsked(null)
+  }
   const from = current?.changeover.fromShotId
   const list = (
     <ShotList
@@ -72,7 +77,7 @@ function TheDay({ day, userName }: { day: ShownDay; userName: string }) {
       currentId={current?.shotId ?? null}
       shotOf={shotOf}
       noteOf={(id) => dayShots.get(id)?.frames ?? ''}
-      onState={mayWrite ? setState : undefined}
+      onState={mayWrite ? setFromList : undefined}
     />
   )
   return (

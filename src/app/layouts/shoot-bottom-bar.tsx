@@ -6,6 +6,7 @@ import { Sheet } from '#src/ui/sheet.tsx'
 import type { SectionLink, Sections } from '../sections.ts'
 import { BottomBar, BottomLink, SpineLink } from './frame.tsx'
 import { HereNow } from './here-now.tsx'
+import { NotShown } from './not-shown.tsx'
 import { SaveStrip } from './save-sign.tsx'
 
 export type ShootBottomBarProps = {
@@ -26,6 +27,7 @@ export function ShootBottomBar({ root, sections, lamps, title, where }: ShootBot
   const inMore = ![...sections.onPhone].some((link) => pathname.startsWith(`${root}/${link.path}`))
   return (
     <div>
+      <NotShown className="bg-night-2 px-[18px] py-2 text-[0.8125rem] leading-tight" />
       <SaveStrip />
       <BottomBar label="Shoot">
         {sections.onPhone.map((link) => {

@@ -13,6 +13,7 @@ import { useSession } from '../session.ts'
 import { useReadiness } from '../use-readiness.ts'
 import { Frame, Spine, SpineLink } from './frame.tsx'
 import { HereNow } from './here-now.tsx'
+import { NotShown } from './not-shown.tsx'
 import { SaveSign } from './save-sign.tsx'
 import { ShootBottomBar } from './shoot-bottom-bar.tsx'
 import { useSayWhere } from './use-say-where.ts'
@@ -66,6 +67,7 @@ function OpenShoot() {
           }
           foot={
             <div className="flex flex-col gap-3">
+              <NotShown className="text-xs leading-tight" />
               <SaveSign tone="night" />
               <HereNow />
             </div>

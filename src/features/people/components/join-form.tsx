@@ -63,8 +63,8 @@ export function JoinForm({ token, invitation, signedInAs, onJoined }: JoinFormPr
       </div>
       {signedInAs !== null && signedInAs.toLowerCase() !== invitation.email.toLowerCase() && (
         <Caution>
-          You are signed in as {signedInAs}. The invitation is for {invitation.email}; joining signs you in with that
-          address.
+          You are signed in as {signedInAs}, and the invitation is for {invitation.email}. Sign out first, then open the
+          letter again.
         </Caution>
       )}
       <FormError>{refusal}</FormError>

@@ -86,7 +86,15 @@ export function ShootRealtime({ shoot, userId, children, waiting }: ShootRealtim
   )
 }
 
-function WhenReady({ documents, waiting, children }: { documents: ShootDocuments; waiting: ReactNode; children: ReactNode }) {
+function WhenReady({
+  documents,
+  waiting,
+  children,
+}: {
+  documents: ShootDocuments
+  waiting: ReactNode
+  children: ReactNode
+}) {
   const ready = useSyncExternalStore(
     (listener) => subscribeAll(documents, (document) => document.ready.subscribe(listener)),
     () => DOCUMENT_KINDS.every((kind) => documents[kind].ready.get()),

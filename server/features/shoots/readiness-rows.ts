@@ -36,7 +36,7 @@ export async function loadReadiness(
     frames,
     signOffs,
     dayShots: happened,
-    redCautions: (setup) => redCautions(setup),
+    redCautions,
     schedule: (dayId) => {
       const problem = orderProblem(plan, dayId)
       const { broken, wrapMin } = schedule(

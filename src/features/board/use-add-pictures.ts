@@ -75,7 +75,10 @@ export function useAddPictures(): AddPictures {
       if (!first) return
       select(control.state, pinned)
       focusItem(control, first)
-      announce(control, pinned.length === 1 ? 'One picture pinned' : `${pinned.length} pictures pinned`)
+      const words = pinned.length === 1 ? 'One picture pinned' : `${pinned.length} pictures pinned`
+      announce(control, words)
+      // Where no wall is shown, the new print may be out of sight.
+      if (control.state.viewport.get().widthPx === 0) toast.say(`${words}.`)
     },
     [control, add],
   )

@@ -38,7 +38,9 @@ export function PhoneBoard({ items, mayWrite, undo }: PhoneBoardProps) {
   const [view, setView] = useState<PhoneView>('areas')
   const [searching, setSearching] = useState(false)
   const [detail, setDetail] = useState(false)
-  const { title } = useInspected(items)
+  const { title, entries } = useInspected(items)
+  // What was open has been removed.
+  if (detail && entries.length === 0) setDetail(false)
   const openFiles = () => inputs.files.current?.click()
 
   const makeThing = (kind: 'note' | 'tag') => {

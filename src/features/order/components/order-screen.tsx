@@ -35,6 +35,7 @@ export function OrderScreen() {
   const { plan, shown, choose } = useOrderDay()
   const writer = useOrderWriter()
   const asked = useProposal()
+  const isPhone = useIsPhone()
   const [openShotId, setOpenShotId] = useState<string | null>(null)
   const [opened, setOpened] = useState<Opened>(null)
   useUndoKeys(writer.undo)
@@ -51,6 +52,12 @@ export function OrderScreen() {
     ...(writer.mayBoard && list ? [{ label: 'Add a shot', variant: 'quiet' as const, onPress: () => setOpened('add') }] : []),
     { label: 'Sets and rooms', variant: 'quiet', onPress: () => setOpened('sets') },
     ...(shown ? [{ label: 'Day', onPress: () => setOpened('day') }] : []),
+    ...(isPhone && writer.mayBoard
+      ? [
+          { label: 'Undo', disabled: !writer.undo.canUndo, onPress: writer.undo.undo },
+          { label: 'Redo', disabled: !writer.undo.canRedo, onPress: writer.undo.redo },
+        ]
+      : []),
     ...(writer.mayBoard && shown && shown.planned.shots.length > 1
       ? [
           {
@@ -75,9 +82,7 @@ export function OrderScreen() {
 
   return (
     <div className="flex min-h-full flex-col md:h-full">
-      <ScreenBar title="Running order" sub={shown && <Sub shown={shown} />} actions={actions}>
-        {writer.mayBoard && <UndoButtons writer={writer} />}
-      </ScreenBar>
+      <ScreenBar title="Running order" sub={shown && <Sub shown={shown} />} actions={actions} {...(writer.mayBoard && !isPhone ? { children: <UndoButtons writer={writer} /> } : {})} />
       <div className="flex min-h-0 flex-1">
         <div className="min-w-0 flex-1 overflow-x-hidden md:overflow-y-auto">
           <div className="flex flex-col gap-4 px-3 pt-3 pb-8 md:px-6 md:pt-0">

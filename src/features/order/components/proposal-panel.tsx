@@ -84,7 +84,7 @@ function Found({ asked, problem, present, proposal, thinking, isStale, onUse, on
     </>
   )
   return (
-    <Panel title={title} onClose={asked.close} {...(thinking === null ? { footer } : {})}>
+    <Panel title={title} onClose={asked.close} footer={thinking === null ? footer : <Thinking share={thinking} onCancel={asked.close} onStop={better ? asked.stop : null} />}>
       <p className=" text-xs text-ink-soft">{keptWords(problem, comparison)}</p>
       {isStale && (
         <Caution title="The plan has changed since this was worked out">
@@ -100,13 +100,11 @@ function Found({ asked, problem, present, proposal, thinking, isStale, onUse, on
       ) : (
         <SideBySide problem={problem} before={before} after={after} comparison={comparison} />
       )}
-      {thinking === null ? (
+      {thinking === null && (
         <>
           <Broken proposal={proposal} problem={problem} comparison={comparison} onOpenShot={onOpenShot} onOpenDay={onOpenDay} />
           <p className="text-xs text-ink-soft">{provenWords(proposal)}</p>
         </>
-      ) : (
-        <Thinking share={thinking} onCancel={asked.close} onStop={better ? asked.stop : null} />
       )}
     </Panel>
   )
@@ -126,7 +124,7 @@ function SideBySide({ problem, before, after, comparison }: SideBySideProps) {
         <span className="label-small">Proposed</span>
         <span className="font-display text-3xl font-semibold">{whole(comparison.present.changingMin)}</span>
         <span />
-        <span className="font-display text-3xl font-semibold text-bottle">{whole(comparison.proposed.changingMin)}</span>
+        <span className={cn('font-display text-3xl font-semibold', comparison.proposed.changingMin < comparison.present.changingMin && 'text-bottle')}>{whole(comparison.proposed.changingMin)}</span>
         <span className="col-span-3 pt-1 text-xs text-ink-soft">minutes spent changing over, the first rigging included</span>
       </div>
       <div className="grid grid-cols-[1fr_1fr] gap-x-8">
@@ -140,7 +138,7 @@ function SideBySide({ problem, before, after, comparison }: SideBySideProps) {
 
 function Thinking({ share, onCancel, onStop }: { share: number; onCancel: () => void; onStop: (() => void) | null }) {
   return (
-    <div role="status" className="flex flex-col gap-2">
+    <div role="status" className="flex flex-1 flex-col gap-2">
       <p className="text-sm">Still looking for a better one…</p>
       <progress aria-label="Search" max={1} value={share} className="h-1.5 w-full accent-glow" />
       <div className="flex gap-2">

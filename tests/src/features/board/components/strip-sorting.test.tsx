@@ -24,7 +24,13 @@ const idOf = (n: number) => shotIdSchema.parse(`00000000-0000-4000-8000-00000000
 function planOf(wall: TestWall): Plan {
   const none = new Map<string, never>()
   return readPlan({
-    brief: briefSchema.parse({ title: 'Leaf, Brass & Star', zone: 'Europe/London', location: {}, rooms: [], deliverables: [] }),
+    brief: briefSchema.parse({
+      title: 'Leaf, Brass & Star',
+      zone: 'Europe/London',
+      location: {},
+      rooms: [],
+      deliverables: [],
+    }),
     minutes: DEFAULT_MINUTES,
     board: { frames: none, shots: itemStore(wall.doc, shots).get() },
     plan: {

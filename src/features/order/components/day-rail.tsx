@@ -18,7 +18,7 @@ const LABEL_PX = 17
 /** The least height in which a line of 12 px stands whole. */
 const FIT_PX = 13
 /** Room for what does not fit on the rail, by its width. */
-const GUTTER = 'clamp(150px, 22%, 300px)'
+const GUTTER = 'clamp(110px, 17%, 300px)'
 
 export type DayRailProps = {
   plan: Plan

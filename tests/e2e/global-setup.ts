@@ -9,6 +9,7 @@ export default async function setup(): Promise<() => Promise<void>> {
     const database = await cloneTemplate(cluster.url)
     const app = await startAppProcess({ databaseUrl: database.url, env: { SCONCE_DEMO: '1' } })
     process.env['SCONCE_E2E_URL'] = app.url
+    process.env['SCONCE_E2E_DATABASE'] = database.url
     return async () => {
       await app.stop()
       await cluster.stop()

@@ -1,13 +1,18 @@
 import { useMemo, useSyncExternalStore } from 'react'
 import { DOCUMENT_KINDS } from '#shared/realtime/documents.ts'
+import { typingStore } from '#src/lib/typing.ts'
 import { type SaveState, gravest } from './save-state.ts'
 import { type ShootDocuments, subscribeAll, useShootContext } from './shoot-realtime.tsx'
 
-/** The gravest of the open documents: what the sign on the screen says. */
+const SAVING: SaveState = { kind: 'saving' }
+
+/** The gravest of the open documents: what the sign on the screen says. Words still being typed are not saved. */
 export function useSaveState(): SaveState {
   const { documents } = useShootContext()
+  const isTyping = useSyncExternalStore(typingStore.subscribe, typingStore.isTyping)
   const store = useMemo(() => gravestStore(documents), [documents])
-  return useSyncExternalStore(store.subscribe, store.get)
+  const state = useSyncExternalStore(store.subscribe, store.get)
+  return state.kind === 'saved' && isTyping ? SAVING : state
 }
 
 /** A snapshot must keep its identity while its content does. */

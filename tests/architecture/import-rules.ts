@@ -45,9 +45,9 @@ const rules: readonly Rule[] = [
   { from: /^shared\/realtime\//, may: sharedAll, not: impure, reason: 'shared/realtime imports shared and yjs' },
   {
     from: /^src\/ui\//,
-    may: /^src\/(ui\/|lib\/(cn|picture-url)\.ts)/,
+    may: /^src\/(ui\/|lib\/(cn|picture-url|use-draft)\.ts)/,
     not: yjs,
-    reason: 'ui imports react, src/lib/cn and src/lib/picture-url, and has no domain words',
+    reason: 'ui imports react and of src/lib cn, picture-url and use-draft, and has no domain words',
   },
   {
     from: /^src\/lib\//,

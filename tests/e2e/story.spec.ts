@@ -201,7 +201,7 @@ test('four people plan a shoot from nothing and follow it on a phone', async () 
     expect(after.standing).toBeGreaterThan(before.standing)
     expect(after.proposed).toBeGreaterThan(before.proposed)
     await expect.poll(() => card.getByRole('list').first().textContent()).not.toBe(cardBefore)
-    await expect(card.getByRole('list').first()).toContainText(/Main .*(camera left|further off)/)
+    await expect(card.getByRole('list').first()).toContainText(/Main: add, camera left, 2\.\d m/)
   })
 
   await test.step('the photographer takes the proposal and everybody sees the new order', async () => {

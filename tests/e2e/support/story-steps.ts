@@ -48,7 +48,8 @@ export async function choose(field: Locator, option: string): Promise<void> {
 
 /** The sign says saved: nothing of this person is on its way. */
 export async function saved(page: Page): Promise<void> {
-  await expect(page.getByRole('button', { name: /^Saved$/ }).first()).toBeVisible({ timeout: 15_000 })
+  const sign = page.getByRole('button', { name: /^Saved$/ }).or(page.locator('header [role="status"]', { hasText: /^Saved$/ }))
+  await expect(sign.first()).toBeVisible({ timeout: 20_000 })
 }
 
 export type LookWords = { look: string; sitter?: string; character?: string; on?: string; pieces: readonly string[]; hair: string }

@@ -16,7 +16,7 @@ import { LookPictures } from './look-pictures.tsx'
 import { LookPieces } from './look-pieces.tsx'
 import { MoreMenu } from './more-menu.tsx'
 import { Panel, PanelSection } from './panel.tsx'
-import { TextLine } from './text-line.tsx'
+import { TextLine } from '#src/ui/text-line.tsx'
 
 export type LookPanelProps = {
   planned: PlannedLook

@@ -6,7 +6,7 @@ import { Select } from '#src/ui/select.tsx'
 import { useSavePieceCost } from '../mutations.ts'
 import { currencyDigits } from '../words.ts'
 import { PanelSection } from './panel.tsx'
-import { TextLine } from './text-line.tsx'
+import { TextLine } from '#src/ui/text-line.tsx'
 
 const CURRENCIES = ['GBP', 'EUR', 'USD', 'CHF', 'SEK', 'NOK', 'DKK', 'CAD', 'AUD', 'JPY'] as const
 

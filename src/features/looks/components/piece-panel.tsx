@@ -17,7 +17,7 @@ import { ColourField } from './colour-field.tsx'
 import { MoreMenu } from './more-menu.tsx'
 import { Panel, PanelSection } from './panel.tsx'
 import { PieceCost } from './piece-cost.tsx'
-import { TextLine } from './text-line.tsx'
+import { TextLine } from '#src/ui/text-line.tsx'
 
 export type PiecePanelProps = {
   piece: Piece

@@ -17,7 +17,7 @@ import { clockOf, minutesOf, sitterLine, sitterTitle } from '../words.ts'
 import { copySitter, putBack } from '../write-looks.ts'
 import { MoreMenu } from './more-menu.tsx'
 import { Panel, PanelSection } from './panel.tsx'
-import { TextLine } from './text-line.tsx'
+import { TextLine } from '#src/ui/text-line.tsx'
 
 export type SitterPanelProps = {
   sitter: Sitter

@@ -17,7 +17,7 @@ import { useIsPhone } from '#src/ui/use-media.ts'
 import type { OrderWriter } from '../use-order-writer.ts'
 import { RoomMoves } from './room-moves.tsx'
 import { SetColour } from './set-colour.tsx'
-import { TextLine } from './text-line.tsx'
+import { TextLine } from '#src/ui/text-line.tsx'
 
 export type SetsSheetProps = { plan: Plan; writer: OrderWriter; onClose: () => void }
 

@@ -19,7 +19,7 @@ import { CoverChoice } from './cover-choice.tsx'
 import { Panel, PanelSection } from './panel.tsx'
 import { ShotLooks } from './shot-looks.tsx'
 import { ShotRules } from './shot-rules.tsx'
-import { TextLine } from './text-line.tsx'
+import { TextLine } from '#src/ui/text-line.tsx'
 
 export type ShotPanelProps = {
   planned: PlannedShot

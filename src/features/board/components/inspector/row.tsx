@@ -1,6 +1,6 @@
 import type { ReactNode } from 'react'
 import { cn } from '#src/lib/cn.ts'
-import { useDraft } from '../../use-draft.ts'
+import { useDraft } from '#src/lib/use-draft.ts'
 
 /** A control that looks like what it says until the hand is on it. */
 export const QUIET =

@@ -1,6 +1,6 @@
 import type { KeyboardEvent } from 'react'
 import { cn } from '#src/lib/cn.ts'
-import { useDraft } from '../../use-draft.ts'
+import { useDraft } from '#src/lib/use-draft.ts'
 import { useWall } from '../../wall-control.ts'
 
 type EditInPlaceProps = {

@@ -1,0 +1,61 @@
+import { useCallback, useEffect, useRef, useState } from 'react'
+import { holdTyping } from './typing.ts'
+
+export type Draft = {
+  value: string
+  change: (text: string) => void
+  /** Takes over what is typed and follows the kept value again. */
+  leave: () => void
+  /** Forgets what is typed since it was last taken over. */
+  drop: () => void
+}
+
+const PAUSE_MS = 500
+
+/**
+ * Text being typed: shown at once, taken over after a pause, on leaving, when the field goes away and when the page does,
+ * so that nothing is lost; until then the save sign does not say saved.
+ */
+export function useDraft(value: string, takeOver: (text: string) => void): Draft {
+  const [draft, setDraft] = useState<string | null>(null)
+  const waiting = useRef<{ text: string; timer: ReturnType<typeof setTimeout>; release: () => void } | null>(null)
+  const give = useRef(takeOver)
+  useEffect(() => {
+    give.current = takeOver
+  })
+
+  const flush = useCallback(() => {
+    const last = waiting.current
+    waiting.current = null
+    if (!last) return
+    clearTimeout(last.timer)
+    // First the words, then the sign: it must not say saved in between.
+    give.current(last.text)
+    last.release()
+  }, [])
+  useEffect(() => flush, [flush])
+
+  const drop = useCallback(() => {
+    const last = waiting.current
+    waiting.current = null
+    if (last) {
+      clearTimeout(last.timer)
+      last.release()
+    }
+    setDraft(null)
+  }, [])
+
+  return {
+    value: draft ?? value,
+    change(text) {
+      setDraft(text)
+      if (waiting.current) clearTimeout(waiting.current.timer)
+      waiting.current = { text, timer: setTimeout(flush, PAUSE_MS), release: waiting.current?.release ?? holdTyping(flush) }
+    },
+    leave() {
+      flush()
+      setDraft(null)
+    },
+    drop,
+  }
+}

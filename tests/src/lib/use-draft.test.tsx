@@ -1,0 +1,47 @@
+// @vitest-environment jsdom
+import { act, renderHook } from '@testing-library/react'
+import { afterEach, beforeEach, describe, expect, it, vi } from 'vitest'
+import { typingStore } from '#src/lib/typing.ts'
+import { useDraft } from '#src/lib/use-draft.ts'
+
+beforeEach(() => vi.useFakeTimers())
+afterEach(() => vi.useRealTimers())
+
+describe('useDraft', () => {
+  it('counts as typing until the words are taken over, after a pause', () => {
+    const taken: string[] = []
+    const { result } = renderHook(() => useDraft('', (text) => taken.push(text)))
+    act(() => result.current.change('felt'))
+    expect([result.current.value, typingStore.isTyping(), taken]).toEqual(['felt', true, []])
+    act(() => vi.advanceTimersByTime(600))
+    expect([typingStore.isTyping(), taken]).toEqual([false, ['felt']])
+  })
+
+  it('takes over on leaving, and when the field goes away', () => {
+    const taken: string[] = []
+    const { result, unmount } = renderHook(() => useDraft('', (text) => taken.push(text)))
+    act(() => result.current.change('one'))
+    act(() => result.current.leave())
+    act(() => result.current.change('two'))
+    unmount()
+    expect(taken).toEqual(['one', 'two'])
+    expect(typingStore.isTyping()).toBe(false)
+  })
+
+  it('takes over when the page goes away', () => {
+    const taken: string[] = []
+    const { result } = renderHook(() => useDraft('', (text) => taken.push(text)))
+    act(() => result.current.change('last words'))
+    act(() => window.dispatchEvent(new Event('pagehide')))
+    expect(taken).toEqual(['last words'])
+  })
+
+  it('forgets what is dropped', () => {
+    const taken: string[] = []
+    const { result } = renderHook(() => useDraft('kept', (text) => taken.push(text)))
+    act(() => result.current.change('no'))
+    act(() => result.current.drop())
+    act(() => vi.advanceTimersByTime(600))
+    expect([result.current.value, typingStore.isTyping(), taken]).toEqual(['kept', false, []])
+  })
+})

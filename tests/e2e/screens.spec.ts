@@ -23,7 +23,7 @@ const SCREENS: readonly Screen[] = [
   { name: 'setup', path: 'lighting/:setup', see: /Octa left/, role: 'photographer' },
   { name: 'order', path: 'order', see: /^Running order$/, role: 'photographer' },
   { name: 'people', path: 'people', see: /^People$/, role: 'photographer' },
-  { name: 'sign-off', path: 'sign-off', see: /Night coat|Work coat|Sign-off/, role: 'client' },
+  { name: 'sign-off', path: 'sign-off', see: /Long line|Night coat|Work coat|Sign-off/, role: 'client' },
   { name: 'day', path: 'day', see: /./, role: 'crew' },
 ]
 

@@ -10,10 +10,11 @@ export type Draft = {
   drop: () => void
 }
 
-const PAUSE_MS = 500
+/** While somebody types, the words are taken over this often. */
+const EVERY_MS = 500
 
 /**
- * Text being typed: shown at once, taken over after a pause, on leaving, when the field goes away and when the page does,
+ * Text being typed: shown at once, taken over twice a second, on leaving, when the field goes away and when the page does,
  * so that nothing is lost; until then the save sign does not say saved.
  */
 export function useDraft(value: string, takeOver: (text: string) => void): Draft {
@@ -49,8 +50,8 @@ export function useDraft(value: string, takeOver: (text: string) => void): Draft
     value: draft ?? value,
     change(text) {
       setDraft(text)
-      if (waiting.current) clearTimeout(waiting.current.timer)
-      waiting.current = { text, timer: setTimeout(flush, PAUSE_MS), release: waiting.current?.release ?? holdTyping(flush) }
+      if (waiting.current) waiting.current.text = text
+      else waiting.current = { text, timer: setTimeout(flush, EVERY_MS), release: holdTyping(flush) }
     },
     leave() {
       flush()

@@ -17,7 +17,7 @@ export type TextLineProps = {
   placeholder?: string
 }
 
-/** A text that others share: taken over at a pause in typing and on leaving, not at every key. */
+/** A text that others share: taken over twice a second while typing and on leaving, not at every key. */
 export function TextLine({ label, value, onChange, maxLength, prose = false, required = false, readOnly = false, hint, placeholder }: TextLineProps) {
   const draft = useDraft(value, (text) => {
     if (!required || text.trim() !== '') onChange(text)

@@ -190,11 +190,13 @@ test('four people plan a shoot from nothing and follow it on a phone', async () 
     await lead.getByRole('button', { name: 'Leave it' }).click()
     await goTo(lead, 'Lighting')
     await lead.getByRole('link', { name: /Setup 2/ }).first().click()
-    const main = lead.getByRole('button', { name: /^Main/ }).first()
+    const main = lead.locator('[aria-roledescription="movable part"][aria-label^="Main"]').first()
+    const stood = (await main.getAttribute('aria-label')) ?? ''
     await main.focus()
     await lead.keyboard.press('Enter')
     for (let press = 0; press < 3; press++) await lead.keyboard.press('Shift+ArrowLeft')
     await lead.keyboard.press('Enter')
+    await expect(main).not.toHaveAttribute('aria-label', stood)
     await saved(lead)
     await goTo(lead, 'Running order')
     const after = await proposal(lead)
@@ -260,12 +262,13 @@ test('four people plan a shoot from nothing and follow it on a phone', async () 
         const words = `${who} writes ${n}`
         await page.getByRole('textbox', { name: NOTE }).first().fill(words)
         typed.push(words)
+        await page.waitForTimeout((n % 4) * 250)
         // Said on the screen at this moment: it must then be true for ever.
         if (await signSaysSaved(page)) claimed.push(words)
       }
     }
     const typing = Promise.all([type(lead, 'Noor'), type(stylist.page, 'Mika'), type(client.page, 'Paz')])
-    await lead.waitForTimeout(2500)
+    await lead.waitForTimeout(6000)
     await site.kill()
     isDown = true
     await typing

@@ -8,7 +8,7 @@ beforeEach(() => vi.useFakeTimers())
 afterEach(() => vi.useRealTimers())
 
 describe('useDraft', () => {
-  it('counts as typing until the words are taken over, after a pause', () => {
+  it('counts as typing until the words are taken over, twice a second', () => {
     const taken: string[] = []
     const { result } = renderHook(() => useDraft('', (text) => taken.push(text)))
     act(() => result.current.change('felt'))

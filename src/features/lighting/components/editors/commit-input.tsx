@@ -4,7 +4,7 @@ import { Textarea } from '#src/ui/textarea.tsx'
 
 type CommitProps = { value: string; onCommit: (value: string) => void; maxLength: number; placeholder?: string }
 
-/** A line of text that is taken over at a pause, on Enter and on leaving; where nothing may be empty the old one comes back. */
+/** A line of text that is taken over while typing, on Enter and on leaving; where nothing may be empty the old one comes back. */
 export function CommitInput({ value, onCommit, required = false, ...rest }: CommitProps & { required?: boolean }) {
   const draft = useDraft(value, (text) => {
     if (text.trim() !== value && (text.trim() !== '' || !required)) onCommit(text.trim())
@@ -23,7 +23,7 @@ export function CommitInput({ value, onCommit, required = false, ...rest }: Comm
   )
 }
 
-/** Several lines, taken over at a pause and on leaving. */
+/** Several lines, taken over while typing and on leaving. */
 export function CommitTextarea({ value, onCommit, ...rest }: CommitProps) {
   const draft = useDraft(value, (text) => {
     if (text !== value) onCommit(text)

@@ -1,6 +1,7 @@
 import { AlertDialog } from 'radix-ui'
 import type { ReactNode } from 'react'
 import { Button } from './button.tsx'
+import { useReturnFocus } from './use-return-focus.ts'
 
 export type ConfirmProps = {
   open: boolean
@@ -26,11 +27,15 @@ export function Confirm({
   keep = 'Keep it',
   busy = false,
 }: ConfirmProps) {
+  const focus = useReturnFocus()
   return (
     <AlertDialog.Root open={open} onOpenChange={onOpenChange}>
       <AlertDialog.Portal>
         <AlertDialog.Overlay className="fade-in fixed inset-0 z-50 bg-night/55" />
-        <AlertDialog.Content className="rise-in fixed inset-x-4 bottom-4 z-50 mx-auto max-w-md rounded-r bg-paper p-6 text-ink shadow-over outline-none md:inset-0 md:m-auto md:h-fit">
+        <AlertDialog.Content
+          {...focus}
+          className="rise-in fixed inset-x-4 bottom-4 z-50 mx-auto max-w-md rounded-r bg-paper p-6 text-ink shadow-over outline-none md:inset-0 md:m-auto md:h-fit"
+        >
           <AlertDialog.Title className="text-xl">{title}</AlertDialog.Title>
           <AlertDialog.Description asChild>
             <div className="mt-2 text-base text-ink-soft">{children}</div>

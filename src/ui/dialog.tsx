@@ -3,6 +3,7 @@ import { Dialog as Base } from 'radix-ui'
 import type { ReactNode } from 'react'
 import { cn } from '#src/lib/cn.ts'
 import { IconButton } from './button.tsx'
+import { useReturnFocus } from './use-return-focus.ts'
 
 export type DialogProps = {
   open: boolean
@@ -17,11 +18,13 @@ export type DialogProps = {
 
 /** A sheet of paper over the screen. Focus goes in, stays in, and comes back to what opened it. */
 export function Dialog({ open, onOpenChange, title, description, footer, wide = false, children }: DialogProps) {
+  const focus = useReturnFocus({ inField: true })
   return (
     <Base.Root open={open} onOpenChange={onOpenChange}>
       <Base.Portal>
         <Base.Overlay className="fade-in fixed inset-0 z-50 bg-night/55" />
         <Base.Content
+          {...focus}
           {...(description === undefined ? { 'aria-describedby': undefined } : {})}
           className={cn(
             'rise-in fixed inset-x-0 bottom-0 z-50 mx-auto flex max-h-[92dvh] flex-col rounded-r bg-paper text-ink shadow-over outline-none',

@@ -3,6 +3,7 @@ import { Dialog as Base } from 'radix-ui'
 import type { ReactNode } from 'react'
 import { cn } from '#src/lib/cn.ts'
 import { IconButton } from './button.tsx'
+import { useReturnFocus } from './use-return-focus.ts'
 
 export type SheetProps = {
   open: boolean
@@ -18,11 +19,13 @@ export type SheetProps = {
 
 /** A sheet drawn in from an edge, for what needs more room than a menu. */
 export function Sheet({ open, onOpenChange, title, side = 'bottom', night = false, footer, children }: SheetProps) {
+  const focus = useReturnFocus()
   return (
     <Base.Root open={open} onOpenChange={onOpenChange}>
       <Base.Portal>
         <Base.Overlay className="fade-in fixed inset-0 z-50 bg-night/55" />
         <Base.Content
+          {...focus}
           aria-describedby={undefined}
           className={cn(
             'fixed z-50 flex flex-col shadow-over outline-none',

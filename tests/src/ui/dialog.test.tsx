@@ -41,6 +41,13 @@ describe('Dialog', () => {
     await waitFor(() => expect(dialog.contains(document.activeElement)).toBe(true))
   })
 
+  it('begins in its first field and gives the focus back to what opened it', async () => {
+    const { button, dialog } = await open()
+    await waitFor(() => expect(document.activeElement).toBe(screen.getByLabelText('Name')))
+    fireEvent.keyDown(dialog, { key: 'Escape' })
+    await waitFor(() => expect(document.activeElement).toBe(button))
+  })
+
   it('closes on Escape', async () => {
     const { dialog } = await open()
     fireEvent.keyDown(dialog, { key: 'Escape' })

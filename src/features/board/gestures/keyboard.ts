@@ -1,4 +1,4 @@
-import type { WallControl } from '../wall-control.ts'
+import { type WallControl, announce } from '../wall-control.ts'
 import { handleWallKey } from './keys.ts'
 
 /** Whether keys typed here belong to a field. */
@@ -23,8 +23,10 @@ export function attachKeyboard(element: HTMLElement, control: WallControl): () =
     if (command && (key === 'z' || key === 'y')) {
       event.preventDefault()
       if (!control.mayWrite()) return
-      if (key === 'y' || event.shiftKey) control.redo()
+      const isRedo = key === 'y' || event.shiftKey
+      if (isRedo) control.redo()
       else control.undo()
+      announce(control, isRedo ? 'Done again' : 'Taken back')
       return
     }
     if (isElsewhere(element, event.target)) return

@@ -1,4 +1,4 @@
-import type { ReactNode } from 'react'
+import type { ReactNode, Ref } from 'react'
 import { shotsInWords, shotsOfLook } from '#shared/domain/looks/shots-of-look.ts'
 import type { Plan } from '#shared/domain/plan/read-plan.ts'
 import { count } from '#src/lib/format.ts'
@@ -12,12 +12,14 @@ export type LookSheetProps = {
   standing: LookStanding
   plan: Plan
   userId: string
+  /** To give the sheet the focus after an answer. */
+  ref: Ref<HTMLElement>
   /** The client's answers, or what stands in their place for others. */
   children: ReactNode
 }
 
 /** One look as the client is asked about it: pictures, who, what is worn, where it is seen. */
-export function LookSheet({ standing, plan, userId, children }: LookSheetProps) {
+export function LookSheet({ standing, plan, userId, ref, children }: LookSheetProps) {
   const { planned, state, history, picturesOnWay, fingerprint } = standing
   const { look, sitter, pieces } = planned
   const { zone } = plan.brief
@@ -28,8 +30,10 @@ export function LookSheet({ standing, plan, userId, children }: LookSheetProps) 
     .join(' ')
   return (
     <article
+      ref={ref}
+      tabIndex={-1}
       aria-label={look.name}
-      className="bg-paper max-md:flex max-md:flex-1 max-md:flex-col md:overflow-hidden md:rounded-r md:border md:border-hair lg:grid lg:grid-cols-[minmax(16rem,400px)_minmax(0,1fr)]"
+      className="bg-paper outline-none max-md:flex max-md:flex-1 max-md:flex-col md:overflow-hidden md:rounded-r md:border md:border-hair lg:grid lg:grid-cols-[minmax(16rem,400px)_minmax(0,1fr)]"
     >
       <LookPictures planned={planned} />
       {/* On phones the parts belong to the sheet itself, so that the answers can stick to its foot all the way. */}

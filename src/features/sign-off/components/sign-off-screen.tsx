@@ -1,5 +1,5 @@
 import { ChevronLeft, ChevronRight } from 'lucide-react'
-import { useState } from 'react'
+import { useRef, useState } from 'react'
 import { useSearchParams } from 'react-router-dom'
 import { canInShoot } from '#shared/access/roles.ts'
 import { shotsOfLook } from '#shared/domain/looks/shots-of-look.ts'
@@ -28,6 +28,7 @@ export function SignOffScreen() {
   const [search, setSearch] = useSearchParams()
   const [isListing, setIsListing] = useState(false)
   const isPhone = useIsPhone()
+  const sheetOfLook = useRef<HTMLElement>(null)
   const looks = inShownOrder(standings, plan)
   const mayAnswer = canInShoot(role, 'sign-off.answer')
 
@@ -55,6 +56,9 @@ export function SignOffScreen() {
   const choose = (standing: LookStanding | undefined) =>
     standing && setSearch({ look: standing.planned.look.id }, { replace: true })
   const handleAnswered = (words: string) => {
+    // The answer is seen on the look itself; the button that gave it is gone, and with it the focus.
+    choose(chosen)
+    sheetOfLook.current?.focus({ preventScroll: true })
     const open = looks.find((standing) => standing !== chosen && standing.state.kind !== 'signed off')
     toast.say(
       open ? words : `${words} Every other look is signed off already.`,
@@ -82,7 +86,7 @@ export function SignOffScreen() {
     />
   )
   const sheet = (
-    <LookSheet key={chosen.planned.look.id} standing={chosen} plan={plan} userId={userId}>
+    <LookSheet key={chosen.planned.look.id} ref={sheetOfLook} standing={chosen} plan={plan} userId={userId}>
       {mayAnswer ? (
         <AnswerForm shootId={shoot.id} userId={userId} standing={chosen} onAnswered={handleAnswered} />
       ) : (

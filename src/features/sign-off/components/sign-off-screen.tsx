@@ -27,6 +27,7 @@ export function SignOffScreen() {
   const { standings, isKnown, error } = useLookStandings()
   const [search, setSearch] = useSearchParams()
   const [isListing, setIsListing] = useState(false)
+  const [begunAt, setBegunAt] = useState<string | null>(null)
   const isPhone = useIsPhone()
   const sheetOfLook = useRef<HTMLElement>(null)
   const looks = inShownOrder(standings, plan)
@@ -34,9 +35,10 @@ export function SignOffScreen() {
 
   if (!isKnown && error) throw error
   if (!isKnown) return <Waiting label="Fetching what was answered" />
-  // Whoever is to answer begins where an answer is missing.
-  const chosen =
-    standings.get(search.get('look') ?? '') ?? looks.find(({ state }) => state.kind !== 'signed off') ?? looks[0]
+  // Whoever is to answer begins where an answer is missing, and stays there when it is given.
+  const asked = search.get('look') ?? begunAt ?? ''
+  const chosen = standings.get(asked) ?? looks.find(({ state }) => state.kind !== 'signed off') ?? looks[0]
+  if (chosen && begunAt === null) setBegunAt(chosen.planned.look.id)
   if (!chosen) {
     return (
       <>
@@ -57,7 +59,6 @@ export function SignOffScreen() {
     standing && setSearch({ look: standing.planned.look.id }, { replace: true })
   const handleAnswered = (words: string) => {
     // The answer is seen on the look itself; the button that gave it is gone, and with it the focus.
-    choose(chosen)
     sheetOfLook.current?.focus({ preventScroll: true })
     const open = looks.find((standing) => standing !== chosen && standing.state.kind !== 'signed off')
     toast.say(

@@ -18,7 +18,9 @@ cleanupOutdatedCaches()
 precacheAndRoute(self.__WB_MANIFEST)
 
 registerRoute(
-  new NavigationRoute(createHandlerBoundToURL('/index.html'), { denylist: [/^\/api\//, /^\/rt\//, /^\/healthz/, /^\/readyz/] }),
+  new NavigationRoute(createHandlerBoundToURL('/index.html'), {
+    denylist: [/^\/api\//, /^\/rt\//, /^\/healthz/, /^\/readyz/],
+  }),
 )
 
 const READ_OFFLINE = /^\/api\/(session|shoots|shoots\/[0-9a-f-]{36}(\/(sign-offs|kit|people|comments))?)$/

@@ -93,7 +93,11 @@ export async function ensureDemo(world: DemoWorld): Promise<boolean> {
     )
     await fillTables(tx, created.id, id, date, actors, world.now())
     for (const picture of pictures.values()) {
-      await storeUpload(ctxOf('photographer', tx), { shootId: created.id, uploadId: uploadIdSchema.parse(picture.id), bytes: picture.bytes })
+      await storeUpload(ctxOf('photographer', tx), {
+        shootId: created.id,
+        uploadId: uploadIdSchema.parse(picture.id),
+        bytes: picture.bytes,
+      })
     }
     return created.id
   })
@@ -170,53 +174,151 @@ async function fillTables(
       latitude: 54.472,
       longitude: -3.031,
       parking: 'Four cars by the gatehouse, the van may go up to unload. Gate code from the photographer.',
-      access: 'Eleven steps to the gallery, a spiral stair of twenty-two to the dome. No lift. Hard hats while the slit is moved; the warden moves it, nobody else.',
+      access:
+        'Eleven steps to the gallery, a spiral stair of twenty-two to the dome. No lift. Hard hats while the slit is moved; the warden moves it, nobody else.',
     })
     .where(eq(location.shootId, shootId))
   const rooms = [
-    { name: 'Long gallery', widthM: 4.5, depthM: 9, ceilingM: 3.2, power: 'Two double sockets on one 13 A ring by the door. Flash runs on batteries.', windows: 'Three tall ones to the north, shutters work', note: 'Floor is waxed oak: felt under every stand.' },
-    { name: 'Dome', widthM: 7.5, depthM: 7.5, ceilingM: 6, power: 'None. Work light from the landing only.', windows: 'The slit, opened by the warden; faces west after three', note: 'Platform edge is open on the north side. Tape it.' },
-    { name: 'Old library', widthM: 5, depthM: 6, ceilingM: 3, power: 'Four sockets, kettle on its own', windows: 'Two to the east', note: 'Wardrobe, hair and make-up. Heater in the chimney.' },
+    {
+      name: 'Long gallery',
+      widthM: 4.5,
+      depthM: 9,
+      ceilingM: 3.2,
+      power: 'Two double sockets on one 13 A ring by the door. Flash runs on batteries.',
+      windows: 'Three tall ones to the north, shutters work',
+      note: 'Floor is waxed oak: felt under every stand.',
+    },
+    {
+      name: 'Dome',
+      widthM: 7.5,
+      depthM: 7.5,
+      ceilingM: 6,
+      power: 'None. Work light from the landing only.',
+      windows: 'The slit, opened by the warden; faces west after three',
+      note: 'Platform edge is open on the north side. Tape it.',
+    },
+    {
+      name: 'Old library',
+      widthM: 5,
+      depthM: 6,
+      ceilingM: 3,
+      power: 'Four sockets, kettle on its own',
+      windows: 'Two to the east',
+      note: 'Wardrobe, hair and make-up. Heater in the chimney.',
+    },
   ]
-  await tx.insert(room).values(
-    rooms.map((one, position) => ({ ...one, id: roomIdSchema.parse(id(one.name)), shootId, position })),
-  )
+  await tx
+    .insert(room)
+    .values(rooms.map((one, position) => ({ ...one, id: roomIdSchema.parse(id(one.name)), shootId, position })))
   const deliverables = [
-    { title: 'Packet portraits, one each', count: 3, orientation: 'upright' as const, use: 'Front of the packet, 100 × 150 mm', dueOn: plusDays(date, 21) },
-    { title: 'Window card, all three', count: 1, orientation: 'across' as const, use: 'A1, cropped to 3:2', dueOn: plusDays(date, 21) },
-    { title: 'Leaf, hands and brass', count: 4, orientation: 'square' as const, use: 'Autumn pages', dueOn: plusDays(date, 28) },
-    { title: 'Story pictures', count: 4, orientation: 'any' as const, use: 'Autumn pages, opening spreads', dueOn: plusDays(date, 28) },
+    {
+      title: 'Packet portraits, one each',
+      count: 3,
+      orientation: 'upright' as const,
+      use: 'Front of the packet, 100 × 150 mm',
+      dueOn: plusDays(date, 21),
+    },
+    {
+      title: 'Window card, all three',
+      count: 1,
+      orientation: 'across' as const,
+      use: 'A1, cropped to 3:2',
+      dueOn: plusDays(date, 21),
+    },
+    {
+      title: 'Leaf, hands and brass',
+      count: 4,
+      orientation: 'square' as const,
+      use: 'Autumn pages',
+      dueOn: plusDays(date, 28),
+    },
+    {
+      title: 'Story pictures',
+      count: 4,
+      orientation: 'any' as const,
+      use: 'Autumn pages, opening spreads',
+      dueOn: plusDays(date, 28),
+    },
   ]
-  await tx.insert(deliverable).values(
-    deliverables.map((one, position) => ({ ...one, id: deliverableIdSchema.parse(randomUUID()), shootId, position })),
-  )
+  await tx
+    .insert(deliverable)
+    .values(
+      deliverables.map((one, position) => ({ ...one, id: deliverableIdSchema.parse(randomUUID()), shootId, position })),
+    )
   for (const role of ['stylist', 'client', 'crew'] as const) {
     const actor = actors.get(role)
     if (actor) await tx.insert(shootMember).values({ shootId, userId: actor.userId, role })
   }
   await tx.insert(sitterPrivate).values([
-    { shootId, sitterId: sitterIdSchema.parse(id('astronomer')), sizes: 'Coat 38, glove 7½, shoe 39', contact: 'maud@example.com' },
-    { shootId, sitterId: sitterIdSchema.parse(id('clockmaker')), sizes: 'Coat 42, collar 16, shoe 44', contact: 'idris@example.com' },
+    {
+      shootId,
+      sitterId: sitterIdSchema.parse(id('astronomer')),
+      sizes: 'Coat 38, glove 7½, shoe 39',
+      contact: 'maud@example.com',
+    },
+    {
+      shootId,
+      sitterId: sitterIdSchema.parse(id('clockmaker')),
+      sizes: 'Coat 42, collar 16, shoe 44',
+      contact: 'idris@example.com',
+    },
     { shootId, sitterId: sitterIdSchema.parse(id('botanist')), sizes: 'Gown 12, shoe 40', contact: 'lena@example.com' },
   ])
   await tx.insert(pieceCost).values([
-    { shootId, pieceId: pieceIdSchema.parse(id('gown')), costMinor: 12000, costCurrency: 'GBP', depositMinor: 20000, depositCurrency: 'GBP', size: '12' },
-    { shootId, pieceId: pieceIdSchema.parse(id('cape')), costMinor: 6500, costCurrency: 'GBP', depositMinor: 10000, depositCurrency: 'GBP', size: 'M' },
+    {
+      shootId,
+      pieceId: pieceIdSchema.parse(id('gown')),
+      costMinor: 12000,
+      costCurrency: 'GBP',
+      depositMinor: 20000,
+      depositCurrency: 'GBP',
+      size: '12',
+    },
+    {
+      shootId,
+      pieceId: pieceIdSchema.parse(id('cape')),
+      costMinor: 6500,
+      costCurrency: 'GBP',
+      depositMinor: 10000,
+      depositCurrency: 'GBP',
+      size: 'M',
+    },
     { shootId, pieceId: pieceIdSchema.parse(id('high-collar')), costMinor: 4000, costCurrency: 'GBP', size: '38' },
-    { shootId, pieceId: pieceIdSchema.parse(id('escapement')), costMinor: 3000, costCurrency: 'GBP', depositMinor: 15000, depositCurrency: 'GBP' },
+    {
+      shootId,
+      pieceId: pieceIdSchema.parse(id('escapement')),
+      costMinor: 3000,
+      costCurrency: 'GBP',
+      depositMinor: 15000,
+      depositCurrency: 'GBP',
+    },
   ])
-  await tx.insert(privateNote).values({ shootId, text: 'The client’s brother owns the gatehouse; ring him before the van goes up.' })
+  await tx
+    .insert(privateNote)
+    .values({ shootId, text: 'The client’s brother owns the gatehouse; ring him before the van goes up.' })
   const said = (role: Role, subject: 'frame' | 'look', name: string, text: string, hoursAgo: number) => {
     const actor = actors.get(role)
     return actor
-      ? [{ id: commentIdSchema.parse(randomUUID()), shootId, subject, subjectId: id(name), userId: actor.userId, text, at: new Date(now.getTime() - hoursAgo * 3_600_000) }]
+      ? [
+          {
+            id: commentIdSchema.parse(randomUUID()),
+            shootId,
+            subject,
+            subjectId: id(name),
+            userId: actor.userId,
+            text,
+            at: new Date(now.getTime() - hoursAgo * 3_600_000),
+          },
+        ]
       : []
   }
-  await tx.insert(comment).values([
-    ...said('stylist', 'frame', 'frame-collar-high', 'Could the collar be softer?', 26),
-    ...said('client', 'frame', 'frame-collar-high', 'Felt, not starch. Yes please.', 25),
-    ...said('photographer', 'frame', 'frame-eyepiece', 'The blue is one flash on the floor. Keep it this deep.', 20),
-  ])
+  await tx
+    .insert(comment)
+    .values([
+      ...said('stylist', 'frame', 'frame-collar-high', 'Could the collar be softer?', 26),
+      ...said('client', 'frame', 'frame-collar-high', 'Felt, not starch. Yes please.', 25),
+      ...said('photographer', 'frame', 'frame-eyepiece', 'The blue is one flash on the floor. Keep it this deep.', 20),
+    ])
 }
 
 function plusDays(date: string, days: number): string | null {

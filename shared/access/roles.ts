@@ -9,18 +9,38 @@ export type StudioRole = (typeof STUDIO_ROLES)[number]
 
 /** What can be done inside a shoot, beside the documents. */
 export const SHOOT_ACTIONS = [
-  'brief.read', 'brief.write',
-  'people.read', 'people.write', 'contacts.readAll', 'contacts.readPhotographer', 'contacts.readCallSheet',
-  'uploads.read', 'uploads.write',
-  'comments.read', 'comments.write',
-  'sign-off.read', 'sign-off.answer', 'sign-off.ask',
-  'kit.read', 'minutes.read',
-  'sizes.read', 'sizes.write', 'piece-costs.read', 'piece-costs.write',
-  'private-notes.read', 'private-notes.write',
-  'money.read', 'money.write', 'estimate.read', 'estimate.accept',
-  'call-sheet.read', 'call-sheet.write',
-  'releases.read', 'releases.write',
-  'versions.read', 'versions.write',
+  'brief.read',
+  'brief.write',
+  'people.read',
+  'people.write',
+  'contacts.readAll',
+  'contacts.readPhotographer',
+  'contacts.readCallSheet',
+  'uploads.read',
+  'uploads.write',
+  'comments.read',
+  'comments.write',
+  'sign-off.read',
+  'sign-off.answer',
+  'sign-off.ask',
+  'kit.read',
+  'minutes.read',
+  'sizes.read',
+  'sizes.write',
+  'piece-costs.read',
+  'piece-costs.write',
+  'private-notes.read',
+  'private-notes.write',
+  'money.read',
+  'money.write',
+  'estimate.read',
+  'estimate.accept',
+  'call-sheet.read',
+  'call-sheet.write',
+  'releases.read',
+  'releases.write',
+  'versions.read',
+  'versions.write',
   'links.write',
   'shoot.remove',
 ] as const
@@ -76,7 +96,16 @@ export const DOCUMENT_WRITERS: Readonly<Record<DocumentKind, readonly Role[]>> =
   day: ['photographer', 'stylist', 'crew'],
 }
 
-export const STUDIO_ACTIONS = ['studio.read', 'studio.write', 'members.write', 'kit.write', 'recipes.write', 'wardrobe.write', 'minutes.write', 'shoots.create'] as const
+export const STUDIO_ACTIONS = [
+  'studio.read',
+  'studio.write',
+  'members.write',
+  'kit.write',
+  'recipes.write',
+  'wardrobe.write',
+  'minutes.write',
+  'shoots.create',
+] as const
 export type StudioAction = (typeof STUDIO_ACTIONS)[number]
 
 export const STUDIO_RIGHTS: Readonly<Record<StudioAction, readonly StudioRole[]>> = {

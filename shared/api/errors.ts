@@ -2,8 +2,19 @@ import { z } from 'zod'
 
 /** Every way a request can fail that a screen tells apart. */
 export const ERROR_CODES = [
-  'BAD_REQUEST', 'NOT_JSON', 'SIGNED_OUT', 'WRONG_ORIGIN', 'FORBIDDEN', 'NOT_FOUND', 'CONFLICT', 'GONE',
-  'TOO_LARGE', 'UNSUPPORTED', 'TOO_MANY', 'STARTING', 'INTERNAL',
+  'BAD_REQUEST',
+  'NOT_JSON',
+  'SIGNED_OUT',
+  'WRONG_ORIGIN',
+  'FORBIDDEN',
+  'NOT_FOUND',
+  'CONFLICT',
+  'GONE',
+  'TOO_LARGE',
+  'UNSUPPORTED',
+  'TOO_MANY',
+  'STARTING',
+  'INTERNAL',
 ] as const
 export const errorCodeSchema = z.enum(ERROR_CODES)
 export type ErrorCode = z.infer<typeof errorCodeSchema>

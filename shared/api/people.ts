@@ -19,13 +19,25 @@ export const peopleSchema = z.object({
   ),
   /** Open invitations, for the photographer only. */
   invitations: z.array(
-    z.object({ id: invitationIdSchema, email: z.string(), name: z.string(), role: roleSchema, sentAtMs: z.number(), expiresAtMs: z.number(), expired: z.boolean() }),
+    z.object({
+      id: invitationIdSchema,
+      email: z.string(),
+      name: z.string(),
+      role: roleSchema,
+      sentAtMs: z.number(),
+      expiresAtMs: z.number(),
+      expired: z.boolean(),
+    }),
   ),
 })
 export type People = z.infer<typeof peopleSchema>
 
 /** POST /api/shoots/:shootId/invitations → people; DELETE …/invitations/:invitationId; POST …/invitations/:invitationId/resend */
-export const invitationInputSchema = z.object({ email: z.email('this is not an e-mail address').max(254), name: z.string().trim().max(80).default(''), role: roleSchema })
+export const invitationInputSchema = z.object({
+  email: z.email('this is not an e-mail address').max(254),
+  name: z.string().trim().max(80).default(''),
+  role: roleSchema,
+})
 /** PATCH /api/shoots/:shootId/people/:userId; DELETE the same: remove, or leave when it is oneself. */
 export const roleInputSchema = z.object({ role: roleSchema })
 

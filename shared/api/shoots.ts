@@ -2,7 +2,14 @@ import { z } from 'zod'
 import { shootIdSchema, studioIdSchema, uploadIdSchema } from '#shared/ids.ts'
 import { civilDateSchema, lineSchema } from '#shared/domain/text.ts'
 import { ROLES } from '#shared/access/roles.ts'
-import { briefFieldsSchema, briefSchema, deliverableInputSchema, locationSchema, roomInputSchema, zoneSchema } from '#shared/domain/shoots/schema.ts'
+import {
+  briefFieldsSchema,
+  briefSchema,
+  deliverableInputSchema,
+  locationSchema,
+  roomInputSchema,
+  zoneSchema,
+} from '#shared/domain/shoots/schema.ts'
 import { minutesSchema } from '#shared/domain/plan/minutes.ts'
 import { LAMPS, SECTIONS } from '#shared/domain/shoots/readiness.ts'
 

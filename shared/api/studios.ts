@@ -14,15 +14,35 @@ export type Session = z.infer<typeof sessionSchema>
 
 /** POST /api/studios → studio; PATCH /api/studios/:studioId */
 export const studioInputSchema = z.object({ name: lineSchema(80) })
-export const studioSchema = z.object({ id: studioIdSchema, name: z.string(), role: z.enum(STUDIO_ROLES), people: z.number().int() })
+export const studioSchema = z.object({
+  id: studioIdSchema,
+  name: z.string(),
+  role: z.enum(STUDIO_ROLES),
+  people: z.number().int(),
+})
 export type Studio = z.infer<typeof studioSchema>
 
 /** GET /api/studios/:studioId/people; DELETE /api/studios/:studioId/people/:userId; PATCH …/:userId { role } */
 export const studioPeopleSchema = z.object({
   people: z.array(
-    z.object({ userId: userIdSchema, name: z.string(), email: z.string(), initials: z.string(), colour: z.string(), role: z.enum(STUDIO_ROLES) }),
+    z.object({
+      userId: userIdSchema,
+      name: z.string(),
+      email: z.string(),
+      initials: z.string(),
+      colour: z.string(),
+      role: z.enum(STUDIO_ROLES),
+    }),
   ),
-  invitations: z.array(z.object({ id: z.string(), email: z.string(), role: z.enum(STUDIO_ROLES), expiresAtMs: z.number(), sentAtMs: z.number() })),
+  invitations: z.array(
+    z.object({
+      id: z.string(),
+      email: z.string(),
+      role: z.enum(STUDIO_ROLES),
+      expiresAtMs: z.number(),
+      sentAtMs: z.number(),
+    }),
+  ),
 })
 export type StudioPeople = z.infer<typeof studioPeopleSchema>
 /** POST /api/studios/:studioId/invitations; DELETE …/invitations/:invitationId */

@@ -34,9 +34,7 @@ export function collection<Schema extends z.ZodObject>(
 }
 
 export type ReadItem<C extends Collection> =
-  | { kind: 'alive'; item: Item<C> }
-  | { kind: 'deleted'; atMs: number }
-  | { kind: 'unreadable'; issue: string }
+  { kind: 'alive'; item: Item<C> } | { kind: 'deleted'; atMs: number } | { kind: 'unreadable'; issue: string }
 
 /** The document's map of a collection. */
 export function rootOf(doc: Y.Doc, c: Collection): Y.Map<unknown> {
@@ -148,7 +146,10 @@ export function patchItem<C extends Collection>(
   const checked = c.schema.partial().parse(patch)
   const changes = Object.entries(checked).filter(
     ([key, value]) =>
-      key in patch && !(key in c.members) && value !== undefined && JSON.stringify(map.get(key)) !== JSON.stringify(value),
+      key in patch &&
+      !(key in c.members) &&
+      value !== undefined &&
+      JSON.stringify(map.get(key)) !== JSON.stringify(value),
   )
   if (changes.length === 0) return false
   doc.transact(() => {
@@ -243,7 +244,12 @@ export function upsertItem<C extends Collection>(
       root.set(id, map)
     }
     for (const [key, value] of Object.entries(parsed)) {
-      if (key !== 'id' && key in item && value !== undefined && JSON.stringify(map.get(key)) !== JSON.stringify(value)) {
+      if (
+        key !== 'id' &&
+        key in item &&
+        value !== undefined &&
+        JSON.stringify(map.get(key)) !== JSON.stringify(value)
+      ) {
         map.set(key, value)
       }
     }

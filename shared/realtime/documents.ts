@@ -1,4 +1,11 @@
-import { areaSchema, frameSchema, noteSchema, paletteSchema, shotSchema, tagSchema } from '#shared/domain/board/schema.ts'
+import {
+  areaSchema,
+  frameSchema,
+  noteSchema,
+  paletteSchema,
+  shotSchema,
+  tagSchema,
+} from '#shared/domain/board/schema.ts'
 import { daySchema, moveSchema, ruleSchema, setSchema, shotPlanSchema } from '#shared/domain/plan/schema.ts'
 import { lookSchema, pieceSchema, sitterSchema } from '#shared/domain/looks/schema.ts'
 import { lightSchema, propSchema, setupSchema, sitterPlaceSchema } from '#shared/domain/lighting/schema.ts'

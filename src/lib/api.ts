@@ -37,12 +37,16 @@ export async function api<Schema extends z.ZodType>(path: string, request: Reque
     })
   } catch (error) {
     if (error instanceof DOMException && error.name === 'AbortError') throw error
-    throw new ApiError('OFFLINE', 'Sconce cannot be reached. What you typed is still here; try again when you have a signal.')
+    throw new ApiError(
+      'OFFLINE',
+      'Sconce cannot be reached. What you typed is still here; try again when you have a signal.',
+    )
   }
   const json: unknown = await response.json().catch(() => undefined)
   if (response.ok) return request.response.parse(json)
   const envelope = errorEnvelopeSchema.safeParse(json)
-  if (!envelope.success) throw new ApiError('INTERNAL', 'Sconce answered with something it should not. Nothing was changed; try again.')
+  if (!envelope.success)
+    throw new ApiError('INTERNAL', 'Sconce answered with something it should not. Nothing was changed; try again.')
   const { code, message, issues, details } = envelope.data.error
   throw new ApiError(code, message, issues, details)
 }

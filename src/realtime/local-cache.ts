@@ -105,6 +105,11 @@ export function forgetCache(name: string): Promise<void> {
 
 /** Forgets everything of a person on this device: at sign-out, after what is unsent has gone or was given up. */
 export async function forgetPerson(userId: string): Promise<void> {
-  await Promise.all(registered().filter((name) => name.startsWith(`rt:${userId}:`)).map(forgetCache))
-  if ('caches' in window) for (const key of await caches.keys()) if (key.startsWith('sconce-data')) await caches.delete(key)
+  await Promise.all(
+    registered()
+      .filter((name) => name.startsWith(`rt:${userId}:`))
+      .map(forgetCache),
+  )
+  if ('caches' in window)
+    for (const key of await caches.keys()) if (key.startsWith('sconce-data')) await caches.delete(key)
 }

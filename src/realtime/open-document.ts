@@ -47,7 +47,14 @@ const FIRST_MINUTES_MS = 120_000
 export function openDocument({ kind, shootId, cacheName, onChanged }: Options): OpenDocument {
   const doc = new Y.Doc()
   const acks = countAcknowledgements(unsentOf(cacheName))
-  const facts: SaveFacts = { connected: false, settled: false, unsent: acks.unsent(), kept: false, refused: null, outdated: false }
+  const facts: SaveFacts = {
+    connected: false,
+    settled: false,
+    unsent: acks.unsent(),
+    kept: false,
+    refused: null,
+    outdated: false,
+  }
   const save = createStore<SaveState>(saveStateOf(facts))
   const hello = createStore<Hello | null>(null)
   const ready = createStore(false)
@@ -99,7 +106,10 @@ export function openDocument({ kind, shootId, cacheName, onChanged }: Options): 
     const said = parseHello(decoding.readVarString(decoder))
     if (!said) return
     hello.set(said)
-    update({ outdated: said.schema > DOCUMENT_SCHEMA, refused: said.frozen === null ? facts.refused : (REFUSED_WORDS['frozen'] ?? null) })
+    update({
+      outdated: said.schema > DOCUMENT_SCHEMA,
+      refused: said.frozen === null ? facts.refused : (REFUSED_WORDS['frozen'] ?? null),
+    })
   }
   provider.messageHandlers[MESSAGE.changed] = (_encoder, decoder) => {
     onChanged(parseQueryKeys(decoding.readVarString(decoder)))

@@ -44,6 +44,13 @@ export function usePlan(): Plan {
   return useMemo(
     () => readPlan({ brief, minutes, board, plan, looks: wardrobe, lighting }),
     // eslint-disable-next-line react-hooks/exhaustive-deps -- the maps change identity when their content does; the objects around them are new at every render
-    [brief, minutes, ...Object.values(board), ...Object.values(plan), ...Object.values(wardrobe), ...Object.values(lighting)],
+    [
+      brief,
+      minutes,
+      ...Object.values(board),
+      ...Object.values(plan),
+      ...Object.values(wardrobe),
+      ...Object.values(lighting),
+    ],
   )
 }

@@ -18,7 +18,17 @@ export type TextLineProps = {
 }
 
 /** A text that others share: taken over twice a second while typing and on leaving, not at every key. */
-export function TextLine({ label, value, onChange, maxLength, prose = false, required = false, readOnly = false, hint, placeholder }: TextLineProps) {
+export function TextLine({
+  label,
+  value,
+  onChange,
+  maxLength,
+  prose = false,
+  required = false,
+  readOnly = false,
+  hint,
+  placeholder,
+}: TextLineProps) {
   const draft = useDraft(value, (text) => {
     if (!required || text.trim() !== '') onChange(text)
   })
@@ -32,7 +42,11 @@ export function TextLine({ label, value, onChange, maxLength, prose = false, req
   }
   return (
     <Field label={label} {...(hint === undefined ? {} : { hint })}>
-      {prose ? <Textarea rows={2} {...control} /> : <Input {...control} onKeyDown={(event) => event.key === 'Enter' && draft.leave()} />}
+      {prose ? (
+        <Textarea rows={2} {...control} />
+      ) : (
+        <Input {...control} onKeyDown={(event) => event.key === 'Enter' && draft.leave()} />
+      )}
     </Field>
   )
 }

@@ -36,8 +36,13 @@ async function settle(page: Page): Promise<void> {
 async function inspect(page: Page, name: string): Promise<void> {
   const { violations } = await new AxeBuilder({ page }).analyze()
   const serious = violations.filter(({ impact }) => impact === 'serious' || impact === 'critical')
-  expect(serious.map(({ id, nodes }) => `${name}: ${id} ${nodes.map((node) => node.target.join(' ')).join(' | ')}`)).toEqual([])
-  const { scroll, client } = await page.evaluate(() => ({ scroll: document.documentElement.scrollWidth, client: document.documentElement.clientWidth }))
+  expect(
+    serious.map(({ id, nodes }) => `${name}: ${id} ${nodes.map((node) => node.target.join(' ')).join(' | ')}`),
+  ).toEqual([])
+  const { scroll, client } = await page.evaluate(() => ({
+    scroll: document.documentElement.scrollWidth,
+    client: document.documentElement.clientWidth,
+  }))
   expect(scroll, `${name} is wider than the screen`).toBeLessThanOrEqual(client)
 }
 
@@ -47,14 +52,19 @@ async function take(page: Page, name: string, size: string): Promise<void> {
   await page.screenshot({ path: join(FOLDER, `${name}-${size}.png`) })
 }
 
-for (const [size, viewport] of [['desk', DESK], ['phone', PHONE]] as const) {
+for (const [size, viewport] of [
+  ['desk', DESK],
+  ['phone', PHONE],
+] as const) {
   test.describe(`at ${viewport.width} × ${viewport.height}`, () => {
     for (const role of ['photographer', 'stylist', 'client', 'crew'] as const) {
       test(`the ${role}'s screens have nothing serious by axe and fit`, async ({ browser, baseURL }) => {
         test.setTimeout(120_000)
         const { page, context, errors } = await visit(browser, viewport, baseURL ?? '')
         await signInDemo(page, role)
-        const session: { studios: { id: string }[] } = await page.evaluate(() => fetch('/api/session').then((answer) => answer.json()))
+        const session: { studios: { id: string }[] } = await page.evaluate(() =>
+          fetch('/api/session').then((answer) => answer.json()),
+        )
         const shoot = await openDemoShoot(page)
         let setup = ''
         if (role === 'photographer') {

@@ -1,7 +1,24 @@
 import { type Page, expect, test } from '@playwright/test'
 import { picture } from '#tests/e2e/support/story-pictures.ts'
 import { DESK, PHONE, type Visit, visit } from '#tests/e2e/support/people.ts'
-import { addLight, addSet, createAccount, goTo, hangLook, invite, moveByKeys, moveShotByKeys, openLetter, planShot, proposal, saved, shotTitles, signSaysSaved, strip, wall } from '#tests/e2e/support/story-steps.ts'
+import {
+  addLight,
+  addSet,
+  createAccount,
+  goTo,
+  hangLook,
+  invite,
+  moveByKeys,
+  moveShotByKeys,
+  openLetter,
+  planShot,
+  proposal,
+  saved,
+  shotTitles,
+  signSaysSaved,
+  strip,
+  wall,
+} from '#tests/e2e/support/story-steps.ts'
 import { type StorySite, everythingEverWritten, openStorySite } from '#tests/e2e/support/story-site.ts'
 
 /** A shoot planned by four people at once, from an empty studio to the crew's phone. One test: every step needs the ones before. */
@@ -32,12 +49,18 @@ test('four people plan a shoot from nothing and follow it on a phone', async () 
   await test.step('the photographer opens a studio and puts a flash into its kit room', async () => {
     await createAccount(lead, 'Noor Castell', 'noor@example.com')
     await lead.getByLabel('Name of the studio').fill('Attic Lane Studio')
-    await lead.getByRole('button', { name: /open the studio|create|name it|open/i }).first().click()
+    await lead
+      .getByRole('button', { name: /open the studio|create|name it|open/i })
+      .first()
+      .click()
     await goTo(lead, 'Kit room')
     await lead.getByRole('button', { name: 'Add a flash unit' }).click()
     const dialog = lead.getByRole('dialog')
     await dialog.getByLabel('Name').fill('Pocket flash, guide number 44')
-    await dialog.getByLabel(/^Guide number/).first().fill('44')
+    await dialog
+      .getByLabel(/^Guide number/)
+      .first()
+      .fill('44')
     await dialog.getByRole('button', { name: 'Save', exact: true }).click()
     await expect(lead.getByText('Pocket flash, guide number 44')).toBeVisible()
   })
@@ -46,7 +69,10 @@ test('four people plan a shoot from nothing and follow it on a phone', async () 
     await goTo(lead, 'Shoots')
     await lead.getByRole('button', { name: 'Start a shoot' }).first().click()
     await lead.getByLabel('Title').fill('Three winters')
-    await lead.getByRole('dialog').getByRole('button', { name: /^Start/ }).click()
+    await lead
+      .getByRole('dialog')
+      .getByRole('button', { name: /^Start/ })
+      .click()
     await lead.waitForURL(/\/shoots\/[0-9a-f-]{36}/)
     await goTo(lead, 'Brief')
     await lead.getByLabel('Client').fill('Hollow Kiln, tea merchants')
@@ -81,10 +107,28 @@ test('four people plan a shoot from nothing and follow it on a phone', async () 
   await test.step('the stylist writes down three sitters and four looks with their pieces', async () => {
     const page = stylist.page
     await goTo(page, 'Looks')
-    await hangLook(page, { look: 'Night coat', sitter: 'Ana Brook', character: 'The Astronomer', pieces: ['Night coat, boiled wool', 'Gloves, black kid'], hair: 'Loose' })
-    await hangLook(page, { look: 'Work coat', sitter: 'Emil Hart', character: 'The Clockmaker', pieces: ['Work coat, ochre drill'], hair: 'Tied' })
+    await hangLook(page, {
+      look: 'Night coat',
+      sitter: 'Ana Brook',
+      character: 'The Astronomer',
+      pieces: ['Night coat, boiled wool', 'Gloves, black kid'],
+      hair: 'Loose',
+    })
+    await hangLook(page, {
+      look: 'Work coat',
+      sitter: 'Emil Hart',
+      character: 'The Clockmaker',
+      pieces: ['Work coat, ochre drill'],
+      hair: 'Tied',
+    })
     await hangLook(page, { look: 'Coat open', on: 'The Clockmaker', pieces: ['Shirt, undyed linen'], hair: 'Tied' })
-    await hangLook(page, { look: 'Long line', sitter: 'Ria Moss', character: 'The Botanist', pieces: ['Gown, bottle green'], hair: 'Cropped' })
+    await hangLook(page, {
+      look: 'Long line',
+      sitter: 'Ria Moss',
+      character: 'The Botanist',
+      pieces: ['Gown, bottle green'],
+      hair: 'Cropped',
+    })
     await saved(page)
   })
 
@@ -145,7 +189,15 @@ test('four people plan a shoot from nothing and follow it on a phone', async () 
     await expect(lead.locator('[data-kind="frame"]')).toHaveCount(0)
     await stylist.context.setOffline(false)
     await expect(lead.locator('[data-kind="frame"]')).toHaveCount(1, { timeout: 20_000 })
-    await expect.poll(() => lead.locator('[data-kind="frame"] img').evaluateAll((all) => all.some((one) => one instanceof HTMLImageElement && one.naturalWidth > 0)), { timeout: 20_000 }).toBe(true)
+    await expect
+      .poll(
+        () =>
+          lead
+            .locator('[data-kind="frame"] img')
+            .evaluateAll((all) => all.some((one) => one instanceof HTMLImageElement && one.naturalWidth > 0)),
+        { timeout: 20_000 },
+      )
+      .toBe(true)
     await saved(page)
     await page.setViewportSize(DESK)
   })
@@ -162,7 +214,11 @@ test('four people plan a shoot from nothing and follow it on a phone', async () 
     }
     await Promise.all([
       moveByKeys(lead, lead.locator('[data-kind="frame"]').first(), ['ArrowRight', 'ArrowRight', 'ArrowDown']),
-      moveByKeys(stylist.page, stylist.page.locator('[data-kind="tag"]').first(), ['ArrowDown', 'ArrowDown', 'ArrowRight']),
+      moveByKeys(stylist.page, stylist.page.locator('[data-kind="tag"]').first(), [
+        'ArrowDown',
+        'ArrowDown',
+        'ArrowRight',
+      ]),
       moveShotByKeys(client.page, 'Picture c', 2),
       moveShotByKeys(lead, 'Picture k', -1),
     ])
@@ -181,7 +237,10 @@ test('four people plan a shoot from nothing and follow it on a phone', async () 
     const card = crew.page
     await goTo(card, 'Day')
     await card.getByRole('button', { name: 'All shots' }).click()
-    await card.getByRole('dialog').getByRole('button', { name: /^Shot 2,/ }).click()
+    await card
+      .getByRole('dialog')
+      .getByRole('button', { name: /^Shot 2,/ })
+      .click()
     await card.getByRole('menuitem', { name: 'Begin this one now' }).click()
     await expect(card.getByRole('dialog')).toBeHidden()
     const cardBefore = await card.getByRole('list').first().textContent()
@@ -189,7 +248,10 @@ test('four people plan a shoot from nothing and follow it on a phone', async () 
     const before = await proposal(lead)
     await lead.getByRole('button', { name: 'Leave it' }).click()
     await goTo(lead, 'Lighting')
-    await lead.getByRole('link', { name: /Setup 2/ }).first().click()
+    await lead
+      .getByRole('link', { name: /Setup 2/ })
+      .first()
+      .click()
     const main = lead.locator('[aria-roledescription="movable part"][aria-label^="Main"]').first()
     const stood = (await main.getAttribute('aria-label')) ?? ''
     await main.focus()
@@ -221,12 +283,21 @@ test('four people plan a shoot from nothing and follow it on a phone', async () 
   await test.step('the client signs a look off; gloves changed afterwards un-sign it and say what changed', async () => {
     const { page } = client
     await goTo(page, 'Sign-off')
-    await page.getByRole('button', { name: /Night coat/ }).first().click()
+    await page
+      .getByRole('button', { name: /Night coat/ })
+      .first()
+      .click()
     await page.getByRole('button', { name: 'Sign off this look' }).click()
     await expect(page.getByText(/Signed off by you/)).toBeVisible()
     await goTo(stylist.page, 'Looks')
-    await stylist.page.getByRole('button', { name: /Night coat/ }).first().click()
-    await stylist.page.getByRole('button', { name: /Gloves, black kid/ }).first().click()
+    await stylist.page
+      .getByRole('button', { name: /Night coat/ })
+      .first()
+      .click()
+    await stylist.page
+      .getByRole('button', { name: /Gloves, black kid/ })
+      .first()
+      .click()
     await stylist.page.getByLabel('Piece', { exact: true }).fill('Gloves, grey wool')
     await stylist.page.getByLabel('Piece', { exact: true }).blur()
     await saved(stylist.page)

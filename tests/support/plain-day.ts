@@ -12,7 +12,14 @@ export function shotId(number: number): ShotId {
  * So shot 1 is planned 560–590, shot 2 600–630, shot 3 640–670, shot 4 680–710.
  */
 export function plainDay(needs: readonly Need[], hardOutMin: number): OrderProblem {
-  const transition = (lightingMin: number): Transition => ({ lightingMin, changesLight: true, moveMin: 0, strikeMin: 0, dressMin: 0, actions: 0 })
+  const transition = (lightingMin: number): Transition => ({
+    lightingMin,
+    changesLight: true,
+    moveMin: 0,
+    strikeMin: 0,
+    dressMin: 0,
+    actions: 0,
+  })
   return {
     dayId: dayIdSchema.parse('00000000-0000-4000-8000-0000000000aa'),
     shots: needs.map((need, index) => ({

@@ -8,7 +8,10 @@ export const callSheet = pgTable(
   'call_sheet',
   {
     id: uuid('id').primaryKey(),
-    shootId: uuid('shoot_id').$type<ShootId>().notNull().references(() => shoot.id, { onDelete: 'cascade' }),
+    shootId: uuid('shoot_id')
+      .$type<ShootId>()
+      .notNull()
+      .references(() => shoot.id, { onDelete: 'cascade' }),
     number: integer('number').notNull(),
     content: jsonb('content').notNull(),
     issuedBy: text('issued_by').$type<UserId>().notNull(),
@@ -20,7 +23,9 @@ export const callSheet = pgTable(
 /** One person's copy with their own call on top, and whether they confirmed. */
 export const callSheetCopy = pgTable('call_sheet_copy', {
   id: uuid('id').primaryKey(),
-  callSheetId: uuid('call_sheet_id').notNull().references(() => callSheet.id, { onDelete: 'cascade' }),
+  callSheetId: uuid('call_sheet_id')
+    .notNull()
+    .references(() => callSheet.id, { onDelete: 'cascade' }),
   userId: text('user_id').$type<UserId>(),
   sitterId: uuid('sitter_id').$type<SitterId>(),
   email: text('email').notNull(),
@@ -29,7 +34,10 @@ export const callSheetCopy = pgTable('call_sheet_copy', {
 
 export const release = pgTable('release', {
   id: uuid('id').primaryKey(),
-  shootId: uuid('shoot_id').$type<ShootId>().notNull().references(() => shoot.id, { onDelete: 'cascade' }),
+  shootId: uuid('shoot_id')
+    .$type<ShootId>()
+    .notNull()
+    .references(() => shoot.id, { onDelete: 'cascade' }),
   sitterId: uuid('sitter_id').$type<SitterId>().notNull(),
   text: text('text').notNull(),
   signedName: text('signed_name'),

@@ -9,10 +9,16 @@ export const comment = pgTable(
   'comment',
   {
     id: uuid('id').$type<CommentId>().primaryKey(),
-    shootId: uuid('shoot_id').$type<ShootId>().notNull().references(() => shoot.id, { onDelete: 'cascade' }),
+    shootId: uuid('shoot_id')
+      .$type<ShootId>()
+      .notNull()
+      .references(() => shoot.id, { onDelete: 'cascade' }),
     subject: text('subject', { enum: COMMENT_SUBJECTS }).notNull(),
     subjectId: uuid('subject_id').notNull(),
-    userId: text('user_id').$type<UserId>().notNull().references(() => user.id),
+    userId: text('user_id')
+      .$type<UserId>()
+      .notNull()
+      .references(() => user.id),
     text: text('text').notNull(),
     at: instant('at').notNull().defaultNow(),
   },

@@ -6,7 +6,10 @@ import { shoot } from './shoots.ts'
 /** Money in minor units with its currency. */
 export const budgetLine = pgTable('budget_line', {
   id: uuid('id').primaryKey(),
-  shootId: uuid('shoot_id').$type<ShootId>().notNull().references(() => shoot.id, { onDelete: 'cascade' }),
+  shootId: uuid('shoot_id')
+    .$type<ShootId>()
+    .notNull()
+    .references(() => shoot.id, { onDelete: 'cascade' }),
   what: text('what').notNull(),
   plannedMinor: bigint('planned_minor', { mode: 'number' }),
   actualMinor: bigint('actual_minor', { mode: 'number' }),
@@ -15,7 +18,10 @@ export const budgetLine = pgTable('budget_line', {
 
 export const estimate = pgTable('estimate', {
   id: uuid('id').primaryKey(),
-  shootId: uuid('shoot_id').$type<ShootId>().notNull().references(() => shoot.id, { onDelete: 'cascade' }),
+  shootId: uuid('shoot_id')
+    .$type<ShootId>()
+    .notNull()
+    .references(() => shoot.id, { onDelete: 'cascade' }),
   content: jsonb('content').notNull(),
   totalMinor: bigint('total_minor', { mode: 'number' }).notNull(),
   currency: text('currency').notNull(),
@@ -25,7 +31,10 @@ export const estimate = pgTable('estimate', {
 
 export const payment = pgTable('payment', {
   id: uuid('id').primaryKey(),
-  shootId: uuid('shoot_id').$type<ShootId>().notNull().references(() => shoot.id, { onDelete: 'cascade' }),
+  shootId: uuid('shoot_id')
+    .$type<ShootId>()
+    .notNull()
+    .references(() => shoot.id, { onDelete: 'cascade' }),
   amountMinor: bigint('amount_minor', { mode: 'number' }).notNull(),
   currency: text('currency').notNull(),
   status: text('status').notNull(),

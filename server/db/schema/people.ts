@@ -11,13 +11,20 @@ export const invitation = pgTable(
   'invitation',
   {
     id: uuid('id').$type<InvitationId>().primaryKey(),
-    shootId: uuid('shoot_id').$type<ShootId>().references(() => shoot.id, { onDelete: 'cascade' }),
-    studioId: uuid('studio_id').$type<StudioId>().references(() => studio.id, { onDelete: 'cascade' }),
+    shootId: uuid('shoot_id')
+      .$type<ShootId>()
+      .references(() => shoot.id, { onDelete: 'cascade' }),
+    studioId: uuid('studio_id')
+      .$type<StudioId>()
+      .references(() => studio.id, { onDelete: 'cascade' }),
     email: text('email').notNull(),
     name: text('name').notNull().default(''),
     role: text('role').notNull(),
     tokenHash: bytea('token_hash').notNull().unique(),
-    invitedBy: text('invited_by').$type<UserId>().notNull().references(() => user.id, { onDelete: 'cascade' }),
+    invitedBy: text('invited_by')
+      .$type<UserId>()
+      .notNull()
+      .references(() => user.id, { onDelete: 'cascade' }),
     sentAt: instant('sent_at').notNull(),
     expiresAt: instant('expires_at').notNull(),
     acceptedAt: instant('accepted_at'),
@@ -30,7 +37,10 @@ export const invitation = pgTable(
 /** A sitter's link: reads one call and signs one release, no account. Token hashed, scoped, expiring, revocable. */
 export const signedLink = pgTable('signed_link', {
   id: uuid('id').primaryKey(),
-  shootId: uuid('shoot_id').$type<ShootId>().notNull().references(() => shoot.id, { onDelete: 'cascade' }),
+  shootId: uuid('shoot_id')
+    .$type<ShootId>()
+    .notNull()
+    .references(() => shoot.id, { onDelete: 'cascade' }),
   sitterId: uuid('sitter_id').notNull(),
   scope: text('scope').notNull(),
   tokenHash: bytea('token_hash').notNull().unique(),

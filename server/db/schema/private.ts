@@ -6,7 +6,10 @@ import { shoot } from './shoots.ts'
 export const sitterPrivate = pgTable(
   'sitter_private',
   {
-    shootId: uuid('shoot_id').$type<ShootId>().notNull().references(() => shoot.id, { onDelete: 'cascade' }),
+    shootId: uuid('shoot_id')
+      .$type<ShootId>()
+      .notNull()
+      .references(() => shoot.id, { onDelete: 'cascade' }),
     sitterId: uuid('sitter_id').$type<SitterId>().notNull(),
     sizes: text('sizes').notNull().default(''),
     contact: text('contact').notNull().default(''),
@@ -18,7 +21,10 @@ export const sitterPrivate = pgTable(
 export const pieceCost = pgTable(
   'piece_cost',
   {
-    shootId: uuid('shoot_id').$type<ShootId>().notNull().references(() => shoot.id, { onDelete: 'cascade' }),
+    shootId: uuid('shoot_id')
+      .$type<ShootId>()
+      .notNull()
+      .references(() => shoot.id, { onDelete: 'cascade' }),
     pieceId: uuid('piece_id').$type<PieceId>().notNull(),
     costMinor: bigint('cost_minor', { mode: 'number' }),
     costCurrency: text('cost_currency'),
@@ -30,6 +36,9 @@ export const pieceCost = pgTable(
 )
 
 export const privateNote = pgTable('private_note', {
-  shootId: uuid('shoot_id').$type<ShootId>().primaryKey().references(() => shoot.id, { onDelete: 'cascade' }),
+  shootId: uuid('shoot_id')
+    .$type<ShootId>()
+    .primaryKey()
+    .references(() => shoot.id, { onDelete: 'cascade' }),
   text: text('text').notNull().default(''),
 })

@@ -9,7 +9,10 @@ export const rtDoc = pgTable(
   'rt_doc',
   {
     id: uuid('id').$type<DocId>().primaryKey(),
-    shootId: uuid('shoot_id').$type<ShootId>().notNull().references(() => shoot.id, { onDelete: 'cascade' }),
+    shootId: uuid('shoot_id')
+      .$type<ShootId>()
+      .notNull()
+      .references(() => shoot.id, { onDelete: 'cascade' }),
     kind: text('kind', { enum: DOCUMENT_KINDS }).notNull(),
     epoch: integer('epoch').notNull().default(1),
     schema: integer('schema').notNull().default(1),
@@ -28,7 +31,10 @@ export const rtDoc = pgTable(
 export const rtUpdate = pgTable(
   'rt_update',
   {
-    docId: uuid('doc_id').$type<DocId>().notNull().references(() => rtDoc.id, { onDelete: 'cascade' }),
+    docId: uuid('doc_id')
+      .$type<DocId>()
+      .notNull()
+      .references(() => rtDoc.id, { onDelete: 'cascade' }),
     seq: bigint('seq', { mode: 'number' }).notNull(),
     userId: text('user_id').$type<UserId>(),
     at: instant('at').notNull().defaultNow(),
@@ -40,7 +46,10 @@ export const rtUpdate = pgTable(
 export const rtSnapshot = pgTable(
   'rt_snapshot',
   {
-    docId: uuid('doc_id').$type<DocId>().notNull().references(() => rtDoc.id, { onDelete: 'cascade' }),
+    docId: uuid('doc_id')
+      .$type<DocId>()
+      .notNull()
+      .references(() => rtDoc.id, { onDelete: 'cascade' }),
     seq: bigint('seq', { mode: 'number' }).notNull(),
     kind: text('kind').notNull(),
     state: bytea('state').notNull(),
@@ -54,7 +63,10 @@ export const rtQuarantine = pgTable(
   'rt_quarantine',
   {
     id: bigserial('id', { mode: 'number' }).primaryKey(),
-    docId: uuid('doc_id').$type<DocId>().notNull().references(() => rtDoc.id, { onDelete: 'cascade' }),
+    docId: uuid('doc_id')
+      .$type<DocId>()
+      .notNull()
+      .references(() => rtDoc.id, { onDelete: 'cascade' }),
     userId: text('user_id').$type<UserId>(),
     reason: text('reason').notNull(),
     update: bytea('update').notNull(),
@@ -67,7 +79,10 @@ export const rtQuarantine = pgTable(
 export const rtTouch = pgTable(
   'rt_touch',
   {
-    docId: uuid('doc_id').$type<DocId>().notNull().references(() => rtDoc.id, { onDelete: 'cascade' }),
+    docId: uuid('doc_id')
+      .$type<DocId>()
+      .notNull()
+      .references(() => rtDoc.id, { onDelete: 'cascade' }),
     item: text('item').notNull(),
     userId: text('user_id').$type<UserId>().notNull(),
     at: instant('at').notNull(),
@@ -78,7 +93,10 @@ export const rtTouch = pgTable(
 /** The board as it stood, named; the states are in `rt_snapshot` under kind `version`. */
 export const keptVersion = pgTable('kept_version', {
   id: uuid('id').primaryKey(),
-  shootId: uuid('shoot_id').$type<ShootId>().notNull().references(() => shoot.id, { onDelete: 'cascade' }),
+  shootId: uuid('shoot_id')
+    .$type<ShootId>()
+    .notNull()
+    .references(() => shoot.id, { onDelete: 'cascade' }),
   name: text('name').notNull(),
   userId: text('user_id').$type<UserId>().notNull(),
   at: instant('at').notNull().defaultNow(),

@@ -8,7 +8,10 @@ import { studio } from './studios.ts'
 
 export const shoot = pgTable('shoot', {
   id: uuid('id').$type<ShootId>().primaryKey(),
-  studioId: uuid('studio_id').$type<StudioId>().notNull().references(() => studio.id, { onDelete: 'cascade' }),
+  studioId: uuid('studio_id')
+    .$type<StudioId>()
+    .notNull()
+    .references(() => studio.id, { onDelete: 'cascade' }),
   title: text('title').notNull(),
   client: text('client').notNull().default(''),
   idea: text('idea').notNull().default(''),
@@ -16,12 +19,18 @@ export const shoot = pgTable('shoot', {
   date: date('date', { mode: 'string' }),
   zone: text('zone').notNull(),
   signOffByMs: bigint('sign_off_by_ms', { mode: 'number' }),
-  createdBy: text('created_by').$type<UserId>().notNull().references(() => user.id),
+  createdBy: text('created_by')
+    .$type<UserId>()
+    .notNull()
+    .references(() => user.id),
   createdAt: instant('created_at').notNull().defaultNow(),
 })
 
 export const location = pgTable('location', {
-  shootId: uuid('shoot_id').$type<ShootId>().primaryKey().references(() => shoot.id, { onDelete: 'cascade' }),
+  shootId: uuid('shoot_id')
+    .$type<ShootId>()
+    .primaryKey()
+    .references(() => shoot.id, { onDelete: 'cascade' }),
   name: text('name').notNull().default(''),
   address: text('address').notNull().default(''),
   latitude: doublePrecision('latitude'),
@@ -32,7 +41,10 @@ export const location = pgTable('location', {
 
 export const room = pgTable('room', {
   id: uuid('id').$type<RoomId>().primaryKey(),
-  shootId: uuid('shoot_id').$type<ShootId>().notNull().references(() => shoot.id, { onDelete: 'cascade' }),
+  shootId: uuid('shoot_id')
+    .$type<ShootId>()
+    .notNull()
+    .references(() => shoot.id, { onDelete: 'cascade' }),
   position: integer('position').notNull(),
   name: text('name').notNull(),
   widthM: doublePrecision('width_m'),
@@ -45,7 +57,10 @@ export const room = pgTable('room', {
 
 export const deliverable = pgTable('deliverable', {
   id: uuid('id').$type<DeliverableId>().primaryKey(),
-  shootId: uuid('shoot_id').$type<ShootId>().notNull().references(() => shoot.id, { onDelete: 'cascade' }),
+  shootId: uuid('shoot_id')
+    .$type<ShootId>()
+    .notNull()
+    .references(() => shoot.id, { onDelete: 'cascade' }),
   position: integer('position').notNull(),
   title: text('title').notNull(),
   count: integer('count').notNull().default(1),
@@ -57,8 +72,14 @@ export const deliverable = pgTable('deliverable', {
 export const shootMember = pgTable(
   'shoot_member',
   {
-    shootId: uuid('shoot_id').$type<ShootId>().notNull().references(() => shoot.id, { onDelete: 'cascade' }),
-    userId: text('user_id').$type<UserId>().notNull().references(() => user.id, { onDelete: 'cascade' }),
+    shootId: uuid('shoot_id')
+      .$type<ShootId>()
+      .notNull()
+      .references(() => shoot.id, { onDelete: 'cascade' }),
+    userId: text('user_id')
+      .$type<UserId>()
+      .notNull()
+      .references(() => user.id, { onDelete: 'cascade' }),
     role: text('role', { enum: ROLES }).notNull(),
     createdAt: instant('created_at').notNull().defaultNow(),
   },

@@ -9,7 +9,10 @@ export const signOff = pgTable(
   'sign_off',
   {
     id: uuid('id').$type<SignOffId>().primaryKey(),
-    shootId: uuid('shoot_id').$type<ShootId>().notNull().references(() => shoot.id, { onDelete: 'cascade' }),
+    shootId: uuid('shoot_id')
+      .$type<ShootId>()
+      .notNull()
+      .references(() => shoot.id, { onDelete: 'cascade' }),
     lookId: uuid('look_id').$type<LookId>().notNull(),
     answer: text('answer', { enum: ANSWERS }).notNull(),
     words: text('words').notNull().default(''),

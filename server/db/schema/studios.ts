@@ -15,8 +15,14 @@ export const studio = pgTable('studio', {
 export const studioMember = pgTable(
   'studio_member',
   {
-    studioId: uuid('studio_id').$type<StudioId>().notNull().references(() => studio.id, { onDelete: 'cascade' }),
-    userId: text('user_id').$type<UserId>().notNull().references(() => user.id, { onDelete: 'cascade' }),
+    studioId: uuid('studio_id')
+      .$type<StudioId>()
+      .notNull()
+      .references(() => studio.id, { onDelete: 'cascade' }),
+    userId: text('user_id')
+      .$type<UserId>()
+      .notNull()
+      .references(() => user.id, { onDelete: 'cascade' }),
     role: text('role', { enum: STUDIO_ROLES }).notNull(),
     createdAt: instant('created_at').notNull().defaultNow(),
   },
@@ -29,7 +35,10 @@ export const kitItem = pgTable(
   {
     id: uuid('id').$type<KitItemId>().notNull(),
     version: integer('version').notNull(),
-    studioId: uuid('studio_id').$type<StudioId>().notNull().references(() => studio.id, { onDelete: 'cascade' }),
+    studioId: uuid('studio_id')
+      .$type<StudioId>()
+      .notNull()
+      .references(() => studio.id, { onDelete: 'cascade' }),
     input: jsonb('input').$type<KitInput>().notNull(),
     removedAt: instant('removed_at'),
     createdBy: text('created_by').$type<UserId>(),
@@ -41,7 +50,10 @@ export const kitItem = pgTable(
 /** A setup written so that somebody else can rebuild it. */
 export const recipe = pgTable('recipe', {
   id: uuid('id').primaryKey(),
-  studioId: uuid('studio_id').$type<StudioId>().notNull().references(() => studio.id, { onDelete: 'cascade' }),
+  studioId: uuid('studio_id')
+    .$type<StudioId>()
+    .notNull()
+    .references(() => studio.id, { onDelete: 'cascade' }),
   name: text('name').notNull(),
   content: jsonb('content').notNull(),
   createdBy: text('created_by').$type<UserId>(),
@@ -50,7 +62,10 @@ export const recipe = pgTable('recipe', {
 
 /** A studio's own minutes for the actions of a changeover. */
 export const minutesDefault = pgTable('minutes_default', {
-  studioId: uuid('studio_id').$type<StudioId>().primaryKey().references(() => studio.id, { onDelete: 'cascade' }),
+  studioId: uuid('studio_id')
+    .$type<StudioId>()
+    .primaryKey()
+    .references(() => studio.id, { onDelete: 'cascade' }),
   minutes: jsonb('minutes').$type<Minutes>().notNull(),
   updatedAt: instant('updated_at').notNull().defaultNow(),
 })

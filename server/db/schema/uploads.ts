@@ -13,8 +13,13 @@ export const upload = pgTable(
   'upload',
   {
     id: uuid('id').$type<UploadId>().primaryKey(),
-    shootId: uuid('shoot_id').$type<ShootId>().notNull().references(() => shoot.id, { onDelete: 'cascade' }),
-    sha256: text('sha256').notNull().references(() => blob.sha256),
+    shootId: uuid('shoot_id')
+      .$type<ShootId>()
+      .notNull()
+      .references(() => shoot.id, { onDelete: 'cascade' }),
+    sha256: text('sha256')
+      .notNull()
+      .references(() => blob.sha256),
     mime: text('mime').notNull(),
     sizeBytes: integer('size_bytes').notNull(),
     widthPx: integer('width_px').notNull(),
@@ -34,7 +39,9 @@ export const upload = pgTable(
 export const rendition = pgTable(
   'rendition',
   {
-    sha256: text('sha256').notNull().references(() => blob.sha256, { onDelete: 'cascade' }),
+    sha256: text('sha256')
+      .notNull()
+      .references(() => blob.sha256, { onDelete: 'cascade' }),
     longEdgePx: integer('long_edge_px').notNull(),
     bytes: bytea('bytes').notNull(),
   },

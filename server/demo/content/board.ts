@@ -10,7 +10,16 @@ import { DEMO_SHOTS } from './plan.ts'
 /** What an upload told of itself. */
 export type DemoUpload = { id: string; widthPx: number; heightPx: number; palette: string[] }
 
-type FrameRow = [crop: string, x: number, y: number, width: number, caption: string, by: 'IM' | 'SO' | 'CW', look?: string | undefined, shot?: string]
+type FrameRow = [
+  crop: string,
+  x: number,
+  y: number,
+  width: number,
+  caption: string,
+  by: 'IM' | 'SO' | 'CW',
+  look?: string | undefined,
+  shot?: string,
+]
 
 const FRAMES: readonly FrameRow[] = [
   ['warm-cool', 24, 44, 216, 'One side warm, one cool', 'IM', 'look-field', 'shot-field'],
@@ -43,11 +52,16 @@ export function demoBoard(
   random: () => number,
 ): Uint8Array {
   const doc = new Y.Doc()
-  putItems(doc, areas, [
-    { id: id('area-light'), box: [24, 8, 500, 24], title: 'Light and air', made: made('IM') },
-    { id: id('area-wear'), box: [560, 8, 470, 24], title: 'What they wear', made: made('SO') },
-    { id: id('area-place'), box: [1080, 8, 480, 24], title: 'Cloth, brass and place', made: made('SO') },
-  ], random)
+  putItems(
+    doc,
+    areas,
+    [
+      { id: id('area-light'), box: [24, 8, 500, 24], title: 'Light and air', made: made('IM') },
+      { id: id('area-wear'), box: [560, 8, 470, 24], title: 'What they wear', made: made('SO') },
+      { id: id('area-place'), box: [1080, 8, 480, 24], title: 'Cloth, brass and place', made: made('SO') },
+    ],
+    random,
+  )
   putItems(
     doc,
     frames,
@@ -70,23 +84,81 @@ export function demoBoard(
     }),
     random,
   )
-  const tag = (name: string, look: string, x: number, y: number, h: number): { id: string; box: Box; z: number; title: string; lookId: string; made: Made } => ({
-    id: id(name), box: [x, y, 186, h], z: 30, title: '', lookId: id(look), made: made('SO'),
+  const tag = (
+    name: string,
+    look: string,
+    x: number,
+    y: number,
+    h: number,
+  ): { id: string; box: Box; z: number; title: string; lookId: string; made: Made } => ({
+    id: id(name),
+    box: [x, y, 186, h],
+    z: 30,
+    title: '',
+    lookId: id(look),
+    made: made('SO'),
   })
-  putItems(doc, tags, [
-    tag('tag-night', 'look-night', 780, 52, 224),
-    tag('tag-work', 'look-work', 780, 292, 196),
-    tag('tag-line', 'look-line', 1478, 52, 178),
-    { id: id('tag-free'), box: [780, 504, 186, 112], z: 30, title: 'Before the fitting', text: 'Steam the cape. Felt for the collar comes Friday.', made: made('SO') },
-  ], random)
-  putItems(doc, notes, [
-    { id: id('note-comet'), box: [262, 262, 230, 64], z: 31, text: 'Everyone is waiting for the same comet.', made: made('IM') },
-    { id: id('note-tea'), box: [560, 872, 440, 44], z: 31, text: 'The tea is poured, never drunk.', made: made('CW') },
-    { id: id('note-quiet'), box: [1080, 820, 180, 84], z: 31, text: 'Quiet pictures. No one smiles before the toast.', made: made('IM') },
-  ], random)
-  putItems(doc, palettes, [
-    { id: id('palette-all'), box: [986, 52, 60, 190], z: 32, title: 'From five frames', colours: ['#23304a', '#8e6a22', '#6e7c84', '#b7a98f', '#3a1f12'], made: made('SO') },
-  ], random)
+  putItems(
+    doc,
+    tags,
+    [
+      tag('tag-night', 'look-night', 780, 52, 224),
+      tag('tag-work', 'look-work', 780, 292, 196),
+      tag('tag-line', 'look-line', 1478, 52, 178),
+      {
+        id: id('tag-free'),
+        box: [780, 504, 186, 112],
+        z: 30,
+        title: 'Before the fitting',
+        text: 'Steam the cape. Felt for the collar comes Friday.',
+        made: made('SO'),
+      },
+    ],
+    random,
+  )
+  putItems(
+    doc,
+    notes,
+    [
+      {
+        id: id('note-comet'),
+        box: [262, 262, 230, 64],
+        z: 31,
+        text: 'Everyone is waiting for the same comet.',
+        made: made('IM'),
+      },
+      {
+        id: id('note-tea'),
+        box: [560, 872, 440, 44],
+        z: 31,
+        text: 'The tea is poured, never drunk.',
+        made: made('CW'),
+      },
+      {
+        id: id('note-quiet'),
+        box: [1080, 820, 180, 84],
+        z: 31,
+        text: 'Quiet pictures. No one smiles before the toast.',
+        made: made('IM'),
+      },
+    ],
+    random,
+  )
+  putItems(
+    doc,
+    palettes,
+    [
+      {
+        id: id('palette-all'),
+        box: [986, 52, 60, 190],
+        z: 32,
+        title: 'From five frames',
+        colours: ['#23304a', '#8e6a22', '#6e7c84', '#b7a98f', '#3a1f12'],
+        made: made('SO'),
+      },
+    ],
+    random,
+  )
   let key: string | null = null
   putItems(
     doc,

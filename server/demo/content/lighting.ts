@@ -38,9 +38,21 @@ export function demoLighting(id: NamedIds, kit: readonly KitItem[], random: () =
     rows: readonly LightRow[],
     note: string,
   ) => {
-    putItems(doc, setups, [
-      { id: id(name), name: label, rank, note, background, camera: { ...camera, iso: 100, shutterS: 1 / 160, whiteBalanceK: 5500 } },
-    ], random)
+    putItems(
+      doc,
+      setups,
+      [
+        {
+          id: id(name),
+          name: label,
+          rank,
+          note,
+          background,
+          camera: { ...camera, iso: 100, shutterS: 1 / 160, whiteBalanceK: 5500 },
+        },
+      ],
+      random,
+    )
     putItems(
       doc,
       lights,
@@ -64,51 +76,224 @@ export function demoLighting(id: NamedIds, kit: readonly KitItem[], random: () =
     )
   }
 
-  setup('setup-octa', 'Octa left, panel right', 'a0',
+  setup(
+    'setup-octa',
+    'Octa left, panel right',
+    'a0',
     { at: [0, 1.35, 3.4], focalMm: 85, fNumber: F5_6 },
     { zM: -2.6, widthM: 6, heightM: 2.9, colour: '#8a6f56', what: 'Clock wall, ochre lime plaster' },
     [
-      { purpose: 'main', group: 'A', unit: 'Battery head 200 Ws', modifier: '90 cm octa', support: '2.4 m stand', power: 1 / 4, at: [-1.25, 1.95, 1.15], aim: [0, 1.35, 0] },
-      { purpose: 'rim', group: 'B', unit: 'Small flash, guide number 58', modifier: 'Strip 30 × 120 cm', support: '2.4 m stand', power: 1 / 8, at: [2.0, 1.9, -1.1], aim: [0, 1.4, 0] },
-    ], 'Soft and even enough to turn the head; the panel lifts the far cheek.')
-  setup('setup-close', 'Octa close, brass edge', 'a1',
+      {
+        purpose: 'main',
+        group: 'A',
+        unit: 'Battery head 200 Ws',
+        modifier: '90 cm octa',
+        support: '2.4 m stand',
+        power: 1 / 4,
+        at: [-1.25, 1.95, 1.15],
+        aim: [0, 1.35, 0],
+      },
+      {
+        purpose: 'rim',
+        group: 'B',
+        unit: 'Small flash, guide number 58',
+        modifier: 'Strip 30 × 120 cm',
+        support: '2.4 m stand',
+        power: 1 / 8,
+        at: [2.0, 1.9, -1.1],
+        aim: [0, 1.4, 0],
+      },
+    ],
+    'Soft and even enough to turn the head; the panel lifts the far cheek.',
+  )
+  setup(
+    'setup-close',
+    'Octa close, brass edge',
+    'a1',
     { at: [0.1, 1.3, 2.6], focalMm: 85, fNumber: F5_6 },
     { zM: -2.6, widthM: 6, heightM: 2.9, colour: '#8a6f56', what: 'Clock wall, ochre lime plaster' },
     [
-      { purpose: 'main', group: 'A', unit: 'Battery head 200 Ws', modifier: '90 cm octa', support: '2.4 m stand', power: 1 / 8, at: [-0.85, 1.75, 0.85], aim: [0, 1.3, 0] },
-      { purpose: 'rim', group: 'B', unit: 'Small flash, guide number 58', modifier: '20° grid', gels: ['Quarter warm +42'], support: '2.4 m stand', power: 1 / 32, at: [1.25, 1.9, -1.2], aim: [0.1, 1.2, 0], zoomMm: 70 },
-    ], 'For hands and small brass things.')
-  setup('setup-window', 'Window side, cool wall', 'a2',
+      {
+        purpose: 'main',
+        group: 'A',
+        unit: 'Battery head 200 Ws',
+        modifier: '90 cm octa',
+        support: '2.4 m stand',
+        power: 1 / 8,
+        at: [-0.85, 1.75, 0.85],
+        aim: [0, 1.3, 0],
+      },
+      {
+        purpose: 'rim',
+        group: 'B',
+        unit: 'Small flash, guide number 58',
+        modifier: '20° grid',
+        gels: ['Quarter warm +42'],
+        support: '2.4 m stand',
+        power: 1 / 32,
+        at: [1.25, 1.9, -1.2],
+        aim: [0.1, 1.2, 0],
+        zoomMm: 70,
+      },
+    ],
+    'For hands and small brass things.',
+  )
+  setup(
+    'setup-window',
+    'Window side, cool wall',
+    'a2',
     { at: [-0.1, 1.4, 3.1], focalMm: 85, fNumber: F5_6 },
     { zM: -2.8, widthM: 7, heightM: 3.2, colour: '#6b7076', what: 'Dome drum, grey distemper' },
     [
-      { purpose: 'main', group: 'A', unit: 'Battery head 200 Ws', modifier: '60 cm softbox', support: '2.4 m stand', power: 1 / 8, at: [1.5, 1.9, 0.6], aim: [0, 1.4, 0] },
-      { purpose: 'rim', group: 'B', unit: 'Small flash, guide number 58', modifier: '10° grid', support: '2.4 m stand', power: 1 / 32, at: [-1.3, 2, -0.9], aim: [0, 1.45, 0], zoomMm: 105 },
-      { purpose: 'background', group: 'C', unit: 'Small flash, guide number 58', gels: ['Full blue −131'], support: 'Floor stand', power: 1 / 8, at: [-1.2, 0.4, -1.4], aim: [0.2, 1.6, -2.8], zoomMm: 28, note: 'Low, behind the pier.' },
-    ], 'The softbox stands where a window would.')
-  setup('setup-broad', 'Broad and rim', 'a3',
+      {
+        purpose: 'main',
+        group: 'A',
+        unit: 'Battery head 200 Ws',
+        modifier: '60 cm softbox',
+        support: '2.4 m stand',
+        power: 1 / 8,
+        at: [1.5, 1.9, 0.6],
+        aim: [0, 1.4, 0],
+      },
+      {
+        purpose: 'rim',
+        group: 'B',
+        unit: 'Small flash, guide number 58',
+        modifier: '10° grid',
+        support: '2.4 m stand',
+        power: 1 / 32,
+        at: [-1.3, 2, -0.9],
+        aim: [0, 1.45, 0],
+        zoomMm: 105,
+      },
+      {
+        purpose: 'background',
+        group: 'C',
+        unit: 'Small flash, guide number 58',
+        gels: ['Full blue −131'],
+        support: 'Floor stand',
+        power: 1 / 8,
+        at: [-1.2, 0.4, -1.4],
+        aim: [0.2, 1.6, -2.8],
+        zoomMm: 28,
+        note: 'Low, behind the pier.',
+      },
+    ],
+    'The softbox stands where a window would.',
+  )
+  setup(
+    'setup-broad',
+    'Broad and rim',
+    'a3',
     { at: [0, 1.4, 4.6], focalMm: 50, fNumber: F8 },
     { zM: -2.8, widthM: 7, heightM: 3.2, colour: '#6b7076', what: 'Dome drum, grey distemper' },
     [
-      { purpose: 'main', group: 'A', unit: 'Battery head 400 Ws', modifier: 'White umbrella 110 cm', support: '3.3 m stand', power: 1 / 2, at: [-1.7, 2.3, 2.9], aim: [0, 1.2, 0] },
-      { purpose: 'rim', group: 'B', unit: 'Battery head 200 Ws', modifier: 'Strip 30 × 120 cm', support: '3.3 m stand', power: 1 / 2, at: [3.3, 2, -1.2], aim: [0, 1.3, 0] },
-      { purpose: 'background', group: 'C', unit: 'Small flash, guide number 58', support: 'Floor stand', power: 1 / 16, at: [0, 0.5, -1.6], aim: [0, 1.6, -2.8], zoomMm: 24 },
-    ], 'Room for three and for a raised cup.')
+      {
+        purpose: 'main',
+        group: 'A',
+        unit: 'Battery head 400 Ws',
+        modifier: 'White umbrella 110 cm',
+        support: '3.3 m stand',
+        power: 1 / 2,
+        at: [-1.7, 2.3, 2.9],
+        aim: [0, 1.2, 0],
+      },
+      {
+        purpose: 'rim',
+        group: 'B',
+        unit: 'Battery head 200 Ws',
+        modifier: 'Strip 30 × 120 cm',
+        support: '3.3 m stand',
+        power: 1 / 2,
+        at: [3.3, 2, -1.2],
+        aim: [0, 1.3, 0],
+      },
+      {
+        purpose: 'background',
+        group: 'C',
+        unit: 'Small flash, guide number 58',
+        support: 'Floor stand',
+        power: 1 / 16,
+        at: [0, 0.5, -1.6],
+        aim: [0, 1.6, -2.8],
+        zoomMm: 24,
+      },
+    ],
+    'Room for three and for a raised cup.',
+  )
 
-  putItems(doc, sitterPlaces, [
-    { id: id('place-octa'), setupId: id('setup-octa'), sitterId: id('clockmaker'), at: [0, 0], eyeHeightM: 1.28 },
-    { id: id('place-octa-2'), setupId: id('setup-octa'), sitterId: id('astronomer'), at: [0.55, -0.2], eyeHeightM: 1.6 },
-    { id: id('place-close'), setupId: id('setup-close'), sitterId: id('clockmaker'), at: [0, 0], eyeHeightM: 1.28 },
-    { id: id('place-window'), setupId: id('setup-window'), sitterId: id('astronomer'), at: [0, 0], eyeHeightM: 1.45 },
-    { id: id('place-broad-1'), setupId: id('setup-broad'), sitterId: id('astronomer'), at: [0, 0], eyeHeightM: 1.6 },
-    { id: id('place-broad-2'), setupId: id('setup-broad'), sitterId: id('clockmaker'), at: [-0.6, 0.1], eyeHeightM: 1.62 },
-    { id: id('place-broad-3'), setupId: id('setup-broad'), sitterId: id('botanist'), at: [0.6, 0.1], eyeHeightM: 1.56 },
-  ], random)
-  putItems(doc, props, [
-    { id: id('panel-octa'), setupId: id('setup-octa'), kind: 'panel', name: 'White panel 1 × 1.5 m', at: [1.25, 0.95, 0.8], turnDeg: 57, widthM: 1, heightM: 1.5, colour: '#ffffff' },
-    { id: id('globe-window'), setupId: id('setup-window'), kind: 'prop', name: 'Brass armillary', at: [0.7, 1.1, -0.2], turnDeg: 0, widthM: 0.5, heightM: 0.7, colour: '#8e6a22' },
-    { id: id('table-broad'), setupId: id('setup-broad'), kind: 'prop', name: 'Tea table', at: [0, 0.7, 0.6], turnDeg: 0, widthM: 1.2, heightM: 0.7, colour: '#5d3f23' },
-  ], random)
+  putItems(
+    doc,
+    sitterPlaces,
+    [
+      { id: id('place-octa'), setupId: id('setup-octa'), sitterId: id('clockmaker'), at: [0, 0], eyeHeightM: 1.28 },
+      {
+        id: id('place-octa-2'),
+        setupId: id('setup-octa'),
+        sitterId: id('astronomer'),
+        at: [0.55, -0.2],
+        eyeHeightM: 1.6,
+      },
+      { id: id('place-close'), setupId: id('setup-close'), sitterId: id('clockmaker'), at: [0, 0], eyeHeightM: 1.28 },
+      { id: id('place-window'), setupId: id('setup-window'), sitterId: id('astronomer'), at: [0, 0], eyeHeightM: 1.45 },
+      { id: id('place-broad-1'), setupId: id('setup-broad'), sitterId: id('astronomer'), at: [0, 0], eyeHeightM: 1.6 },
+      {
+        id: id('place-broad-2'),
+        setupId: id('setup-broad'),
+        sitterId: id('clockmaker'),
+        at: [-0.6, 0.1],
+        eyeHeightM: 1.62,
+      },
+      {
+        id: id('place-broad-3'),
+        setupId: id('setup-broad'),
+        sitterId: id('botanist'),
+        at: [0.6, 0.1],
+        eyeHeightM: 1.56,
+      },
+    ],
+    random,
+  )
+  putItems(
+    doc,
+    props,
+    [
+      {
+        id: id('panel-octa'),
+        setupId: id('setup-octa'),
+        kind: 'panel',
+        name: 'White panel 1 × 1.5 m',
+        at: [1.25, 0.95, 0.8],
+        turnDeg: 57,
+        widthM: 1,
+        heightM: 1.5,
+        colour: '#ffffff',
+      },
+      {
+        id: id('globe-window'),
+        setupId: id('setup-window'),
+        kind: 'prop',
+        name: 'Brass armillary',
+        at: [0.7, 1.1, -0.2],
+        turnDeg: 0,
+        widthM: 0.5,
+        heightM: 0.7,
+        colour: '#8e6a22',
+      },
+      {
+        id: id('table-broad'),
+        setupId: id('setup-broad'),
+        kind: 'prop',
+        name: 'Tea table',
+        at: [0, 0.7, 0.6],
+        turnDeg: 0,
+        widthM: 1.2,
+        heightM: 0.7,
+        colour: '#5d3f23',
+      },
+    ],
+    random,
+  )
   return Y.encodeStateAsUpdate(doc)
 }
 

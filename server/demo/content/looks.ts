@@ -4,7 +4,15 @@ import { putItems } from '#shared/realtime/collection.ts'
 import { looks, pieces, sitters } from '#shared/realtime/documents.ts'
 import type { NamedIds } from './named-ids.ts'
 
-type PieceRow = [name: string, label: string, kind: Piece['kind'], colour: string, status: Piece['status'], source: string, dueBackDays?: number]
+type PieceRow = [
+  name: string,
+  label: string,
+  kind: Piece['kind'],
+  colour: string,
+  status: Piece['status'],
+  source: string,
+  dueBackDays?: number,
+]
 
 const PIECES: readonly PieceRow[] = [
   ['night-coat', 'Night coat, boiled wool', 'garment', '#23304a', 'pulled', 'Studio store'],
@@ -37,13 +45,44 @@ const PIECES: readonly PieceRow[] = [
 export type DaysAfter = (days: number) => string | null
 
 /** The three characters, their eight looks and every piece. `pictures` gives upload ids by the crop's name. */
-export function demoLooks(id: NamedIds, picture: (name: string) => string, daysAfter: DaysAfter, random: () => number): Uint8Array {
+export function demoLooks(
+  id: NamedIds,
+  picture: (name: string) => string,
+  daysAfter: DaysAfter,
+  random: () => number,
+): Uint8Array {
   const doc = new Y.Doc()
-  putItems(doc, sitters, [
-    { id: id('astronomer'), name: 'Maud Ferrier', character: 'The Astronomer', hours: [570, 1140], chairMin: 20, travelMin: 40 },
-    { id: id('clockmaker'), name: 'Idris Vane', character: 'The Clockmaker', hours: [480, 1140], chairMin: 15, travelMin: 55 },
-    { id: id('botanist'), name: 'Lena Osei', character: 'The Botanist', hours: [600, 1140], chairMin: 20, travelMin: 40 },
-  ], random)
+  putItems(
+    doc,
+    sitters,
+    [
+      {
+        id: id('astronomer'),
+        name: 'Maud Ferrier',
+        character: 'The Astronomer',
+        hours: [570, 1140],
+        chairMin: 20,
+        travelMin: 40,
+      },
+      {
+        id: id('clockmaker'),
+        name: 'Idris Vane',
+        character: 'The Clockmaker',
+        hours: [480, 1140],
+        chairMin: 15,
+        travelMin: 55,
+      },
+      {
+        id: id('botanist'),
+        name: 'Lena Osei',
+        character: 'The Botanist',
+        hours: [600, 1140],
+        chairMin: 20,
+        travelMin: 40,
+      },
+    ],
+    random,
+  )
   putItems(
     doc,
     pieces,
@@ -55,7 +94,12 @@ export function demoLooks(id: NamedIds, picture: (name: string) => string, daysA
       status,
       source,
       dueBack: dueBack === undefined ? null : daysAfter(dueBack),
-      note: name === 'high-collar' ? 'Softer edge, asked by the client.' : name === 'loupe' ? 'Two sitters need it in the shot together.' : '',
+      note:
+        name === 'high-collar'
+          ? 'Softer edge, asked by the client.'
+          : name === 'loupe'
+            ? 'Two sitters need it in the shot together.'
+            : '',
     })),
     random,
   )
@@ -82,15 +126,108 @@ export function demoLooks(id: NamedIds, picture: (name: string) => string, daysA
     pieceIds: pieceNames.map(id),
     pictureIds: pictureNames.map(picture),
   })
-  putItems(doc, looks, [
-    look('look-night', 'astronomer', 'Night coat', 'a0', 9, 'Loose under a fur band', 'Bare skin, a little cold at the nose', 'Buttoned to the chin. The coat is seen before the face.', ['night-coat', 'high-collar', 'gloves', 'loupe'], ['collar-high', 'eyepiece']),
-    look('look-sleeves', 'astronomer', 'Shirtsleeves', 'a1', 8, 'Band off, brushed back', 'Bare skin, ink on the fingers', 'After a night of counting.', ['shirt', 'braces', 'star-chart'], ['undyed']),
-    look('look-cape', 'astronomer', 'Travelling cape', 'a2', 6, 'Loose under a fur band', 'Bare skin, a little cold at the nose', 'Just arrived, or just leaving.', ['cape', 'lantern', 'high-collar'], ['cold-light']),
-    look('look-work', 'clockmaker', 'Work coat', 'a0', 12, 'Knotted high', 'Matte, brows left alone', 'The ochre is the warmest thing in the gallery.', ['work-coat', 'garters', 'linen-collar'], ['ochre-slate', 'ochre-head']),
-    look('look-open', 'clockmaker', 'Coat open', 'a1', 6, 'Knotted high', 'Matte, brows left alone', 'Same coat, undone: the day is over.', ['shirt', 'work-coat', 'loupe'], ['undyed-brass']),
-    look('look-sunday', 'clockmaker', 'Sunday waistcoat', 'a2', 10, 'Knotted low', 'Matte, a little lip', 'For the toast.', ['waistcoat', 'watch-chain', 'linen-collar', 'cups'], ['dusk-distance']),
-    look('look-line', 'botanist', 'Long line', 'a0', 15, 'Cropped, parted by hand', 'Fresh, green at the lash', 'One clean line from neck to floor.', ['gown', 'satchel', 'hair-comb'], ['long-line', 'green-bust']),
-    look('look-field', 'botanist', 'Field jacket', 'a1', 10, 'Cropped, wind in it', 'Fresh, freckles kept', 'Mud is welcome.', ['field-jacket', 'boots', 'press', 'caddy'], ['warm-cool']),
-  ], random)
+  putItems(
+    doc,
+    looks,
+    [
+      look(
+        'look-night',
+        'astronomer',
+        'Night coat',
+        'a0',
+        9,
+        'Loose under a fur band',
+        'Bare skin, a little cold at the nose',
+        'Buttoned to the chin. The coat is seen before the face.',
+        ['night-coat', 'high-collar', 'gloves', 'loupe'],
+        ['collar-high', 'eyepiece'],
+      ),
+      look(
+        'look-sleeves',
+        'astronomer',
+        'Shirtsleeves',
+        'a1',
+        8,
+        'Band off, brushed back',
+        'Bare skin, ink on the fingers',
+        'After a night of counting.',
+        ['shirt', 'braces', 'star-chart'],
+        ['undyed'],
+      ),
+      look(
+        'look-cape',
+        'astronomer',
+        'Travelling cape',
+        'a2',
+        6,
+        'Loose under a fur band',
+        'Bare skin, a little cold at the nose',
+        'Just arrived, or just leaving.',
+        ['cape', 'lantern', 'high-collar'],
+        ['cold-light'],
+      ),
+      look(
+        'look-work',
+        'clockmaker',
+        'Work coat',
+        'a0',
+        12,
+        'Knotted high',
+        'Matte, brows left alone',
+        'The ochre is the warmest thing in the gallery.',
+        ['work-coat', 'garters', 'linen-collar'],
+        ['ochre-slate', 'ochre-head'],
+      ),
+      look(
+        'look-open',
+        'clockmaker',
+        'Coat open',
+        'a1',
+        6,
+        'Knotted high',
+        'Matte, brows left alone',
+        'Same coat, undone: the day is over.',
+        ['shirt', 'work-coat', 'loupe'],
+        ['undyed-brass'],
+      ),
+      look(
+        'look-sunday',
+        'clockmaker',
+        'Sunday waistcoat',
+        'a2',
+        10,
+        'Knotted low',
+        'Matte, a little lip',
+        'For the toast.',
+        ['waistcoat', 'watch-chain', 'linen-collar', 'cups'],
+        ['dusk-distance'],
+      ),
+      look(
+        'look-line',
+        'botanist',
+        'Long line',
+        'a0',
+        15,
+        'Cropped, parted by hand',
+        'Fresh, green at the lash',
+        'One clean line from neck to floor.',
+        ['gown', 'satchel', 'hair-comb'],
+        ['long-line', 'green-bust'],
+      ),
+      look(
+        'look-field',
+        'botanist',
+        'Field jacket',
+        'a1',
+        10,
+        'Cropped, wind in it',
+        'Fresh, freckles kept',
+        'Mud is welcome.',
+        ['field-jacket', 'boots', 'press', 'caddy'],
+        ['warm-cool'],
+      ),
+    ],
+    random,
+  )
   return Y.encodeStateAsUpdate(doc)
 }

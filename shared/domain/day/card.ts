@@ -38,7 +38,12 @@ export function cardRows(changeover: Changeover, shot: PlannedShot | undefined):
       ...(change.chairMin > 0 ? [`${minutesLabel(change.chairMin)} in the chair`] : []),
       ...(hair === '' ? [] : [hair]),
     ]
-    rows.push({ key: `look:${change.lookId}`, sign: { kind: 'wardrobe' }, what: change.lookName, detail: detail.join(' · ') })
+    rows.push({
+      key: `look:${change.lookId}`,
+      sign: { kind: 'wardrobe' },
+      what: change.lookName,
+      detail: detail.join(' · '),
+    })
   }
   return rows
 }
@@ -51,7 +56,9 @@ export function nextWords(changeover: Changeover): string {
   if (changeover.lighting.length === 0) parts.push('Lights stay')
   else if (changeover.lightingMin > 0) parts.push(`${minutesLabel(changeover.lightingMin)} of light`)
   for (const change of changeover.wardrobe) {
-    parts.push(change.chairMin > 0 ? `${change.sitterName} in the chair now` : `${change.sitterName} into ${change.lookName}`)
+    parts.push(
+      change.chairMin > 0 ? `${change.sitterName} in the chair now` : `${change.sitterName} into ${change.lookName}`,
+    )
   }
   return parts.join(' · ')
 }

@@ -14,14 +14,29 @@ export const statedSchema = z.object({
 })
 export type Stated = z.infer<typeof statedSchema>
 
-export const MODIFIER_SHAPES = ['bare', 'reflector', 'umbrella', 'softbox', 'octa', 'strip', 'beauty dish', 'snoot', 'grid', 'panel', 'lantern'] as const
+export const MODIFIER_SHAPES = [
+  'bare',
+  'reflector',
+  'umbrella',
+  'softbox',
+  'octa',
+  'strip',
+  'beauty dish',
+  'snoot',
+  'grid',
+  'panel',
+  'lantern',
+] as const
 export const SUPPORT_KINDS = ['stand', 'boom', 'clamp', 'floor stand', 'hand', 'magic arm'] as const
 
 /** A flash head. Guide numbers in metres at ISO 100, full power. */
 export const unitNumbersSchema = z.object({
   guideNumberM: statedSchema,
   /** Maker's guide number by zoom setting in mm, when the head zooms. */
-  zoom: z.array(z.object({ focalMm: z.number().min(10).max(400), guideNumberM: z.number().positive() })).max(20).default([]),
+  zoom: z
+    .array(z.object({ focalMm: z.number().min(10).max(400), guideNumberM: z.number().positive() }))
+    .max(20)
+    .default([]),
   /** Smallest power as 1/n. */
   minPowerDenominator: z.number().int().min(1).max(1024).default(128),
   flashColourK: statedSchema,

@@ -1,6 +1,18 @@
 import { z } from 'zod'
-import { kitItemIdSchema, lightIdSchema, placeIdSchema, propIdSchema, setupIdSchema, sitterIdSchema } from '#shared/ids.ts'
-import { gelNumbersSchema, modifierNumbersSchema, supportNumbersSchema, unitNumbersSchema } from '#shared/domain/kit/schema.ts'
+import {
+  kitItemIdSchema,
+  lightIdSchema,
+  placeIdSchema,
+  propIdSchema,
+  setupIdSchema,
+  sitterIdSchema,
+} from '#shared/ids.ts'
+import {
+  gelNumbersSchema,
+  modifierNumbersSchema,
+  supportNumbersSchema,
+  unitNumbersSchema,
+} from '#shared/domain/kit/schema.ts'
 import { colourSchema, lineSchema, proseSchema } from '#shared/domain/text.ts'
 
 /**
@@ -68,7 +80,11 @@ export const lightSchema = z.object({
   setupId: setupIdSchema,
   purpose: z.enum(LIGHT_PURPOSES),
   /** Letter of the radio group; shown in a circle. */
-  group: z.string().regex(/^[A-Z]$/).nullable().default(null),
+  group: z
+    .string()
+    .regex(/^[A-Z]$/)
+    .nullable()
+    .default(null),
   unit: lightUnitSchema,
   modifier: lightModifierSchema.nullable().default(null),
   gels: z.array(lightGelSchema).max(6).default([]),

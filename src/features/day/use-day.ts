@@ -31,7 +31,9 @@ export function useDay(): { day: ShownDay | null; days: readonly PlannedDay[]; c
   const nowMs = useNow()
   const [chosen, setChosen] = useState<string | null>(null)
   const withShots = plan.days.filter(({ shots }) => shots.length > 0)
-  const planned = withShots.find(({ day }) => day.id === chosen) ?? suggestedDay(withShots, dayShots, civilDate(nowMs, plan.brief.zone))
+  const planned =
+    withShots.find(({ day }) => day.id === chosen) ??
+    suggestedDay(withShots, dayShots, civilDate(nowMs, plan.brief.zone))
   const problem = useMemo(() => (planned ? orderProblem(plan, planned.day.id) : null), [plan, planned])
   const day = useMemo((): ShownDay | null => {
     if (!planned || !problem) return null
@@ -54,7 +56,12 @@ export function useDay(): { day: ShownDay | null; days: readonly PlannedDay[]; c
 }
 
 /** Today's, else the first with a shot still to make, else the last. */
-function suggestedDay(days: readonly PlannedDay[], dayShots: ReadonlyMap<string, DayShot>, today: string): PlannedDay | undefined {
-  const isOpen = ({ shots }: PlannedDay) => shots.some(({ shot }) => !['got', 'skipped'].includes(dayShots.get(shot.id)?.event?.state ?? 'waiting'))
+function suggestedDay(
+  days: readonly PlannedDay[],
+  dayShots: ReadonlyMap<string, DayShot>,
+  today: string,
+): PlannedDay | undefined {
+  const isOpen = ({ shots }: PlannedDay) =>
+    shots.some(({ shot }) => !['got', 'skipped'].includes(dayShots.get(shot.id)?.event?.state ?? 'waiting'))
   return days.find(({ day }) => day.date === today) ?? days.find(isOpen) ?? days.at(-1)
 }

@@ -13,7 +13,9 @@ export const NEED_WORDS: Readonly<Record<Need, string>> = {
 
 /** "Dome · night coat · upright · needed by the client" */
 export function shotLine({ set, looks, plan, shot }: PlannedShot): string {
-  return [set?.name, ...looks.map(({ look }) => look.name), plan.orientation, NEED_WORDS[shot.need]].filter((part) => part !== undefined && part !== '').join(' · ')
+  return [set?.name, ...looks.map(({ look }) => look.name), plan.orientation, NEED_WORDS[shot.need]]
+    .filter((part) => part !== undefined && part !== '')
+    .join(' · ')
 }
 
 /** "18 min behind", "5 min ahead", "On time". */
@@ -30,7 +32,10 @@ export function saveWords(state: SaveState): { words: string; lamp: LampState } 
     case 'saving':
       return { words: 'Saving…', lamp: 'half' }
     case 'offline':
-      return { words: state.unsent === 0 ? 'Offline – kept on this device' : `On this device · ${state.unsent} to send`, lamp: 'half' }
+      return {
+        words: state.unsent === 0 ? 'Offline – kept on this device' : `On this device · ${state.unsent} to send`,
+        lamp: 'half',
+      }
     case 'not-saved':
       return { words: `Not saved: ${state.why}`, lamp: 'unlit' }
     case 'reload':
@@ -39,7 +44,11 @@ export function saveWords(state: SaveState): { words: string; lamp: LampState } 
 }
 
 /** What to trim or leave so as to be out in time. */
-export function adviceWords(advice: Advice, hardOutMin: number, shotOf: (id: string) => PlannedShot | undefined): string {
+export function adviceWords(
+  advice: Advice,
+  hardOutMin: number,
+  shotOf: (id: string) => PlannedShot | undefined,
+): string {
   const name = (id: string) => `shot ${shotOf(id)?.number ?? '?'}`
   const out = `To be out by ${clockLabel(hardOutMin)}`
   switch (advice.kind) {
@@ -49,7 +58,9 @@ export function adviceWords(advice: Advice, hardOutMin: number, shotOf: (id: str
       return `${out}, leave ${listLabel(advice.shotIds.map(name))}.`
     case 'late': {
       const late = `${Math.ceil(advice.byMin)} min past the hard out at ${clockLabel(hardOutMin)}`
-      return advice.shotIds.length === 0 ? `As it stands the day ends ${late}. Everything left is needed by the client: speak to them.` : `Even without ${listLabel(advice.shotIds.map(name))} the day ends ${late}. Speak to the client.`
+      return advice.shotIds.length === 0
+        ? `As it stands the day ends ${late}. Everything left is needed by the client: speak to them.`
+        : `Even without ${listLabel(advice.shotIds.map(name))} the day ends ${late}. Speak to the client.`
     }
   }
 }

@@ -25,7 +25,13 @@ export function useDayWriter(name: string): DayWriter {
     () => ({
       setState(shotId, state, why) {
         const atMs = Date.now()
-        const event = { state, atMs, by: userId, name, ...(why === undefined || why.trim() === '' ? {} : { why: wellFormed(why).slice(0, WHY_MAX) }) }
+        const event = {
+          state,
+          atMs,
+          by: userId,
+          name,
+          ...(why === undefined || why.trim() === '' ? {} : { why: wellFormed(why).slice(0, WHY_MAX) }),
+        }
         upsertItem(doc, dayShots, {
           id: shotIdSchema.parse(shotId),
           event,

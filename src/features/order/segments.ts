@@ -25,7 +25,8 @@ export function segmentsOf(day: DaySchedule): Segment[] {
     const { changeover } = scheduled
     const readyMin = scheduled.startMin - changeover.holdWaitMin
     const tone = changeover.setMove ? 'draft' : 'glow'
-    if (readyMin > at) segments.push({ kind: 'change', tone, words: changeWords(changeover), scheduled, startMin: at, endMin: readyMin })
+    if (readyMin > at)
+      segments.push({ kind: 'change', tone, words: changeWords(changeover), scheduled, startMin: at, endMin: readyMin })
     if (scheduled.startMin > Math.max(at, readyMin)) {
       const words = `Wait until ${clockLabel(scheduled.startMin)}`
       segments.push({ kind: 'wait', words, scheduled, startMin: Math.max(at, readyMin), endMin: scheduled.startMin })

@@ -16,12 +16,23 @@ export type OrderDay = {
 export function useOrderDay(): { plan: Plan; shown: OrderDay | null; choose: (dayId: string) => void } {
   const plan = usePlan()
   const [chosen, setChosen] = useState<string | null>(null)
-  const index = Math.max(0, plan.days.findIndex(({ day }) => day.id === chosen))
+  const index = Math.max(
+    0,
+    plan.days.findIndex(({ day }) => day.id === chosen),
+  )
   const shown = useMemo(() => {
     const planned = plan.days[index]
     if (!planned) return null
     const problem = orderProblem(plan, planned.day.id)
-    return { planned, index, problem, day: schedule(problem, problem.shots.map(({ id }) => id)) }
+    return {
+      planned,
+      index,
+      problem,
+      day: schedule(
+        problem,
+        problem.shots.map(({ id }) => id),
+      ),
+    }
   }, [plan, index])
   return { plan, shown, choose: setChosen }
 }

@@ -7,7 +7,17 @@ import { type Patch, addMember, patchItem, removeItems, removeMember, upsertItem
 import { days, moves, rules, sets, shotPlans, shots } from '#shared/realtime/documents.ts'
 import { useDoc, useMayWrite } from '#src/realtime/shoot-realtime.tsx'
 import { type Undo, useUndo } from '#src/realtime/use-undo.ts'
-import { addDay, addRule, addSet, addShot, copyShot, listNow, moveShot, placeAtEnd, writeSequence } from './write-order.ts'
+import {
+  addDay,
+  addRule,
+  addSet,
+  addShot,
+  copyShot,
+  listNow,
+  moveShot,
+  placeAtEnd,
+  writeSequence,
+} from './write-order.ts'
 
 /** The shots of a list in their order. */
 export type List = { id: string; shots: readonly PlannedShot[] }
@@ -58,10 +68,18 @@ export function useOrderWriter(): OrderWriter {
     const docs = { board, plan: mayPlan ? plan : null }
     const listed = (list: List) => list.shots.map(({ shot }) => shot)
     return {
-      move: (list: List, shotId: string, index: number) => step(() => moveShot(board, list.id, listed(list), shotId, index)),
+      move: (list: List, shotId: string, index: number) =>
+        step(() => moveShot(board, list.id, listed(list), shotId, index)),
       use(dayId: string, sequence: readonly ShotId[]) {
         const now = listNow(board, dayId)
-        step(() => writeSequence(board, dayId, now, sequence.filter((id) => now.some((shot) => shot.id === id))))
+        step(() =>
+          writeSequence(
+            board,
+            dayId,
+            now,
+            sequence.filter((id) => now.some((shot) => shot.id === id)),
+          ),
+        )
       },
       placeAtEnd: (list: List, shotId: ShotId) => step(() => placeAtEnd(board, list.id, listed(list), shotId)),
       addShot: (list: List, title: string) => step(() => addShot(docs, list.id, listed(list), title)),
@@ -70,9 +88,12 @@ export function useOrderWriter(): OrderWriter {
       // Writing to something that was taken out brings it back.
       putShotBack: ({ id, title, place }: Shot) => step(() => upsertItem(board, shots, { id, title, place })),
       putSetBack: (set: ShootSet) => step(() => upsertItem(plan, sets, set)),
-      patchShot: (shotId: ShotId, patch: Patch<typeof shots>) => step(() => void patchItem(board, shots, shotId, patch)),
-      patchPlan: (shotId: ShotId, patch: Patch<typeof shotPlans>) => step(() => upsertItem(plan, shotPlans, { ...patch, id: shotId })),
-      wear: (shotId: ShotId, lookId: string) => step(() => addMember(board, shots, shotId, 'lookIds', lookId, Math.random)),
+      patchShot: (shotId: ShotId, patch: Patch<typeof shots>) =>
+        step(() => void patchItem(board, shots, shotId, patch)),
+      patchPlan: (shotId: ShotId, patch: Patch<typeof shotPlans>) =>
+        step(() => upsertItem(plan, shotPlans, { ...patch, id: shotId })),
+      wear: (shotId: ShotId, lookId: string) =>
+        step(() => addMember(board, shots, shotId, 'lookIds', lookId, Math.random)),
       takeOff: (shotId: ShotId, lookId: string) => step(() => removeMember(board, shots, shotId, 'lookIds', lookId)),
       addRule: (rule: RuleBody) => step(() => void addRule(plan, rule)),
       removeRule: (ruleId: string) => step(() => removeItems(plan, rules, [ruleId], Date.now())),

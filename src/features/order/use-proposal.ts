@@ -38,7 +38,11 @@ export function useProposal(): AskedProposal {
         if (worker.current !== asked) return
         const { proposal, share } = data
         if (data.kind === 'done') end()
-        setState(data.kind === 'done' ? { kind: 'found', problem, proposal } : { kind: 'thinking', problem, soFar: proposal, share })
+        setState(
+          data.kind === 'done'
+            ? { kind: 'found', problem, proposal }
+            : { kind: 'thinking', problem, soFar: proposal, share },
+        )
       })
       asked.addEventListener('error', () => {
         if (worker.current !== asked) return
@@ -52,7 +56,9 @@ export function useProposal(): AskedProposal {
   )
   const stop = useCallback(() => {
     end()
-    setState((last) => (last?.kind === 'thinking' ? { kind: 'found', problem: last.problem, proposal: last.soFar } : null))
+    setState((last) =>
+      last?.kind === 'thinking' ? { kind: 'found', problem: last.problem, proposal: last.soFar } : null,
+    )
   }, [end])
   const close = useCallback(() => {
     end()

@@ -1,4 +1,16 @@
-import { type Announcements, type DragEndEvent, KeyboardCode, type KeyboardCoordinateGetter, KeyboardSensor, MouseSensor, TouchSensor, type UniqueIdentifier, closestCenter, useSensor, useSensors } from '@dnd-kit/core'
+import {
+  type Announcements,
+  type DragEndEvent,
+  KeyboardCode,
+  type KeyboardCoordinateGetter,
+  KeyboardSensor,
+  MouseSensor,
+  TouchSensor,
+  type UniqueIdentifier,
+  closestCenter,
+  useSensor,
+  useSensors,
+} from '@dnd-kit/core'
 import { useState } from 'react'
 import type { PlannedShot } from '#shared/domain/plan/read-plan.ts'
 import { shotName } from './words.ts'
@@ -15,7 +27,10 @@ function stepper(ids: readonly string[]): KeyboardCoordinateGetter {
     const next = ids[ids.indexOf(String(over?.id ?? active.id)) + by]
     const rect = next === undefined ? undefined : droppableRects.get(next)
     if (!rect) return
-    return { x: currentCoordinates.x, y: currentCoordinates.y + rect.top + rect.height / 2 - (collisionRect.top + collisionRect.height / 2) }
+    return {
+      x: currentCoordinates.x,
+      y: currentCoordinates.y + rect.top + rect.height / 2 - (collisionRect.top + collisionRect.height / 2),
+    }
   }
 }
 
@@ -36,7 +51,10 @@ export function useSorting(shots: readonly PlannedShot[], onMove: (shotId: strin
   const announcements: Announcements = {
     onDragStart: ({ active }) => `${name(active.id)} picked up from ${place(active.id)}.`,
     onDragOver: ({ active, over }) => (over ? `${name(active.id)} is at ${place(over.id)}.` : undefined),
-    onDragEnd: ({ active, over }) => (over && over.id !== active.id ? `${name(active.id)} moved to ${place(over.id)}.` : `${name(active.id)} is back where it was.`),
+    onDragEnd: ({ active, over }) =>
+      over && over.id !== active.id
+        ? `${name(active.id)} moved to ${place(over.id)}.`
+        : `${name(active.id)} is back where it was.`,
     onDragCancel: ({ active }) => `${name(active.id)} is back where it was.`,
   }
   const from = held ? ids.indexOf(held.activeId) : -1
@@ -48,8 +66,10 @@ export function useSorting(shots: readonly PlannedShot[], onMove: (shotId: strin
     context: {
       sensors,
       collisionDetection: closestCenter,
-      onDragStart: ({ active }: { active: { id: UniqueIdentifier } }) => setHeld({ activeId: String(active.id), overId: String(active.id) }),
-      onDragOver: ({ over }: { over: { id: UniqueIdentifier } | null }) => setHeld((last) => last && over && { ...last, overId: String(over.id) }),
+      onDragStart: ({ active }: { active: { id: UniqueIdentifier } }) =>
+        setHeld({ activeId: String(active.id), overId: String(active.id) }),
+      onDragOver: ({ over }: { over: { id: UniqueIdentifier } | null }) =>
+        setHeld((last) => last && over && { ...last, overId: String(over.id) }),
       onDragCancel: () => setHeld(null),
       onDragEnd: ({ active, over }: DragEndEvent) => {
         setHeld(null)
@@ -57,7 +77,10 @@ export function useSorting(shots: readonly PlannedShot[], onMove: (shotId: strin
       },
       accessibility: {
         announcements,
-        screenReaderInstructions: { draggable: 'Space or Enter picks the shot up, the arrow keys move it, Space or Enter drops it, Escape puts it back.' },
+        screenReaderInstructions: {
+          draggable:
+            'Space or Enter picks the shot up, the arrow keys move it, Space or Enter drops it, Escape puts it back.',
+        },
       },
     },
   }

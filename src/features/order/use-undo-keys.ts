@@ -5,7 +5,9 @@ import type { Undo } from '#src/realtime/use-undo.ts'
 export function useUndoKeys({ undo, redo }: Undo): void {
   useEffect(() => {
     const handleKey = (event: KeyboardEvent) => {
-      const isTyping = event.target instanceof HTMLElement && event.target.closest('input, textarea, select, [contenteditable]') !== null
+      const isTyping =
+        event.target instanceof HTMLElement &&
+        event.target.closest('input, textarea, select, [contenteditable]') !== null
       if (isTyping || !(event.ctrlKey || event.metaKey) || event.key.toLowerCase() !== 'z') return
       event.preventDefault()
       if (event.shiftKey) redo()

@@ -58,7 +58,8 @@ export function changeWords(changeover: Changeover): string {
     else parts.push(`On to ${setMove.toSetName}`)
   } else if (fromShotId === null && lighting.length > 0) parts.push('Rig')
   for (const change of wardrobe) {
-    if (change.onClockMin > 0) parts.push(change.first ? `${change.sitterName} gets ready` : `${change.sitterName} into ${change.lookName}`)
+    if (change.onClockMin > 0)
+      parts.push(change.first ? `${change.sitterName} gets ready` : `${change.sitterName} into ${change.lookName}`)
   }
   parts.push(...lighting.map((action) => action.what))
   return parts.join(' · ') || 'Get ready'
@@ -75,7 +76,9 @@ export function ruleSentence(rule: RuleBody, plan: Plan, shotId: string): string
     case 'pin-place':
       return `Stays ${placeLabel(rule.index)}`
     case 'pin-clock':
-      return rule.toleranceMin > 0 ? `Starts at ${clockLabel(rule.atMin)}, at most ${minutesLabel(rule.toleranceMin)} later` : `Starts at ${clockLabel(rule.atMin)}`
+      return rule.toleranceMin > 0
+        ? `Starts at ${clockLabel(rule.atMin)}, at most ${minutesLabel(rule.toleranceMin)} later`
+        : `Starts at ${clockLabel(rule.atMin)}`
     case 'after':
       return rule.shotId === shotId ? `Comes after ${name(rule.afterShotId)}` : `Comes before ${name(rule.shotId)}`
     case 'together':
@@ -91,7 +94,21 @@ export function shotsOfRule(rule: RuleBody): readonly string[] {
   return rule.kind === 'after' ? [rule.shotId, rule.afterShotId] : [rule.shotId]
 }
 
-const NUMBERS = ['No', 'One', 'Two', 'Three', 'Four', 'Five', 'Six', 'Seven', 'Eight', 'Nine', 'Ten', 'Eleven', 'Twelve'] as const
+const NUMBERS = [
+  'No',
+  'One',
+  'Two',
+  'Three',
+  'Four',
+  'Five',
+  'Six',
+  'Seven',
+  'Eight',
+  'Nine',
+  'Ten',
+  'Eleven',
+  'Twelve',
+] as const
 
 function inWords(number: number): string {
   return NUMBERS[number] ?? String(number)
@@ -100,14 +117,17 @@ function inWords(number: number): string {
 /** "Same twelve shots, nothing dropped. Two pins and one “after” kept." */
 export function keptWords(problem: OrderProblem, comparison: OrderComparison): string {
   const kept = new Set(comparison.kept)
-  const of = (kinds: readonly string[]) => problem.rules.filter((rule) => kinds.includes(rule.kind) && kept.has(`rule:${rule.ruleId}`)).length
+  const of = (kinds: readonly string[]) =>
+    problem.rules.filter((rule) => kinds.includes(rule.kind) && kept.has(`rule:${rule.ruleId}`)).length
   const parts = [
     [of(['pin-place', 'pin-clock']), 'pin', 'pins'],
     [of(['after']), '“after”', '“afters”'],
     [of(['together']), '“together”', '“togethers”'],
     [of(['window']), 'window', 'windows'],
   ] as const
-  const said = parts.flatMap(([number, one, many]) => (number === 0 ? [] : [`${inWords(number).toLowerCase()} ${number === 1 ? one : many}`]))
+  const said = parts.flatMap(([number, one, many]) =>
+    number === 0 ? [] : [`${inWords(number).toLowerCase()} ${number === 1 ? one : many}`],
+  )
   const shots = `Same ${inWords(problem.shots.length).toLowerCase()} shots, nothing dropped.`
   if (said.length === 0) return problem.rules.length === 0 ? shots : `${shots} None of the rules can be kept.`
   const list = listLabel(said)
@@ -125,7 +145,8 @@ export function provenWords(proposal: Proposal): string {
 export function proposalTitle(comparison: OrderComparison, isBetter: boolean, proven: boolean): string {
   const { present, proposed } = comparison
   if (!isBetter) return proven ? 'This is the shortest order there is' : 'Nothing shorter was found'
-  if (proposed.broken.length < present.broken.length) return proposed.broken.length === 0 ? 'A day that keeps every rule' : 'A day that keeps more rules'
+  if (proposed.broken.length < present.broken.length)
+    return proposed.broken.length === 0 ? 'A day that keeps every rule' : 'A day that keeps more rules'
   if (proposed.notMade < present.notMade) return 'A day that makes more shots'
   return proposed.wrapMin < present.wrapMin ? 'A shorter day' : 'A calmer day'
 }

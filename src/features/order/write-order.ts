@@ -2,7 +2,16 @@ import type * as Y from 'yjs'
 import type { Shot } from '#shared/domain/board/schema.ts'
 import type { PlannedShot } from '#shared/domain/plan/read-plan.ts'
 import type { Day, RuleBody, Set as ShootSet } from '#shared/domain/plan/schema.ts'
-import { type DayId, type RuleId, type SetId, type ShotId, dayIdSchema, ruleIdSchema, setIdSchema, shotIdSchema } from '#shared/ids.ts'
+import {
+  type DayId,
+  type RuleId,
+  type SetId,
+  type ShotId,
+  dayIdSchema,
+  ruleIdSchema,
+  setIdSchema,
+  shotIdSchema,
+} from '#shared/ids.ts'
 import { BIRTH_ORIGIN, LOCAL_ORIGIN, patchItem, putItems, readAll, upsertItem } from '#shared/realtime/collection.ts'
 import { days, rules, sets, shotPlans, shots } from '#shared/realtime/documents.ts'
 import { type Placed, appendKey, byKey, keysToPlace } from '#shared/realtime/order-keys.ts'
@@ -62,7 +71,12 @@ export function placeAtEnd(board: Y.Doc, listId: string, list: Listed, shotId: S
  * Adds a shot at the end of a list and gives back its id. `plan` is null for who may not write it: the shot then
  * has the defaults of a plan until somebody does.
  */
-export function addShot(docs: { board: Y.Doc; plan: Y.Doc | null }, listId: string, list: Listed, title: string): ShotId {
+export function addShot(
+  docs: { board: Y.Doc; plan: Y.Doc | null },
+  listId: string,
+  list: Listed,
+  title: string,
+): ShotId {
   const id = shotIdSchema.parse(newId())
   // The birth of a plan is no step of undo: it goes unseen once the shot is taken back.
   if (docs.plan) upsertItem(docs.plan, shotPlans, { id, minutes: 20 }, BIRTH_ORIGIN)

@@ -11,19 +11,32 @@ export type Visit = { context: BrowserContext; page: Page; errors: string[] }
  * A browser of one's own. Collects what goes wrong behind the screen: errors on the console and requests to other hosts
  * (the application must not make any).
  */
-export async function visit(browser: Browser, size: { width: number; height: number }, baseURL: string): Promise<Visit> {
+export async function visit(
+  browser: Browser,
+  size: { width: number; height: number },
+  baseURL: string,
+): Promise<Visit> {
   const phone = size.width < 600
-  const context = await browser.newContext({ viewport: size, baseURL, locale: 'en-GB', timezoneId: 'Europe/London', hasTouch: phone, isMobile: phone })
+  const context = await browser.newContext({
+    viewport: size,
+    baseURL,
+    locale: 'en-GB',
+    timezoneId: 'Europe/London',
+    hasTouch: phone,
+    isMobile: phone,
+  })
   const page = await context.newPage()
   const errors: string[] = []
   page.on('pageerror', (error) => errors.push(`page error: ${error.message}`))
   page.on('console', (message) => {
     // A failed socket or fetch is logged by the browser itself; the screens have to deal with it, and the tests look there.
-    if (message.type() === 'error' && !/WebSocket|Failed to load resource|net::ERR/.test(message.text())) errors.push(`console: ${message.text()}`)
+    if (message.type() === 'error' && !/WebSocket|Failed to load resource|net::ERR/.test(message.text()))
+      errors.push(`console: ${message.text()}`)
   })
   page.on('request', (request) => {
     const { protocol, host } = new URL(request.url())
-    if (/^(http|ws)/.test(protocol) && host !== new URL(baseURL).host) errors.push(`asked another host: ${request.url()}`)
+    if (/^(http|ws)/.test(protocol) && host !== new URL(baseURL).host)
+      errors.push(`asked another host: ${request.url()}`)
   })
   return { context, page, errors }
 }
@@ -41,7 +54,10 @@ export async function signInDemo(page: Page, role: Role): Promise<void> {
 
 /** Opens the demo shoot and answers its address, `/shoots/<id>`. */
 export async function openDemoShoot(page: Page): Promise<string> {
-  await page.getByRole('link', { name: /Leaf, Brass & Star/ }).first().click()
+  await page
+    .getByRole('link', { name: /Leaf, Brass & Star/ })
+    .first()
+    .click()
   await page.waitForURL(/\/shoots\/[0-9a-f-]{36}/)
   return new URL(page.url()).pathname.split('/').slice(0, 3).join('/')
 }

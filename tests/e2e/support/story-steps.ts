@@ -4,7 +4,11 @@ import { type Locator, type Page, expect } from '@playwright/test'
 
 export async function createAccount(page: Page, name: string, email: string): Promise<void> {
   await page.goto('/sign-in')
-  await page.getByRole('button', { name: /create an account/i }).or(page.getByRole('link', { name: /create an account/i })).first().click()
+  await page
+    .getByRole('button', { name: /create an account/i })
+    .or(page.getByRole('link', { name: /create an account/i }))
+    .first()
+    .click()
   await page.getByLabel('Your name').fill(name)
   await page.getByLabel('E-mail').fill(email)
   await page.getByLabel('Password', { exact: true }).fill('a lantern on the hill')
@@ -38,7 +42,11 @@ async function letterLinks(page: Page, email: string): Promise<string[]> {
 
 /** Opens a section of the shoot through the left column, or the bar at the foot of a phone. */
 export async function goTo(page: Page, section: string): Promise<void> {
-  await page.getByRole('navigation').getByRole('link', { name: new RegExp(`^${section}`) }).first().click()
+  await page
+    .getByRole('navigation')
+    .getByRole('link', { name: new RegExp(`^${section}`) })
+    .first()
+    .click()
 }
 
 /** Chooses in a native or a styled select by the text of an option. */
@@ -48,14 +56,26 @@ export async function choose(field: Locator, option: string): Promise<void> {
 
 /** The sign says saved: nothing of this person is on its way. */
 export async function saved(page: Page): Promise<void> {
-  const sign = page.getByRole('button', { name: /^Saved$/ }).or(page.locator('header [role="status"]', { hasText: /^Saved$/ }))
+  const sign = page
+    .getByRole('button', { name: /^Saved$/ })
+    .or(page.locator('header [role="status"]', { hasText: /^Saved$/ }))
   await expect(sign.first()).toBeVisible({ timeout: 20_000 })
 }
 
-export type LookWords = { look: string; sitter?: string; character?: string; on?: string; pieces: readonly string[]; hair: string }
+export type LookWords = {
+  look: string
+  sitter?: string
+  character?: string
+  on?: string
+  pieces: readonly string[]
+  hair: string
+}
 
 export async function hangLook(page: Page, words: LookWords): Promise<void> {
-  await page.getByRole('button', { name: /^(Hang a look|Begin with a look)$/ }).first().click()
+  await page
+    .getByRole('button', { name: /^(Hang a look|Begin with a look)$/ })
+    .first()
+    .click()
   const dialog = page.getByRole('dialog')
   await dialog.getByLabel('Name of the look').fill(words.look)
   const onWhom = dialog.getByLabel('On whom')
@@ -97,7 +117,11 @@ export type ShotWords = { title: string; set: string; setup: string; look: RegEx
 
 /** Gives a shot its set, setup and look in the running order's panel. */
 export async function planShot(page: Page, words: ShotWords): Promise<void> {
-  await page.getByRole('button', { name: new RegExp(words.title) }).filter({ hasNot: page.locator('[data-handle]') }).last().click()
+  await page
+    .getByRole('button', { name: new RegExp(words.title) })
+    .filter({ hasNot: page.locator('[data-handle]') })
+    .last()
+    .click()
   const panel = page.getByRole('complementary').or(page.getByRole('dialog'))
   await expect(panel.getByLabel('Title').last()).toHaveValue(words.title)
   await choose(panel.getByLabel('Set', { exact: true }), words.set)
@@ -109,14 +133,23 @@ export async function planShot(page: Page, words: ShotWords): Promise<void> {
 
 /** The boxes of everything on the wall, by id: equal on two screens when both show the same wall. */
 export async function wall(page: Page): Promise<Record<string, string>> {
-  return page.locator('[data-wall-id]').evaluateAll((all) =>
-    Object.fromEntries(all.map((one) => [one.getAttribute('data-wall-id') ?? '', one.getAttribute('style')?.match(/translate\([^)]*\)/)?.[0] ?? one.style.cssText])),
-  )
+  return page
+    .locator('[data-wall-id]')
+    .evaluateAll((all) =>
+      Object.fromEntries(
+        all.map((one) => [
+          one.getAttribute('data-wall-id') ?? '',
+          one.getAttribute('style')?.match(/translate\([^)]*\)/)?.[0] ?? one.style.cssText,
+        ]),
+      ),
+    )
 }
 
 /** Titles of the shots in the strip below the wall, in order. */
 export async function strip(page: Page): Promise<string[]> {
-  return page.locator('[data-shot-id]').evaluateAll((all) => all.map((one) => one.textContent.match(/Picture [a-l]/)?.[0] ?? ''))
+  return page
+    .locator('[data-shot-id]')
+    .evaluateAll((all) => all.map((one) => one.textContent.match(/Picture [a-l]/)?.[0] ?? ''))
 }
 
 /** Takes something on the wall with the keyboard, moves it and lets go. */

@@ -34,7 +34,10 @@ describe('ensureDemo', () => {
       )
       expect(unreadable).toEqual([])
     }
-    const board = await documents.read(site.shootId, 'board', (doc) => [readAll(doc, frames).items.size, readAll(doc, shots).items.size])
+    const board = await documents.read(site.shootId, 'board', (doc) => [
+      readAll(doc, frames).items.size,
+      readAll(doc, shots).items.size,
+    ])
     expect(board).toEqual([20, 12])
     expect(await documents.read(site.shootId, 'looks', (doc) => readAll(doc, looks).items.size)).toBe(8)
     expect(await documents.read(site.shootId, 'lighting', (doc) => readAll(doc, setups).items.size)).toBe(4)
@@ -45,7 +48,10 @@ describe('ensureDemo', () => {
     const [day] = plan.days
     if (!day) throw new Error('the demo has a day')
     expect(day.shots.flatMap((shot) => shot.missing)).toEqual([])
-    const stands = schedule(orderProblem(plan, day.day.id), day.shots.map(({ shot }) => shot.id))
+    const stands = schedule(
+      orderProblem(plan, day.day.id),
+      day.shots.map(({ shot }) => shot.id),
+    )
     expect(stands.broken.map(({ words }) => words)).toEqual([])
     expect(stands.wrapMin).toBeLessThanOrEqual(day.day.hardOutMin)
   })

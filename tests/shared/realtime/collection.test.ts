@@ -22,7 +22,11 @@ function sync(a: Y.Doc, b: Y.Doc) {
   Y.applyUpdate(a, Y.encodeStateAsUpdate(b, Y.encodeStateVector(a)))
 }
 
-const note = (n: number, text = 'Everyone waits for the same comet.') => ({ id: id(n), box: [0, 0, 200, 80] as [number, number, number, number], text })
+const note = (n: number, text = 'Everyone waits for the same comet.') => ({
+  id: id(n),
+  box: [0, 0, 200, 80] as [number, number, number, number],
+  text,
+})
 
 describe('putItems and readAll', () => {
   it('reads back what was put, with defaults', () => {
@@ -109,7 +113,8 @@ describe('removeItems', () => {
 })
 
 describe('undo', () => {
-  const manager = (doc: Y.Doc) => new Y.UndoManager(doc.getMap('notes'), { trackedOrigins: new Set([LOCAL_ORIGIN]), captureTimeout: 0 })
+  const manager = (doc: Y.Doc) =>
+    new Y.UndoManager(doc.getMap('notes'), { trackedOrigins: new Set([LOCAL_ORIGIN]), captureTimeout: 0 })
 
   it('takes back a creation without deleting what another person put into it', () => {
     const a = new Y.Doc()
@@ -189,17 +194,27 @@ describe('sizes', () => {
 describe('collections', () => {
   it('reads every kind of rule', () => {
     const doc = new Y.Doc()
-    putItems(doc, rules, [
-      { id: id(1), rule: { kind: 'pin-place', shotId: id(21), index: 0 } },
-      { id: id(2), rule: { kind: 'after', shotId: id(21), afterShotId: id(22) } },
-      { id: id(3), rule: { kind: 'window', shotId: id(21), fromMin: 600, toMin: 700 } },
-    ], random)
+    putItems(
+      doc,
+      rules,
+      [
+        { id: id(1), rule: { kind: 'pin-place', shotId: id(21), index: 0 } },
+        { id: id(2), rule: { kind: 'after', shotId: id(21), afterShotId: id(22) } },
+        { id: id(3), rule: { kind: 'window', shotId: id(21), fromMin: 600, toMin: 700 } },
+      ],
+      random,
+    )
     expect(readAll(doc, rules).items.size).toBe(3)
   })
 
   it('reads a frame whose picture still waits on somebody’s device', () => {
     const doc = new Y.Doc()
-    putItems(doc, frames, [{ id: id(1), box: [0, 0, 100, 120], picture: { uploadId: id(5), state: 'waiting', widthPx: 10, heightPx: 12 } }], random)
+    putItems(
+      doc,
+      frames,
+      [{ id: id(1), box: [0, 0, 100, 120], picture: { uploadId: id(5), state: 'waiting', widthPx: 10, heightPx: 12 } }],
+      random,
+    )
     expect(readAll(doc, frames).items.get(id(1))?.picture.state).toBe('waiting')
   })
 })

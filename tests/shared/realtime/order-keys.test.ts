@@ -27,20 +27,34 @@ describe('appendKey', () => {
 
 describe('byKey', () => {
   it('breaks ties by id', () => {
-    expect([{ id: 'b', key: 'a0' }, { id: 'a', key: 'a0' }].sort(byKey).map((x) => x.id)).toEqual(['a', 'b'])
+    expect(
+      [
+        { id: 'b', key: 'a0' },
+        { id: 'a', key: 'a0' },
+      ]
+        .sort(byKey)
+        .map((x) => x.id),
+    ).toEqual(['a', 'b'])
   })
 })
 
 describe('keysToPlace', () => {
   it('re-keys the run of equal keys that it must get past', () => {
-    const list = [{ id: 'a', key: 'a0' }, { id: 'b', key: 'a0' }, { id: 'c', key: 'a1' }]
+    const list = [
+      { id: 'a', key: 'a0' },
+      { id: 'b', key: 'a0' },
+      { id: 'c', key: 'a1' },
+    ]
     const keys = keysToPlace(list, 'c', 'a', () => 0.5)
     const placed = list.map((item) => ({ id: item.id, key: keys.get(item.id) ?? item.key })).sort(byKey)
     expect(placed.map((item) => item.id)).toEqual(['a', 'c', 'b'])
   })
 
   it('puts first when there is nothing before', () => {
-    const list = [{ id: 'a', key: 'a0' }, { id: 'b', key: 'a1' }]
+    const list = [
+      { id: 'a', key: 'a0' },
+      { id: 'b', key: 'a1' },
+    ]
     expect((keysToPlace(list, 'b', null, () => 0.5).get('b') ?? 'z') < 'a0').toBe(true)
   })
 })
@@ -61,7 +75,7 @@ describe('an ordered list that three people reorder', () => {
     for (let run = 0; run < 20; run++) {
       const random = seeded(run + 1)
       const docs = [new Y.Doc(), new Y.Doc(), new Y.Doc()]
-      const pick = <T,>(list: readonly T[]): T | undefined => list[Math.floor(random() * list.length)]
+      const pick = <T>(list: readonly T[]): T | undefined => list[Math.floor(random() * list.length)]
       const made = new Set<string>()
       const gone = new Set<string>()
       let counter = 0
@@ -81,7 +95,9 @@ describe('an ordered list that three people reorder', () => {
         } else if (kind < 0.9) {
           const moved = pick(list)?.id
           const after = pick(list.filter((item) => item.id !== moved))?.id ?? null
-          if (moved) for (const [id, key] of keysToPlace(list, moved, after, random)) patchItem(doc, shots, id, { place: ['day', key] })
+          if (moved)
+            for (const [id, key] of keysToPlace(list, moved, after, random))
+              patchItem(doc, shots, id, { place: ['day', key] })
         } else {
           const removed = pick(list)?.id
           if (removed) {

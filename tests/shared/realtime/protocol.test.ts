@@ -8,8 +8,11 @@ describe('parseDocumentPath', () => {
     expect(parseDocumentPath(documentPath(shootId, 'board'))).toEqual({ shootId, kind: 'board' })
   })
 
-  it.each(['/rt/x/board', `/rt/${shootId}`, `/rt/${shootId}/board/more`, `/other/${shootId}/board`, `/rt/${shootId}/..%2f`])(
-    'is undefined for %s',
-    (path) => expect(parseDocumentPath(path)).toBeUndefined(),
-  )
+  it.each([
+    '/rt/x/board',
+    `/rt/${shootId}`,
+    `/rt/${shootId}/board/more`,
+    `/other/${shootId}/board`,
+    `/rt/${shootId}/..%2f`,
+  ])('is undefined for %s', (path) => expect(parseDocumentPath(path)).toBeUndefined())
 })

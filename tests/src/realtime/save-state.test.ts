@@ -25,7 +25,10 @@ describe('saveStateOf', () => {
 describe('gravest', () => {
   it('takes the worst and adds up what is unsent', () => {
     expect(gravest([{ kind: 'saved' }, { kind: 'saving' }])).toEqual({ kind: 'saving' })
-    expect(gravest([{ kind: 'offline', unsent: 2 }, { kind: 'offline', unsent: 3 }, { kind: 'saved' }])).toEqual({ kind: 'offline', unsent: 5 })
+    expect(gravest([{ kind: 'offline', unsent: 2 }, { kind: 'offline', unsent: 3 }, { kind: 'saved' }])).toEqual({
+      kind: 'offline',
+      unsent: 5,
+    })
     expect(gravest([])).toEqual({ kind: 'saved' })
   })
 })

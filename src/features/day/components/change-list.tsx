@@ -34,14 +34,33 @@ type ChangeRowProps = { row: CardRow; done: boolean; onTick?: ((key: string, don
 
 function ChangeRow({ row, done, onTick }: ChangeRowProps) {
   return (
-    <label className={cn('flex min-h-12 items-center gap-3 py-2 focus-within:outline-2 focus-within:outline-offset-2 focus-within:outline-glow-lit', onTick && 'cursor-pointer')}>
+    <label
+      className={cn(
+        'flex min-h-12 items-center gap-3 py-2 focus-within:outline-2 focus-within:outline-offset-2 focus-within:outline-glow-lit',
+        onTick && 'cursor-pointer',
+      )}
+    >
       <Sign sign={row.sign} />
       <span className="min-w-0 flex-1">
-        <span className={cn('block text-[0.9375rem]', done && 'text-bone-soft line-through decoration-night-edge')}>{row.what}</span>
+        <span className={cn('block text-[0.9375rem]', done && 'text-bone-soft line-through decoration-night-edge')}>
+          {row.what}
+        </span>
         {row.detail !== '' && <span className="block text-[0.8125rem] text-bone-soft">{row.detail}</span>}
       </span>
-      <input type="checkbox" className="sr-only" checked={done} disabled={!onTick} onChange={(event) => onTick?.(row.key, event.target.checked)} />
-      <span aria-hidden className={cn('grid size-7 flex-none place-items-center rounded-r border-[1.5px]', done ? 'border-glow-lit bg-glow-lit text-[#221]' : onTick ? 'border-night-edge' : 'invisible')}>
+      <input
+        type="checkbox"
+        className="sr-only"
+        checked={done}
+        disabled={!onTick}
+        onChange={(event) => onTick?.(row.key, event.target.checked)}
+      />
+      <span
+        aria-hidden
+        className={cn(
+          'grid size-7 flex-none place-items-center rounded-r border-[1.5px]',
+          done ? 'border-glow-lit bg-glow-lit text-[#221]' : onTick ? 'border-night-edge' : 'invisible',
+        )}
+      >
         {done && <Check size={18} strokeWidth={2.5} />}
       </span>
     </label>
@@ -58,7 +77,12 @@ function Sign({ sign }: { sign: CardSign }) {
   const isGroup = sign.kind === 'group'
   const { letter, word } = isGroup ? { letter: sign.letter, word: `Group ${sign.letter}` } : SIGN_WORDS[sign.kind]
   return (
-    <span className={cn('grid size-[26px] flex-none place-items-center rounded-full border-[1.5px] text-[0.8125rem] font-bold', isGroup ? 'border-bone' : 'border-dashed border-night-edge')}>
+    <span
+      className={cn(
+        'grid size-[26px] flex-none place-items-center rounded-full border-[1.5px] text-[0.8125rem] font-bold',
+        isGroup ? 'border-bone' : 'border-dashed border-night-edge',
+      )}
+    >
       <span aria-hidden>{letter}</span>
       {word !== '' && <span className="sr-only">{word}</span>}
     </span>

@@ -9,6 +9,21 @@ export type CoverPictureProps = { shot: PlannedShot; className?: string }
 export function CoverPicture({ shot, className }: CoverPictureProps) {
   const picture = shot.cover?.picture
   const localUrl = useLocalPicture(picture?.uploadId ?? '')
-  if (!picture) return <span aria-hidden className={cn('block flex-none rounded-sm border border-dashed border-night-edge', className)} />
-  return <Picture uploadId={picture.uploadId} state={picture.state} localUrl={localUrl} alt="" sizes="96px" className={cn('flex-none rounded-sm', className)} />
+  if (!picture)
+    return (
+      <span
+        aria-hidden
+        className={cn('block flex-none rounded-sm border border-dashed border-night-edge', className)}
+      />
+    )
+  return (
+    <Picture
+      uploadId={picture.uploadId}
+      state={picture.state}
+      localUrl={localUrl}
+      alt=""
+      sizes="96px"
+      className={cn('flex-none rounded-sm', className)}
+    />
+  )
 }

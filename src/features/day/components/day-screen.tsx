@@ -37,7 +37,12 @@ export function DayScreen({ userName }: DayScreenProps) {
       {days.length > 1 && (
         <nav aria-label="Days" className="mx-auto flex w-full max-w-2xl flex-wrap gap-2 px-[18px] pb-4">
           {days.map((one, index) => (
-            <Button key={one.day.id} variant="night" aria-pressed={one.day.id === day?.planned.day.id} onClick={() => choose(one.day.id)}>
+            <Button
+              key={one.day.id}
+              variant="night"
+              aria-pressed={one.day.id === day?.planned.day.id}
+              onClick={() => choose(one.day.id)}
+            >
               Day {index + 1}
             </Button>
           ))}
@@ -63,7 +68,10 @@ function TheDay({ day, userName }: { day: ShownDay; userName: string }) {
     const before = dayShots.get(id)?.event?.state ?? 'waiting'
     write.setState(id, state, why)
     const words = { got: 'got', skipped: 'skipped', 'under way': 'begun', waiting: 'back to waiting' }[state]
-    toast.say(`Shot ${shotOf(id)?.number ?? ''} ${words}.`, { label: 'Undo', onPress: () => write.setState(id, before) })
+    toast.say(`Shot ${shotOf(id)?.number ?? ''} ${words}.`, {
+      label: 'Undo',
+      onPress: () => write.setState(id, before),
+    })
   }
   const setFromList = (id: ShotId, state: ShotState) => {
     setState(id, state)
@@ -95,14 +103,22 @@ function TheDay({ day, userName }: { day: ShownDay; userName: string }) {
                 onTick={mayWrite ? (key, done) => write.setTick(current.shotId, key, done) : undefined}
               />
               {next && nextShot && (
-                <NextShot shot={nextShot} next={next} expectedStartMin={progress.lines.find(({ shotId }) => shotId === next.shotId)?.expectedStartMin ?? null} />
+                <NextShot
+                  shot={nextShot}
+                  next={next}
+                  expectedStartMin={
+                    progress.lines.find(({ shotId }) => shotId === next.shotId)?.expectedStartMin ?? null
+                  }
+                />
               )}
             </>
           ) : (
             <Wrapped progress={progress} />
           )}
           {progress.advice && (
-            <p className="border-t border-night-3 pt-3 text-[0.84375rem] text-bone-soft">{adviceWords(progress.advice, day.planned.day.hardOutMin, shotOf)}</p>
+            <p className="border-t border-night-3 pt-3 text-[0.84375rem] text-bone-soft">
+              {adviceWords(progress.advice, day.planned.day.hardOutMin, shotOf)}
+            </p>
           )}
           <LongDayCaution day={day.planned} />
         </div>
@@ -144,7 +160,12 @@ function TheDay({ day, userName }: { day: ShownDay; userName: string }) {
           }}
         />
       )}
-      <Sheet night open={asked?.kind === 'list'} onOpenChange={(open) => setAsked(open ? { kind: 'list' } : null)} title="All shots">
+      <Sheet
+        night
+        open={asked?.kind === 'list'}
+        onOpenChange={(open) => setAsked(open ? { kind: 'list' } : null)}
+        title="All shots"
+      >
         {list}
       </Sheet>
     </>
@@ -158,21 +179,31 @@ function DayTop({ day, onList }: { day: ShownDay; onList?: (() => void) | undefi
   const { progress } = day
   return (
     <header className="mx-auto flex w-full max-w-6xl items-center gap-2 px-[18px] pt-2 text-[0.8125rem] text-bone-soft md:px-8 md:pt-5">
-      <Link to={`/shoots/${id}/order`} className="-ml-2 flex min-h-11 items-center gap-1 rounded-r pr-2 text-bone-soft hover:text-bone md:hidden">
+      <Link
+        to={`/shoots/${id}/order`}
+        className="-ml-2 flex min-h-11 items-center gap-1 rounded-r pr-2 text-bone-soft hover:text-bone md:hidden"
+      >
         <ChevronLeft size={18} aria-hidden />
         <span className="sr-only">Back to the shoot: </span>
         {place}
       </Link>
       <span className="max-md:hidden">{place}</span>
       {day.nowMin !== null && <span aria-label="Now">· {clockLabel(day.nowMin)}</span>}
-      {progress.wrapMin !== null && progress.current && <span className="max-md:hidden">· wrap about {clockLabel(progress.wrapMin)}</span>}
+      {progress.wrapMin !== null && progress.current && (
+        <span className="max-md:hidden">· wrap about {clockLabel(progress.wrapMin)}</span>
+      )}
       <span className="flex-1" />
       <span role="status" className="flex items-center gap-1.5 text-right">
         <Lamp state={save.lamp} />
         {save.words}
       </span>
       {onList && (
-        <button type="button" aria-label="All shots" onClick={onList} className="-mr-2 grid size-11 place-items-center rounded-r text-bone hover:bg-night-3">
+        <button
+          type="button"
+          aria-label="All shots"
+          onClick={onList}
+          className="-mr-2 grid size-11 place-items-center rounded-r text-bone hover:bg-night-3"
+        >
           <List size={20} aria-hidden />
         </button>
       )}
@@ -180,7 +211,13 @@ function DayTop({ day, onList }: { day: ShownDay; onList?: (() => void) | undefi
   )
 }
 
-type ActionBarProps = { isUnderWay: boolean; onSkip: () => void; onNote: () => void; onStart: () => void; onGot: () => void }
+type ActionBarProps = {
+  isUnderWay: boolean
+  onSkip: () => void
+  onNote: () => void
+  onStart: () => void
+  onGot: () => void
+}
 
 function ActionBar({ isUnderWay, onSkip, onNote, onStart, onGot }: ActionBarProps) {
   const side = 'flex-1 !min-h-[54px] !text-[1rem] !font-bold'

@@ -34,7 +34,13 @@ export function SkipSheet({ title, onSkip, onClose }: SkipSheetProps) {
   )
 }
 
-export type NoteSheetProps = { title: string; note: string; frames: string; onSave: (note: string, frames: string) => void; onClose: () => void }
+export type NoteSheetProps = {
+  title: string
+  note: string
+  frames: string
+  onSave: (note: string, frames: string) => void
+  onClose: () => void
+}
 
 export function NoteSheet({ title, note, frames, onSave, onClose }: NoteSheetProps) {
   const [text, setText] = useState(note)
@@ -57,7 +63,12 @@ export function NoteSheet({ title, note, frames, onSave, onClose }: NoteSheetPro
     >
       <div className="grid gap-3">
         <Field label="Frame numbers" hint="As the camera counts them, for the picks afterwards.">
-          <Input value={numbers} maxLength={FRAMES_MAX} placeholder="0412–0450" onChange={(event) => setNumbers(event.target.value)} />
+          <Input
+            value={numbers}
+            maxLength={FRAMES_MAX}
+            placeholder="0412–0450"
+            onChange={(event) => setNumbers(event.target.value)}
+          />
         </Field>
         <Field label="Note">
           <Textarea value={text} maxLength={NOTE_MAX} rows={4} onChange={(event) => setText(event.target.value)} />

@@ -10,7 +10,11 @@ export function LongDayCaution({ day: { day, shots } }: { day: PlannedDay }) {
   if (!isLong && !underAge) return null
   const words = [
     ...(isLong ? ['A long day: keep breaks and the meal. Hours and rest are for local labour law to say.'] : []),
-    ...(underAge ? ['Somebody is under age: hours, breaks and company follow the child-performance law of the place.'] : []),
+    ...(underAge
+      ? ['Somebody is under age: hours, breaks and company follow the child-performance law of the place.']
+      : []),
   ]
-  return <p className="border-l-3 border-glow bg-night-2 px-3 py-2 text-[0.8125rem] text-bone-soft">{words.join(' ')}</p>
+  return (
+    <p className="border-l-3 border-glow bg-night-2 px-3 py-2 text-[0.8125rem] text-bone-soft">{words.join(' ')}</p>
+  )
 }

@@ -7,7 +7,8 @@ import { CoverPicture } from './cover-picture.tsx'
 export type NextShotProps = { shot: PlannedShot; next: ScheduledShot; expectedStartMin: number | null }
 
 export function NextShot({ shot, next, expectedStartMin }: NextShotProps) {
-  const when = expectedStartMin === null ? `planned ${clockLabel(next.startMin)}` : `about ${clockLabel(expectedStartMin)}`
+  const when =
+    expectedStartMin === null ? `planned ${clockLabel(next.startMin)}` : `about ${clockLabel(expectedStartMin)}`
   return (
     <section aria-label="Next shot" className="flex items-center gap-3 border-t border-night-3 pt-3">
       <CoverPicture shot={shot} className="h-14 w-[46px]" />

@@ -12,7 +12,10 @@ export function NothingToFollow() {
     <section className="m-auto flex max-w-sm flex-col items-center gap-3 p-6 text-center">
       <Lamp state="unlit" />
       <h1 className="text-2xl text-white">Nothing to follow yet</h1>
-      <p className="text-bone-soft">As soon as shots stand in the running order, everyone follows them from here: what is made now, what changes for it, and what is next.</p>
+      <p className="text-bone-soft">
+        As soon as shots stand in the running order, everyone follows them from here: what is made now, what changes for
+        it, and what is next.
+      </p>
       <Link to={`/shoots/${id}/order`} className={buttonClass('night', 'large')}>
         Go to the running order
       </Link>
@@ -27,7 +30,8 @@ export function Wrapped({ progress }: { progress: DayProgress }) {
       <Lamp state="lit" />
       <h1 className="text-2xl text-white">That is a wrap</h1>
       <p className="text-bone-soft">
-        {count(progress.got, 'shot')} got{progress.skipped > 0 ? `, ${progress.skipped} skipped` : ''}. Thank everybody; hired things go back as agreed.
+        {count(progress.got, 'shot')} got{progress.skipped > 0 ? `, ${progress.skipped} skipped` : ''}. Thank everybody;
+        hired things go back as agreed.
       </p>
     </section>
   )

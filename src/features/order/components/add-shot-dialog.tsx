@@ -9,7 +9,12 @@ export type AddShotDialogProps = { onClose: () => void; onAdd: (title: string) =
 export function AddShotDialog({ onClose, onAdd }: AddShotDialogProps) {
   const [title, setTitle] = useState('')
   return (
-    <Dialog open onOpenChange={(open) => !open && onClose()} title="Add a shot" description="It stands at the end of the day; everything else can be filled in beside it.">
+    <Dialog
+      open
+      onOpenChange={(open) => !open && onClose()}
+      title="Add a shot"
+      description="It stands at the end of the day; everything else can be filled in beside it."
+    >
       <form
         className="flex flex-col gap-4"
         onSubmit={(event) => {
@@ -18,7 +23,13 @@ export function AddShotDialog({ onClose, onAdd }: AddShotDialogProps) {
         }}
       >
         <Field label="Title">
-          <Input autoFocus maxLength={120} value={title} placeholder="Hands on the escapement" onChange={(event) => setTitle(event.target.value)} />
+          <Input
+            autoFocus
+            maxLength={120}
+            value={title}
+            placeholder="Hands on the escapement"
+            onChange={(event) => setTitle(event.target.value)}
+          />
         </Field>
         <div className="flex justify-end">
           <Button type="submit" variant="primary" disabled={title.trim() === ''}>

@@ -9,7 +9,10 @@ export function BrokenRules({ shown, onOpen }: { shown: OrderDay; onOpen: (shotI
   const late = day.shots.filter(({ made }) => !made)
   if (day.broken.length === 0 && late.length === 0) return null
   const firstLate = late[0]
-  const titles = [day.broken.length > 0 ? `${count(day.broken.length, 'rule')} broken` : '', late.length > 0 ? `${count(late.length, 'shot')} after the hard out` : '']
+  const titles = [
+    day.broken.length > 0 ? `${count(day.broken.length, 'rule')} broken` : '',
+    late.length > 0 ? `${count(late.length, 'shot')} after the hard out` : '',
+  ]
   return (
     <Caution title={titles.filter((part) => part !== '').join(' · ')}>
       <ul>
@@ -18,7 +21,11 @@ export function BrokenRules({ shown, onOpen }: { shown: OrderDay; onOpen: (shotI
             {shotId === null ? (
               words
             ) : (
-              <button type="button" onClick={() => onOpen(shotId)} className="text-left underline decoration-edge underline-offset-2 hover:decoration-ink max-md:min-h-11">
+              <button
+                type="button"
+                onClick={() => onOpen(shotId)}
+                className="text-left underline decoration-edge underline-offset-2 hover:decoration-ink max-md:min-h-11"
+              >
                 {words}
               </button>
             )}

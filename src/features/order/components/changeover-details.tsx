@@ -10,7 +10,9 @@ export function ChangeoverDetails({ scheduled, hands }: { scheduled: ScheduledSh
   const { setMove, lighting, wardrobe } = changeover
   const setRows: Row[] = setMove
     ? [
-        ...(setMove.otherRoom ? [{ what: `Move from ${setMove.fromRoomName} to ${setMove.toRoomName}`, minutes: setMove.moveMin }] : []),
+        ...(setMove.otherRoom
+          ? [{ what: `Move from ${setMove.fromRoomName} to ${setMove.toRoomName}`, minutes: setMove.moveMin }]
+          : []),
         ...(setMove.strikeMin > 0 ? [{ what: `Strike ${setMove.fromSetName}`, minutes: setMove.strikeMin }] : []),
         { what: `Dress ${setMove.toSetName}`, minutes: setMove.dressMin },
       ]
@@ -34,8 +36,15 @@ export function ChangeoverDetails({ scheduled, hands }: { scheduled: ScheduledSh
         {changeover.changesLight && 'Test frames are counted.'}
       </Part>
       <Part title="Wardrobe" rows={wardrobeRows} />
-      {changeover.holdWaitMin > 0 && <p className="text-sm">Everything is ready {minutesLabel(changeover.holdWaitMin)} early and waits until {clockLabel(scheduled.startMin)}: a window or a fixed time of this shot.</p>}
-      <p className="text-xs text-ink-soft">Minutes of each action are the studio’s own, assumptions until it has changed them.</p>
+      {changeover.holdWaitMin > 0 && (
+        <p className="text-sm">
+          Everything is ready {minutesLabel(changeover.holdWaitMin)} early and waits until{' '}
+          {clockLabel(scheduled.startMin)}: a window or a fixed time of this shot.
+        </p>
+      )}
+      <p className="text-xs text-ink-soft">
+        Minutes of each action are the studio’s own, assumptions until it has changed them.
+      </p>
     </div>
   )
 }
@@ -52,7 +61,9 @@ function Part({ title, rows, children }: { title: string; rows: readonly Row[]; 
               {what}
               {detail !== undefined && detail !== '' && <span className="block text-xs text-ink-soft">{detail}</span>}
             </span>
-            {minutes !== undefined && minutes > 0 && <span className="whitespace-nowrap">{Number(minutes.toFixed(2))} min</span>}
+            {minutes !== undefined && minutes > 0 && (
+              <span className="whitespace-nowrap">{Number(minutes.toFixed(2))} min</span>
+            )}
           </li>
         ))}
       </ul>

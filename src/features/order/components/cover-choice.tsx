@@ -10,7 +10,11 @@ import { Dialog } from '#src/ui/dialog.tsx'
 import { Picture } from '#src/ui/picture.tsx'
 import { Cover } from './cover.tsx'
 
-export type CoverChoiceProps = { planned: PlannedShot; mayWrite: boolean; onChange: (frameId: Frame['id'] | null) => void }
+export type CoverChoiceProps = {
+  planned: PlannedShot
+  mayWrite: boolean
+  onChange: (frameId: Frame['id'] | null) => void
+}
 
 /** The frame from the board that this shot is after. */
 export function CoverChoice({ planned, mayWrite, onChange }: CoverChoiceProps) {
@@ -33,13 +37,25 @@ export function CoverChoice({ planned, mayWrite, onChange }: CoverChoiceProps) {
           </Button>
         )}
       </div>
-      <Dialog wide open={isOpen} onOpenChange={setIsOpen} title="Choose the cover frame" description="From the pictures on the board." {...(cover ? { footer: <Button onClick={() => choose(null)}>No cover</Button> } : {})}>
+      <Dialog
+        wide
+        open={isOpen}
+        onOpenChange={setIsOpen}
+        title="Choose the cover frame"
+        description="From the pictures on the board."
+        {...(cover ? { footer: <Button onClick={() => choose(null)}>No cover</Button> } : {})}
+      >
         {frames.length === 0 ? (
           <p className="py-6 text-center text-ink-soft">There is no picture on the board yet. Pin one there first.</p>
         ) : (
           <div className="grid grid-cols-[repeat(auto-fill,minmax(104px,1fr))] gap-3">
             {frames.map((frame) => (
-              <FrameButton key={frame.id} frame={frame} isChosen={frame.id === cover?.id} onPress={() => choose(frame.id)} />
+              <FrameButton
+                key={frame.id}
+                frame={frame}
+                isChosen={frame.id === cover?.id}
+                onPress={() => choose(frame.id)}
+              />
             ))}
           </div>
         )}
@@ -52,8 +68,24 @@ function FrameButton({ frame, isChosen, onPress }: { frame: Frame; isChosen: boo
   const localUrl = useLocalPicture(frame.picture.uploadId)
   const caption = frame.caption || 'Without a caption'
   return (
-    <button type="button" aria-pressed={isChosen} onClick={onPress} className={cn('flex flex-col rounded-r border bg-print p-1 text-left hover:border-ink-soft', isChosen ? 'border-velvet ring-1 ring-velvet' : 'border-hair')}>
-      <Picture uploadId={frame.picture.uploadId} state={frame.picture.state} localUrl={localUrl} tint={frame.palette[0]} alt="" sizes="112px" className="aspect-[4/5] w-full" />
+    <button
+      type="button"
+      aria-pressed={isChosen}
+      onClick={onPress}
+      className={cn(
+        'flex flex-col rounded-r border bg-print p-1 text-left hover:border-ink-soft',
+        isChosen ? 'border-velvet ring-1 ring-velvet' : 'border-hair',
+      )}
+    >
+      <Picture
+        uploadId={frame.picture.uploadId}
+        state={frame.picture.state}
+        localUrl={localUrl}
+        tint={frame.palette[0]}
+        alt=""
+        sizes="112px"
+        className="aspect-[4/5] w-full"
+      />
       <span className="line-clamp-2 px-0.5 pt-1 text-xs">{caption}</span>
     </button>
   )

@@ -10,5 +10,16 @@ export function Cover({ shot, className }: CoverProps) {
   const picture = shot.cover?.picture
   const localUrl = useLocalPicture(picture?.uploadId ?? '')
   if (!picture) return <span aria-hidden className={cn('block flex-none bg-ground', className)} />
-  return <Picture uploadId={picture.uploadId} state={picture.state} localUrl={localUrl} tint={shot.cover?.palette[0]} alt="" sizes="96px" focus="50% 25%" className={cn('flex-none', className)} />
+  return (
+    <Picture
+      uploadId={picture.uploadId}
+      state={picture.state}
+      localUrl={localUrl}
+      tint={shot.cover?.palette[0]}
+      alt=""
+      sizes="96px"
+      focus="50% 25%"
+      className={cn('flex-none', className)}
+    />
+  )
 }

@@ -37,25 +37,48 @@ export function DayRail({ plan, shown, chosenId, mayMove, dropLine, onOpen }: Da
   const topOf = (atMin: number) => HEAD_PX + (atMin - day.lightsOnMin) * PX_PER_MIN
   const segments = segmentsOf(day)
   const heightOf = ({ startMin, endMin: to }: Segment) => Math.max(2, (to - startMin) * PX_PER_MIN - 1)
-  const beside = segments.filter((segment) => segment.kind !== 'shot' ? heightOf(segment) < FIT_PX : heightOf(segment) < ONE_LINE_PX)
-  const tops = spreadLabels(beside.map((segment) => topOf(segment.startMin) + heightOf(segment) / 2 - LABEL_PX / 2), LABEL_PX)
+  const beside = segments.filter((segment) =>
+    segment.kind !== 'shot' ? heightOf(segment) < FIT_PX : heightOf(segment) < ONE_LINE_PX,
+  )
+  const tops = spreadLabels(
+    beside.map((segment) => topOf(segment.startMin) + heightOf(segment) / 2 - LABEL_PX / 2),
+    LABEL_PX,
+  )
   const sittersPx = problem.sitters.length * SITTER_RAIL_PX + (problem.sitters.length > 0 ? 12 : 0)
   const gutter = beside.length > 0 ? GUTTER : '0px'
-  const hours = Array.from({ length: Math.floor(endMin / 60) - Math.ceil(day.lightsOnMin / 60) + 1 }, (_, k) => (Math.ceil(day.lightsOnMin / 60) + k) * 60)
+  const hours = Array.from(
+    { length: Math.floor(endMin / 60) - Math.ceil(day.lightsOnMin / 60) + 1 },
+    (_, k) => (Math.ceil(day.lightsOnMin / 60) + k) * 60,
+  )
   const brokenOf = (shotId: string) => day.broken.filter((rule) => rule.shotId === shotId).map(({ words }) => words)
   return (
-    <div className="relative overflow-hidden rounded-r border border-hair bg-paper" style={{ height: topOf(endMin) + HEAD_PX }}>
+    <div
+      className="relative overflow-hidden rounded-r border border-hair bg-paper"
+      style={{ height: topOf(endMin) + HEAD_PX }}
+    >
       {hours.map((hourMin) => (
-        <div key={hourMin} aria-hidden className="absolute inset-x-0 border-t border-hair-soft pt-0.5 pl-3 text-xs text-ink-faint" style={{ top: topOf(hourMin) }}>
+        <div
+          key={hourMin}
+          aria-hidden
+          className="absolute inset-x-0 border-t border-hair-soft pt-0.5 pl-3 text-xs text-ink-faint"
+          style={{ top: topOf(hourMin) }}
+        >
           {clockLabel(hourMin)}
         </div>
       ))}
       {hasHardOut && (
-        <div className="absolute inset-x-0 z-10 border-t-2 border-velvet pr-3 text-right text-xs font-semibold text-velvet" style={{ top: topOf(day.hardOutMin) }}>
+        <div
+          className="absolute inset-x-0 z-10 border-t-2 border-velvet pr-3 text-right text-xs font-semibold text-velvet"
+          style={{ top: topOf(day.hardOutMin) }}
+        >
           Hard out {clockLabel(day.hardOutMin)}
         </div>
       )}
-      <ol aria-label="The day in order" className="absolute inset-y-0 left-0" style={{ right: `calc(${12 + sittersPx}px + ${gutter})` }}>
+      <ol
+        aria-label="The day in order"
+        className="absolute inset-y-0 left-0"
+        style={{ right: `calc(${12 + sittersPx}px + ${gutter})` }}
+      >
         {segments.map((segment) => {
           const box = { top: topOf(segment.startMin), height: heightOf(segment) }
           if (segment.kind === 'shot') {
@@ -86,7 +109,11 @@ export function DayRail({ plan, shown, chosenId, mayMove, dropLine, onOpen }: Da
         })}
       </ol>
       {beside.map((segment, index) => (
-        <div key={keyOf(segment)} className="absolute flex items-center gap-1.5 text-xs" style={{ top: tops[index] ?? 0, height: LABEL_PX, right: 8 + sittersPx, width: GUTTER }}>
+        <div
+          key={keyOf(segment)}
+          className="absolute flex items-center gap-1.5 text-xs"
+          style={{ top: tops[index] ?? 0, height: LABEL_PX, right: 8 + sittersPx, width: GUTTER }}
+        >
           <span aria-hidden className="w-2 flex-none border-t border-edge" />
           <GutterLabel segment={segment} plan={plan} hands={planned.day.hands} onOpen={onOpen} />
         </div>
@@ -126,12 +153,18 @@ function Between({ segment, hands, heightPx }: BetweenProps) {
   }
   return (
     <Hatch tone={segment.tone} className="h-full">
-      <Spelled segment={segment} hands={hands} className="flex size-full items-center gap-2 px-3.5 text-left text-xs leading-[1.3] hover:brightness-97">
+      <Spelled
+        segment={segment}
+        hands={hands}
+        className="flex size-full items-center gap-2 px-3.5 text-left text-xs leading-[1.3] hover:brightness-97"
+      >
         {isNarrow ? (
           <span className="sr-only">{`${segment.words}, ${minutes}`}</span>
         ) : (
           <>
-            <span className={cn('min-w-0 flex-1', heightPx >= 2.5 * LABEL_PX ? 'line-clamp-2' : 'truncate')}>{segment.words}</span>
+            <span className={cn('min-w-0 flex-1', heightPx >= 2.5 * LABEL_PX ? 'line-clamp-2' : 'truncate')}>
+              {segment.words}
+            </span>
             <b className="font-semibold whitespace-nowrap">{minutes}</b>
           </>
         )}
@@ -140,7 +173,12 @@ function Between({ segment, hands, heightPx }: BetweenProps) {
   )
 }
 
-export type SpelledProps = { segment: Extract<Segment, { kind: 'change' }>; hands: number; className: string; children: ReactNode }
+export type SpelledProps = {
+  segment: Extract<Segment, { kind: 'change' }>
+  hands: number
+  className: string
+  children: ReactNode
+}
 
 /** A changeover's words as a button that opens the whole list. */
 export function Spelled({ segment, hands, className, children }: SpelledProps) {
@@ -166,7 +204,11 @@ function GutterLabel({ segment, plan, hands, onOpen }: GutterLabelProps) {
   if (segment.kind === 'shot') {
     const shot = plan.shots.get(segment.scheduled.shotId)
     return (
-      <button type="button" className="min-w-0 truncate text-left font-semibold hover:underline" onClick={() => onOpen(segment.scheduled.shotId)}>
+      <button
+        type="button"
+        className="min-w-0 truncate text-left font-semibold hover:underline"
+        onClick={() => onOpen(segment.scheduled.shotId)}
+      >
         {shot?.number} {shot?.shot.title}, {clockLabel(segment.startMin)}, {minutes}
       </button>
     )
@@ -178,7 +220,14 @@ function GutterLabel({ segment, plan, hands, onOpen }: GutterLabelProps) {
   )
   if (segment.kind !== 'change') return <span className="min-w-0 truncate text-ink-soft">{text}</span>
   return (
-    <Spelled segment={segment} hands={hands} className={cn('min-w-0 truncate text-left hover:underline', segment.tone === 'draft' ? 'text-draft' : 'text-glow-deep')}>
+    <Spelled
+      segment={segment}
+      hands={hands}
+      className={cn(
+        'min-w-0 truncate text-left hover:underline',
+        segment.tone === 'draft' ? 'text-draft' : 'text-glow-deep',
+      )}
+    >
       {text}
     </Spelled>
   )

@@ -22,7 +22,10 @@ export function Handle({ name, nodeRef, attributes, listeners, lines = false, cl
       {...attributes}
       {...listeners}
       aria-label={name}
-      className={cn('grid cursor-grab touch-none place-items-center rounded-r text-ink-faint select-none hover:bg-ink/8 hover:text-ink active:cursor-grabbing', className)}
+      className={cn(
+        'grid cursor-grab touch-none place-items-center rounded-r text-ink-faint select-none hover:bg-ink/8 hover:text-ink active:cursor-grabbing',
+        className,
+      )}
     >
       <Sign size={lines ? 18 : 16} aria-hidden />
     </button>

@@ -49,7 +49,9 @@ export function OrderScreen() {
   const close = () => setOpened(null)
 
   const actions: ScreenAction[] = [
-    ...(writer.mayBoard && list ? [{ label: 'Add a shot', variant: 'quiet' as const, onPress: () => setOpened('add') }] : []),
+    ...(writer.mayBoard && list
+      ? [{ label: 'Add a shot', variant: 'quiet' as const, onPress: () => setOpened('add') }]
+      : []),
     { label: 'Sets and rooms', variant: 'quiet', onPress: () => setOpened('sets') },
     ...(shown ? [{ label: 'Day', onPress: () => setOpened('day') }] : []),
     ...(isPhone && writer.mayBoard
@@ -82,24 +84,47 @@ export function OrderScreen() {
 
   return (
     <div className="flex min-h-full flex-col md:h-full">
-      <ScreenBar title="Running order" sub={shown && <Sub shown={shown} />} actions={actions} {...(writer.mayBoard && !isPhone ? { children: <UndoButtons writer={writer} /> } : {})} />
+      <ScreenBar
+        title="Running order"
+        sub={shown && <Sub shown={shown} />}
+        actions={actions}
+        {...(writer.mayBoard && !isPhone ? { children: <UndoButtons writer={writer} /> } : {})}
+      />
       <div className="flex min-h-0 flex-1">
         <div className="min-w-0 flex-1 overflow-x-hidden md:overflow-y-auto">
           <div className="flex flex-col gap-4 px-3 pt-3 pb-8 md:px-6 md:pt-0">
             {plan.days.length > 1 && (
               <nav aria-label="Days" className="flex flex-wrap gap-2">
                 {plan.days.map((planned, index) => (
-                  <Button key={planned.day.id} size="small" variant={index === shown?.index ? 'plain' : 'quiet'} aria-pressed={index === shown?.index} onClick={() => choose(planned.day.id)}>
+                  <Button
+                    key={planned.day.id}
+                    size="small"
+                    variant={index === shown?.index ? 'plain' : 'quiet'}
+                    aria-pressed={index === shown?.index}
+                    onClick={() => choose(planned.day.id)}
+                  >
                     {dayName(planned, index)}
                   </Button>
                 ))}
               </nav>
             )}
             {shown && list ? (
-              <Shown plan={plan} shown={shown} list={list} writer={writer} chosenId={openShotId} onOpen={open} onAdd={() => setOpened('add')} />
+              <Shown
+                plan={plan}
+                shown={shown}
+                list={list}
+                writer={writer}
+                chosenId={openShotId}
+                onOpen={open}
+                onAdd={() => setOpened('add')}
+              />
             ) : (
-              <Empty title="There is no day yet" action={writer.mayPlan && <Button onClick={() => choose(writer.addDay(undefined))}>Add a day</Button>}>
-                A day has its hours, a meal and people who can move lights. Its shots stand here in the order in which they are made.
+              <Empty
+                title="There is no day yet"
+                action={writer.mayPlan && <Button onClick={() => choose(writer.addDay(undefined))}>Add a day</Button>}
+              >
+                A day has its hours, a meal and people who can move lights. Its shots stand here in the order in which
+                they are made.
               </Empty>
             )}
             <LooseShots
@@ -112,9 +137,27 @@ export function OrderScreen() {
             />
           </div>
         </div>
-        {shown && asked.state && <ProposalPanel asked={asked} problem={shown.problem} onUse={use} onOpenShot={open} onOpenDay={() => setOpened('day')} />}
+        {shown && asked.state && (
+          <ProposalPanel
+            asked={asked}
+            problem={shown.problem}
+            onUse={use}
+            onOpenShot={open}
+            onOpenDay={() => setOpened('day')}
+          />
+        )}
         {shown && openShot && !asked.state && (
-          <ShotPanel key={openShot.shot.id} planned={openShot} plan={plan} shown={shown} lists={lists} writer={writer} onClose={() => setOpenShotId(null)} onOpen={open} onSets={() => setOpened('sets')} />
+          <ShotPanel
+            key={openShot.shot.id}
+            planned={openShot}
+            plan={plan}
+            shown={shown}
+            lists={lists}
+            writer={writer}
+            onClose={() => setOpenShotId(null)}
+            onOpen={open}
+            onSets={() => setOpened('sets')}
+          />
         )}
       </div>
       {opened === 'add' && list && (
@@ -126,7 +169,17 @@ export function OrderScreen() {
           }}
         />
       )}
-      {opened === 'day' && shown && <DaySettings key={shown.planned.day.id} planned={shown.planned} index={shown.index} days={plan.days.length} writer={writer} onClose={close} onAdded={choose} />}
+      {opened === 'day' && shown && (
+        <DaySettings
+          key={shown.planned.day.id}
+          planned={shown.planned}
+          index={shown.index}
+          days={plan.days.length}
+          writer={writer}
+          onClose={close}
+          onAdded={choose}
+        />
+      )}
       {opened === 'sets' && <SetsSheet plan={plan} writer={writer} onClose={close} />}
     </div>
   )
@@ -151,8 +204,12 @@ function Shown({ plan, shown, list, writer, chosenId, onOpen, onAdd }: ShownProp
   const sorting = useSorting(list.shots, (shotId, index) => writer.move(list, shotId, index))
   if (list.shots.length === 0) {
     return (
-      <Empty title="Nothing is planned for this day yet" action={writer.mayBoard && <Button onClick={onAdd}>Add the first shot</Button>}>
-        A shot is one picture to make: where, in which light, who wears what, and how long it takes. Sconce works out the times and what changes in between.
+      <Empty
+        title="Nothing is planned for this day yet"
+        action={writer.mayBoard && <Button onClick={onAdd}>Add the first shot</Button>}
+      >
+        A shot is one picture to make: where, in which light, who wears what, and how long it takes. Sconce works out
+        the times and what changes in between.
       </Empty>
     )
   }
@@ -173,7 +230,9 @@ function Shown({ plan, shown, list, writer, chosenId, onOpen, onAdd }: ShownProp
 const stay = () => null
 
 function Sub({ shown: { day } }: { shown: OrderDay }) {
-  return day.shots.length === 0 ? `Lights on ${clockLabel(day.lightsOnMin)}, hard out ${clockLabel(day.hardOutMin)}` : `Lights on ${clockLabel(day.lightsOnMin)} · wrap ${clockLabel(day.wrapMin)}, hard out ${clockLabel(day.hardOutMin)}`
+  return day.shots.length === 0
+    ? `Lights on ${clockLabel(day.lightsOnMin)}, hard out ${clockLabel(day.hardOutMin)}`
+    : `Lights on ${clockLabel(day.lightsOnMin)} · wrap ${clockLabel(day.wrapMin)}, hard out ${clockLabel(day.hardOutMin)}`
 }
 
 function UndoButtons({ writer: { undo } }: { writer: OrderWriter }) {

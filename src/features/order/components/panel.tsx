@@ -26,7 +26,10 @@ export function Panel({ title, onClose, aside, footer, children }: PanelProps) {
     )
   }
   return (
-    <aside aria-label={title} className="flex min-h-0 w-[26.25rem] flex-none flex-col border-l border-hair bg-paper max-lg:w-[21rem]">
+    <aside
+      aria-label={title}
+      className="flex min-h-0 w-[26.25rem] flex-none flex-col border-l border-hair bg-paper max-lg:w-[21rem]"
+    >
       <header className="flex items-start gap-1 px-[22px] pt-4 pb-1.5">
         <h2 className="min-w-0 flex-1 text-xl">{title}</h2>
         {aside}

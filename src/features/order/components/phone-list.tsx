@@ -48,7 +48,11 @@ export function PhoneList({ plan, shown, mayMove, dropLine, onOpen }: PhoneListP
           return (
             <li key={`change:${segment.scheduled.shotId}`}>
               <Hatch tone={segment.tone}>
-                <Spelled segment={segment} hands={planned.day.hands} className="flex min-h-11 w-full items-center gap-2 py-1 pr-3 pl-[62px] text-left text-[0.8125rem]">
+                <Spelled
+                  segment={segment}
+                  hands={planned.day.hands}
+                  className="flex min-h-11 w-full items-center gap-2 py-1 pr-3 pl-[62px] text-left text-[0.8125rem]"
+                >
                   <span className="min-w-0 flex-1 truncate">{segment.words}</span>
                   <b className="font-semibold">
                     {minutes}
@@ -60,8 +64,13 @@ export function PhoneList({ plan, shown, mayMove, dropLine, onOpen }: PhoneListP
           )
         }
         return (
-          <li key={segment.kind === 'meal' ? 'meal' : `wait:${segment.scheduled.shotId}`} className="my-1 flex min-h-9 items-center gap-2 border border-dashed border-edge pr-3 pl-[62px] text-[0.8125rem] text-ink-soft">
-            <span className="min-w-0 flex-1">{segment.kind === 'meal' ? `Meal, ${clockLabel(segment.startMin)}` : segment.words}</span>
+          <li
+            key={segment.kind === 'meal' ? 'meal' : `wait:${segment.scheduled.shotId}`}
+            className="my-1 flex min-h-9 items-center gap-2 border border-dashed border-edge pr-3 pl-[62px] text-[0.8125rem] text-ink-soft"
+          >
+            <span className="min-w-0 flex-1">
+              {segment.kind === 'meal' ? `Meal, ${clockLabel(segment.startMin)}` : segment.words}
+            </span>
             <b className="font-semibold">
               {minutes}
               <span className="sr-only"> minutes</span>
@@ -84,15 +93,24 @@ type PhoneShotProps = {
 }
 
 function PhoneShot({ planned, startMin, minutes, broken, mayMove, dropSide, onOpen }: PhoneShotProps) {
-  const { attributes, listeners, setNodeRef, setActivatorNodeRef, transform, isDragging } = useSortable({ id: planned.shot.id, disabled: !mayMove })
+  const { attributes, listeners, setNodeRef, setActivatorNodeRef, transform, isDragging } = useSortable({
+    id: planned.shot.id,
+    disabled: !mayMove,
+  })
   return (
     <li
       ref={setNodeRef}
       style={{ transform: CSS.Translate.toString(transform) }}
-      className={cn('relative flex items-stretch rounded-r border bg-print', broken === undefined ? 'border-hair' : 'border-glow', isDragging && 'z-20 opacity-90 shadow-float')}
+      className={cn(
+        'relative flex items-stretch rounded-r border bg-print',
+        broken === undefined ? 'border-hair' : 'border-glow',
+        isDragging && 'z-20 opacity-90 shadow-float',
+      )}
     >
       <button type="button" onClick={onOpen} className="flex min-h-[66px] min-w-0 flex-1 items-stretch text-left">
-        <span className="flex w-[62px] flex-none items-center justify-end pr-2.5 text-sm font-semibold">{clockLabel(startMin)}</span>
+        <span className="flex w-[62px] flex-none items-center justify-end pr-2.5 text-sm font-semibold">
+          {clockLabel(startMin)}
+        </span>
         <Cover shot={planned} className="w-[54px] self-stretch" />
         <span className="flex min-w-0 flex-1 flex-col justify-center px-2.5 py-1.5">
           <span className="text-sm leading-tight font-semibold">
@@ -108,8 +126,25 @@ function PhoneShot({ planned, startMin, minutes, broken, mayMove, dropSide, onOp
           )}
         </span>
       </button>
-      {mayMove && <Handle lines name={handleName(planned)} nodeRef={setActivatorNodeRef} attributes={attributes} listeners={listeners} className="w-11 flex-none" />}
-      {dropSide && <span aria-hidden className={cn('absolute inset-x-0 z-30 h-[3px] bg-velvet', dropSide === 'above' ? '-top-[3px]' : '-bottom-[3px]')} />}
+      {mayMove && (
+        <Handle
+          lines
+          name={handleName(planned)}
+          nodeRef={setActivatorNodeRef}
+          attributes={attributes}
+          listeners={listeners}
+          className="w-11 flex-none"
+        />
+      )}
+      {dropSide && (
+        <span
+          aria-hidden
+          className={cn(
+            'absolute inset-x-0 z-30 h-[3px] bg-velvet',
+            dropSide === 'above' ? '-top-[3px]' : '-bottom-[3px]',
+          )}
+        />
+      )}
     </li>
   )
 }

@@ -30,7 +30,10 @@ export type ProposalPanelProps = {
 /** What a better order would save, beside the order as it stands. */
 export function ProposalPanel({ asked, problem, onUse, onOpenShot, onOpenDay }: ProposalPanelProps) {
   const { state } = asked
-  const isStale = useMemo(() => state !== null && state.problem !== problem && JSON.stringify(state.problem) !== JSON.stringify(problem), [state, problem])
+  const isStale = useMemo(
+    () => state !== null && state.problem !== problem && JSON.stringify(state.problem) !== JSON.stringify(problem),
+    [state, problem],
+  )
   if (!state) return null
   if (state.kind === 'failed') {
     return (
@@ -49,7 +52,19 @@ export function ProposalPanel({ asked, problem, onUse, onOpenShot, onOpenDay }: 
     )
   }
   const proposal = state.kind === 'found' ? state.proposal : state.soFar
-  return <Found asked={asked} problem={state.problem} present={problem} proposal={proposal} thinking={state.kind === 'thinking' ? state.share : null} isStale={isStale} onUse={onUse} onOpenShot={onOpenShot} onOpenDay={onOpenDay} />
+  return (
+    <Found
+      asked={asked}
+      problem={state.problem}
+      present={problem}
+      proposal={proposal}
+      thinking={state.kind === 'thinking' ? state.share : null}
+      isStale={isStale}
+      onUse={onUse}
+      onOpenShot={onOpenShot}
+      onOpenDay={onOpenDay}
+    />
+  )
 }
 
 type FoundProps = Omit<ProposalPanelProps, 'asked'> & {
@@ -66,11 +81,24 @@ const STRIP_PX = 400
 
 function Found({ asked, problem, present, proposal, thinking, isStale, onUse, onOpenShot, onOpenDay }: FoundProps) {
   const { before, after, comparison, better } = useMemo(() => {
-    const first = schedule(problem, problem.shots.map(({ id }) => id))
+    const first = schedule(
+      problem,
+      problem.shots.map(({ id }) => id),
+    )
     const second = schedule(problem, proposal.sequence)
-    return { before: first, after: second, comparison: compareOrders(problem, first, second), better: isBetter(problem, proposal) }
+    return {
+      before: first,
+      after: second,
+      comparison: compareOrders(problem, first, second),
+      better: isBetter(problem, proposal),
+    }
   }, [problem, proposal])
-  const title = thinking === null ? proposalTitle(comparison, better, proposal.proven) : better ? 'A shorter day, so far' : 'Looking for a shorter day'
+  const title =
+    thinking === null
+      ? proposalTitle(comparison, better, proposal.proven)
+      : better
+        ? 'A shorter day, so far'
+        : 'Looking for a shorter day'
   const footer = (
     <>
       <Button variant={better ? 'quiet' : 'plain'} onClick={asked.close}>
@@ -84,7 +112,17 @@ function Found({ asked, problem, present, proposal, thinking, isStale, onUse, on
     </>
   )
   return (
-    <Panel title={title} onClose={asked.close} footer={thinking === null ? footer : <Thinking share={thinking} onCancel={asked.close} onStop={better ? asked.stop : null} />}>
+    <Panel
+      title={title}
+      onClose={asked.close}
+      footer={
+        thinking === null ? (
+          footer
+        ) : (
+          <Thinking share={thinking} onCancel={asked.close} onStop={better ? asked.stop : null} />
+        )
+      }
+    >
       <p className=" text-xs text-ink-soft">{keptWords(problem, comparison)}</p>
       {isStale && (
         <Caution title="The plan has changed since this was worked out">
@@ -95,14 +133,21 @@ function Found({ asked, problem, present, proposal, thinking, isStale, onUse, on
       )}
       {thinking === null && !better ? (
         <p>
-          The day as it stands spends {whole(comparison.present.changingMin)} minutes changing over and wraps at {clockLabel(comparison.present.wrapMin)}. Leave it as it is.
+          The day as it stands spends {whole(comparison.present.changingMin)} minutes changing over and wraps at{' '}
+          {clockLabel(comparison.present.wrapMin)}. Leave it as it is.
         </p>
       ) : (
         <SideBySide problem={problem} before={before} after={after} comparison={comparison} />
       )}
       {thinking === null && (
         <>
-          <Broken proposal={proposal} problem={problem} comparison={comparison} onOpenShot={onOpenShot} onOpenDay={onOpenDay} />
+          <Broken
+            proposal={proposal}
+            problem={problem}
+            comparison={comparison}
+            onOpenShot={onOpenShot}
+            onOpenDay={onOpenDay}
+          />
           <p className="text-xs text-ink-soft">{provenWords(proposal)}</p>
         </>
       )}
@@ -124,8 +169,17 @@ function SideBySide({ problem, before, after, comparison }: SideBySideProps) {
         <span className="label-small">Proposed</span>
         <span className="font-display text-3xl font-semibold">{whole(comparison.present.changingMin)}</span>
         <span />
-        <span className={cn('font-display text-3xl font-semibold', comparison.proposed.changingMin < comparison.present.changingMin && 'text-bottle')}>{whole(comparison.proposed.changingMin)}</span>
-        <span className="col-span-3 pt-1 text-xs text-ink-soft">minutes spent changing over, the first rigging included</span>
+        <span
+          className={cn(
+            'font-display text-3xl font-semibold',
+            comparison.proposed.changingMin < comparison.present.changingMin && 'text-bottle',
+          )}
+        >
+          {whole(comparison.proposed.changingMin)}
+        </span>
+        <span className="col-span-3 pt-1 text-xs text-ink-soft">
+          minutes spent changing over, the first rigging included
+        </span>
       </div>
       <div className="grid grid-cols-[1fr_1fr] gap-x-8">
         <ProposalStrip label="The day as it stands" problem={problem} day={before} pxPerMin={pxPerMin} />
@@ -180,15 +234,26 @@ function Table({ comparison: { present, proposed, moved } }: { comparison: Order
         </tr>
       </thead>
       <tbody>
-        {ROWS.filter(({ of, always }) => always || of(present) > 0 || of(proposed) > 0).map(({ label, of, shown = String }) => (
-          <tr key={label} className="border-t border-hair-soft">
-            <th scope="row" className="py-1.5 text-left font-normal">
-              {label}
-            </th>
-            <td className="w-14 text-right">{shown(of(present))}</td>
-            <td className={cn('w-14 text-right', of(proposed) < of(present) ? 'font-semibold text-bottle' : of(proposed) > of(present) && 'font-semibold text-glow-ink')}>{shown(of(proposed))}</td>
-          </tr>
-        ))}
+        {ROWS.filter(({ of, always }) => always || of(present) > 0 || of(proposed) > 0).map(
+          ({ label, of, shown = String }) => (
+            <tr key={label} className="border-t border-hair-soft">
+              <th scope="row" className="py-1.5 text-left font-normal">
+                {label}
+              </th>
+              <td className="w-14 text-right">{shown(of(present))}</td>
+              <td
+                className={cn(
+                  'w-14 text-right',
+                  of(proposed) < of(present)
+                    ? 'font-semibold text-bottle'
+                    : of(proposed) > of(present) && 'font-semibold text-glow-ink',
+                )}
+              >
+                {shown(of(proposed))}
+              </td>
+            </tr>
+          ),
+        )}
         <tr className="border-t border-hair-soft">
           <th scope="row" className="py-1.5 text-left font-normal">
             Shots moved
@@ -201,7 +266,9 @@ function Table({ comparison: { present, proposed, moved } }: { comparison: Order
   )
 }
 
-type BrokenProps = Pick<FoundProps, 'proposal' | 'problem' | 'onOpenShot' | 'onOpenDay'> & { comparison: OrderComparison }
+type BrokenProps = Pick<FoundProps, 'proposal' | 'problem' | 'onOpenShot' | 'onOpenDay'> & {
+  comparison: OrderComparison
+}
 
 /** Rules that no order can keep together, each with a way to what it is about. */
 function Broken({ proposal, problem, comparison, onOpenShot, onOpenDay }: BrokenProps) {
@@ -227,7 +294,12 @@ function Broken({ proposal, problem, comparison, onOpenShot, onOpenDay }: Broken
   )
 }
 
-type OpenRuleProps = { ruleKey: RuleKey; problem: OrderProblem; onOpenShot: (shotId: string) => void; onOpenDay: () => void }
+type OpenRuleProps = {
+  ruleKey: RuleKey
+  problem: OrderProblem
+  onOpenShot: (shotId: string) => void
+  onOpenDay: () => void
+}
 
 function OpenRule({ ruleKey, problem, onOpenShot, onOpenDay }: OpenRuleProps) {
   const shoot = useShoot()

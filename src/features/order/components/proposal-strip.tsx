@@ -19,10 +19,23 @@ export function ProposalStrip({ label, problem, day, pxPerMin }: ProposalStripPr
       {segmentsOf(day).map((segment) => {
         const heightPx = Math.max(3, (segment.endMin - segment.startMin) * pxPerMin)
         const minutes = Math.ceil(segment.endMin - segment.startMin - 1e-9)
-        const box = cn('flex items-center justify-between gap-2 overflow-hidden rounded-sm px-1.5 text-xs leading-none', boxOf(segment))
+        const box = cn(
+          'flex items-center justify-between gap-2 overflow-hidden rounded-sm px-1.5 text-xs leading-none',
+          boxOf(segment),
+        )
         const shown = heightPx >= TEXT_PX
-        const name = segment.kind === 'shot' ? `Shot ${numberOf.get(segment.scheduled.shotId) ?? ''}` : segment.kind === 'meal' ? 'Meal' : segment.kind === 'wait' ? 'Wait' : ''
-        const title = segment.kind === 'shot' ? `${name}, ${titleOf.get(segment.scheduled.shotId) ?? ''}, ${clockLabel(segment.startMin)}` : `${name || 'Changing over'}, ${minutes} min`
+        const name =
+          segment.kind === 'shot'
+            ? `Shot ${numberOf.get(segment.scheduled.shotId) ?? ''}`
+            : segment.kind === 'meal'
+              ? 'Meal'
+              : segment.kind === 'wait'
+                ? 'Wait'
+                : ''
+        const title =
+          segment.kind === 'shot'
+            ? `${name}, ${titleOf.get(segment.scheduled.shotId) ?? ''}, ${clockLabel(segment.startMin)}`
+            : `${name || 'Changing over'}, ${minutes} min`
         const inner = shown ? (
           <>
             <span className="truncate">{name}</span>
@@ -32,7 +45,12 @@ export function ProposalStrip({ label, problem, day, pxPerMin }: ProposalStripPr
           <span className="sr-only">{title}</span>
         )
         return (
-          <li key={segment.kind === 'meal' ? 'meal' : `${segment.kind}:${segment.scheduled.shotId}`} title={title} style={{ height: heightPx }} className="pb-[2px]">
+          <li
+            key={segment.kind === 'meal' ? 'meal' : `${segment.kind}:${segment.scheduled.shotId}`}
+            title={title}
+            style={{ height: heightPx }}
+            className="pb-[2px]"
+          >
             {segment.kind === 'change' ? (
               <Hatch strong tone={segment.tone} className={cn(box, 'h-full')}>
                 {inner}

@@ -28,8 +28,23 @@ const TWO_LINES_PX = 42
 export const ONE_LINE_PX = 21
 
 /** One shot on the rail, as high as it is long. */
-export function RailShot({ planned, startMin, minutes, topPx, heightPx, broken, isChosen, isLate, mayMove, dropSide, onOpen }: RailShotProps) {
-  const { attributes, listeners, setNodeRef, setActivatorNodeRef, transform, isDragging } = useSortable({ id: planned.shot.id, disabled: !mayMove })
+export function RailShot({
+  planned,
+  startMin,
+  minutes,
+  topPx,
+  heightPx,
+  broken,
+  isChosen,
+  isLate,
+  mayMove,
+  dropSide,
+  onOpen,
+}: RailShotProps) {
+  const { attributes, listeners, setNodeRef, setActivatorNodeRef, transform, isDragging } = useSortable({
+    id: planned.shot.id,
+    disabled: !mayMove,
+  })
   const two = heightPx >= TWO_LINES_PX
   const one = heightPx >= ONE_LINE_PX
   const { title } = planned.shot
@@ -39,7 +54,15 @@ export function RailShot({ planned, startMin, minutes, topPx, heightPx, broken, 
       style={{ top: topPx, height: heightPx, transform: CSS.Translate.toString(transform) }}
       className={cn('absolute inset-x-0', isDragging && 'z-20 opacity-90')}
     >
-      {mayMove && <Handle name={handleName(planned)} nodeRef={setActivatorNodeRef} attributes={attributes} listeners={listeners} className={cn('absolute top-1/2 left-[50px] w-6 -translate-y-1/2', two ? 'h-9' : 'h-6')} />}
+      {mayMove && (
+        <Handle
+          name={handleName(planned)}
+          nodeRef={setActivatorNodeRef}
+          attributes={attributes}
+          listeners={listeners}
+          className={cn('absolute top-1/2 left-[50px] w-6 -translate-y-1/2', two ? 'h-9' : 'h-6')}
+        />
+      )}
       <button
         type="button"
         onClick={onOpen}
@@ -51,12 +74,22 @@ export function RailShot({ planned, startMin, minutes, topPx, heightPx, broken, 
         )}
       >
         {one && <Cover shot={planned} className={cn('h-full', two ? 'w-[74px]' : 'w-10')} />}
-        {one && <span className={cn('flex-none text-right font-display font-semibold', two ? 'w-8 text-2xl' : 'w-7 text-lg')}>{planned.number}</span>}
+        {one && (
+          <span className={cn('flex-none text-right font-display font-semibold', two ? 'w-8 text-2xl' : 'w-7 text-lg')}>
+            {planned.number}
+          </span>
+        )}
         {two ? (
           <span className="min-w-0 flex-1">
             <span className="block truncate leading-tight font-semibold">{title}</span>
             {broken.length > 0 ? (
-              <span title={broken.join(' ')} className={cn('block text-xs leading-tight font-semibold text-glow-ink', heightPx >= 62 ? 'line-clamp-2' : 'truncate')}>
+              <span
+                title={broken.join(' ')}
+                className={cn(
+                  'block text-xs leading-tight font-semibold text-glow-ink',
+                  heightPx >= 62 ? 'line-clamp-2' : 'truncate',
+                )}
+              >
                 {broken[0]}
               </span>
             ) : (
@@ -78,7 +111,15 @@ export function RailShot({ planned, startMin, minutes, topPx, heightPx, broken, 
           </span>
         )}
       </button>
-      {dropSide && <span aria-hidden className={cn('absolute right-0 left-[60px] z-30 h-[3px] rounded-full bg-velvet', dropSide === 'above' ? '-top-[3px]' : '-bottom-[3px]')} />}
+      {dropSide && (
+        <span
+          aria-hidden
+          className={cn(
+            'absolute right-0 left-[60px] z-30 h-[3px] rounded-full bg-velvet',
+            dropSide === 'above' ? '-top-[3px]' : '-bottom-[3px]',
+          )}
+        />
+      )}
     </li>
   )
 }

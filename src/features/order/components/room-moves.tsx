@@ -6,7 +6,9 @@ import type { OrderWriter } from '../use-order-writer.ts'
 export function RoomMoves({ plan, writer }: { plan: Plan; writer: OrderWriter }) {
   const used = new Set([...plan.sets.values()].map(({ roomId }) => roomId))
   const rooms = plan.brief.rooms.filter((room) => used.has(room.id))
-  const pairs = rooms.flatMap((from, index) => rooms.slice(index + 1).map((to) => ({ from, to, id: moveId(from.id, to.id) })))
+  const pairs = rooms.flatMap((from, index) =>
+    rooms.slice(index + 1).map((to) => ({ from, to, id: moveId(from.id, to.id) })),
+  )
   if (pairs.length === 0) return null
   return (
     <section aria-label="Between rooms" className="mt-5 border-t border-hair pt-3">
@@ -19,9 +21,20 @@ export function RoomMoves({ plan, writer }: { plan: Plan; writer: OrderWriter })
             <li key={id} className="flex items-center gap-3">
               <span className="min-w-0 flex-1">
                 {from.name} and {to.name}
-                {!given && <span className="block text-xs text-ink-soft">The studio’s own minutes, an assumption.</span>}
+                {!given && (
+                  <span className="block text-xs text-ink-soft">The studio’s own minutes, an assumption.</span>
+                )}
               </span>
-              <NumberInput aria-label={name} className="w-28" value={given?.minutes ?? plan.minutes.roomMove} unit="min" min={0} max={480} readOnly={!writer.mayPlan} onChange={(minutes) => writer.setMove(id, minutes)} />
+              <NumberInput
+                aria-label={name}
+                className="w-28"
+                value={given?.minutes ?? plan.minutes.roomMove}
+                unit="min"
+                min={0}
+                max={480}
+                readOnly={!writer.mayPlan}
+                onChange={(minutes) => writer.setMove(id, minutes)}
+              />
             </li>
           )
         })}

@@ -35,7 +35,9 @@ export function RuleForm({ planned, plan, index, startMin, onAdd, onCancel }: Ru
   const [toleranceMin, setToleranceMin] = useState(10)
   const [fromMin, setFromMin] = useState(Math.floor(startMin / 30) * 30)
   const [toMin, setToMin] = useState(Math.floor(startMin / 30) * 30 + 120)
-  const others = [...plan.shots.values()].filter(({ shot }) => shot.id !== planned.shot.id).sort((a, b) => (a.number ?? 999) - (b.number ?? 999))
+  const others = [...plan.shots.values()]
+    .filter(({ shot }) => shot.id !== planned.shot.id)
+    .sort((a, b) => (a.number ?? 999) - (b.number ?? 999))
   const [other, setOther] = useState('')
   const otherId = other === '' ? String(others[0]?.shot.id ?? '') : other
   const shotId = planned.shot.id
@@ -51,7 +53,15 @@ export function RuleForm({ planned, plan, index, startMin, onAdd, onCancel }: Ru
   return (
     <div className="flex flex-col gap-3 border-l-3 border-draft bg-draft-wash/50 px-3 py-2.5">
       <Field label="Rule">
-        <Select value={kind} options={needsOther || others.length > 0 ? KINDS : KINDS.filter(({ value }) => value !== 'after' && value !== 'together')} onChange={setKind} />
+        <Select
+          value={kind}
+          options={
+            needsOther || others.length > 0
+              ? KINDS
+              : KINDS.filter(({ value }) => value !== 'after' && value !== 'together')
+          }
+          onChange={setKind}
+        />
       </Field>
       {kind === 'pin-place' && (
         <Field label="Place">
@@ -78,7 +88,14 @@ export function RuleForm({ planned, plan, index, startMin, onAdd, onCancel }: Ru
       )}
       {needsOther && (
         <Field label={kind === 'after' ? 'Comes after' : 'Together with'}>
-          <Select value={otherId} options={others.map(({ shot, number }) => ({ value: String(shot.id), label: `${number ?? 'Not placed:'} ${shot.title}` }))} onChange={setOther} />
+          <Select
+            value={otherId}
+            options={others.map(({ shot, number }) => ({
+              value: String(shot.id),
+              label: `${number ?? 'Not placed:'} ${shot.title}`,
+            }))}
+            onChange={setOther}
+          />
         </Field>
       )}
       {kind === 'window' && (

@@ -32,7 +32,14 @@ export function SetColour({ value, readOnly, onChange }: SetColourProps) {
         )
       }
     >
-      <Input ref={input} type="color" disabled={readOnly} className="h-[34px] !p-1 max-md:h-11" value={draft ?? value ?? '#8a8a86'} onChange={(event) => setDraft(event.target.value)} />
+      <Input
+        ref={input}
+        type="color"
+        disabled={readOnly}
+        className="h-[34px] !p-1 max-md:h-11"
+        value={draft ?? value ?? '#8a8a86'}
+        onChange={(event) => setDraft(event.target.value)}
+      />
     </Field>
   )
 }

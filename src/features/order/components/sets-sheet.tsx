@@ -39,7 +39,10 @@ export function SetsSheet({ plan, writer, onClose }: SetsSheetProps) {
 
   return (
     <Sheet open onOpenChange={(open) => !open && onClose()} title="Sets and rooms" side={isPhone ? 'bottom' : 'right'}>
-      <p className="mb-3 text-sm text-ink-soft">A set is a place that is dressed and lit. Minutes to dress and strike it, and the way between two rooms, count in every changeover.</p>
+      <p className="mb-3 text-sm text-ink-soft">
+        A set is a place that is dressed and lit. Minutes to dress and strike it, and the way between two rooms, count
+        in every changeover.
+      </p>
       {sets.length === 0 && <p className="mb-3 text-sm">There is no set yet.</p>}
       <ul>
         {sets.map((set) => {
@@ -48,7 +51,12 @@ export function SetsSheet({ plan, writer, onClose }: SetsSheetProps) {
           return (
             <li key={set.id} className="border-t border-hair py-1.5">
               <div className="flex items-center gap-1">
-                <button type="button" aria-expanded={isOpen} onClick={() => setOpenId(isOpen ? null : set.id)} className="flex min-h-11 min-w-0 flex-1 items-center gap-2.5 text-left">
+                <button
+                  type="button"
+                  aria-expanded={isOpen}
+                  onClick={() => setOpenId(isOpen ? null : set.id)}
+                  className="flex min-h-11 min-w-0 flex-1 items-center gap-2.5 text-left"
+                >
                   <Swatch colour={set.colour} sizePx={18} />
                   <span className="min-w-0 flex-1">
                     <span className="block truncate font-semibold">{set.name}</span>
@@ -59,10 +67,16 @@ export function SetsSheet({ plan, writer, onClose }: SetsSheetProps) {
                 </button>
                 {writer.mayPlan && (
                   <>
-                    <IconButton label={`Make a second ${set.name}`} onClick={() => setOpenId(writer.addSet({ ...set, name: `${set.name}, second`.slice(0, 80) }))}>
+                    <IconButton
+                      label={`Make a second ${set.name}`}
+                      onClick={() => setOpenId(writer.addSet({ ...set, name: `${set.name}, second`.slice(0, 80) }))}
+                    >
                       <Copy size={16} aria-hidden />
                     </IconButton>
-                    <IconButton label={`Remove ${set.name}`} onClick={() => (uses.length > 0 ? setRemoving(set) : remove(set))}>
+                    <IconButton
+                      label={`Remove ${set.name}`}
+                      onClick={() => (uses.length > 0 ? setRemoving(set) : remove(set))}
+                    >
                       <Trash2 size={16} aria-hidden />
                     </IconButton>
                   </>
@@ -74,7 +88,12 @@ export function SetsSheet({ plan, writer, onClose }: SetsSheetProps) {
         })}
       </ul>
       {writer.mayPlan && (
-        <Button className="mt-2" onClick={() => setOpenId(writer.addSet({ name: `Set ${sets.length + 1}`, roomId: plan.brief.rooms[0]?.id ?? null }))}>
+        <Button
+          className="mt-2"
+          onClick={() =>
+            setOpenId(writer.addSet({ name: `Set ${sets.length + 1}`, roomId: plan.brief.rooms[0]?.id ?? null }))
+          }
+        >
           Add a set
         </Button>
       )}
@@ -86,8 +105,17 @@ export function SetsSheet({ plan, writer, onClose }: SetsSheetProps) {
         </Link>
         .
       </p>
-      <Confirm open={removing !== null} onOpenChange={(open) => !open && setRemoving(null)} title={`Remove ${removing?.name ?? ''}?`} action="Remove" onConfirm={() => removing && remove(removing)}>
-        {removing && `Made there: ${usesOf(removing).map(({ shot }) => shot.title).join('; ')}. These shots stay where they are, without a set.`}
+      <Confirm
+        open={removing !== null}
+        onOpenChange={(open) => !open && setRemoving(null)}
+        title={`Remove ${removing?.name ?? ''}?`}
+        action="Remove"
+        onConfirm={() => removing && remove(removing)}
+      >
+        {removing &&
+          `Made there: ${usesOf(removing)
+            .map(({ shot }) => shot.title)
+            .join('; ')}. These shots stay where they are, without a set.`}
       </Confirm>
     </Sheet>
   )
@@ -98,28 +126,66 @@ function SetFields({ set, plan, writer }: { set: ShootSet; plan: Plan; writer: O
   const patch = (change: Parameters<OrderWriter['patchSet']>[1]) => writer.patchSet(set.id, change)
   return (
     <div className="flex flex-col gap-3 pt-1 pb-3">
-      <TextLine required label="Name" value={set.name} maxLength={80} readOnly={readOnly} onChange={(name) => patch({ name })} />
+      <TextLine
+        required
+        label="Name"
+        value={set.name}
+        maxLength={80}
+        readOnly={readOnly}
+        onChange={(name) => patch({ name })}
+      />
       <div className="grid grid-cols-2 gap-3">
         <Field label="Room">
           <Select
             disabled={readOnly}
             value={set.roomId ?? ''}
-            options={[{ value: '', label: 'No room yet' }, ...plan.brief.rooms.map((room) => ({ value: String(room.id), label: room.name }))]}
+            options={[
+              { value: '', label: 'No room yet' },
+              ...plan.brief.rooms.map((room) => ({ value: String(room.id), label: room.name })),
+            ]}
             onChange={(id) => patch({ roomId: plan.brief.rooms.find((room) => room.id === id)?.id ?? null })}
           />
         </Field>
         <SetColour value={set.colour} readOnly={readOnly} onChange={(colour) => patch({ colour })} />
       </div>
-      <TextLine label="Background" value={set.background} maxLength={200} placeholder="Blue limewash" readOnly={readOnly} onChange={(background) => patch({ background })} />
+      <TextLine
+        label="Background"
+        value={set.background}
+        maxLength={200}
+        placeholder="Blue limewash"
+        readOnly={readOnly}
+        onChange={(background) => patch({ background })}
+      />
       <div className="grid grid-cols-2 gap-3">
         <Field label="To dress">
-          <NumberInput value={set.dressMin} unit="min" min={0} max={480} readOnly={readOnly} onChange={(dressMin) => patch({ dressMin })} />
+          <NumberInput
+            value={set.dressMin}
+            unit="min"
+            min={0}
+            max={480}
+            readOnly={readOnly}
+            onChange={(dressMin) => patch({ dressMin })}
+          />
         </Field>
         <Field label="To strike">
-          <NumberInput value={set.strikeMin} unit="min" min={0} max={480} readOnly={readOnly} onChange={(strikeMin) => patch({ strikeMin })} />
+          <NumberInput
+            value={set.strikeMin}
+            unit="min"
+            min={0}
+            max={480}
+            readOnly={readOnly}
+            onChange={(strikeMin) => patch({ strikeMin })}
+          />
         </Field>
       </div>
-      <TextLine prose label="Note" value={set.note} maxLength={2000} readOnly={readOnly} onChange={(note) => patch({ note })} />
+      <TextLine
+        prose
+        label="Note"
+        value={set.note}
+        maxLength={2000}
+        readOnly={readOnly}
+        onChange={(note) => patch({ note })}
+      />
     </div>
   )
 }

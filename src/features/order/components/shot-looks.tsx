@@ -20,12 +20,19 @@ export function ShotLooks({ planned, plan, writer }: ShotLooksProps) {
       {planned.looks.length > 0 && (
         <ul aria-label="Looks in this shot">
           {planned.looks.map((look) => (
-            <li key={look.look.id} className="flex items-center gap-2 border-t border-hair-soft py-0.5 first:border-t-0">
+            <li
+              key={look.look.id}
+              className="flex items-center gap-2 border-t border-hair-soft py-0.5 first:border-t-0"
+            >
               <span className="min-w-0 flex-1 truncate">
                 {look.look.name} <span className="text-ink-soft">· {wearer(look)}</span>
               </span>
               {writer.mayBoard && (
-                <IconButton label={`Take out ${look.look.name}`} className="size-8 max-md:size-11" onClick={() => writer.takeOff(planned.shot.id, look.look.id)}>
+                <IconButton
+                  label={`Take out ${look.look.name}`}
+                  className="size-8 max-md:size-11"
+                  onClick={() => writer.takeOff(planned.shot.id, look.look.id)}
+                >
                   <X size={15} aria-hidden />
                 </IconButton>
               )}
@@ -46,7 +53,13 @@ export function ShotLooks({ planned, plan, writer }: ShotLooksProps) {
           <Field label="Looks">
             <Select
               value=""
-              options={[{ value: '', label: planned.looks.length === 0 ? 'Choose a look' : 'Add another look' }, ...others.map((look) => ({ value: String(look.look.id), label: `${look.look.name} · ${wearer(look)}` }))]}
+              options={[
+                { value: '', label: planned.looks.length === 0 ? 'Choose a look' : 'Add another look' },
+                ...others.map((look) => ({
+                  value: String(look.look.id),
+                  label: `${look.look.name} · ${wearer(look)}`,
+                })),
+              ]}
               onChange={(id) => id !== '' && writer.wear(planned.shot.id, id)}
             />
           </Field>

@@ -54,7 +54,10 @@ export function ShotPanel({ planned, plan, shown, lists, writer, onClose, onOpen
       label: day ? `Move to ${dayName(day, dayIndex)}` : 'Take off the day',
       onSelect: () => {
         writer.placeAtEnd(target, shot.id)
-        toast.say(`“${shot.title}” ${day ? `is now the last shot of ${dayName(day, dayIndex)}` : 'is not placed any more'}.`, { label: 'Undo', onPress: () => writer.patchShot(shot.id, { place: shot.place }) })
+        toast.say(
+          `“${shot.title}” ${day ? `is now the last shot of ${dayName(day, dayIndex)}` : 'is not placed any more'}.`,
+          { label: 'Undo', onPress: () => writer.patchShot(shot.id, { place: shot.place }) },
+        )
       },
     }
   }
@@ -97,16 +100,31 @@ export function ShotPanel({ planned, plan, shown, lists, writer, onClose, onOpen
           ))}
         </Caution>
       )}
-      <TextLine required label="Title" value={shot.title} maxLength={120} readOnly={!mayBoard} onChange={(title) => writer.patchShot(shot.id, { title })} />
+      <TextLine
+        required
+        label="Title"
+        value={shot.title}
+        maxLength={120}
+        readOnly={!mayBoard}
+        onChange={(title) => writer.patchShot(shot.id, { title })}
+      />
       <Field label="Needed">
-        <Select disabled={!mayBoard} value={shot.need} options={NEEDS.map((need) => ({ value: need, label: NEED_WORDS[need] }))} onChange={(need) => writer.patchShot(shot.id, { need })} />
+        <Select
+          disabled={!mayBoard}
+          value={shot.need}
+          options={NEEDS.map((need) => ({ value: need, label: NEED_WORDS[need] }))}
+          onChange={(need) => writer.patchShot(shot.id, { need })}
+        />
       </Field>
       <div className="grid grid-cols-2 gap-3">
         <Field label="Set" error={planned.set === null ? 'No set yet.' : undefined}>
           <Select
             disabled={!mayPlan}
             value={planned.set?.id ?? ''}
-            options={[{ value: '', label: 'None yet' }, ...[...plan.sets.values()].map((set) => ({ value: String(set.id), label: set.name }))]}
+            options={[
+              { value: '', label: 'None yet' },
+              ...[...plan.sets.values()].map((set) => ({ value: String(set.id), label: set.name })),
+            ]}
             onChange={(id) => writer.patchPlan(shot.id, { setId: plan.sets.get(id)?.id ?? null })}
           />
         </Field>
@@ -114,7 +132,10 @@ export function ShotPanel({ planned, plan, shown, lists, writer, onClose, onOpen
           <Select
             disabled={!mayPlan}
             value={planned.setup?.setup.id ?? ''}
-            options={[{ value: '', label: 'None yet' }, ...[...plan.setups.values()].map(({ setup }) => ({ value: String(setup.id), label: setup.name }))]}
+            options={[
+              { value: '', label: 'None yet' },
+              ...[...plan.setups.values()].map(({ setup }) => ({ value: String(setup.id), label: setup.name })),
+            ]}
             onChange={(id) => writer.patchPlan(shot.id, { setupId: plan.setups.get(id)?.setup.id ?? null })}
           />
         </Field>
@@ -123,7 +144,10 @@ export function ShotPanel({ planned, plan, shown, lists, writer, onClose, onOpen
         <button type="button" onClick={onSets} className="underline underline-offset-2 hover:text-ink max-md:min-h-11">
           {plan.sets.size === 0 ? 'Add the first set' : 'All sets and rooms'}
         </button>
-        <Link to={planned.setup ? `/shoots/${shoot.id}/lighting/${planned.setup.setup.id}` : `/shoots/${shoot.id}/lighting`} className="underline underline-offset-2 hover:text-ink max-md:min-h-11 max-md:content-center">
+        <Link
+          to={planned.setup ? `/shoots/${shoot.id}/lighting/${planned.setup.setup.id}` : `/shoots/${shoot.id}/lighting`}
+          className="underline underline-offset-2 hover:text-ink max-md:min-h-11 max-md:content-center"
+        >
           {planned.setup ? 'Open this setup' : 'Setups are made under Lighting'}
         </Link>
       </p>
@@ -133,21 +157,67 @@ export function ShotPanel({ planned, plan, shown, lists, writer, onClose, onOpen
       <PanelSection title="The picture">
         <div className="grid grid-cols-2 gap-3">
           <Field label="Minutes">
-            <NumberInput value={own.minutes} unit="min" min={1} max={480} step={5} readOnly={!mayPlan} onChange={(minutes) => writer.patchPlan(shot.id, { minutes })} />
+            <NumberInput
+              value={own.minutes}
+              unit="min"
+              min={1}
+              max={480}
+              step={5}
+              readOnly={!mayPlan}
+              onChange={(minutes) => writer.patchPlan(shot.id, { minutes })}
+            />
           </Field>
           <Field label="Frames" hint="Counted for cards and batteries.">
-            <NumberInput value={own.frames} min={1} max={9999} step={10} decimals={0} readOnly={!mayPlan} onChange={(frames) => writer.patchPlan(shot.id, { frames: Math.round(frames) })} />
+            <NumberInput
+              value={own.frames}
+              min={1}
+              max={9999}
+              step={10}
+              decimals={0}
+              readOnly={!mayPlan}
+              onChange={(frames) => writer.patchPlan(shot.id, { frames: Math.round(frames) })}
+            />
           </Field>
-          <TextLine label="Lens" value={own.lens} maxLength={80} placeholder="85 mm" readOnly={!mayPlan} onChange={(lens) => writer.patchPlan(shot.id, { lens })} />
+          <TextLine
+            label="Lens"
+            value={own.lens}
+            maxLength={80}
+            placeholder="85 mm"
+            readOnly={!mayPlan}
+            onChange={(lens) => writer.patchPlan(shot.id, { lens })}
+          />
           <Field label="Orientation">
-            <Select disabled={!mayPlan} value={own.orientation} options={ORIENTATIONS.map((value) => ({ value, label: ORIENTATION_WORDS[value] }))} onChange={(orientation) => writer.patchPlan(shot.id, { orientation })} />
+            <Select
+              disabled={!mayPlan}
+              value={own.orientation}
+              options={ORIENTATIONS.map((value) => ({ value, label: ORIENTATION_WORDS[value] }))}
+              onChange={(orientation) => writer.patchPlan(shot.id, { orientation })}
+            />
           </Field>
         </div>
-        <CoverChoice planned={planned} mayWrite={mayBoard} onChange={(coverFrameId) => writer.patchShot(shot.id, { coverFrameId })} />
-        <TextLine prose label="Note" value={shot.note} maxLength={2000} readOnly={!mayBoard} onChange={(note) => writer.patchShot(shot.id, { note })} />
+        <CoverChoice
+          planned={planned}
+          mayWrite={mayBoard}
+          onChange={(coverFrameId) => writer.patchShot(shot.id, { coverFrameId })}
+        />
+        <TextLine
+          prose
+          label="Note"
+          value={shot.note}
+          maxLength={2000}
+          readOnly={!mayBoard}
+          onChange={(note) => writer.patchShot(shot.id, { note })}
+        />
       </PanelSection>
       <PanelSection title="Rules of this shot">
-        <ShotRules planned={planned} plan={plan} writer={writer} broken={shown.day.broken} index={index} startMin={scheduled?.startMin ?? shown.day.lightsOnMin} />
+        <ShotRules
+          planned={planned}
+          plan={plan}
+          writer={writer}
+          broken={shown.day.broken}
+          index={index}
+          startMin={scheduled?.startMin ?? shown.day.lightsOnMin}
+        />
       </PanelSection>
     </Panel>
   )

@@ -30,13 +30,20 @@ export function ShotRules({ planned, plan, writer, broken, index, startMin }: Sh
             const breach = broken.find(({ key }) => key === `rule:${id}`)
             const sentence = ruleSentence(rule, plan, shotId)
             return (
-              <li key={id} className="flex items-start gap-2 border-t border-hair-soft py-1.5 text-base first:border-t-0 first:pt-0">
+              <li
+                key={id}
+                className="flex items-start gap-2 border-t border-hair-soft py-1.5 text-base first:border-t-0 first:pt-0"
+              >
                 <span className="min-w-0 flex-1">
                   {sentence}
                   {breach && <span className="block text-xs font-semibold text-glow-ink">{breach.words}</span>}
                 </span>
                 {writer.mayPlan && (
-                  <IconButton label={`Remove the rule: ${sentence}`} className="-my-1.5 size-8 max-md:size-11" onClick={() => writer.removeRule(id)}>
+                  <IconButton
+                    label={`Remove the rule: ${sentence}`}
+                    className="-my-1.5 size-8 max-md:size-11"
+                    onClick={() => writer.removeRule(id)}
+                  >
                     <X size={15} aria-hidden />
                   </IconButton>
                 )}

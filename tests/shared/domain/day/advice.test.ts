@@ -9,7 +9,11 @@ import { plainDay, shotId } from '#tests/support/plain-day.ts'
 function advise(needs: readonly Need[], hardOutMin: number, isUnderWay = false) {
   const problem = plainDay(needs, hardOutMin)
   const rest = needs.map((_, index) => shotId(index + 1))
-  const projected = project(schedule(problem, rest).shots, { nowMin: 540, freeFromMin: 540, startedMin: isUnderWay ? 560 : null })
+  const projected = project(schedule(problem, rest).shots, {
+    nowMin: 540,
+    freeFromMin: 540,
+    startedMin: isUnderWay ? 560 : null,
+  })
   return adviceFor(problem, { got: [], rest, isUnderWay, projected })
 }
 

@@ -4,7 +4,17 @@ import type { Changeover } from '#shared/domain/order/schedule-types.ts'
 import { lookIdSchema, setIdSchema, sitterIdSchema } from '#shared/ids.ts'
 
 const id = '00000000-0000-4000-8000-000000000001'
-const nothing: Changeover = { fromShotId: null, minutes: 0, lighting: [], lightingMin: 0, changesLight: false, setMove: null, wardrobe: [], wardrobeWaitMin: 0, holdWaitMin: 0 }
+const nothing: Changeover = {
+  fromShotId: null,
+  minutes: 0,
+  lighting: [],
+  lightingMin: 0,
+  changesLight: false,
+  setMove: null,
+  wardrobe: [],
+  wardrobeWaitMin: 0,
+  holdWaitMin: 0,
+}
 const full: Changeover = {
   ...nothing,
   minutes: 26,
@@ -14,8 +24,30 @@ const full: Changeover = {
     { key: 'a:move', kind: 'move', group: 'A', what: 'Main to camera left, 1.6 m', detail: '0.4 m closer', minutes: 2 },
     { key: 'p:strike', kind: 'panel', group: null, what: 'White panel: strike', detail: '', minutes: 2 },
   ],
-  setMove: { fromSetId: setIdSchema.parse(id), fromSetName: 'Clock wall', toSetId: setIdSchema.parse(id), toSetName: 'Under the dome', fromRoomName: 'Long gallery', toRoomName: 'Dome', otherRoom: true, moveMin: 12, strikeMin: 4, dressMin: 8 },
-  wardrobe: [{ sitterId: sitterIdSchema.parse(id), sitterName: 'The Astronomer', lookId: lookIdSchema.parse(id), lookName: 'Night coat', chairMin: 20, changeMin: 9, first: true, onClockMin: 0 }],
+  setMove: {
+    fromSetId: setIdSchema.parse(id),
+    fromSetName: 'Clock wall',
+    toSetId: setIdSchema.parse(id),
+    toSetName: 'Under the dome',
+    fromRoomName: 'Long gallery',
+    toRoomName: 'Dome',
+    otherRoom: true,
+    moveMin: 12,
+    strikeMin: 4,
+    dressMin: 8,
+  },
+  wardrobe: [
+    {
+      sitterId: sitterIdSchema.parse(id),
+      sitterName: 'The Astronomer',
+      lookId: lookIdSchema.parse(id),
+      lookName: 'Night coat',
+      chairMin: 20,
+      changeMin: 9,
+      first: true,
+      onClockMin: 0,
+    },
+  ],
 }
 
 describe('cardRows', () => {

@@ -6,7 +6,9 @@ import { plainDay, shotId } from '#tests/support/plain-day.ts'
 const SEQUENCE = [1, 2, 3, 4].map(shotId)
 
 /** What happened, by shot number: state, at which minute, and when it began. */
-function happened(...events: [number: number, state: ShotState, atMin: number, startedMin?: number][]): Map<string, DayShot> {
+function happened(
+  ...events: [number: number, state: ShotState, atMin: number, startedMin?: number][]
+): Map<string, DayShot> {
   return new Map(
     events.map(([number, state, atMin, startedMin]) => [
       shotId(number),

@@ -17,13 +17,19 @@ describe('project', () => {
   })
 
   it('takes trimmed minutes', () => {
-    expect(project(shots, { nowMin: 540, freeFromMin: 540, startedMin: null }, new Map([[shotId(2), 12]])).wrapMin).toBe(612)
+    expect(
+      project(shots, { nowMin: 540, freeFromMin: 540, startedMin: null }, new Map([[shotId(2), 12]])).wrapMin,
+    ).toBe(612)
   })
 
   it('never starts a later shot before its window', () => {
     const [first, second] = shots
     if (!first || !second) throw new Error('two shots')
-    const { starts } = project([first, { ...second, notBeforeMin: 660 }], { nowMin: 540, freeFromMin: 540, startedMin: null })
+    const { starts } = project([first, { ...second, notBeforeMin: 660 }], {
+      nowMin: 540,
+      freeFromMin: 540,
+      startedMin: null,
+    })
     expect(starts.get(shotId(2))).toBe(660)
   })
 })

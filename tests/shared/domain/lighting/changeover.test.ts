@@ -207,18 +207,16 @@ describe('lightingMinutes', () => {
     power: fc.constantFrom(1, 0.5, 0.25),
     mains: fc.boolean(),
   })
-  const anySetup = fc
-    .array(anyLight, { maxLength: 5 })
-    .map((rows) =>
-      rows.map(({ mains, ...row }, n) =>
-        light(n + 1, {
-          purpose: 'main',
-          aim: FACE,
-          unit: unit(mains ? MAINS_KIT : undefined, { remotePower: !mains }),
-          ...row,
-        }),
-      ),
-    )
+  const anySetup = fc.array(anyLight, { maxLength: 5 }).map((rows) =>
+    rows.map(({ mains, ...row }, n) =>
+      light(n + 1, {
+        purpose: 'main',
+        aim: FACE,
+        unit: unit(mains ? MAINS_KIT : undefined, { remotePower: !mains }),
+        ...row,
+      }),
+    ),
+  )
 
   it('is never longer with more hands than with one', () => {
     fc.assert(

@@ -9,7 +9,10 @@ describe('segmentsOf', () => {
     fc.assert(
       fc.property(fc.infiniteStream(fc.double({ min: 0, max: 1, maxExcluded: true, noNaN: true })), (stream) => {
         const problem = randomDay(() => stream.next().value ?? 0, { shots: 6 })
-        const day = schedule(problem, problem.shots.map(({ id }) => id))
+        const day = schedule(
+          problem,
+          problem.shots.map(({ id }) => id),
+        )
         const segments = segmentsOf(day)
         let at = day.lightsOnMin
         for (const segment of segments) {

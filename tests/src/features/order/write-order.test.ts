@@ -44,7 +44,10 @@ describe('writeSequence', () => {
     fc.assert(
       fc.property(fc.shuffledSubarray([1, 2, 3, 4, 5, 6, 7], { minLength: 7 }), (order) => {
         const doc = withShots(7)
-        const undo = new Y.UndoManager(doc.getMap('shots'), { trackedOrigins: new Set([LOCAL_ORIGIN]), captureTimeout: 0 })
+        const undo = new Y.UndoManager(doc.getMap('shots'), {
+          trackedOrigins: new Set([LOCAL_ORIGIN]),
+          captureTimeout: 0,
+        })
         writeSequence(doc, DAY, listOf(doc), order.map(idOf))
         expect(numbers(doc)).toEqual(order)
         undo.undo()
@@ -82,8 +85,20 @@ describe('copyShot', () => {
     const plan = new Y.Doc()
     const first = listOf(board)[0]
     if (!first) throw new Error('no shot')
-    const none: { number: null; set: null; room: null; setup: null; looks: []; cover: null; missing: [] } = { number: null, set: null, room: null, setup: null, looks: [], cover: null, missing: [] }
-    const id: ShotId = copyShot({ board, plan }, listOf(board), { ...none, shot: first, plan: shotPlanSchema.parse({ id: first.id, minutes: 35 }) })
+    const none: { number: null; set: null; room: null; setup: null; looks: []; cover: null; missing: [] } = {
+      number: null,
+      set: null,
+      room: null,
+      setup: null,
+      looks: [],
+      cover: null,
+      missing: [],
+    }
+    const id: ShotId = copyShot({ board, plan }, listOf(board), {
+      ...none,
+      shot: first,
+      plan: shotPlanSchema.parse({ id: first.id, minutes: 35 }),
+    })
     expect(listOf(board).map((shot) => shot.title)).toEqual(['Shot 1', 'Shot 1, second', 'Shot 2', 'Shot 3'])
     expect(readAll(plan, shotPlans).items.get(id)?.minutes).toBe(35)
   })

@@ -28,5 +28,13 @@ export function CommitTextarea({ value, onCommit, ...rest }: CommitProps) {
   const draft = useDraft(value, (text) => {
     if (text !== value) onCommit(text)
   })
-  return <Textarea {...rest} rows={2} value={draft.value} onChange={(event) => draft.change(event.target.value)} onBlur={draft.leave} />
+  return (
+    <Textarea
+      {...rest}
+      rows={2}
+      value={draft.value}
+      onChange={(event) => draft.change(event.target.value)}
+      onBlur={draft.leave}
+    />
+  )
 }

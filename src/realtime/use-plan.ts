@@ -1,4 +1,5 @@
-import { useMemo } from 'react'
+import { useMemo, useSyncExternalStore } from 'react'
+import type { ShootView } from '#shared/api/shoots.ts'
 import { type Plan, readPlan } from '#shared/domain/plan/read-plan.ts'
 import {
   days,
@@ -16,41 +17,79 @@ import {
   sitterPlaces,
   sitters,
 } from '#shared/realtime/documents.ts'
-import { useShoot } from './shoot-realtime.tsx'
-import { useItems } from './use-items.ts'
+import { itemStore } from './item-store.ts'
+import { type ShootDocuments, useShootContext } from './shoot-realtime.tsx'
 
-/** The shoot's read model, worked out again when one of its documents or the brief changes. */
+type PlanStore = {
+  subscribe(listener: () => void): () => void
+  get(shoot: ShootView): Plan
+}
+
+/** The read model of one open shoot: worked out once per change, however many screens look at it. */
+function planStore({ board, plan, looks: wardrobe, lighting }: ShootDocuments): PlanStore {
+  const stores = {
+    frames: itemStore(board.doc, frames),
+    shots: itemStore(board.doc, shots),
+    days: itemStore(plan.doc, days),
+    sets: itemStore(plan.doc, sets),
+    moves: itemStore(plan.doc, moves),
+    shotPlans: itemStore(plan.doc, shotPlans),
+    rules: itemStore(plan.doc, rules),
+    sitters: itemStore(wardrobe.doc, sitters),
+    looks: itemStore(wardrobe.doc, looks),
+    pieces: itemStore(wardrobe.doc, pieces),
+    setups: itemStore(lighting.doc, setups),
+    lights: itemStore(lighting.doc, lights),
+    sitterPlaces: itemStore(lighting.doc, sitterPlaces),
+    props: itemStore(lighting.doc, props),
+  }
+  const all = Object.values(stores)
+  let from: readonly unknown[] = []
+  let last: Plan | null = null
+  return {
+    subscribe(listener) {
+      const stops = all.map((store) => store.subscribe(listener))
+      return () => {
+        for (const stop of stops) stop()
+      }
+    },
+    get({ brief, minutes }) {
+      const now: readonly unknown[] = [brief, minutes, ...all.map((store) => store.get())]
+      if (last && now.every((value, index) => value === from[index])) return last
+      from = now
+      last = readPlan({
+        brief,
+        minutes,
+        board: { frames: stores.frames.get(), shots: stores.shots.get() },
+        plan: {
+          days: stores.days.get(),
+          sets: stores.sets.get(),
+          moves: stores.moves.get(),
+          shotPlans: stores.shotPlans.get(),
+          rules: stores.rules.get(),
+        },
+        looks: { sitters: stores.sitters.get(), looks: stores.looks.get(), pieces: stores.pieces.get() },
+        lighting: {
+          setups: stores.setups.get(),
+          lights: stores.lights.get(),
+          sitterPlaces: stores.sitterPlaces.get(),
+          props: stores.props.get(),
+        },
+      })
+      return last
+    },
+  }
+}
+
+const planStores = new WeakMap<ShootDocuments, PlanStore>()
+
+/** The shoot's read model, renewed when one of its documents or the brief changes. */
 export function usePlan(): Plan {
-  const { brief, minutes } = useShoot()
-  const board = { frames: useItems('board', frames), shots: useItems('board', shots) }
-  const plan = {
-    days: useItems('plan', days),
-    sets: useItems('plan', sets),
-    moves: useItems('plan', moves),
-    shotPlans: useItems('plan', shotPlans),
-    rules: useItems('plan', rules),
-  }
-  const wardrobe = {
-    sitters: useItems('looks', sitters),
-    looks: useItems('looks', looks),
-    pieces: useItems('looks', pieces),
-  }
-  const lighting = {
-    setups: useItems('lighting', setups),
-    lights: useItems('lighting', lights),
-    sitterPlaces: useItems('lighting', sitterPlaces),
-    props: useItems('lighting', props),
-  }
-  return useMemo(
-    () => readPlan({ brief, minutes, board, plan, looks: wardrobe, lighting }),
-    // eslint-disable-next-line react-hooks/exhaustive-deps -- the maps change identity when their content does; the objects around them are new at every render
-    [
-      brief,
-      minutes,
-      ...Object.values(board),
-      ...Object.values(plan),
-      ...Object.values(wardrobe),
-      ...Object.values(lighting),
-    ],
-  )
+  const { documents, shoot } = useShootContext()
+  const store = useMemo(() => {
+    const known = planStores.get(documents) ?? planStore(documents)
+    planStores.set(documents, known)
+    return known
+  }, [documents])
+  return useSyncExternalStore(store.subscribe, () => store.get(shoot))
 }

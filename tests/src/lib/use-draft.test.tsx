@@ -13,7 +13,9 @@ describe('useDraft', () => {
     const { result } = renderHook(() => useDraft('', (text) => taken.push(text)))
     act(() => result.current.change('felt'))
     expect([result.current.value, typingStore.isTyping(), taken]).toEqual(['felt', true, []])
-    act(() => vi.advanceTimersByTime(600))
+    act(() => {
+      vi.advanceTimersByTime(600)
+    })
     expect([typingStore.isTyping(), taken]).toEqual([false, ['felt']])
   })
 
@@ -32,7 +34,9 @@ describe('useDraft', () => {
     const taken: string[] = []
     const { result } = renderHook(() => useDraft('', (text) => taken.push(text)))
     act(() => result.current.change('last words'))
-    act(() => window.dispatchEvent(new Event('pagehide')))
+    act(() => {
+      window.dispatchEvent(new Event('pagehide'))
+    })
     expect(taken).toEqual(['last words'])
   })
 
@@ -41,7 +45,9 @@ describe('useDraft', () => {
     const { result } = renderHook(() => useDraft('kept', (text) => taken.push(text)))
     act(() => result.current.change('no'))
     act(() => result.current.drop())
-    act(() => vi.advanceTimersByTime(600))
+    act(() => {
+      vi.advanceTimersByTime(600)
+    })
     expect([result.current.value, typingStore.isTyping(), taken]).toEqual(['kept', false, []])
   })
 })

@@ -1,13 +1,28 @@
 import { mkdirSync } from 'node:fs'
 import { join } from 'node:path'
+import sharp from 'sharp'
 import AxeBuilder from '@axe-core/playwright'
 import { type Page, expect, test } from '@playwright/test'
 import type { Role } from '#shared/access/roles.ts'
 import { DESK, PHONE, openDemoShoot, signInDemo, visit } from '#tests/e2e/support/people.ts'
 
-/** With SCONCE_SCREENS=1 the pictures of the README are taken anew. */
-const TAKE = process.env['SCONCE_SCREENS'] === '1'
-const FOLDER = join(import.meta.dirname, 'screens')
+/** With SCONCE_SCREENS=1 the pictures of the README are taken anew, with another value all of them, into that folder. */
+const TAKE = process.env['SCONCE_SCREENS']
+const FOLDER = TAKE === '1' ? join(import.meta.dirname, 'screens') : TAKE
+const IN_README = [
+  'shoots-desk',
+  'board-desk',
+  'board-phone',
+  'looks-desk',
+  'setup-desk',
+  'order-desk',
+  'order-phone',
+  'sign-off-desk',
+  'sign-off-phone',
+  'day-phone',
+  'brief-desk',
+  'kit-room-desk',
+]
 
 type Screen = { name: string; path: string; see: RegExp; role: Role }
 
@@ -47,9 +62,10 @@ async function inspect(page: Page, name: string): Promise<void> {
 }
 
 async function take(page: Page, name: string, size: string): Promise<void> {
-  if (!TAKE) return
+  if (FOLDER === undefined || (TAKE === '1' && !IN_README.includes(`${name}-${size}`))) return
   mkdirSync(FOLDER, { recursive: true })
-  await page.screenshot({ path: join(FOLDER, `${name}-${size}.png`) })
+  const picture = sharp(await page.screenshot())
+  await picture.webp({ quality: 84 }).toFile(join(FOLDER, `${name}-${size}.webp`))
 }
 
 for (const [size, viewport] of [
@@ -69,7 +85,7 @@ for (const [size, viewport] of [
         let setup = ''
         if (role === 'photographer') {
           await page.goto(`${shoot}/lighting`)
-          const link = page.getByRole('link', { name: /Octa left, panel right/ }).first()
+          const link = page.getByRole('link', { name: /Octa left, soft fill/ }).first()
           setup = (await link.getAttribute('href'))?.split('/').at(-1) ?? ''
         }
         for (const screen of SCREENS.filter((one) => one.role === role)) {

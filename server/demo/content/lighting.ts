@@ -22,6 +22,7 @@ type LightRow = {
 
 /** Exact f-numbers, N = 2^(Av/2): f/5.6 and f/8 are labels of Av 5 and 6. */
 const F5_6 = 2 ** 2.5
+const F6_3 = 2 ** (8 / 3)
 const F8 = 8
 
 /** Four setups for two rooms. Lights copy the numbers of the studio's own kit. @throws when the kit lacks one of the names. */
@@ -78,9 +79,9 @@ export function demoLighting(id: NamedIds, kit: readonly KitItem[], random: () =
 
   setup(
     'setup-octa',
-    'Octa left, panel right',
+    'Octa left, soft fill',
     'a0',
-    { at: [0, 1.35, 3.4], focalMm: 85, fNumber: F5_6 },
+    { at: [0, 1.35, 3.4], focalMm: 85, fNumber: F6_3 },
     { zM: -2.6, widthM: 6, heightM: 2.9, colour: '#8a6f56', what: 'Clock wall, ochre lime plaster' },
     [
       {
@@ -103,8 +104,19 @@ export function demoLighting(id: NamedIds, kit: readonly KitItem[], random: () =
         at: [2.0, 1.9, -1.1],
         aim: [0, 1.4, 0],
       },
+      {
+        purpose: 'fill',
+        group: 'C',
+        unit: 'Small flash, guide number 58',
+        modifier: 'Shoot-through umbrella 100 cm',
+        support: '2.4 m stand',
+        power: 1 / 4,
+        at: [0.7, 1.8, 3.2],
+        aim: [0, 1.35, 0],
+        zoomMm: 35,
+      },
     ],
-    'Soft and even enough to turn the head; the panel lifts the far cheek.',
+    'Soft and even enough to turn the head; umbrella by the lens and panel lift the far cheek.',
   )
   setup(
     'setup-close',
@@ -204,7 +216,7 @@ export function demoLighting(id: NamedIds, kit: readonly KitItem[], random: () =
         unit: 'Battery head 200 Ws',
         modifier: 'Strip 30 × 120 cm',
         support: '3.3 m stand',
-        power: 1 / 2,
+        power: 1 / 4,
         at: [3.3, 2, -1.2],
         aim: [0, 1.3, 0],
       },

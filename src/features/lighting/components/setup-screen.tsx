@@ -1,4 +1,4 @@
-import { type KeyboardEvent, useMemo, useState } from 'react'
+import { useMemo, useState } from 'react'
 import { Link } from 'react-router-dom'
 import { cautionsOf } from '#shared/domain/lighting/cautions.ts'
 import { frameSidesMm } from '#shared/domain/lighting/frame.ts'
@@ -9,6 +9,7 @@ import { sitters as sittersOf } from '#shared/realtime/documents.ts'
 import { useMayWrite, useShoot } from '#src/realtime/shoot-realtime.tsx'
 import { useItems } from '#src/realtime/use-items.ts'
 import { usePlan } from '#src/realtime/use-plan.ts'
+import { useUndoKeys } from '#src/realtime/use-undo-keys.ts'
 import { Button, buttonClass } from '#src/ui/button.tsx'
 import { Empty } from '#src/ui/empty.tsx'
 import { ScreenBar } from '#src/ui/screen-bar.tsx'
@@ -86,14 +87,9 @@ function Setup({ plan, whole }: { plan: Plan; whole: WholeSetup }) {
     [shown, use, reading],
   )
   const orientation = widestOf(use.orientations)
+  useUndoKeys(writer.undo)
   const drawing = { whole: shown, written: whole, chosenKey, moving, mayWrite, peers: peers.holds, nameOf }
 
-  function handleKeyDown(event: KeyboardEvent) {
-    if (!(event.ctrlKey || event.metaKey) || event.key.toLowerCase() !== 'z' || isTyping(event.target)) return
-    event.preventDefault()
-    if (event.shiftKey) writer.undo.redo()
-    else writer.undo.undo()
-  }
   function open(key: string) {
     setChosen(key)
     if (isPhone) setIsSheetOpen(true)
@@ -140,7 +136,7 @@ function Setup({ plan, whole }: { plan: Plan; whole: WholeSetup }) {
     : []
 
   return (
-    <div className="flex min-h-full flex-col md:h-full" onKeyDown={handleKeyDown}>
+    <div className="flex min-h-full flex-col md:h-full">
       <ScreenBar
         title={whole.setup.name}
         sub={mayWrite ? use.words : `${use.words} · to read only`}
@@ -190,11 +186,5 @@ function Setup({ plan, whole }: { plan: Plan; whole: WholeSetup }) {
         {moving.said}
       </p>
     </div>
-  )
-}
-
-function isTyping(target: EventTarget): boolean {
-  return (
-    target instanceof HTMLInputElement || target instanceof HTMLTextAreaElement || target instanceof HTMLSelectElement
   )
 }

@@ -15,7 +15,7 @@ import { copyLook, putBack } from '../write-looks.ts'
 import { LookPictures } from './look-pictures.tsx'
 import { LookPieces } from './look-pieces.tsx'
 import { MoreMenu } from './more-menu.tsx'
-import { Panel, PanelSection } from './panel.tsx'
+import { Panel, PanelSection } from '#src/ui/panel.tsx'
 import { TextLine } from '#src/ui/text-line.tsx'
 
 export type LookPanelProps = {
@@ -61,6 +61,7 @@ export function LookPanel({
 
   return (
     <Panel
+      className="sticky top-0 h-dvh w-[23rem]"
       title={look.name}
       onClose={onClose}
       aside={

@@ -1,5 +1,5 @@
 import { useQuery } from '@tanstack/react-query'
-import { useEffect, useState } from 'react'
+import { useState } from 'react'
 import { canInShoot } from '#shared/access/roles.ts'
 import type { SignOffState } from '#shared/domain/sign-off/state.ts'
 import { pieces as pieceItems, sitters as sitterItems } from '#shared/realtime/documents.ts'
@@ -7,6 +7,7 @@ import { useMayWrite, useRole, useShoot } from '#src/realtime/shoot-realtime.tsx
 import { useItems } from '#src/realtime/use-items.ts'
 import { usePlan } from '#src/realtime/use-plan.ts'
 import { useUndo } from '#src/realtime/use-undo.ts'
+import { useUndoKeys } from '#src/realtime/use-undo-keys.ts'
 import { Button } from '#src/ui/button.tsx'
 import { Empty } from '#src/ui/empty.tsx'
 import { type ScreenAction, ScreenBar } from '#src/ui/screen-bar.tsx'
@@ -45,7 +46,7 @@ export function LooksScreen({ signOffs }: LooksScreenProps) {
   const sizes = useQuery({ ...lookQueries.sizes(shoot.id), enabled: canInShoot(role, 'sizes.read') })
   const [chosen, setChosen] = useState<Chosen | null>(null)
   const [opened, setOpened] = useState<Opened>(null)
-  useUndoKeys()
+  useUndoKeys(useUndo(['looks']))
 
   const [openedAtMs] = useState(Date.now)
   const today = civilDateIn(shoot.brief.zone, openedAtMs)
@@ -204,22 +205,4 @@ export function LooksScreen({ signOffs }: LooksScreenProps) {
       }
     }
   }
-}
-
-/** Ctrl or ⌘ with Z takes back one's own last change of the wardrobe; with Shift it does it again. */
-function useUndoKeys() {
-  const { undo, redo } = useUndo(['looks'])
-  useEffect(() => {
-    const handleKey = (event: KeyboardEvent) => {
-      const isTyping =
-        event.target instanceof HTMLElement &&
-        event.target.closest('input, textarea, select, [contenteditable]') !== null
-      if (isTyping || !(event.ctrlKey || event.metaKey) || event.key.toLowerCase() !== 'z') return
-      event.preventDefault()
-      if (event.shiftKey) redo()
-      else undo()
-    }
-    window.addEventListener('keydown', handleKey)
-    return () => window.removeEventListener('keydown', handleKey)
-  }, [undo, redo])
 }

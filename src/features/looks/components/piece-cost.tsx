@@ -5,7 +5,7 @@ import { NumberInput } from '#src/ui/number-input.tsx'
 import { Select } from '#src/ui/select.tsx'
 import { useSavePieceCost } from '../mutations.ts'
 import { currencyDigits } from '../words.ts'
-import { PanelSection } from './panel.tsx'
+import { PanelSection } from '#src/ui/panel.tsx'
 import { TextLine } from '#src/ui/text-line.tsx'
 
 const CURRENCIES = ['GBP', 'EUR', 'USD', 'CHF', 'SEK', 'NOK', 'DKK', 'CAD', 'AUD', 'JPY'] as const

@@ -15,7 +15,7 @@ import { mergeWarning } from '../words.ts'
 import { copyPiece, putBack } from '../write-looks.ts'
 import { ColourField } from './colour-field.tsx'
 import { MoreMenu } from './more-menu.tsx'
-import { Panel, PanelSection } from './panel.tsx'
+import { Panel, PanelSection } from '#src/ui/panel.tsx'
 import { PieceCost } from './piece-cost.tsx'
 import { TextLine } from '#src/ui/text-line.tsx'
 
@@ -56,6 +56,7 @@ export function PiecePanel({ piece, plan, costs, mayWrite, onClose, onOpen }: Pi
 
   return (
     <Panel
+      className="sticky top-0 h-dvh w-[23rem]"
       title={piece.name}
       onClose={onClose}
       aside={

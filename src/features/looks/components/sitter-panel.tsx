@@ -16,7 +16,7 @@ import { useSaveSizes } from '../mutations.ts'
 import { clockOf, minutesOf, sitterLine, sitterTitle } from '../words.ts'
 import { copySitter, putBack } from '../write-looks.ts'
 import { MoreMenu } from './more-menu.tsx'
-import { Panel, PanelSection } from './panel.tsx'
+import { Panel, PanelSection } from '#src/ui/panel.tsx'
 import { TextLine } from '#src/ui/text-line.tsx'
 
 export type SitterPanelProps = {
@@ -55,6 +55,7 @@ export function SitterPanel({ sitter, theirLooks, sizes, mayWrite, onClose, onOp
 
   return (
     <Panel
+      className="sticky top-0 h-dvh w-[23rem]"
       title={sitterTitle(sitter)}
       onClose={onClose}
       aside={

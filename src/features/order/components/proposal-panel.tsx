@@ -15,7 +15,7 @@ import { Caution } from '#src/ui/caution.tsx'
 import { Waiting } from '#src/ui/waiting.tsx'
 import type { AskedProposal } from '../use-proposal.ts'
 import { keptWords, proposalTitle, provenWords } from '../words.ts'
-import { Panel } from './panel.tsx'
+import { Panel } from '#src/ui/panel.tsx'
 import { ProposalStrip } from './proposal-strip.tsx'
 
 export type ProposalPanelProps = {
@@ -37,7 +37,7 @@ export function ProposalPanel({ asked, problem, onUse, onOpenShot, onOpenDay }: 
   if (!state) return null
   if (state.kind === 'failed') {
     return (
-      <Panel title="No order was found" onClose={asked.close}>
+      <Panel className="w-[26.25rem] max-lg:w-[21rem]" title="No order was found" onClose={asked.close}>
         <p>The search stopped before it could answer. Your order stands as it was.</p>
         <Button onClick={() => asked.ask(problem)}>Propose again</Button>
       </Panel>
@@ -45,7 +45,7 @@ export function ProposalPanel({ asked, problem, onUse, onOpenShot, onOpenDay }: 
   }
   if (state.kind === 'asking') {
     return (
-      <Panel title="Looking for a shorter day" onClose={asked.close}>
+      <Panel className="w-[26.25rem] max-lg:w-[21rem]" title="Looking for a shorter day" onClose={asked.close}>
         <Waiting label="Trying orders" className="!py-8" />
         <Button onClick={asked.stop}>Cancel</Button>
       </Panel>
@@ -113,6 +113,7 @@ function Found({ asked, problem, present, proposal, thinking, isStale, onUse, on
   )
   return (
     <Panel
+      className="w-[26.25rem] max-lg:w-[21rem]"
       title={title}
       onClose={asked.close}
       footer={

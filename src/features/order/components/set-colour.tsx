@@ -1,24 +1,11 @@
-import { useEffect, useRef, useState } from 'react'
 import { Button } from '#src/ui/button.tsx'
+import { ColourInput } from '#src/ui/colour-input.tsx'
 import { Field } from '#src/ui/field.tsx'
-import { Input } from '#src/ui/input.tsx'
 
 export type SetColourProps = { value: string | null; readOnly: boolean; onChange: (colour: string | null) => void }
 
 /** The colour of a set's walls; taken over once the picker is closed, not at every shade on the way. */
 export function SetColour({ value, readOnly, onChange }: SetColourProps) {
-  const [draft, setDraft] = useState<string | null>(null)
-  const input = useRef<HTMLInputElement>(null)
-  useEffect(() => {
-    const element = input.current
-    // React's onChange is the browser's `input`; `change` comes once.
-    const handle = () => {
-      setDraft(null)
-      if (element && element.value !== value) onChange(element.value)
-    }
-    element?.addEventListener('change', handle)
-    return () => element?.removeEventListener('change', handle)
-  }, [value, onChange])
   return (
     <Field
       label="Colour"
@@ -32,14 +19,7 @@ export function SetColour({ value, readOnly, onChange }: SetColourProps) {
         )
       }
     >
-      <Input
-        ref={input}
-        type="color"
-        disabled={readOnly}
-        className="h-[34px] !p-1 max-md:h-11"
-        value={draft ?? value ?? '#8a8a86'}
-        onChange={(event) => setDraft(event.target.value)}
-      />
+      <ColourInput disabled={readOnly} value={value ?? '#8a8a86'} onCommit={onChange} />
     </Field>
   )
 }

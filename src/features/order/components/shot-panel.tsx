@@ -16,7 +16,7 @@ import type { OrderDay } from '../use-order-day.ts'
 import type { List, OrderWriter } from '../use-order-writer.ts'
 import { NEED_WORDS, ORIENTATION_WORDS, dayName } from '../words.ts'
 import { CoverChoice } from './cover-choice.tsx'
-import { Panel, PanelSection } from './panel.tsx'
+import { Panel, PanelSection } from '#src/ui/panel.tsx'
 import { ShotLooks } from './shot-looks.tsx'
 import { ShotRules } from './shot-rules.tsx'
 import { TextLine } from '#src/ui/text-line.tsx'
@@ -70,6 +70,7 @@ export function ShotPanel({ planned, plan, shown, lists, writer, onClose, onOpen
 
   return (
     <Panel
+      className="w-[26.25rem] max-lg:w-[21rem]"
       title={number === null ? shot.title : `${number} · ${shot.title}`}
       onClose={onClose}
       aside={

@@ -1,8 +1,10 @@
 import { useEffect, useRef, useState } from 'react'
-import { Input } from '#src/ui/input.tsx'
+import { Input } from './input.tsx'
+
+export type ColourInputProps = { value: string; onCommit: (colour: string) => void; disabled?: boolean }
 
 /** A colour; taken over once the picker is closed, not at every shade on the way. */
-export function ColourInput({ value, onCommit }: { value: string; onCommit: (colour: string) => void }) {
+export function ColourInput({ value, onCommit, disabled = false }: ColourInputProps) {
   const [draft, setDraft] = useState<string | null>(null)
   const input = useRef<HTMLInputElement>(null)
   useEffect(() => {
@@ -19,6 +21,7 @@ export function ColourInput({ value, onCommit }: { value: string; onCommit: (col
     <Input
       ref={input}
       type="color"
+      disabled={disabled}
       className="h-[34px] !p-1 max-md:h-11"
       value={draft ?? value}
       onChange={(event) => setDraft(event.target.value)}

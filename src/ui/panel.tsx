@@ -1,8 +1,9 @@
 import { X } from 'lucide-react'
 import type { ReactNode } from 'react'
-import { IconButton } from '#src/ui/button.tsx'
-import { Sheet } from '#src/ui/sheet.tsx'
-import { useIsPhone } from '#src/ui/use-media.ts'
+import { cn } from '#src/lib/cn.ts'
+import { IconButton } from './button.tsx'
+import { Sheet } from './sheet.tsx'
+import { useIsPhone } from './use-media.ts'
 
 export type PanelProps = {
   title: string
@@ -11,16 +12,18 @@ export type PanelProps = {
   aside?: ReactNode
   /** Stays in sight at the foot. */
   footer?: ReactNode
+  /** Its width and how it stays in sight beside what scrolls. */
+  className?: string
   children: ReactNode
 }
 
-/** What is chosen or proposed, docked beside the day; on phones a sheet. */
-export function Panel({ title, onClose, aside, footer, children }: PanelProps) {
+/** What is chosen, docked at the side of a screen; on phones a sheet. */
+export function Panel({ title, onClose, aside, footer, className, children }: PanelProps) {
   const isPhone = useIsPhone()
   if (isPhone) {
     return (
       <Sheet open onOpenChange={(open) => !open && onClose()} title={title} footer={footer}>
-        {aside !== undefined && aside !== false && <div className="-mt-1 mb-2 flex justify-end">{aside}</div>}
+        {aside !== undefined && aside !== false && <div className="absolute top-3.5 right-14">{aside}</div>}
         <div className="flex flex-col gap-4">{children}</div>
       </Sheet>
     )
@@ -28,7 +31,7 @@ export function Panel({ title, onClose, aside, footer, children }: PanelProps) {
   return (
     <aside
       aria-label={title}
-      className="flex min-h-0 w-[26.25rem] flex-none flex-col border-l border-hair bg-paper max-lg:w-[21rem]"
+      className={cn('flex min-h-0 flex-none flex-col border-l border-hair bg-paper', className)}
     >
       <header className="flex items-start gap-1 px-[22px] pt-4 pb-1.5">
         <h2 className="min-w-0 flex-1 text-xl">{title}</h2>

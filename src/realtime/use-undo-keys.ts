@@ -1,5 +1,5 @@
 import { useEffect } from 'react'
-import type { Undo } from '#src/realtime/use-undo.ts'
+import type { Undo } from './use-undo.ts'
 
 /** Ctrl or ⌘ with Z takes back one's own last change; with Shift it does it again. */
 export function useUndoKeys({ undo, redo }: Undo): void {

@@ -44,7 +44,13 @@ export async function admit(
   const shootId = shootIdSchema.safeParse(path?.shootId)
   if (!path || !shootId.success || !isKind(path.kind)) return unknown
   const found = await findDocument(outside.db, shootId.data, path.kind, person)
-  return found ? { kind: 'admitted', person, ...found } : unknown
+  if (!found) return unknown
+  // Before a byte of it is read: what a browser kept of an earlier epoch would bring back what was put away.
+  const epoch = new URLSearchParams(request.url?.split('?')[1]).get('epoch')
+  if (epoch !== null && Number(epoch) !== found.epoch) {
+    return { kind: 'close', code: CLOSE.epoch, why: 'the document is of another epoch', person }
+  }
+  return { kind: 'admitted', person, ...found }
 }
 
 async function findDocument(db: Db, shootId: ShootId, kind: DocumentKind, person: Person) {

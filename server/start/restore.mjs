@@ -68,6 +68,7 @@ export async function restore(name, life) {
         say('What is there now is kept in a backup of its own:')
         await writeBackup(bin, present, join(place.dataDir, `before-restore-${stamp}.sconce`))
       }
+      await beginNewEpoch(urlFor(fresh), Object.keys(before.tables).length > 0 ? urlFor(present) : undefined)
       await admin.query('begin')
       await admin.query(`alter database ${present.database} rename to ${REPLACED}`)
       await admin.query(`alter database ${fresh.database} rename to ${present.database}`)
@@ -81,9 +82,28 @@ export async function restore(name, life) {
     }
   })
   say(
-    `Restored ${describeTables(manifest.tables)}, made ${manifest.madeAt}; every table's rows and content match the backup.`,
+    `Restored ${describeTables(manifest.tables)}, made ${manifest.madeAt}; every table's rows and content match the backup. Pages that are open have to be loaded again.`,
   )
   say('Start Sconce again with npm start.')
+}
+
+/**
+ * Puts the documents into an epoch that no browser has a cache of: what was kept on a device of the time after the
+ * backup would otherwise be handed back at the next visit, and undo the restore.
+ *
+ * @param {string} freshUrl
+ * @param {string | undefined} presentUrl none where there is nothing yet
+ */
+async function beginNewEpoch(freshUrl, presentUrl) {
+  const { withConnection } = await import('./sql.mjs')
+  const highest = 'select coalesce(max(epoch), 0)::int as epoch from rt_doc'
+  const inUse =
+    presentUrl === undefined
+      ? 0
+      : await withConnection(presentUrl, async (client) => Number((await client.query(highest)).rows[0].epoch))
+  await withConnection(freshUrl, (client) =>
+    client.query(`update rt_doc set epoch = greatest($1, (${highest})) + 1`, [inUse]),
+  )
 }
 
 /** When the newest migration of this checkout was made, in milliseconds since 1970. */

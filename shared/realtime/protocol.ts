@@ -13,6 +13,7 @@
  * | 102 | hello | to client | varString JSON `Hello`; the first frame of every connection |
  * | 103 | changed | to client | varString JSON: array of query keys to fetch again; on the `board` socket only |
  *
+ * A client says which epoch its cache is of with `?epoch=n`; another one than the document's is closed with 4409.
  * 100–103 are sent only to clients that ask with `?ack=1`. Every well-formed, permitted update is answered by a
  * cumulative 100 after the transaction that stores it has committed with `synchronous_commit = on`. Deletes are
  * covered, which is why the acknowledgement is a count and not a state vector.

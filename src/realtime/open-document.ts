@@ -5,7 +5,7 @@ import { type Collection, rootOf } from '#shared/realtime/collection.ts'
 import { COLLECTIONS, DOCUMENT_SCHEMA, type DocumentKind } from '#shared/realtime/documents.ts'
 import { CLOSE, type Hello, MESSAGE } from '#shared/realtime/protocol.ts'
 import { countAcknowledgements } from './acknowledgements.ts'
-import { openCache, rememberComplete, rememberUnsent, unsentOf, wasComplete } from './local-cache.ts'
+import { cacheName, openCache, rememberComplete, rememberUnsent, unsentOf, wasComplete } from './local-cache.ts'
 import { type SaveFacts, type SaveState, saveStateOf } from './save-state.ts'
 import { type Store, createStore } from './store.ts'
 import { createUndo } from './undo-manager.ts'
@@ -28,7 +28,9 @@ export type OpenDocument = {
 type Options = {
   kind: DocumentKind
   shootId: string
-  cacheName: string
+  userId: string
+  /** Of the document as this page knows it. */
+  epoch: number
   onChanged: (queryKeys: string[][]) => void
 }
 
@@ -44,9 +46,10 @@ const REFUSED_WORDS: Readonly<Record<string, string>> = {
 const FIRST_MINUTES_MS = 120_000
 
 /** Opens one of a shoot's documents: first from this device, then from the server, and keeps both in step. */
-export function openDocument({ kind, shootId, cacheName, onChanged }: Options): OpenDocument {
+export function openDocument({ kind, shootId, userId, epoch, onChanged }: Options): OpenDocument {
   const doc = new Y.Doc()
-  const acks = countAcknowledgements(unsentOf(cacheName))
+  const cache = cacheName(userId, shootId, kind, epoch)
+  const acks = countAcknowledgements(unsentOf(cache))
   const facts: SaveFacts = {
     connected: false,
     settled: false,
@@ -63,7 +66,7 @@ export function openDocument({ kind, shootId, cacheName, onChanged }: Options): 
 
   const update = (change: Partial<SaveFacts> = {}) => {
     Object.assign(facts, change, { unsent: acks.unsent(), settled: acks.settled() })
-    rememberUnsent(cacheName, facts.unsent)
+    rememberUnsent(cache, facts.unsent)
     const next = saveStateOf({ ...facts, connected: facts.connected && navigator.onLine })
     if (JSON.stringify(next) !== JSON.stringify(save.get())) save.set(next)
   }
@@ -88,7 +91,7 @@ export function openDocument({ kind, shootId, cacheName, onChanged }: Options): 
   const provider = new WebsocketProvider(`${origin}/rt/${shootId}`, kind, doc, {
     connect: false,
     disableBc: true,
-    params: { ack: '1' },
+    params: { ack: '1', epoch: String(epoch) },
     resyncInterval: 45_000,
     WebSocketPolyfill: CountingSocket,
   })
@@ -121,7 +124,7 @@ export function openDocument({ kind, shootId, cacheName, onChanged }: Options): 
   })
   provider.on('sync', (synced) => {
     if (synced) {
-      rememberComplete(cacheName)
+      rememberComplete(cache)
       ready.set(true)
     }
     update()
@@ -158,10 +161,10 @@ export function openDocument({ kind, shootId, cacheName, onChanged }: Options): 
   document.addEventListener('visibilitychange', wake)
 
   // The cache first: with an empty state vector the server would send everything again.
-  void openCache(cacheName, doc).then((cache) => {
+  void openCache(cache, doc).then((opened) => {
     if (destroyed) return
-    update({ kept: cache !== undefined })
-    if (cache && (doc.store.clients.size > 0 || wasComplete(cacheName))) ready.set(true)
+    update({ kept: opened !== undefined })
+    if (opened && (doc.store.clients.size > 0 || wasComplete(cache))) ready.set(true)
     provider.connect()
   })
 

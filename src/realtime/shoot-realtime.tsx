@@ -4,7 +4,6 @@ import type * as Y from 'yjs'
 import { canWriteDocument, type Role } from '#shared/access/roles.ts'
 import type { ShootView } from '#shared/api/shoots.ts'
 import { DOCUMENT_KINDS, type DocumentKind } from '#shared/realtime/documents.ts'
-import { cacheName } from './local-cache.ts'
 import { type OpenDocument, openDocument } from './open-document.ts'
 import { listenForSignOut } from './sign-out.ts'
 
@@ -32,8 +31,7 @@ export function ShootRealtime({ shoot, userId, children, waiting }: ShootRealtim
     const onChanged = (keys: string[][]) => {
       for (const queryKey of keys) void queryClient.invalidateQueries({ queryKey })
     }
-    const open = (kind: DocumentKind) =>
-      openDocument({ kind, shootId, cacheName: cacheName(userId, shootId, kind, known[kind] ?? 1), onChanged })
+    const open = (kind: DocumentKind) => openDocument({ kind, shootId, userId, epoch: known[kind] ?? 1, onChanged })
     const opened: ShootDocuments = {
       board: open('board'),
       plan: open('plan'),

@@ -134,6 +134,17 @@ describe('who gets into a document', () => {
   })
 })
 
+describe('a cache of another epoch', () => {
+  it('is turned away with 4409 before anything of it is read', async () => {
+    const { sessionId } = shoot.people.photographer
+    const at = { url: world.url, shootId: shoot.shootId, sessionId }
+    expect(await new TestClient({ ...at, kind: 'board?epoch=7' }).ended).toBe(CLOSE.epoch)
+    const same = new TestClient({ ...at, kind: 'board?epoch=1' })
+    await until(() => same.isSynced)
+    same.close()
+  })
+})
+
 describe('a reader', () => {
   it('is told so at once, acknowledged for an empty step 2, refused otherwise, and changes nothing', async () => {
     const writer = await open(shoot.people.photographer, 'plan').ready()

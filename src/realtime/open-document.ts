@@ -44,6 +44,7 @@ const REFUSED_WORDS: Readonly<Record<string, string>> = {
 }
 
 const FIRST_MINUTES_MS = 120_000
+const ASK_AFTER_FAILURES = 3
 
 /** Opens one of a shoot's documents: first from this device, then from the server, and keeps both in step. */
 export function openDocument({ kind, shootId, userId, epoch, onChanged }: Options): OpenDocument {
@@ -141,6 +142,11 @@ export function openDocument({ kind, shootId, userId, epoch, onChanged }: Option
     const capMs = Date.now() - downSinceMs < FIRST_MINUTES_MS ? 3000 : 30_000
     const stepMs = Math.min(2 ** (provider.wsUnsuccessfulReconnects + 1) * 100, capMs)
     provider.maxBackoffTime = stepMs * (0.3 + 0.7 * Math.random())
+    // A browser cannot read why an upgrade was refused: ask over HTTP whether one is signed in still.
+    const failures = provider.wsUnsuccessfulReconnects
+    if (kind === 'board' && navigator.onLine && failures % ASK_AFTER_FAILURES === ASK_AFTER_FAILURES - 1) {
+      onChanged([['session']])
+    }
   })
 
   const wake = () => {

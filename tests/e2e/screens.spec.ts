@@ -6,23 +6,9 @@ import { type Page, expect, test } from '@playwright/test'
 import type { Role } from '#shared/access/roles.ts'
 import { DESK, PHONE, openDemoShoot, signInDemo, visit } from '#tests/e2e/support/people.ts'
 
-/** With SCONCE_SCREENS=1 the pictures of the README are taken anew, with another value all of them, into that folder. */
+/** With SCONCE_SCREENS=1 the pictures of the README are taken anew; another value is a folder to put them into. */
 const TAKE = process.env['SCONCE_SCREENS']
 const FOLDER = TAKE === '1' ? join(import.meta.dirname, 'screens') : TAKE
-const IN_README = [
-  'shoots-desk',
-  'board-desk',
-  'board-phone',
-  'looks-desk',
-  'setup-desk',
-  'order-desk',
-  'order-phone',
-  'sign-off-desk',
-  'sign-off-phone',
-  'day-phone',
-  'brief-desk',
-  'kit-room-desk',
-]
 
 type Screen = { name: string; path: string; see: RegExp; role: Role }
 
@@ -62,10 +48,10 @@ async function inspect(page: Page, name: string): Promise<void> {
 }
 
 async function take(page: Page, name: string, size: string): Promise<void> {
-  if (FOLDER === undefined || (TAKE === '1' && !IN_README.includes(`${name}-${size}`))) return
+  if (FOLDER === undefined) return
   mkdirSync(FOLDER, { recursive: true })
   const picture = sharp(await page.screenshot())
-  await picture.webp({ quality: 84 }).toFile(join(FOLDER, `${name}-${size}.webp`))
+  await picture.webp({ quality: 80 }).toFile(join(FOLDER, `${name}-${size}.webp`))
 }
 
 for (const [size, viewport] of [

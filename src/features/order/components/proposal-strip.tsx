@@ -8,7 +8,7 @@ import { type Segment, segmentsOf } from '../segments.ts'
 export type ProposalStripProps = { label: string; problem: OrderProblem; day: DaySchedule; pxPerMin: number }
 
 /** Where a number fits. */
-const TEXT_PX = 14
+const TEXT_PX = 13
 
 /** A day as a narrow strip to scale, to lay beside another. */
 export function ProposalStrip({ label, problem, day, pxPerMin }: ProposalStripProps) {

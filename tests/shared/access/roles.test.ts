@@ -41,6 +41,14 @@ const ACTIONS: [ShootAction, [boolean, boolean, boolean, boolean]][] = [
   ['contacts.readAll', [true, true, false, false]],
   ['contacts.readPhotographer', [true, true, true, false]],
   ['links.write', [true, false, false, false]],
+  ['money.write', [true, false, false, false]],
+  ['estimate.accept', [false, false, true, false]],
+  ['call-sheet.read', [true, true, true, true]],
+  ['call-sheet.write', [true, false, false, false]],
+  ['releases.read', [true, true, false, false]],
+  ['releases.write', [true, false, false, false]],
+  ['versions.write', [true, true, true, false]],
+  ['shoot.remove', [true, false, false, false]],
 ]
 
 describe('canInShoot', () => {

@@ -26,7 +26,7 @@ describe('proposeOrder', () => {
     (block) => {
       for (let number = 0; number < 20; number++) {
         const random = seededRandom(block * 1000 + number)
-        const shots = 2 + Math.floor(random() * 5)
+        const shots = 2 + Math.floor(random() * 6)
         const problem = randomDay(random, { shots, rules: 4 })
         const proposal = proposeOrder(problem, OPTIONS)
         expect({ day: [block, number], ...proposal.objective }).toEqual({

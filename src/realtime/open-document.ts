@@ -66,8 +66,10 @@ export function openDocument({ kind, shootId, userId, epoch, onChanged }: Option
   let destroyed = false
 
   const update = (change: Partial<SaveFacts> = {}) => {
+    const before = facts.unsent
     Object.assign(facts, change, { unsent: acks.unsent(), settled: acks.settled() })
-    rememberUnsent(cache, facts.unsent)
+    // Storage is slow: not for every frame, only when the number is another.
+    if (facts.unsent !== before) rememberUnsent(cache, facts.unsent)
     const next = saveStateOf({ ...facts, connected: facts.connected && navigator.onLine })
     if (JSON.stringify(next) !== JSON.stringify(save.get())) save.set(next)
   }
@@ -82,9 +84,10 @@ export function openDocument({ kind, shootId, userId, epoch, onChanged }: Option
   /** Sees every frame that leaves: update-carrying sync messages are what the server counts. */
   class CountingSocket extends WebSocket {
     override send(data: Parameters<WebSocket['send']>[0]): void {
-      if (data instanceof Uint8Array && data[0] === MESSAGE.sync && data[1] !== 0) acks.sent()
+      const isCounted = data instanceof Uint8Array && data[0] === MESSAGE.sync && data[1] !== 0
+      if (isCounted) acks.sent()
       super.send(data)
-      update()
+      if (isCounted) update()
     }
   }
 

@@ -1,3 +1,5 @@
+import type { Lamp } from '#shared/domain/shoots/readiness.ts'
+
 /** What the sign on every screen says. One word each: saved, saving, offline, not saved, reload. */
 export type SaveState =
   | { kind: 'saved' }
@@ -5,6 +7,15 @@ export type SaveState =
   | { kind: 'offline'; unsent: number }
   | { kind: 'not-saved'; why: string }
   | { kind: 'reload' }
+
+/** The five words and their lamps, the same on every screen. */
+export const SAVE_SIGNS: Readonly<Record<SaveState['kind'], { words: string; lamp: Lamp }>> = {
+  saved: { words: 'Saved', lamp: 'lit' },
+  saving: { words: 'Saving…', lamp: 'half' },
+  offline: { words: 'Offline – kept on this device', lamp: 'half' },
+  'not-saved': { words: 'Not saved', lamp: 'unlit' },
+  reload: { words: 'Reload needed', lamp: 'unlit' },
+}
 
 /** What is known of one open document. */
 export type SaveFacts = {

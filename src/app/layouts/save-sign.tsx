@@ -1,27 +1,11 @@
 import { useState } from 'react'
-import type { SaveState } from '#src/realtime/save-state.ts'
+import { SAVE_SIGNS, type SaveState } from '#src/realtime/save-state.ts'
 import { useSaveState } from '#src/realtime/use-save-state.ts'
 import { cn } from '#src/lib/cn.ts'
 import { count } from '#src/lib/format.ts'
 import { Button } from '#src/ui/button.tsx'
-import { Lamp, type LampState } from '#src/ui/lamp.tsx'
+import { Lamp } from '#src/ui/lamp.tsx'
 import { Popover } from '#src/ui/popover.tsx'
-
-const WORDS: Record<SaveState['kind'], string> = {
-  saved: 'Saved',
-  saving: 'Saving…',
-  offline: 'Offline – kept on this device',
-  'not-saved': 'Not saved',
-  reload: 'Reload needed',
-}
-
-const LAMPS: Record<SaveState['kind'], LampState> = {
-  saved: 'lit',
-  saving: 'half',
-  offline: 'half',
-  'not-saved': 'unlit',
-  reload: 'unlit',
-}
 
 function explanation(state: SaveState): string {
   switch (state.kind) {
@@ -59,12 +43,12 @@ export function SaveSign({ tone }: SaveSignProps) {
               isTrouble && (tone === 'night' ? '!font-semibold !text-glow-lit' : '!font-semibold !text-glow-ink'),
             )}
           >
-            <Lamp state={LAMPS[state.kind]} />
-            {WORDS[state.kind]}
+            <Lamp state={SAVE_SIGNS[state.kind].lamp} />
+            {SAVE_SIGNS[state.kind].words}
           </button>
         }
       >
-        <p className="font-semibold">{WORDS[state.kind]}</p>
+        <p className="font-semibold">{SAVE_SIGNS[state.kind].words}</p>
         <p className="mt-1 text-sm text-ink-soft">{explanation(state)}</p>
         {state.kind === 'reload' && (
           <Button variant="primary" className="mt-3" onClick={() => window.location.reload()}>
@@ -86,9 +70,9 @@ export function SaveStrip() {
       aria-label="What is saved"
       className="save-strip on-night no-print flex items-center gap-2.5 border-b border-night-3 bg-night-2 px-[18px] py-1.5 text-[0.8125rem] leading-tight text-bone-soft"
     >
-      <Lamp state={LAMPS[state.kind]} />
+      <Lamp state={SAVE_SIGNS[state.kind].lamp} />
       <span className={cn('min-w-0 flex-1', isTrouble && 'font-semibold text-glow-lit')}>
-        {WORDS[state.kind]}
+        {SAVE_SIGNS[state.kind].words}
         {state.kind === 'not-saved' && ` · ${state.why}`}
         {state.kind === 'offline' && state.unsent > 0 && ` · ${count(state.unsent, 'change')} to send`}
       </span>
@@ -106,7 +90,7 @@ function Announcement({ state }: { state: SaveState }) {
   const [spoken, setSpoken] = useState('')
   const { kind } = state
   const trouble = kind === 'offline' || kind === 'not-saved' || kind === 'reload'
-  const next = trouble ? WORDS[kind] : kind === 'saved' && spoken !== '' ? WORDS.saved : spoken
+  const next = trouble ? SAVE_SIGNS[kind].words : kind === 'saved' && spoken !== '' ? SAVE_SIGNS.saved.words : spoken
   if (next !== spoken) setSpoken(next)
   return (
     <span role="status" className="sr-only">

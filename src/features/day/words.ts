@@ -2,8 +2,7 @@ import type { Advice } from '#shared/domain/day/advice.ts'
 import type { Need } from '#shared/domain/board/schema.ts'
 import { clockLabel, listLabel } from '#shared/domain/order/clock.ts'
 import type { PlannedShot } from '#shared/domain/plan/read-plan.ts'
-import type { SaveState } from '#src/realtime/save-state.ts'
-import type { LampState } from '#src/ui/lamp.tsx'
+import { SAVE_SIGNS, type SaveState } from '#src/realtime/save-state.ts'
 
 export const NEED_WORDS: Readonly<Record<Need, string>> = {
   must: 'needed by the client',
@@ -25,22 +24,10 @@ export function behindWords(behindMin: number): string {
 }
 
 /** What is saved where, as on every screen, with how much waits on this phone. */
-export function saveWords(state: SaveState): { words: string; lamp: LampState } {
-  switch (state.kind) {
-    case 'saved':
-      return { words: 'Saved', lamp: 'lit' }
-    case 'saving':
-      return { words: 'Saving…', lamp: 'half' }
-    case 'offline':
-      return {
-        words: state.unsent === 0 ? 'Offline – kept on this device' : `On this device · ${state.unsent} to send`,
-        lamp: 'half',
-      }
-    case 'not-saved':
-      return { words: `Not saved: ${state.why}`, lamp: 'unlit' }
-    case 'reload':
-      return { words: 'Reload needed', lamp: 'unlit' }
-  }
+export function saveWords(state: SaveState): string {
+  const { words } = SAVE_SIGNS[state.kind]
+  if (state.kind === 'offline' && state.unsent > 0) return `On this device · ${state.unsent} to send`
+  return state.kind === 'not-saved' ? `${words}: ${state.why}` : words
 }
 
 /** What to trim or leave so as to be out in time. */

@@ -1,17 +1,7 @@
 import { describe, expect, it } from 'vitest'
 import * as Y from 'yjs'
+import { seededRandom } from '#shared/domain/order/search/random.ts'
 import { bringsNothing, dropPending, examine, hasPending, withoutGaps } from '#server/realtime/guard.ts'
-
-/** A small seeded generator (mulberry32), so that a run can be repeated. */
-function randomFrom(seed: number): () => number {
-  let state = seed
-  return () => {
-    state = (state + 0x6d2b79f5) | 0
-    let t = Math.imul(state ^ (state >>> 15), 1 | state)
-    t = (t + Math.imul(t ^ (t >>> 7), 61 | t)) ^ t
-    return ((t ^ (t >>> 14)) >>> 0) / 4294967296
-  }
-}
 
 function docOf(clientId: number, update?: Uint8Array): Y.Doc {
   const doc = new Y.Doc()
@@ -103,7 +93,7 @@ describe('examine', () => {
       let refused = 0
       let poison = 0
       for (let i = 0; i < CASES; i++) {
-        const bad = damage(good, randomFrom(1000 + i))
+        const bad = damage(good, seededRandom(1000 + i))
         const doc = docOf(33, base)
         const before = Y.encodeStateAsUpdate(doc)
         if (examine(doc, bad).kind !== 'fits') {

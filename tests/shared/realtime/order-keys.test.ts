@@ -1,6 +1,7 @@
 import fc from 'fast-check'
 import { describe, expect, it } from 'vitest'
 import * as Y from 'yjs'
+import { seededRandom } from '#shared/domain/order/search/random.ts'
 import { appendKey, byKey, keyBetween, keysToPlace } from '#shared/realtime/order-keys.ts'
 import { patchItem, putItems, readAll, removeItems } from '#shared/realtime/collection.ts'
 import { shots } from '#shared/realtime/documents.ts'
@@ -59,21 +60,10 @@ describe('keysToPlace', () => {
   })
 })
 
-/** A reproducible generator (mulberry32). */
-function seeded(seed: number): () => number {
-  let state = seed
-  return () => {
-    state = (state + 0x6d2b79f5) | 0
-    let t = Math.imul(state ^ (state >>> 15), 1 | state)
-    t = (t + Math.imul(t ^ (t >>> 7), 61 | t)) ^ t
-    return ((t ^ (t >>> 14)) >>> 0) / 4294967296
-  }
-}
-
 describe('an ordered list that three people reorder', () => {
   it('has every shot exactly once and the same order everywhere, over 20 random histories with offline spells', () => {
     for (let run = 0; run < 20; run++) {
-      const random = seeded(run + 1)
+      const random = seededRandom(run + 1)
       const docs = [new Y.Doc(), new Y.Doc(), new Y.Doc()]
       const pick = <T>(list: readonly T[]): T | undefined => list[Math.floor(random() * list.length)]
       const made = new Set<string>()

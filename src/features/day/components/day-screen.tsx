@@ -5,6 +5,7 @@ import type { ShotState } from '#shared/domain/day/schema.ts'
 import { clockLabel } from '#shared/domain/order/clock.ts'
 import type { ShotId } from '#shared/ids.ts'
 import { useMayWrite, useShoot } from '#src/realtime/shoot-realtime.tsx'
+import { SAVE_SIGNS } from '#src/realtime/save-state.ts'
 import { useSaveState } from '#src/realtime/use-save-state.ts'
 import { cn } from '#src/lib/cn.ts'
 import { Button } from '#src/ui/button.tsx'
@@ -174,7 +175,7 @@ function TheDay({ day, userName }: { day: ShownDay; userName: string }) {
 
 function DayTop({ day, onList }: { day: ShownDay; onList?: (() => void) | undefined }) {
   const { id, brief } = useShoot()
-  const save = saveWords(useSaveState())
+  const save = useSaveState()
   const place = brief.location.name === '' ? brief.title : brief.location.name
   const { progress } = day
   return (
@@ -194,8 +195,8 @@ function DayTop({ day, onList }: { day: ShownDay; onList?: (() => void) | undefi
       )}
       <span className="flex-1" />
       <span role="status" className="flex items-center gap-1.5 text-right">
-        <Lamp state={save.lamp} />
-        {save.words}
+        <Lamp state={SAVE_SIGNS[save.kind].lamp} />
+        {saveWords(save)}
       </span>
       {onList && (
         <button

@@ -30,7 +30,7 @@ import { createShoot } from '#server/features/shoots/create-shoot.ts'
 import { answerLook } from '#server/features/sign-off/answer-look.ts'
 import { readLookVersions } from '#server/features/sign-off/look-version-rows.ts'
 import { createStudio } from '#server/features/studios/create-studio.ts'
-import { processPicture } from '#server/features/uploads/process-picture.ts'
+import { type ProcessedPicture, processPicture } from '#server/features/uploads/process-picture.ts'
 import { storeUpload } from '#server/features/uploads/store-upload.ts'
 import { type DemoUpload, demoBoard } from './content/board.ts'
 import { demoLighting } from './content/lighting.ts'
@@ -97,6 +97,7 @@ export async function ensureDemo(world: DemoWorld): Promise<boolean> {
         shootId: created.id,
         uploadId: uploadIdSchema.parse(picture.id),
         bytes: picture.bytes,
+        processed: picture.processed,
       })
     }
     return created.id
@@ -120,19 +121,20 @@ function nextThursday(now: Date): string {
   return from.plus({ days: (4 - from.weekday + 7) % 7 }).toISODate() ?? ''
 }
 
-type DemoFile = DemoUpload & { bytes: Uint8Array }
+type DemoFile = DemoUpload & { bytes: Uint8Array; processed: ProcessedPicture }
 
 async function demoUploads(id: (name: string) => string): Promise<Map<string, DemoFile>> {
   const files = new Map<string, DemoFile>()
   for (const crop of DEMO_CROPS) {
     const bytes = await demoPicture(crop)
-    const facts = await processPicture(bytes)
+    const processed = await processPicture(bytes)
     files.set(crop.name, {
       id: id(`upload-${crop.name}`),
       bytes,
-      widthPx: facts.widthPx,
-      heightPx: facts.heightPx,
-      palette: facts.palette,
+      processed,
+      widthPx: processed.widthPx,
+      heightPx: processed.heightPx,
+      palette: processed.palette,
     })
   }
   return files

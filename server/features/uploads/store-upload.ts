@@ -7,10 +7,16 @@ import type { Ctx } from '#server/context.ts'
 import { withTransaction } from '#server/db/client.ts'
 import { blob, rendition, upload } from '#server/db/schema/uploads.ts'
 import { AppError } from '#server/errors.ts'
-import { processPicture } from './process-picture.ts'
+import { type ProcessedPicture, processPicture } from './process-picture.ts'
 import { type UploadRow, findUpload, findUploadOfContent, toUpload } from './upload-rows.ts'
 
-export type StoreUpload = { shootId: ShootId; uploadId: UploadId; bytes: Uint8Array }
+export type StoreUpload = {
+  shootId: ShootId
+  uploadId: UploadId
+  bytes: Uint8Array
+  /** What these bytes came to, where somebody had to know before; else they are processed here. */
+  processed?: ProcessedPicture
+}
 
 /**
  * Keeps a picture under an id made on the device. Sent again with the same bytes it answers the same; another picture
@@ -18,14 +24,17 @@ export type StoreUpload = { shootId: ShootId; uploadId: UploadId; bytes: Uint8Ar
  *
  * @throws AppError UNSUPPORTED (no picture, broken), TOO_LARGE (pixels), each with a sentence for people.
  */
-export async function storeUpload(ctx: Ctx, { shootId, uploadId, bytes }: StoreUpload): Promise<Upload> {
+export async function storeUpload(
+  ctx: Ctx,
+  { shootId, uploadId, bytes, processed: given }: StoreUpload,
+): Promise<Upload> {
   const { actor } = await requireShoot(ctx, shootId, 'uploads.write')
   const sha256 = createHash('sha256').update(bytes).digest('hex')
   const earlier = await findUpload(ctx.db, uploadId)
   if (earlier) return sameOrConflict(earlier, shootId, sha256)
 
   const known = await findUploadOfContent(ctx.db, sha256)
-  const processed = known ? null : await processPicture(bytes)
+  const processed = known ? null : (given ?? (await processPicture(bytes)))
   const facts = known ?? processed
   if (!facts) throw new Error('a picture is either known or processed')
   return withTransaction(ctx.db, async (tx) => {

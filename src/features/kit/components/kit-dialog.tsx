@@ -1,7 +1,7 @@
 import { type FormEvent, useId, useState } from 'react'
 import type { KitInput } from '#shared/domain/kit/schema.ts'
-import { Button } from '#src/ui/button.tsx'
 import { Dialog } from '#src/ui/dialog.tsx'
+import { EditFooter } from '#src/ui/edit-footer.tsx'
 import { Field } from '#src/ui/field.tsx'
 import { FormError } from '#src/ui/form-error.tsx'
 import { Input } from '#src/ui/input.tsx'
@@ -39,14 +39,7 @@ export function KitDialog({ title, input, isBusy, refusal, onClose, onSave }: Ki
       wide
       onOpenChange={(open) => !open && onClose()}
       title={title}
-      footer={
-        <>
-          <Button onClick={onClose}>Cancel</Button>
-          <Button type="submit" form={form} variant="primary" busy={isBusy}>
-            Save
-          </Button>
-        </>
-      }
+      footer={<EditFooter form={form} busy={isBusy} onCancel={onClose} />}
     >
       <form id={form} noValidate onSubmit={handleSubmit} className="flex flex-col gap-4">
         <FormError>{refusal}</FormError>

@@ -4,8 +4,8 @@ import { Controller, useForm } from 'react-hook-form'
 import { z } from 'zod'
 import { DELIVERABLE_ORIENTATIONS, type Deliverable } from '#shared/domain/shoots/schema.ts'
 import { showIssues } from '#src/lib/form-issues.ts'
-import { Button } from '#src/ui/button.tsx'
 import { Dialog } from '#src/ui/dialog.tsx'
+import { EditFooter } from '#src/ui/edit-footer.tsx'
 import { Field } from '#src/ui/field.tsx'
 import { FormError } from '#src/ui/form-error.tsx'
 import { Input } from '#src/ui/input.tsx'
@@ -56,24 +56,16 @@ export function DeliverableDialog({ deliverable, shootId, onClose }: Deliverable
       onOpenChange={(open) => !open && onClose()}
       title={deliverable ? 'Change a deliverable' : 'Add a deliverable'}
       footer={
-        <>
-          {deliverable && (
-            <Button
-              variant="danger"
-              className="mr-auto"
-              busy={change.isPending}
-              onClick={() =>
-                change.mutate({ kind: 'no-deliverable', id: deliverable.id }, { onSuccess: onClose, onError })
-              }
-            >
-              Remove
-            </Button>
-          )}
-          <Button onClick={onClose}>Cancel</Button>
-          <Button type="submit" form={formId} variant="primary" busy={change.isPending}>
-            Save
-          </Button>
-        </>
+        <EditFooter
+          form={formId}
+          busy={change.isPending}
+          onCancel={onClose}
+          onRemove={
+            deliverable
+              ? () => change.mutate({ kind: 'no-deliverable', id: deliverable.id }, { onSuccess: onClose, onError })
+              : undefined
+          }
+        />
       }
     >
       <form

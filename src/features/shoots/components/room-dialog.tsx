@@ -4,8 +4,8 @@ import { Controller, type Control, useForm } from 'react-hook-form'
 import { z } from 'zod'
 import type { Room } from '#shared/domain/shoots/schema.ts'
 import { showIssues } from '#src/lib/form-issues.ts'
-import { Button } from '#src/ui/button.tsx'
 import { Dialog } from '#src/ui/dialog.tsx'
+import { EditFooter } from '#src/ui/edit-footer.tsx'
 import { Field } from '#src/ui/field.tsx'
 import { FormError } from '#src/ui/form-error.tsx'
 import { Input } from '#src/ui/input.tsx'
@@ -51,22 +51,14 @@ export function RoomDialog({ room, shootId, onClose }: RoomDialogProps) {
       onOpenChange={(open) => !open && onClose()}
       title={room ? `Change: ${room.name}` : 'Add a room'}
       footer={
-        <>
-          {room && (
-            <Button
-              variant="danger"
-              className="mr-auto"
-              busy={change.isPending}
-              onClick={() => change.mutate({ kind: 'no-room', id: room.id }, { onSuccess: onClose, onError })}
-            >
-              Remove
-            </Button>
-          )}
-          <Button onClick={onClose}>Cancel</Button>
-          <Button type="submit" form={formId} variant="primary" busy={change.isPending}>
-            Save
-          </Button>
-        </>
+        <EditFooter
+          form={formId}
+          busy={change.isPending}
+          onCancel={onClose}
+          onRemove={
+            room ? () => change.mutate({ kind: 'no-room', id: room.id }, { onSuccess: onClose, onError }) : undefined
+          }
+        />
       }
     >
       <form

@@ -8,6 +8,14 @@ export const DEFAULT_SETTINGS = {
   /** Frames held for a connection while its document loads. */
   earlyFrames: 64,
   earlyBytes: 5 * 1024 * 1024,
+  /** Changes that come within so long after the last broadcast go out together. */
+  mergeMs: 20,
+  /** A reader with so much on its way is sent no more changes; below `caughtUpBytes` it gets one for all it missed. */
+  lagBytes: 1024 * 1024,
+  caughtUpBytes: 64 * 1024,
+  /** How long a reader may lag: this, and the time that what is on its way takes at `slowestBytesPerSecond`. */
+  lagMs: 30_000,
+  slowestBytesPerSecond: 32 * 1024,
   /** Above this nobody waits for a slow reader any more. */
   outboundBytes: 8 * 1024 * 1024,
 
@@ -23,6 +31,24 @@ export const DEFAULT_SETTINGS = {
   retryMaxMs: 5_000,
   /** A statement without an answer for so long counts as failed. */
   statementMs: 15_000,
+
+  /** A log longer than either is replaced by a snapshot; one with `compactIdleRows` when its document is put away. */
+  compactRows: 500,
+  compactBytes: 1024 * 1024,
+  compactIdleRows: 20,
+  /** Snapshots and rows that a newer snapshot stands for stay so long, to undo a bad one. */
+  keepReplacedMs: 7 * 24 * 3_600_000,
+  /** What was deleted so long ago is taken out of the document. */
+  purgeDeletedMs: 30 * 24 * 3_600_000,
+  /** Order keys longer than this are made anew when nobody is connected. Characters. */
+  longestKey: 64,
+
+  /** Between two looks at the heads of the log: what a notice should have said and did not. */
+  headsMs: 5_000,
+  /** An instance not heard of for so long is gone, and the people on it. */
+  instanceGoneMs: 20_000,
+  /** Presence goes to other instances at most once in this time for each document. */
+  presenceAcrossMs: 100,
 
   idleUnloadMs: 60_000,
   presenceFlushMs: 50,

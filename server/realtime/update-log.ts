@@ -3,8 +3,8 @@ import type { DocId } from '#shared/ids.ts'
 import { type LogEntry, batchLength, rowsOf, touchesOf } from './batch.ts'
 import type { RealtimeLog, RealtimeSettings } from './settings.ts'
 
-/** Rows `first` to `last` of a document's log are this process's own and committed. */
-export type Committed = { docId: DocId; first: number; last: number }
+/** Rows `first` to `last` of a document's log are this process's own and committed; `logRows` and `logBytes` are behind its newest snapshot. */
+export type Committed = { docId: DocId; first: number; last: number; logRows: number; logBytes: number }
 
 export type UpdateLog = {
   enqueue(entry: LogEntry): void
@@ -39,7 +39,7 @@ const APPEND = `
     update rt_doc d set head = d.head + g.n, log_rows = d.log_rows + g.n, log_bytes = d.log_bytes + g.bytes
     from unnest($1::uuid[], $2::int[], $3::bigint[]) as g(id, n, bytes), locked
     where d.id = g.id and locked.id = d.id
-    returning d.id, d.head, g.n
+    returning d.id, d.head, g.n, d.log_rows, d.log_bytes
   ), appended as (
     insert into rt_update (doc_id, seq, user_id, update)
     select grown.id, grown.head - grown.n + r.place, r.user_id, r.update
@@ -52,9 +52,9 @@ const APPEND = `
     join grown on grown.id = t.doc_id
     on conflict (doc_id, item, user_id) do update set at = excluded.at
   )
-  select id, head, n from grown`
+  select id, head, n, log_rows, log_bytes from grown`
 
-type Grown = { id: DocId; head: string; n: number }
+type Grown = { id: DocId; head: string; n: number; log_rows: number; log_bytes: string }
 
 /** The queue of a process and its one writer. `onCommitted` runs before the entries are settled. */
 export function createUpdateLog(options: {
@@ -133,7 +133,8 @@ export function createUpdateLog(options: {
       else perDoc.delete(entry.docId)
     }
     for (const doc of grown.values()) {
-      tell(() => onCommitted({ docId: doc.id, first: Number(doc.head) - doc.n + 1, last: Number(doc.head) }))
+      const [last, logBytes] = [Number(doc.head), Number(doc.log_bytes)]
+      tell(() => onCommitted({ docId: doc.id, first: last - doc.n + 1, last, logRows: doc.log_rows, logBytes }))
     }
     for (const entry of batch) tell(() => entry.settle(entry.update === null || grown.has(entry.docId)))
   }

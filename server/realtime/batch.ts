@@ -1,5 +1,5 @@
-import * as Y from 'yjs'
 import type { DocId, UserId } from '#shared/ids.ts'
+import { mergedUpdates } from './merged-updates.ts'
 
 export type LogEntry = {
   docId: DocId
@@ -45,18 +45,8 @@ export function rowsOf(batch: readonly LogEntry[]): LogRow[] {
   return [...byDoc.entries()]
     .sort(([a], [b]) => (a < b ? -1 : 1))
     .flatMap(([docId, runs]) =>
-      runs.flatMap(({ userId, updates }) => merged(updates).map((update) => ({ docId, userId, update }))),
+      runs.flatMap(({ userId, updates }) => mergedUpdates(updates).map((update) => ({ docId, userId, update }))),
     )
-}
-
-/** One update for several, or the several when Yjs cannot merge them: a queue must never stand still for one of them. */
-function merged(updates: readonly Uint8Array[]): readonly Uint8Array[] {
-  if (updates.length === 1) return updates
-  try {
-    return [Y.mergeUpdates([...updates])]
-  } catch {
-    return updates
-  }
 }
 
 /** Who touched what, each pair once. */

@@ -11,7 +11,15 @@ export const LOG_ORIGIN = Object.freeze({ kind: 'log' as const })
 export const COMPACT_KIND = 'compact'
 
 export type BadPiece = { reason: string; userId: UserId | null; update: Uint8Array }
-export type Loaded = { doc: Y.Doc; head: number; sizeBytes: number; bad: BadPiece[] }
+export type Loaded = {
+  doc: Y.Doc
+  head: number
+  epoch: number
+  /** Why nobody may write, or null. */
+  frozen: string | null
+  sizeBytes: number
+  bad: BadPiece[]
+}
 
 type UpdateRow = { seq: string; user_id: UserId | null; update: Uint8Array }
 
@@ -26,12 +34,16 @@ export async function loadDocument(pool: pg.Pool, docId: DocId): Promise<Loaded 
   try {
     // One view of the database, so that a compaction in between cannot take rows away.
     await client.query('begin isolation level repeatable read read only')
-    const found = await client.query('select 1 from rt_doc where id = $1', [docId])
-    if (found.rowCount === 0) {
+    const found = await client.query<Pick<Loaded, 'epoch' | 'frozen'>>(
+      'select epoch, frozen from rt_doc where id = $1',
+      [docId],
+    )
+    const [row] = found.rows
+    if (!row) {
       await client.query('commit')
       return undefined
     }
-    const loaded = await readSnapshot(client, docId)
+    const loaded: Loaded = { ...row, ...(await readSnapshot(client, docId)) }
     const rows = await client.query<UpdateRow>(
       'select seq, user_id, update from rt_update where doc_id = $1 and seq > $2 order by seq',
       [docId, loaded.head],
@@ -49,7 +61,7 @@ export async function loadDocument(pool: pg.Pool, docId: DocId): Promise<Loaded 
   }
 }
 
-async function readSnapshot(client: pg.PoolClient, docId: DocId): Promise<Loaded> {
+async function readSnapshot(client: pg.PoolClient, docId: DocId): Promise<Omit<Loaded, 'epoch' | 'frozen'>> {
   const snapshots = await client.query<{ seq: string; state: Uint8Array; sha256: Uint8Array }>(
     'select seq, state, sha256 from rt_snapshot where doc_id = $1 and kind = $2 order by seq desc limit 2',
     [docId, COMPACT_KIND],

@@ -5,15 +5,18 @@ import { canWriteDocument } from '#shared/access/roles.ts'
 import type { UserId } from '#shared/ids.ts'
 import { CLOSE, type Refusal } from '#shared/realtime/protocol.ts'
 import { KEEP_ALIVE } from './presence.ts'
-import type { Place, RoomPeer } from './room.ts'
+import type { Place, RoomPeer, Standing } from './room.ts'
 import type { RealtimeLog, RealtimeSettings } from './settings.ts'
 import { TokenBucket } from './token-bucket.ts'
-import { refusedFrame, savedFrame } from './wire.ts'
+import { helloFrame, refusedFrame, savedFrame } from './wire.ts'
 
 export type Person = { userId: UserId; name: string; sessionId: string; expiresAtMs: number }
 
 /** Why a socket is not read from. */
 type Pause = 'rate' | 'early' | 'pressure' | 'drain'
+
+/** An answer of so many bytes counts as one that came in. */
+const ANSWER_SHARE = 8
 
 /** One person's socket on one document: frames, rates, acknowledgements. What frames mean is inbound.ts. */
 export class Connection implements RoomPeer {
@@ -32,6 +35,7 @@ export class Connection implements RoomPeer {
   readonly #settings: RealtimeSettings
   readonly #log: RealtimeLog
   readonly #wantsAcks: boolean
+  readonly #schema: number
   readonly #messages: TokenBucket
   readonly #bytes: TokenBucket
   readonly #pauses = new Set<Pause>()
@@ -53,6 +57,8 @@ export class Connection implements RoomPeer {
     place: Place
     role: Role
     wantsAcks: boolean
+    /** Lowest document schema a writer must know. */
+    schema: number
     settings: RealtimeSettings
     log: RealtimeLog
   }) {
@@ -66,6 +72,7 @@ export class Connection implements RoomPeer {
     this.#settings = options.settings
     this.#log = options.log
     this.#wantsAcks = options.wantsAcks
+    this.#schema = options.schema
     const now = Date.now()
     this.#messages = new TokenBucket(this.#settings.messagesPerSecond, this.#settings.messagesPerSecond * 2, now)
     this.#bytes = new TokenBucket(this.#settings.bytesPerSecond, this.#settings.burstBytes, now)
@@ -79,6 +86,10 @@ export class Connection implements RoomPeer {
     return !this.#isClosing && this.#ws.readyState === this.#ws.OPEN
   }
 
+  get bufferedBytes(): number {
+    return this.#ws.bufferedAmount
+  }
+
   /** What is logged about it: nobody's name. */
   get facts(): Record<string, string | number> {
     return { connection: this.number, docId: this.place.docId, kind: this.place.kind, role: this.role }
@@ -87,14 +98,18 @@ export class Connection implements RoomPeer {
   #onFrame(data: RawData, isBinary: boolean): void {
     if (!this.isOpen) return
     const frame = isBinary ? bytesOf(data) : new Uint8Array(0)
-    const now = Date.now()
-    const waitMs = Math.max(this.#messages.take(1, now), this.#bytes.take(frame.length, now))
-    if (waitMs > 0 && !this.#pauses.has('rate')) {
-      this.pause('rate')
-      setTimeout(() => this.resume('rate'), waitMs).unref()
-    }
+    this.#take(1, frame.length)
     if (this.#receive) this.#receive(frame)
     else this.#hold(frame)
+  }
+
+  /** Uses up some of what one may send; beyond it the socket is not read from for as long as it takes. */
+  #take(messages: number, bytes: number): void {
+    const now = Date.now()
+    const waitMs = Math.max(this.#messages.take(messages, now), this.#bytes.take(bytes, now))
+    if (waitMs === 0 || this.#pauses.has('rate')) return
+    this.pause('rate')
+    setTimeout(() => this.resume('rate'), waitMs).unref()
   }
 
   /** Keeps a frame that came while the document is loading, within bounds. */
@@ -126,6 +141,19 @@ export class Connection implements RoomPeer {
       return
     }
     this.#ws.send(frame)
+  }
+
+  /** Tells who one is here and how things stand with the document: the first frame, and again when that changes. */
+  greet({ epoch, frozen }: Standing): void {
+    const { role } = this
+    this.sendExtra(
+      helloFrame({ role, mayWrite: this.mayWrite && frozen === null, epoch, schema: this.#schema, frozen }),
+    )
+  }
+
+  /** Counts an answer against what one may use up, though for less than what is sent in: it costs work as well. */
+  charge(answerBytes: number): void {
+    this.#take(0, answerBytes / ANSWER_SHARE)
   }
 
   /** For 100 to 103, which only those get who asked. */
@@ -219,6 +247,6 @@ export class Connection implements RoomPeer {
 }
 
 function bytesOf(data: RawData): Uint8Array {
-  if (Array.isArray(data)) return Uint8Array.from(Buffer.concat(data))
-  return Uint8Array.from(data instanceof ArrayBuffer ? new Uint8Array(data) : data)
+  if (Array.isArray(data)) return Buffer.concat(data)
+  return data instanceof ArrayBuffer ? new Uint8Array(data) : data
 }

@@ -18,8 +18,6 @@ export type Inbound = {
   strikes: Strikes
   settings: RealtimeSettings
   log: RealtimeLog
-  /** The frozen state of the document as it was at the upgrade. */
-  frozen: string | null
 }
 
 /** Between two questions to a client whose updates do not fit. */
@@ -59,15 +57,13 @@ export function createReceiver(context: Inbound, connection: Connection, room: R
   }
 
   function answer(stateVector: Uint8Array): void {
-    let diff: Uint8Array
     try {
-      diff = Y.encodeStateAsUpdate(room.doc, stateVector)
+      connection.charge(room.fanOut.answer(connection, stateVector, step2Frame))
     } catch {
       strike('a state vector that does not decode')
       return
     }
     connection.isSynced = true
-    connection.send(step2Frame(diff))
     connection.send(step1Frame(Y.encodeStateVector(room.doc)))
   }
 
@@ -89,7 +85,7 @@ export function createReceiver(context: Inbound, connection: Connection, room: R
       if (kind === 'step 2' && update[0] === 0 && bringsNothing(room.doc, update)) return store(() => undefined)
       return connection.refuse(n, 'read-only')
     }
-    if (context.frozen !== null) return connection.refuse(n, 'frozen')
+    if (room.frozen !== null) return connection.refuse(n, 'frozen')
     if (kind === 'update' && update.length > settings.maxUpdateBytes) return putOff(n, 'too-large')
     const verdict = examine(room.doc, update)
     if (verdict.kind === 'undecodable') return refuseInvalid(n, update)

@@ -19,8 +19,9 @@ export function listen(options: {
   log: RealtimeLog
   onPayload: (payload: string) => void
   onConnected: () => void
+  onLost?: () => void
 }): Listening {
-  const { databaseUrl, channel, log, onPayload, onConnected } = options
+  const { databaseUrl, channel, log, onPayload, onConnected, onLost } = options
   let client: pg.Client | null = null
   let timer: NodeJS.Timeout | null = null
   let isStopped = false
@@ -58,6 +59,7 @@ export function listen(options: {
     if (timer) clearInterval(timer)
     which.end().catch(() => undefined)
     if (isStopped) return
+    onLost?.()
     const waitMs = Math.min(RETRY_MAX_MS, RETRY_MIN_MS * 2 ** Math.min(attempts++, 8)) * (0.5 + Math.random() / 2)
     timer = setTimeout(() => void connect(), waitMs)
   }

@@ -2,22 +2,35 @@ import type pg from 'pg'
 import * as Y from 'yjs'
 import type { DocId, ShootId, UserId } from '#shared/ids.ts'
 import type { DocumentKind } from '#shared/realtime/documents.ts'
+import { FanOut, type Reader } from './fan-out.ts'
 import { dropPending, hasPending } from './guard.ts'
+import type { Instances } from './instances.ts'
 import { type BadPiece, LOG_ORIGIN, type Loaded, applyRows, rowsAfter } from './load.ts'
 import { type PresencePeer, RoomPresence } from './presence.ts'
 import type { RealtimeSettings } from './settings.ts'
 import { itemsTouchedBy } from './touched.ts'
 import type { Committed, UpdateLog } from './update-log.ts'
-import { updateFrame } from './wire.ts'
 
 /** Where a document belongs. */
 export type Place = { docId: DocId; shootId: ShootId; kind: DocumentKind }
 
 /** A connection, as far as a room knows it. */
-export type RoomPeer = PresencePeer & {
-  /** Whether it has asked for the document and so is told what changes. */
-  readonly isSynced: boolean
-  close(code: number, why: string): void
+export type RoomPeer = PresencePeer &
+  Reader & {
+    /** Tells it how things stand with the document. */
+    greet(standing: Standing): void
+  }
+
+/** `frozen`: why nobody may write, or null. */
+export type Standing = { epoch: number; frozen: string | null }
+
+/** What a room needs beside its document. */
+export type RoomOutside = {
+  log: UpdateLog
+  pool: pg.Pool
+  settings: RealtimeSettings
+  instances: Instances
+  onBad: (bad: BadPiece) => void
 }
 
 /** `nothing new`: known already. `incomplete`: part of it had to be left out. `broken`: the document cannot be trusted. */
@@ -31,38 +44,52 @@ export class Room {
   readonly doc: Y.Doc
   readonly peers = new Set<RoomPeer>()
   readonly presence: RoomPresence
+  readonly fanOut: FanOut<RoomPeer>
+  readonly epoch: number
   /** The document holds the log up to here. */
   head: number
   /** Its size by what went into it; above the truth, because deleted content is collected. Bytes. */
   sizeBytes: number
   isBroken = false
+  #frozen: string | null
   readonly #log: UpdateLog
   readonly #pool: pg.Pool
   readonly #onBad: (bad: BadPiece) => void
   #captured: Uint8Array[] | null = null
   readonly #touched = new Set<string>()
-  #catchingUp: Promise<void> | null = null
+  #reading: Promise<void> | null = null
+  #readingNext: Promise<void> | null = null
   #weighedAtMs = 0
   #growth = { structs: 0, sinceMs: 0 }
 
-  constructor(
-    place: Place,
-    loaded: Loaded,
-    outside: { log: UpdateLog; pool: pg.Pool; settings: RealtimeSettings; onBad: (bad: BadPiece) => void },
-  ) {
+  constructor(place: Place, loaded: Loaded, { log, pool, settings, instances, onBad }: RoomOutside) {
     this.place = place
     this.doc = loaded.doc
     this.head = loaded.head
     this.sizeBytes = loaded.sizeBytes
-    this.#log = outside.log
-    this.#pool = outside.pool
-    this.#onBad = outside.onBad
-    this.presence = new RoomPresence(outside.settings, () => this.peers)
+    this.epoch = loaded.epoch
+    this.#frozen = loaded.frozen
+    this.#log = log
+    this.#pool = pool
+    this.#onBad = onBad
+    this.presence = new RoomPresence(
+      settings,
+      () => [...this.peers].filter((peer) => !this.fanOut.isLagging(peer)),
+      (entries) => instances.showPresence(place.docId, entries),
+    )
+    this.fanOut = new FanOut(this.doc, {
+      settings,
+      readers: this.peers,
+      onCaughtUp: (peer) => peer.send(this.presence.everyoneBut(peer)),
+    })
     this.doc.on('update', (update: Uint8Array, origin: unknown, _doc: Y.Doc, transaction: Y.Transaction) => {
       if (this.#captured) {
         this.#captured.push(update)
         itemsTouchedBy(transaction, this.#touched)
-      } else if (origin === LOG_ORIGIN) this.#broadcast(update, null)
+      } else if (origin === LOG_ORIGIN) {
+        this.sizeBytes += update.length
+        this.fanOut.push(update, null)
+      }
     })
   }
 
@@ -96,16 +123,28 @@ export class Room {
     const update = captured.length > 1 ? Y.mergeUpdates(captured) : (captured[0] ?? null)
     if (update) {
       this.sizeBytes += update.length
-      this.#broadcast(update, author.peer)
+      this.fanOut.push(update, author.peer)
     }
     this.#log.enqueue({ docId: this.place.docId, userId: author.userId, update, items, queuedAtMs: Date.now(), settle })
     return isIncomplete ? 'incomplete' : update ? 'taken' : 'nothing new'
   }
 
-  /** The one way out for changes: everybody who has asked for the document, but not whom it came from. */
-  #broadcast(update: Uint8Array, author: RoomPeer | null): void {
-    const frame = updateFrame(update)
-    for (const peer of this.peers) if (peer.isSynced && peer !== author) peer.send(frame)
+  get frozen(): string | null {
+    return this.#frozen
+  }
+
+  /** Takes over what the database says; everybody who is here is told. */
+  freeze(frozen: string | null): void {
+    if (frozen === this.#frozen) return
+    this.#frozen = frozen
+    for (const peer of this.peers) peer.greet(this)
+  }
+
+  /** Takes somebody off: from the readers and from everybody's screen. */
+  leave(peer: RoomPeer): void {
+    this.peers.delete(peer)
+    this.fanOut.leave(peer)
+    this.presence.leave(peer)
   }
 
   /** Counts structs against the growth of a minute; false, and not counted, when they would be too many. */
@@ -132,12 +171,22 @@ export class Room {
     else this.catchUp().catch(() => undefined)
   }
 
-  /** Brings the document up to the head of the log. */
+  /** Brings the document up to where the log is now. */
   catchUp(): Promise<void> {
-    this.#catchingUp ??= this.#readOn().finally(() => {
-      this.#catchingUp = null
+    if (this.#reading) {
+      // What is being read may have been asked for before what the caller has heard of was there.
+      this.#readingNext ??= this.#reading
+        .catch(() => undefined)
+        .then(() => {
+          this.#readingNext = null
+          return this.catchUp()
+        })
+      return this.#readingNext
+    }
+    this.#reading = this.#readOn().finally(() => {
+      this.#reading = null
     })
-    return this.#catchingUp
+    return this.#reading
   }
 
   async #readOn(): Promise<void> {
@@ -153,6 +202,7 @@ export class Room {
   /** Forgets the document. There is nothing to save: the log has it. */
   close(): void {
     this.presence.stop()
+    this.fanOut.stop()
     this.doc.destroy()
   }
 }

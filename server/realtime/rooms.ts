@@ -1,6 +1,7 @@
 import type pg from 'pg'
 import type { DocId, ShootId } from '#shared/ids.ts'
 import type { DocumentKind } from '#shared/realtime/documents.ts'
+import type { Instances } from './instances.ts'
 import { loadDocument } from './load.ts'
 import { quarantine } from './quarantine.ts'
 import { type Place, Room } from './room.ts'
@@ -14,10 +15,13 @@ export type Rooms = {
   hold(place: Place): Hold
   /** The room of a shoot's document when it is in memory. */
   find(shootId: ShootId, kind: DocumentKind): Room | undefined
+  /** The room of a document when it is in memory. */
+  get(docId: DocId): Room | undefined
+  all(): Room[]
   committed(committed: Committed): void
   /** Forgets a room at once; whoever comes next loads it anew. */
   evict(room: Room): void
-  stats(): { rooms: number; flagged: number }
+  stats(): { rooms: number; flagged: number; lagging: number }
   stop(): void
 }
 
@@ -32,10 +36,11 @@ export class UnknownDocument extends Error {}
 export function createRooms(options: {
   pool: pg.Pool
   updateLog: UpdateLog
+  instances: Instances
   settings: RealtimeSettings
   log: RealtimeLog
 }): Rooms {
-  const { pool, updateLog, settings, log } = options
+  const { pool, updateLog, instances, settings, log } = options
   const slots = new Map<DocId, Slot>()
   /** Rooms on their way out; who joins meanwhile waits and loads anew. */
   const closing = new Map<DocId, Promise<void>>()
@@ -81,7 +86,8 @@ export function createRooms(options: {
         void quarantine(pool, log, { docId: place.docId, ...bad })
       }
       loaded.bad.forEach(onBad)
-      slot.room = new Room(place, loaded, { log: updateLog, pool, settings, onBad })
+      slot.room = new Room(place, loaded, { log: updateLog, pool, settings, instances, onBad })
+      instances.askPresence(place.docId)
       return slot.room
     } catch (error) {
       if (slots.get(place.docId) === slot) slots.delete(place.docId)
@@ -110,6 +116,8 @@ export function createRooms(options: {
     closing.set(docId, closed)
   }
 
+  const all = () => [...slots.values()].flatMap(({ room }) => room ?? [])
+
   return {
     hold,
     find: (shootId, kind) => {
@@ -118,12 +126,18 @@ export function createRooms(options: {
       }
       return undefined
     },
+    get: (docId) => slots.get(docId)?.room ?? undefined,
+    all,
     committed: (committed) => slots.get(committed.docId)?.room?.committed(committed),
     evict: (room) => {
       const slot = slots.get(room.place.docId)
       if (slot?.room === room) unload(room.place.docId, slot, room)
     },
-    stats: () => ({ rooms: slots.size, flagged: flagged.size }),
+    stats: () => ({
+      rooms: slots.size,
+      flagged: flagged.size,
+      lagging: all().reduce((sum, room) => sum + room.fanOut.laggingCount, 0),
+    }),
     stop: () => {
       for (const slot of slots.values()) {
         if (slot.idle) clearTimeout(slot.idle)

@@ -3,19 +3,23 @@ import type { Duplex } from 'node:stream'
 import pg from 'pg'
 import { WebSocketServer } from 'ws'
 import { CLOSE } from '#shared/realtime/protocol.ts'
+import type { ShootId } from '#shared/ids.ts'
 import type { Documents } from '#server/adapters/documents.ts'
 import type { Db } from '#server/db/client.ts'
 import { type Admission, type Authenticate, admit } from './authorise.ts'
 import { Connection } from './connection.ts'
 import { createDocuments } from './documents.ts'
+import { createHeadsWatch } from './heads-watch.ts'
 import { createReceiver } from './inbound.ts'
+import { createInstances } from './instances.ts'
 import { createRightsWatch } from './rights-watch.ts'
+import type { Standing } from './room.ts'
 import { UnknownDocument, createRooms } from './rooms.ts'
 import { DEFAULT_SETTINGS, type RealtimeLog, type RealtimeSettings } from './settings.ts'
 import { Strikes } from './strikes.ts'
 import { createUpdateLog, reasonOf } from './update-log.ts'
 import { warmUp } from './warm-up.ts'
-import { changedFrame, helloFrame } from './wire.ts'
+import { changedFrame } from './wire.ts'
 
 export type Realtime = {
   documents: Documents
@@ -29,13 +33,19 @@ export type Realtime = {
 export type RealtimeStats = {
   connections: number
   rooms: number
+  /** Documents of whose log something could not be read. */
   flagged: number
+  /** Readers that do not keep up. */
+  lagging: number
+  /** Other processes heard of on the same database. */
+  instances: number
   queuedEntries: number
   queuedBytes: number
   oldestMs: number
   commits: number
   rows: number
   failures: number
+  commitMs: { p50: number; p95: number; p99: number; max: number }
 }
 
 /** Upgrades under way at the same time; each is a question to the database. */
@@ -74,7 +84,10 @@ export function createRealtime(options: {
     pool,
     settings,
     log,
-    onCommitted: (committed) => rooms.committed(committed),
+    onCommitted: (committed) => {
+      rooms.committed(committed)
+      instances.logGrew(committed.docId, committed.last)
+    },
     onPressure: (isUnderPressure) => {
       for (const connection of connections) {
         if (!connection.mayWrite) continue
@@ -84,7 +97,25 @@ export function createRealtime(options: {
     },
     onStalled: () => connections.forEach((connection) => connection.stalled()),
   })
-  const rooms = createRooms({ pool, updateLog, settings, log })
+  const instances = createInstances({
+    databaseUrl,
+    settings,
+    log,
+    onLogGrew: (docId, head) => heads.grew(docId, head),
+    onPresence: (instance, docId, entries) => rooms.get(docId)?.presence.takeElsewhere(instance, entries),
+    onAskedPresence: (docId) => instances.showPresence(docId, rooms.get(docId)?.presence.here() ?? []),
+    onChanged: tellHere,
+    onMissed: () => {
+      heads.look()
+      for (const { place, presence } of rooms.all()) {
+        instances.showPresence(place.docId, presence.here())
+        instances.askPresence(place.docId)
+      }
+    },
+    onGone: (instance) => rooms.all().forEach(({ presence }) => presence.instanceGone(instance)),
+  })
+  const rooms = createRooms({ pool, updateLog, instances, settings, log })
+  const heads = createHeadsWatch({ pool, rooms, settings, log })
   const watch = createRightsWatch({ db, databaseUrl, settings, log, connections })
   const documents = createDocuments({
     pool,
@@ -92,16 +123,21 @@ export function createRealtime(options: {
     updateLog,
     settings,
     announce: (shootId, queryKeys) => {
-      const frame = changedFrame(queryKeys)
-      for (const connection of connections) {
-        if (connection.place.shootId === shootId && connection.place.kind === 'board') connection.sendExtra(frame)
-      }
+      tellHere(shootId, queryKeys)
+      instances.changed(shootId, queryKeys)
     },
   })
   const sockets = new WebSocketServer({ noServer: true, perMessageDeflate: false, maxPayload: settings.maxFrameBytes })
 
   const keepAlive = setInterval(() => connections.forEach((connection) => connection.keepAlive()), settings.keepAliveMs)
   const ping = setInterval(() => connections.forEach((connection) => connection.ping()), settings.pingMs)
+
+  function tellHere(shootId: ShootId, queryKeys: readonly (readonly string[])[]): void {
+    const frame = changedFrame(queryKeys)
+    for (const connection of connections) {
+      if (connection.place.shootId === shootId && connection.place.kind === 'board') connection.sendExtra(frame)
+    }
+  }
 
   async function onUpgrade(request: IncomingMessage, socket: Duplex, head: Buffer): Promise<void> {
     socket.on('error', () => socket.destroy())
@@ -133,9 +169,19 @@ export function createRealtime(options: {
         setTimeout(() => ws.terminate(), 3_000).unref()
         return
       }
-      const { person, place, role } = admission
+      const { person, place, role, schema } = admission
       const wantsAcks = new URLSearchParams(url?.split('?')[1]).get('ack') === '1'
-      const connection = new Connection({ ws, number: nextNumber++, person, place, role, wantsAcks, settings, log })
+      const connection = new Connection({
+        ws,
+        number: nextNumber++,
+        person,
+        place,
+        role,
+        wantsAcks,
+        schema,
+        settings,
+        log,
+      })
       const mine = (perUser.get(person.userId) ?? 0) + 1
       perUser.set(person.userId, mine)
       ws.on('close', () => {
@@ -148,11 +194,8 @@ export function createRealtime(options: {
       watch.add(connection)
       if (watch.notices() !== noticesBefore) watch.judge(connection)
       if (connection.mayWrite && updateLog.isUnderPressure()) connection.pause('pressure')
-      const { epoch, schema, frozen } = admission
-      connection.sendExtra(
-        helloFrame({ role, mayWrite: connection.mayWrite && frozen === null, epoch, schema, frozen }),
-      )
-      const leave = join(connection, frozen)
+      connection.greet(admission)
+      const leave = join(connection, admission)
       ws.on('close', () => {
         connections.delete(connection)
         watch.remove(connection)
@@ -162,7 +205,7 @@ export function createRealtime(options: {
   }
 
   /** Brings a connection into its room as soon as that is there. Returns what to do when it goes. */
-  function join(connection: Connection, frozen: string | null): () => void {
+  function join(connection: Connection, told: Standing): () => void {
     const hold = rooms.hold(connection.place)
     let leave = hold.release
     hold.room.then(
@@ -171,13 +214,14 @@ export function createRealtime(options: {
         if (room.peers.size >= settings.connectionsPerDocument) {
           return connection.close(CLOSE.crowded, 'too many people in one document')
         }
+        if (room.epoch !== told.epoch) return connection.close(CLOSE.epoch, 'the document is of another epoch')
+        if (room.frozen !== told.frozen) connection.greet(room)
         room.peers.add(connection)
         leave = () => {
-          room.peers.delete(connection)
-          room.presence.leave(connection)
+          room.leave(connection)
           hold.release()
         }
-        connection.start(createReceiver({ pool, rooms, strikes, settings, log, frozen }, connection, room))
+        connection.start(createReceiver({ pool, rooms, strikes, settings, log }, connection, room))
         connection.send(room.presence.everyoneBut(connection))
       },
       (error: unknown) => {
@@ -208,8 +252,9 @@ export function createRealtime(options: {
     clearInterval(keepAlive)
     clearInterval(ping)
     updateLog.stop()
+    heads.stop()
     rooms.stop()
-    await watch.stop()
+    await Promise.all([watch.stop(), instances.stop()])
     // A connection that hangs has nothing left that anybody waits for.
     await Promise.race([pool.end(), new Promise((resolve) => setTimeout(resolve, 2_000))])
   }
@@ -223,7 +268,12 @@ export function createRealtime(options: {
       if (settings.warmUp) setImmediate(warmUp)
     },
     drain: () => (draining ??= drainOnce()),
-    stats: () => ({ connections: connections.size, ...rooms.stats(), ...updateLog.stats() }),
+    stats: () => ({
+      connections: connections.size,
+      instances: instances.others(),
+      ...rooms.stats(),
+      ...updateLog.stats(),
+    }),
   }
 }
 

@@ -1,6 +1,7 @@
 import type pg from 'pg'
 import type { DocId } from '#shared/ids.ts'
 import { type LogEntry, batchLength, rowsOf, touchesOf } from './batch.ts'
+import { Recent } from './recent.ts'
 import type { RealtimeLog, RealtimeSettings } from './settings.ts'
 
 /** Rows `first` to `last` of a document's log are this process's own and committed; `logRows` and `logBytes` are behind its newest snapshot. */
@@ -20,6 +21,8 @@ export type UpdateLog = {
     commits: number
     rows: number
     failures: number
+    /** Of the latest commits. */
+    commitMs: ReturnType<Recent['percentiles']>
   }
   /** Resolves when the queue is empty or the time is up; says which. */
   drained(deadlineMs: number): Promise<boolean>
@@ -70,6 +73,7 @@ export function createUpdateLog(options: {
   const queue: LogEntry[] = []
   const perDoc = new Map<DocId, number>()
   const totals = { commits: 0, rows: 0, failures: 0 }
+  const commitMs = new Recent(1_000)
   let queuedBytes = 0
   let isRunning = false
   let isStopped = false
@@ -103,6 +107,7 @@ export function createUpdateLog(options: {
       return ++doc.n
     })
     const touches = touchesOf(batch)
+    const startMs = performance.now()
     const result = await pool.query<Grown>({
       name: 'rt-append',
       text: APPEND,
@@ -119,6 +124,7 @@ export function createUpdateLog(options: {
         touches.map((t) => t.userId),
       ],
     })
+    commitMs.add(performance.now() - startMs)
     totals.commits++
     totals.rows += rows.length
     return new Map(result.rows.map((row) => [row.id, row]))
@@ -210,7 +216,13 @@ export function createUpdateLog(options: {
       }),
     queuedFor: (docId) => perDoc.get(docId) ?? 0,
     isUnderPressure: () => pressure,
-    stats: () => ({ queuedEntries: queue.length, queuedBytes, oldestMs: oldestMs(), ...totals }),
+    stats: () => ({
+      queuedEntries: queue.length,
+      queuedBytes,
+      oldestMs: oldestMs(),
+      ...totals,
+      commitMs: commitMs.percentiles(),
+    }),
     drained: (deadlineMs) =>
       new Promise((resolve) => {
         if (queue.length === 0) return resolve(true)

@@ -41,7 +41,7 @@ function readBytes(decoder: decoding.Decoder): Uint8Array {
   const from = decoder.pos
   if (length > decoder.arr.length - from) throw new Error('shorter than it says')
   decoder.pos += length
-  return Uint8Array.from(decoder.arr.subarray(from, from + length))
+  return new Uint8Array(decoder.arr.subarray(from, from + length))
 }
 
 function sync(step: number, body: Uint8Array): Uint8Array {

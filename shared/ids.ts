@@ -13,6 +13,7 @@ export const uploadIdSchema = uuid().pipe(z.string().brand<'UploadId'>())
 export const kitItemIdSchema = uuid().pipe(z.string().brand<'KitItemId'>())
 export const commentIdSchema = uuid().pipe(z.string().brand<'CommentId'>())
 export const signOffIdSchema = uuid().pipe(z.string().brand<'SignOffId'>())
+export const versionIdSchema = uuid().pipe(z.string().brand<'VersionId'>())
 export const docIdSchema = uuid().pipe(z.string().brand<'DocId'>())
 
 export const frameIdSchema = uuid().pipe(z.string().brand<'FrameId'>())
@@ -42,6 +43,7 @@ export type UploadId = z.infer<typeof uploadIdSchema>
 export type KitItemId = z.infer<typeof kitItemIdSchema>
 export type CommentId = z.infer<typeof commentIdSchema>
 export type SignOffId = z.infer<typeof signOffIdSchema>
+export type VersionId = z.infer<typeof versionIdSchema>
 export type DocId = z.infer<typeof docIdSchema>
 export type FrameId = z.infer<typeof frameIdSchema>
 export type NoteId = z.infer<typeof noteIdSchema>

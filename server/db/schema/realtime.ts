@@ -1,5 +1,5 @@
 import { bigint, bigserial, index, integer, pgTable, primaryKey, text, uniqueIndex, uuid } from 'drizzle-orm/pg-core'
-import type { DocId, ShootId, UserId } from '#shared/ids.ts'
+import type { DocId, ShootId, UserId, VersionId } from '#shared/ids.ts'
 import { DOCUMENT_KINDS } from '#shared/realtime/documents.ts'
 import { bytea, instant } from '../columns.ts'
 import { shoot } from './shoots.ts'
@@ -91,15 +91,21 @@ export const rtTouch = pgTable(
 )
 
 /** The board as it stood, named; the states are in `rt_snapshot` under kind `version`. */
-export const keptVersion = pgTable('kept_version', {
-  id: uuid('id').primaryKey(),
-  shootId: uuid('shoot_id')
-    .$type<ShootId>()
-    .notNull()
-    .references(() => shoot.id, { onDelete: 'cascade' }),
-  name: text('name').notNull(),
-  userId: text('user_id').$type<UserId>().notNull(),
-  at: instant('at').notNull().defaultNow(),
-  boardSeq: bigint('board_seq', { mode: 'number' }).notNull(),
-  planSeq: bigint('plan_seq', { mode: 'number' }).notNull(),
-})
+export const keptVersion = pgTable(
+  'kept_version',
+  {
+    id: uuid('id').$type<VersionId>().primaryKey(),
+    shootId: uuid('shoot_id')
+      .$type<ShootId>()
+      .notNull()
+      .references(() => shoot.id, { onDelete: 'cascade' }),
+    name: text('name').notNull(),
+    userId: text('user_id').$type<UserId>().notNull(),
+    at: instant('at').notNull().defaultNow(),
+    boardSeq: bigint('board_seq', { mode: 'number' }).notNull(),
+    planSeq: bigint('plan_seq', { mode: 'number' }).notNull(),
+    /** Name of the version that was taken back right after this one was kept by itself; null when a person kept it. */
+    takingBack: text('taking_back'),
+  },
+  (table) => [index('kept_version_shoot').on(table.shootId, table.at)],
+)

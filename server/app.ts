@@ -18,7 +18,9 @@ import { authRoute } from '#server/http/auth-routes.ts'
 import { errorHandler, nothingHere } from '#server/http/errors.ts'
 import { HTTP_LIMITS, type HttpLimits } from '#server/http/limits.ts'
 import { logRequests } from '#server/http/log-requests.ts'
+import { type MetricsSource, metrics } from '#server/http/metrics.ts'
 import { pages } from '#server/http/pages.ts'
+import { createProbe } from '#server/http/probe.ts'
 import { withCtx } from '#server/http/request-ctx.ts'
 import { requireOwnOrigin, securityHeaders } from '#server/http/security.ts'
 
@@ -38,7 +40,12 @@ export type AppDeps = {
   /** False once the process is going down: balancers look elsewhere. */
   isServing?: () => boolean
   limits?: Partial<HttpLimits>
+  /** What the operator's page shows beside the database's own counts; without it there is no such page. */
+  metrics?: MetricsSource
 }
+
+/** A balancer is answered within this, whatever the database does. */
+const READY_LIMIT_MS = 2_000
 
 /** The whole HTTP side over its dependencies; never listens. */
 export function createApp(deps: AppDeps): Express {
@@ -51,15 +58,12 @@ export function createApp(deps: AppDeps): Express {
   app.use(logRequests(log), securityHeaders(publicUrl.startsWith('https:')))
 
   app.get('/healthz', (_req, res) => void res.json({ ok: true }))
+  const askDatabase = createProbe(() => db.execute(sql`select 1`), READY_LIMIT_MS)
   app.get('/readyz', async (_req, res) => {
-    const ok =
-      (deps.isServing?.() ?? true) &&
-      (await db.execute(sql`select 1`).then(
-        () => true,
-        () => false,
-      ))
+    const ok = (deps.isServing?.() ?? true) && (await askDatabase()) !== undefined
     res.status(ok ? 200 : 503).json({ ok })
   })
+  if (deps.metrics) app.get('/metrics', metrics({ ...deps.metrics, db, now }))
 
   const api = Router()
   api.use((_req, res, next) => {

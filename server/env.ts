@@ -17,6 +17,8 @@ export type Env = {
   demo: boolean
   /** The private cluster of `npm start`, not a database somebody else looks after. */
   embedded: boolean
+  /** Lets an operator look at /metrics from elsewhere than this machine. */
+  metricsToken?: string
   stripe?: { secretKey: string; webhookSecret: string; host?: string }
 }
 
@@ -46,6 +48,7 @@ const variables = z.object({
   TRUSTED_ORIGINS: optionalText.transform((value) => value?.split(/[\s,]+/) ?? []).pipe(z.array(origin)),
   SMTP_URL: optionalText.pipe(smtpUrl.optional()),
   BETTER_AUTH_SECRET: z.string().min(32, 'must be at least 32 characters long'),
+  METRICS_TOKEN: optionalText.pipe(z.string().min(16, 'must be at least 16 characters long').optional()),
   LOG_LEVEL: z.enum(logLevels).default('info'),
   NODE_ENV: optionalText,
   SCONCE_DEMO: flag,
@@ -79,6 +82,7 @@ export function parseEnv(source: Record<string, string | undefined>): Env {
     demo: value.SCONCE_DEMO,
     embedded: value.SCONCE_EMBEDDED,
     ...(value.SMTP_URL === undefined ? {} : { smtpUrl: value.SMTP_URL }),
+    ...(value.METRICS_TOKEN === undefined ? {} : { metricsToken: value.METRICS_TOKEN }),
     ...(value.STRIPE_SECRET_KEY === undefined || value.STRIPE_WEBHOOK_SECRET === undefined
       ? {}
       : {

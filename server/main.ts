@@ -1,6 +1,8 @@
+import { readFileSync } from 'node:fs'
 import { createServer } from 'node:http'
 import { fileURLToPath } from 'node:url'
 import { pino } from 'pino'
+import { z } from 'zod'
 import { createLetterCatcher } from '#server/adapters/letter-catcher.ts'
 import { createMailer } from '#server/adapters/mail.ts'
 import { createApp } from '#server/app.ts'
@@ -14,6 +16,7 @@ import { parseEnv } from '#server/env.ts'
 import { startMailWorker } from '#server/features/mail/mail-worker.ts'
 import { HTTP_LIMITS } from '#server/http/limits.ts'
 import { loggable } from '#server/http/loggable.ts'
+import { watchLoopDelay } from '#server/http/loop-delay.ts'
 import { createRealtime } from '#server/realtime/server.ts'
 import { isLoopback } from '#server/start/ports.mjs'
 
@@ -65,6 +68,10 @@ if (smtpUrl === undefined)
 const mailer = smtpUrl === undefined ? undefined : createMailer(smtpUrl, publicUrl)
 const mailWorker = mailer && startMailWorker({ db, mailer, now, log, keepsText: letters })
 
+const { version } = z
+  .object({ version: z.string() })
+  .parse(JSON.parse(readFileSync(new URL('../package.json', import.meta.url), 'utf8')))
+
 let isServing = true
 const clientDir = fileURLToPath(new URL('../dist/client', import.meta.url))
 const app = createApp({
@@ -78,6 +85,12 @@ const app = createApp({
   clientDir,
   letters,
   isServing: () => isServing,
+  metrics: {
+    stats: () => ({ compactions: 0, failedChecks: 0, ...realtime.stats() }),
+    loopDelay: watchLoopDelay(),
+    version,
+    ...(env.metricsToken === undefined ? {} : { token: env.metricsToken }),
+  },
 })
 const server = createServer(app)
 // Longer than a balancer keeps its own, so that it never sends into a connection that is just closing.

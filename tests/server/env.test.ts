@@ -43,6 +43,12 @@ describe('parseEnv', () => {
     for (const content of ['geheim', '70000', 'too short']) expect(message).not.toContain(content)
   })
 
+  it('takes a token for the operator’s page that is too long to be guessed', () => {
+    expect(parseEnv(enough)).not.toHaveProperty('metricsToken')
+    expect(parseEnv({ ...enough, METRICS_TOKEN: 'lamps and ladders' }).metricsToken).toBe('lamps and ladders')
+    expect(messageOf(() => parseEnv({ ...enough, METRICS_TOKEN: 'short' }))).toContain('METRICS_TOKEN')
+  })
+
   it('offers payments only with both of their secrets', () => {
     expect(parseEnv({ ...enough, STRIPE_SECRET_KEY: 'a' })).not.toHaveProperty('stripe')
     const both = { STRIPE_SECRET_KEY: 'a', STRIPE_WEBHOOK_SECRET: 'b' }

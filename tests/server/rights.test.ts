@@ -82,6 +82,8 @@ const me = (world: FullWorld, who: Who) => world.who[who]?.userId ?? 'nobody'
 const TABLE: readonly Row[] = [
   { route: 'GET /healthz', expected: all(200), path: () => '/healthz' },
   { route: 'GET /readyz', expected: all(200), path: () => '/readyz' },
+  // On this machine; from elsewhere it is not there for anybody (tests/server/http/metrics.test.ts).
+  { route: 'GET /metrics', expected: all(200), path: () => '/metrics' },
   { route: 'GET /{*any}', expected: all(200), path: () => '/shoots/x/board' },
   // What of the sign-in library is open has its own test; here, that an unlisted part of it is not.
   { route: 'ALL /api/auth/*path', expected: all(404), path: () => '/api/auth/list-accounts' },

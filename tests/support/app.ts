@@ -9,6 +9,7 @@ import { type AppDeps, createApp } from '#server/app.ts'
 import { makeAuth } from '#server/auth/auth.ts'
 import type { Actor, Ctx } from '#server/context.ts'
 import { type Db, connectDatabase } from '#server/db/client.ts'
+import type { RealtimeFigures } from '#server/http/figures.ts'
 import { type Client, TEST_ORIGIN, clientFor } from '#tests/support/client.ts'
 import { type Clock, clockAt } from '#tests/support/clock.ts'
 import { createTestDatabase } from '#tests/support/database.ts'
@@ -30,6 +31,24 @@ export type TestApp = {
 }
 
 const GENEROUS = 100_000
+
+/** Of a realtime server where nothing has happened yet. */
+export const quietFigures: RealtimeFigures = {
+  rooms: 0,
+  connections: 0,
+  lagging: 0,
+  instances: 0,
+  flagged: 0,
+  queuedEntries: 0,
+  queuedBytes: 0,
+  oldestMs: 0,
+  commits: 0,
+  rows: 0,
+  failures: 0,
+  commitMs: { p50: 0, p95: 0, p99: 0, max: 0 },
+  compactions: 0,
+  failedChecks: 0,
+}
 
 /** The real app on a database and a port of its own. The clock stands at the given time; sessions follow the real one. */
 export async function startTestApp(
@@ -57,6 +76,7 @@ export async function startTestApp(
     log: pino({ level: 'silent' }),
     clientDir,
     letters: true,
+    metrics: { stats: () => quietFigures, loopDelay: () => quietFigures.commitMs, version: '0.0.0' },
     limits: { invitationsPerMin: GENEROUS, uploadsPerMin: GENEROUS },
     ...more,
   })

@@ -1,8 +1,17 @@
+import { once } from 'node:events'
 import { request as httpRequest } from 'node:http'
+import { type AddressInfo, createServer } from 'node:net'
+import { drizzle } from 'drizzle-orm/node-postgres'
+import pg from 'pg'
 import { afterAll, beforeAll, describe, expect, it } from 'vitest'
 import { errorEnvelopeSchema } from '#shared/api/errors.ts'
+import { connectDatabase } from '#server/db/client.ts'
+import * as schema from '#server/db/schema/index.ts'
+import { startProxy } from '#tests/realtime/support/proxy.ts'
+import { until } from '#tests/realtime/support/client.ts'
 import { type TestApp, startTestApp } from '#tests/support/app.ts'
 import { type Client, clientFor } from '#tests/support/client.ts'
+import { createTestDatabase } from '#tests/support/database.ts'
 import { type World, makeWorld } from '#tests/support/factories.ts'
 
 let app: TestApp
@@ -251,6 +260,46 @@ describe('the health of the process', () => {
       expect((await client.get('/readyz')).status).toBe(503)
     } finally {
       await going.close()
+    }
+  })
+})
+
+describe('readiness', () => {
+  it('is gone while the database is away and back with it', async () => {
+    const database = await createTestDatabase()
+    const way = await startProxy(database.url)
+    const { db, pool } = connectDatabase(way.url, () => undefined)
+    const cut = await startTestApp({ db })
+    try {
+      const client = clientFor(cut.url)
+      expect((await client.get('/readyz')).status).toBe(200)
+      way.cut()
+      const answer = await client.get('/readyz')
+      expect([answer.status, answer.body]).toEqual([503, { ok: false }])
+      expect((await client.get('/healthz')).status).toBe(200)
+      way.mend()
+      await until(async () => (await client.get('/readyz')).status === 200)
+    } finally {
+      await cut.close()
+      await pool.end()
+      await way.close()
+      await database.drop()
+    }
+  })
+
+  it('does not wait for a database that takes connections and says nothing', async () => {
+    const silent = createServer((socket) => socket.on('error', () => undefined))
+    await once(silent.listen(0, '127.0.0.1'), 'listening')
+    const { port } = silent.address() as AddressInfo
+    // Waits for ever by itself: without a bound of the route's own there is no answer.
+    const pool = new pg.Pool({ connectionString: `postgres://nobody@127.0.0.1:${port}/none`, max: 1 })
+    pool.on('error', () => undefined)
+    const mute = await startTestApp({ db: drizzle(pool, { schema }) })
+    try {
+      expect((await clientFor(mute.url).get('/readyz')).status).toBe(503)
+    } finally {
+      await mute.close()
+      silent.close()
     }
   })
 })

@@ -36,7 +36,9 @@ export type RoomOutside = {
 /** `nothing new`: known already. `incomplete`: part of it had to be left out. `broken`: the document cannot be trusted. */
 export type Taken = 'taken' | 'nothing new' | 'incomplete' | 'broken'
 
+/** A document is weighed when its size by estimate passes the limit: again after so long, or so much more. */
 const WEIGH_AGAIN_MS = 5_000
+const WEIGH_AGAIN_BYTES = 1024 * 1024
 
 /** One document in memory with the people in it. Everything that changes it goes through here. */
 export class Room {
@@ -59,7 +61,7 @@ export class Room {
   readonly #touched = new Set<string>()
   #reading: Promise<void> | null = null
   #readingNext: Promise<void> | null = null
-  #weighedAtMs = 0
+  #weighed = { atMs: 0, bytes: 0 }
   #growth = { structs: 0, sinceMs: 0 }
 
   constructor(place: Place, loaded: Loaded, { log, pool, settings, instances, onBad }: RoomOutside) {
@@ -158,9 +160,10 @@ export class Room {
   /** Whether so many bytes more fit. Weighs the document anew, now and then, before it says no. */
   hasRoomFor(bytes: number, limitBytes: number, nowMs: number): boolean {
     if (this.sizeBytes + bytes <= limitBytes) return true
-    if (nowMs - this.#weighedAtMs > WEIGH_AGAIN_MS) {
-      this.#weighedAtMs = nowMs
+    const { atMs, bytes: weighedBytes } = this.#weighed
+    if (nowMs - atMs > WEIGH_AGAIN_MS || this.sizeBytes - weighedBytes > WEIGH_AGAIN_BYTES) {
       this.sizeBytes = Y.encodeStateAsUpdate(this.doc).length
+      this.#weighed = { atMs: nowMs, bytes: this.sizeBytes }
     }
     return this.sizeBytes + bytes <= limitBytes
   }

@@ -1,16 +1,25 @@
 import { type ChildProcess, spawn } from 'node:child_process'
 import { once } from 'node:events'
 import { fileURLToPath } from 'node:url'
+import type { RealtimeSettings } from '#server/realtime/settings.ts'
 
 export type ServerChild = { url: string; pid: number; kill(signal: NodeJS.Signals): Promise<void> }
 
 const entry = fileURLToPath(new URL('./server-process.ts', import.meta.url))
 
 /** Starts `server-process.ts` on the database at this address. */
-export async function startServerChild(databaseUrl: string): Promise<ServerChild> {
+export async function startServerChild(
+  databaseUrl: string,
+  limits: Partial<RealtimeSettings> = {},
+): Promise<ServerChild> {
   const child = spawn(process.execPath, ['--import', 'tsx', entry], {
     cwd: fileURLToPath(new URL('../../..', import.meta.url)),
-    env: { PATH: process.env['PATH'], HOME: process.env['HOME'], DATABASE_URL: databaseUrl },
+    env: {
+      PATH: process.env['PATH'],
+      HOME: process.env['HOME'],
+      DATABASE_URL: databaseUrl,
+      REALTIME_LIMITS: JSON.stringify(limits),
+    },
     stdio: ['ignore', 'pipe', 'inherit'],
   })
   const port = await portOf(child)

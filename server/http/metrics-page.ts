@@ -13,18 +13,20 @@ h1{font:600 1.6875rem/1.15 var(--display);margin:0 0 8px}
 h2{font:600 1.0625rem/1.3 var(--display);margin:0;padding:12px 16px;border-bottom:1px solid var(--hair)}
 p{margin:0 0 20px;color:var(--soft)}
 .sum{color:var(--ink);margin-bottom:4px}
-.groups{display:grid;grid-template-columns:repeat(2,minmax(0,1fr));gap:16px;align-items:start}
-section{background:var(--paper);border:1px solid var(--hair);border-radius:3px}
+.groups{columns:2;column-gap:16px}
+section{break-inside:avoid;margin-bottom:16px;background:var(--paper);border:1px solid var(--hair);border-radius:3px}
 dl{margin:0}
-dl div{display:flex;flex-wrap:wrap;justify-content:space-between;gap:0 16px;padding:8px 16px}
+dl div{display:flex;justify-content:space-between;gap:16px;padding:8px 16px}
 dl div+div{border-top:1px solid var(--hair-soft)}
-dd{margin:0 0 0 auto;text-align:right;font-weight:600}
+dt{flex:1 0 45%}
+dd{margin:0;text-align:right;font-weight:600}
 dd small{font-size:.84375rem;font-weight:400;color:var(--soft);display:block}
+span{white-space:nowrap}
 .look dt,.look dd{color:var(--glow-ink);font-weight:600}
 .lamp{display:inline-block;width:18px;height:10px;margin-right:8px;border:1.5px solid var(--glow);border-radius:10px 10px 0 0;
 background:linear-gradient(90deg,var(--glow-lit) 50%,transparent 50%)}
 .lamp.lit{background:var(--glow-lit);box-shadow:0 -3px 7px 1px rgb(242 165 74/.75)}
-@media(max-width:767.98px){body{font-size:.9375rem}header{padding:12px 16px}main{padding:20px 16px 32px}.groups{grid-template-columns:minmax(0,1fr)}}
+@media(max-width:767.98px){body{font-size:.9375rem}header{padding:12px 16px}main{padding:20px 16px 32px}.groups{columns:1}}
 `
 
 export type PageOptions = { version: string; at: Date }
@@ -75,8 +77,9 @@ function row(figure: Figure): string {
 function shown(figure: Figure): string {
   if (figure.kind === 'summary') {
     const { p50, p95, p99, max } = figure.value
+    if (max === 0) return 'nothing measured yet'
     const [half, most, nearlyAll, longest] = [p50, p95, p99, max].map((ms) => duration(ms / 1000))
-    return `${half}<small>95% within ${most}, 99% within ${nearlyAll}, longest ${longest}</small>`
+    return `half within ${half}<small><span>95% within ${most},</span> <span>99% within ${nearlyAll},</span> <span>longest ${longest}</span></small>`
   }
   if (figure.value === null) return 'not known'
   if (figure.name === 'database_up') return figure.value === 1 ? 'yes' : 'no'

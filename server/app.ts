@@ -14,6 +14,7 @@ import { shootsRoutes } from '#server/features/shoots/routes.ts'
 import { signOffRoutes } from '#server/features/sign-off/routes.ts'
 import { studiosRoutes } from '#server/features/studios/routes.ts'
 import { uploadsRoutes } from '#server/features/uploads/routes.ts'
+import { versionsRoutes } from '#server/features/versions/routes.ts'
 import { authRoute } from '#server/http/auth-routes.ts'
 import { errorHandler, nothingHere } from '#server/http/errors.ts'
 import { HTTP_LIMITS, type HttpLimits } from '#server/http/limits.ts'
@@ -81,7 +82,7 @@ export function createApp(deps: AppDeps): Express {
     shootsRoutes(),
     kitRoutes(),
   )
-  api.use(commentsRoutes(), privateRoutes(), uploadsRoutes(uploadsPerMin), signOffRoutes())
+  api.use(commentsRoutes(), privateRoutes(), uploadsRoutes(uploadsPerMin), signOffRoutes(), versionsRoutes())
   if (letters) api.use(mailRoutes())
   api.use(nothingHere)
   app.use('/api', api)

@@ -56,6 +56,7 @@ const inShoot = (may: readonly ShootRole[], ok = 200): Expected => {
 const anyRole: readonly ShootRole[] = ['photographer', 'stylist', 'client', 'crew']
 const lead: readonly ShootRole[] = ['photographer']
 const planners: readonly ShootRole[] = ['photographer', 'stylist']
+const pinners: readonly ShootRole[] = ['photographer', 'stylist', 'client']
 
 /** The world's photographer owns the studio; a role in a shoot gives nothing in it. */
 const inStudio = (owner: number, member: number): Expected => ({
@@ -297,6 +298,36 @@ const TABLE: readonly Row[] = [
     expected: inShoot(['client']),
     path: (w) => shoot(`/looks/${w.lookId}/sign-offs`)(w),
     body: ({ fingerprint }) => ({ answer: 'signed off', fingerprint }),
+  },
+
+  { route: 'GET /api/shoots/:shootId/versions', expected: inShoot(anyRole), path: shoot('/versions') },
+  {
+    route: 'POST /api/shoots/:shootId/versions',
+    expected: inShoot(pinners),
+    path: shoot('/versions'),
+    body: () => ({ name: 'Before the harbour' }),
+  },
+  {
+    route: 'GET /api/shoots/:shootId/versions/:versionId',
+    expected: inShoot(anyRole),
+    path: (w) => shoot(`/versions/${w.versionId}`)(w),
+  },
+  {
+    route: 'PATCH /api/shoots/:shootId/versions/:versionId',
+    expected: inShoot(pinners),
+    path: (w) => shoot(`/versions/${w.versionId}`)(w),
+    body: () => ({ name: 'Before the quay' }),
+  },
+  {
+    route: 'DELETE /api/shoots/:shootId/versions/:versionId',
+    expected: inShoot(pinners),
+    path: (w) => shoot(`/versions/${w.versionId}`)(w),
+    isFresh: true,
+  },
+  {
+    route: 'POST /api/shoots/:shootId/versions/:versionId/take-back',
+    expected: inShoot(pinners),
+    path: (w) => shoot(`/versions/${w.versionId}/take-back`)(w),
   },
 ]
 

@@ -13,6 +13,7 @@ import { addDeliverable } from '#server/features/shoots/add-deliverable.ts'
 import { addRoom } from '#server/features/shoots/add-room.ts'
 import { listSignOffs } from '#server/features/sign-off/list-sign-offs.ts'
 import { inviteToStudio } from '#server/features/studios/invite-to-studio.ts'
+import { keepVersion } from '#server/features/versions/keep-version.ts'
 import { deliverableInputSchema, roomInputSchema } from '#shared/domain/shoots/schema.ts'
 import type { TestApp } from '#tests/support/app.ts'
 import { type World, makeWorld } from '#tests/support/factories.ts'
@@ -50,6 +51,7 @@ export type FullWorld = World & {
   kitId: string
   commentIds: Readonly<Record<'photographer' | 'stylist' | 'client' | 'crew', string>>
   uploadId: string
+  versionId: string
   studioInvitationId: string
 }
 
@@ -105,6 +107,7 @@ export async function makeFullWorld(app: TestApp): Promise<FullWorld> {
     await app.clientOf(photographer)
   ).send('PUT', `/api/shoots/${shootId}/uploads/${uploadId}`, await pictureForm())
   if (stored.status !== 200) throw new Error(`The picture was not taken: ${stored.text}`)
+  const { versions } = await keepVersion(ctx, { shootId, name: 'First idea' })
   const { current } = await listSignOffs(ctx, shootId)
   return {
     ...world,
@@ -128,6 +131,7 @@ export async function makeFullWorld(app: TestApp): Promise<FullWorld> {
     kitId: kit[0]?.id ?? '',
     commentIds,
     uploadId,
+    versionId: versions[0]?.id ?? '',
     studioInvitationId: invitations[0]?.id ?? '',
   }
 }

@@ -1,0 +1,53 @@
+import { parseArgs } from 'node:util'
+import { runScenarios } from './realtime/run.ts'
+import { LOAD, loadScenario } from './realtime/scenarios/load.ts'
+import type { Scenario } from './realtime/scenarios/scenario.ts'
+import { PEERS } from './realtime/targets/peers.ts'
+
+/**
+ * Many people at once, and what else a realtime server has to stand, for Sconce and (`--peers`) for other servers of the same
+ * protocol on the same machine and database.
+ *
+ *   npm run bench -- load                                    10×1, 50×1, 200×1 and 200×40 clients × documents
+ *   npm run bench -- load --peers --scenario all             everything, compared
+ *   npm run bench -- load --targets sconce,hocuspocus-4      chosen servers
+ *   npm run bench -- load --clients 100 --docs 4 --rate 10 --cursors 5 --seconds 30
+ *   npm run bench -- load --scenario load-200x1 --profile /tmp/server.cpuprofile
+ */
+const { values } = parseArgs({
+  options: {
+    scenario: { type: 'string', default: 'load' },
+    targets: { type: 'string', default: 'sconce' },
+    peers: { type: 'boolean', default: false },
+    clients: { type: 'string' },
+    docs: { type: 'string' },
+    rate: { type: 'string', default: String(LOAD.rate) },
+    cursors: { type: 'string', default: String(LOAD.pointerRate) },
+    seconds: { type: 'string', default: String(LOAD.seconds) },
+    profile: { type: 'string' },
+  },
+})
+const options = {
+  rate: Number(values.rate),
+  pointerRate: Number(values.cursors),
+  seconds: Number(values.seconds),
+  profile: values.profile ?? null,
+}
+const sizes =
+  values.clients === undefined && values.docs === undefined
+    ? ([
+        [10, 1],
+        [50, 1],
+        [200, 1],
+        [200, 40],
+      ] as const)
+    : ([[Number(values.clients ?? LOAD.clients), Number(values.docs ?? LOAD.documents)]] as const)
+
+const all: readonly Scenario[] = sizes.map(([clients, documents]) => loadScenario({ ...options, clients, documents }))
+const chosen = all.filter(({ name }) =>
+  values.scenario.split(',').some((word) => word === 'all' || name.startsWith(word)),
+)
+if (chosen.length === 0) throw new Error(`scenarios: all, ${all.map(({ name }) => name).join(', ')}`)
+
+const targets = values.peers ? ['sconce', ...PEERS.map(({ name }) => name)] : values.targets.split(',')
+process.exit((await runScenarios(chosen, targets)) ? 0 : 1)

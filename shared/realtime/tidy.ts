@@ -120,7 +120,8 @@ function memberLists(doc: Y.Doc, kind: DocumentKind): Entry[][] {
 }
 
 function collectionsOf(kind: DocumentKind): readonly Collection[] {
-  return Object.values(COLLECTIONS[kind])
+  const collections: readonly Collection[] = Object.values(COLLECTIONS[kind])
+  return collections
 }
 
 function itemsOf(doc: Y.Doc, c: Collection): [id: string, item: Y.Map<unknown>][] {

@@ -85,8 +85,9 @@ export function createInstances(options: {
   pool.on('error', () => undefined)
 
   const heads = new Map<DocId, number>()
-  const presence = new Map<DocId, { entries: Map<number, PresenceElsewhere>; dueMs: number }>()
-  const saidPresenceAtMs = new Map<DocId, number>()
+  /** What is to be said of each document as soon as it may be. */
+  const presence = new Map<DocId, Map<number, PresenceElsewhere>>()
+  const presenceSaidAtMs = new Map<DocId, number>()
   let waiting: Outgoing[] = []
   let isSpeaking = false
   let isListening = false
@@ -98,12 +99,11 @@ export function createInstances(options: {
   }
 
   function speak(): void {
-    if (isSpeaking || isStopped) return
-    isSpeaking = true
-    void speakOn().finally(() => (isSpeaking = false))
+    if (!isSpeaking && !isStopped) void speakOn()
   }
 
   async function speakOn(): Promise<void> {
+    isSpeaking = true
     for (let messages = gather(); messages.length > 0 && !isStopped; messages = gather()) {
       const payloads = messages.map((message) => JSON.stringify({ from: me, ...message }))
       const fitting = payloads.filter((payload) => Buffer.byteLength(payload) <= MAX_PAYLOAD_BYTES)
@@ -121,6 +121,8 @@ export function createInstances(options: {
         await pause(AFTER_FAILURE_MS)
       }
     }
+    // In the same turn as the last look at what there is to say.
+    isSpeaking = false
   }
 
   /** Takes what is to be said now. */
@@ -132,17 +134,17 @@ export function createInstances(options: {
     for (let i = 0; i < grown.length; i += HEADS_PER_MESSAGE) {
       messages.push({ kind: 'log', heads: grown.slice(i, i + HEADS_PER_MESSAGE) })
     }
-    const nowMs = Date.now()
-    for (const [docId, { entries, dueMs }] of presence) {
-      if (dueMs > nowMs) continue
-      presence.delete(docId)
-      saidPresenceAtMs.set(docId, nowMs)
-      messages.push(...presenceMessages(docId, [...entries.values()]))
-    }
-    for (const [docId, atMs] of saidPresenceAtMs) {
-      if (nowMs - atMs > settings.presenceAcrossMs) saidPresenceAtMs.delete(docId)
-    }
     return messages
+  }
+
+  function sayPresence(docId: DocId, entries: ReadonlyMap<number, PresenceElsewhere>): void {
+    presence.delete(docId)
+    const nowMs = Date.now()
+    for (const [id, atMs] of presenceSaidAtMs) {
+      if (nowMs - atMs > settings.presenceAcrossMs) presenceSaidAtMs.delete(id)
+    }
+    presenceSaidAtMs.set(docId, nowMs)
+    for (const message of presenceMessages(docId, [...entries.values()])) say(message)
   }
 
   function onPayload(payload: string): void {
@@ -208,14 +210,13 @@ export function createInstances(options: {
     },
     showPresence: (docId, entries) => {
       if (heardAtMs.size === 0 || entries.length === 0) return
-      const nowMs = Date.now()
-      const dueMs = Math.max(nowMs, (saidPresenceAtMs.get(docId) ?? 0) + settings.presenceAcrossMs)
       const due = presence.get(docId)
-      const told = due?.entries ?? new Map<number, PresenceElsewhere>()
+      const told = due ?? new Map<number, PresenceElsewhere>()
       for (const entry of entries) told.set(entry.clientId, entry)
       if (due) return
-      presence.set(docId, { entries: told, dueMs })
-      setTimeout(speak, dueMs - nowMs)
+      presence.set(docId, told)
+      const sinceMs = Date.now() - (presenceSaidAtMs.get(docId) ?? 0)
+      setTimeout(() => sayPresence(docId, told), Math.max(0, settings.presenceAcrossMs - sinceMs)).unref()
     },
     askPresence: (docId) => {
       if (heardAtMs.size > 0) say({ kind: 'who', docId })

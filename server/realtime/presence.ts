@@ -2,7 +2,7 @@ import { colourOf, initialsOf } from '#shared/domain/people/face.ts'
 import type { Presence } from '#shared/realtime/protocol.ts'
 import type { PresenceElsewhere } from './instances.ts'
 import type { RealtimeSettings } from './settings.ts'
-import { type PresenceEntry, presenceFrame, readPresence } from './wire.ts'
+import { type PresenceEntry, presenceFrame, presenceFrames, readPresence } from './wire.ts'
 
 /** Who a connection is, as far as presence goes. */
 export type PresencePeer = {
@@ -135,15 +135,22 @@ export class RoomPresence {
     const changed = [...this.#changed.values()]
     this.#changed.clear()
     this.#tellElsewhere(changed.filter((entry) => entry.peer !== null))
-    const everything = presenceFrame(changed)
+    const frames = presenceFrames(changed)
+    const indexOf = new Map(changed.map((entry, index) => [entry.clientId, index]))
+    let told = 0
     for (const peer of this.#peers()) {
-      const own = this.#idOf.get(peer)
-      const others = changed.some((entry) => entry.clientId === own)
-        ? changed.filter((entry) => entry.clientId !== own)
-        : changed
-      if (others.length > 0) peer.send(others === changed ? everything : presenceFrame(others))
+      const own = indexOf.get(this.#idOf.get(peer) ?? -1)
+      if (own === undefined) peer.send(frames.all)
+      else if (changed.length > 1) peer.send(frames.allBut(own))
+      told++
     }
-    this.#timer = setTimeout(() => this.#flush(), this.#settings.presenceFlushMs)
+    // Everybody pointing for everybody grows with the square: in a crowd pointers move in larger steps.
+    const { presenceFlushMs, presenceSlowestMs, presencePerFlush } = this.#settings
+    const waitMs = Math.min(
+      presenceSlowestMs,
+      presenceFlushMs * Math.max(1, (changed.length * told) / presencePerFlush),
+    )
+    this.#timer = setTimeout(() => this.#flush(), waitMs)
   }
 
   /** Takes a connection's person off everybody's screen. */

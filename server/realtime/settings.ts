@@ -51,7 +51,10 @@ export const DEFAULT_SETTINGS = {
   presenceAcrossMs: 100,
 
   idleUnloadMs: 60_000,
+  /** Between two messages about presence in a room; more when one tells more people of more people than `presencePerFlush`. */
   presenceFlushMs: 50,
+  presencePerFlush: 1_000,
+  presenceSlowestMs: 500,
   keepAliveMs: 15_000,
   pingMs: 25_000,
   recheckMs: 60_000,

@@ -90,17 +90,42 @@ function jsonFrame(type: number, value: unknown): Uint8Array {
 export type PresenceEntry = { clientId: number; clock: number; state: string }
 
 export function presenceFrame(entries: readonly PresenceEntry[]): Uint8Array {
-  const body = encoding.encode((encoder) => {
-    encoding.writeVarUint(encoder, entries.length)
-    for (const entry of entries) {
-      encoding.writeVarUint(encoder, entry.clientId)
-      encoding.writeVarUint(encoder, entry.clock)
-      encoding.writeVarString(encoder, entry.state)
-    }
-  })
+  return presenceFrames(entries).all
+}
+
+/** The frame with all entries, and those with all but one, made from the same bytes: everybody is told of the others. */
+export function presenceFrames(entries: readonly PresenceEntry[]): {
+  all: Uint8Array
+  allBut(index: number): Uint8Array
+} {
+  const starts: number[] = []
+  const encoder = encoding.createEncoder()
+  for (const entry of entries) {
+    starts.push(encoding.length(encoder))
+    encoding.writeVarUint(encoder, entry.clientId)
+    encoding.writeVarUint(encoder, entry.clock)
+    encoding.writeVarString(encoder, entry.state)
+  }
+  const bytes = encoding.toUint8Array(encoder)
+  return {
+    all: presenceMessage(entries.length, bytes),
+    allBut: (index) => {
+      const start = starts[index] ?? bytes.length
+      const end = starts[index + 1] ?? bytes.length
+      return presenceMessage(entries.length - 1, bytes.subarray(0, start), bytes.subarray(end))
+    },
+  }
+}
+
+function presenceMessage(count: number, ...parts: readonly Uint8Array[]): Uint8Array {
+  const countBytes = encoding.encode((encoder) => encoding.writeVarUint(encoder, count))
   return encoding.encode((encoder) => {
     encoding.writeVarUint(encoder, MESSAGE.presence)
-    encoding.writeVarUint8Array(encoder, body)
+    encoding.writeVarUint(
+      encoder,
+      parts.reduce((sum, part) => sum + part.length, countBytes.length),
+    )
+    for (const part of [countBytes, ...parts]) encoding.writeUint8Array(encoder, part)
   })
 }
 

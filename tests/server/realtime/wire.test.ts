@@ -1,6 +1,9 @@
 import { describe, expect, it } from 'vitest'
+import { Awareness, applyAwarenessUpdate } from 'y-protocols/awareness'
+import * as Y from 'yjs'
 import {
   presenceFrame,
+  presenceFrames,
   readMessage,
   readPresence,
   refusedFrame,
@@ -35,6 +38,31 @@ describe('frames', () => {
     expect([...refusedFrame(1, 'full')]).toEqual([101, 1, 4, 102, 117, 108, 108])
     // What keeps y-websocket from closing itself.
     expect([...presenceFrame([])]).toEqual([1, 1, 0])
+  })
+})
+
+describe('presenceFrames', () => {
+  const entries = [1, 300, 70_000].map((clientId, i) => ({
+    clientId,
+    clock: i * 200,
+    state: `{"at":"${'é'.repeat(i * 100)}"}`,
+  }))
+  /** What the library that browsers use makes of a frame. */
+  function heard(frame: Uint8Array): [number, unknown][] {
+    const message = readMessage(frame)
+    if (message.kind !== 'presence') return []
+    const awareness = new Awareness(new Y.Doc())
+    awareness.setLocalState(null)
+    applyAwarenessUpdate(awareness, message.body, 'test')
+    awareness.destroy()
+    return [...awareness.getStates()]
+  }
+
+  it('hold all, or all but one', () => {
+    const states = entries.map(({ clientId, state }) => [clientId, JSON.parse(state)])
+    const frames = presenceFrames(entries.map((entry) => ({ ...entry, clock: entry.clock + 1 })))
+    expect(heard(frames.all)).toEqual(states)
+    for (const index of [0, 1, 2]) expect(heard(frames.allBut(index))).toEqual(states.filter((_, i) => i !== index))
   })
 })
 

@@ -1,5 +1,10 @@
 import { parseArgs } from 'node:util'
 import { runScenarios } from './realtime/run.ts'
+import { coldScenario } from './realtime/scenarios/cold.ts'
+import { databaseAway } from './realtime/scenarios/database-away.ts'
+import { durabilityScenario } from './realtime/scenarios/durability.ts'
+import { hostile } from './realtime/scenarios/hostile.ts'
+import { idleScenario } from './realtime/scenarios/idle.ts'
 import { LOAD, loadScenario } from './realtime/scenarios/load.ts'
 import type { Scenario } from './realtime/scenarios/scenario.ts'
 import { PEERS } from './realtime/targets/peers.ts'
@@ -12,6 +17,7 @@ import { PEERS } from './realtime/targets/peers.ts'
  *   npm run bench -- load --peers --scenario all             everything, compared
  *   npm run bench -- load --targets sconce,hocuspocus-4      chosen servers
  *   npm run bench -- load --clients 100 --docs 4 --rate 10 --cursors 5 --seconds 30
+ *   npm run bench -- load --scenario durability,database-away --rounds 5
  *   npm run bench -- load --scenario load-200x1 --profile /tmp/server.cpuprofile
  */
 const { values } = parseArgs({
@@ -24,6 +30,7 @@ const { values } = parseArgs({
     rate: { type: 'string', default: String(LOAD.rate) },
     cursors: { type: 'string', default: String(LOAD.pointerRate) },
     seconds: { type: 'string', default: String(LOAD.seconds) },
+    rounds: { type: 'string', default: '20' },
     profile: { type: 'string' },
   },
 })
@@ -43,7 +50,15 @@ const sizes =
       ] as const)
     : ([[Number(values.clients ?? LOAD.clients), Number(values.docs ?? LOAD.documents)]] as const)
 
-const all: readonly Scenario[] = sizes.map(([clients, documents]) => loadScenario({ ...options, clients, documents }))
+const all: readonly Scenario[] = [
+  ...sizes.map(([clients, documents]) => loadScenario({ ...options, clients, documents })),
+  coldScenario(1_000),
+  coldScenario(10_000),
+  durabilityScenario(Number(values.rounds)),
+  databaseAway,
+  hostile,
+  idleScenario(60),
+]
 const chosen = all.filter(({ name }) =>
   values.scenario.split(',').some((word) => word === 'all' || name.startsWith(word)),
 )

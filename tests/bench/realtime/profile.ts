@@ -14,6 +14,9 @@ export const profileSchema = z.looseObject({
 })
 export type Profile = z.infer<typeof profileSchema>
 
+/** Waiting, and the profiler's own work when it is asked to stop. */
+const NOT_BUSY = new Set(['(idle)', 'dispatch'])
+
 /** Functions by the time spent in themselves: percent of all that was not idle. */
 export function hottest(profile: Profile, count: number): { where: string; percent: number; ms: number }[] {
   const byId = new Map(profile.nodes.map((node) => [node.id, node.callFrame]))
@@ -21,7 +24,7 @@ export function hottest(profile: Profile, count: number): { where: string; perce
   let totalUs = 0
   profile.samples.forEach((id, i) => {
     const frame = byId.get(id)
-    if (!frame || frame.functionName === '(idle)') return
+    if (!frame || (frame.url === '' && NOT_BUSY.has(frame.functionName))) return
     const file = frame.url.replace(/^.*\/node_modules\//, '').replace(/^.*?\/(?=(server|shared|tests)\/)/, '')
     const where = `${frame.functionName || '(anonymous)'}${file ? ` ${file}:${frame.lineNumber + 1}` : ''}`
     const us = profile.timeDeltas[i] ?? 0

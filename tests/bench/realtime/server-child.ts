@@ -103,7 +103,7 @@ function ask(child: ChildProcess, question: string): Promise<unknown> {
   return new Promise((resolve, reject) => {
     const timer = setTimeout(() => end(reject, new Error(`no answer to "${question}"`)), ANSWER_MS)
     const onMessage = (message: unknown) => {
-      const answered = z.object({ question: z.string(), answer: z.unknown() }).safeParse(message)
+      const answered = z.object({ question: z.string(), answer: z.unknown().optional() }).safeParse(message)
       if (answered.data?.question === question) end(resolve, answered.data.answer)
     }
     const end = <T>(settle: (value: T) => void, value: T) => {

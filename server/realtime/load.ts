@@ -10,6 +10,8 @@ export const LOG_ORIGIN = Object.freeze({ kind: 'log' as const })
 /** Kind of the snapshots that stand for a beginning of the log; kept versions have another. */
 export const COMPACT_KIND = 'compact'
 
+const ROWS_AFTER = 'select seq, user_id, update from rt_update where doc_id = $1 and seq > $2 order by seq'
+
 export type BadPiece = { reason: string; userId: UserId | null; update: Uint8Array }
 export type Loaded = {
   doc: Y.Doc
@@ -21,6 +23,23 @@ export type Loaded = {
   bad: BadPiece[]
 }
 
+/** What the database has of a document, all of it at one moment. */
+export type StoredLog = {
+  epoch: number
+  frozen: string | null
+  /** Number of the last row there is, and of the last one that the newest snapshot stands for. */
+  head: number
+  snapshotSeq: number
+  /** The newest sound snapshot, empty when there is none, and the number of the last row that is in it. */
+  doc: Y.Doc
+  baseSeq: number
+  baseBytes: number
+  /** Snapshots newer than that one, which are unsound. */
+  bad: BadPiece[]
+  /** The rows behind it, in order. */
+  rows: UpdateRow[]
+}
+
 type UpdateRow = { seq: string; user_id: UserId | null; update: Uint8Array }
 
 /**
@@ -29,13 +48,28 @@ type UpdateRow = { seq: string; user_id: UserId | null; update: Uint8Array }
  * left out and reported: a bad row costs its own content, never the document.
  */
 export async function loadDocument(pool: pg.Pool, docId: DocId): Promise<Loaded | undefined> {
+  const log = await readLog(pool, docId)
+  if (!log) return undefined
+  const { doc, epoch, frozen, rows } = log
+  return {
+    doc,
+    epoch,
+    frozen,
+    bad: [...log.bad, ...applyRows(doc, rows)],
+    head: Number(rows.at(-1)?.seq ?? log.baseSeq),
+    sizeBytes: rows.reduce((sum, row) => sum + row.update.length, log.baseBytes),
+  }
+}
+
+/** Reads what `loadDocument` builds from, without building it; undefined when there is no such document. */
+export async function readLog(pool: pg.Pool, docId: DocId): Promise<StoredLog | undefined> {
   const client = await pool.connect()
   let failure: Error | undefined
   try {
     // One view of the database, so that a compaction in between cannot take rows away.
     await client.query('begin isolation level repeatable read read only')
-    const found = await client.query<Pick<Loaded, 'epoch' | 'frozen'>>(
-      'select epoch, frozen from rt_doc where id = $1',
+    const found = await client.query<{ epoch: number; frozen: string | null; head: string; snapshot_seq: string }>(
+      'select epoch, frozen, head, snapshot_seq from rt_doc where id = $1',
       [docId],
     )
     const [row] = found.rows
@@ -43,16 +77,11 @@ export async function loadDocument(pool: pg.Pool, docId: DocId): Promise<Loaded 
       await client.query('commit')
       return undefined
     }
-    const loaded: Loaded = { ...row, ...(await readSnapshot(client, docId)) }
-    const rows = await client.query<UpdateRow>(
-      'select seq, user_id, update from rt_update where doc_id = $1 and seq > $2 order by seq',
-      [docId, loaded.head],
-    )
+    const base = await readBase(client, docId)
+    const { rows } = await client.query<UpdateRow>(ROWS_AFTER, [docId, base.baseSeq])
     await client.query('commit')
-    loaded.bad.push(...applyRows(loaded.doc, rows.rows))
-    loaded.sizeBytes += rows.rows.reduce((sum, row) => sum + row.update.length, 0)
-    loaded.head = Number(rows.rows[rows.rows.length - 1]?.seq ?? loaded.head)
-    return loaded
+    const { epoch, frozen } = row
+    return { epoch, frozen, head: Number(row.head), snapshotSeq: Number(row.snapshot_seq), ...base, rows }
   } catch (error) {
     failure = error instanceof Error ? error : new Error('not loaded')
     throw failure
@@ -61,28 +90,39 @@ export async function loadDocument(pool: pg.Pool, docId: DocId): Promise<Loaded 
   }
 }
 
-async function readSnapshot(client: pg.PoolClient, docId: DocId): Promise<Omit<Loaded, 'epoch' | 'frozen'>> {
-  const snapshots = await client.query<{ seq: string; state: Uint8Array; sha256: Uint8Array }>(
-    'select seq, state, sha256 from rt_snapshot where doc_id = $1 and kind = $2 order by seq desc limit 2',
-    [docId, COMPACT_KIND],
-  )
+type Base = Pick<StoredLog, 'doc' | 'baseSeq' | 'baseBytes' | 'bad'>
+
+/** Goes back over the snapshots to one that is sound. One at a time: each may be as large as a document gets. */
+async function readBase(client: pg.PoolClient, docId: DocId): Promise<Base> {
   const bad: BadPiece[] = []
-  for (const { seq, state, sha256 } of snapshots.rows) {
-    const doc = new Y.Doc()
+  for (let before: string | null = null; ;) {
+    const found: pg.QueryResult<{ seq: string; state: Uint8Array; sha256: Uint8Array }> = await client.query(
+      `select seq, state, sha256 from rt_snapshot where doc_id = $1 and kind = $2 and ($3::bigint is null or seq < $3)
+       order by seq desc limit 1`,
+      [docId, COMPACT_KIND, before],
+    )
+    const [snapshot] = found.rows
+    if (!snapshot) return { doc: new Y.Doc(), baseSeq: 0, baseBytes: 0, bad }
+    const { seq, state, sha256 } = snapshot
     const isWhole = createHash('sha256').update(state).digest().equals(sha256)
-    if (isWhole && take(doc, state)) return { doc, head: Number(seq), sizeBytes: state.length, bad }
+    const doc = isWhole ? documentOf(state) : undefined
+    if (doc) return { doc, baseSeq: Number(seq), baseBytes: state.length, bad }
     bad.push({ reason: `log snapshot ${seq}`, userId: null, update: state })
-    doc.destroy()
+    before = seq
   }
-  return { doc: new Y.Doc(), head: 0, sizeBytes: 0, bad }
+}
+
+/** The document that was encoded, when the guard takes it. */
+export function documentOf(state: Uint8Array): Y.Doc | undefined {
+  const doc = new Y.Doc()
+  if (take(doc, state)) return doc
+  doc.destroy()
+  return undefined
 }
 
 /** Rows of the log behind `head`, in order. */
 export async function rowsAfter(pool: pg.Pool, docId: DocId, head: number): Promise<UpdateRow[]> {
-  const result = await pool.query<UpdateRow>(
-    'select seq, user_id, update from rt_update where doc_id = $1 and seq > $2 order by seq',
-    [docId, head],
-  )
+  const result = await pool.query<UpdateRow>(ROWS_AFTER, [docId, head])
   return result.rows
 }
 

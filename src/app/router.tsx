@@ -60,6 +60,7 @@ const routes: RouteObject[] = [
               { index: true, ...screen(() => import('./routes/shoot-index.tsx')) },
               { path: 'brief', ...screen(() => import('./routes/brief.tsx')) },
               { path: 'board', ...screen(() => import('./routes/board.tsx')) },
+              { path: 'board/versions/:versionId', ...screen(() => import('./routes/board-version.tsx')) },
               { path: 'looks', ...screen(() => import('./routes/looks.tsx')) },
               { path: 'sign-off', ...screen(() => import('./routes/sign-off.tsx')) },
               { path: 'lighting', ...screen(() => import('./routes/lighting.tsx')) },

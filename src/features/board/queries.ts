@@ -1,5 +1,6 @@
 import { queryOptions } from '@tanstack/react-query'
 import { commentsSchema } from '#shared/api/comments.ts'
+import { versionStatesSchema, versionsSchema } from '#shared/api/versions.ts'
 import { type Session, sessionSchema } from '#shared/api/studios.ts'
 import { ApiError, api } from '#src/lib/api.ts'
 
@@ -20,5 +21,18 @@ export const boardQueries = {
     queryOptions({
       queryKey: ['shoots', shootId, 'comments'],
       queryFn: ({ signal }) => api(`/shoots/${shootId}/comments`, { response: commentsSchema, signal }),
+    }),
+  versions: (shootId: string) =>
+    queryOptions({
+      queryKey: ['shoots', shootId, 'versions'],
+      queryFn: ({ signal }) => api(`/shoots/${shootId}/versions`, { response: versionsSchema, signal }),
+    }),
+  /** What a version kept never changes: under a key of its own, so that news of the shoot do not fetch it again. */
+  version: (shootId: string, versionId: string) =>
+    queryOptions({
+      queryKey: ['kept-version', shootId, versionId],
+      queryFn: ({ signal }) =>
+        api(`/shoots/${shootId}/versions/${versionId}`, { response: versionStatesSchema, signal }),
+      staleTime: Infinity,
     }),
 }

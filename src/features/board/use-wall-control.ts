@@ -40,6 +40,7 @@ function createControl(doc: Y.Doc, now: Store<Now>): WallControl {
     state: createWallState({ x: 0, y: 0, zoom: 1 }),
     items: () => readWallItems(doc),
     mayWrite: () => now.get().mayWrite,
+    isPast: false,
     stopUndo: () => now.get().undo.stop(),
     undo: () => now.get().undo.undo(),
     redo: () => now.get().undo.redo(),

@@ -14,6 +14,8 @@ export type WallControl = {
   state: WallState
   items(): WallItems
   mayWrite(): boolean
+  /** A kept version is looked at: nobody else is here, and what is said of things now is not said of them then. */
+  isPast: boolean
   /** Ends the present undo step. */
   stopUndo(): void
   undo(): void

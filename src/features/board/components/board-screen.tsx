@@ -1,5 +1,6 @@
 import { MoreHorizontal } from 'lucide-react'
-import { Suspense, lazy } from 'react'
+import { Suspense, lazy, useState } from 'react'
+import type { Plan } from '#shared/domain/plan/read-plan.ts'
 import { usePlan } from '#src/realtime/use-plan.ts'
 import { count } from '#src/lib/format.ts'
 import { useShoot } from '#src/realtime/shoot-realtime.tsx'
@@ -14,7 +15,7 @@ import { useAddPictures } from '../use-add-pictures.ts'
 import { useClipboard } from '../use-clipboard.ts'
 import { useNewThings } from '../use-new-things.ts'
 import { useFirstView, useWallControl } from '../use-wall-control.ts'
-import { WallControlProvider, useWall } from '../wall-control.ts'
+import { type WallControl, WallControlProvider, useWall } from '../wall-control.ts'
 import { type WallItems, useWallItems } from '../wall-item.ts'
 import { select } from '../wall-state.ts'
 import { EmptyBoard } from './empty-board.tsx'
@@ -26,22 +27,44 @@ import { ZoomBar } from './zoom-bar.tsx'
 // The wall comes first; what stands around it follows while it is already in the hand.
 const Inspector = lazy(async () => ({ default: (await import('./inspector/inspector.tsx')).Inspector }))
 const Strip = lazy(async () => ({ default: (await import('./strip/strip.tsx')).Strip }))
+const VersionsDialog = lazy(async () => ({
+  default: (await import('./versions/versions-dialog.tsx')).VersionsDialog,
+}))
 const PhoneBoard = lazy(async () => ({ default: (await import('./phone/phone-board.tsx')).PhoneBoard }))
 
 /** The shared wall of references and the strip of shots. */
 export function BoardScreen() {
-  const shoot = useShoot()
   const plan = usePlan()
   const { control, mayWrite, undo } = useWallControl(plan)
-  const isPhone = useIsPhone()
   const items = useWallItems()
+  return <BoardView plan={plan} control={control} items={items} mayWrite={mayWrite} undo={undo} />
+}
+
+type BoardViewProps = {
+  plan: Plan
+  control: WallControl
+  items: WallItems
+  mayWrite: boolean
+  undo: Pick<Undo, 'canUndo' | 'canRedo'>
+}
+
+/** A board, of today or as it stood: the wall and the strip on wide screens, one at a time on phones. */
+export function BoardView({ plan, control, ...board }: BoardViewProps) {
+  const shoot = useShoot()
+  const isPhone = useIsPhone()
+  const [showsVersions, setShowsVersions] = useState(false)
   const Board = isPhone ? PhoneBoard : WideBoard
   return (
     <WallControlProvider value={control}>
       <BoardPlanProvider value={plan}>
         <Suspense fallback={<Waiting />}>
-          <Board key={shoot.id} items={items} mayWrite={mayWrite} undo={undo} />
+          <Board key={shoot.id} {...board} onVersions={() => setShowsVersions(true)} />
         </Suspense>
+        {showsVersions && (
+          <Suspense>
+            <VersionsDialog open onOpenChange={setShowsVersions} />
+          </Suspense>
+        )}
       </BoardPlanProvider>
     </WallControlProvider>
   )
@@ -58,9 +81,9 @@ function countWords(items: WallItems): string {
   return `${count(frames, 'frame')}, ${count(tags, 'tag')}`
 }
 
-type BoardProps = { items: WallItems; mayWrite: boolean; undo: Undo }
+type BoardProps = Omit<BoardViewProps, 'plan' | 'control'> & { onVersions: () => void }
 
-function WideBoard({ items, mayWrite, undo }: BoardProps) {
+function WideBoard({ items, mayWrite, undo, onVersions }: BoardProps) {
   const control = useWall()
   const shoot = useShoot()
   const inputs = usePictureInputs()
@@ -89,15 +112,16 @@ function WideBoard({ items, mayWrite, undo }: BoardProps) {
       <ScreenBar
         title="Board"
         sub={countWords(items)}
-        actions={
-          mayWrite
+        actions={[
+          { label: 'Kept versions', variant: 'quiet', onPress: onVersions },
+          ...(mayWrite
             ? [
                 { label: 'Write a note', onPress: () => make.note() },
                 { label: 'Hang a tag', onPress: () => make.tag() },
-                { label: 'Add pictures', variant: 'primary', onPress: openFiles },
+                { label: 'Add pictures', variant: 'primary' as const, onPress: openFiles },
               ]
-            : []
-        }
+            : []),
+        ]}
       >
         <SearchBox items={items} />
         {mayWrite && more}

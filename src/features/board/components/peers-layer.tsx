@@ -24,9 +24,12 @@ function selectedBy(peers: readonly Peer[]): Map<string, Mark> {
 
 /** Where the others are: their pointers, and what they hold and have selected on the things themselves. */
 export function PeersLayer() {
-  const { state } = useWall()
+  const { state, isPast } = useWall()
   const everywhere = usePeers()
-  const peers = useMemo(() => everywhere.filter(({ presence }) => presence.at === 'board'), [everywhere])
+  const peers = useMemo(
+    () => (isPast ? [] : everywhere.filter(({ presence }) => presence.at === 'board')),
+    [everywhere, isPast],
+  )
   const detail = useStore(state.detail)
 
   useEffect(() => {

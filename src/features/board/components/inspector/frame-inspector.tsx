@@ -142,7 +142,7 @@ export function FrameInspector({ frame, mayWrite }: { frame: Frame; mayWrite: bo
           </Row>
         )}
       </div>
-      <FrameComments frameId={frame.id} />
+      {!control.isPast && <FrameComments frameId={frame.id} />}
     </>
   )
 }

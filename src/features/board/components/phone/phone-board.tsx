@@ -25,10 +25,15 @@ const VIEWS = [
 ] as const
 type PhoneView = (typeof VIEWS)[number]['value']
 
-type PhoneBoardProps = { items: WallItems; mayWrite: boolean; undo: Undo }
+type PhoneBoardProps = {
+  items: WallItems
+  mayWrite: boolean
+  undo: Pick<Undo, 'canUndo' | 'canRedo'>
+  onVersions: () => void
+}
 
 /** The board in a hand: prints by area, the wall, or the shots, one press apart. */
-export function PhoneBoard({ items, mayWrite, undo }: PhoneBoardProps) {
+export function PhoneBoard({ items, mayWrite, undo, onVersions }: PhoneBoardProps) {
   const control = useWall()
   const shoot = useShoot()
   const inputs = usePictureInputs()
@@ -57,6 +62,7 @@ export function PhoneBoard({ items, mayWrite, undo }: PhoneBoardProps) {
         float
         actions={[
           { label: searching ? 'Close the search' : 'Search the wall', onPress: () => setSearching(!searching) },
+          { label: 'Kept versions', onPress: onVersions },
           ...(mayWrite
             ? [
                 { label: 'Add pictures', onPress: openFiles },

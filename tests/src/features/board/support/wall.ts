@@ -50,6 +50,7 @@ export function testWall(): TestWall {
     state,
     items: () => readWallItems(doc),
     mayWrite: () => !readOnly,
+    isPast: false,
     stopUndo: () => undo.stopCapturing(),
     undo: () => void undo.undo(),
     redo: () => void undo.redo(),

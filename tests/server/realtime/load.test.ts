@@ -84,6 +84,16 @@ describe('loadDocument', () => {
     expect(loaded).toMatchObject({ head: 6, bad: [{ reason: 'log snapshot 5' }] })
   })
 
+  it('goes back over as many unsound snapshots as there are', async () => {
+    await append(updates)
+    await snapshot(3, Y.mergeUpdates(updates.slice(0, 2)))
+    for (const seq of [4, 5, 6]) await snapshot(seq, Uint8Array.of(1, 2, 3))
+    await pool.query('delete from rt_update where doc_id = $1 and seq <= 3', [docId])
+    const loaded = await loadDocument(pool, docId)
+    expect(loaded?.doc.getMap('items').size).toBe(5)
+    expect(loaded?.bad.map((bad) => bad.reason)).toEqual(['log snapshot 6', 'log snapshot 5', 'log snapshot 4'])
+  })
+
   it('does not believe a snapshot whose sum is wrong', async () => {
     await append(updates)
     await snapshot(3, Y.mergeUpdates(updates.slice(0, 1)), Buffer.alloc(32))

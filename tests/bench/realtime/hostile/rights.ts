@@ -26,7 +26,7 @@ export const writingReader: HostileCase = {
     return [
       {
         question: "a reader's edits go nowhere, and it is told",
-        isGood: canRead && fingerprint(late) === fingerprint(owner) && reader.refusals.length === 2,
+        isGood: canRead && fingerprint(late) === fingerprint(owner) && reader.refusals.length >= 2,
         detail: `refused: ${reader.refusals.join(', ') || 'nothing'}`,
       },
     ]

@@ -26,7 +26,8 @@ export const typingStore = {
   isTyping: (): boolean => held.size > 0,
 }
 
-function takeAllOver(): void {
+/** Takes over what is typed everywhere: the page, or what keeps the words, goes away. */
+export function takeAllOver(): void {
   for (const takeOver of [...held]) takeOver()
 }
 

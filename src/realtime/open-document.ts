@@ -1,14 +1,22 @@
 import * as decoding from 'lib0/decoding'
+import * as encoding from 'lib0/encoding'
+import { writeSyncStep1 } from 'y-protocols/sync'
 import { WebsocketProvider } from 'y-websocket'
 import * as Y from 'yjs'
+import { type Role, canWriteDocument } from '#shared/access/roles.ts'
 import { type Collection, rootOf } from '#shared/realtime/collection.ts'
 import { COLLECTIONS, DOCUMENT_SCHEMA, type DocumentKind } from '#shared/realtime/documents.ts'
 import { CLOSE, type Hello, MESSAGE } from '#shared/realtime/protocol.ts'
 import { countAcknowledgements } from './acknowledgements.ts'
-import { cacheName, openCache, rememberComplete, rememberUnsent, unsentOf, wasComplete } from './local-cache.ts'
+import { addToCache, openDocumentCache } from './document-cache.ts'
+import { cacheName, forgetCache, registerCache } from './local-cache.ts'
+import { keepConnected } from './reconnect.ts'
+import { REFUSED_WORDS, refusedWords } from './refused-words.ts'
 import { type SaveFacts, type SaveState, saveStateOf } from './save-state.ts'
+import { askToStayStored } from './stay-stored.ts'
 import { type Store, createStore } from './store.ts'
 import { createUndo } from './undo-manager.ts'
+import { type Unsent, addUnsent, openAccount } from './unsent-accounts.ts'
 
 export type OpenDocument = {
   kind: DocumentKind
@@ -22,39 +30,62 @@ export type OpenDocument = {
   ready: Store<boolean>
   /** A permanent close code (4400–4499), when the server sent one. */
   closed: Store<number | null>
+  /** Closes it as soon as what is on its way has arrived, or after a moment. */
+  leave(): Promise<void>
+  /** Closes it now. */
   destroy(): void
 }
 
-type Options = {
+export type DocumentEvents = {
+  /** Something outside of the documents changed: what to fetch again. */
+  onChanged: (queryKeys: string[][]) => void
+  /** `isNew`: the first of a connection; others come when the document is locked or released. */
+  onHello: (kind: DocumentKind, hello: Hello, isNew: boolean) => void
+  /** Edits that this person may no longer send were put aside; the document has to be opened anew. */
+  onPutAside: () => void
+}
+
+type Options = DocumentEvents & {
   kind: DocumentKind
   shootId: string
   userId: string
+  /** As this page knows it; the server's word counts once it has come. */
+  role: Role
   /** Of the document as this page knows it. */
   epoch: number
-  onChanged: (queryKeys: string[][]) => void
 }
 
-const REFUSED_WORDS: Readonly<Record<string, string>> = {
-  'read-only': 'Your role may read this, not change it.',
-  'too-large': 'The last change is too large for one step.',
-  full: 'This document is full.',
-  invalid: 'The last change could not be read.',
-  frozen: 'This document is locked for repair.',
-  'database-down': 'The database cannot be reached just now.',
-}
-
-const FIRST_MINUTES_MS = 120_000
+/** How long a lost connection is not worth a word. */
+const BRIEF_MS = 4_000
+const CACHE_WAIT_MS = 500
+const LEAVE_MS = 4_000
 const ASK_AFTER_FAILURES = 3
+/** What somebody who may not write answers to the question for everything they have. */
+const EMPTY_STEP_2 = new Uint8Array([MESSAGE.sync, 1, 2, 0, 0])
 
 /** Opens one of a shoot's documents: first from this device, then from the server, and keeps both in step. */
-export function openDocument({ kind, shootId, userId, epoch, onChanged }: Options): OpenDocument {
+export function openDocument(options: Options): OpenDocument {
+  const { kind, shootId, userId, role, epoch, onChanged, onHello, onPutAside } = options
   const doc = new Y.Doc()
-  const cache = cacheName(userId, shootId, kind, epoch)
-  const acks = countAcknowledgements(unsentOf(cache))
+  const name = cacheName(userId, shootId, kind, epoch)
+  const acks = countAcknowledgements()
+  const account = openAccount(name)
+  /** Edits of pages that are gone, until they have been read from the cache. */
+  let takenOver = 0
+  let mayWrite = canWriteDocument(role, kind)
+  /** Edits made without the right to: neither kept nor sent. */
+  let vain = 0
+  /** The server has said on this connection that it takes edits. */
+  let maySend = false
+  let refusedAt = 0
+  let isHelloNew = true
+  let isPuttingAside = false
+  let isDestroyed = false
   const facts: SaveFacts = {
-    connected: false,
+    link: 'brief',
     settled: false,
-    unsent: acks.unsent(),
+    unsent: 0,
+    sinceMs: null,
     kept: false,
     refused: null,
     outdated: false,
@@ -63,31 +94,48 @@ export function openDocument({ kind, shootId, userId, epoch, onChanged }: Option
   const hello = createStore<Hello | null>(null)
   const ready = createStore(false)
   const closed = createStore<number | null>(null)
-  let destroyed = false
 
+  const count = () => acks.unsent() + takenOver
   const update = (change: Partial<SaveFacts> = {}) => {
     const before = facts.unsent
-    Object.assign(facts, change, { unsent: acks.unsent(), settled: acks.settled() })
+    const unsent = count()
+    const since = unsent === 0 ? { sinceMs: null } : facts.sinceMs === null ? { sinceMs: Date.now() } : {}
+    Object.assign(facts, since, change, { unsent, settled: facts.settled || acks.settled() })
     // Storage is slow: not for every frame, only when the number is another.
-    if (facts.unsent !== before) rememberUnsent(cache, facts.unsent)
-    const next = saveStateOf({ ...facts, connected: facts.connected && navigator.onLine })
+    if (unsent !== before) account.write(unsentToKeep())
+    const next = saveStateOf(navigator.onLine ? facts : { ...facts, link: 'down' })
     if (JSON.stringify(next) !== JSON.stringify(save.get())) save.set(next)
   }
 
+  const unsentToKeep = (): Unsent | null =>
+    facts.sinceMs === null || facts.unsent <= vain ? null : { edits: facts.unsent - vain, sinceMs: facts.sinceMs }
+
   // Before the provider listens: an edit is counted before the message that carries it.
-  doc.on('update', (_update: Uint8Array, _from: unknown, _doc: Y.Doc, transaction: Y.Transaction) => {
-    if (!transaction.local) return
+  doc.on('update', (_update: Uint8Array, _from: unknown, _doc: Y.Doc, { local }: Y.Transaction) => {
+    if (!local) return
+    askToStayStored()
     acks.edited()
+    if (!mayWrite) vain++
     update()
+  })
+  const cache = openDocumentCache(name, doc, {
+    onKept: (kept) => update({ kept }),
+    mayKeep: ({ local }) => mayWrite || !local,
   })
 
   /** Sees every frame that leaves: update-carrying sync messages are what the server counts. */
   class CountingSocket extends WebSocket {
     override send(data: Parameters<WebSocket['send']>[0]): void {
-      const isCounted = data instanceof Uint8Array && data[0] === MESSAGE.sync && data[1] !== 0
-      if (isCounted) acks.sent()
-      super.send(data)
-      if (isCounted) update()
+      const part = data instanceof Uint8Array && data[0] === MESSAGE.sync ? data[1] : 0
+      if (part !== 1 && part !== 2) return super.send(data)
+      if (maySend) {
+        acks.sent(part === 1 ? 'all' : 'update')
+        super.send(data)
+      } else if (part === 1) {
+        acks.sent('nothing')
+        super.send(EMPTY_STEP_2)
+      }
+      update()
     }
   }
 
@@ -98,83 +146,149 @@ export function openDocument({ kind, shootId, userId, epoch, onChanged }: Option
     params: { ack: '1', epoch: String(epoch) },
     resyncInterval: 45_000,
     WebSocketPolyfill: CountingSocket,
+    // Who is signed out is shown the way in again; who has signed in meanwhile goes on.
+    shouldReconnect: ({ code }) => code === CLOSE.signedOut || code < 4400 || code >= 4500,
+  })
+  const connection = keepConnected(provider, (failures) => {
+    // A browser cannot read why an upgrade was refused: ask over HTTP whether one is signed in still.
+    if (kind === 'board' && navigator.onLine && failures % ASK_AFTER_FAILURES === 0) onChanged([['session']])
   })
 
+  /** Asks the server for what it has; its question back is answered with everything known here. */
+  const exchange = () => {
+    if (!provider.wsconnected) return
+    const encoder = encoding.createEncoder()
+    encoding.writeVarUint(encoder, MESSAGE.sync)
+    writeSyncStep1(encoder, doc)
+    provider.ws?.send(encoding.toUint8Array(encoder))
+  }
+
   provider.messageHandlers[MESSAGE.saved] = (_encoder, decoder) => {
-    acks.saved(decoding.readVarUint(decoder))
-    update({ refused: acks.unsent() === 0 ? null : facts.refused })
+    const n = decoding.readVarUint(decoder)
+    acks.saved(n)
+    update(maySend && (n >= refusedAt || count() === 0) ? { refused: null } : {})
   }
   provider.messageHandlers[MESSAGE.refused] = (_encoder, decoder) => {
-    decoding.readVarUint(decoder)
+    const n = decoding.readVarUint(decoder)
     const reason = decoding.readVarString(decoder)
-    update({ refused: REFUSED_WORDS[reason] ?? 'The server did not take the last change.' })
+    // Only not stored yet: it is acknowledged once it is.
+    if (reason !== 'database-down') acks.refused(n)
+    refusedAt = n
+    update({ refused: refusedWords(reason) })
   }
   provider.messageHandlers[MESSAGE.hello] = (_encoder, decoder) => {
     const said = parseHello(decoding.readVarString(decoder))
-    if (!said) return
-    hello.set(said)
-    update({
-      outdated: said.schema > DOCUMENT_SCHEMA,
-      refused: said.frozen === null ? facts.refused : (REFUSED_WORDS['frozen'] ?? null),
-    })
+    if (said) hear(said)
   }
   provider.messageHandlers[MESSAGE.changed] = (_encoder, decoder) => {
     onChanged(parseQueryKeys(decoding.readVarString(decoder)))
   }
 
+  function hear(said: Hello): void {
+    const isNew = isHelloNew
+    const couldSend = maySend
+    isHelloNew = false
+    const outdated = said.schema > DOCUMENT_SCHEMA
+    const isLocked = said.frozen !== null
+    // A lock passes; what was written before it is kept and sent afterwards.
+    mayWrite = said.mayWrite || (isLocked && canWriteDocument(said.role, kind))
+    maySend = said.mayWrite && !isLocked && !outdated
+    if (mayWrite) vain = 0
+    if (JSON.stringify(said) !== JSON.stringify(hello.get())) hello.set(said)
+    update({ outdated, refused: maySend ? null : isLocked ? REFUSED_WORDS.frozen : REFUSED_WORDS['read-only'] })
+    onHello(kind, said, isNew)
+    if (!mayWrite && count() > 0) void putAside()
+    else if (maySend && !couldSend && !isNew) exchange()
+  }
+
+  /** What this person may no longer send is kept apart, for a copy; the document itself is read from the server anew. */
+  async function putAside(): Promise<void> {
+    if (isPuttingAside) return
+    isPuttingAside = true
+    connection.stop()
+    const aside = cacheName(userId, shootId, kind, 'aside')
+    try {
+      await cache.takeIn()
+      registerCache(aside)
+      await addToCache(aside, Y.encodeStateAsUpdate(doc))
+    } catch {
+      // This device keeps nothing: the sign goes on saying so as long as the page is open.
+      connection.start()
+      return
+    }
+    addUnsent(aside, { edits: count(), sinceMs: facts.sinceMs ?? Date.now() })
+    destroy()
+    await forgetCache(name)
+    onPutAside()
+  }
+
+  let brief: ReturnType<typeof setTimeout> | undefined
+  const waitBriefly = () => {
+    clearTimeout(brief)
+    brief = setTimeout(() => update({ link: 'down' }), BRIEF_MS)
+  }
   provider.on('status', ({ status }) => {
-    if (status === 'connected') acks.connected()
-    update({ connected: status === 'connected' })
+    if (status === 'connected') {
+      clearTimeout(brief)
+      acks.connected()
+      isHelloNew = true
+      maySend = false
+      refusedAt = 1
+      update({ link: 'up' })
+      void adopt()
+    } else if (status === 'disconnected') {
+      waitBriefly()
+      update({ link: 'brief' })
+    }
   })
-  provider.on('sync', (synced) => {
-    if (synced) {
-      rememberComplete(cache)
+  provider.on('sync', (isSynced) => {
+    if (isSynced) {
+      cache.rememberComplete()
       ready.set(true)
     }
     update()
   })
+  provider.on('connection-close', (event) => {
+    if (event?.code === CLOSE.signedOut && kind === 'board') onChanged([['session']])
+  })
   provider.on('closed', ({ code }) => {
+    clearTimeout(brief)
     closed.set(code)
-    update({ outdated: code === CLOSE.epoch, connected: false })
+    update({ outdated: code === CLOSE.epoch, link: 'down' })
+    // There is a newer one: the page goes on with it as soon as it knows which.
+    if (code === CLOSE.epoch) onChanged([['shoots', shootId]])
   })
 
-  let downSinceMs: number | null = null
-  provider.on('connection-close', () => {
-    // Runs before the provider sets its timer: two clients that fell together must not return together.
-    downSinceMs = provider.synced ? Date.now() : (downSinceMs ?? Date.now())
-    const capMs = Date.now() - downSinceMs < FIRST_MINUTES_MS ? 3000 : 30_000
-    const stepMs = Math.min(2 ** (provider.wsUnsuccessfulReconnects + 1) * 100, capMs)
-    provider.maxBackoffTime = stepMs * (0.3 + 0.7 * Math.random())
-    // A browser cannot read why an upgrade was refused: ask over HTTP whether one is signed in still.
-    const failures = provider.wsUnsuccessfulReconnects
-    if (kind === 'board' && navigator.onLine && failures % ASK_AFTER_FAILURES === ASK_AFTER_FAILURES - 1) {
-      onChanged([['session']])
-    }
-  })
+  /** Edits of pages that are gone are sent from here. */
+  const adopt = () =>
+    account.watch(({ edits, sinceMs }) => {
+      takenOver += edits
+      const since = facts.sinceMs === null ? sinceMs : Math.min(facts.sinceMs, sinceMs)
+      update({ sinceMs: since })
+      void cache.takeIn().then(
+        () => {
+          takenOver -= edits
+          acks.edited(edits)
+          exchange()
+        },
+        // Not readable now: still counted, and tried again by the next page.
+        () => undefined,
+      )
+    })
 
-  const wake = () => {
-    if (document.visibilityState === 'visible' && navigator.onLine && provider.shouldConnect) provider.connect()
-  }
-  const handleOnline = () => {
-    // The old socket may be half open: nobody would notice for half a minute.
-    if (provider.shouldConnect) {
-      provider.disconnect()
-      provider.connect()
-    }
-    update()
-  }
-  const handleOffline = () => update()
-  window.addEventListener('online', handleOnline)
-  window.addEventListener('offline', handleOffline)
-  window.addEventListener('pageshow', wake)
-  document.addEventListener('visibilitychange', wake)
+  const handleNetwork = () => update()
+  window.addEventListener('online', handleNetwork)
+  window.addEventListener('offline', handleNetwork)
 
   // The cache first: with an empty state vector the server would send everything again.
-  void openCache(cache, doc).then((opened) => {
-    if (destroyed) return
-    update({ kept: opened !== undefined })
-    if (opened && (doc.store.clients.size > 0 || wasComplete(cache))) ready.set(true)
-    provider.connect()
+  registerCache(name)
+  void Promise.race([Promise.all([cache.opened, adopt()]), wait(CACHE_WAIT_MS)]).then(() => {
+    if (isDestroyed) return
+    waitBriefly()
+    connection.start()
+  })
+  void cache.opened.then((isOpen) => {
+    if (isOpen && (doc.store.clients.size > 0 || cache.wasComplete())) ready.set(true)
   })
 
   const collections: readonly Collection[] = Object.values(COLLECTIONS[kind])
@@ -182,6 +296,19 @@ export function openDocument({ kind, shootId, userId, epoch, onChanged }: Option
     doc,
     collections.map((c) => rootOf(doc, c)),
   )
+
+  function destroy(): void {
+    if (isDestroyed) return
+    isDestroyed = true
+    window.removeEventListener('online', handleNetwork)
+    window.removeEventListener('offline', handleNetwork)
+    connection.destroy()
+    undo.destroy()
+    provider.destroy()
+    clearTimeout(brief)
+    void cache.close().finally(() => account.release())
+    doc.destroy()
+  }
 
   return {
     kind,
@@ -192,17 +319,20 @@ export function openDocument({ kind, shootId, userId, epoch, onChanged }: Option
     hello,
     ready,
     closed,
-    destroy() {
-      destroyed = true
-      window.removeEventListener('online', handleOnline)
-      window.removeEventListener('offline', handleOffline)
-      window.removeEventListener('pageshow', wake)
-      document.removeEventListener('visibilitychange', wake)
-      undo.destroy()
-      provider.destroy()
-      doc.destroy()
+    async leave() {
+      if (count() > 0 && maySend && provider.wsconnected) {
+        provider.awareness.setLocalState(null)
+        const sent = new Promise<void>((resolve) => save.subscribe(() => count() === 0 && resolve()))
+        await Promise.race([sent, wait(LEAVE_MS)])
+      }
+      destroy()
     },
+    destroy,
   }
+}
+
+function wait(ms: number): Promise<void> {
+  return new Promise((resolve) => setTimeout(resolve, ms))
 }
 
 function parseHello(text: string): Hello | undefined {

@@ -1,10 +1,12 @@
 import type { Lamp } from '#shared/domain/shoots/readiness.ts'
+import { shortInstant } from '#src/lib/format.ts'
 
 /** What the sign on every screen says. One word each: saved, saving, offline, not saved, reload. */
 export type SaveState =
   | { kind: 'saved' }
   | { kind: 'saving' }
-  | { kind: 'offline'; unsent: number }
+  /** `sinceMs`: when the oldest of the unsent edits was made; null without any. */
+  | { kind: 'offline'; unsent: number; sinceMs: number | null }
   | { kind: 'not-saved'; why: string }
   | { kind: 'reload' }
 
@@ -17,13 +19,22 @@ export const SAVE_SIGNS: Readonly<Record<SaveState['kind'], { words: string; lam
   reload: { words: 'Reload needed', lamp: 'unlit' },
 }
 
+/** "since 14:05", with the day when that is another one. */
+export function sinceWords(sinceMs: number, nowMs: number): string {
+  const words = shortInstant(sinceMs)
+  const [day, time] = words.split(', ')
+  return `since ${shortInstant(nowMs).split(', ')[0] === day ? time : words}`
+}
+
 /** What is known of one open document. */
 export type SaveFacts = {
-  connected: boolean
-  /** The first exchange after connecting is done and acknowledged. */
+  /** `brief`: lost a moment ago, or not there yet; nobody needs to be told when it comes back at once. */
+  link: 'up' | 'brief' | 'down'
+  /** In this visit, everything known here was once acknowledged. */
   settled: boolean
   /** Own edits that the server has not yet called durable. */
   unsent: number
+  sinceMs: number | null
   /** The browser's own store keeps the edits until the server has them. */
   kept: boolean
   /** Why the server will not take what was written, when it said so. */
@@ -32,15 +43,15 @@ export type SaveFacts = {
 }
 
 /** The sign for one document. `saved` is said only when the server called every own edit durable. */
-export function saveStateOf(facts: SaveFacts): SaveState {
-  if (facts.outdated) return { kind: 'reload' }
-  if (facts.refused !== null && facts.unsent > 0) return { kind: 'not-saved', why: facts.refused }
-  if (!facts.connected) {
-    return facts.kept || facts.unsent === 0
-      ? { kind: 'offline', unsent: facts.unsent }
+export function saveStateOf({ link, settled, unsent, sinceMs, kept, refused, outdated }: SaveFacts): SaveState {
+  if (outdated) return { kind: 'reload' }
+  if (refused !== null && unsent > 0) return { kind: 'not-saved', why: refused }
+  if (link === 'down') {
+    return kept || unsent === 0
+      ? { kind: 'offline', unsent, sinceMs }
       : { kind: 'not-saved', why: 'This device cannot keep edits while there is no connection. Leave this page open.' }
   }
-  return facts.settled && facts.unsent === 0 ? { kind: 'saved' } : { kind: 'saving' }
+  return settled && unsent === 0 ? { kind: 'saved' } : { kind: 'saving' }
 }
 
 const GRAVITY: Readonly<Record<SaveState['kind'], number>> = {
@@ -51,9 +62,15 @@ const GRAVITY: Readonly<Record<SaveState['kind'], number>> = {
   reload: 4,
 }
 
-/** The gravest of several documents' signs; unsent edits add up. */
+/** The gravest of several documents' signs; unsent edits add up and are as old as the oldest. */
 export function gravest(states: readonly SaveState[]): SaveState {
-  const unsent = states.reduce((sum, state) => sum + (state.kind === 'offline' ? state.unsent : 0), 0)
   const top = states.reduce<SaveState>((a, b) => (GRAVITY[b.kind] > GRAVITY[a.kind] ? b : a), { kind: 'saved' })
-  return top.kind === 'offline' ? { kind: 'offline', unsent } : top
+  if (top.kind !== 'offline') return top
+  const offline = states.filter((state) => state.kind === 'offline')
+  const since = offline.flatMap(({ sinceMs }) => (sinceMs === null ? [] : [sinceMs]))
+  return {
+    kind: 'offline',
+    unsent: offline.reduce((sum, { unsent }) => sum + unsent, 0),
+    sinceMs: since.length === 0 ? null : Math.min(...since),
+  }
 }

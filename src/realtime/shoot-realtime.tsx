@@ -1,10 +1,12 @@
 import { useQueryClient } from '@tanstack/react-query'
-import { type ReactNode, createContext, use, useEffect, useMemo, useState, useSyncExternalStore } from 'react'
+import { type ReactNode, createContext, use, useEffect, useMemo, useRef, useState, useSyncExternalStore } from 'react'
 import type * as Y from 'yjs'
 import { canWriteDocument, type Role } from '#shared/access/roles.ts'
 import type { ShootView } from '#shared/api/shoots.ts'
-import { DOCUMENT_KINDS, type DocumentKind } from '#shared/realtime/documents.ts'
-import { type OpenDocument, openDocument } from './open-document.ts'
+import { DOCUMENT_KINDS, DOCUMENT_SCHEMA, type DocumentKind } from '#shared/realtime/documents.ts'
+import { takeAllOver } from '#src/lib/typing.ts'
+import { forgetPastCaches } from './left-behind.ts'
+import { type DocumentEvents, type OpenDocument, openDocument } from './open-document.ts'
 import { listenForSignOut } from './sign-out.ts'
 
 export type ShootDocuments = Readonly<Record<DocumentKind, OpenDocument>>
@@ -23,15 +25,35 @@ export function ShootRealtime({ shoot, userId, children, waiting }: ShootRealtim
   const queryClient = useQueryClient()
   const shootId = shoot.id
   const epochs = JSON.stringify(shoot.epochs)
+  const role = useRef(shoot.role)
+  useEffect(() => {
+    role.current = shoot.role
+  })
   const [documents, setDocuments] = useState<ShootDocuments | null>(null)
+  /** Counts how often documents had to be opened anew. */
+  const [opening, setOpening] = useState(0)
 
   useEffect(() => {
-    // Our own text from two lines above.
+    // Our own text from above.
     const known = JSON.parse(epochs) as Record<string, number>
-    const onChanged = (keys: string[][]) => {
-      for (const queryKey of keys) void queryClient.invalidateQueries({ queryKey })
+    const queryKey = ['shoots', shootId]
+    let isFirst = true
+    const events: DocumentEvents = {
+      onChanged: (keys) => {
+        for (const key of keys) void queryClient.invalidateQueries({ queryKey: key })
+      },
+      onHello: (kind, hello, isNew) => {
+        const isOtherRole = hello.role !== queryClient.getQueryData<ShootView>(queryKey)?.role
+        if (kind === 'board' && isNew) {
+          // What this page holds may come from this device; after a pause, news of other things were missed as well.
+          void queryClient.invalidateQueries({ queryKey, exact: isFirst })
+          isFirst = false
+        } else if (isOtherRole) void queryClient.invalidateQueries({ queryKey, exact: true })
+      },
+      onPutAside: () => setOpening((before) => before + 1),
     }
-    const open = (kind: DocumentKind) => openDocument({ kind, shootId, userId, epoch: known[kind] ?? 1, onChanged })
+    const open = (kind: DocumentKind) =>
+      openDocument({ kind, shootId, userId, role: role.current, epoch: known[kind] ?? 1, ...events })
     const opened: ShootDocuments = {
       board: open('board'),
       plan: open('plan'),
@@ -39,39 +61,27 @@ export function ShootRealtime({ shoot, userId, children, waiting }: ShootRealtim
       lighting: open('lighting'),
       day: open('day'),
     }
-    const close = () => {
+    void forgetPastCaches(userId, shootId, known)
+    const stopListening = listenForSignOut(userId, () => {
       for (const kind of DOCUMENT_KINDS) opened[kind].destroy()
-    }
-    const stopListening = listenForSignOut(userId, close)
+      queryClient.setQueryData(['session'], null)
+    })
     // Only what neither the server nor this device holds is worth a question.
     const handleUnload = (event: BeforeUnloadEvent) => {
       if (DOCUMENT_KINDS.some((kind) => opened[kind].save.get().kind === 'not-saved')) event.preventDefault()
     }
     window.addEventListener('beforeunload', handleUnload)
-    const stop = DOCUMENT_KINDS.map((kind) => {
-      const { hello } = opened[kind]
-      let isFirst = true
-      return hello.subscribe(() => {
-        const queryKey = ['shoots', shootId]
-        if (kind === 'board') {
-          // What this page holds may come from this device; after a pause, news of other things were missed as well.
-          void queryClient.invalidateQueries({ queryKey, exact: isFirst })
-          isFirst = false
-        } else if (hello.get()?.role !== queryClient.getQueryData<ShootView>(queryKey)?.role) {
-          void queryClient.invalidateQueries({ queryKey, exact: true })
-        }
-      })
-    })
-    // eslint-disable-next-line react-hooks/set-state-in-effect -- sockets are opened here and nowhere else; this hands them to the screens
+
     setDocuments(opened)
     return () => {
-      for (const off of stop) off()
-      stopListening()
+      // Fields below close after this: their words go into the documents while these are open.
+      takeAllOver()
       window.removeEventListener('beforeunload', handleUnload)
-      close()
+      const left = DOCUMENT_KINDS.map((kind) => opened[kind].leave())
+      void Promise.all(left).then(stopListening)
       setDocuments(null)
     }
-  }, [shootId, userId, epochs, queryClient])
+  }, [shootId, userId, epochs, opening, queryClient])
 
   const value = useMemo(() => (documents ? { shoot, userId, documents } : null), [shoot, userId, documents])
   if (!value) return waiting
@@ -97,7 +107,9 @@ function WhenReady({
     (listener) => subscribeAll(documents, (document) => document.ready.subscribe(listener)),
     () => DOCUMENT_KINDS.every((kind) => documents[kind].ready.get()),
   )
-  return ready ? children : waiting
+  const closed = useFirstClosed(documents)
+  // What is shut for good is told by the screens.
+  return ready || closed !== null ? children : waiting
 }
 
 /** Subscribes to something of every document; returns one unsubscribe. */
@@ -132,13 +144,16 @@ export function useMayWrite(kind: DocumentKind): boolean {
   const { shoot, documents } = useShootContext()
   const hello = useSyncExternalStore(documents[kind].hello.subscribe, documents[kind].hello.get)
   const closed = useSyncExternalStore(documents[kind].closed.subscribe, documents[kind].closed.get)
-  if (closed !== null) return false
-  return canWriteDocument(shoot.role, kind) && (hello === null || (hello.mayWrite && hello.frozen === null))
+  if (closed !== null || !canWriteDocument(shoot.role, kind)) return false
+  return hello === null || (hello.mayWrite && hello.frozen === null && hello.schema <= DOCUMENT_SCHEMA)
 }
 
-/** The permanent close code of the gravest document (no access, unknown, signed out), or null. */
+/** The permanent close code of the gravest document (no access, unknown, another epoch), or null. */
 export function useClosed(): number | null {
-  const { documents } = useShootContext()
+  return useFirstClosed(useShootContext().documents)
+}
+
+function useFirstClosed(documents: ShootDocuments): number | null {
   return useSyncExternalStore(
     (listener) => subscribeAll(documents, (document) => document.closed.subscribe(listener)),
     () => DOCUMENT_KINDS.map((kind) => documents[kind].closed.get()).find((code) => code !== null) ?? null,

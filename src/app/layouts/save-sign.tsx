@@ -1,11 +1,16 @@
 import { useState } from 'react'
-import { SAVE_SIGNS, type SaveState } from '#src/realtime/save-state.ts'
+import { SAVE_SIGNS, type SaveState, sinceWords } from '#src/realtime/save-state.ts'
 import { useSaveState } from '#src/realtime/use-save-state.ts'
 import { cn } from '#src/lib/cn.ts'
 import { count } from '#src/lib/format.ts'
 import { Button } from '#src/ui/button.tsx'
 import { Lamp } from '#src/ui/lamp.tsx'
 import { Popover } from '#src/ui/popover.tsx'
+
+/** How old the oldest unsent change is: " since 14:05". */
+function since({ sinceMs }: { sinceMs: number | null }): string {
+  return sinceMs === null ? '' : ` ${sinceWords(sinceMs, Date.now())}`
+}
 
 function explanation(state: SaveState): string {
   switch (state.kind) {
@@ -16,7 +21,7 @@ function explanation(state: SaveState): string {
     case 'offline':
       return state.unsent === 0
         ? 'There is no connection. You can go on working: it is kept on this device and sent as soon as there is a signal.'
-        : `There is no connection. ${count(state.unsent, 'change')} of yours ${state.unsent === 1 ? 'is' : 'are'} kept on this device and sent as soon as there is a signal.`
+        : `There is no connection. ${count(state.unsent, 'change')} of yours ${state.unsent === 1 ? 'is' : 'are'} kept on this device${since(state)} and sent as soon as there is a signal.`
     case 'not-saved':
       return state.why
     case 'reload':
@@ -74,7 +79,7 @@ export function SaveStrip() {
       <span className={cn('min-w-0 flex-1', isTrouble && 'font-semibold text-glow-lit')}>
         {SAVE_SIGNS[state.kind].words}
         {state.kind === 'not-saved' && ` · ${state.why}`}
-        {state.kind === 'offline' && state.unsent > 0 && ` · ${count(state.unsent, 'change')} to send`}
+        {state.kind === 'offline' && state.unsent > 0 && ` · ${count(state.unsent, 'change')} to send${since(state)}`}
       </span>
       {state.kind === 'reload' && (
         <Button variant="glow" size="small" onClick={() => window.location.reload()}>

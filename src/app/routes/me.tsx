@@ -4,7 +4,7 @@ import { account } from '#src/features/people/account.ts'
 import { MeScreen } from '#src/features/people/components/me-screen.tsx'
 import { studioQueries } from '#src/features/studios/queries.ts'
 import { forgetDrafts } from '#src/lib/drafts.ts'
-import { unsentOnDevice } from '#src/realtime/local-cache.ts'
+import { useUnsentOnDevice } from '#src/realtime/use-unsent-on-device.ts'
 import { signOutOfDevice } from '#src/realtime/sign-out.ts'
 import { useSession } from '../session.ts'
 
@@ -12,6 +12,7 @@ export function Component() {
   const { user, letters } = useSession()
   const queryClient = useQueryClient()
   const navigate = useNavigate()
+  const unsent = useUnsentOnDevice(user.id)
   const signOut = async () => {
     await signOutOfDevice(user.id, async () => void (await account.signOut()))
     forgetDrafts(user.id)
@@ -22,7 +23,7 @@ export function Component() {
     <MeScreen
       user={user}
       letters={letters}
-      unsent={unsentOnDevice(user.id)}
+      unsent={unsent}
       onSignOut={signOut}
       onRenamed={() => void queryClient.invalidateQueries({ queryKey: studioQueries.session().queryKey })}
     />

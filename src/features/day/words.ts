@@ -2,7 +2,7 @@ import type { Advice } from '#shared/domain/day/advice.ts'
 import type { Need } from '#shared/domain/board/schema.ts'
 import { clockLabel, listLabel } from '#shared/domain/order/clock.ts'
 import type { PlannedShot } from '#shared/domain/plan/read-plan.ts'
-import { SAVE_SIGNS, type SaveState } from '#src/realtime/save-state.ts'
+import { SAVE_SIGNS, type SaveState, sinceWords } from '#src/realtime/save-state.ts'
 
 export const NEED_WORDS: Readonly<Record<Need, string>> = {
   must: 'needed by the client',
@@ -23,10 +23,13 @@ export function behindWords(behindMin: number): string {
   return behindMin > 0 ? `${behindMin} min behind` : `${-behindMin} min ahead`
 }
 
-/** What is saved where, as on every screen, with how much waits on this phone. */
+/** What is saved where, as on every screen, with how much waits on this phone and since when. */
 export function saveWords(state: SaveState): string {
   const { words } = SAVE_SIGNS[state.kind]
-  if (state.kind === 'offline' && state.unsent > 0) return `On this device · ${state.unsent} to send`
+  if (state.kind === 'offline' && state.unsent > 0) {
+    const since = state.sinceMs === null ? '' : ` ${sinceWords(state.sinceMs, Date.now())}`
+    return `On this device · ${state.unsent} to send${since}`
+  }
   return state.kind === 'not-saved' ? `${words}: ${state.why}` : words
 }
 

@@ -1,4 +1,4 @@
-import { rememberUnsent } from '../local-cache.ts'
+import { writeUnsent } from '../unsent-accounts.ts'
 import { type Outbox, createOutbox } from './outbox.ts'
 import { openOutboxStore, outboxName } from './outbox-store.ts'
 import { preparePicture } from './prepare-picture.ts'
@@ -19,7 +19,7 @@ export function outboxOf(userId: string, shootId: string): Outbox {
     prepare: preparePicture,
     now: Date.now,
     random: Math.random,
-    onCount: (count) => rememberUnsent(name, count),
+    onCount: (count) => writeUnsent(name, count),
   })
   outboxes.set(name, made)
   const wakeWhenSeen = () => {

@@ -1,3 +1,4 @@
+import type { ReactNode } from 'react'
 import { Link } from 'react-router-dom'
 import { ApiError } from '#src/lib/api.ts'
 import { Button, buttonClass } from '#src/ui/button.tsx'
@@ -45,8 +46,20 @@ function wordsOf(error: unknown): Words {
 }
 
 /** What is shown instead of a screen that failed. */
-export function ErrorView({ error, inFrame }: { error: unknown; inFrame: boolean }) {
-  return <Trouble {...wordsOf(error)} inFrame={inFrame} />
+export function ErrorView({
+  error,
+  inFrame = false,
+  children,
+}: {
+  error: unknown
+  inFrame?: boolean
+  children?: ReactNode
+}) {
+  return (
+    <Trouble {...wordsOf(error)} inFrame={inFrame}>
+      {children}
+    </Trouble>
+  )
 }
 
 export function NotFound() {
@@ -59,7 +72,13 @@ export function Trouble({
   text,
   again,
   inFrame = false,
-}: Words & { /** Whether it stands inside a frame's own main part. */ inFrame?: boolean }) {
+  children,
+}: Words & {
+  /** Whether it stands inside a frame's own main part. */
+  inFrame?: boolean
+  /** What else there is to decide. */
+  children?: ReactNode
+}) {
   const Part = inFrame ? 'div' : 'main'
   return (
     <Part className="mx-auto flex min-h-[75dvh] max-w-lg flex-col items-start justify-center px-6 py-12">
@@ -67,6 +86,7 @@ export function Trouble({
       <Mark tone="paper" />
       <h1 className="mt-4 text-2xl">{title}</h1>
       <p className="mt-2 text-ink-soft">{text}</p>
+      {children}
       <div className="mt-6 flex gap-2">
         {again && (
           <Button variant="primary" onClick={() => window.location.reload()}>

@@ -1,29 +1,43 @@
-import { useSuspenseQuery } from '@tanstack/react-query'
+import { useQuery } from '@tanstack/react-query'
 import { Suspense } from 'react'
 import { Outlet, useLocation, useParams } from 'react-router-dom'
+import { useTakeBackNotices } from '#src/features/board/versions/use-take-back-notices.ts'
 import { shootQueries } from '#src/features/shoots/queries.ts'
+import { ApiError } from '#src/lib/api.ts'
 import { shortDate } from '#src/lib/format.ts'
 import { useSettlePictures } from '#src/realtime/outbox/use-outbox.ts'
 import { ShootRealtime, useClosed, useShoot } from '#src/realtime/shoot-realtime.tsx'
 import { ScreenBarAside } from '#src/ui/screen-bar.tsx'
 import { Waiting } from '#src/ui/waiting.tsx'
-import { Trouble } from '../error-view.tsx'
+import { ErrorView, Trouble } from '../error-view.tsx'
 import { sectionLabel, sectionsFor } from '../sections.ts'
 import { useSession } from '../session.ts'
 import { useReadiness } from '../use-readiness.ts'
 import { Frame, Spine, SpineLink } from './frame.tsx'
 import { HereNow } from './here-now.tsx'
+import { LeftBehindCard, LeftBehindNotice } from './left-behind.tsx'
 import { NotShown } from './not-shown.tsx'
 import { SaveSign } from './save-sign.tsx'
 import { ShootBottomBar } from './shoot-bottom-bar.tsx'
 import { useSayWhere } from './use-say-where.ts'
-import { closedWords } from './closed-words.ts'
+import { closedWords, isShut } from './closed-words.ts'
 
 /** Opens a shoot: its documents, its left column, who is here, what is saved. */
 export function ShootLayout() {
   const { shootId = '' } = useParams()
   const { user } = useSession()
-  const { data: shoot } = useSuspenseQuery(shootQueries.detail(shootId))
+  const { data: shoot, error } = useQuery({
+    ...shootQueries.detail(shootId),
+    throwOnError: (failure, query) => query.state.data === undefined && !isGone(failure),
+  })
+  if (!shoot) {
+    if (error === null) return <Waiting className="min-h-dvh" />
+    return (
+      <ErrorView error={error}>
+        <LeftBehindCard shoot={{ id: shootId, title: 'Shoot' }} />
+      </ErrorView>
+    )
+  }
   return (
     <ShootRealtime
       shoot={shoot}
@@ -33,6 +47,11 @@ export function ShootLayout() {
       <OpenShoot />
     </ShootRealtime>
   )
+}
+
+/** Not there, or not there for this person any more. */
+function isGone(error: unknown): boolean {
+  return error instanceof ApiError && error.code === 'NOT_FOUND'
 }
 
 function OpenShoot() {
@@ -45,10 +64,17 @@ function OpenShoot() {
   const here = pathname.slice(root.length + 1).split('/')[0] ?? ''
   useSayWhere(here)
   useSettlePictures()
+  useTakeBackNotices()
   const lamps = new Map(readiness.map((section) => [section.section, section]))
   const label = sectionLabel(here)
   const trouble = closed === null ? null : closedWords(closed)
-  if (trouble) return <Trouble {...trouble} />
+  if (trouble) {
+    return (
+      <Trouble {...trouble}>
+        {isShut(closed) && <LeftBehindCard shoot={{ id: shoot.id, title: shoot.brief.title }} />}
+      </Trouble>
+    )
+  }
   const where = [shoot.brief.date === null ? 'No date yet' : shortDate(shoot.brief.date), shoot.brief.location.name]
     .filter((part) => part.trim() !== '')
     .join(' · ')
@@ -101,6 +127,7 @@ function OpenShoot() {
         )
       }
     >
+      <LeftBehindNotice />
       <title>{`${label === undefined ? '' : `${label} · `}${shoot.brief.title} · Sconce`}</title>
       <ScreenBarAside value={<SaveSign tone="paper" />}>
         <Suspense fallback={<Waiting />}>

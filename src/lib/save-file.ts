@@ -1,0 +1,10 @@
+/** Hands a text file to the browser's downloads. */
+export function saveFile(name: string, text: string): void {
+  const url = URL.createObjectURL(new Blob([text], { type: 'application/json' }))
+  const link = document.createElement('a')
+  link.href = url
+  link.download = name.replace(/[\\/:*?"<>|]/g, ' ')
+  link.click()
+  // Some browsers read it only after the click.
+  setTimeout(() => URL.revokeObjectURL(url), 60_000)
+}

@@ -6,6 +6,9 @@ import { CreateAccountForm } from '#src/features/people/components/create-accoun
 import { LetterSignIn } from '#src/features/people/components/letter-sign-in.tsx'
 import { SignInForm } from '#src/features/people/components/sign-in-form.tsx'
 import { studioQueries } from '#src/features/studios/queries.ts'
+import { count } from '#src/lib/format.ts'
+import { useUnsentOnDevice } from '#src/realtime/use-unsent-on-device.ts'
+import { Caution } from '#src/ui/caution.tsx'
 import { LetterSent } from '../letter-sent.tsx'
 import { safePath, useGoOn } from '../signed-in-again.ts'
 
@@ -84,7 +87,20 @@ export function Component() {
         </div>
       }
     >
+      <KeptHere />
       <SignInForm onSignedIn={() => goOn(to)} onLetterSent={setSentTo} />
     </AccountPage>
+  )
+}
+
+/** After a session has ended by itself: what was not sent is not lost. Without a name, for the device may be shared. */
+function KeptHere() {
+  const unsent = useUnsentOnDevice()
+  if (unsent === 0) return null
+  return (
+    <Caution className="mb-5" title={`${count(unsent, 'change')} ${unsent === 1 ? 'is' : 'are'} kept on this device`}>
+      {unsent === 1 ? 'It goes' : 'They go'} to the server as soon as the person who made {unsent === 1 ? 'it' : 'them'}{' '}
+      signs in again and opens the shoot.
+    </Caution>
   )
 }

@@ -63,7 +63,7 @@ export default defineConfig({
             { name: 'zod', test: /node_modules[\\/]zod[\\/]/ },
             {
               name: 'yjs',
-              test: /node_modules[\\/](yjs|lib0|y-protocols|y-websocket|y-indexeddb|fractional-indexing|idb)[\\/]/,
+              test: /node_modules[\\/](yjs|lib0|y-protocols|y-websocket|fractional-indexing|idb)[\\/]/,
             },
           ],
         },

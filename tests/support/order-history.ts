@@ -219,9 +219,11 @@ export class Person {
   #added: object | null = null
   #popped: object | null = null
 
-  constructor(clientId: number) {
+  /** @param state what a device has kept of the document */
+  constructor(clientId: number, state?: Uint8Array) {
     this.doc = new Y.Doc()
     this.doc.clientID = clientId
+    if (state) Y.applyUpdate(this.doc, state, 'remote')
     this.undo = createUndo(this.doc, [rootOf(this.doc, shots), rootOf(this.doc, frames)])
     const remember = ({ stackItem }: { stackItem: object }) => {
       if (this.#isPopping) {

@@ -86,7 +86,7 @@ const app = createApp({
   letters,
   isServing: () => isServing,
   metrics: {
-    stats: () => ({ compactions: 0, failedChecks: 0, ...realtime.stats() }),
+    stats: () => realtime.stats(),
     loopDelay: watchLoopDelay(),
     version,
     ...(env.metricsToken === undefined ? {} : { token: env.metricsToken }),

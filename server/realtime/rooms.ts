@@ -1,6 +1,7 @@
 import type pg from 'pg'
 import type { DocId, ShootId } from '#shared/ids.ts'
 import type { DocumentKind } from '#shared/realtime/documents.ts'
+import type { Compaction } from './compaction.ts'
 import type { Instances } from './instances.ts'
 import { loadDocument } from './load.ts'
 import { quarantine } from './quarantine.ts'
@@ -37,10 +38,11 @@ export function createRooms(options: {
   pool: pg.Pool
   updateLog: UpdateLog
   instances: Instances
+  compaction: Compaction
   settings: RealtimeSettings
   log: RealtimeLog
 }): Rooms {
-  const { pool, updateLog, instances, settings, log } = options
+  const { pool, updateLog, instances, compaction, settings, log } = options
   const slots = new Map<DocId, Slot>()
   /** Rooms on their way out; who joins meanwhile waits and loads anew. */
   const closing = new Map<DocId, Promise<void>>()
@@ -97,12 +99,18 @@ export function createRooms(options: {
 
   function scheduleUnload(docId: DocId, slot: Slot): void {
     if (slots.get(docId) !== slot) return
-    slot.idle = setTimeout(() => {
-      slot.idle = null
-      if (slot.holds > 0 || slots.get(docId) !== slot || !slot.room) return
-      if (slot.room.isIdle) unload(docId, slot, slot.room)
-      else scheduleUnload(docId, slot)
-    }, settings.idleUnloadMs)
+    slot.idle = setTimeout(() => void unloadWhenIdle(docId, slot), settings.idleUnloadMs)
+  }
+
+  async function unloadWhenIdle(docId: DocId, slot: Slot): Promise<void> {
+    const mayGo = () => slot.holds === 0 && slots.get(docId) === slot
+    const { room } = slot
+    if (!room || !mayGo()) return
+    // Still there meanwhile: whoever comes in finds it as it is.
+    if (room.isIdle) await compaction.beforeUnload(room)
+    if (!mayGo()) return
+    if (room.isIdle) unload(docId, slot, room)
+    else scheduleUnload(docId, slot)
   }
 
   function unload(docId: DocId, slot: Slot, room: Room): void {
@@ -128,7 +136,12 @@ export function createRooms(options: {
     },
     get: (docId) => slots.get(docId)?.room ?? undefined,
     all,
-    committed: (committed) => slots.get(committed.docId)?.room?.committed(committed),
+    committed: (committed) => {
+      const room = slots.get(committed.docId)?.room
+      if (!room) return
+      room.committed(committed)
+      compaction.consider(room, committed)
+    },
     evict: (room) => {
       const slot = slots.get(room.place.docId)
       if (slot?.room === room) unload(room.place.docId, slot, room)

@@ -7,6 +7,7 @@ import type { ShootId } from '#shared/ids.ts'
 import type { Documents } from '#server/adapters/documents.ts'
 import type { Db } from '#server/db/client.ts'
 import { type Admission, type Authenticate, admit } from './authorise.ts'
+import { createCompaction } from './compaction.ts'
 import { Connection } from './connection.ts'
 import { createDocuments } from './documents.ts'
 import { createHeadsWatch } from './heads-watch.ts'
@@ -39,6 +40,9 @@ export type RealtimeStats = {
   lagging: number
   /** Other processes heard of on the same database. */
   instances: number
+  compactions: number
+  /** Snapshots that would not have been the document; the log stayed. */
+  failedChecks: number
   queuedEntries: number
   queuedBytes: number
   oldestMs: number
@@ -114,7 +118,8 @@ export function createRealtime(options: {
     },
     onGone: (instance) => rooms.all().forEach(({ presence }) => presence.instanceGone(instance)),
   })
-  const rooms = createRooms({ pool, updateLog, instances, settings, log })
+  const compaction = createCompaction({ pool, databaseUrl, updateLog, settings, log })
+  const rooms = createRooms({ pool, updateLog, instances, compaction, settings, log })
   const heads = createHeadsWatch({ pool, rooms, settings, log })
   const watch = createRightsWatch({ db, databaseUrl, settings, log, connections })
   const documents = createDocuments({
@@ -254,7 +259,7 @@ export function createRealtime(options: {
     updateLog.stop()
     heads.stop()
     rooms.stop()
-    await Promise.all([watch.stop(), instances.stop()])
+    await Promise.all([watch.stop(), instances.stop(), compaction.stop()])
     // A connection that hangs has nothing left that anybody waits for.
     await Promise.race([pool.end(), new Promise((resolve) => setTimeout(resolve, 2_000))])
   }
@@ -271,6 +276,8 @@ export function createRealtime(options: {
     stats: () => ({
       connections: connections.size,
       instances: instances.others(),
+      compactions: compaction.stats().compactions,
+      failedChecks: compaction.stats().failedChecks,
       ...rooms.stats(),
       ...updateLog.stats(),
     }),

@@ -59,9 +59,9 @@ const all: readonly Scenario[] = [
   hostile,
   idleScenario(60),
 ]
-const chosen = all.filter(({ name }) =>
-  values.scenario.split(',').some((word) => word === 'all' || name.startsWith(word)),
-)
+const isChosen = (name: string) =>
+  values.scenario.split(',').some((word) => word === 'all' || word === name || name.startsWith(`${word}-`))
+const chosen = all.filter(({ name }) => isChosen(name))
 if (chosen.length === 0) throw new Error(`scenarios: all, ${all.map(({ name }) => name).join(', ')}`)
 
 const targets = values.peers ? ['sconce', ...PEERS.map(({ name }) => name)] : values.targets.split(',')

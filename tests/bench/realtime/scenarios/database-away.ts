@@ -71,10 +71,11 @@ async function runAway(target: Target, { database }: Bench) {
     const drainFromMs = performance.now()
     const areAcked = () => clients.every((client) => !client.isOpen || client.acked >= client.sent)
     while (!areAcked() && performance.now() - drainFromMs < DRAIN_MS) await pause(10)
-    const allAckedAfterMs = areAcked() ? Math.round(performance.now() - backMs) : null
+    const ackedMs = performance.now()
     await pause(target.settleMs)
     const survived = server.isAlive()
     const disconnected = clients.filter((client) => client.closeCode !== null).length
+    const allAckedAfterMs = areAcked() && disconnected === 0 ? Math.round(ackedMs - backMs) : null
     const notConverged = await countDifferent(clients)
     const acked = marks.filter((mark) => makers.isAcked(mark))
     await server.kill('SIGKILL')

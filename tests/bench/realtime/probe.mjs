@@ -35,3 +35,5 @@ process.on('message', (/** @type {string} */ question) => {
 })
 // The channel is no reason to stay.
 process.channel?.unref()
+// Whoever measures is gone: nobody else would end this.
+process.on('disconnect', () => process.exit())

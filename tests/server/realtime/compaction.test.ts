@@ -156,11 +156,11 @@ async function holdSnapshots(): Promise<() => Promise<void>> {
   }
 }
 
-/** How many compactions wait for such a lock: `relation`, to put their snapshot in, or `transactionid`, for the row. */
-async function waiting(lock: 'relation' | 'transactionid'): Promise<number> {
+/** How many compactions wait to put their snapshot in, or for somebody to be done with the row (or with theirs). */
+async function waiting(lock: 'relation' | 'row'): Promise<number> {
   const { rows } = await pool.query<{ n: number }>(
-    `select count(*)::int as n from pg_stat_activity where ${IN_COMPACTION} and wait_event_type = 'Lock' and wait_event = $1`,
-    [lock],
+    `select count(*)::int as n from pg_stat_activity where ${IN_COMPACTION} and wait_event_type = 'Lock' and wait_event = any($1)`,
+    [lock === 'row' ? ['transactionid', 'tuple'] : ['relation']],
   )
   return rows[0]?.n ?? 0
 }
@@ -227,7 +227,7 @@ describe('a compaction', () => {
     await edit(process, 50, random)
     const letGo = await holdRow()
     const compacted = process.compact()
-    await until(async () => (await waiting('transactionid')) === 1)
+    await until(async () => (await waiting('row')) === 1)
     const edits = edit(process, 30, random)
     await letGo()
     await Promise.all([compacted, edits])
@@ -250,7 +250,7 @@ describe('a compaction', () => {
     const compacted = here.compact()
     // By the time that this one has read the log, the other would have, had it not waited.
     const other = there.compact()
-    await until(async () => (await waiting('transactionid')) === 1)
+    await until(async () => (await waiting('row')) === 1)
     await letGo()
     await Promise.all([edits, compacted, other])
     expect(here.compaction.stats()).toMatchObject({ failedChecks: 0, failures: 0 })
@@ -349,7 +349,7 @@ describe('two processes that compact one document at once', () => {
     const there = await open()
     const letGo = await holdRow()
     const both = [here.compact(), there.compact()]
-    await until(async () => (await waiting('transactionid')) === 2)
+    await until(async () => (await waiting('row')) === 2)
     await letGo()
     const stats = await Promise.all(both)
     expect(stats.reduce((sum, { compactions }) => sum + compactions, 0)).toBe(1)
@@ -530,7 +530,7 @@ describe('stop', () => {
     await edit(process, 30, seededRandom(2))
     const letGo = await holdRow()
     const unloading = process.compaction.beforeUnload(process.room)
-    await until(async () => (await waiting('transactionid')) === 1)
+    await until(async () => (await waiting('row')) === 1)
     await process.compaction.stop()
     await unloading
     await letGo()
@@ -583,7 +583,7 @@ describe('a process that is killed', () => {
     // Now it edits no more: the row can be held without stopping it before it compacts.
     const letGoOfRow = await holdRow()
     await letSnapshotsIn()
-    await until(async () => (await waiting('transactionid')) === 1)
+    await until(async () => (await waiting('row')) === 1)
     await first.kill()
     await letGoOfRow()
     await checkStored(first.last('stored') + 1)

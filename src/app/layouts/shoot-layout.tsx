@@ -40,6 +40,7 @@ export function ShootLayout() {
   }
   return (
     <ShootRealtime
+      key={shoot.id}
       shoot={shoot}
       userId={user.id}
       waiting={<Waiting label={`Opening ${shoot.brief.title}`} className="min-h-dvh" />}

@@ -78,7 +78,11 @@ export function Strip({ mayWrite }: { mayWrite: boolean }) {
         <span className="text-xs text-bone-soft">{hint.join(' · ')}</span>
       </header>
       <DndContext {...context}>
-        <div className="flex items-start gap-6 overflow-x-auto px-6 pt-2 pb-3">
+        <div
+          // Without anything to press in it, the keyboard could not scroll it.
+          {...(mayWrite ? {} : { tabIndex: 0, role: 'group', 'aria-label': 'All shots' })}
+          className="flex items-start gap-6 overflow-x-auto px-6 pt-2 pb-3"
+        >
           {shown.map((list) => (
             <Fragment key={list.id}>
               {several && (

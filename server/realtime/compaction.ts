@@ -1,3 +1,4 @@
+import { setImmediate } from 'node:timers/promises'
 import type pg from 'pg'
 import * as Y from 'yjs'
 import type { DocId } from '#shared/ids.ts'
@@ -106,7 +107,7 @@ export function createCompaction(options: {
     if (isRunning) return
     isRunning = true
     for (const [docId, { room, finish }] of queue) {
-      if (!isStopped) await compact(room).catch((error: unknown) => onFailure(docId, reasonOf(error)))
+      await compact(room).catch((error: unknown) => onFailure(docId, reasonOf(error)))
       queue.delete(docId)
       finish()
     }
@@ -114,7 +115,9 @@ export function createCompaction(options: {
   }
 
   async function compact(room: CompactedRoom): Promise<void> {
-    if (room.isBroken) return
+    // The commit that this follows is acknowledged first: encoding holds everybody up.
+    await setImmediate()
+    if (isStopped || room.isBroken) return
     const { docId } = room.place
     const startedAtMs = performance.now()
     const live = { head: room.head, state: Y.encodeStateAsUpdate(room.doc) }

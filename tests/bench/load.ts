@@ -14,7 +14,7 @@ import { PEERS } from './realtime/targets/peers.ts'
  * protocol on the same machine and database.
  *
  *   npm run bench -- load                                    10×1, 50×1, 200×1 and 200×40 clients × documents
- *   npm run bench -- load --peers --scenario all             everything, compared
+ *   npm run bench -- load --peers --scenario all --wait 60   everything, compared, each run on a quiet machine if one comes
  *   npm run bench -- load --targets sconce,hocuspocus-4      chosen servers
  *   npm run bench -- load --clients 100 --docs 4 --rate 10 --cursors 5 --seconds 30
  *   npm run bench -- load --scenario durability,database-away --rounds 5
@@ -30,6 +30,7 @@ const { values } = parseArgs({
     rate: { type: 'string', default: String(LOAD.rate) },
     cursors: { type: 'string', default: String(LOAD.pointerRate) },
     seconds: { type: 'string', default: String(LOAD.seconds) },
+    wait: { type: 'string', default: '0' },
     rounds: { type: 'string', default: '20' },
     profile: { type: 'string' },
   },
@@ -65,4 +66,5 @@ const chosen = all.filter(({ name }) => isChosen(name))
 if (chosen.length === 0) throw new Error(`scenarios: all, ${all.map(({ name }) => name).join(', ')}`)
 
 const targets = values.peers ? ['sconce', ...PEERS.map(({ name }) => name)] : values.targets.split(',')
-process.exit((await runScenarios(chosen, targets)) ? 0 : 1)
+const isGood = await runScenarios(chosen, { targets, waitS: Number(values.wait) })
+process.exit(isGood ? 0 : 1)

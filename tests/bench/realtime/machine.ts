@@ -1,12 +1,14 @@
 import { readFileSync, readdirSync, writeFileSync } from 'node:fs'
 import { availableParallelism } from 'node:os'
 import { performance } from 'node:perf_hooks'
+import { pause } from '#tests/realtime/support/client.ts'
 import { round } from './stats.ts'
 
 /** What processes use, from Linux' /proc. */
 
 /** Of /proc's times; 100 on every Linux this runs on. */
 const TICKS_PER_SECOND = 100
+const QUIET_PERCENT = 10
 
 /** The fields of /proc/PID/stat from the state on, or undefined when there is no such process. */
 function statOf(pid: number): string[] | undefined {
@@ -87,4 +89,12 @@ export async function withForeignCpu<T>(run: () => Promise<T>): Promise<{ result
   const foreign = busySeconds() - busy - (cpuSecondsOf(process.pid) - own)
   const available = (availableParallelism() * (performance.now() - startedMs)) / 1000
   return { result, foreignCpuPercent: round((100 * Math.max(0, foreign)) / available) }
+}
+
+/** Waits until others use little of the machine, for at most so many seconds. */
+export async function untilQuiet(limitS: number): Promise<void> {
+  for (let second = 0; second < limitS; second++) {
+    const { foreignCpuPercent } = await withForeignCpu(() => pause(1_000))
+    if (foreignCpuPercent < QUIET_PERCENT) return
+  }
 }

@@ -1,5 +1,5 @@
 import { startBenchDatabase } from './database.ts'
-import { withForeignCpu } from './machine.ts'
+import { untilQuiet, withForeignCpu } from './machine.ts'
 import type { Cell, Scenario } from './scenarios/scenario.ts'
 import { table } from './table.ts'
 import { PEERS, createPeer, isInstalled } from './targets/peers.ts'
@@ -13,7 +13,16 @@ import type { Target } from './targets/target.ts'
  *
  * Generator, server and database share the machine; `others %` is how much of it something else used meanwhile.
  */
-export async function runScenarios(scenarios: readonly Scenario[], wanted: readonly string[]): Promise<boolean> {
+export async function runScenarios(
+  scenarios: readonly Scenario[],
+  options: {
+    /** Names of targets. */
+    targets: readonly string[]
+    /** How long each run waits for others to leave the machine alone, at most. */
+    waitS: number
+  },
+): Promise<boolean> {
+  const { targets: wanted, waitS } = options
   const print = (text: string) => process.stdout.write(`${text}\n`)
   const say = (text: string) => process.stderr.write(`${text}\n`)
   const database = await startBenchDatabase()
@@ -31,6 +40,7 @@ export async function runScenarios(scenarios: readonly Scenario[], wanted: reado
     let isGood = true
     for (const scenario of scenarios) {
       for (const target of targets) {
+        await untilQuiet(waitS)
         say(`${scenario.name}: ${target.name} …`)
         const { result, foreignCpuPercent } = await withForeignCpu(() => attempt(scenario, target, { database, say }))
         if (!result) continue

@@ -68,10 +68,12 @@ export function createCompaction(options: {
   pool: pg.Pool
   databaseUrl: string
   updateLog: Pick<UpdateLog, 'settled'>
+  /** Whether people are served by this process only. */
+  isAlone: () => boolean
   settings: RealtimeSettings
   log: RealtimeLog
 }): Compaction {
-  const { pool, databaseUrl, updateLog, settings, log } = options
+  const { pool, databaseUrl, updateLog, isAlone, settings, log } = options
   const { statementMs, keepReplacedMs } = settings
   const thread = createCompactThread({ databaseUrl, statementMs, keepReplacedMs })
   /** In the order in which they came; the first is the one under way. */
@@ -80,8 +82,6 @@ export function createCompaction(options: {
   const totals = { compactions: 0, failedChecks: 0, failures: 0, lastMs: 0, lastCaptureMs: 0 }
   let isRunning = false
   let isStopped = false
-
-  const isLong = (rows: number, bytes: number, longRows: number) => rows >= longRows || bytes >= settings.compactBytes
 
   function isResting(docId: DocId): boolean {
     const until = restUntilMs.get(docId)
@@ -165,7 +165,8 @@ export function createCompaction(options: {
         [room.place.docId],
       )
       const [row] = rows
-      if (row && isLong(row.log_rows, Number(row.log_bytes), settings.compactIdleRows)) await enqueue(room)
+      const { compactIdleRows, compactBytes } = settings
+      if (row && (row.log_rows >= compactIdleRows || Number(row.log_bytes) >= compactBytes)) await enqueue(room)
     } catch (error) {
       log.warn({ docId: room.place.docId, error: reasonOf(error) }, 'document not tidied')
     }
@@ -179,7 +180,7 @@ export function createCompaction(options: {
         { userId: null, peer: null },
         () => {
           purgeDeleted(doc, place.kind, Date.now() - settings.purgeDeletedMs)
-          if (room.peers.size === 0) shortenKeys(doc, place.kind, settings.longestKey, Math.random)
+          if (room.peers.size === 0 && isAlone()) shortenKeys(doc, place.kind, settings.longestKey, Math.random)
         },
         resolve,
       )
@@ -188,7 +189,9 @@ export function createCompaction(options: {
 
   return {
     consider: (room, { logRows, logBytes }) => {
-      if (isLong(logRows, logBytes, settings.compactRows)) void enqueue(room)
+      // A large document is not written anew for every few hundred small moves.
+      const times = Math.max(1, room.sizeBytes / settings.compactBytes)
+      if (logRows >= settings.compactRows * times || logBytes >= settings.compactBytes * times) void enqueue(room)
     },
     beforeUnload,
     stats: () => ({ ...totals, running: isRunning, waiting: Math.max(0, queue.size - (isRunning ? 1 : 0)) }),

@@ -118,7 +118,14 @@ export function createRealtime(options: {
     },
     onGone: (instance) => rooms.all().forEach(({ presence }) => presence.instanceGone(instance)),
   })
-  const compaction = createCompaction({ pool, databaseUrl, updateLog, settings, log })
+  const compaction = createCompaction({
+    pool,
+    databaseUrl,
+    updateLog,
+    isAlone: () => instances.others() === 0,
+    settings,
+    log,
+  })
   const rooms = createRooms({ pool, updateLog, instances, compaction, settings, log })
   const heads = createHeadsWatch({ pool, rooms, settings, log })
   const watch = createRightsWatch({ db, databaseUrl, settings, log, connections })

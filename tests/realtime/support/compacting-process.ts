@@ -10,7 +10,7 @@ if (databaseUrl === undefined) throw new Error('DATABASE_URL is not set')
 const { pool } = connectDatabase(databaseUrl, () => undefined, 4)
 const settings = { ...DEFAULT_SETTINGS, compactIdleRows: 1 }
 const { room, updateLog, edit } = await openRoom({ pool, docId: docIdSchema.parse(process.env['DOC_ID']), settings })
-const compaction = createCompaction({ pool, databaseUrl, updateLog, settings, log: quiet })
+const compaction = createCompaction({ pool, databaseUrl, updateLog, isAlone: () => true, settings, log: quiet })
 const stored = room.doc.getMap<number>('stored')
 for (let n = stored.size; ; n++) {
   await edit(null, () => {

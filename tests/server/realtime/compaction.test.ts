@@ -76,6 +76,7 @@ async function open(more: Partial<RealtimeSettings> = {}): Promise<Process> {
     pool,
     databaseUrl: database.url,
     updateLog: opened.updateLog,
+    isAlone: () => true,
     settings,
     log: { info: say('info'), warn: say('warn'), error: say('error') },
   })

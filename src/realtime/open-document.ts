@@ -43,6 +43,8 @@ export type DocumentEvents = {
   onHello: (kind: DocumentKind, hello: Hello, isNew: boolean) => void
   /** Edits that this person may no longer send were put aside; the document has to be opened anew. */
   onPutAside: () => void
+  /** The document was rebuilt: it has to be opened anew in its present epoch. */
+  onPast: () => void
 }
 
 type Options = DocumentEvents & {
@@ -65,7 +67,7 @@ const EMPTY_STEP_2 = new Uint8Array([MESSAGE.sync, 1, 2, 0, 0])
 
 /** Opens one of a shoot's documents: first from this device, then from the server, and keeps both in step. */
 export function openDocument(options: Options): OpenDocument {
-  const { kind, shootId, userId, role, epoch, onChanged, onHello, onPutAside } = options
+  const { kind, shootId, userId, role, epoch, onChanged, onHello, onPutAside, onPast } = options
   const doc = new Y.Doc()
   const name = cacheName(userId, shootId, kind, epoch)
   const acks = countAcknowledgements()
@@ -255,8 +257,7 @@ export function openDocument(options: Options): OpenDocument {
     clearTimeout(brief)
     closed.set(code)
     update({ outdated: code === CLOSE.epoch, link: 'down' })
-    // There is a newer one: the page goes on with it as soon as it knows which.
-    if (code === CLOSE.epoch) onChanged([['shoots', shootId]])
+    if (code === CLOSE.epoch) onPast()
   })
 
   /** Edits of pages that are gone are sent from here. */

@@ -6,6 +6,7 @@ import type { ShootView } from '#shared/api/shoots.ts'
 import { DOCUMENT_KINDS, DOCUMENT_SCHEMA, type DocumentKind } from '#shared/realtime/documents.ts'
 import { takeAllOver } from '#src/lib/typing.ts'
 import { forgetPastCaches } from './left-behind.ts'
+import { CLOSE } from '#shared/realtime/protocol.ts'
 import { type DocumentEvents, type OpenDocument, openDocument } from './open-document.ts'
 import { listenForSignOut } from './sign-out.ts'
 
@@ -38,6 +39,8 @@ export function ShootRealtime({ shoot, userId, children, waiting }: ShootRealtim
     const known = JSON.parse(epochs) as Record<string, number>
     const queryKey = ['shoots', shootId]
     let isFirst = true
+    let past: ReturnType<typeof setTimeout> | undefined
+    const openAnew = () => setOpening((before) => before + 1)
     const events: DocumentEvents = {
       onChanged: (keys) => {
         for (const key of keys) void queryClient.invalidateQueries({ queryKey: key })
@@ -50,7 +53,13 @@ export function ShootRealtime({ shoot, userId, children, waiting }: ShootRealtim
           isFirst = false
         } else if (isOtherRole) void queryClient.invalidateQueries({ queryKey, exact: true })
       },
-      onPutAside: () => setOpening((before) => before + 1),
+      onPutAside: openAnew,
+      // There is a newer one, and which is asked first. The pause is for the server to put the old one away everywhere.
+      onPast: () => {
+        void queryClient.invalidateQueries({ queryKey, exact: true })
+        clearTimeout(past)
+        past = setTimeout(openAnew, 2_000 + 4_000 * Math.random())
+      },
     }
     const open = (kind: DocumentKind) =>
       openDocument({ kind, shootId, userId, role: role.current, epoch: known[kind] ?? 1, ...events })
@@ -76,6 +85,7 @@ export function ShootRealtime({ shoot, userId, children, waiting }: ShootRealtim
     return () => {
       // Fields below close after this: their words go into the documents while these are open.
       takeAllOver()
+      clearTimeout(past)
       window.removeEventListener('beforeunload', handleUnload)
       const left = DOCUMENT_KINDS.map((kind) => opened[kind].leave())
       void Promise.all(left).then(stopListening)
@@ -109,7 +119,7 @@ function WhenReady({
   )
   const closed = useFirstClosed(documents)
   // What is shut for good is told by the screens.
-  return ready || closed !== null ? children : waiting
+  return ready || (closed !== null && closed !== CLOSE.epoch) ? children : waiting
 }
 
 /** Subscribes to something of every document; returns one unsubscribe. */

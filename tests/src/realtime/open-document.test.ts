@@ -18,6 +18,7 @@ let end: FarEnd
 let opened: OpenDocument[]
 let fetched: string[]
 let putAside: number
+let past: number
 let hellos: boolean[]
 
 type Page = {
@@ -38,6 +39,7 @@ function page(change: { userId?: string; epoch?: number; role?: 'photographer' |
     onChanged: (keys) => fetched.push(...keys.map((key) => key.join('/'))),
     onHello: (_kind, _hello, isNew) => hellos.push(isNew),
     onPutAside: () => putAside++,
+    onPast: () => past++,
   })
   opened.push(document)
   return {
@@ -73,6 +75,7 @@ beforeEach(() => {
   opened = []
   fetched = []
   putAside = 0
+  past = 0
   hellos = []
 })
 afterEach(() => {
@@ -220,7 +223,7 @@ describe('openDocument', () => {
     one.write('for the old epoch')
     end.answer = CLOSE.epoch
     await until(() => one.document.closed.get() === CLOSE.epoch)
-    expect(fetched).toContain('shoots/shoot')
+    expect(past).toBe(1)
     expect(one.sign()).toBe('reload')
     await one.document.leave()
     end.answer = 'take'

@@ -1,6 +1,5 @@
 // @vitest-environment jsdom
 import { cleanup, fireEvent, screen, waitFor, within } from '@testing-library/react'
-import { Route, Routes } from 'react-router-dom'
 import { afterEach, beforeEach, describe, expect, it } from 'vitest'
 import * as Y from 'yjs'
 import type { Role } from '#shared/access/roles.ts'
@@ -77,17 +76,10 @@ function open(role: Role, kept: Version[] = [version(0)], api: FakeApi = {}): Sh
   putItems(board, notes, [{ id: noteIdSchema.parse(uuid(9)), box: [0, 0, 80, 40], text: 'later' }], () => 0.5)
   upsertItem(plan, shotPlans, { id: SHOT, minutes: 45 })
   shoot.show(
-    <Routes>
-      <Route
-        path="*"
-        element={
-          <>
-            <VersionsDialog open onOpenChange={() => undefined} />
-            <Undo />
-          </>
-        }
-      />
-    </Routes>,
+    <>
+      <VersionsDialog open onOpenChange={() => undefined} />
+      <Undo />
+    </>,
   )
   return shoot
 }

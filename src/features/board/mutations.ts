@@ -77,9 +77,9 @@ export function useTakeBack() {
         method: 'POST',
         response: versionsSchema,
       })
-      takeBackVersion(documents, openVersion(states, documents), kinds, Date.now())
-      return versions
+      const written = takeBackVersion(documents, openVersion(states, documents), kinds, Date.now())
+      return { versions, written }
     },
-    onSuccess: (versions) => queryClient.setQueryData(boardQueries.versions(shoot.id).queryKey, versions),
+    onSuccess: ({ versions }) => queryClient.setQueryData(boardQueries.versions(shoot.id).queryKey, versions),
   })
 }

@@ -27,15 +27,15 @@ export function openVersion(
 }
 
 /**
- * Makes the documents of these kinds what they were, as one step of the hand. Others see it happen; one undo takes it
- * back. Returns whether anything differed.
+ * Makes the documents of these kinds what they were, as one step of the hand. Others see it happen; one undo, in either
+ * document, takes it back. Returns the kinds that differed.
  */
-export function takeBackVersion(now: OpenKept, past: PastDocs, kinds: readonly KeptKind[], nowMs: number): boolean {
+export function takeBackVersion(now: OpenKept, past: PastDocs, kinds: readonly KeptKind[], nowMs: number): KeptKind[] {
   for (const kind of kinds) now[kind].undo.stopCapturing()
   const written = kinds.filter((kind) => takeBack(now[kind].doc, kind, past[kind], nowMs))
   for (const kind of kinds) now[kind].undo.stopCapturing()
   if (written.length === KEPT_KINDS.length) linkNewestSteps(now.board.undo, now.plan.undo)
-  return written.length > 0
+  return written
 }
 
 /** How many things taking a version back does what to, by their word. */

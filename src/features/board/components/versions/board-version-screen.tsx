@@ -1,4 +1,3 @@
-import { useEffect } from 'react'
 import { usePastBoard } from '../../versions/use-past-board.ts'
 import { BoardView } from '../board-screen.tsx'
 import { VersionBand } from './version-band.tsx'
@@ -8,8 +7,6 @@ const NOTHING_DONE = { canUndo: false, canRedo: false }
 /** The board as a kept version has it: everything to be seen, nothing to be changed. */
 export function BoardVersionScreen({ versionId }: { versionId: string }) {
   const { version, ...board } = usePastBoard(versionId)
-  // The list that led here gives the focus back to a button that is gone.
-  useEffect(() => document.querySelector('main')?.focus({ preventScroll: true }), [])
   return (
     <div className="flex h-full flex-col">
       <VersionBand kept={version} />

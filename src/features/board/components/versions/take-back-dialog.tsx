@@ -33,11 +33,9 @@ export function TakeBackDialog({ version, onClose, onTakenBack }: TakeBackDialog
     takeBack.mutate(
       { id: version.id, kinds },
       {
-        onSuccess: () => {
-          toast.say(`The board is as it was in “${version.name}”.`, {
-            label: 'Undo',
-            onPress: () => documents[kinds[0] ?? 'board'].undo.undo(),
-          })
+        onSuccess: ({ written: [kind] }) => {
+          const undo = kind && { label: 'Undo', onPress: () => void documents[kind].undo.undo() }
+          toast.say(`The board is as it was in “${version.name}”.`, undo)
           onTakenBack()
         },
       },

@@ -58,6 +58,8 @@ export type View = {
   frames: Record<string, string>
 }
 
+const REMOVED_AT_MS = Date.UTC(2026, 9, 14)
+
 export const EMPTY_VIEW: View = { lists: { 'day one': [], 'day two': [], loose: [] }, looks: {}, frames: {} }
 
 type Act =
@@ -205,8 +207,18 @@ function changesOf(before: Fields, after: Fields): Map<string, string | undefine
   return changes
 }
 
-/** What one undo step replaced. */
-type Step = Map<string, string | undefined>
+/** What one undo step replaced, field by field: more than one value when somebody else wrote while it went on. */
+type Step = Map<string, { replaced: (string | undefined)[]; wrote: string | undefined }>
+
+function extend(step: Step, before: Fields, after: Fields, hasHeard: boolean): Step {
+  for (const [name, was] of changesOf(before, after)) {
+    const field = step.get(name)
+    const isOwn = field?.wrote === was && !hasHeard
+    const replaced = field && isOwn ? field.replaced : [...(field?.replaced ?? []), was]
+    step.set(name, { replaced, wrote: after.get(name) })
+  }
+  return step
+}
 
 /** A person with the document as they have it. Whatever they do that plain arrays would not is thrown. */
 export class Person {
@@ -216,6 +228,8 @@ export class Person {
   readonly #steps = new WeakMap<object, Step>()
   #seen: Fields = new Map()
   #isPopping = false
+  /** Whether something came from others since the last deed. */
+  #hasHeard = false
   #added: object | null = null
   #popped: object | null = null
 
@@ -225,15 +239,16 @@ export class Person {
     this.doc.clientID = clientId
     if (state) Y.applyUpdate(this.doc, state, 'remote')
     this.undo = createUndo(this.doc, [rootOf(this.doc, shots), rootOf(this.doc, frames)])
+    this.doc.on('update', (_update: Uint8Array, _origin: unknown, _doc: Y.Doc, { local }: Y.Transaction) => {
+      if (!local) this.#hasHeard = true
+    })
     const remember = ({ stackItem }: { stackItem: object }) => {
       if (this.#isPopping) {
         this.#added = stackItem
         return
       }
       const now = fieldsOf(this.doc)
-      const step = this.#steps.get(stackItem) ?? new Map<string, string | undefined>()
-      for (const [name, was] of changesOf(this.#seen, now)) if (!step.has(name)) step.set(name, was)
-      this.#steps.set(stackItem, step)
+      this.#steps.set(stackItem, extend(this.#steps.get(stackItem) ?? new Map(), this.#seen, now, this.#hasHeard))
       this.#seen = now
     }
     this.undo.on('stack-item-added', remember)
@@ -252,25 +267,32 @@ export class Person {
     if (!deed.joins) this.undo.stopCapturing()
     const fields = (this.#seen = fieldsOf(this.doc))
     withChance(deed.isUnlucky ? () => 0.3 : seededRandom(n), () => perform(this.doc, act, deed.two < 0.5))
+    this.#hasHeard = false
     demandSame(viewOf(this.doc), viewAfter(before, act), `${this.doc.clientID} did ${JSON.stringify(act)}`)
     if (act.kind === 'move' || act.kind === 'add') demandOwnKey(this.doc, act.id, act.list)
     return changesOf(fields, fieldsOf(this.doc)).size > 0
   }
 
-  /** Nothing may change but what the step holds, and that only to what it was before the step. */
-  #goBack(kind: 'undo' | 'redo'): boolean {
-    const before = fieldsOf(this.doc)
+  #pop(kind: 'undo' | 'redo'): void {
     this.#added = this.#popped = null
     this.#isPopping = true
     this.undo[kind]()
     this.#isPopping = false
+  }
+
+  /** Nothing may change but what the step holds, and that only to what it was before the step. */
+  #goBack(kind: 'undo' | 'redo'): boolean {
+    const before = fieldsOf(this.doc)
+    this.#pop(kind)
     const after = fieldsOf(this.doc)
-    const step = (this.#popped && this.#steps.get(this.#popped)) ?? new Map<string, string | undefined>()
+    const step = this.#popped && this.#steps.get(this.#popped)
     const changes = changesOf(before, after)
-    for (const [name, was] of changes)
-      if (!step.has(name) || after.get(name) !== step.get(name))
-        throw new Error(`${kind} made ${name} ${after.get(name)}: was ${was}, before the step ${step.get(name)}`)
-    if (this.#added) this.#steps.set(this.#added, changes)
+    for (const [name, was] of changes) {
+      const replaced = step?.get(name)?.replaced ?? []
+      if (!replaced.includes(after.get(name)))
+        throw new Error(`${kind} made ${name} ${after.get(name)}: was ${was}, before the step ${replaced.join()}`)
+    }
+    if (this.#added) this.#steps.set(this.#added, extend(new Map(), before, after, false))
     return changes.size > 0
   }
 }
@@ -309,7 +331,7 @@ function perform(doc: Y.Doc, act: Act, isOther: boolean): void {
         act.ids.map((id) => shotIdSchema.parse(id)),
       )
     case 'remove':
-      return removeItems(doc, shots, [act.id], Date.now())
+      return removeItems(doc, shots, [act.id], REMOVED_AT_MS)
     case 'hang': {
       const picture = {
         uploadId: uploadIdSchema.parse(uuid(4, 1)),
@@ -323,7 +345,7 @@ function perform(doc: Y.Doc, act: Act, isOther: boolean): void {
       patchItem(doc, frames, act.id, { box: act.box })
       return
     case 'take down':
-      return removeItems(doc, frames, [act.id], Date.now())
+      return removeItems(doc, frames, [act.id], REMOVED_AT_MS)
     case 'look':
       return addMember(doc, shots, act.id, 'lookIds', lookIdSchema.parse(act.lookId), Math.random)
     case 'no look':

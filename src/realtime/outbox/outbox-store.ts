@@ -18,6 +18,8 @@ export type OutboxEntry = {
 
 export type OutboxStore = {
   list(): Promise<OutboxEntry[]>
+  /** How many there are, those of other pages included. */
+  count(): Promise<number>
   /** @throws DOMException QuotaExceededError when the device is full. */
   put(entry: OutboxEntry): Promise<void>
   remove(uploadId: string): Promise<void>
@@ -47,6 +49,7 @@ export async function openOutboxStore(name: string): Promise<OutboxStore> {
   }
   return {
     list: () => database.getAll('pictures'),
+    count: () => database.count('pictures'),
     put: async (entry) => void (await database.put('pictures', entry)),
     remove: (uploadId) => database.delete('pictures', uploadId),
   }
@@ -57,6 +60,7 @@ export function memoryOutboxStore(): OutboxStore {
   const entries = new Map<string, OutboxEntry>()
   return {
     list: () => Promise.resolve([...entries.values()]),
+    count: () => Promise.resolve(entries.size),
     put: (entry) => Promise.resolve(void entries.set(entry.uploadId, entry)),
     remove: (uploadId) => Promise.resolve(void entries.delete(uploadId)),
   }

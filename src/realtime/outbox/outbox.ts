@@ -49,7 +49,7 @@ type Deps = {
   prepare: (file: Blob) => Promise<PreparedPicture>
   now: () => number
   random: () => number
-  /** Told how many pictures are on this device only. */
+  /** Told how many pictures are on this device only, whichever page they were added on. */
   onCount: (count: number) => void
 }
 
@@ -75,10 +75,13 @@ export function createOutbox({ shootId, store, send, prepare, now, random, onCou
 
   const change = (uploadId: string, patch: Partial<OutboxItem>) =>
     items.set(items.get().map((item) => (item.uploadId === uploadId ? { ...item, ...patch } : item)))
+  const tellCount = async () => {
+    const count = await (await store).count().catch(() => entries.size)
+    if (!destroyed) onCount(count)
+  }
   const show = (entry: OutboxEntry) => {
     const { uploadId, name, addedAtMs, widthPx, heightPx, state, why = '', blob } = entry
     entries.set(uploadId, entry)
-    onCount(entries.size)
     items.set([
       ...items.get(),
       { uploadId, name, addedAtMs, widthPx, heightPx, state, progress: 0, why, localUrl: URL.createObjectURL(blob) },
@@ -100,8 +103,8 @@ export function createOutbox({ shootId, store, send, prepare, now, random, onCou
   }
   const forget = async (uploadId: string) => {
     entries.delete(uploadId)
-    onCount(entries.size)
     await (await store).remove(uploadId)
+    await tellCount()
   }
 
   async function sendOne(entry: OutboxEntry) {
@@ -160,6 +163,7 @@ export function createOutbox({ shootId, store, send, prepare, now, random, onCou
     if (destroyed) return
     for (const entry of kept.sort((a, b) => a.addedAtMs - b.addedAtMs)) if (!entries.has(entry.uploadId)) show(entry)
     pump()
+    await tellCount()
   })
 
   return {
@@ -185,6 +189,7 @@ export function createOutbox({ shootId, store, send, prepare, now, random, onCou
       }
       show(entry)
       pump()
+      await tellCount()
       return { uploadId: entry.uploadId, widthPx: entry.widthPx, heightPx: entry.heightPx }
     },
     retry(uploadId) {

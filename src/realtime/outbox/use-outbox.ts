@@ -1,7 +1,7 @@
 import { useEffect, useMemo, useSyncExternalStore } from 'react'
 import { patchItem, readAll } from '#shared/realtime/collection.ts'
 import { frames } from '#shared/realtime/documents.ts'
-import { useDoc, useShootContext } from '../shoot-realtime.tsx'
+import { useDoc, useMayWrite, useShootContext } from '../shoot-realtime.tsx'
 import type { Outbox, OutboxItem } from './outbox.ts'
 import { outboxOf } from './outboxes.ts'
 
@@ -32,32 +32,33 @@ export function useLocalPicture(uploadId: string): string | undefined {
 export function useSettlePictures(): void {
   const { shoot, userId } = useShootContext()
   const doc = useDoc('board')
+  const mayWrite = useMayWrite('board')
   const shootId = shoot.id
-  useEffect(
-    () =>
-      outboxOf(userId, shootId).onSettled((uploadId, settled) => {
-        for (const frame of readAll(doc, frames).items.values()) {
-          if (frame.picture.uploadId !== uploadId) continue
-          const { why: _why, ...picture } = frame.picture
-          if (settled.state === 'stored') {
-            const { palette, exposure, widthPx, heightPx } = settled.upload
-            patchItem(
-              doc,
-              frames,
-              frame.id,
-              {
-                picture: { ...picture, state: 'stored', widthPx, heightPx },
-                ...(frame.palette.length === 0 ? { palette } : {}),
-                ...(frame.exposure === '' ? { exposure } : {}),
-              },
-              SETTLE_ORIGIN,
-            )
-          } else {
-            const why = settled.state === 'refused' ? { why: settled.why.slice(0, 300) } : {}
-            patchItem(doc, frames, frame.id, { picture: { ...picture, state: settled.state, ...why } }, SETTLE_ORIGIN)
-          }
+  useEffect(() => {
+    // What is settled meanwhile is heard by whoever listens next.
+    if (!mayWrite) return
+    return outboxOf(userId, shootId).onSettled((uploadId, settled) => {
+      for (const frame of readAll(doc, frames).items.values()) {
+        if (frame.picture.uploadId !== uploadId) continue
+        const { why: _why, ...picture } = frame.picture
+        if (settled.state === 'stored') {
+          const { palette, exposure, widthPx, heightPx } = settled.upload
+          patchItem(
+            doc,
+            frames,
+            frame.id,
+            {
+              picture: { ...picture, state: 'stored', widthPx, heightPx },
+              ...(frame.palette.length === 0 ? { palette } : {}),
+              ...(frame.exposure === '' ? { exposure } : {}),
+            },
+            SETTLE_ORIGIN,
+          )
+        } else {
+          const why = settled.state === 'refused' ? { why: settled.why.slice(0, 300) } : {}
+          patchItem(doc, frames, frame.id, { picture: { ...picture, state: settled.state, ...why } }, SETTLE_ORIGIN)
         }
-      }),
-    [userId, shootId, doc],
-  )
+      }
+    })
+  }, [userId, shootId, doc, mayWrite])
 }

@@ -164,6 +164,16 @@ describe('createOutbox', () => {
     ])
   })
 
+  it('counts what every page of the person has waiting', async () => {
+    const store = memoryOutboxStore()
+    const a = open(hold().send, store)
+    const b = open(hold().send, store)
+    await flush()
+    await a.outbox.add(picture())
+    await b.outbox.add(picture())
+    expect([a.left(), b.left()]).toEqual([1, 2])
+  })
+
   it('sends nothing again once it is stored', async () => {
     const store = memoryOutboxStore()
     const { send, sent } = hold()

@@ -26,6 +26,8 @@ export function examine(doc: Y.Doc, update: Uint8Array): Verdict {
   let section: number | null = null
   for (const struct of decoded.structs) {
     const { client, clock } = struct.id
+    // Nothing that is made has no length. The document would hold it, and throw for whoever opens what it encodes.
+    if (struct.length < 1) return { kind: 'undecodable' }
     // A second section of the same client replaces the first when it is applied.
     if (client !== section && ends.has(client)) return { kind: 'undecodable' }
     section = client
@@ -44,6 +46,8 @@ export function examine(doc: Y.Doc, update: Uint8Array): Verdict {
     if (struct.origin && Y.compareIDs(struct.origin, struct.rightOrigin)) return { kind: 'undecodable' }
   }
   for (const [client, ranges] of decoded.ds.clients) {
+    // Where the document ends, one without length makes `Y.applyUpdate` throw half way.
+    if (ranges.some((range) => range.len < 1)) return { kind: 'undecodable' }
     if (ranges.some((range) => range.clock + range.len > known(client))) return { kind: 'gap' }
   }
   return { kind: 'fits', structs: decoded.structs.length }

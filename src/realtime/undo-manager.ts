@@ -12,6 +12,9 @@ type StackEvent = {
   }
 }
 
+/** In place of a value: there was none, or none that can be put back. */
+const ABSENT = Symbol('absent')
+
 /** Not one of a person's own steps: what this writes is never undone. */
 const REFILL_ORIGIN = Object.freeze({ kind: 'undo-refill' as const })
 
@@ -32,7 +35,8 @@ export function createUndo(doc: Y.Doc, roots: Y.Map<unknown>[]): Y.UndoManager {
       const fields = replaced.get(target) ?? new Map<string, unknown>()
       replaced.set(target, fields)
       for (const [key, { action, oldValue }] of changes.keys) {
-        if (action === 'update' && !fields.has(key) && !(oldValue instanceof Y.AbstractType)) fields.set(key, oldValue)
+        if (fields.has(key)) continue
+        fields.set(key, action === 'add' || oldValue instanceof Y.AbstractType ? ABSENT : oldValue)
       }
     }
   }
@@ -40,7 +44,7 @@ export function createUndo(doc: Y.Doc, roots: Y.Map<unknown>[]): Y.UndoManager {
   const refill = ({ stackItem }: { stackItem: object }) => {
     doc.transact(() => {
       for (const [map, fields] of memory.get(stackItem) ?? [])
-        for (const [key, value] of fields) if (!map.has(key)) map.set(key, value)
+        for (const [key, value] of fields) if (value !== ABSENT && !map.has(key)) map.set(key, value)
     }, REFILL_ORIGIN)
   }
 

@@ -1,6 +1,7 @@
 import { describe, expect, it } from 'vitest'
 import * as Y from 'yjs'
 import { seededRandom } from '#shared/domain/order/search/random.ts'
+import { DAMAGE } from '#tests/support/damage.ts'
 import { bringsNothing, dropPending, examine, hasPending, withoutGaps } from '#server/realtime/guard.ts'
 
 function docOf(clientId: number, update?: Uint8Array): Y.Doc {
@@ -35,28 +36,6 @@ const sortedKeys = (_: string, value: unknown): unknown =>
 
 const contentOf = (doc: Y.Doc) =>
   JSON.stringify([doc.getMap('items').toJSON(), doc.getArray('log').toJSON(), doc.getText('note').toJSON()], sortedKeys)
-
-const DAMAGE: Record<string, (good: Uint8Array, random: () => number) => Uint8Array> = {
-  'random bytes': (_, random) =>
-    Uint8Array.from({ length: 1 + Math.floor(random() * 200) }, () => Math.floor(random() * 256)),
-  truncated: (good, random) => good.slice(0, Math.floor(random() * good.length)),
-  'one bit flipped': (good, random) => {
-    const bad = good.slice()
-    const at = Math.floor(random() * bad.length)
-    bad[at] = (bad[at] ?? 0) ^ (1 << Math.floor(random() * 8))
-    return bad
-  },
-  'one byte replaced': (good, random) => {
-    const bad = good.slice()
-    bad[Math.floor(random() * bad.length)] = Math.floor(random() * 256)
-    return bad
-  },
-  'bytes inserted': (good, random) => {
-    const at = Math.floor(random() * good.length)
-    const extra = Array.from({ length: 1 + Math.floor(random() * 8) }, () => Math.floor(random() * 256))
-    return Uint8Array.from([...good.slice(0, at), ...extra, ...good.slice(at)])
-  },
-}
 
 const CASES = 1500
 
@@ -146,6 +125,17 @@ describe('examine', () => {
     Y.applyUpdate(holder, skipping)
     expect(hasPending(holder)).toBe(false)
     expect(holder.getMap('items').toJSON()).toEqual({ a: 'a', b: 'b', c: 'c' })
+  })
+})
+
+describe('what has no length', () => {
+  it.each([
+    ['a gap filler', [1, 1, 77, 0, 0, 0, 0]],
+    ['deleted content', [1, 1, 77, 0, 1, 1, 1, 97, 0, 0]],
+    ['a range of deletions', [0, 1, 77, 1, 0, 0]],
+  ])('%s never gets in', (_, bytes) => {
+    const doc = healthy()
+    expect(examine(doc, Uint8Array.from(bytes)).kind).toBe('undecodable')
   })
 })
 

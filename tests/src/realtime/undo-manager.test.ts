@@ -2,7 +2,7 @@ import { describe, expect, it } from 'vitest'
 import * as Y from 'yjs'
 import { noteSchema } from '#shared/domain/board/schema.ts'
 import { noteIdSchema } from '#shared/ids.ts'
-import { patchItem, putItems, readAll } from '#shared/realtime/collection.ts'
+import { LOCAL_ORIGIN, patchItem, putItems, readAll } from '#shared/realtime/collection.ts'
 import { notes } from '#shared/realtime/documents.ts'
 import { createUndo } from '#src/realtime/undo-manager.ts'
 
@@ -72,5 +72,19 @@ describe('createUndo', () => {
     expect(text(a)).toBe('two')
     exchange(a, b)
     expect(text(b)).toBe('two')
+  })
+
+  it('takes a field away that the step itself first wrote', () => {
+    const doc = new Y.Doc()
+    const root = doc.getMap<unknown>('shots')
+    const item = new Y.Map<unknown>()
+    root.set('a', item)
+    const undo = createUndo(doc, [root])
+    doc.transact(() => item.set('note', 'W'), LOCAL_ORIGIN)
+    doc.transact(() => item.set('note', 'Wind'), LOCAL_ORIGIN)
+    undo.undo()
+    expect(item.has('note')).toBe(false)
+    undo.redo()
+    expect(item.get('note')).toBe('Wind')
   })
 })

@@ -271,8 +271,9 @@ test('signing out in one window asks about what another has not sent, words in a
 test('a device that is full says not saved when offline, and takes it back when it keeps again', async () => {
   const { page } = photographer
   const way = await holdSockets(page)
+  // What the page asks for from here on is there without a signal too.
+  await page.waitForFunction(() => navigator.serviceWorker.controller !== null)
   await openBoard(page)
-  await page.evaluate(() => navigator.serviceWorker.ready.then(() => undefined))
   await page.evaluate(() => {
     const add = IDBObjectStore.prototype.add
     Object.assign(window, { makeRoom: () => (IDBObjectStore.prototype.add = add) })

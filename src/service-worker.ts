@@ -19,7 +19,7 @@ precacheAndRoute(self.__WB_MANIFEST)
 
 registerRoute(
   new NavigationRoute(createHandlerBoundToURL('/index.html'), {
-    denylist: [/^\/api\//, /^\/rt\//, /^\/healthz/, /^\/readyz/],
+    denylist: [/^\/api\//, /^\/rt\//, /^\/healthz/, /^\/readyz/, /^\/metrics/],
   }),
 )
 

@@ -14,6 +14,8 @@ export function connectDatabase(url: string, onIdleError: (error: Error) => void
     connectionString: url,
     max,
     connectionTimeoutMillis: 10_000,
+    // A database that accepts and then says nothing is an error, not a wait for ever.
+    query_timeout: 30_000,
     keepAlive: true,
     options: '-c timezone=UTC',
   })

@@ -1,7 +1,7 @@
 import { join } from 'node:path'
 import { rootDir } from './place.mjs'
 
-const serverPaths = ['/api', '/rt', '/healthz']
+const serverPaths = ['/api', '/rt', '/healthz', '/readyz', '/metrics']
 
 /**
  * Vite's own server in front, with hot reload for the pages; what belongs to our server is passed on to it,

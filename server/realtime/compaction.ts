@@ -78,24 +78,17 @@ export function createCompaction(options: {
   const thread = createCompactThread({ databaseUrl, statementMs, keepReplacedMs })
   /** In the order in which they came; the first is the one under way. */
   const queue = new Map<DocId, Waiting>()
+  /** Documents that are left alone for a while: after any attempt, longer after one that failed. */
   const restUntilMs = new Map<DocId, number>()
   const totals = { compactions: 0, failedChecks: 0, failures: 0, lastMs: 0, lastCaptureMs: 0 }
   let isRunning = false
   let isStopped = false
 
-  function isResting(docId: DocId): boolean {
-    const until = restUntilMs.get(docId)
-    if (until === undefined) return false
-    if (Date.now() < until) return true
-    restUntilMs.delete(docId)
-    return false
-  }
-
   function enqueue(room: CompactedRoom): Promise<void> {
     const { docId } = room.place
     const known = queue.get(docId)
     if (known) return known.done
-    if (isStopped || isResting(docId)) return Promise.resolve()
+    if (isStopped || Date.now() < (restUntilMs.get(docId) ?? 0)) return Promise.resolve()
     let finish: () => void = () => undefined
     const done = new Promise<void>((resolve) => (finish = resolve))
     queue.set(docId, { room, done, finish })

@@ -1,9 +1,11 @@
+import type { Duplex } from 'node:stream'
 import type WebSocket from 'ws'
 import type { RawData } from 'ws'
 import type { Role } from '#shared/access/roles.ts'
 import { canWriteDocument } from '#shared/access/roles.ts'
 import type { UserId } from '#shared/ids.ts'
 import { CLOSE, type Refusal } from '#shared/realtime/protocol.ts'
+import { websocketFrame } from './framing.ts'
 import { KEEP_ALIVE } from './presence.ts'
 import type { Place, RoomPeer, Standing } from './room.ts'
 import type { RealtimeLog, RealtimeSettings } from './settings.ts'
@@ -32,6 +34,7 @@ export class Connection implements RoomPeer {
   verifiedAtMs = Date.now()
   expiresAtMs: number
   readonly #ws: WebSocket
+  readonly #socket: Duplex
   readonly #settings: RealtimeSettings
   readonly #log: RealtimeLog
   readonly #wantsAcks: boolean
@@ -52,6 +55,8 @@ export class Connection implements RoomPeer {
 
   constructor(options: {
     ws: WebSocket
+    /** What `ws` writes to. */
+    socket: Duplex
     number: number
     person: Person
     place: Place
@@ -69,6 +74,7 @@ export class Connection implements RoomPeer {
     this.mayWrite = canWriteDocument(options.role, options.place.kind)
     this.expiresAtMs = options.person.expiresAtMs
     this.#ws = options.ws
+    this.#socket = options.socket
     this.#settings = options.settings
     this.#log = options.log
     this.#wantsAcks = options.wantsAcks
@@ -140,7 +146,8 @@ export class Connection implements RoomPeer {
       this.#ws.terminate()
       return
     }
-    this.#ws.send(frame)
+    // Nothing of ours is compressed, so this goes out in order with what `ws` itself says.
+    this.#socket.write(websocketFrame(frame))
   }
 
   /** Tells who one is here and how things stand with the document: the first frame, and again when that changes. */

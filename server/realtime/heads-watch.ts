@@ -13,6 +13,8 @@ export type HeadsWatch = {
   grew(docId: DocId, head: number): void
   /** Looks at the heads of all that is in memory now, not only when it is due. */
   look(): void
+  /** Forgets a document that is not what it was, and closes everybody's connection to it. */
+  letGo(room: Room, code: number, why: string): void
   stop(): void
 }
 
@@ -84,6 +86,7 @@ export function createHeadsWatch(options: {
       if (room && head > room.head) catchUp(room)
     },
     look: lookNow,
+    letGo,
     stop: () => clearInterval(timer),
   }
 }

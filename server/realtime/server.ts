@@ -185,6 +185,7 @@ export function createRealtime(options: {
       const wantsAcks = new URLSearchParams(url?.split('?')[1]).get('ack') === '1'
       const connection = new Connection({
         ws,
+        socket,
         number: nextNumber++,
         person,
         place,
@@ -226,7 +227,12 @@ export function createRealtime(options: {
         if (room.peers.size >= settings.connectionsPerDocument) {
           return connection.close(CLOSE.crowded, 'too many people in one document')
         }
-        if (room.epoch !== told.epoch) return connection.close(CLOSE.epoch, 'the document is of another epoch')
+        if (room.epoch < told.epoch) {
+          // Rebuilt since it was loaded: those who are in it have another document than the one to come.
+          heads.letGo(room, CLOSE.epoch, 'the document is of another epoch')
+          return connection.close(CLOSE.tryAgain, 'the document is loaded anew')
+        }
+        if (room.epoch > told.epoch) return connection.close(CLOSE.epoch, 'the document is of another epoch')
         if (room.frozen !== told.frozen) connection.greet(room)
         room.peers.add(connection)
         leave = () => {

@@ -36,6 +36,8 @@ export const DEFAULT_SETTINGS = {
   compactRows: 500,
   compactBytes: 1024 * 1024,
   compactIdleRows: 20,
+  /** A document that people are busy in is not compacted more often than this. */
+  compactEveryMs: 30_000,
   /** Snapshots and rows that a newer snapshot stands for stay so long, to undo a bad one. */
   keepReplacedMs: 7 * 24 * 3_600_000,
   /** What was deleted so long ago is taken out of the document. */

@@ -14,8 +14,9 @@ export function readTree(folders: readonly string[], pattern: RegExp): Tree {
   for (let folder = waiting.pop(); folder !== undefined; folder = waiting.pop()) {
     for (const entry of readdirSync(join(rootDir, folder), { withFileTypes: true })) {
       const path = posix.join(folder, entry.name)
-      if (entry.isDirectory()) waiting.push(path)
-      else if (pattern.test(entry.name)) files.set(path, readFileSync(join(rootDir, path), 'utf8'))
+      if (entry.isDirectory()) {
+        if (entry.name !== 'node_modules') waiting.push(path)
+      } else if (pattern.test(entry.name)) files.set(path, readFileSync(join(rootDir, path), 'utf8'))
     }
   }
   return files

@@ -4,7 +4,7 @@ import type { TestDatabase } from '#tests/support/template.ts'
 import { TestClient, contentOf, pause, until } from './support/client.ts'
 import { type Shoot, type World, addShoot, startWorld } from './support/world.ts'
 
-const LIMITS = { messagesPerSecond: 1_000, compactRows: 40, compactIdleRows: 5 }
+const LIMITS = { messagesPerSecond: 1_000, compactRows: 40, compactIdleRows: 5, compactEveryMs: 0 }
 
 let database: TestDatabase
 let world: World

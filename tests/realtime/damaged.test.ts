@@ -1,5 +1,6 @@
 import { EventEmitter } from 'node:events'
 import { randomUUID } from 'node:crypto'
+import type { Duplex } from 'node:stream'
 import * as decoding from 'lib0/decoding'
 import type WebSocket from 'ws'
 import { afterAll, beforeAll, describe, expect, it, vi } from 'vitest'
@@ -85,8 +86,10 @@ class Wire extends EventEmitter {
   readonly bufferedAmount = 0
   readonly sent: Uint8Array[] = []
   code: number | null = null
-  send(frame: Uint8Array) {
-    this.sent.push(frame)
+  /** Takes a websocket frame; what it carries is kept (RFC 6455, 5.2). */
+  write(frame: Uint8Array) {
+    const length = frame[1] ?? 0
+    this.sent.push(frame.subarray(length < 126 ? 2 : length === 126 ? 4 : 10))
   }
   close(code: number) {
     this.code = code
@@ -132,6 +135,7 @@ class Bench {
     const person = { userId: userIdSchema.parse('u'), name: 'N', sessionId: randomUUID(), expiresAtMs: Infinity }
     return new Connection({
       ws: having<WebSocket>(wire),
+      socket: having<Duplex>(wire),
       number: 1,
       person,
       place: this.#place,

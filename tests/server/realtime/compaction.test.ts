@@ -68,7 +68,7 @@ type Process = OpenedRoom & { compaction: Compaction; compact: () => Promise<Com
 
 /** A process with the document in memory. */
 async function open(more: Partial<RealtimeSettings> = {}): Promise<Process> {
-  const settings = { ...DEFAULT_SETTINGS, compactRows: 1, ...more }
+  const settings = { ...DEFAULT_SETTINGS, compactRows: 1, compactEveryMs: 0, ...more }
   const opened = await openRoom({ pool, docId, settings })
   const say = (level: LogLine['level']) => (details: object, message: string) =>
     void lines.push({ level, message, details })

@@ -1,3 +1,4 @@
+import { constants, setPriority } from 'node:os'
 import { parentPort, workerData } from 'node:worker_threads'
 import pg from 'pg'
 import { z } from 'zod'
@@ -15,6 +16,9 @@ export type CompactWorkerSettings = z.infer<typeof settingsSchema>
 const APPLICATION = 'sconce-compaction'
 /** The log waits while the last transaction is open, so whatever holds that up ends it instead. */
 const PATIENCE_MS = 5_000
+
+// On Linux a thread has a priority of its own, and 0 means the one that asks: people come first.
+if (process.platform === 'linux') setPriority(0, constants.priority.PRIORITY_LOW)
 
 const { databaseUrl, statementMs, keepReplacedMs } = settingsSchema.parse(workerData)
 const pool = new pg.Pool({

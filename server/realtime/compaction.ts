@@ -1,4 +1,4 @@
-import { setImmediate } from 'node:timers/promises'
+import { setImmediate, setTimeout as pause } from 'node:timers/promises'
 import type pg from 'pg'
 import * as Y from 'yjs'
 import type { DocId } from '#shared/ids.ts'
@@ -43,6 +43,10 @@ export type CompactionStats = {
 /** How long a document is left alone after a failed check, and after trouble with the database or the thread. */
 const AFTER_FAILED_CHECK_MS = 3_600_000
 const AFTER_FAILURE_MS = 60_000
+
+/** Between two documents: a multiple of what the last one took, up to so long. */
+const PAUSE_SHARE = 4
+const MAX_PAUSE_MS = 2_000
 
 type Waiting = { room: CompactedRoom; done: Promise<void>; finish: () => void }
 
@@ -100,9 +104,13 @@ export function createCompaction(options: {
     if (isRunning) return
     isRunning = true
     for (const [docId, { room, finish }] of queue) {
+      const startedAtMs = performance.now()
       await compact(room).catch((error: unknown) => onFailure(docId, reasonOf(error)))
       queue.delete(docId)
       finish()
+      // Many documents get long at the same time: people must not notice.
+      if (queue.size > 0)
+        await pause(Math.min(MAX_PAUSE_MS, PAUSE_SHARE * (performance.now() - startedAtMs)), undefined, { ref: false })
     }
     isRunning = false
   }
@@ -112,6 +120,9 @@ export function createCompaction(options: {
     await setImmediate()
     if (isStopped || room.isBroken) return
     const { docId } = room.place
+    const nowMs = Date.now()
+    for (const [id, untilMs] of restUntilMs) if (untilMs <= nowMs) restUntilMs.delete(id)
+    restUntilMs.set(docId, nowMs + settings.compactEveryMs)
     const startedAtMs = performance.now()
     const live = { head: room.head, state: Y.encodeStateAsUpdate(room.doc) }
     room.sizeBytes = live.state.length

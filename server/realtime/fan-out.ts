@@ -24,8 +24,8 @@ const LOOK_MS = 50
 /**
  * The one way out for changes of a document.
  *
- * The first change after quiet goes out in the same turn of the event loop; what comes within `mergeMs` after it is
- * merged into one frame, the same bytes for everybody. No reader has a queue: one that does not keep up is sent
+ * The first change after quiet goes out in the same turn of the event loop; what comes within a moment after it, up to
+ * `mergeMs` with many readers, is merged into one frame, the same bytes for everybody. No reader has a queue: one that does not keep up is sent
  * nothing more, the state it has is remembered, and once its socket is nearly empty it gets one update for all it
  * missed. However slow it is, it costs its state vector and what its socket holds.
  */
@@ -74,7 +74,9 @@ export class FanOut<R extends Reader> {
     const updates = this.#pending
     this.#pending = []
     this.#sendToAll(mergedUpdates(updates).map(updateFrame), this.#author)
-    this.#window = setTimeout(() => this.#flush(), this.#settings.mergeMs)
+    // What merging saves grows with the readers; a few of them may have each change at once.
+    const { mergeMs, crowd } = this.#settings
+    this.#window = setTimeout(() => this.#flush(), mergeMs * Math.min(1, this.#readers.size / crowd))
   }
 
   #sendToAll(frames: readonly Uint8Array[], author: R | null): void {

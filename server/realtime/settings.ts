@@ -8,8 +8,9 @@ export const DEFAULT_SETTINGS = {
   /** Frames held for a connection while its document loads. */
   earlyFrames: 64,
   earlyBytes: 5 * 1024 * 1024,
-  /** Changes that come within so long after the last broadcast go out together. */
+  /** Changes that come within so long after the last broadcast go out together: with `crowd` readers, sooner with fewer. */
   mergeMs: 20,
+  crowd: 100,
   /** A reader with so much on its way is sent no more changes; below `caughtUpBytes` it gets one for all it missed. */
   lagBytes: 1024 * 1024,
   caughtUpBytes: 64 * 1024,
@@ -22,6 +23,8 @@ export const DEFAULT_SETTINGS = {
   /** One transaction of the writer. */
   batchRows: 2000,
   batchBytes: 4 * 1024 * 1024,
+  /** Between the beginnings of two transactions of the writer. */
+  commitGapMs: 8,
   /** Above either, writers are no longer read from and no document is opened. */
   queueBytes: 16 * 1024 * 1024,
   queueAgeMs: 30_000,

@@ -80,6 +80,7 @@ export function createUpdateLog(options: {
   let pressure = false
   let failuresInARow = 0
   let wake: (() => void) | null = null
+  let lastStartMs = -Infinity
   let onEmpty: (() => void)[] = []
 
   const oldestMs = () => (queue[0] ? Date.now() - queue[0].queuedAtMs : 0)
@@ -160,6 +161,7 @@ export function createUpdateLog(options: {
     // Everything that arrives in this turn of the event loop goes into the same commit.
     await Promise.resolve()
     while (queue.length > 0 && !isStopped) {
+      await untilDue()
       const batch = queue.slice(0, batchLength(queue, settings.batchRows, settings.batchBytes))
       let grown: Map<DocId, Grown>
       try {
@@ -188,6 +190,13 @@ export function createUpdateLog(options: {
       for (const done of onEmpty) done()
       onEmpty = []
     }
+  }
+
+  /** The first change after quiet is written at once; under load commits keep a distance, and each carries more. */
+  async function untilDue(): Promise<void> {
+    const waitMs = lastStartMs + settings.commitGapMs - performance.now()
+    if (waitMs > 0) await pauseFor(waitMs)
+    lastStartMs = performance.now()
   }
 
   function pauseFor(ms: number): Promise<void> {

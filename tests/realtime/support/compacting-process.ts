@@ -8,7 +8,7 @@ import { openRoom, quiet } from './opened-room.ts'
 const databaseUrl = process.env['DATABASE_URL']
 if (databaseUrl === undefined) throw new Error('DATABASE_URL is not set')
 const { pool } = connectDatabase(databaseUrl, () => undefined, 4)
-const settings = { ...DEFAULT_SETTINGS, compactIdleRows: 1 }
+const settings = { ...DEFAULT_SETTINGS, compactIdleRows: 1, compactEveryMs: 0 }
 const { room, updateLog, edit } = await openRoom({ pool, docId: docIdSchema.parse(process.env['DOC_ID']), settings })
 const compaction = createCompaction({ pool, databaseUrl, updateLog, isAlone: () => true, settings, log: quiet })
 const stored = room.doc.getMap<number>('stored')

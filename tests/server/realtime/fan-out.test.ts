@@ -49,7 +49,7 @@ beforeEach(() => {
   readers = new Set()
   caughtUp = []
   fanOut = new FanOut(doc, {
-    settings: { ...DEFAULT_SETTINGS, lagBytes: LAG_BYTES, caughtUpBytes: 100 },
+    settings: { ...DEFAULT_SETTINGS, crowd: 2, lagBytes: LAG_BYTES, caughtUpBytes: 100 },
     readers,
     onCaughtUp: (reader) => caughtUp.push(reader),
   })

@@ -18,6 +18,9 @@ type FrameOf = (update: Uint8Array) => Uint8Array
 /** What a reader that lags has, how what it lacks is to be wrapped, and until when it may lag. */
 type Lag = { since: Uint8Array; frameOf: FrameOf; untilMs: number }
 
+/** Waiting for less costs more than it saves. */
+const SHORTEST_WINDOW_MS = 3
+
 /** How often readers that lag are looked at. */
 const LOOK_MS = 50
 
@@ -76,7 +79,8 @@ export class FanOut<R extends Reader> {
     this.#sendToAll(mergedUpdates(updates).map(updateFrame), this.#author)
     // What merging saves grows with the readers; a few of them may have each change at once.
     const { mergeMs, crowd } = this.#settings
-    this.#window = setTimeout(() => this.#flush(), mergeMs * Math.min(1, this.#readers.size / crowd))
+    const windowMs = mergeMs * Math.min(1, this.#readers.size / crowd)
+    if (windowMs >= SHORTEST_WINDOW_MS) this.#window = setTimeout(() => this.#flush(), windowMs)
   }
 
   #sendToAll(frames: readonly Uint8Array[], author: R | null): void {

@@ -24,7 +24,7 @@ export const DEFAULT_SETTINGS = {
   batchRows: 2000,
   batchBytes: 4 * 1024 * 1024,
   /** Between the beginnings of two transactions of the writer. */
-  commitGapMs: 8,
+  commitGapMs: 16,
   /** Above either, writers are no longer read from and no document is opened. */
   queueBytes: 16 * 1024 * 1024,
   queueAgeMs: 30_000,

@@ -119,7 +119,9 @@ export function createOutbox({ shootId, store, send, prepare, now, random, onCou
       change(uploadId, { progress: 1 })
       lingering.add(uploadId)
       setTimeout(() => hide(uploadId), LINGER_MS)
-      await forget(uploadId)
+      // Without a document to tell it stays on the device, so that the next visit sends it again and tells then.
+      if (listeners.size > 0) await forget(uploadId)
+      else entries.delete(uploadId)
     } catch (error) {
       if (entries.has(uploadId) && !destroyed) await failed(entry, error)
     } finally {
@@ -188,8 +190,8 @@ export function createOutbox({ shootId, store, send, prepare, now, random, onCou
         )
       }
       show(entry)
-      pump()
       await tellCount()
+      pump()
       return { uploadId: entry.uploadId, widthPx: entry.widthPx, heightPx: entry.heightPx }
     },
     retry(uploadId) {
@@ -215,7 +217,10 @@ export function createOutbox({ shootId, store, send, prepare, now, random, onCou
       listeners.add(listener)
       const heard = unheard
       unheard = []
-      for (const [uploadId, settled] of heard) listener(uploadId, settled)
+      for (const [uploadId, settled] of heard) {
+        listener(uploadId, settled)
+        if (settled.state === 'stored') void forget(uploadId)
+      }
       return () => listeners.delete(listener)
     },
     destroy() {

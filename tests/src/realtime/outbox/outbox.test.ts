@@ -62,7 +62,8 @@ afterEach(() => void vi.useRealTimers())
 describe('createOutbox', () => {
   it('sends three at a time and the rest as places come free', async () => {
     const { send, sent } = hold()
-    const { outbox, left } = open(send)
+    const { outbox, left, listen } = open(send)
+    listen()
     for (let n = 0; n < 5; n++) await outbox.add(picture(), `${n}.jpg`)
     expect(sent).toHaveLength(3)
     expect(outbox.items.get().map(({ state }) => state)).toEqual([
@@ -177,7 +178,8 @@ describe('createOutbox', () => {
   it('sends nothing again once it is stored', async () => {
     const store = memoryOutboxStore()
     const { send, sent } = hold()
-    const { outbox } = open(send, store)
+    const { outbox, listen } = open(send, store)
+    listen()
     await outbox.add(picture())
     sent[0]?.resolve()
     await flush()
@@ -185,6 +187,48 @@ describe('createOutbox', () => {
     expect(outbox.items.get()).toMatchObject([{ progress: 1 }])
     await vi.advanceTimersByTimeAsync(20_000)
     expect(outbox.items.get()).toEqual([])
+  })
+
+  it('keeps a stored picture until a document has heard of it, and sends it again after a reload', async () => {
+    const store = memoryOutboxStore()
+    const before = hold()
+    const visit = open(before.send, store)
+    const { uploadId } = await visit.outbox.add(picture())
+    before.sent[0]?.resolve()
+    await flush()
+    expect((await store.list()).map((entry) => entry.uploadId)).toEqual([uploadId])
+    visit.outbox.wake()
+    expect(before.sent).toHaveLength(1)
+    visit.outbox.destroy()
+    const after = hold()
+    const next = open(after.send, store)
+    await flush()
+    after.sent[0]?.resolve()
+    await flush()
+    expect([next.settled, next.left()]).toEqual([[], 1])
+    next.listen()
+    await flush()
+    expect([next.settled, next.left(), await store.list()]).toEqual([[[uploadId, 'stored']], 0, []])
+  })
+
+  it('sends nothing before whoever adds it knows its id, however slow the device is', async () => {
+    const store = memoryOutboxStore()
+    const slow: OutboxStore = {
+      ...store,
+      count: async () => {
+        await new Promise((resolve) => setTimeout(resolve, 1000))
+        return store.count()
+      },
+    }
+    const { outbox } = open(
+      ({ uploadId }) => new Promise((resolve) => setTimeout(() => resolve(uploaded(uploadId)), 10)),
+      slow,
+    )
+    const seen: string[] = []
+    outbox.onSettled((_id, { state }) => seen.push(state))
+    void outbox.add(picture()).then(() => seen.push('added'))
+    await vi.advanceTimersByTimeAsync(5000)
+    expect(seen).toEqual(['added', 'stored'])
   })
 
   it('refuses what the browser cannot read, and what the device has no room for, in a sentence', async () => {

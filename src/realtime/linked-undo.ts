@@ -21,12 +21,25 @@ export function linkNewestSteps(a: Y.UndoManager, b: Y.UndoManager): void {
         return
       }
       isFollowing = true
-      its.manager[type]()
+      const isTaken = takeNewest(its.manager, type)
       isFollowing = false
-      for (const end of [mine, its]) end.step = end.manager[to].at(-1)
+      for (const end of [mine, its]) end.step = isTaken ? end.manager[to].at(-1) : undefined
     }
   const one: End = { manager: a, step: a.undoStack.at(-1) }
   const other: End = { manager: b, step: b.undoStack.at(-1) }
   a.on('stack-item-popped', follow(one, other))
   b.on('stack-item-popped', follow(other, one))
+}
+
+/** The newest step and no other: when others have overwritten all of it, Yjs would go on to the next older one. */
+function takeNewest(manager: Y.UndoManager, type: 'undo' | 'redo'): boolean {
+  const stack = manager[`${type}Stack`]
+  const older = stack.splice(0, stack.length - 1)
+  try {
+    return manager[type]() !== null
+  } finally {
+    stack.unshift(...older)
+    // Nothing was cleared; whoever looked at the stack meanwhile looks again.
+    manager.emit('stack-cleared', [{ undoStackCleared: false, redoStackCleared: false }])
+  }
 }

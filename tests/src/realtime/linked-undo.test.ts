@@ -15,6 +15,7 @@ function oneDocument() {
       doc.transact(() => root.set('value', value), LOCAL_ORIGIN)
       undo.stopCapturing()
     },
+    overwrite: (value: number) => doc.transact(() => root.set('value', value), 'somebody else'),
     value: () => root.get('value'),
   }
 }
@@ -70,5 +71,30 @@ describe('linkNewestSteps', () => {
     expect(values()).toEqual([2, 2])
     board.undo.undo()
     expect(values()).toEqual([1, 1])
+  })
+
+  it('takes no older step back where others have overwritten all of this one', () => {
+    const { board, plan, values } = pair()
+    let canUndo = true
+    plan.undo.on('stack-item-popped', () => (canUndo = plan.undo.undoStack.length > 0))
+    plan.undo.on('stack-cleared', () => (canUndo = plan.undo.undoStack.length > 0))
+    plan.overwrite(9)
+    board.undo.undo()
+    expect(values()).toEqual([1, 9])
+    expect([plan.undo.undoStack.length, canUndo]).toEqual([1, true])
+    board.undo.redo()
+    expect(values()).toEqual([2, 9])
+  })
+
+  it('redoes nothing else when there was nothing to take back', () => {
+    const { board, plan, values } = pair()
+    plan.write(3)
+    plan.undo.undo()
+    plan.overwrite(9)
+    const redo = [...plan.undo.redoStack]
+    board.undo.undo()
+    board.undo.redo()
+    expect(values()).toEqual([2, 9])
+    expect(plan.undo.redoStack).toEqual(redo)
   })
 })

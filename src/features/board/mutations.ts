@@ -42,6 +42,12 @@ async function requireSaved({ board, plan }: ShootDocuments): Promise<void> {
   if (!(await untilSaved([board, plan]))) throw notSaved()
 }
 
+/** What is written into a document that was closed meanwhile is lost. @throws ApiError when one was. */
+function requireOpen({ board, plan }: ShootDocuments): void {
+  if (board.doc.isDestroyed || plan.doc.isDestroyed)
+    throw new ApiError('CONFLICT', 'You left the shoot meanwhile. Nothing was changed.')
+}
+
 export type VersionChange =
   { kind: 'keep'; name: string } | { kind: 'rename'; id: string; name: string } | { kind: 'remove'; id: string }
 
@@ -73,10 +79,13 @@ export function useTakeBack() {
     mutationFn: async ({ id, kinds }: { id: string; kinds: readonly KeptKind[] }) => {
       const states = await queryClient.fetchQuery(boardQueries.version(shoot.id, id))
       await requireSaved(documents)
+      // Before the others are told that it happens, and again before it does.
+      requireOpen(documents)
       const versions = await api(`/shoots/${shoot.id}/versions/${id}/take-back`, {
         method: 'POST',
         response: versionsSchema,
       })
+      requireOpen(documents)
       const written = takeBackVersion(documents, openVersion(states, documents), kinds, Date.now())
       return { versions, written }
     },

@@ -10,7 +10,13 @@ import { Waiting } from '#src/ui/waiting.tsx'
 import { useTakeBack } from '../../mutations.ts'
 import { boardQueries } from '../../queries.ts'
 import { differenceLines } from '../../versions/difference-words.ts'
-import { KEPT_KINDS, openVersion, versionDifferences } from '../../versions/take-back-version.ts'
+import {
+  KEPT_KINDS,
+  type KeptKind,
+  type OpenKept,
+  openVersion,
+  versionDifferences,
+} from '../../versions/take-back-version.ts'
 
 type TakeBackDialogProps = {
   version: Pick<Version, 'id' | 'name'>
@@ -34,8 +40,8 @@ export function TakeBackDialog({ version, onClose, onTakenBack }: TakeBackDialog
       { id: version.id, kinds },
       {
         onSuccess: ({ written: [kind] }) => {
-          const undo = kind && { label: 'Undo', onPress: () => void documents[kind].undo.undo() }
-          toast.say(`The board is as it was in “${version.name}”.`, undo)
+          const undo = kind && undoOf(documents[kind])
+          toast.say(`The board is as it was in “${version.name}”.`, undo && { label: 'Undo', onPress: undo })
           onTakenBack()
         },
       },
@@ -86,4 +92,13 @@ export function TakeBackDialog({ version, onClose, onTakenBack }: TakeBackDialog
       )}
     </Dialog>
   )
+}
+
+/** Undoes the newest step as long as it is that, and no other one. */
+function undoOf({ doc, undo }: OpenKept[KeptKind]): () => void {
+  const step = undo.undoStack.at(-1)
+  return () => {
+    if (!doc.isDestroyed && undo.undoStack.at(-1) === step) undo.undo()
+    else toast.say('More has happened since. The board as it was before is among the kept versions.')
+  }
 }

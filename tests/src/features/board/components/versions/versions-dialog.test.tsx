@@ -8,7 +8,10 @@ import { noteIdSchema, shotIdSchema } from '#shared/ids.ts'
 import { patchItem, putItems, readAll, upsertItem } from '#shared/realtime/collection.ts'
 import { notes, shotPlans, shots } from '#shared/realtime/documents.ts'
 import { VersionsDialog } from '#src/features/board/components/versions/versions-dialog.tsx'
+import { useShootContext } from '#src/realtime/shoot-realtime.tsx'
 import { useUndo } from '#src/realtime/use-undo.ts'
+import { toast, toastStore } from '#src/ui/toast.ts'
+import { Toaster } from '#src/ui/toaster.tsx'
 import { type FakeApi, SHOOT_ID, USER_ID, type ShootScreen, shootScreen } from '#tests/support/shoot-screen.tsx'
 
 const uuid = (n: number) => `00000000-0000-4000-8000-${String(n).padStart(12, '0')}`
@@ -39,6 +42,21 @@ const minutes = ({ docs }: ShootScreen) => readAll(docs.plan, shotPlans).items.g
 function Undo() {
   const { undo } = useUndo(['board'])
   return <button onClick={undo}>Undo of the board</button>
+}
+
+/** What a hand does outside of the dialog. */
+function Meanwhile() {
+  const { board, plan } = useShootContext().documents
+  const leave = () => {
+    board.destroy()
+    plan.destroy()
+  }
+  return (
+    <>
+      <button onClick={() => patchItem(board.doc, notes, NOTE, { text: 'since then' })}>Write a note</button>
+      <button onClick={leave}>Leave the shoot</button>
+    </>
+  )
 }
 
 /** A board that changed since `First idea` was kept, with its versions open. */
@@ -79,6 +97,8 @@ function open(role: Role, kept: Version[] = [version(0)], api: FakeApi = {}): Sh
     <>
       <VersionsDialog open onOpenChange={() => undefined} />
       <Undo />
+      <Meanwhile />
+      <Toaster />
     </>,
   )
   return shoot
@@ -90,7 +110,10 @@ async function choose(name: string, line: string): Promise<void> {
   fireEvent.click(await screen.findByRole('menuitem', { name: line }))
 }
 
-beforeEach(() => localStorage.clear())
+beforeEach(() => {
+  localStorage.clear()
+  for (const { id } of toastStore.read()) toast.dismiss(id)
+})
 afterEach(cleanup)
 
 describe('VersionsDialog', () => {
@@ -198,6 +221,49 @@ describe('taking back', () => {
     fireEvent.click(await dialog.findByRole('button', { name: 'Take it back' }))
     expect(await dialog.findByText(message)).toBeTruthy()
     expect([text(shoot), minutes(shoot)]).toEqual(['as it is', 45])
+  })
+
+  it('neither says nor does anything in a shoot that was left', async () => {
+    const shoot = open('photographer')
+    await choose('First idea', 'Take it back')
+    const dialog = within(await screen.findByRole('dialog', { name: 'Take back “First idea”?' }))
+    const takeBack = await dialog.findByRole('button', { name: 'Take it back' })
+    fireEvent.click(screen.getByText('Leave the shoot'))
+    fireEvent.click(takeBack)
+    expect(await dialog.findByText('You left the shoot meanwhile. Nothing was changed.')).toBeTruthy()
+    expect(shoot.sent.filter(({ request }) => request.endsWith('/take-back'))).toEqual([])
+  })
+
+  it('writes into no document that was closed while the server answered', async () => {
+    const shoot = open('photographer', [version(0)], {
+      [`POST ${LIST}/${FIRST}/take-back`]: () => {
+        fireEvent.click(screen.getByText('Leave the shoot'))
+        return { body: { versions: [version(0)] } }
+      },
+    })
+    await choose('First idea', 'Take it back')
+    const dialog = within(await screen.findByRole('dialog', { name: 'Take back “First idea”?' }))
+    fireEvent.click(await dialog.findByRole('button', { name: 'Take it back' }))
+    expect(await dialog.findByText('You left the shoot meanwhile. Nothing was changed.')).toBeTruthy()
+    expect([text(shoot), minutes(shoot)]).toEqual(['as it is', 45])
+  })
+
+  it('is undone from its message as long as it is the newest step, and no other step is', async () => {
+    const shoot = open('photographer')
+    const takeBack = async () => {
+      await choose('First idea', 'Take it back')
+      const dialog = within(await screen.findByRole('dialog', { name: 'Take back “First idea”?' }))
+      fireEvent.click(await dialog.findByRole('button', { name: 'Take it back' }))
+      await screen.findByText('The board is as it was in “First idea”.')
+    }
+    await takeBack()
+    fireEvent.click(screen.getByText('Undo'))
+    await waitFor(() => expect([text(shoot), minutes(shoot)]).toEqual(['as it is', 45]))
+    await takeBack()
+    fireEvent.click(screen.getByText('Write a note'))
+    fireEvent.click(screen.getByText('Undo'))
+    expect(await screen.findByText(/More has happened since/)).toBeTruthy()
+    expect([text(shoot), minutes(shoot)]).toEqual(['since then', 20])
   })
 
   it('has nothing to do where nothing differs', async () => {

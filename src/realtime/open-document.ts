@@ -145,7 +145,8 @@ export function openDocument(options: Options): OpenDocument {
   const provider = new WebsocketProvider(`${origin}/rt/${shootId}`, kind, doc, {
     connect: false,
     disableBc: true,
-    params: { ack: '1', epoch: String(epoch) },
+    // Cookies are the browser's, not the page's: the server closes when somebody else has signed in meanwhile.
+    params: { ack: '1', epoch: String(epoch), user: userId },
     resyncInterval: 45_000,
     WebSocketPolyfill: CountingSocket,
     // Who is signed out is shown the way in again; who has signed in meanwhile goes on.

@@ -1,10 +1,11 @@
 import { useSuspenseQuery } from '@tanstack/react-query'
-import { Suspense } from 'react'
+import { Suspense, useEffect } from 'react'
 import { Navigate, Outlet, useLocation } from 'react-router-dom'
 import type { Session } from '#shared/api/studios.ts'
 import { studioQueries } from '#src/features/studios/queries.ts'
 import { Waiting } from '#src/ui/waiting.tsx'
-import { SessionContext } from '../session.ts'
+import { SessionContext, isPageOf } from '../session.ts'
+import { forgetAnswers } from '../signed-in-again.ts'
 
 /** Everything below needs a person: without one it leads to the sign-in page and back again afterwards. */
 export function SignedIn() {
@@ -19,7 +20,15 @@ function WithSession() {
   const { data: session } = useSuspenseQuery(studioQueries.session())
   const { pathname, search } = useLocation()
   if (!session) return <Navigate to={`/sign-in?to=${encodeURIComponent(pathname + search)}`} replace />
-  return <Provided session={session} />
+  return isPageOf(session.user.id) ? <Provided session={session} /> : <AnotherPerson />
+}
+
+/** A page of one person does not go on as another's. */
+function AnotherPerson() {
+  useEffect(() => {
+    void forgetAnswers().then(() => window.location.reload())
+  }, [])
+  return <Waiting className="min-h-dvh" />
 }
 
 function Provided({ session }: { session: Session }) {

@@ -140,6 +140,12 @@ describe('openDocument', () => {
     await until(() => one.sign() === 'saved')
   })
 
+  it('tells the server whose page it is', async () => {
+    const one = page({ userId: 'ines' })
+    await until(() => one.sign() === 'saved')
+    expect(new URL(end.sockets[0]?.url ?? '').searchParams.get('user')).toBe('ines')
+  })
+
   it('asks whether one is signed in still when it is turned away, keeps what was written, and sends it afterwards', async () => {
     const one = page()
     await until(() => one.sign() === 'saved')

@@ -39,6 +39,11 @@ export async function admit(
   if (!session || session.expiresAtMs <= Date.now()) return { kind: 'http', status: 401 }
   const { name, sessionId, expiresAtMs } = session
   const person: Person = { userId: userIdSchema.parse(session.userId), name, sessionId, expiresAtMs }
+  const query = new URLSearchParams(request.url?.split('?')[1])
+  // A page that was opened by somebody else holds their edits: they are not to be sent in this person's name.
+  const meant = query.get('user')
+  if (meant !== null && meant !== person.userId)
+    return { kind: 'close', code: CLOSE.signedOut, why: 'somebody else is signed in', person }
   const unknown: Admission = { kind: 'close', code: CLOSE.unknown, why: 'no such document', person }
   const path = parseDocumentPath((request.url ?? '').split('?')[0] ?? '')
   const shootId = shootIdSchema.safeParse(path?.shootId)
@@ -46,7 +51,7 @@ export async function admit(
   const found = await findDocument(outside.db, shootId.data, path.kind, person)
   if (!found) return unknown
   // Before a byte of it is read: what a browser kept of an earlier epoch would bring back what was put away.
-  const epoch = new URLSearchParams(request.url?.split('?')[1]).get('epoch')
+  const epoch = query.get('epoch')
   if (epoch !== null && Number(epoch) !== found.epoch) {
     return { kind: 'close', code: CLOSE.epoch, why: 'the document is of another epoch', person }
   }

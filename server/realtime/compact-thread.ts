@@ -38,13 +38,22 @@ export function createCompactThread(settings: CompactWorkerSettings): CompactThr
     return started
   }
 
+  /** Ends a thread; the next job gets another one, even before this one is down. */
+  function letGo(which: Worker): void {
+    if (worker === which) worker = null
+    void which.terminate()
+  }
+
   function run(job: CompactJob): Promise<Answer> {
     clearTimeout(idle)
     const current = (worker ??= start())
     return new Promise((resolve) => {
-      const tooLong = setTimeout(() => void current.terminate(), JOB_MS)
+      const tooLong = setTimeout(() => letGo(current), JOB_MS)
       const onMessage = (answer: Answer) => end(answer)
-      const onError = (error: unknown) => end({ kind: 'failed', reason: reasonOf(error) })
+      const onError = (error: unknown) => {
+        letGo(current)
+        end({ kind: 'failed', reason: reasonOf(error) })
+      }
       const onExit = () => end({ kind: 'failed', reason: 'the thread ended' })
       current.on('message', onMessage).on('error', onError).on('exit', onExit)
       current.postMessage(job)
@@ -53,7 +62,7 @@ export function createCompactThread(settings: CompactWorkerSettings): CompactThr
         clearTimeout(tooLong)
         current.off('message', onMessage).off('error', onError).off('exit', onExit)
         clearTimeout(idle)
-        idle = setTimeout(() => void worker?.terminate(), IDLE_MS).unref()
+        idle = setTimeout(() => letGo(current), IDLE_MS).unref()
         resolve(answer)
       }
     })

@@ -47,6 +47,8 @@ export class Connection implements RoomPeer {
   #saved = 0
   #toldSaved = 0
   #early: Uint8Array[] | null = []
+  /** Came in one packet with what was too much; handled when it is time. */
+  #late: Uint8Array[] = []
   #earlyBytes = 0
   #receive: ((frame: Uint8Array) => void) | null = null
   #isClosing = false
@@ -105,17 +107,55 @@ export class Connection implements RoomPeer {
     if (!this.isOpen) return
     const frame = isBinary ? bytesOf(data) : new Uint8Array(0)
     this.#take(1, frame.length)
-    if (this.#receive) this.#receive(frame)
-    else this.#hold(frame)
+    if (!this.#receive) return this.#hold(frame)
+    // What came in one packet with it still comes after a pause.
+    if (this.#pauses.has('rate') || this.#late.length > 0) this.#late.push(frame)
+    else this.#hand(frame)
+  }
+
+  /** A frame that trips something up ends its own connection, not the process. */
+  #hand(frame: Uint8Array): void {
+    try {
+      this.#receive?.(frame)
+    } catch (error) {
+      this.#log.error(
+        { ...this.facts, error: error instanceof Error ? error.name : 'unknown' },
+        'a frame was not handled',
+      )
+      this.close(CLOSE.tryAgain, 'a frame could not be handled')
+    }
   }
 
   /** Uses up some of what one may send; beyond it the socket is not read from for as long as it takes. */
   #take(messages: number, bytes: number): void {
-    const now = Date.now()
-    const waitMs = Math.max(this.#messages.take(messages, now), this.#bytes.take(bytes, now))
+    const waitMs = this.#owedMs(messages, bytes)
     if (waitMs === 0 || this.#pauses.has('rate')) return
     this.pause('rate')
-    setTimeout(() => this.resume('rate'), waitMs).unref()
+    setTimeout(() => this.#paidOff(), waitMs).unref()
+  }
+
+  /** Takes from what may be used up and returns how long it takes to pay off. Milliseconds. */
+  #owedMs(messages: number, bytes: number): number {
+    const now = Date.now()
+    return Math.max(this.#messages.take(messages, now), this.#bytes.take(bytes, now))
+  }
+
+  /** Works off what came late, as far as that costs nothing more, and listens again. */
+  #paidOff(): void {
+    // What came late was counted when it came.
+    const waitMs = this.#owedMs(0, 0)
+    if (waitMs > 0 && this.isOpen) {
+      setTimeout(() => this.#paidOff(), waitMs).unref()
+      return
+    }
+    this.resume('rate')
+    let handled = 0
+    for (const frame of this.#late) {
+      if (!this.isOpen || this.#pauses.has('rate')) break
+      handled++
+      this.#hand(frame)
+    }
+    this.#late = this.isOpen ? this.#late.slice(handled) : []
   }
 
   /** Keeps a frame that came while the document is loading, within bounds. */
@@ -135,7 +175,7 @@ export class Connection implements RoomPeer {
     const early = this.#early ?? []
     this.#early = null
     this.#receive = receive
-    for (const frame of early) if (this.isOpen) receive(frame)
+    for (const frame of early) if (this.isOpen) this.#hand(frame)
     this.resume('early')
   }
 

@@ -126,7 +126,7 @@ export function createDocuments(options: {
       )
       if (hasFailed) throw failure
       if (stored === undefined) throw notStored()
-      if (!stored) throw noDocument()
+      if (!stored) throw room.isBroken ? unavailable(undefined) : noDocument()
     })
   }
 

@@ -126,8 +126,13 @@ export class FanOut<R extends Reader> {
     for (const [reader, { since, frameOf, untilMs }] of this.#lagging) {
       if (reader.bufferedBytes <= this.#settings.caughtUpBytes) {
         this.#lagging.delete(reader)
-        this.answer(reader, since, frameOf)
-        this.#onCaughtUp(reader)
+        try {
+          this.answer(reader, since, frameOf)
+          this.#onCaughtUp(reader)
+        } catch {
+          // A throw from a timer would end the process; the reader comes back and asks anew.
+          reader.close(CLOSE.tryAgain, 'what was missed could not be told')
+        }
       } else if (nowMs > untilMs) {
         this.#lagging.delete(reader)
         reader.close(CLOSE.tryAgain, 'reads too slowly')

@@ -33,6 +33,8 @@ export function examine(doc: Y.Doc, update: Uint8Array): Verdict {
     section = client
     const have = known(client)
     const end = clock + struct.length
+    // Yjs would take it and encode what nobody can decode.
+    if (!Number.isSafeInteger(client) || !Number.isSafeInteger(end)) return { kind: 'undecodable' }
     if (struct instanceof Y.Skip ? end > have : clock > have) return { kind: 'gap' }
     ends.set(client, Math.max(have, end))
   }
@@ -66,13 +68,7 @@ export function bringsNothing(doc: Y.Doc, update: Uint8Array): boolean {
   }
   if (decoded.structs.length > 0) return false
   const ours = Y.createDeleteSetFromStructStore(doc.store)
-  for (const [client, ranges] of decoded.ds.clients) {
-    const known = ours.clients.get(client) ?? []
-    const isKnown = ({ clock, len }: { clock: number; len: number }) =>
-      known.some((range) => range.clock <= clock && clock + len <= range.clock + range.len)
-    if (!ranges.every(isKnown)) return false
-  }
-  return true
+  return Y.equalDeleteSets(Y.mergeDeleteSets([ours, decoded.ds]), ours)
 }
 
 /** Whether something waits in the document for what it lacks. `examine` lets nothing of the kind through. */

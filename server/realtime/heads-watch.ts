@@ -53,7 +53,8 @@ export function createHeadsWatch(options: {
     const rows = new Map(found.rows.map((row) => [row.id, row]))
     for (const room of all) {
       const row = rows.get(room.place.docId)
-      if (!row) letGo(room, CLOSE.unknown, 'the document is gone')
+      if (room.isBroken) letGo(room, CLOSE.tryAgain, 'the document is loaded anew')
+      else if (!row) letGo(room, CLOSE.unknown, 'the document is gone')
       else if (row.epoch !== room.epoch) letGo(room, CLOSE.epoch, 'the document is of another epoch')
       else {
         room.freeze(row.frozen)

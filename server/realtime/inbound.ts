@@ -22,6 +22,11 @@ export type Inbound = {
 
 /** Between two questions to a client whose updates do not fit. */
 const ASK_AGAIN_MS = 1_000
+/** The longest list of deletions that is read from somebody who may not write. */
+const MAX_DELETIONS_BYTES = 256 * 1024
+/** A full document still takes what makes it smaller, and so much of small changes: taking out is a change too. */
+const SMALL_CHANGE_BYTES = 1024
+const SMALL_CHANGES_BYTES = 256 * 1024
 /** Between two workings-out of what a client's step 2 holds beside its gaps: each costs a copy of the document. */
 const SALVAGE_MS = 10_000
 
@@ -50,7 +55,7 @@ export function createReceiver(context: Inbound, connection: Connection, room: R
       case 'presence':
         return takePresence(message.body)
       case 'query presence':
-        return connection.send(room.presence.everyoneBut(connection))
+        return answerPresence()
       case 'unknown':
         log.warn({ ...connection.facts, type: message.type }, 'unknown message ignored')
     }
@@ -58,13 +63,20 @@ export function createReceiver(context: Inbound, connection: Connection, room: R
 
   function answer(stateVector: Uint8Array): void {
     try {
-      connection.charge(room.fanOut.answer(connection, stateVector, step2Frame))
+      // Working it out goes through the whole document, however little comes of it.
+      connection.charge(Math.max(room.fanOut.answer(connection, stateVector, step2Frame), room.sizeBytes / 4))
     } catch {
       strike('a state vector that does not decode')
       return
     }
     connection.isSynced = true
     connection.send(step1Frame(Y.encodeStateVector(room.doc)))
+  }
+
+  function answerPresence(): void {
+    const everyone = room.presence.everyoneBut(connection)
+    connection.charge(everyone.length)
+    connection.send(everyone)
   }
 
   function takePresence(body: Uint8Array): void {
@@ -82,27 +94,31 @@ export function createReceiver(context: Inbound, connection: Connection, room: R
     }
     if (!connection.mayWrite) {
       // The first byte counts the parts with content: anything but a list of deletions reaches no parser.
-      if (kind === 'step 2' && update[0] === 0 && bringsNothing(room.doc, update)) return store(() => undefined)
+      const mayBeKnown = kind === 'step 2' && update[0] === 0 && update.length <= MAX_DELETIONS_BYTES
+      if (mayBeKnown && bringsNothing(room.doc, update)) return store(() => undefined)
       return connection.refuse(n, 'read-only')
     }
-    if (room.frozen !== null) return connection.refuse(n, 'frozen')
+    if (room.frozen !== null) return putOff(n, 'frozen')
     if (kind === 'update' && update.length > settings.maxUpdateBytes) return putOff(n, 'too-large')
     const verdict = examine(room.doc, update)
     if (verdict.kind === 'undecodable') return refuseInvalid(n, update)
     if (verdict.kind === 'gap') return mend(kind, n, update)
     if (!room.mayGrow(verdict.structs, settings.structsPerMinute, Date.now())) return putOff(n, 'full')
-    if (!room.hasRoomFor(update.length, settings.stateBytes, Date.now())) return putOff(n, 'full')
+    const isSmall = update.length <= SMALL_CHANGE_BYTES
+    const limitBytes = settings.stateBytes + (isSmall ? SMALL_CHANGES_BYTES : 0)
+    if (verdict.structs > 0 && !room.hasRoomFor(update.length, limitBytes, Date.now())) return putOff(n, 'full')
     if (kind === 'step 2') connection.unhold()
     gapsInStep2 = 0
     store(() => Y.applyUpdate(room.doc, update, connection))
   }
 
   function store(apply: () => void): void {
-    const ackable = connection.ackable
+    const { ackable, received: n } = connection
     const { userId } = connection.person
+    let isWhole = true
     const taken = room.change({ userId, peer: connection }, apply, (stored) => {
-      if (stored) connection.saved(ackable)
-      else connection.close(CLOSE.unknown, 'the document is gone')
+      if (stored) connection.saved(isWhole ? ackable : Math.min(ackable, n - 1))
+      else if (!room.isBroken) connection.close(CLOSE.unknown, 'the document is gone')
     })
     if (taken === 'broken') {
       log.error(connection.facts, 'an update that decodes broke the document in memory; it is loaded anew')
@@ -110,6 +126,7 @@ export function createReceiver(context: Inbound, connection: Connection, room: R
       for (const peer of [...room.peers]) peer.close(CLOSE.tryAgain, 'the document is loaded anew')
     }
     if (taken === 'incomplete') {
+      isWhole = false
       connection.holdAt(connection.received)
       ask()
     }

@@ -48,6 +48,8 @@ export type Instances = {
   changed(shootId: ShootId, queryKeys: readonly (readonly string[])[]): void
   /** How many others are known to be there. */
   others(): number
+  /** Whether it is known that there are none. */
+  isAlone(): boolean
   stop(): Promise<void>
 }
 
@@ -116,7 +118,8 @@ export function createInstances(options: {
         })
         await pause(BREATH_MS)
       } catch (error) {
-        // Not said again: the heads are looked at anyway, and presence is out of date by then.
+        // Not said again: the heads are looked at anyway, presence is out of date. Whoever forgets us asks for it anew.
+        waiting.unshift({ kind: 'gone' }, { kind: 'here', asks: false })
         log.warn({ error: reasonOf(error) }, 'other instances not told')
         await pause(AFTER_FAILURE_MS)
       }
@@ -191,6 +194,8 @@ export function createInstances(options: {
       isListening = true
       // Who is silent while nobody listens may well be there.
       for (const instance of heardAtMs.keys()) heardAtMs.set(instance, Date.now())
+      // Farewells may have been among what was not heard; those who are there show themselves again.
+      for (const instance of heardAtMs.keys()) options.onGone(instance)
       say({ kind: 'here', asks: true })
       options.onMissed()
     },
@@ -225,6 +230,7 @@ export function createInstances(options: {
       if (heardAtMs.size > 0) say({ kind: 'changed', shootId, queryKeys: queryKeys.map((key) => [...key]) })
     },
     others: () => heardAtMs.size,
+    isAlone: () => isListening && heardAtMs.size === 0,
     stop: async () => {
       if (isStopped) return
       isStopped = true

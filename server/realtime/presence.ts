@@ -71,10 +71,11 @@ export class RoomPresence {
     }
     if (typeof entry === 'number') return 'not its own'
     if (entry.clientId > MAX_CLIENT_ID || entry.clock > MAX_CLOCK) return 'not a presence'
-    if (!this.#bind(peer, entry.clientId, state === null)) return 'not its own'
     if (typeof state !== 'object' || Array.isArray(state)) return 'not a presence'
     const text = state === null ? GONE : JSON.stringify({ ...state, user: stampOf(peer) })
     if (Buffer.byteLength(text) > this.#settings.presenceBytes) return 'too large'
+    // Last: whoever takes an id over must also show it, or nobody would say its farewell.
+    if (!this.#bind(peer, entry.clientId, state === null)) return 'not its own'
     // Peers ignore what is not newer than what they had, a farewell from an earlier connection included.
     const { sessionId } = peer.person
     const clock = this.#newerThan(entry)

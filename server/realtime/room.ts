@@ -76,7 +76,7 @@ export class Room {
     this.#onBad = onBad
     this.presence = new RoomPresence(
       settings,
-      () => [...this.peers].filter((peer) => !this.fanOut.isLagging(peer)),
+      () => [...this.peers].filter((peer) => !this.fanOut.isLagging(peer) && peer.bufferedBytes <= settings.lagBytes),
       (entries) => instances.showPresence(place.docId, entries),
     )
     this.fanOut = new FanOut(this.doc, {
@@ -97,13 +97,18 @@ export class Room {
 
   /**
    * Runs a change of the document as one transaction, hands what was new in it to the peers at once and to the log.
-   * `settle` is called when all of it, or the copy that somebody else brought before, is committed.
+   * `settle` is called when all of it, or the copy that somebody else brought before, is committed; with false when
+   * the document is gone or broken.
    */
   change(
     author: { userId: UserId | null; peer: RoomPeer | null },
     fn: () => void,
     settle: (stored: boolean) => void,
   ): Taken {
+    if (this.isBroken) {
+      settle(false)
+      return 'broken'
+    }
     this.#captured = []
     this.#touched.clear()
     let failed = false
@@ -117,9 +122,10 @@ export class Room {
     this.#captured = null
     const isIncomplete = hasPending(this.doc)
     if (isIncomplete) dropPending(this.doc)
-    if (failed && author.peer) {
-      // Changed half way by something that decoded well: what memory holds is no longer what the log makes.
+    if (failed) {
+      // Changed half way: what memory holds is no longer what the log makes, and Yjs may not tell of changes any more.
       this.isBroken = true
+      settle(false)
       return 'broken'
     }
     const update = captured.length > 1 ? Y.mergeUpdates(captured) : (captured[0] ?? null)
@@ -194,7 +200,14 @@ export class Room {
 
   async #readOn(): Promise<void> {
     const rows = await rowsAfter(this.#pool, this.place.docId, this.head)
-    for (const bad of applyRows(this.doc, rows)) this.#onBad(bad)
+    let refused: BadPiece[]
+    try {
+      refused = applyRows(this.doc, rows)
+    } catch (error) {
+      this.isBroken = true
+      throw error
+    }
+    refused.forEach(this.#onBad)
     this.head = Math.max(this.head, Number(rows[rows.length - 1]?.seq ?? 0))
   }
 

@@ -105,7 +105,8 @@ export function createRooms(options: {
   async function unloadWhenIdle(docId: DocId, slot: Slot): Promise<void> {
     const mayGo = () => slot.holds === 0 && slots.get(docId) === slot
     const { room } = slot
-    if (!room || !mayGo()) return
+    if (!mayGo()) return
+    if (!room) return scheduleUnload(docId, slot)
     // Still there meanwhile: whoever comes in finds it as it is.
     if (room.isIdle) await compaction.beforeUnload(room)
     if (!mayGo()) return

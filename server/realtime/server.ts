@@ -122,7 +122,7 @@ export function createRealtime(options: {
     pool,
     databaseUrl,
     updateLog,
-    isAlone: () => instances.others() === 0,
+    isAlone: () => instances.isAlone(),
     settings,
     log,
   })
@@ -202,7 +202,7 @@ export function createRealtime(options: {
         if (left > 0) perUser.set(person.userId, left)
         else perUser.delete(person.userId)
       })
-      if (mine > settings.socketsPerUser) return connection.close(CLOSE.crowded, 'too many sockets of one person')
+      if (mine > settings.socketsPerUser) return connection.close(CLOSE.tryAgain, 'too many sockets of one person')
       connections.add(connection)
       watch.add(connection)
       if (watch.notices() !== noticesBefore) watch.judge(connection)
@@ -300,5 +300,7 @@ export function createRealtime(options: {
 const REASONS = { 401: 'Unauthorized', 403: 'Forbidden', 503: 'Service Unavailable' } as const
 
 function refuse(socket: Duplex, status: keyof typeof REASONS): void {
+  // Nothing else would ever end a socket whose other side does not.
+  socket.once('finish', () => socket.destroy())
   socket.end(`HTTP/1.1 ${status} ${REASONS[status]}\r\nConnection: close\r\nContent-Length: 0\r\n\r\n`)
 }

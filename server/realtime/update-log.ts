@@ -37,7 +37,7 @@ export type UpdateLog = {
  */
 const APPEND = `
   with locked as (
-    select id from rt_doc where id = any($1::uuid[]) order by id for update
+    select id from rt_doc where id = any($1::uuid[]) order by id for no key update
   ), grown as (
     update rt_doc d set head = d.head + g.n, log_rows = d.log_rows + g.n, log_bytes = d.log_bytes + g.bytes
     from unnest($1::uuid[], $2::int[], $3::bigint[]) as g(id, n, bytes), locked

@@ -13,7 +13,8 @@
  * | 102 | hello | to client | varString JSON `Hello`; the first frame of every connection |
  * | 103 | changed | to client | varString JSON: array of query keys to fetch again; on the `board` socket only |
  *
- * A client says which epoch its cache is of with `?epoch=n`; another one than the document's is closed with 4409.
+ * A client says which epoch its cache is of with `?epoch=n`; another one than the document's is closed with 4409. With
+ * `?user=id` it says whose edits it holds; when somebody else is signed in by now it is closed with 4401.
  * 100–103 are sent only to clients that ask with `?ack=1`. Every well-formed, permitted update is answered by a
  * cumulative 100 after the transaction that stores it has committed with `synchronous_commit = on`. Deletes are
  * covered, which is why the acknowledgement is a count and not a state vector.
@@ -37,7 +38,7 @@ export type Refusal = (typeof REFUSALS)[number]
 export const CLOSE = {
   /** Server is going down or restarting. */
   restart: 1012,
-  /** Try again later: a room failed to load, a slow reader, a full database queue. */
+  /** Try again later: a room failed to load, a slow reader, a full database queue, too many sockets of one person. */
   tryAgain: 1013,
   /** Three undecodable updates in one session. */
   abuse: 4400,
@@ -49,7 +50,7 @@ export const CLOSE = {
   unknown: 4404,
   /** The document was rebuilt: drop the cache of the old epoch. */
   epoch: 4409,
-  /** Too many sockets of one person, or people in one document. */
+  /** Too many people in one document. */
   crowded: 4429,
   /** The role changed: come back and be told the new one. */
   roleChanged: 4205,
@@ -96,7 +97,6 @@ export const LIMITS = {
   messagesPerSecond: 100,
   bytesPerSecond: 256 * 1024,
   presenceBytes: 2048,
-  presencePerSecond: 20,
   socketsPerUser: 60,
   connectionsPerDocument: 200,
   stateBytes: 8 * 1024 * 1024,

@@ -224,6 +224,20 @@ describe('presence', () => {
     await othersAreFine()
   })
 
+  it('that is not taken takes no id over: nobody is left behind when all have gone', async () => {
+    const client = await open('client').ready()
+    const again = await open('client').ready()
+    client.show(9, 1, { at: 'board' })
+    await until(() => good.presence.has(9))
+    again.show(9, 2, ['not a presence'])
+    again.show(9, 3, { note: 'x'.repeat(3000) })
+    again.close()
+    await again.ended
+    client.close()
+    await until(() => !good.presence.has(9))
+    await othersAreFine()
+  })
+
   it('reaches peers at most 20 times a second, the latest last', async () => {
     const client = await open('client').ready()
     const before = good.types.filter((type) => type === 1).length
@@ -263,6 +277,42 @@ describe('a client that takes too much', () => {
     expect(client.endCode).toBe(null)
     client.close()
     await slow.close()
+  })
+
+  it('is held up alone by what it packs into one packet', async () => {
+    const slow = await startWorld({ databaseUrl: database.url, limits: { messagesPerSecond: 50 } })
+    const { sessionId } = shoot.people.client
+    const client = await new TestClient({ url: slow.url, shootId: shoot.shootId, kind: 'board', sessionId }).ready()
+    let answers = 0
+    client.ws.on('message', (data: Buffer) => (answers += data[0] === 0 && data[1] === 0 ? 1 : 0))
+    const startMs = performance.now()
+    client.answers = false
+    // Written at once, so that the server reads many of them together.
+    client.ws.pause()
+    for (let i = 0; i < 300; i++) client.ask()
+    client.ws.resume()
+    client.items.set('last', 1)
+    await until(() => client.saved === client.sent)
+    // 100 may be sent at once, the other 200 take four seconds at 50 a second.
+    expect(performance.now() - startMs).toBeGreaterThan(3_000)
+    expect(answers).toBe(300)
+    expect(client.endCode).toBe(null)
+    client.close()
+    await slow.close()
+  })
+
+  it('may make a full document smaller', async () => {
+    const tight = await startWorld({ databaseUrl: database.url, limits: { stateBytes: 20_000 } })
+    const { sessionId } = shoot.people.photographer
+    const client = await new TestClient({ url: tight.url, shootId: shoot.shootId, kind: 'looks', sessionId }).ready()
+    client.items.set('large', 'x'.repeat(19_000))
+    await until(() => client.saved === client.sent)
+    client.items.delete('large')
+    client.items.set('small', 'y'.repeat(500))
+    await until(() => client.saved === client.sent)
+    expect(client.refusals).toEqual([])
+    client.close()
+    await tight.close()
   })
 
   it('is refused when the document is full or grows too fast', async () => {

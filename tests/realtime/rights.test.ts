@@ -111,13 +111,28 @@ describe('who gets into a document', () => {
     }
   })
 
+  it('takes no edits of a page that somebody else opened', async () => {
+    const { photographer, stylist } = shoot.people
+    const opened = (user: string) =>
+      new TestClient({
+        url: world.url,
+        shootId: shoot.shootId,
+        kind: `board?ack=1&user=${user}&as=`,
+        sessionId: stylist.sessionId,
+      })
+    expect(await opened(photographer.userId).ended).toBe(CLOSE.signedOut)
+    const own = await opened(stylist.userId).ready()
+    expect(own.hello?.role).toBe('stylist')
+    own.close()
+  })
+
   it('gives a person 60 sockets', async () => {
     const many = await startWorld({ databaseUrl: database.url, limits: { socketsPerUser: 3 } })
     const one = shoot.people.crew
     const at = { url: many.url, shootId: shoot.shootId, kind: 'day', sessionId: one.sessionId }
     const clients = [1, 2, 3].map(() => new TestClient(at))
     await Promise.all(clients.map((client) => client.ready()))
-    expect(await new TestClient(at).ended).toBe(CLOSE.crowded)
+    expect(await new TestClient(at).ended).toBe(CLOSE.tryAgain)
     clients[0]?.close()
     await clients[0]?.ended
     await until(async () => {

@@ -1,4 +1,5 @@
 import { describe, expect, it } from 'vitest'
+import * as encoding from 'lib0/encoding'
 import * as Y from 'yjs'
 import { seededRandom } from '#shared/domain/order/search/random.ts'
 import { DAMAGE } from '#tests/support/damage.ts'
@@ -136,6 +137,26 @@ describe('what has no length', () => {
   ])('%s never gets in', (_, bytes) => {
     const doc = healthy()
     expect(examine(doc, Uint8Array.from(bytes)).kind).toBe('undecodable')
+  })
+})
+
+describe('what is longer than can be counted', () => {
+  it('never gets in: Yjs would take it and encode what nobody can decode', () => {
+    // Fillers of the largest length that decodes, one behind the other, as one client's.
+    const update = encoding.encode((encoder) => {
+      encoding.writeVarUint(encoder, 1)
+      encoding.writeVarUint(encoder, 300)
+      encoding.writeVarUint(encoder, 77)
+      encoding.writeVarUint(encoder, 0)
+      for (let i = 0; i < 300; i++) {
+        encoding.writeUint8(encoder, 0)
+        encoding.writeVarUint(encoder, Number.MAX_SAFE_INTEGER)
+      }
+      encoding.writeVarUint(encoder, 0)
+    })
+    const doc = healthy()
+    expect(Y.decodeUpdate(update).structs).toHaveLength(300)
+    expect(examine(doc, update).kind).toBe('undecodable')
   })
 })
 

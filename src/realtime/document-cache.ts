@@ -193,6 +193,7 @@ export function openDocumentCache(
     try {
       database ??= await openDatabase(name, lose)
       await (holdsUnkept ? append() : replaceRows())
+      markComplete()
       setKept(true)
       await append()
     } catch {
@@ -202,6 +203,9 @@ export function openDocumentCache(
 
   function lose(): void {
     database = undefined
+    // A database made anew numbers its rows from the beginning.
+    readThrough = 0
+    written.clear()
     fail()
   }
 
@@ -260,13 +264,19 @@ export function openDocumentCache(
     })
   }
 
+  function markComplete(): void {
+    if (isComplete) database?.put('custom', true, COMPLETE).catch(() => undefined)
+  }
+
   async function open(): Promise<boolean> {
     // Some private windows have none.
     if (!('indexedDB' in globalThis)) return false
     try {
       database = await openDatabase(name, lose)
-      isComplete = (await database.get('custom', COMPLETE)) === true
+      // Said meanwhile by the server, perhaps.
+      isComplete = (await database.get('custom', COMPLETE)) === true || isComplete
       await inLine(readRows)
+      markComplete()
       setKept(true)
       await append()
       compactWhenLong()
@@ -284,7 +294,7 @@ export function openDocumentCache(
     rememberComplete() {
       if (isComplete) return
       isComplete = true
-      database?.put('custom', true, COMPLETE).catch(() => undefined)
+      markComplete()
     },
     async takeIn() {
       if (!('indexedDB' in globalThis)) return

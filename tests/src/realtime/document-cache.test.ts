@@ -36,6 +36,13 @@ async function rows(): Promise<Uint8Array[]> {
   return all
 }
 
+async function isMarkedComplete(): Promise<unknown> {
+  const database = await openDB(name)
+  const marked: unknown = await database.get('custom', 'complete')
+  database.close()
+  return marked
+}
+
 /** From now on the device refuses to write, until the returned function is called. */
 function fill(): () => void {
   const spy = vi.spyOn(IDBObjectStore.prototype, 'add').mockImplementation(() => {
@@ -243,6 +250,38 @@ describe('openDocumentCache', () => {
     const again = page()
     await again.cache.opened
     expect(again.cache.wasComplete()).toBe(true)
+  })
+
+  it('remembers it also when it is said before the database is open, and after the database was taken away', async () => {
+    const one = page({ retryMs: 5 })
+    one.cache.rememberComplete()
+    await one.cache.opened
+    expect(one.cache.wasComplete()).toBe(true)
+    await until(async () => (await isMarkedComplete()) === true)
+    await new Promise<void>((resolve) => {
+      indexedDB.deleteDatabase(name).onsuccess = () => resolve()
+    })
+    await until(() => one.kept.length === 3)
+    await until(async () => (await isMarkedComplete()) === true)
+  })
+
+  it('overwrites nothing that another page wrote after the database was taken away', async () => {
+    const one = page({ retryMs: 50 })
+    await one.cache.opened
+    for (const key of ['a', 'b', 'c']) {
+      say(one, key, 'mine')
+      await until(async () => (await rows()).length === 'abc'.indexOf(key) + 1)
+    }
+    await one.cache.takeIn()
+    await new Promise<void>((resolve) => {
+      indexedDB.deleteDatabase(name).onsuccess = () => resolve()
+    })
+    const other = new Y.Doc()
+    other.getMap('words').set('d', 'of another page')
+    await addToCache(name, Y.encodeStateAsUpdate(other))
+    await until(() => one.kept.at(-1) === true)
+    expect(one.words()).toEqual({ a: 'mine', b: 'mine', c: 'mine', d: 'of another page' })
+    expect((await readCache(name)).getMap('words').toJSON()).toEqual(one.words())
   })
 
   it('skips a row that cannot be read and gives the others', async () => {

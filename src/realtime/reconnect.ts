@@ -5,6 +5,8 @@ const FIRST_MINUTES_MS = 120_000
 const SILENCE_MS = 20_000
 /** An attempt that has no answer for so long is given up. */
 const CONNECTING_MS = 10_000
+/** A connection that lasted for so long in step was a good one; a shorter one counts as a failed attempt. */
+const GOOD_MS = 10_000
 
 /**
  * How long to wait for the next attempt: soon at first, at most 3 s in the first two minutes, then 30 s. Spread over the
@@ -19,7 +21,7 @@ export function reconnectDelayMs(attempt: number, downForMs: number, random: num
 }
 
 export type Reconnecting = {
-  /** Connects now, and from now on whenever the connection is lost. */
+  /** Connects now, and from now on whenever the connection is lost. Nothing happens once it is destroyed. */
   start(): void
   /** Stays away until `start`. */
   stop(): void
@@ -36,7 +38,9 @@ export function keepConnected(provider: WebsocketProvider, onFailed: (failures: 
   let isWanted = false
   let attempt = 0
   let downSinceMs: number | null = null
+  let syncedAtMs: number | null = null
   let startedAtMs = 0
+  let isDestroyed = false
   let timer: ReturnType<typeof setTimeout> | undefined
   let givingUp: ReturnType<typeof setTimeout> | undefined
 
@@ -56,6 +60,11 @@ export function keepConnected(provider: WebsocketProvider, onFailed: (failures: 
     provider.shouldConnect = false
     clearTimeout(givingUp)
     clearTimeout(timer)
+    if (syncedAtMs !== null && Date.now() - syncedAtMs > GOOD_MS) {
+      attempt = 0
+      downSinceMs = null
+    }
+    syncedAtMs = null
     if (!isWanted) return
     downSinceMs ??= Date.now()
     timer = setTimeout(connect, reconnectDelayMs(attempt, Date.now() - downSinceMs, Math.random()))
@@ -63,9 +72,7 @@ export function keepConnected(provider: WebsocketProvider, onFailed: (failures: 
     onFailed(attempt)
   }
   const handleSync = (isSynced: boolean) => {
-    if (!isSynced) return
-    attempt = 0
-    downSinceMs = null
+    if (isSynced) syncedAtMs ??= Date.now()
   }
   const handleClosedForGood = () => {
     isWanted = false
@@ -95,6 +102,7 @@ export function keepConnected(provider: WebsocketProvider, onFailed: (failures: 
 
   return {
     start() {
+      if (isDestroyed) return
       isWanted = true
       connect()
     },
@@ -103,6 +111,7 @@ export function keepConnected(provider: WebsocketProvider, onFailed: (failures: 
       provider.disconnect()
     },
     destroy() {
+      isDestroyed = true
       isWanted = false
       clearTimeout(timer)
       clearTimeout(givingUp)

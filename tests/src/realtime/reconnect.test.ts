@@ -108,8 +108,36 @@ describe('keepConnected', () => {
     expect(failures).toEqual([1, 2, 3, 4, 5, 6])
     TestSocket.last.open()
     TestSocket.last.sync()
+    await vi.advanceTimersByTimeAsync(11_000)
     TestSocket.last.fall()
     expect(failures.at(-1)).toBe(1)
+  })
+
+  it('is in no more hurry when the server lets it in and throws it out at once, again and again', async () => {
+    vi.spyOn(Math, 'random').mockReturnValue(0.999)
+    connection.start()
+    while (sockets() < 5) {
+      if (TestSocket.last.readyState === 0) {
+        TestSocket.last.open()
+        TestSocket.last.sync()
+        TestSocket.last.fall()
+      }
+      await vi.advanceTimersByTimeAsync(100)
+    }
+    expect(failures).toEqual([1, 2, 3, 4])
+    const before = sockets()
+    TestSocket.last.fall()
+    await vi.advanceTimersByTimeAsync(2_500)
+    expect(sockets()).toBe(before)
+  })
+
+  it('never connects again once it is over', async () => {
+    connection.start()
+    connection.destroy()
+    provider.destroy()
+    connection.start()
+    await vi.advanceTimersByTimeAsync(10_000)
+    expect(sockets()).toBe(1)
   })
 
   it('is in no hurry after two minutes', async () => {

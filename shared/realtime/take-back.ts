@@ -52,8 +52,11 @@ export type Differences = {
 export function differencesOf(doc: Y.Doc, past: Y.Doc, c: Collection): Differences {
   const now = readAll(doc, c).items
   const then = readAll(past, c).items
+  const root = rootOf(doc, c)
+  // Taking back leaves alone what is no item at all.
+  const canLive = (id: string) => !root.has(id) || root.get(id) instanceof Y.Map
   return {
-    back: [...then.keys()].filter((id) => !now.has(id)),
+    back: [...then.keys()].filter((id) => !now.has(id) && canLive(id)),
     gone: [...now.keys()].filter((id) => !then.has(id)),
     changed: [...then].flatMap(([id, item]) => (now.has(id) && !isSame(now.get(id), item) ? [id] : [])),
   }
@@ -99,8 +102,9 @@ function changesOf(
     if (!(then instanceof Y.Map) || isDeleted(then)) continue
     const now = root.get(id)
     if (now instanceof Y.Map) changes.push(...fieldsToThen(c, id, new Map(then.entries()), now))
-    else births.set(id, bornAgain(then))
-    if (!(now instanceof Y.Map) || isDeleted(now)) changes.push({ id, key: 'deleted', value: false })
+    else if (now === undefined) births.set(id, bornAgain(then))
+    if (now === undefined || (now instanceof Y.Map && isDeleted(now)))
+      changes.push({ id, key: 'deleted', value: false })
   }
   for (const [id, now] of root.entries()) {
     const then = pastRoot.get(id)

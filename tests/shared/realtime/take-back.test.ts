@@ -215,6 +215,16 @@ describe('takeBack', () => {
     expect(doc.getMap('holograms').toJSON()).toEqual({ a: 1 })
   })
 
+  it('writes over nothing that a later schema put in the place of an item', () => {
+    const doc = new Y.Doc()
+    putItems(doc, notes, [{ id: noteIdSchema.parse(uuid(1)), box: [0, 0, 80, 40], text: 'then' }], random)
+    const past = openPast('board', Y.encodeStateAsUpdate(doc), doc)
+    rootOf(doc, notes).set(uuid(1), 'no map any more')
+    expect(differencesOf(doc, past, notes).back).toEqual([])
+    expect(takeBack(doc, 'board', past, NOW_MS)).toBe(false)
+    expect(doc.getMap('notes').toJSON()).toEqual({ [uuid(1)]: 'no map any more' })
+  })
+
   it('brings no old field back with the first new one of an item that lives by being written', () => {
     const id = shotIdSchema.parse(uuid(1))
     const doc = new Y.Doc()

@@ -26,9 +26,15 @@ export const typingStore = {
   isTyping: (): boolean => held.size > 0,
 }
 
-/** Takes over what is typed everywhere: the page, or what keeps the words, goes away. */
+/** Takes over what is typed everywhere: the page, or what keeps the words, goes away. An error of one field stops no other. */
 export function takeAllOver(): void {
-  for (const takeOver of [...held]) takeOver()
+  for (const takeOver of [...held]) {
+    try {
+      takeOver()
+    } catch (error) {
+      reportError(error)
+    }
+  }
 }
 
 if (typeof window !== 'undefined') {

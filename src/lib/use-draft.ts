@@ -31,8 +31,11 @@ export function useDraft(value: string, takeOver: (text: string) => void): Draft
     if (!last) return
     clearTimeout(last.timer)
     // First the words, then the sign: it must not say saved in between.
-    give.current(last.text)
-    last.release()
+    try {
+      give.current(last.text)
+    } finally {
+      last.release()
+    }
   }, [])
   useEffect(() => flush, [flush])
 

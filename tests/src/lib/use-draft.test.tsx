@@ -5,7 +5,10 @@ import { typingStore } from '#src/lib/typing.ts'
 import { useDraft } from '#src/lib/use-draft.ts'
 
 beforeEach(() => vi.useFakeTimers())
-afterEach(() => vi.useRealTimers())
+afterEach(() => {
+  vi.useRealTimers()
+  vi.unstubAllGlobals()
+})
 
 describe('useDraft', () => {
   it('counts as typing until the words are taken over, twice a second', () => {
@@ -38,6 +41,24 @@ describe('useDraft', () => {
       window.dispatchEvent(new Event('pagehide'))
     })
     expect(taken).toEqual(['last words'])
+  })
+
+  it('ends typing, and takes over the other fields, when one cannot be taken over', () => {
+    const reported: unknown[] = []
+    vi.stubGlobal('reportError', (error: unknown) => reported.push(error))
+    const taken: string[] = []
+    const broken = renderHook(() =>
+      useDraft('', () => {
+        throw new Error('gone')
+      }),
+    )
+    const whole = renderHook(() => useDraft('', (text) => taken.push(text)))
+    act(() => broken.result.current.change('lost'))
+    act(() => whole.result.current.change('kept'))
+    act(() => {
+      window.dispatchEvent(new Event('pagehide'))
+    })
+    expect([taken, typingStore.isTyping(), reported]).toEqual([['kept'], false, [new Error('gone')]])
   })
 
   it('forgets what is dropped', () => {

@@ -54,6 +54,7 @@ export async function openRoom(options: {
       askPresence: () => undefined,
       changed: () => undefined,
       others: () => 0,
+      isAlone: () => true,
       stop: async () => undefined,
     },
     onBad: () => undefined,

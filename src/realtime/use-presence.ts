@@ -16,7 +16,8 @@ function presenceStore({ board }: ShootDocuments) {
   }
   let pending: Record<string, unknown> | null = null
   const flush = () => {
-    if (pending) awareness.setLocalState(pending)
+    // Without a state of its own the shoot has been left: a late one would stay there as a ghost.
+    if (pending && awareness.getLocalState() !== null) awareness.setLocalState(pending)
     pending = null
   }
   read()

@@ -7,9 +7,11 @@ import { type Role, canWriteDocument } from '#shared/access/roles.ts'
 import { type Collection, rootOf } from '#shared/realtime/collection.ts'
 import { COLLECTIONS, DOCUMENT_SCHEMA, type DocumentKind } from '#shared/realtime/documents.ts'
 import { CLOSE, type Hello, MESSAGE } from '#shared/realtime/protocol.ts'
+import { takeAllOver } from '#src/lib/typing.ts'
 import { countAcknowledgements } from './acknowledgements.ts'
 import { addToCache, openDocumentCache } from './document-cache.ts'
 import { cacheName, forgetCache, registerCache } from './local-cache.ts'
+import { parseHello, parseQueryKeys } from './parse-frames.ts'
 import { keepConnected } from './reconnect.ts'
 import { REFUSED_WORDS, refusedWords } from './refused-words.ts'
 import { type SaveFacts, type SaveState, saveStateOf } from './save-state.ts'
@@ -30,7 +32,12 @@ export type OpenDocument = {
   ready: Store<boolean>
   /** A permanent close code (4400–4499), when the server sent one. */
   closed: Store<number | null>
-  /** Closes it as soon as what is on its way has arrived, or after a moment. */
+  /** Whether there are edits that neither the server nor this device has. */
+  atRisk(): boolean
+  /**
+   * Closes it as soon as what is on its way has arrived, or after a moment; edits that this device does not keep are
+   * waited for as long as it takes.
+   */
   leave(): Promise<void>
   /** Closes it now. */
   destroy(): void
@@ -74,6 +81,8 @@ export function openDocument(options: Options): OpenDocument {
   const account = openAccount(name)
   /** Edits of pages that are gone, until they have been read from the cache. */
   let takenOver = 0
+  /** Those of them that could not be read. */
+  let missed = 0
   let mayWrite = canWriteDocument(role, kind)
   /** Edits made without the right to: neither kept nor sent. */
   let vain = 0
@@ -117,11 +126,17 @@ export function openDocument(options: Options): OpenDocument {
     if (!local) return
     askToStayStored()
     acks.edited()
-    if (!mayWrite) vain++
+    if (!mayWrite) {
+      vain++
+      if (hello.get()) queueMicrotask(() => void putAside())
+    }
     update()
   })
   const cache = openDocumentCache(name, doc, {
-    onKept: (kept) => update({ kept }),
+    onKept: (kept) => {
+      update({ kept })
+      if (kept) takeInMissed()
+    },
     mayKeep: ({ local }) => mayWrite || !local,
   })
 
@@ -206,15 +221,20 @@ export function openDocument(options: Options): OpenDocument {
 
   /** What this person may no longer send is kept apart, for a copy; the document itself is read from the server anew. */
   async function putAside(): Promise<void> {
-    if (isPuttingAside) return
+    if (isPuttingAside || isDestroyed) return
     isPuttingAside = true
     connection.stop()
     const aside = cacheName(userId, shootId, kind, 'aside')
     try {
+      // Words still in a field belong to it.
+      takeAllOver()
       await cache.takeIn()
+      if (isDestroyed) return
       registerCache(aside)
       await addToCache(aside, Y.encodeStateAsUpdate(doc))
+      if (isDestroyed) return
     } catch {
+      if (isDestroyed) return
       // This device keeps nothing: the sign goes on saying so as long as the page is open.
       connection.start()
       return
@@ -238,6 +258,7 @@ export function openDocument(options: Options): OpenDocument {
       maySend = false
       refusedAt = 1
       update({ link: 'up' })
+      takeInMissed()
       void adopt()
     } else if (status === 'disconnected') {
       waitBriefly()
@@ -257,9 +278,34 @@ export function openDocument(options: Options): OpenDocument {
   provider.on('closed', ({ code }) => {
     clearTimeout(brief)
     closed.set(code)
-    update({ outdated: code === CLOSE.epoch, link: 'down' })
+    // A document that was rebuilt is opened anew in a moment: not worth a word.
+    update({ link: code === CLOSE.epoch ? 'brief' : 'down' })
     if (code === CLOSE.epoch) onPast()
+    if (code === CLOSE.noAccess || code === CLOSE.unknown) void letGoOfCache()
   })
+
+  /** What is shut to this person does not stay on this device, except for what was not sent, until they let go of it. */
+  async function letGoOfCache(): Promise<void> {
+    await cache.close()
+    if (count() === 0) await forgetCache(name)
+  }
+
+  const takeInEdits = (edits: number) =>
+    cache.takeIn().then(
+      () => {
+        takenOver -= edits
+        acks.edited(edits)
+        exchange()
+      },
+      // Not readable now: still counted, and tried again when this device keeps edits again, or at the next connection.
+      () => void (missed += edits),
+    )
+
+  function takeInMissed(): void {
+    const edits = missed
+    missed = 0
+    if (edits > 0) void takeInEdits(edits)
+  }
 
   /** Edits of pages that are gone are sent from here. */
   const adopt = () =>
@@ -267,15 +313,7 @@ export function openDocument(options: Options): OpenDocument {
       takenOver += edits
       const since = facts.sinceMs === null ? sinceMs : Math.min(facts.sinceMs, sinceMs)
       update({ sinceMs: since })
-      void cache.takeIn().then(
-        () => {
-          takenOver -= edits
-          acks.edited(edits)
-          exchange()
-        },
-        // Not readable now: still counted, and tried again by the next page.
-        () => undefined,
-      )
+      void takeInEdits(edits)
     })
 
   const handleNetwork = () => update()
@@ -299,6 +337,20 @@ export function openDocument(options: Options): OpenDocument {
     collections.map((c) => rootOf(doc, c)),
   )
 
+  /** Also ends when what is not sent is kept and does not go out within a moment, or never will. */
+  function untilSentOrKept(): Promise<void> {
+    return new Promise((resolve) => {
+      let timer: ReturnType<typeof setTimeout> | undefined
+      const look = () => {
+        if (count() === 0 || closed.get() !== null) resolve()
+        else if (facts.kept) timer ??= setTimeout(resolve, LEAVE_MS)
+      }
+      save.subscribe(look)
+      closed.subscribe(look)
+      look()
+    })
+  }
+
   function destroy(): void {
     if (isDestroyed) return
     isDestroyed = true
@@ -321,11 +373,11 @@ export function openDocument(options: Options): OpenDocument {
     hello,
     ready,
     closed,
+    atRisk: () => count() > 0 && (!facts.kept || vain > 0),
     async leave() {
-      if (count() > 0 && maySend && provider.wsconnected) {
+      if (count() > 0 && (!facts.kept || (maySend && provider.wsconnected))) {
         provider.awareness.setLocalState(null)
-        const sent = new Promise<void>((resolve) => save.subscribe(() => count() === 0 && resolve()))
-        await Promise.race([sent, wait(LEAVE_MS)])
+        await untilSentOrKept()
       }
       destroy()
     },
@@ -335,22 +387,4 @@ export function openDocument(options: Options): OpenDocument {
 
 function wait(ms: number): Promise<void> {
   return new Promise((resolve) => setTimeout(resolve, ms))
-}
-
-function parseHello(text: string): Hello | undefined {
-  try {
-    // Our own server's frame on an authorised socket; a field that is missing shows as a reload, never as a right.
-    return JSON.parse(text) as Hello
-  } catch {
-    return undefined
-  }
-}
-
-function parseQueryKeys(text: string): string[][] {
-  try {
-    const keys: unknown = JSON.parse(text)
-    return Array.isArray(keys) ? keys.filter((key): key is string[] => Array.isArray(key)) : []
-  } catch {
-    return []
-  }
 }

@@ -4,7 +4,8 @@ import { shortInstant } from '#src/lib/format.ts'
 /** What the sign on every screen says. One word each: saved, saving, offline, not saved, reload. */
 export type SaveState =
   | { kind: 'saved' }
-  | { kind: 'saving' }
+  /** `kept`: this device keeps it until the server has it. */
+  | { kind: 'saving'; kept: boolean }
   /** `sinceMs`: when the oldest of the unsent edits was made; null without any. */
   | { kind: 'offline'; unsent: number; sinceMs: number | null }
   | { kind: 'not-saved'; why: string }
@@ -51,7 +52,7 @@ export function saveStateOf({ link, settled, unsent, sinceMs, kept, refused, out
       ? { kind: 'offline', unsent, sinceMs }
       : { kind: 'not-saved', why: 'This device cannot keep edits while there is no connection. Leave this page open.' }
   }
-  return settled && unsent === 0 ? { kind: 'saved' } : { kind: 'saving' }
+  return settled && unsent === 0 ? { kind: 'saved' } : { kind: 'saving', kept: kept || unsent === 0 }
 }
 
 const GRAVITY: Readonly<Record<SaveState['kind'], number>> = {
@@ -65,6 +66,7 @@ const GRAVITY: Readonly<Record<SaveState['kind'], number>> = {
 /** The gravest of several documents' signs; unsent edits add up and are as old as the oldest. */
 export function gravest(states: readonly SaveState[]): SaveState {
   const top = states.reduce<SaveState>((a, b) => (GRAVITY[b.kind] > GRAVITY[a.kind] ? b : a), { kind: 'saved' })
+  if (top.kind === 'saving') return { kind: 'saving', kept: states.every((one) => one.kind !== 'saving' || one.kept) }
   if (top.kind !== 'offline') return top
   const offline = states.filter((state) => state.kind === 'offline')
   const since = offline.flatMap(({ sinceMs }) => (sinceMs === null ? [] : [sinceMs]))

@@ -77,7 +77,7 @@ export function ShootRealtime({ shoot, userId, children, waiting }: ShootRealtim
     })
     // Only what neither the server nor this device holds is worth a question.
     const handleUnload = (event: BeforeUnloadEvent) => {
-      if (DOCUMENT_KINDS.some((kind) => opened[kind].save.get().kind === 'not-saved')) event.preventDefault()
+      if (DOCUMENT_KINDS.some((kind) => opened[kind].atRisk())) event.preventDefault()
     }
     window.addEventListener('beforeunload', handleUnload)
 
@@ -86,9 +86,11 @@ export function ShootRealtime({ shoot, userId, children, waiting }: ShootRealtim
       // Fields below close after this: their words go into the documents while these are open.
       takeAllOver()
       clearTimeout(past)
-      window.removeEventListener('beforeunload', handleUnload)
       const left = DOCUMENT_KINDS.map((kind) => opened[kind].leave())
-      void Promise.all(left).then(stopListening)
+      void Promise.all(left).then(() => {
+        stopListening()
+        window.removeEventListener('beforeunload', handleUnload)
+      })
       setDocuments(null)
     }
   }, [shootId, userId, epochs, opening, queryClient])

@@ -17,7 +17,9 @@ function explanation(state: SaveState): string {
     case 'saved':
       return 'Everything you did is on the server.'
     case 'saving':
-      return 'What you did is on its way. It is kept on this device until the server has it.'
+      return state.kept
+        ? 'What you did is on its way. It is kept on this device until the server has it.'
+        : 'What you did is on its way, and so far only on this page. Leave the page open until it is saved.'
     case 'offline':
       return state.unsent === 0
         ? 'There is no connection. You can go on working: it is kept on this device and sent as soon as there is a signal.'

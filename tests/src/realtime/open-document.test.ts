@@ -5,7 +5,9 @@ import { afterEach, beforeEach, describe, expect, it, vi } from 'vitest'
 import { patchItem, putItems, readAll } from '#shared/realtime/collection.ts'
 import { DOCUMENT_SCHEMA, notes } from '#shared/realtime/documents.ts'
 import { CLOSE } from '#shared/realtime/protocol.ts'
+import { holdTyping } from '#src/lib/typing.ts'
 import { leftBehind, letGo, readLeftBehind } from '#src/realtime/left-behind.ts'
+import { registeredCaches } from '#src/realtime/local-cache.ts'
 import { type OpenDocument, openDocument } from '#src/realtime/open-document.ts'
 import { unsentOnDevice } from '#src/realtime/unsent-accounts.ts'
 import { fakeLocks } from '#tests/support/fake-locks.ts'
@@ -230,7 +232,8 @@ describe('openDocument', () => {
     end.answer = CLOSE.epoch
     await until(() => one.document.closed.get() === CLOSE.epoch)
     expect(past).toBe(1)
-    expect(one.sign()).toBe('reload')
+    // The page goes on by itself: nobody has to load it anew.
+    expect(one.sign()).toBe('saving')
     await one.document.leave()
     end.answer = 'take'
     const next = page({ epoch: 2 })
@@ -261,6 +264,72 @@ describe('openDocument', () => {
     expect([again.text(), onServer()]).toEqual(['as it was', 'as it was'])
     const [read] = await readLeftBehind(leftBehind('ines', 'shoot', { board: 1 }))
     expect(read && readAll(read.doc, notes).items.get(ID)?.text).toBe('too late')
+  })
+
+  it('puts aside words too that come out of a field after the right to write them is gone', async () => {
+    const one = page()
+    await until(() => one.sign() === 'saved')
+    end.sayHello({ role: 'crew', mayWrite: false })
+    await until(() => one.document.hello.get()?.mayWrite === false)
+    one.write('typed across it')
+    await until(() => putAside === 1)
+    expect(everSent('typed across it')).toBe(false)
+    expect(leftBehind('ines', 'shoot', { board: 1 })).toMatchObject([{ kind: 'board', edits: 1 }])
+  })
+
+  it('takes over what is still being typed when edits are put aside', async () => {
+    const one = page()
+    await until(() => one.sign() === 'saved')
+    end.answer = 1006
+    end.fall(CLOSE.roleChanged)
+    one.write('first words')
+    const release = holdTyping(() => one.write('first words and more'))
+    end.hello = { ...end.hello, role: 'crew', mayWrite: false }
+    end.answer = 'take'
+    await until(() => putAside === 1)
+    release()
+    const [read] = await readLeftBehind(leftBehind('ines', 'shoot', { board: 1 }))
+    expect(read && readAll(read.doc, notes).items.get(ID)?.text).toBe('first words and more')
+  })
+
+  it('opens no socket when it is closed while edits are being put aside', async () => {
+    const one = page()
+    await until(() => one.sign() === 'saved')
+    end.answer = 1006
+    end.fall(CLOSE.roleChanged)
+    one.write('too late')
+    end.hello = { ...end.hello, role: 'crew', mayWrite: false }
+    end.answer = 'take'
+    const before = end.sockets.length
+    one.document.hello.subscribe(() => queueMicrotask(one.document.destroy))
+    await until(() => one.document.hello.get()?.mayWrite === false)
+    const sockets = end.sockets.length
+    expect(sockets).toBeGreaterThan(before)
+    await new Promise((resolve) => setTimeout(resolve, 50))
+    expect([putAside, end.sockets.length]).toEqual([0, sockets])
+    expect(unsentOnDevice('ines')).toBe(1)
+    expect(leftBehind('ines', 'shoot', { board: 1 })).toEqual([])
+  })
+
+  it('forgets the cache of a shoot that is shut to this person, and keeps it while edits wait in it', async () => {
+    const one = page()
+    await until(() => one.sign() === 'saved')
+    expect(registeredCaches('rt:ines:shoot:')).toEqual(['rt:ines:shoot:board:1'])
+    end.fall(CLOSE.noAccess)
+    await until(() => registeredCaches('rt:ines:shoot:').length === 0)
+    const two = page({ userId: 'soren' })
+    await until(() => two.sign() === 'saved')
+    end.answer = 1006
+    end.fall()
+    two.write('not gone out')
+    end.answer = CLOSE.noAccess
+    await until(() => two.document.closed.get() === CLOSE.noAccess)
+    const left = leftBehind('soren', 'shoot', null)
+    expect(left).toMatchObject([{ edits: 1 }])
+    const [read] = await readLeftBehind(left)
+    expect(read && readAll(read.doc, notes).items.get(ID)?.text).toBe('not gone out')
+    await letGo(left)
+    expect((await indexedDB.databases()).map(({ name }) => name)).toEqual([])
   })
 
   it('neither sends nor keeps what somebody writes who may not', async () => {
@@ -347,6 +416,47 @@ describe('openDocument', () => {
     end.release()
     await left
     expect([onServer(), unsentOnDevice('ines')]).toEqual(['last words', 0])
+  })
+
+  it('stays open on leaving, and is at risk, as long as neither the server nor this device has the edits', async () => {
+    const full = vi.spyOn(IDBObjectStore.prototype, 'add').mockImplementation(() => {
+      throw new DOMException('The device is full.', 'QuotaExceededError')
+    })
+    const one = page()
+    await until(() => one.sign() === 'saved')
+    end.answer = 1006
+    end.fall()
+    expect(one.document.atRisk()).toBe(false)
+    one.write('only on this page')
+    await until(() => one.document.atRisk())
+    expect(one.document.save.get()).toEqual({ kind: 'saving', kept: false })
+    let hasLeft = false
+    const left = one.document.leave().then(() => (hasLeft = true))
+    await new Promise((resolve) => setTimeout(resolve, 50))
+    expect(hasLeft).toBe(false)
+    end.answer = 'take'
+    await left
+    full.mockRestore()
+    expect([onServer(), one.document.atRisk()]).toEqual(['only on this page', false])
+  })
+
+  it('counts what it could not read from the device at first, and sends it once it can', async () => {
+    const a = page()
+    await until(() => a.sign() === 'saved')
+    const b = page()
+    await until(() => b.sign() === 'saved')
+    a.document.provider.disconnect()
+    a.write('of the closed page')
+    tellOtherPages()
+    const unreadable = vi.spyOn(IDBObjectStore.prototype, 'getAllKeys').mockImplementation(() => {
+      throw new DOMException('The device cannot be read.', 'UnknownError')
+    })
+    a.document.destroy()
+    await until(() => unreadable.mock.calls.length > 0 && b.sign() === 'saving')
+    unreadable.mockRestore()
+    end.fall()
+    await until(() => onServer() === 'of the closed page')
+    await until(() => b.sign() === 'saved' && unsentOnDevice('ines') === 0)
   })
 
   it('asks once that what is kept on this device may stay, of people who edit', async () => {

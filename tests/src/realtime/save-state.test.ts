@@ -42,7 +42,9 @@ describe('saveStateOf', () => {
 
 describe('gravest', () => {
   it('takes the worst, adds up what is unsent and is as old as the oldest', () => {
-    expect(gravest([{ kind: 'saved' }, { kind: 'saving' }])).toEqual({ kind: 'saving' })
+    expect(gravest([{ kind: 'saved' }, { kind: 'saving', kept: true }])).toEqual({ kind: 'saving', kept: true })
+    const unkept = { kind: 'saving', kept: false } as const
+    expect(gravest([{ kind: 'saving', kept: true }, unkept])).toEqual(unkept)
     expect(
       gravest([
         { kind: 'offline', unsent: 2, sinceMs: 900 },

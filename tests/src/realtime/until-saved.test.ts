@@ -6,7 +6,9 @@ import { untilSaved } from '#src/realtime/until-saved.ts'
 beforeEach(() => void vi.useFakeTimers())
 afterEach(() => void vi.useRealTimers())
 
-const document = (kind: 'saved' | 'saving') => ({ save: createStore<SaveState>({ kind }) })
+const document = (kind: 'saved' | 'saving') => ({
+  save: createStore<SaveState>(kind === 'saving' ? { kind, kept: true } : { kind }),
+})
 
 describe('untilSaved', () => {
   it('waits for every document whose edits are on their way', async () => {

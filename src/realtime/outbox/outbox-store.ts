@@ -20,7 +20,7 @@ export type OutboxStore = {
   list(): Promise<OutboxEntry[]>
   /** How many there are, those of other pages included. */
   count(): Promise<number>
-  /** @throws DOMException QuotaExceededError when the device is full. */
+  /** @throws DOMException, `QuotaExceededError` when the device is full. */
   put(entry: OutboxEntry): Promise<void>
   remove(uploadId: string): Promise<void>
 }
@@ -32,26 +32,53 @@ export function outboxName(userId: string, shootId: string): string {
   return cacheName(userId, shootId, 'outbox', 1)
 }
 
-/** Pictures kept in IndexedDB; in memory alone where the browser gives none. */
+/** What a connection that is gone answers. */
+const GONE: ReadonlySet<string> = new Set(['InvalidStateError', 'UnknownError'])
+
+/**
+ * Pictures kept in IndexedDB; in memory alone where the browser gives none. A connection that ends (another page deletes
+ * the database, the browser lets go of it) is made anew when it is needed.
+ */
 export async function openOutboxStore(name: string): Promise<OutboxStore> {
-  let database: IDBPDatabase<Schema>
-  try {
+  let opening: Promise<IDBPDatabase<Schema>> | undefined
+  const open = async () => {
     registerCache(name)
-    database = await openDB<Schema>(name, 1, {
+    return openDB<Schema>(name, 1, {
       upgrade: (fresh) => void fresh.createObjectStore('pictures', { keyPath: 'uploadId' }),
       // Sign-out in another tab wants to delete it.
       blocking: (_current, _blocked, event) => {
         if (event.target instanceof IDBDatabase) event.target.close()
+        opening = undefined
       },
+      terminated: () => (opening = undefined),
     })
+  }
+  const connection = () => {
+    opening ??= open().catch((error: unknown) => {
+      opening = undefined
+      throw error
+    })
+    return opening
+  }
+  const run = async <T>(work: (database: IDBPDatabase<Schema>) => Promise<T>): Promise<T> => {
+    try {
+      return await work(await connection())
+    } catch (error) {
+      if (!(error instanceof DOMException && GONE.has(error.name))) throw error
+      opening = undefined
+      return work(await connection())
+    }
+  }
+  try {
+    await connection()
   } catch {
     return memoryOutboxStore()
   }
   return {
-    list: () => database.getAll('pictures'),
-    count: () => database.count('pictures'),
-    put: async (entry) => void (await database.put('pictures', entry)),
-    remove: (uploadId) => database.delete('pictures', uploadId),
+    list: () => run((database) => database.getAll('pictures')),
+    count: () => run((database) => database.count('pictures')),
+    put: async (entry) => void (await run((database) => database.put('pictures', entry))),
+    remove: (uploadId) => run((database) => database.delete('pictures', uploadId)),
   }
 }
 

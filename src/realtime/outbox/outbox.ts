@@ -184,9 +184,12 @@ export function createOutbox({ shootId, store, send, prepare, now, random, onCou
       // Not among the entries before it is kept: nothing is sent that a reload would lose.
       try {
         await (await store).put(entry)
-      } catch {
+      } catch (error) {
+        const isFull = error instanceof DOMException && error.name === 'QuotaExceededError'
         throw new NotAPicture(
-          'There is no room left on this device to keep the picture until it is sent. Nothing was added. Free some space and add it again.',
+          isFull
+            ? 'There is no room left on this device to keep the picture until it is sent. Nothing was added. Free some space and add it again.'
+            : 'This device could not keep the picture until it is sent. Nothing was added. Load the page again and add it once more.',
         )
       }
       show(entry)

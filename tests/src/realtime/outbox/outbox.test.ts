@@ -238,5 +238,7 @@ describe('createOutbox', () => {
     const { outbox, left } = open(send, full)
     await expect(outbox.add(picture())).rejects.toThrow(/no room left on this device.*Nothing was added/)
     expect([outbox.items.get(), sent, left()]).toEqual([[], [], 0])
+    const broken = { ...memoryOutboxStore(), put: () => Promise.reject(new DOMException('?', 'InvalidStateError')) }
+    await expect(open(send, broken).outbox.add(picture())).rejects.toThrow(/could not keep.*Nothing was added/)
   })
 })

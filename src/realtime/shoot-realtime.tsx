@@ -73,7 +73,6 @@ export function ShootRealtime({ shoot, userId, children, waiting }: ShootRealtim
     void forgetPastCaches(userId, shootId, known)
     const stopListening = listenForSignOut(userId, () => {
       for (const kind of DOCUMENT_KINDS) opened[kind].destroy()
-      queryClient.setQueryData(['session'], null)
     })
     // Only what neither the server nor this device holds is worth a question.
     const handleUnload = (event: BeforeUnloadEvent) => {

@@ -3,7 +3,7 @@ import { closeOutboxes } from './outbox/outboxes.ts'
 
 const CHANNEL = 'sconce:sign-out'
 
-/** Calls back when another tab signs this person out: an open document would block the deletion of its cache. */
+/** Calls back when this person has signed out, in whatever tab: an open document would block the deletion of its cache. */
 export function listenForSignOut(userId: string, onSignOut: () => void): () => void {
   if (!('BroadcastChannel' in window)) return () => undefined
   const channel = new BroadcastChannel(CHANNEL)
@@ -16,16 +16,16 @@ export function listenForSignOut(userId: string, onSignOut: () => void): () => v
 }
 
 /**
- * Signs out of this device: other tabs let go, the session ends on the server, then everything of this person is
+ * Signs out of this device: the session ends on the server, other tabs let go, then everything of this person is
  * forgotten here. Ask first when `unsentOnDevice` is not zero; leave the shoot's screen before calling.
  */
 export async function signOutOfDevice(userId: string, endSession: () => Promise<void>): Promise<void> {
+  await endSession()
   if ('BroadcastChannel' in window) {
     const channel = new BroadcastChannel(CHANNEL)
     channel.postMessage(userId)
     channel.close()
   }
-  await endSession()
   closeOutboxes(userId)
   await forgetPerson(userId)
 }

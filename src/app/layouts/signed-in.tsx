@@ -1,8 +1,9 @@
-import { useSuspenseQuery } from '@tanstack/react-query'
+import { useQueryClient, useSuspenseQuery } from '@tanstack/react-query'
 import { Suspense, useEffect } from 'react'
 import { Navigate, Outlet, useLocation } from 'react-router-dom'
 import type { Session } from '#shared/api/studios.ts'
 import { studioQueries } from '#src/features/studios/queries.ts'
+import { listenForSignOut } from '#src/realtime/sign-out.ts'
 import { Waiting } from '#src/ui/waiting.tsx'
 import { SessionContext, isPageOf } from '../session.ts'
 import { forgetAnswers } from '../signed-in-again.ts'
@@ -32,6 +33,12 @@ function AnotherPerson() {
 }
 
 function Provided({ session }: { session: Session }) {
+  const queryClient = useQueryClient()
+  const userId = session.user.id
+  useEffect(
+    () => listenForSignOut(userId, () => queryClient.setQueryData(studioQueries.session().queryKey, null)),
+    [userId, queryClient],
+  )
   return (
     <SessionContext value={session}>
       <Outlet />

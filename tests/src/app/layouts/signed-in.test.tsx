@@ -72,6 +72,14 @@ describe('SignedIn', () => {
     await vi.waitFor(() => expect(reload).toHaveBeenCalledTimes(1))
   })
 
+  it('leaves the screens of somebody who signs out in another tab', async () => {
+    await show('ines')
+    const otherTab = new BroadcastChannel('sconce:sign-out')
+    otherTab.postMessage('ines')
+    expect(await screen.findByText('the way in')).toBeTruthy()
+    otherTab.close()
+  })
+
   it('does not let another person in either when the session had ended in between', async () => {
     await show('ines')
     await arrive(null)

@@ -17,6 +17,7 @@ import { Frame, Spine, SpineLink } from './frame.tsx'
 import { HereNow } from './here-now.tsx'
 import { LeftBehindCard, LeftBehindNotice } from './left-behind.tsx'
 import { NotShown } from './not-shown.tsx'
+import { OpeningShoot } from './opening-shoot.tsx'
 import { SaveSign } from './save-sign.tsx'
 import { ShootBottomBar } from './shoot-bottom-bar.tsx'
 import { useSayWhere } from './use-say-where.ts'
@@ -39,12 +40,7 @@ export function ShootLayout() {
     )
   }
   return (
-    <ShootRealtime
-      key={shoot.id}
-      shoot={shoot}
-      userId={user.id}
-      waiting={<Waiting label={`Opening ${shoot.brief.title}`} className="min-h-dvh" />}
-    >
+    <ShootRealtime key={shoot.id} shoot={shoot} userId={user.id} waiting={<OpeningShoot title={shoot.brief.title} />}>
       <OpenShoot />
     </ShootRealtime>
   )

@@ -18,7 +18,12 @@ export async function getShoot(ctx: Ctx, shootId: ShootId): Promise<ShootView> {
     getBrief(ctx.db, shootId),
     loadMinutes(ctx.db, row.studioId),
     findStudioRole(ctx.db, row.studioId, actor.userId),
-    ctx.db.select({ kind: rtDoc.kind, epoch: rtDoc.epoch }).from(rtDoc).where(eq(rtDoc.shootId, shootId)),
+    ctx.db
+      .select({ kind: rtDoc.kind, epoch: rtDoc.epoch })
+      .from(rtDoc)
+      .where(eq(rtDoc.shootId, shootId))
+      // Pages compare them as a whole.
+      .orderBy(rtDoc.kind),
   ])
   return {
     id: shootId,

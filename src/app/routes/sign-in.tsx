@@ -99,8 +99,8 @@ function KeptHere() {
   if (unsent === 0) return null
   return (
     <Caution className="mb-5" title={`${count(unsent, 'change')} ${unsent === 1 ? 'is' : 'are'} kept on this device`}>
-      {unsent === 1 ? 'It goes' : 'They go'} to the server as soon as the person who made {unsent === 1 ? 'it' : 'them'}{' '}
-      signs in again and opens the shoot.
+      Whoever made {unsent === 1 ? 'it' : 'them'} signs in again and opens the shoot: what may still be sent goes to the
+      server then, and of anything else a copy can be saved.
     </Caution>
   )
 }

@@ -5,16 +5,19 @@ import { dateParts } from '#src/lib/format.ts'
 import { pictureUrl } from '#src/lib/picture-url.ts'
 import { roleName } from '#src/lib/role-words.ts'
 import { cn } from '#src/lib/cn.ts'
+import type { UnsentOfShoot } from '#src/realtime/use-unsent-by-shoot.ts'
 import { Lamp, LampRow } from '#src/ui/lamp.tsx'
+import { UnsentLine } from './unsent-line.tsx'
 
 export type ShootCardProps = {
   shoot: Card
   /** Wider, with a larger first picture. */ lead: boolean
   todayYear: string
+  unsent: UnsentOfShoot | undefined
 }
 
 /** A shoot on the studio's wall: three pictures, the date, how ready it is, and what comes next. */
-export function ShootCard({ shoot, lead, todayYear }: ShootCardProps) {
+export function ShootCard({ shoot, lead, todayYear, unsent }: ShootCardProps) {
   const next = nextStep(shoot.readiness)
   const date = shoot.date === null ? null : dateParts(shoot.date)
   const facts = [
@@ -50,6 +53,7 @@ export function ShootCard({ shoot, lead, todayYear }: ShootCardProps) {
           </h2>
           <p className="mt-0.5 text-xs text-ink-soft">{facts.join(' · ')}</p>
           <LampRow states={shoot.readiness.map(({ lamp }) => lamp)} className="mt-2.5 flex-wrap" />
+          {unsent && <UnsentLine unsent={unsent} />}
         </div>
       </div>
       <p className="mt-auto flex items-center gap-2.5 border-t border-hair-soft px-4 py-2.5 text-sm">

@@ -1,7 +1,9 @@
-import { useSuspenseQuery } from '@tanstack/react-query'
+import { useQueryClient, useSuspenseQuery } from '@tanstack/react-query'
 import { type ReactNode, useState } from 'react'
 import { useNavigate } from 'react-router-dom'
 import type { ShootCard as Card } from '#shared/api/shoots.ts'
+import type { Session } from '#shared/api/studios.ts'
+import { useUnsentByShoot } from '#src/realtime/use-unsent-by-shoot.ts'
 import { Button } from '#src/ui/button.tsx'
 import { Empty } from '#src/ui/empty.tsx'
 import { Input } from '#src/ui/input.tsx'
@@ -24,6 +26,8 @@ const SEARCH_FROM = 6
 
 export function ShootsScreen({ studios, today, nameStudio }: ShootsScreenProps) {
   const { data } = useSuspenseQuery(shootQueries.list())
+  const session = useQueryClient().getQueryData<Session | null>(['session'])
+  const unsent = useUnsentByShoot(session?.user.id ?? '')
   const [isStarting, setIsStarting] = useState(false)
   const [sought, setSought] = useState('')
   const navigate = useNavigate()
@@ -77,11 +81,17 @@ export function ShootsScreen({ studios, today, nameStudio }: ShootsScreenProps) 
         {coming.length > 0 && (
           <div className="grid gap-4.5 md:grid-cols-2 xl:grid-cols-[1.35fr_1fr_1fr]">
             {coming.map((shoot, index) => (
-              <ShootCard key={shoot.id} shoot={shoot} lead={index === 0} todayYear={today.slice(0, 4)} />
+              <ShootCard
+                key={shoot.id}
+                shoot={shoot}
+                lead={index === 0}
+                todayYear={today.slice(0, 4)}
+                unsent={unsent[shoot.id]}
+              />
             ))}
           </div>
         )}
-        {past.length > 0 && <PastShoots shoots={past} />}
+        {past.length > 0 && <PastShoots shoots={past} unsent={unsent} />}
       </div>
       <StartShootDialog
         open={isStarting}

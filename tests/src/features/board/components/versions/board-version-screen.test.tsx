@@ -89,4 +89,19 @@ describe('BoardVersionScreen', () => {
     expect(band.getByRole('link', { name: 'Back to the board' }).getAttribute('href')).toBe(`/shoots/${SHOOT_ID}/board`)
     expect(band.queryByRole('button')).toBeNull()
   })
+
+  it('says in the words of the server that a version was removed, and leads back', async () => {
+    const message = 'This version is not kept any more.'
+    const shoot = shootScreen('stylist', {
+      [`GET /api/shoots/${SHOOT_ID}/versions/${ID}`]: () => ({
+        status: 404,
+        body: { error: { code: 'NOT_FOUND', message } },
+      }),
+    })
+    shoot.show(<BoardVersionScreen versionId={ID} />)
+    expect(await screen.findByText(message)).toBeTruthy()
+    expect(screen.getByRole('link', { name: 'Back to the board' }).getAttribute('href')).toBe(
+      `/shoots/${SHOOT_ID}/board`,
+    )
+  })
 })

@@ -18,7 +18,7 @@ import { type SaveFacts, type SaveState, saveStateOf } from './save-state.ts'
 import { askToStayStored } from './stay-stored.ts'
 import { type Store, createStore } from './store.ts'
 import { createUndo } from './undo-manager.ts'
-import { type Unsent, addUnsent, openAccount } from './unsent-accounts.ts'
+import { type Unsent, addUnsent, openAccount, unsentByCache } from './unsent-accounts.ts'
 
 export type OpenDocument = {
   kind: DocumentKind
@@ -32,7 +32,7 @@ export type OpenDocument = {
   ready: Store<boolean>
   /** A permanent close code (4400–4499), when the server sent one. */
   closed: Store<number | null>
-  /** Whether there are edits that neither the server nor this device has. */
+  /** Whether there are edits that neither the server nor this device has, and that may still get there. */
   atRisk(): boolean
   /**
    * Closes it as soon as what is on its way has arrived, or after a moment; edits that this device does not keep are
@@ -287,7 +287,8 @@ export function openDocument(options: Options): OpenDocument {
   /** What is shut to this person does not stay on this device, except for what was not sent, until they let go of it. */
   async function letGoOfCache(): Promise<void> {
     await cache.close()
-    if (count() === 0) await forgetCache(name)
+    // Other pages' edits wait in it too.
+    if (count() === 0 && !unsentByCache(name).has(name)) await forgetCache(name)
   }
 
   const takeInEdits = (edits: number) =>
@@ -373,7 +374,7 @@ export function openDocument(options: Options): OpenDocument {
     hello,
     ready,
     closed,
-    atRisk: () => count() > 0 && (!facts.kept || vain > 0),
+    atRisk: () => !isDestroyed && count() > 0 && (!facts.kept || vain > 0),
     async leave() {
       if (count() > 0 && (!facts.kept || (maySend && provider.wsconnected))) {
         provider.awareness.setLocalState(null)

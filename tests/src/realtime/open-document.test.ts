@@ -332,6 +332,22 @@ describe('openDocument', () => {
     expect((await indexedDB.databases()).map(({ name }) => name)).toEqual([])
   })
 
+  it('keeps the cache of a shoot that is shut while another page has unsent edits in it', async () => {
+    const a = page()
+    const b = page()
+    await until(() => a.sign() === 'saved' && b.sign() === 'saved')
+    a.document.provider.disconnect()
+    a.write('not gone out')
+    end.answer = CLOSE.noAccess
+    end.fall(CLOSE.noAccess)
+    await until(() => b.document.closed.get() === CLOSE.noAccess)
+    await b.document.leave()
+    await a.document.leave()
+    await new Promise((resolve) => setTimeout(resolve, 20))
+    const [read] = await readLeftBehind(leftBehind('ines', 'shoot', null))
+    expect(read && readAll(read.doc, notes).items.get(ID)?.text).toBe('not gone out')
+  })
+
   it('neither sends nor keeps what somebody writes who may not', async () => {
     end.hello = { ...end.hello, role: 'crew', mayWrite: false }
     const one = page({ role: 'crew' })

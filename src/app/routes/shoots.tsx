@@ -5,7 +5,7 @@ import { today } from '#src/lib/format.ts'
 import { useSession } from '../session.ts'
 
 export function Component() {
-  const { studios } = useSession()
+  const { user, studios } = useSession()
   const own = studios.filter(({ role }) => canInStudio(role, 'shoots.create'))
-  return <ShootsScreen studios={own} today={today()} nameStudio={<NameStudio />} />
+  return <ShootsScreen userId={user.id} studios={own} today={today()} nameStudio={<NameStudio />} />
 }

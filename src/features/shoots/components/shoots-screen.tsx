@@ -1,8 +1,7 @@
-import { useQueryClient, useSuspenseQuery } from '@tanstack/react-query'
+import { useSuspenseQuery } from '@tanstack/react-query'
 import { type ReactNode, useState } from 'react'
 import { useNavigate } from 'react-router-dom'
 import type { ShootCard as Card } from '#shared/api/shoots.ts'
-import type { Session } from '#shared/api/studios.ts'
 import { useUnsentByShoot } from '#src/realtime/use-unsent-by-shoot.ts'
 import { Button } from '#src/ui/button.tsx'
 import { Empty } from '#src/ui/empty.tsx'
@@ -14,6 +13,7 @@ import { ShootCard } from './shoot-card.tsx'
 import { StartShootDialog } from './start-shoot-dialog.tsx'
 
 export type ShootsScreenProps = {
+  userId: string
   /** Studios in which this person may start a shoot. */
   studios: readonly { id: string; name: string }[]
   /** Civil date of today, `YYYY-MM-DD`. */
@@ -24,10 +24,9 @@ export type ShootsScreenProps = {
 
 const SEARCH_FROM = 6
 
-export function ShootsScreen({ studios, today, nameStudio }: ShootsScreenProps) {
+export function ShootsScreen({ userId, studios, today, nameStudio }: ShootsScreenProps) {
   const { data } = useSuspenseQuery(shootQueries.list())
-  const session = useQueryClient().getQueryData<Session | null>(['session'])
-  const unsent = useUnsentByShoot(session?.user.id ?? '')
+  const unsent = useUnsentByShoot(userId)
   const [isStarting, setIsStarting] = useState(false)
   const [sought, setSought] = useState('')
   const navigate = useNavigate()

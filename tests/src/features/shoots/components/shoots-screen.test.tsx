@@ -17,7 +17,6 @@ const PAST = uuid(2)
 function show(): void {
   const shoot = { studioId: uuid(9), role: 'stylist', place: '', shots: 0, pictures: [], readiness: [] }
   const queryClient = new QueryClient({ defaultOptions: { queries: { staleTime: Infinity } } })
-  queryClient.setQueryData(['session'], { user: { id: 'ines' } })
   queryClient.setQueryData(
     shootQueries.list().queryKey,
     shootCardsSchema.parse({
@@ -30,7 +29,7 @@ function show(): void {
   render(
     <QueryClientProvider client={queryClient}>
       <MemoryRouter>
-        <ShootsScreen studios={[]} today="2027-10-01" nameStudio={null} />
+        <ShootsScreen userId="ines" studios={[]} today="2027-10-01" nameStudio={null} />
       </MemoryRouter>
     </QueryClientProvider>,
   )

@@ -277,6 +277,8 @@ export function openDocument(options: Options): OpenDocument {
   })
   provider.on('closed', ({ code }) => {
     clearTimeout(brief)
+    // Words still in a field belong to what was not sent; after this the fields are gone.
+    takeAllOver()
     closed.set(code)
     // A document that was rebuilt is opened anew in a moment: not worth a word.
     update({ link: code === CLOSE.epoch ? 'brief' : 'down' })

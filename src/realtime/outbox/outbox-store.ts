@@ -37,10 +37,12 @@ const GONE: ReadonlySet<string> = new Set(['InvalidStateError', 'UnknownError'])
 
 /**
  * Pictures kept in IndexedDB; in memory alone where the browser gives none. A connection that ends (another page deletes
- * the database, the browser lets go of it) is made anew when it is needed.
+ * the database, the browser lets go of it) is made anew when it is needed; what another page deletes is empty from then
+ * on, until a picture is added.
  */
 export async function openOutboxStore(name: string): Promise<OutboxStore> {
   let opening: Promise<IDBPDatabase<Schema>> | undefined
+  let isDeleted = false
   const open = async () => {
     registerCache(name)
     return openDB<Schema>(name, 1, {
@@ -49,6 +51,7 @@ export async function openOutboxStore(name: string): Promise<OutboxStore> {
       blocking: (_current, _blocked, event) => {
         if (event.target instanceof IDBDatabase) event.target.close()
         opening = undefined
+        isDeleted = true
       },
       terminated: () => (opening = undefined),
     })
@@ -69,16 +72,21 @@ export async function openOutboxStore(name: string): Promise<OutboxStore> {
       return work(await connection())
     }
   }
+  const runUnlessDeleted = async <T>(work: (database: IDBPDatabase<Schema>) => Promise<T>, nothing: T): Promise<T> =>
+    isDeleted ? nothing : run(work)
   try {
     await connection()
   } catch {
     return memoryOutboxStore()
   }
   return {
-    list: () => run((database) => database.getAll('pictures')),
-    count: () => run((database) => database.count('pictures')),
-    put: async (entry) => void (await run((database) => database.put('pictures', entry))),
-    remove: (uploadId) => run((database) => database.delete('pictures', uploadId)),
+    list: () => runUnlessDeleted((database) => database.getAll('pictures'), []),
+    count: () => runUnlessDeleted((database) => database.count('pictures'), 0),
+    put: async (entry) => {
+      isDeleted = false
+      await run((database) => database.put('pictures', entry))
+    },
+    remove: (uploadId) => runUnlessDeleted((database) => database.delete('pictures', uploadId), undefined),
   }
 }
 

@@ -1,10 +1,11 @@
 import { forgetPerson } from './local-cache.ts'
-import { closeOutboxes } from './outbox/outboxes.ts'
+import { allowOutboxes, closeOutboxes } from './outbox/outboxes.ts'
 
 const CHANNEL = 'sconce:sign-out'
 
 /** Calls back when this person has signed out, in whatever tab: an open document would block the deletion of its cache. */
 export function listenForSignOut(userId: string, onSignOut: () => void): () => void {
+  allowOutboxes(userId)
   if (!('BroadcastChannel' in window)) return () => undefined
   const channel = new BroadcastChannel(CHANNEL)
   channel.onmessage = (event: MessageEvent<unknown>) => {

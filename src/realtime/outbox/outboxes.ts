@@ -1,11 +1,13 @@
 import { writeUnsent } from '../unsent-accounts.ts'
 import { type Outbox, createOutbox } from './outbox.ts'
-import { openOutboxStore, outboxName } from './outbox-store.ts'
+import { memoryOutboxStore, openOutboxStore, outboxName } from './outbox-store.ts'
 import { preparePicture } from './prepare-picture.ts'
 import { sendUpload } from './send-upload.ts'
 
 /** By database name; they live as long as the page: leaving a screen does not stop what is being sent. */
 const outboxes = new Map<string, Outbox>()
+/** People who have signed out: a screen of theirs that is drawn once more must not make a database anew. */
+const signedOut = new Set<string>()
 
 /** The one outbox of a person in a shoot. */
 export function outboxOf(userId: string, shootId: string): Outbox {
@@ -14,7 +16,7 @@ export function outboxOf(userId: string, shootId: string): Outbox {
   if (known) return known
   const made = createOutbox({
     shootId,
-    store: openOutboxStore(name),
+    store: signedOut.has(userId) ? Promise.resolve(memoryOutboxStore()) : openOutboxStore(name),
     send: sendUpload,
     prepare: preparePicture,
     now: Date.now,
@@ -33,9 +35,17 @@ export function outboxOf(userId: string, shootId: string): Outbox {
 
 /** Stops sending for a person who signs out; what was still waiting is about to be forgotten. */
 export function closeOutboxes(userId: string): void {
+  signedOut.add(userId)
   for (const [name, outbox] of outboxes) {
     if (!name.startsWith(`rt:${userId}:`)) continue
     outbox.destroy()
     outboxes.delete(name)
   }
+}
+
+/** This person is signed in (again): pictures are kept on the device from now on. */
+export function allowOutboxes(userId: string): void {
+  if (!signedOut.delete(userId)) return
+  // Made while nothing could be kept.
+  for (const name of outboxes.keys()) if (name.startsWith(`rt:${userId}:`)) outboxes.delete(name)
 }

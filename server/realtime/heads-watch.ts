@@ -13,8 +13,6 @@ export type HeadsWatch = {
   grew(docId: DocId, head: number): void
   /** Looks at the heads of all that is in memory now, not only when it is due. */
   look(): void
-  /** Forgets a document that is not what it was, and closes everybody's connection to it. */
-  letGo(room: Room, code: number, why: string): void
   stop(): void
 }
 
@@ -39,11 +37,6 @@ export function createHeadsWatch(options: {
     })
   }
 
-  function letGo(room: Room, code: number, why: string): void {
-    rooms.evict(room)
-    for (const peer of [...room.peers]) peer.close(code, why)
-  }
-
   async function look(): Promise<void> {
     const all = rooms.all()
     if (all.length === 0) return
@@ -53,9 +46,9 @@ export function createHeadsWatch(options: {
     const rows = new Map(found.rows.map((row) => [row.id, row]))
     for (const room of all) {
       const row = rows.get(room.place.docId)
-      if (room.isBroken) letGo(room, CLOSE.tryAgain, 'the document is loaded anew')
-      else if (!row) letGo(room, CLOSE.unknown, 'the document is gone')
-      else if (row.epoch !== room.epoch) letGo(room, CLOSE.epoch, 'the document is of another epoch')
+      if (room.isBroken) rooms.letGo(room, CLOSE.tryAgain, 'the document is loaded anew')
+      else if (!row) rooms.letGo(room, CLOSE.unknown, 'the document is gone')
+      else if (row.epoch !== room.epoch) rooms.letGo(room, CLOSE.epoch, 'the document is of another epoch')
       else {
         room.freeze(row.frozen)
         if (Number(row.head) > room.head) catchUp(room)
@@ -87,7 +80,6 @@ export function createHeadsWatch(options: {
       if (room && head > room.head) catchUp(room)
     },
     look: lookNow,
-    letGo,
     stop: () => clearInterval(timer),
   }
 }

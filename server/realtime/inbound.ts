@@ -122,8 +122,7 @@ export function createReceiver(context: Inbound, connection: Connection, room: R
     })
     if (taken === 'broken') {
       log.error(connection.facts, 'an update that decodes broke the document in memory; it is loaded anew')
-      context.rooms.evict(room)
-      for (const peer of [...room.peers]) peer.close(CLOSE.tryAgain, 'the document is loaded anew')
+      context.rooms.letGo(room, CLOSE.tryAgain, 'the document is loaded anew')
     }
     if (taken === 'incomplete') {
       isWhole = false

@@ -1,6 +1,5 @@
 import type pg from 'pg'
-import type { DocId, ShootId } from '#shared/ids.ts'
-import type { DocumentKind } from '#shared/realtime/documents.ts'
+import type { DocId } from '#shared/ids.ts'
 import type { Compaction } from './compaction.ts'
 import type { Instances } from './instances.ts'
 import { loadDocument } from './load.ts'
@@ -14,14 +13,12 @@ export type Hold = { room: Promise<Room>; release: () => void }
 
 export type Rooms = {
   hold(place: Place): Hold
-  /** The room of a shoot's document when it is in memory. */
-  find(shootId: ShootId, kind: DocumentKind): Room | undefined
   /** The room of a document when it is in memory. */
   get(docId: DocId): Room | undefined
   all(): Room[]
   committed(committed: Committed): void
-  /** Forgets a room at once; whoever comes next loads it anew. */
-  evict(room: Room): void
+  /** Forgets a room at once and closes everybody's connection to it; whoever comes next loads it anew. */
+  letGo(room: Room, code: number, why: string): void
   stats(): { rooms: number; flagged: number; lagging: number }
   stop(): void
 }
@@ -129,12 +126,6 @@ export function createRooms(options: {
 
   return {
     hold,
-    find: (shootId, kind) => {
-      for (const { room } of slots.values()) {
-        if (room?.place.shootId === shootId && room.place.kind === kind) return room
-      }
-      return undefined
-    },
     get: (docId) => slots.get(docId)?.room ?? undefined,
     all,
     committed: (committed) => {
@@ -143,9 +134,10 @@ export function createRooms(options: {
       room.committed(committed)
       compaction.consider(room, committed)
     },
-    evict: (room) => {
+    letGo: (room, code, why) => {
       const slot = slots.get(room.place.docId)
       if (slot?.room === room) unload(room.place.docId, slot, room)
+      for (const peer of [...room.peers]) peer.close(code, why)
     },
     stats: () => ({
       rooms: slots.size,

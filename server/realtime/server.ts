@@ -229,7 +229,7 @@ export function createRealtime(options: {
         }
         if (room.epoch < told.epoch) {
           // Rebuilt since it was loaded: those who are in it have another document than the one to come.
-          heads.letGo(room, CLOSE.epoch, 'the document is of another epoch')
+          rooms.letGo(room, CLOSE.epoch, 'the document is of another epoch')
           return connection.close(CLOSE.tryAgain, 'the document is loaded anew')
         }
         if (room.epoch > told.epoch) return connection.close(CLOSE.epoch, 'the document is of another epoch')

@@ -153,7 +153,7 @@ class Bench {
     const connection = this.#enter(wire)
     const context = {
       pool: this.#pool,
-      rooms: having<Parameters<typeof createReceiver>[0]['rooms']>({ evict: () => void (this.isEvicted = true) }),
+      rooms: having<Parameters<typeof createReceiver>[0]['rooms']>({ letGo: () => void (this.isEvicted = true) }),
       strikes: this.#strikes,
       settings: DEFAULT_SETTINGS,
       log: this.#log,

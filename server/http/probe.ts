@@ -1,3 +1,5 @@
+import { within } from '#server/within.ts'
+
 /**
  * Makes a question that is always answered in time: with what `ask` says, or undefined when it fails or takes longer
  * than `limitMs`. Whoever asks while it is under way shares the answer.
@@ -5,18 +7,12 @@
 export function createProbe<T>(ask: () => Promise<T>, limitMs: number): () => Promise<T | undefined> {
   let underWay: Promise<T | undefined> | null = null
   return () => {
-    underWay ??= inTime(ask(), limitMs).finally(() => {
+    underWay ??= within(
+      limitMs,
+      ask().catch(() => undefined),
+    ).finally(() => {
       underWay = null
     })
     return underWay
   }
-}
-
-async function inTime<T>(asked: Promise<T>, limitMs: number): Promise<T | undefined> {
-  let timer: NodeJS.Timeout | undefined
-  const late = new Promise<undefined>((resolve) => {
-    timer = setTimeout(() => resolve(undefined), limitMs)
-  })
-  const answered = asked.catch(() => undefined)
-  return Promise.race([answered, late]).finally(() => clearTimeout(timer))
 }

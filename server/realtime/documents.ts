@@ -5,6 +5,7 @@ import type { DocumentKind } from '#shared/realtime/documents.ts'
 import type { Documents } from '#server/adapters/documents.ts'
 import { rtDoc, rtUpdate } from '#server/db/schema/realtime.ts'
 import { AppError } from '#server/errors.ts'
+import { within } from '#server/within.ts'
 import { loadDocument } from './load.ts'
 import type { Place, Room } from './room.ts'
 import type { Rooms } from './rooms.ts'
@@ -136,17 +137,4 @@ export function createDocuments(options: {
 /** Origin of what verbs change on behalf of somebody. */
 function serverAs(userId: UserId): { kind: 'server'; userId: UserId; peer: null } {
   return { kind: 'server', userId, peer: null }
-}
-
-/** The promise's value, or undefined when it takes longer. */
-async function within<T>(ms: number, promise: Promise<T>): Promise<T | undefined> {
-  let timer: NodeJS.Timeout | undefined
-  const late = new Promise<undefined>((resolve) => {
-    timer = setTimeout(() => resolve(undefined), ms)
-  })
-  try {
-    return await Promise.race([promise, late])
-  } finally {
-    clearTimeout(timer)
-  }
 }

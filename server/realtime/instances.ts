@@ -1,7 +1,9 @@
 import { randomUUID } from 'node:crypto'
+import { setTimeout as pause } from 'node:timers/promises'
 import pg from 'pg'
 import { z } from 'zod'
 import { type DocId, type ShootId, docIdSchema, shootIdSchema } from '#shared/ids.ts'
+import { within } from '#server/within.ts'
 import { listen } from './listen.ts'
 import type { RealtimeLog, RealtimeSettings } from './settings.ts'
 import { reasonOf } from './update-log.ts'
@@ -192,10 +194,12 @@ export function createInstances(options: {
     onPayload,
     onConnected: () => {
       isListening = true
-      // Who is silent while nobody listens may well be there.
-      for (const instance of heardAtMs.keys()) heardAtMs.set(instance, Date.now())
-      // Farewells may have been among what was not heard; those who are there show themselves again.
-      for (const instance of heardAtMs.keys()) options.onGone(instance)
+      for (const instance of heardAtMs.keys()) {
+        // Who is silent while nobody listens may well be there.
+        heardAtMs.set(instance, Date.now())
+        // Farewells may have been among what was not heard; those who are there show themselves again.
+        options.onGone(instance)
+      }
       say({ kind: 'here', asks: true })
       options.onMissed()
     },
@@ -237,11 +241,11 @@ export function createInstances(options: {
       clearInterval(beat)
       await listening.stop()
       const farewell = JSON.stringify({ from: me, kind: 'gone' })
-      await Promise.race([
+      await within(
+        1_000,
         pool.query('select pg_notify($1, $2)', [INSTANCE_CHANNEL, farewell]).catch(() => undefined),
-        pause(1_000),
-      ])
-      await Promise.race([pool.end(), pause(1_000)])
+      )
+      await within(1_000, pool.end())
     },
   }
 }
@@ -270,8 +274,4 @@ function presenceMessages(docId: DocId, entries: readonly PresenceElsewhere[]): 
     bytes += size
   }
   return messages
-}
-
-function pause(ms: number): Promise<void> {
-  return new Promise((resolve) => setTimeout(resolve, ms))
 }

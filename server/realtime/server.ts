@@ -6,6 +6,7 @@ import { CLOSE } from '#shared/realtime/protocol.ts'
 import type { ShootId } from '#shared/ids.ts'
 import type { Documents } from '#server/adapters/documents.ts'
 import type { Db } from '#server/db/client.ts'
+import { within } from '#server/within.ts'
 import { type Admission, type Authenticate, admit } from './authorise.ts'
 import { createCompaction } from './compaction.ts'
 import { Connection } from './connection.ts'
@@ -274,7 +275,7 @@ export function createRealtime(options: {
     rooms.stop()
     await Promise.all([watch.stop(), instances.stop(), compaction.stop()])
     // A connection that hangs has nothing left that anybody waits for.
-    await Promise.race([pool.end(), new Promise((resolve) => setTimeout(resolve, 2_000))])
+    await within(2_000, pool.end())
   }
 
   return {

@@ -1,4 +1,5 @@
-import type { Figure, Quantiles } from './figures.ts'
+import type { Quantiles } from '#server/realtime/recent.ts'
+import type { Figure } from './figures.ts'
 
 const PREFIX = 'sconce_'
 

@@ -1,26 +1,5 @@
-/** Milliseconds. */
-export type Quantiles = { p50: number; p95: number; p99: number; max: number }
-
-/** What the realtime server says of itself. Counts are since the start of the process. */
-export type RealtimeFigures = {
-  rooms: number
-  connections: number
-  /** Readers that are sent nothing until they have caught up. */
-  lagging: number
-  /** Other processes on the same database that were heard of lately. */
-  instances: number
-  /** Documents with a piece of their log that could not be read. */
-  flagged: number
-  queuedEntries: number
-  queuedBytes: number
-  oldestMs: number
-  commits: number
-  rows: number
-  failures: number
-  commitMs: Quantiles
-  compactions: number
-  failedChecks: number
-}
+import type { Quantiles } from '#server/realtime/recent.ts'
+import type { RealtimeStats } from '#server/realtime/server.ts'
 
 /** What the database says; undefined while it does not answer. */
 export type DatabaseFigures = { quarantined: number; frozen: number }
@@ -33,7 +12,7 @@ export type ProcessFigures = {
   loopDelayMs: Quantiles
 }
 
-export type Snapshot = { realtime: RealtimeFigures; database: DatabaseFigures | undefined; process: ProcessFigures }
+export type Snapshot = { realtime: RealtimeStats; database: DatabaseFigures | undefined; process: ProcessFigures }
 
 /** Values are in `unit`, time in seconds; null: not known now. `needsLook`: an operator should look into it. */
 export type Figure = {

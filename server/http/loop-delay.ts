@@ -1,5 +1,5 @@
 import { monitorEventLoopDelay } from 'node:perf_hooks'
-import type { Quantiles } from './figures.ts'
+import type { Quantiles } from '#server/realtime/recent.ts'
 
 const RESOLUTION_MS = 20
 const WINDOW_MS = 60_000

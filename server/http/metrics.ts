@@ -3,15 +3,17 @@ import { isNotNull } from 'drizzle-orm'
 import type { Request, RequestHandler } from 'express'
 import type { Db } from '#server/db/client.ts'
 import { rtDoc, rtQuarantine } from '#server/db/schema/realtime.ts'
+import type { Quantiles } from '#server/realtime/recent.ts'
+import type { RealtimeStats } from '#server/realtime/server.ts'
 import { nothingHere } from './errors.ts'
 import { OPEN_METRICS_TYPE, TEXT_TYPE, expositionOf } from './exposition.ts'
-import { type DatabaseFigures, type Quantiles, type RealtimeFigures, figuresOf } from './figures.ts'
+import { type DatabaseFigures, figuresOf } from './figures.ts'
 import { isFromHere } from './from-here.ts'
 import { metricsPage } from './metrics-page.ts'
 import { createProbe } from './probe.ts'
 
 export type MetricsSource = {
-  stats: () => RealtimeFigures
+  stats: () => RealtimeStats
   loopDelay: () => Quantiles
   version: string
   /** Lets in from elsewhere as `Authorization: Bearer …`; without one only this machine may look. */

@@ -10,6 +10,7 @@ import { KEEP_ALIVE } from './presence.ts'
 import type { Place, RoomPeer, Standing } from './room.ts'
 import type { RealtimeLog, RealtimeSettings } from './settings.ts'
 import { TokenBucket } from './token-bucket.ts'
+import { reasonOf } from './update-log.ts'
 import { helloFrame, refusedFrame, savedFrame } from './wire.ts'
 
 export type Person = { userId: UserId; name: string; sessionId: string; expiresAtMs: number }
@@ -118,10 +119,7 @@ export class Connection implements RoomPeer {
     try {
       this.#receive?.(frame)
     } catch (error) {
-      this.#log.error(
-        { ...this.facts, error: error instanceof Error ? error.name : 'unknown' },
-        'a frame was not handled',
-      )
+      this.#log.error({ ...this.facts, error: reasonOf(error) }, 'a frame was not handled')
       this.close(CLOSE.tryAgain, 'a frame could not be handled')
     }
   }

@@ -28,9 +28,9 @@ const LOOK_MS = 50
  * The one way out for changes of a document.
  *
  * The first change after quiet goes out in the same turn of the event loop; what comes within a moment after it, up to
- * `mergeMs` with many readers, is merged into one frame, the same bytes for everybody. No reader has a queue: one that does not keep up is sent
- * nothing more, the state it has is remembered, and once its socket is nearly empty it gets one update for all it
- * missed. However slow it is, it costs its state vector and what its socket holds.
+ * `mergeMs` with many readers, is merged into one frame, the same bytes for everybody. No reader has a queue: one that
+ * does not keep up is sent nothing more, the state it has is remembered, and once its socket is nearly empty it gets one
+ * update for all it missed. However slow it is, it costs its state vector and what its socket holds.
  */
 export class FanOut<R extends Reader> {
   readonly #doc: Y.Doc

@@ -11,6 +11,14 @@ import type { Committed, UpdateLog } from './update-log.ts'
 /** A claim on a room: it stays in memory until the claim is given back, once. */
 export type Hold = { room: Promise<Room>; release: () => void }
 
+export type RoomsStats = {
+  rooms: number
+  /** Documents of whose log something could not be read. */
+  flagged: number
+  /** Readers that do not keep up. */
+  lagging: number
+}
+
 export type Rooms = {
   hold(place: Place): Hold
   /** The room of a document when it is in memory. */
@@ -19,7 +27,7 @@ export type Rooms = {
   committed(committed: Committed): void
   /** Forgets a room at once and closes everybody's connection to it; whoever comes next loads it anew. */
   letGo(room: Room, code: number, why: string): void
-  stats(): { rooms: number; flagged: number; lagging: number }
+  stats(): RoomsStats
   stop(): void
 }
 

@@ -8,7 +8,7 @@ import type { Documents } from '#server/adapters/documents.ts'
 import type { Db } from '#server/db/client.ts'
 import { within } from '#server/within.ts'
 import { type Admission, type Authenticate, admit } from './authorise.ts'
-import { createCompaction } from './compaction.ts'
+import { type CompactionStats, createCompaction } from './compaction.ts'
 import { Connection } from './connection.ts'
 import { createDocuments } from './documents.ts'
 import { createHeadsWatch } from './heads-watch.ts'
@@ -16,10 +16,10 @@ import { createReceiver } from './inbound.ts'
 import { createInstances } from './instances.ts'
 import { createRightsWatch } from './rights-watch.ts'
 import type { Standing } from './room.ts'
-import { UnknownDocument, createRooms } from './rooms.ts'
+import { type RoomsStats, UnknownDocument, createRooms } from './rooms.ts'
 import { DEFAULT_SETTINGS, type RealtimeLog, type RealtimeSettings } from './settings.ts'
 import { Strikes } from './strikes.ts'
-import { createUpdateLog, reasonOf } from './update-log.ts'
+import { type UpdateLogStats, createUpdateLog, reasonOf } from './update-log.ts'
 import { warmUp } from './warm-up.ts'
 import { changedFrame } from './wire.ts'
 
@@ -32,26 +32,14 @@ export type Realtime = {
   stats(): RealtimeStats
 }
 
-export type RealtimeStats = {
-  connections: number
-  rooms: number
-  /** Documents of whose log something could not be read. */
-  flagged: number
-  /** Readers that do not keep up. */
-  lagging: number
-  /** Other processes heard of on the same database. */
-  instances: number
-  compactions: number
-  /** Snapshots that would not have been the document; the log stayed. */
-  failedChecks: number
-  queuedEntries: number
-  queuedBytes: number
-  oldestMs: number
-  commits: number
-  rows: number
-  failures: number
-  commitMs: { p50: number; p95: number; p99: number; max: number }
-}
+/** Counts are since the start of the process. */
+export type RealtimeStats = RoomsStats &
+  UpdateLogStats &
+  Pick<CompactionStats, 'compactions' | 'failedChecks'> & {
+    connections: number
+    /** Other processes heard of on the same database. */
+    instances: number
+  }
 
 /** Upgrades under way at the same time; each is a question to the database. */
 const MAX_ADMITTING = 500
@@ -287,14 +275,17 @@ export function createRealtime(options: {
       if (settings.warmUp) setImmediate(warmUp)
     },
     drain: () => (draining ??= drainOnce()),
-    stats: () => ({
-      connections: connections.size,
-      instances: instances.others(),
-      compactions: compaction.stats().compactions,
-      failedChecks: compaction.stats().failedChecks,
-      ...rooms.stats(),
-      ...updateLog.stats(),
-    }),
+    stats: () => {
+      const { compactions, failedChecks } = compaction.stats()
+      return {
+        connections: connections.size,
+        instances: instances.others(),
+        compactions,
+        failedChecks,
+        ...rooms.stats(),
+        ...updateLog.stats(),
+      }
+    },
   }
 }
 

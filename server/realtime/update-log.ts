@@ -1,11 +1,22 @@
 import type pg from 'pg'
 import type { DocId } from '#shared/ids.ts'
 import { type LogEntry, batchLength, rowsOf, touchesOf } from './batch.ts'
-import { Recent } from './recent.ts'
+import { type Quantiles, Recent } from './recent.ts'
 import type { RealtimeLog, RealtimeSettings } from './settings.ts'
 
 /** Rows `first` to `last` of a document's log are this process's own and committed; `logRows` and `logBytes` are behind its newest snapshot. */
 export type Committed = { docId: DocId; first: number; last: number; logRows: number; logBytes: number }
+
+export type UpdateLogStats = {
+  queuedEntries: number
+  queuedBytes: number
+  oldestMs: number
+  commits: number
+  rows: number
+  failures: number
+  /** Of the latest commits. */
+  commitMs: Quantiles
+}
 
 export type UpdateLog = {
   enqueue(entry: LogEntry): void
@@ -14,16 +25,7 @@ export type UpdateLog = {
   queuedFor(docId: DocId): number
   /** Whether so much waits that writers are not read from. */
   isUnderPressure(): boolean
-  stats(): {
-    queuedEntries: number
-    queuedBytes: number
-    oldestMs: number
-    commits: number
-    rows: number
-    failures: number
-    /** Of the latest commits. */
-    commitMs: ReturnType<Recent['percentiles']>
-  }
+  stats(): UpdateLogStats
   /** Resolves when the queue is empty or the time is up; says which. */
   drained(deadlineMs: number): Promise<boolean>
   /** Ends the retrying; what is still queued is given up. */

@@ -9,7 +9,7 @@ import { type AppDeps, createApp } from '#server/app.ts'
 import { makeAuth } from '#server/auth/auth.ts'
 import type { Actor, Ctx } from '#server/context.ts'
 import { type Db, connectDatabase } from '#server/db/client.ts'
-import type { RealtimeFigures } from '#server/http/figures.ts'
+import type { RealtimeStats } from '#server/realtime/server.ts'
 import { type Client, TEST_ORIGIN, clientFor } from '#tests/support/client.ts'
 import { type Clock, clockAt } from '#tests/support/clock.ts'
 import { createTestDatabase } from '#tests/support/database.ts'
@@ -33,7 +33,7 @@ export type TestApp = {
 const GENEROUS = 100_000
 
 /** Of a realtime server where nothing has happened yet. */
-export const quietFigures: RealtimeFigures = {
+export const quietFigures: RealtimeStats = {
   rooms: 0,
   connections: 0,
   lagging: 0,

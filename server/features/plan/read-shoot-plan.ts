@@ -1,8 +1,7 @@
 import { eq } from 'drizzle-orm'
 import { type Plan, readPlan } from '#shared/domain/plan/read-plan.ts'
 import type { ShootId } from '#shared/ids.ts'
-import { readAll } from '#shared/realtime/collection.ts'
-import { COLLECTIONS } from '#shared/realtime/documents.ts'
+import { boardPart, lightingPart, looksPart, planPart } from '#shared/realtime/plan-parts.ts'
 import { requireShoot } from '#server/access/require.ts'
 import type { Ctx } from '#server/context.ts'
 import { shoot } from '#server/db/schema/shoots.ts'
@@ -23,37 +22,10 @@ export async function readShootPlan(ctx: Ctx, shootId: ShootId): Promise<Plan> {
   const [brief, minutes, board, plan, looks, lighting] = await Promise.all([
     getBrief(ctx.db, shootId),
     loadMinutes(ctx.db, row.studioId),
-    ctx.documents.read(shootId, 'board', (doc) => {
-      const { frames, shots } = COLLECTIONS.board
-      return { frames: readAll(doc, frames).items, shots: readAll(doc, shots).items }
-    }),
-    ctx.documents.read(shootId, 'plan', (doc) => {
-      const { days, sets, moves, shotPlans, rules } = COLLECTIONS.plan
-      return {
-        days: readAll(doc, days).items,
-        sets: readAll(doc, sets).items,
-        moves: readAll(doc, moves).items,
-        shotPlans: readAll(doc, shotPlans).items,
-        rules: readAll(doc, rules).items,
-      }
-    }),
-    ctx.documents.read(shootId, 'looks', (doc) => {
-      const { sitters, looks, pieces } = COLLECTIONS.looks
-      return {
-        sitters: readAll(doc, sitters).items,
-        looks: readAll(doc, looks).items,
-        pieces: readAll(doc, pieces).items,
-      }
-    }),
-    ctx.documents.read(shootId, 'lighting', (doc) => {
-      const { setups, lights, sitterPlaces, props } = COLLECTIONS.lighting
-      return {
-        setups: readAll(doc, setups).items,
-        lights: readAll(doc, lights).items,
-        sitterPlaces: readAll(doc, sitterPlaces).items,
-        props: readAll(doc, props).items,
-      }
-    }),
+    ctx.documents.read(shootId, 'board', boardPart),
+    ctx.documents.read(shootId, 'plan', planPart),
+    ctx.documents.read(shootId, 'looks', looksPart),
+    ctx.documents.read(shootId, 'lighting', lightingPart),
   ])
   return readPlan({ brief, minutes, board, plan, looks, lighting })
 }

@@ -1,8 +1,7 @@
 import { and, eq, inArray } from 'drizzle-orm'
 import { plannedLooks, type PlannedLook } from '#shared/domain/plan/read-plan.ts'
 import type { ShootId, UploadId } from '#shared/ids.ts'
-import { readAll } from '#shared/realtime/collection.ts'
-import { looks, pieces, sitters } from '#shared/realtime/documents.ts'
+import { looksPart } from '#shared/realtime/plan-parts.ts'
 import type { Ctx } from '#server/context.ts'
 import { upload } from '#server/db/schema/uploads.ts'
 
@@ -18,11 +17,7 @@ export type LookVersions = {
 export async function readLookVersions(ctx: Ctx, shootId: ShootId): Promise<LookVersions> {
   const { seq, planned } = await ctx.documents.read(shootId, 'looks', (doc, head) => ({
     seq: head,
-    planned: plannedLooks({
-      sitters: readAll(doc, sitters).items,
-      looks: readAll(doc, looks).items,
-      pieces: readAll(doc, pieces).items,
-    }),
+    planned: plannedLooks(looksPart(doc)),
   }))
   const ids = [...new Set([...planned.values()].flatMap(({ look }) => look.pictureIds))]
   const rows =

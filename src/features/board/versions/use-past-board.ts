@@ -3,23 +3,8 @@ import { useLayoutEffect, useMemo, useState } from 'react'
 import type * as Y from 'yjs'
 import type { Version } from '#shared/api/versions.ts'
 import { type Plan, type ReadPlanInput, readPlan } from '#shared/domain/plan/read-plan.ts'
-import { readAll } from '#shared/realtime/collection.ts'
-import {
-  days,
-  frames,
-  lights,
-  looks,
-  moves,
-  pieces,
-  props,
-  rules,
-  sets,
-  setups,
-  shotPlans,
-  shots,
-  sitterPlaces,
-  sitters,
-} from '#shared/realtime/documents.ts'
+import { lights, looks, pieces, props, setups, sitterPlaces, sitters } from '#shared/realtime/documents.ts'
+import { boardPart, planPart } from '#shared/realtime/plan-parts.ts'
 import { useShoot, useShootContext } from '#src/realtime/shoot-realtime.tsx'
 import { type Store, createStore } from '#src/realtime/store.ts'
 import { useItems } from '#src/realtime/use-items.ts'
@@ -66,19 +51,7 @@ function pastControl(doc: Y.Doc, items: WallItems, now: Store<Plan>): WallContro
 
 function usePastPlan({ board, plan }: PastDocs): Plan {
   const { brief, minutes } = useShoot()
-  const then = useMemo(
-    () => ({
-      board: { frames: readAll(board, frames).items, shots: readAll(board, shots).items },
-      plan: {
-        days: readAll(plan, days).items,
-        sets: readAll(plan, sets).items,
-        moves: readAll(plan, moves).items,
-        shotPlans: readAll(plan, shotPlans).items,
-        rules: readAll(plan, rules).items,
-      },
-    }),
-    [board, plan],
-  )
+  const then = useMemo(() => ({ board: boardPart(board), plan: planPart(plan) }), [board, plan])
   const looks = useLooksOfToday()
   const lighting = useLightingOfToday()
   return useMemo(() => readPlan({ brief, minutes, ...then, looks, lighting }), [brief, minutes, then, looks, lighting])

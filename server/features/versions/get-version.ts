@@ -5,7 +5,7 @@ import { requireShoot } from '#server/access/require.ts'
 import type { Ctx } from '#server/context.ts'
 import { rtSnapshot } from '#server/db/schema/realtime.ts'
 import { AppError } from '#server/errors.ts'
-import { VERSION_KIND, digest, getVersionRow, keptDocIds, loadVersions } from './version-rows.ts'
+import { VERSION_KIND, digest, getVersionRow, keptDocIds, toVersion } from './version-rows.ts'
 
 /**
  * A kept version with the full states of board and plan.
@@ -17,17 +17,16 @@ export async function getVersion(
   { shootId, versionId }: { shootId: ShootId; versionId: VersionId },
 ): Promise<VersionStates> {
   await requireShoot(ctx, shootId, 'versions.read')
-  const { boardSeq, planSeq } = await getVersionRow(ctx.db, shootId, versionId)
+  const row = await getVersionRow(ctx.db, shootId, versionId)
   const ids = await keptDocIds(ctx.db, shootId)
-  const version = (await loadVersions(ctx.db, shootId)).find(({ id }) => id === versionId)
-  const board = await readState(ctx, ids.board, boardSeq)
-  const plan = await readState(ctx, ids.plan, planSeq)
-  if (!version || !board || !plan)
+  const board = await readState(ctx, ids.board, row.boardSeq)
+  const plan = await readState(ctx, ids.plan, row.planSeq)
+  if (!board || !plan)
     throw new AppError(
       'GONE',
       'This version is damaged where it is stored and cannot be shown. The board is as it was; look at another version.',
     )
-  return { version, board, plan }
+  return { version: toVersion(row), board, plan }
 }
 
 /** The stored state in base64; undefined when it is missing or does not agree with its checksum. */

@@ -1,5 +1,5 @@
 import { createHash, randomUUID } from 'node:crypto'
-import { and, count, desc, eq, getTableColumns, inArray } from 'drizzle-orm'
+import { type SQL, and, count, desc, eq, getTableColumns, inArray } from 'drizzle-orm'
 import * as Y from 'yjs'
 import { type DocId, type ShootId, type UserId, type VersionId, versionIdSchema } from '#shared/ids.ts'
 import { MOST_VERSIONS, type Version } from '#shared/api/versions.ts'
@@ -16,32 +16,31 @@ export const VERSION_KIND = 'version'
 /** The documents that a version keeps. */
 type KeptKind = 'board' | 'plan'
 
-type VersionRow = typeof keptVersion.$inferSelect
+type VersionRow = typeof keptVersion.$inferSelect & { by: string }
 
-/** A shoot's versions, newest first. */
-export async function loadVersions(db: Db | Tx, shootId: ShootId): Promise<Version[]> {
-  const rows = await db
+/** Versions with the names of those who kept them, newest first. */
+function versionRows(db: Db | Tx, where: SQL | undefined): Promise<VersionRow[]> {
+  return db
     .select({ ...getTableColumns(keptVersion), by: user.name })
     .from(keptVersion)
     .innerJoin(user, eq(user.id, keptVersion.userId))
-    .where(eq(keptVersion.shootId, shootId))
+    .where(where)
     .orderBy(desc(keptVersion.at), desc(keptVersion.id))
-  return rows.map(({ id, name, userId, by, at, takingBack }) => ({
-    id,
-    name,
-    userId,
-    by,
-    atMs: at.getTime(),
-    takingBack,
-  }))
+}
+
+/** A row as screens are given it. */
+export function toVersion({ id, name, userId, by, at, takingBack }: VersionRow): Version {
+  return { id, name, userId, by, atMs: at.getTime(), takingBack }
+}
+
+/** A shoot's versions, newest first. */
+export async function loadVersions(db: Db | Tx, shootId: ShootId): Promise<Version[]> {
+  return (await versionRows(db, eq(keptVersion.shootId, shootId))).map(toVersion)
 }
 
 /** @throws NOT_FOUND */
 export async function getVersionRow(db: Db | Tx, shootId: ShootId, versionId: VersionId): Promise<VersionRow> {
-  const [row] = await db
-    .select()
-    .from(keptVersion)
-    .where(and(eq(keptVersion.shootId, shootId), eq(keptVersion.id, versionId)))
+  const [row] = await versionRows(db, and(eq(keptVersion.shootId, shootId), eq(keptVersion.id, versionId)))
   if (!row)
     throw new AppError('NOT_FOUND', 'This version is not kept any more. Nothing was changed; look at the list again.')
   return row

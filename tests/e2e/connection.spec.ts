@@ -1,5 +1,5 @@
 import { readFile } from 'node:fs/promises'
-import { type Page, type WebSocketRoute, expect, test } from '@playwright/test'
+import { type Browser, type Page, type WebSocketRoute, expect, test } from '@playwright/test'
 import pg from 'pg'
 import { DEMO_PEOPLE } from '#server/demo/people.ts'
 import { notes } from '#shared/realtime/documents.ts'
@@ -354,18 +354,24 @@ async function setStylist(role: 'stylist' | 'crew' | null): Promise<void> {
   }
 }
 
-test('a role that may no longer write: nothing is sent, the rest is told, and the screen reads only', async ({
-  browser,
-  baseURL,
-}) => {
+/** The demo's stylist with the board open and no way to the server, who has just written a note. */
+async function stylistOffline(browser: Browser, baseURL: string | undefined, words: string) {
   await setStylist('stylist')
   const { page, context } = await visit(browser, DESK, baseURL ?? '')
   const way = await holdSockets(page)
   await signInDemo(page, 'stylist')
   await openBoard(page)
   await way.goOffline()
-  await writeNote(page, 'too late')
+  await writeNote(page, words)
   await expect(sign(page, OFFLINE)).toBeVisible()
+  return { page, context, way }
+}
+
+test('a role that may no longer write: nothing is sent, the rest is told, and the screen reads only', async ({
+  browser,
+  baseURL,
+}) => {
+  const { page, context, way } = await stylistOffline(browser, baseURL, 'too late')
   await setStylist('crew')
   await way.goOnline()
   const notice = page.getByRole('dialog', { name: /changes of yours are not in the shoot/ })
@@ -382,14 +388,7 @@ test('somebody taken out of the shoot is told what was not sent, also after load
   browser,
   baseURL,
 }) => {
-  await setStylist('stylist')
-  const { page, context } = await visit(browser, DESK, baseURL ?? '')
-  const way = await holdSockets(page)
-  await signInDemo(page, 'stylist')
-  await openBoard(page)
-  await way.goOffline()
-  await writeNote(page, 'never to be sent')
-  await expect(sign(page, OFFLINE)).toBeVisible()
+  const { page, context, way } = await stylistOffline(browser, baseURL, 'never to be sent')
   await setStylist(null)
   await way.goOnline()
   await expect(page.getByRole('heading', { name: 'You are not in this shoot any more' })).toBeVisible()

@@ -52,6 +52,13 @@ function page(change: { userId?: string; epoch?: number; role?: 'photographer' |
   }
 }
 
+/** The same, once the server has everything of it. */
+async function savedPage(change?: Parameters<typeof page>[0]): Promise<Page> {
+  const one = page(change)
+  await until(() => one.sign() === 'saved')
+  return one
+}
+
 /** Whether the words left this device in any frame. */
 const everSent = (words: string) =>
   end.sockets.some(({ received }) => received.some((frame) => new TextDecoder().decode(frame).includes(words)))
@@ -101,8 +108,7 @@ describe('openDocument', () => {
   })
 
   it('has no word for a connection that comes back soon: saving with unsent edits, saved without', async () => {
-    const one = page()
-    await until(() => one.sign() === 'saved')
+    const one = await savedPage()
     const signs: string[] = []
     one.document.save.subscribe(() => signs.push(one.sign()))
     end.fall(CLOSE.restart)
@@ -115,8 +121,7 @@ describe('openDocument', () => {
   })
 
   it('says offline when it stays away, with how many since when, and everything goes out in the end', async () => {
-    const one = page()
-    await until(() => one.sign() === 'saved')
+    const one = await savedPage()
     vi.useFakeTimers({ toFake: ['setTimeout', 'clearTimeout', 'Date'], now: Date.now() })
     const atMs = Date.now()
     end.answer = 1006
@@ -134,8 +139,7 @@ describe('openDocument', () => {
   })
 
   it('says offline at once when the browser knows it', async () => {
-    const one = page()
-    await until(() => one.sign() === 'saved')
+    const one = await savedPage()
     setOnline(false)
     expect(one.sign()).toBe('offline')
     setOnline(true)
@@ -143,14 +147,12 @@ describe('openDocument', () => {
   })
 
   it('tells the server whose page it is', async () => {
-    const one = page({ userId: 'ines' })
-    await until(() => one.sign() === 'saved')
+    await savedPage({ userId: 'ines' })
     expect(new URL(end.sockets[0]?.url ?? '').searchParams.get('user')).toBe('ines')
   })
 
   it('asks whether one is signed in still when it is turned away, keeps what was written, and sends it afterwards', async () => {
-    const one = page()
-    await until(() => one.sign() === 'saved')
+    const one = await savedPage()
     // The session ends; then upgrades are refused, which a browser sees as no answer.
     end.answer = 1006
     end.fall(CLOSE.signedOut)
@@ -160,11 +162,9 @@ describe('openDocument', () => {
     await one.document.leave()
     expect(unsentOnDevice('ines')).toBe(1)
     end.answer = 'take'
-    const other = page({ userId: 'soren' })
-    await until(() => other.sign() === 'saved')
+    await savedPage({ userId: 'soren' })
     expect(onServer()).toBe('as it was')
-    const again = page()
-    await until(() => again.sign() === 'saved')
+    await savedPage()
     expect(onServer()).toBe('before signing in again')
     expect(unsentOnDevice('ines')).toBe(0)
   })
@@ -187,8 +187,7 @@ describe('openDocument', () => {
   })
 
   it('counts what it took over as unsent until the server has it', async () => {
-    const a = page()
-    await until(() => a.sign() === 'saved')
+    const a = await savedPage()
     end.answer = 1006
     end.fall()
     a.write('one')
@@ -207,8 +206,7 @@ describe('openDocument', () => {
   })
 
   it('says not saved when offline and the device is full, and offline once it keeps again', async () => {
-    const one = page()
-    await until(() => one.sign() === 'saved')
+    const one = await savedPage()
     vi.useFakeTimers({ toFake: ['setTimeout', 'clearTimeout'] })
     end.answer = 1006
     end.fall()
@@ -224,8 +222,7 @@ describe('openDocument', () => {
   })
 
   it('never sends what was written for another epoch, and keeps it apart', async () => {
-    const one = page()
-    await until(() => one.sign() === 'saved')
+    const one = await savedPage()
     end.answer = 1006
     end.fall()
     one.write('for the old epoch')
@@ -236,8 +233,7 @@ describe('openDocument', () => {
     expect(one.sign()).toBe('saving')
     await one.document.leave()
     end.answer = 'take'
-    const next = page({ epoch: 2 })
-    await until(() => next.sign() === 'saved')
+    const next = await savedPage({ epoch: 2 })
     expect(next.text()).toBe('as it was')
     expect(everSent('for the old epoch')).toBe(false)
     const left = leftBehind('ines', 'shoot', { board: 2 })
@@ -249,8 +245,7 @@ describe('openDocument', () => {
   })
 
   it('puts aside what a person may no longer send, and reads the document anew', async () => {
-    const one = page()
-    await until(() => one.sign() === 'saved')
+    const one = await savedPage()
     end.answer = 1006
     end.fall(CLOSE.roleChanged)
     one.write('too late')
@@ -259,16 +254,14 @@ describe('openDocument', () => {
     await until(() => putAside === 1)
     expect(everSent('too late')).toBe(false)
     expect(leftBehind('ines', 'shoot', { board: 1 })).toMatchObject([{ kind: 'board', edits: 1 }])
-    const again = page({ role: 'crew' })
-    await until(() => again.sign() === 'saved')
+    const again = await savedPage({ role: 'crew' })
     expect([again.text(), onServer()]).toEqual(['as it was', 'as it was'])
     const [read] = await readLeftBehind(leftBehind('ines', 'shoot', { board: 1 }))
     expect(read && readAll(read.doc, notes).items.get(ID)?.text).toBe('too late')
   })
 
   it('puts aside words too that come out of a field after the right to write them is gone', async () => {
-    const one = page()
-    await until(() => one.sign() === 'saved')
+    const one = await savedPage()
     end.sayHello({ role: 'crew', mayWrite: false })
     await until(() => one.document.hello.get()?.mayWrite === false)
     one.write('typed across it')
@@ -278,8 +271,7 @@ describe('openDocument', () => {
   })
 
   it('takes over what is still being typed when edits are put aside', async () => {
-    const one = page()
-    await until(() => one.sign() === 'saved')
+    const one = await savedPage()
     end.answer = 1006
     end.fall(CLOSE.roleChanged)
     one.write('first words')
@@ -293,8 +285,7 @@ describe('openDocument', () => {
   })
 
   it('opens no socket when it is closed while edits are being put aside', async () => {
-    const one = page()
-    await until(() => one.sign() === 'saved')
+    const one = await savedPage()
     end.answer = 1006
     end.fall(CLOSE.roleChanged)
     one.write('too late')
@@ -312,13 +303,11 @@ describe('openDocument', () => {
   })
 
   it('forgets the cache of a shoot that is shut to this person, and keeps it while edits wait in it', async () => {
-    const one = page()
-    await until(() => one.sign() === 'saved')
+    await savedPage()
     expect(registeredCaches('rt:ines:shoot:')).toEqual(['rt:ines:shoot:board:1'])
     end.fall(CLOSE.noAccess)
     await until(() => registeredCaches('rt:ines:shoot:').length === 0)
-    const two = page({ userId: 'soren' })
-    await until(() => two.sign() === 'saved')
+    const two = await savedPage({ userId: 'soren' })
     end.answer = 1006
     end.fall()
     two.write('not gone out')
@@ -350,8 +339,7 @@ describe('openDocument', () => {
 
   it('neither sends nor keeps what somebody writes who may not', async () => {
     end.hello = { ...end.hello, role: 'crew', mayWrite: false }
-    const one = page({ role: 'crew' })
-    await until(() => one.sign() === 'saved')
+    const one = await savedPage({ role: 'crew' })
     one.write('not mine to write')
     expect(one.document.save.get()).toMatchObject({ kind: 'not-saved' })
     await one.document.leave()
@@ -361,8 +349,7 @@ describe('openDocument', () => {
   })
 
   it('holds everything while the document is locked, says so, and sends it when it is released', async () => {
-    const one = page()
-    await until(() => one.sign() === 'saved')
+    const one = await savedPage()
     end.sayHello({ frozen: 'quarantine', mayWrite: false })
     await until(() => one.document.hello.get()?.frozen === 'quarantine')
     expect(one.sign()).toBe('saved')
@@ -391,8 +378,7 @@ describe('openDocument', () => {
   it.each(['too-large', 'full', 'invalid'] as const)(
     'says why a change was refused (%s) and clears it once it is taken',
     async (reason) => {
-      const one = page()
-      await until(() => one.sign() === 'saved')
+      const one = await savedPage()
       end.updates = reason
       one.write('refused')
       await until(() => one.sign() === 'not-saved')
@@ -405,8 +391,7 @@ describe('openDocument', () => {
   )
 
   it('does not take the acknowledgement of a later message for that of a refused one', async () => {
-    const one = page()
-    await until(() => one.sign() === 'saved')
+    const one = await savedPage()
     end.updates = 'full'
     one.write('refused')
     await until(() => one.sign() === 'not-saved')
@@ -423,8 +408,7 @@ describe('openDocument', () => {
   })
 
   it('waits a moment on leaving for what is on its way', async () => {
-    const one = page()
-    await until(() => one.sign() === 'saved')
+    const one = await savedPage()
     end.updates = 'hold'
     one.write('last words')
     const left = one.document.leave()
@@ -438,8 +422,7 @@ describe('openDocument', () => {
     const full = vi.spyOn(IDBObjectStore.prototype, 'add').mockImplementation(() => {
       throw new DOMException('The device is full.', 'QuotaExceededError')
     })
-    const one = page()
-    await until(() => one.sign() === 'saved')
+    const one = await savedPage()
     end.answer = 1006
     end.fall()
     expect(one.document.atRisk()).toBe(false)
@@ -457,10 +440,8 @@ describe('openDocument', () => {
   })
 
   it('counts what it could not read from the device at first, and sends it once it can', async () => {
-    const a = page()
-    await until(() => a.sign() === 'saved')
-    const b = page()
-    await until(() => b.sign() === 'saved')
+    const a = await savedPage()
+    const b = await savedPage()
     a.document.provider.disconnect()
     a.write('of the closed page')
     tellOtherPages()

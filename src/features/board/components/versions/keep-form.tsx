@@ -5,7 +5,6 @@ import { Button } from '#src/ui/button.tsx'
 import { Field } from '#src/ui/field.tsx'
 import { FormError } from '#src/ui/form-error.tsx'
 import { Input } from '#src/ui/input.tsx'
-import { toast } from '#src/ui/toast.ts'
 import { useChangeVersions } from '../../mutations.ts'
 import { proposedName } from '../../versions/version-days.ts'
 
@@ -14,6 +13,7 @@ export function KeepForm({ versions }: { versions: readonly Version[] }) {
   const change = useChangeVersions()
   const [typed, setTyped] = useState<string | null>(null)
   const [missing, setMissing] = useState('')
+  const [kept, setKept] = useState('')
   const name = typed ?? proposedName(versions, today())
   const handleSubmit = (event: FormEvent) => {
     event.preventDefault()
@@ -26,7 +26,7 @@ export function KeepForm({ versions }: { versions: readonly Version[] }) {
       {
         onSuccess: () => {
           setTyped(null)
-          toast.say(`“${words}” is kept.`)
+          setKept(words)
         },
       },
     )
@@ -48,6 +48,10 @@ export function KeepForm({ versions }: { versions: readonly Version[] }) {
           Keep this version
         </Button>
       </div>
+      {/* Here and not at the edge of the screen, where it would lie over the list and not be read out. */}
+      <p role="status" className="text-sm text-ink-soft empty:-mt-3">
+        {kept !== '' && `“${kept}” is kept.`}
+      </p>
     </form>
   )
 }

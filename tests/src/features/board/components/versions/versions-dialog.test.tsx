@@ -134,6 +134,7 @@ describe('VersionsDialog', () => {
     fireEvent.change(name, { target: { value: 'After the fitting' } })
     fireEvent.click(keep)
     expect(await screen.findByRole('link', { name: 'Look at After the fitting' })).toBeTruthy()
+    expect(screen.getByText('“After the fitting” is kept.').getAttribute('role')).toBe('status')
     expect(sent.filter(({ request }) => request === `POST ${LIST}`).map(({ body }) => body)).toEqual([
       { name: 'After the fitting' },
     ])

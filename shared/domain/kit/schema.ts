@@ -1,5 +1,6 @@
 import { z } from 'zod'
-import { lineSchema, proseSchema } from '#shared/domain/text.ts'
+import { kitItemIdSchema } from '#shared/ids.ts'
+import { colourSchema, lineSchema, proseSchema } from '#shared/domain/text.ts'
 
 /** Where a number comes from: a maker's or standard's print, a meter, or somebody's guess. */
 export const PROVENANCES = ['published', 'measured', 'assumed'] as const
@@ -24,10 +25,24 @@ export const MODIFIER_SHAPES = [
   'beauty dish',
   'snoot',
   'grid',
-  'panel',
   'lantern',
 ] as const
-export const SUPPORT_KINDS = ['stand', 'boom', 'clamp', 'floor stand', 'hand', 'magic arm'] as const
+export const SUPPORT_KINDS = ['stand', 'boom', 'clamp', 'floor stand', 'floor plate', 'hand', 'magic arm'] as const
+export const PANEL_USES = ['panel', 'flag'] as const
+
+/**
+ * What a meter read of a head with a modifier on it (`modifierKitId` null: bare), as the guide number in metres that
+ * head and modifier have together at full power and ISO 100. It takes the place of guide number and loss.
+ */
+export const meteredSchema = z.object({
+  modifierKitId: kitItemIdSchema.nullable(),
+  /** Zoom of the head while it was read; null when it has none. */
+  zoomMm: z.number().min(10).max(400).nullable().default(null),
+  guideNumberM: z.number().positive(),
+  /** The reading in words: f-number, distance, power, ISO, date. */
+  source: proseSchema(200).default(''),
+})
+export type Metered = z.infer<typeof meteredSchema>
 
 /** A flash head. Guide numbers in metres at ISO 100, full power. */
 export const unitNumbersSchema = z.object({
@@ -46,8 +61,31 @@ export const unitNumbersSchema = z.object({
   /** Mass of the head with its power inside, kg. */
   massKg: statedSchema,
   remotePower: z.boolean().default(true),
+  /** Watts it draws from the mains while charging; null: runs on its own battery. */
+  mainsWatts: statedSchema.nullable().default(null),
+  /** How it keeps time with the shutter, and what sets it off, in words. */
+  sync: proseSchema(200).default(''),
+  triggers: proseSchema(200).default(''),
+  metered: z.array(meteredSchema).max(60).default([]),
 })
 export type UnitNumbers = z.infer<typeof unitNumbersSchema>
+
+/** A lamp that burns all the time. */
+export const lampNumbersSchema = z.object({
+  /** Illuminance on axis at one metre, bare, full power. */
+  luxAtMetre: statedSchema,
+  /** Power it draws, W. */
+  watts: statedSchema,
+  colourK: statedSchema,
+  /** Full angle between the half-intensity directions, degrees; null: unknown. */
+  beamDeg: statedSchema.nullable().default(null),
+  /** Smallest power as 1/n; 1: it cannot be dimmed. */
+  minPowerDenominator: z.number().int().min(1).max(1024).default(100),
+  massKg: statedSchema,
+  remotePower: z.boolean().default(false),
+  onMains: z.boolean().default(true),
+})
+export type LampNumbers = z.infer<typeof lampNumbersSchema>
 
 export const modifierNumbersSchema = z.object({
   shape: z.enum(MODIFIER_SHAPES),
@@ -77,17 +115,34 @@ export const supportNumbersSchema = z.object({
   kind: z.enum(SUPPORT_KINDS),
   maxHeightM: statedSchema,
   maxLoadKg: statedSchema,
+  minHeightM: statedSchema.nullable().default(null),
+  /** Of a boom: how far the head hangs out, where the counterweight sits, and the mass of the arm; null: not known. */
+  reachM: statedSchema.nullable().default(null),
+  counterReachM: statedSchema.nullable().default(null),
+  armMassKg: statedSchema.nullable().default(null),
 })
 export type SupportNumbers = z.infer<typeof supportNumbersSchema>
+
+/** A panel gives light back, a flag keeps it off. */
+export const panelNumbersSchema = z.object({
+  use: z.enum(PANEL_USES),
+  widthM: z.number().min(0.01).max(10),
+  heightM: z.number().min(0.01).max(10),
+  colour: colourSchema.default('#ffffff'),
+  massKg: statedSchema,
+})
+export type PanelNumbers = z.infer<typeof panelNumbersSchema>
 
 export const kitBodySchema = z.discriminatedUnion('kind', [
   z.object({ kind: z.literal('unit'), numbers: unitNumbersSchema }),
   z.object({ kind: z.literal('modifier'), numbers: modifierNumbersSchema }),
   z.object({ kind: z.literal('gel'), numbers: gelNumbersSchema }),
   z.object({ kind: z.literal('support'), numbers: supportNumbersSchema }),
+  z.object({ kind: z.literal('lamp'), numbers: lampNumbersSchema }),
+  z.object({ kind: z.literal('panel'), numbers: panelNumbersSchema }),
 ])
 export type KitBody = z.infer<typeof kitBodySchema>
-export const KIT_KINDS = ['unit', 'modifier', 'gel', 'support'] as const
+export const KIT_KINDS = ['unit', 'lamp', 'modifier', 'gel', 'support', 'panel'] as const
 export type KitKind = (typeof KIT_KINDS)[number]
 
 /** What a kit item says of itself, without identity and version. */

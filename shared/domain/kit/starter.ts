@@ -1,5 +1,5 @@
 import { GEL_ROWS } from './gels.ts'
-import type { KitInput, ModifierNumbers, Stated, SupportNumbers, UnitNumbers } from './schema.ts'
+import type { KitInput, ModifierNumbers, PanelNumbers, Stated, SupportNumbers, UnitNumbers } from './schema.ts'
 
 const CLASS = 'typical of this class of head; put in your maker’s figure or a meter reading'
 const GUESS = 'common practice, no source; measure yours'
@@ -39,6 +39,10 @@ function unit(row: UnitRow): KitInput {
         fullRecycleS: assumed(row.fullRecycleS, CLASS),
         massKg: assumed(row.massKg, CLASS),
         remotePower: row.remotePower,
+        mainsWatts: null,
+        sync: '',
+        triggers: '',
+        metered: [],
       },
     },
   }
@@ -89,7 +93,15 @@ function support(
     note: 'Keep to the maker’s limits for height and load; weigh it down before anything goes up.',
     body: {
       kind: 'support',
-      numbers: { kind, maxHeightM: assumed(maxHeightM, LIMIT), maxLoadKg: assumed(maxLoadKg, LIMIT) },
+      numbers: {
+        kind,
+        maxHeightM: assumed(maxHeightM, LIMIT),
+        maxLoadKg: assumed(maxLoadKg, LIMIT),
+        minHeightM: null,
+        reachM: null,
+        counterReachM: null,
+        armMassKg: null,
+      },
     },
   }
 }
@@ -189,9 +201,6 @@ const MODIFIERS: readonly KitInput[] = (
     ['30° grid', 2, 'grid', 0.18, 0.18, 0.7, 30, 0.2],
     ['40° grid', 1, 'grid', 0.18, 0.18, 0.5, 40, 0.2],
     ['Snoot', 1, 'snoot', 0.07, 0.07, 0.7, 15, 0.3],
-    ['White panel 1 × 1.5 m', 2, 'panel', 1, 1.5, 0, null, 1.5, 'Stands on its own in a setup as a panel.'],
-    ['Silver panel 1 × 1.5 m', 1, 'panel', 1, 1.5, 0, null, 1.5, 'Stands on its own in a setup as a panel.'],
-    ['Black panel 1 × 2 m', 2, 'panel', 1, 2, 0, null, 2, 'Stands on its own in a setup as a flag.'],
   ] satisfies ModifierRow[]
 ).map(modifier)
 
@@ -218,6 +227,29 @@ const GELS: readonly KitInput[] = GEL_ROWS.map((row) => ({
   },
 }))
 
+function panel(
+  name: string,
+  quantity: number,
+  use: PanelNumbers['use'],
+  widthM: number,
+  heightM: number,
+  colour: string,
+  massKg: number,
+): KitInput {
+  return {
+    name,
+    quantity,
+    note: '',
+    body: { kind: 'panel', numbers: { use, widthM, heightM, colour, massKg: assumed(massKg, GUESS) } },
+  }
+}
+
+const PANELS: readonly KitInput[] = [
+  panel('White panel 1 × 1.5 m', 2, 'panel', 1, 1.5, '#ffffff', 1.5),
+  panel('Silver panel 1 × 1.5 m', 1, 'panel', 1, 1.5, '#d9dbde', 1.5),
+  panel('Black panel 1 × 2 m', 2, 'flag', 1, 2, '#1f1c1a', 2),
+]
+
 const SUPPORTS: readonly KitInput[] = [
   support('2.4 m stand', 4, 'stand', 2.4, 2.5),
   support('3.3 m stand', 2, 'stand', 3.3, 6),
@@ -231,4 +263,4 @@ const SUPPORTS: readonly KitInput[] = [
  * Kit for a studio that has typed none yet: generic heads, modifiers, gels and supports, each number marked as
  * published, measured or assumed with its source. Lengths in metres, masses in kg, guide numbers at ISO 100.
  */
-export const STARTER_KIT: readonly KitInput[] = [...UNITS, ...MODIFIERS, ...GELS, ...SUPPORTS]
+export const STARTER_KIT: readonly KitInput[] = [...UNITS, ...MODIFIERS, ...GELS, ...SUPPORTS, ...PANELS]

@@ -1,10 +1,11 @@
 import type { WholeSetup } from '#shared/domain/plan/read-plan.ts'
+import type { UnitNumbers } from '#shared/domain/kit/schema.ts'
 import type { Orientation } from './frame.ts'
 import { frameCautions } from './in-frame.ts'
 import { faceOf, faceRadiusM, outputOf } from './light-output.ts'
 import { counterweightKg, fullPopsFor, recycleS } from './power.ts'
 import { type SetupReading, readSetup } from './readings.ts'
-import type { Light } from './schema.ts'
+import { type Light, isLamp } from './schema.ts'
 import { SOCKET_LIMIT_DEG } from './softness.ts'
 import { stopsBetween } from './stops.ts'
 import { fNumberLabel, inSentence, metresLabel, powerLabel, purposeWord } from './words.ts'
@@ -179,7 +180,7 @@ function exposureCautions(reading: SetupReading, whole: WholeSetup): Caution[] {
   if (main && reading.mainFNumber !== null && reading.mainFNumber > 0) {
     const short = stopsBetween(camera.fNumber, reading.totalFNumber)
     const room = stopsBetween(1, Math.sqrt(main.power))
-    const how = `Main, fill and ambient together read ${fNumberLabel(reading.totalFNumber)} at ISO ${camera.iso}; the main has ${Math.max(0, room).toFixed(1)} stops up to full power (guide number ${outputOf(main).fullGuideNumberM.toFixed(0)}, ${main.unit.numbers.guideNumberM.from}).`
+    const how = `Main, fill and ambient together read ${fNumberLabel(reading.totalFNumber)} at ISO ${camera.iso}; the main has ${Math.max(0, room).toFixed(1)} stops up to full power (guide number ${outputOf(main).fullGuideNumberM.toFixed(0)}).`
     if (short > room + 1 / 3) {
       cautions.push({
         key: 'over-power',
@@ -214,14 +215,16 @@ function exposureCautions(reading: SetupReading, whole: WholeSetup): Caution[] {
 }
 
 function batteryCautions(whole: WholeSetup, frames: number): Caution[] {
-  let worst: { light: Light; share: number } | null = null
+  let worst: { light: Light; share: number; numbers: UnitNumbers } | null = null
   for (const light of whole.lights) {
-    const share = fullPopsFor(frames, light.power) / light.unit.numbers.fullPops.value
-    if (!worst || share > worst.share) worst = { light, share }
+    const { numbers } = light.unit
+    if (isLamp(numbers)) continue
+    const share = fullPopsFor(frames, light.power) / numbers.fullPops.value
+    if (!worst || share > worst.share) worst = { light, share, numbers }
   }
   if (!worst) return []
   const { light, share } = worst
-  const { fullPops, fullRecycleS } = light.unit.numbers
+  const { fullPops, fullRecycleS } = worst.numbers
   const name = purposeWord(light.purpose).toLowerCase()
   const pops = Math.ceil(fullPopsFor(frames, light.power))
   const words = `${frames} frames: ${pops} full pops of ${fullPops.value} from the ${name}. Ready again in ${recycleS(fullRecycleS.value, light.power).toFixed(1)} s.`

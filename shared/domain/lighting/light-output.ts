@@ -9,7 +9,7 @@ import {
 } from './exposure.ts'
 import { stackGels } from './gel.ts'
 import { angleBetweenDeg, distanceBetween, dot, minus } from './geometry.ts'
-import type { Light, Point } from './schema.ts'
+import { type Light, type Point, isLamp } from './schema.ts'
 
 /** The chain from a head's guide number to what it gives on axis, step by step, for showing how a figure came about. */
 export type Output = {
@@ -23,7 +23,8 @@ export type Output = {
 
 /** What a light gives on its axis. Guide numbers in metres at ISO 100. */
 export function outputOf(light: Light): Output {
-  const fullGuideNumberM = guideNumberAtZoom(light.unit.numbers, light.zoomMm)
+  const { numbers } = light.unit
+  const fullGuideNumberM = isLamp(numbers) ? 0 : guideNumberAtZoom(numbers, light.zoomMm)
   const modifierLossStops = light.modifier?.numbers.lossStops.value ?? 0
   const gelLossStops = stackGels(light.gels.map((gel) => gel.numbers)).lossStops
   const guideNumberM = guideNumberAfterLoss(

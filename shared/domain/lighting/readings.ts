@@ -4,6 +4,7 @@ import { shifted, stackGels } from './gel.ts'
 import { distanceBetween, facePoint, floorDistance, mainPlace } from './geometry.ts'
 import { type Depth, depthOfField } from './lens.ts'
 import { type Arrival, arrivalAt, axisOnWall, faceOf, incidenceShare } from './light-output.ts'
+import { ownColourK } from './light-source.ts'
 import { panelReading } from './panel.ts'
 import { mainToFill, ratioOfStops } from './ratio.ts'
 import { apparentSizeDeg, elevationDeg, penumbraM } from './softness.ts'
@@ -132,7 +133,7 @@ function readLight(light: Light, whole: WholeSetup, face: Point): Omit<LightRead
     lightId: light.id,
     purpose: light.purpose,
     where: target ? 'wall' : 'sitter',
-    colourK: shifted(light.unit.numbers.flashColourK.value, stackGels(light.gels.map((gel) => gel.numbers)).miredShift),
+    colourK: shifted(ownColourK(light.unit.numbers), stackGels(light.gels.map((gel) => gel.numbers)).miredShift),
   }
 }
 

@@ -5,8 +5,10 @@ export const KIND_WORDS: Readonly<Record<KitKind, { one: string; many: string; e
   modifier: {
     one: 'Modifier',
     many: 'Modifiers',
-    empty: 'Softboxes, umbrellas, grids and panels, with their size and what they swallow.',
+    empty: 'Softboxes, umbrellas and grids, with their size and what they swallow.',
   },
+  lamp: { one: 'Lamp', many: 'Lamps', empty: 'Lamps that burn all the time, with watts and lux at a metre.' },
+  panel: { one: 'Panel or flag', many: 'Panels and flags', empty: 'What gives light back, and what keeps it off.' },
   gel: {
     one: 'Gel',
     many: 'Gels',
@@ -46,6 +48,10 @@ function blankBody(kind: KitKind): KitBody {
           fullRecycleS: assumed(2.5),
           massKg: assumed(0.6),
           remotePower: true,
+          mainsWatts: null,
+          sync: '',
+          triggers: '',
+          metered: [],
         },
       }
     case 'modifier':
@@ -66,7 +72,34 @@ function blankBody(kind: KitKind): KitBody {
         numbers: { miredShift: assumed(0), printedMired: null, transmission: assumed(0.8), colour: '#ffffff' },
       }
     case 'support':
-      return { kind, numbers: { kind: 'stand', maxHeightM: assumed(2.6), maxLoadKg: assumed(3) } }
+      return {
+        kind,
+        numbers: {
+          kind: 'stand',
+          maxHeightM: assumed(2.6),
+          maxLoadKg: assumed(3),
+          minHeightM: null,
+          reachM: null,
+          counterReachM: null,
+          armMassKg: null,
+        },
+      }
+    case 'lamp':
+      return {
+        kind,
+        numbers: {
+          luxAtMetre: assumed(5000),
+          watts: assumed(100),
+          colourK: assumed(5600),
+          beamDeg: null,
+          minPowerDenominator: 100,
+          massKg: assumed(1.5),
+          remotePower: false,
+          onMains: true,
+        },
+      }
+    case 'panel':
+      return { kind, numbers: { use: 'panel', widthM: 1, heightM: 1.5, colour: '#ffffff', massKg: assumed(1.5) } }
   }
 }
 
@@ -128,6 +161,24 @@ export function readingsOf(body: KitBody): Reading[] {
         plain('Kind', numbers.kind),
         stated('Reaches', numbers.maxHeightM, (value) => `${digits(value)} m`),
         stated('Carries', numbers.maxLoadKg, (value) => `${digits(value, 1)} kg`),
+      ]
+    }
+    case 'lamp': {
+      const { numbers } = body
+      return [
+        stated('At a metre', numbers.luxAtMetre, (value) => `${digits(value, 0)} lx`),
+        stated('Draws', numbers.watts, (value) => `${digits(value, 0)} W`),
+        stated('Colour', numbers.colourK, (value) => `${digits(value, 0)} K`),
+        numbers.beamDeg ? stated('Beam', numbers.beamDeg, (value) => `${digits(value, 0)}°`) : plain('Beam', 'unknown'),
+        stated('Mass', numbers.massKg, (value) => `${digits(value)} kg`),
+      ]
+    }
+    case 'panel': {
+      const { numbers } = body
+      return [
+        plain('Use', numbers.use),
+        plain('Size', faceSize(numbers.widthM, numbers.heightM)),
+        stated('Mass', numbers.massKg, (value) => `${digits(value)} kg`),
       ]
     }
   }

@@ -1,6 +1,7 @@
 import { lightIdSchema, placeIdSchema, propIdSchema, setupIdSchema, type LightId, type SetupId } from '#shared/ids.ts'
 import type { WholeSetup } from '#shared/domain/plan/read-plan.ts'
 import { facePoint } from '#shared/domain/lighting/geometry.ts'
+import { zoomTableOf } from '#shared/domain/lighting/light-source.ts'
 import {
   type Light,
   type LightModifier,
@@ -12,6 +13,7 @@ import {
   type PROP_KINDS,
   type Setup,
   type SitterPlace,
+  sitterPlaceSchema,
 } from '#shared/domain/lighting/schema.ts'
 import { fNumberOfThirds } from '#shared/domain/lighting/stops.ts'
 import { appendKey } from '#shared/realtime/order-keys.ts'
@@ -89,7 +91,8 @@ export function newLight(whole: WholeSetup, input: NewLight, random: () => numbe
     power: Math.max(1 / 16, 1 / input.unit.numbers.minPowerDenominator),
     at: round(freePlace(at, face, whole.lights)),
     aim: round(aim),
-    zoomMm: input.unit.numbers.zoom.length > 0 ? (input.unit.numbers.zoom.at(-1)?.focalMm ?? null) : null,
+    isOn: true,
+    zoomMm: zoomTableOf(input.unit.numbers).at(-1)?.focalMm ?? null,
     note: '',
     rank: appendKey(
       whole.lights.map((light) => light.rank),
@@ -142,6 +145,7 @@ export function newProp(whole: WholeSetup, kind: (typeof PROP_KINDS)[number]): P
     widthM,
     heightM,
     colour,
+    shape: kind === 'prop' ? 'table' : 'block',
   }
 }
 
@@ -163,13 +167,18 @@ export function newSetup(
         iso: 100,
         shutterS: 1 / 160,
         whiteBalanceK: 5500,
+        syncS: null,
+        aim: null,
       },
-      background: { zM: -2.5, widthM: 5, heightM: 3, colour: '#8d8a85', what: '' },
+      background: { zM: -2.5, widthM: 5, heightM: 3, colour: '#8d8a85', surface: 'plaster', what: '' },
       ambientLux: null,
+      ambientK: null,
+      walled: null,
+      circuit: null,
       note: '',
       rank: appendKey(ranks, random),
     },
-    place: { id: placeIdSchema.parse(newId()), setupId: id, sitterId: null, at: [0, 0], eyeHeightM: 1.55 },
+    place: sitterPlaceSchema.parse({ id: newId(), setupId: id, at: [0, 0], eyeHeightM: 1.55 }),
   }
 }
 

@@ -1,3 +1,4 @@
+import { ownColourK } from '#shared/domain/lighting/light-source.ts'
 import type { WholeSetup } from '#shared/domain/plan/read-plan.ts'
 import type { Light } from '#shared/domain/lighting/schema.ts'
 import { shifted, stackGels } from '#shared/domain/lighting/gel.ts'
@@ -52,10 +53,7 @@ export function fitPlan(whole: WholeSetup, width: number, height: number, margin
 
 /** Tint of a light's beam in a drawing: drawing blue when neutral, amber when warm, a clear blue when cool. */
 export function beamTint(light: Light, whiteK: number): { colour: string; opacity: number } {
-  const kelvin = shifted(
-    light.unit.numbers.flashColourK.value,
-    stackGels(light.gels.map((gel) => gel.numbers)).miredShift,
-  )
+  const kelvin = shifted(ownColourK(light.unit.numbers), stackGels(light.gels.map((gel) => gel.numbers)).miredShift)
   const mired = (kelvin === null ? 0 : 1e6 / kelvin) - 1e6 / whiteK
   if (mired > 25) return { colour: '#C9711F', opacity: 0.18 }
   if (mired < -25) return { colour: '#3F78BC', opacity: 0.2 }

@@ -1,15 +1,20 @@
 import { useQuery } from '@tanstack/react-query'
 import { useMemo } from 'react'
+import type { KitItemId } from '#shared/ids.ts'
 import type { KitItem } from '#shared/api/kit.ts'
+import type { PanelNumbers } from '#shared/domain/kit/schema.ts'
 import type { LightGel, LightModifier, LightSupport, LightUnit } from '#shared/domain/lighting/schema.ts'
 import { useShoot } from '#src/realtime/shoot-realtime.tsx'
 import { lightingQueries } from './queries.ts'
 
+export type KitPanel = { kitId: KitItemId; version: number; name: string; numbers: PanelNumbers }
+
 export type Kit = {
+  /** Flash heads and lamps. */
   units: LightUnit[]
   modifiers: LightModifier[]
   /** Panels and flags that stand on their own. */
-  panels: LightModifier[]
+  panels: KitPanel[]
   gels: LightGel[]
   supports: LightSupport[]
   /** Newest version in the kit room by id; unknown ids are no longer there. */
@@ -20,7 +25,7 @@ export type Kit = {
 function sortKit(kit: readonly KitItem[]): Omit<Kit, 'state'> {
   const units: LightUnit[] = []
   const modifiers: LightModifier[] = []
-  const panels: LightModifier[] = []
+  const panels: KitPanel[] = []
   const gels: LightGel[] = []
   const supports: LightSupport[] = []
   for (const { id: kitId, version, name, body } of kit) {
@@ -30,8 +35,13 @@ function sortKit(kit: readonly KitItem[]): Omit<Kit, 'state'> {
         units.push({ ...own, numbers: body.numbers })
         break
       case 'modifier':
-        if (body.numbers.shape === 'panel') panels.push({ ...own, numbers: body.numbers })
-        else modifiers.push({ ...own, numbers: body.numbers })
+        modifiers.push({ ...own, numbers: body.numbers })
+        break
+      case 'lamp':
+        units.push({ ...own, numbers: body.numbers })
+        break
+      case 'panel':
+        panels.push({ ...own, numbers: body.numbers })
         break
       case 'gel':
         gels.push({ ...own, numbers: body.numbers })

@@ -1,5 +1,6 @@
 import { LIGHT_PURPOSES, type Light } from '#shared/domain/lighting/schema.ts'
 import { facePoint } from '#shared/domain/lighting/geometry.ts'
+import { ownColourK, zoomTableOf } from '#shared/domain/lighting/light-source.ts'
 import type { SetupReading } from '#shared/domain/lighting/readings.ts'
 import { powersOf } from '#shared/domain/lighting/stops.ts'
 import { fNumberLabel, metresLabel, powerLabel, purposeWord, stopsLabel } from '#shared/domain/lighting/words.ts'
@@ -113,7 +114,9 @@ export function LightEditor({
         items={kit.units}
         value={light.unit}
         kit={kit}
-        onChange={(unit) => unit && patch({ unit, ...(unit.numbers.zoom.length === 0 ? { zoomMm: null } : {}) })}
+        onChange={(unit) =>
+          unit && patch({ unit, ...(zoomTableOf(unit.numbers).length === 0 ? { zoomMm: null } : {}) })
+        }
       />
       <div className="grid grid-cols-2 gap-2">
         <Field label="Power">
@@ -126,7 +129,7 @@ export function LightEditor({
             }}
           />
         </Field>
-        {light.unit.numbers.zoom.length > 0 && (
+        {zoomTableOf(light.unit.numbers).length > 0 && (
           <Field label="Zoom">
             <NumberInput
               value={light.zoomMm}
@@ -152,7 +155,7 @@ export function LightEditor({
       <GelsField
         gels={light.gels}
         kit={kit}
-        flashK={light.unit.numbers.flashColourK.value}
+        flashK={ownColourK(light.unit.numbers)}
         onChange={(gels) => patch({ gels })}
       />
       <KitSelect

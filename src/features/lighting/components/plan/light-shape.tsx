@@ -49,8 +49,6 @@ export const LightShape = memo(function LightShape({ light, pxPerM, across, chos
       )
     case 'lantern':
       return <circle r={half} {...line} />
-    case 'panel':
-      return <path d={`M0 ${-half}V${half}`} {...line} strokeWidth={5} />
     case 'reflector':
       return (
         <g>

@@ -1,5 +1,5 @@
 import type { LightReading } from '#shared/domain/lighting/readings.ts'
-import type { Light } from '#shared/domain/lighting/schema.ts'
+import { type Light, isLamp } from '#shared/domain/lighting/schema.ts'
 import { fNumberLabel, powerLabel } from '#shared/domain/lighting/words.ts'
 import { type InputRow, Workings, stated } from './how.tsx'
 
@@ -18,11 +18,13 @@ function stops(value: number): string {
 export function LightWorkings({ light, reading, iso }: { light: Light; reading: LightReading; iso: number }) {
   const { numbers } = light.unit
   const inputs: InputRow[] = [
-    [
-      light.zoomMm !== null && numbers.zoom.length > 0 ? `Guide number at ${light.zoomMm} mm` : 'Guide number',
-      `${reading.fullGuideNumberM.toFixed(1)} m`,
-      stated(numbers.guideNumberM),
-    ],
+    isLamp(numbers)
+      ? ['Lux at a metre', numbers.luxAtMetre.value, stated(numbers.luxAtMetre)]
+      : [
+          light.zoomMm !== null && numbers.zoom.length > 0 ? `Guide number at ${light.zoomMm} mm` : 'Guide number',
+          `${reading.fullGuideNumberM.toFixed(1)} m`,
+          stated(numbers.guideNumberM),
+        ],
     ['Power', powerLabel(light.power)],
   ]
   if (light.modifier)

@@ -1,6 +1,6 @@
 import type { KitItemId, StudioId } from '#shared/ids.ts'
 import type { KitItem } from '#shared/api/kit.ts'
-import { kitInputSchema } from '#shared/domain/kit/schema.ts'
+import { kitFieldsSchema } from '#shared/domain/kit/schema.ts'
 import { requireStudio } from '#server/access/require.ts'
 import type { Ctx } from '#server/context.ts'
 import { withTransaction } from '#server/db/client.ts'
@@ -24,7 +24,7 @@ export async function removeKitItem(
       id: kitId,
       version: version + 1,
       studioId,
-      input: kitInputSchema.parse(newest.item),
+      input: kitFieldsSchema.parse(newest.item),
       removedAt: at,
       createdBy: actor.userId,
       createdAt: at,

@@ -1,6 +1,7 @@
 import { z } from 'zod'
 import { kitItemIdSchema } from '#shared/ids.ts'
 import { colourSchema, lineSchema, proseSchema } from '#shared/domain/text.ts'
+import { faultsOf } from './faults.ts'
 
 /** Where a number comes from: a maker's or standard's print, a meter, or somebody's guess. */
 export const PROVENANCES = ['published', 'measured', 'assumed'] as const
@@ -30,6 +31,12 @@ export const MODIFIER_SHAPES = [
 export const SUPPORT_KINDS = ['stand', 'boom', 'clamp', 'floor stand', 'floor plate', 'hand', 'magic arm'] as const
 export const PANEL_USES = ['panel', 'flag'] as const
 
+const FOCAL = 'A zoom setting lies between 10 and 400 mm.'
+const FACE = 'A face is between 0 and 6 m.'
+const PANEL = 'A panel is between 1 cm and 10 m.'
+const DENOMINATOR = 'The smallest power is 1/1 to 1/1024.'
+const leastPower = z.number().int(DENOMINATOR).min(1, DENOMINATOR).max(1024, DENOMINATOR)
+
 /**
  * What a meter read of a head with a modifier on it (`modifierKitId` null: bare), as the guide number in metres that
  * head and modifier have together at full power and ISO 100. It takes the place of guide number and loss.
@@ -49,11 +56,16 @@ export const unitNumbersSchema = z.object({
   guideNumberM: statedSchema,
   /** Maker's guide number by zoom setting in mm, when the head zooms. */
   zoom: z
-    .array(z.object({ focalMm: z.number().min(10).max(400), guideNumberM: z.number().positive() }))
-    .max(20)
+    .array(
+      z.object({
+        focalMm: z.number().min(10, FOCAL).max(400, FOCAL),
+        guideNumberM: z.number().positive('A guide number is above 0: put in the maker’s figure or measure it.'),
+      }),
+    )
+    .max(20, 'At most 20 zoom settings.')
     .default([]),
   /** Smallest power as 1/n. */
-  minPowerDenominator: z.number().int().min(1).max(1024).default(128),
+  minPowerDenominator: leastPower.default(128),
   flashColourK: statedSchema,
   /** Full pops from one charge or set of cells. */
   fullPops: statedSchema,
@@ -80,7 +92,7 @@ export const lampNumbersSchema = z.object({
   /** Full angle between the half-intensity directions, degrees; null: unknown. */
   beamDeg: statedSchema.nullable().default(null),
   /** Smallest power as 1/n; 1: it cannot be dimmed. */
-  minPowerDenominator: z.number().int().min(1).max(1024).default(100),
+  minPowerDenominator: leastPower.default(100),
   massKg: statedSchema,
   remotePower: z.boolean().default(false),
   onMains: z.boolean().default(true),
@@ -90,8 +102,8 @@ export type LampNumbers = z.infer<typeof lampNumbersSchema>
 export const modifierNumbersSchema = z.object({
   shape: z.enum(MODIFIER_SHAPES),
   /** Emitting face, m; for a disc both are the diameter. */
-  widthM: z.number().min(0).max(6),
-  heightM: z.number().min(0).max(6),
+  widthM: z.number().min(0, FACE).max(6, FACE),
+  heightM: z.number().min(0, FACE).max(6, FACE),
   /** Stops lost on axis against the bare head at the same zoom. */
   lossStops: statedSchema,
   /** Full angle between the half-intensity directions, degrees; null: unknown. */
@@ -126,8 +138,8 @@ export type SupportNumbers = z.infer<typeof supportNumbersSchema>
 /** A panel gives light back, a flag keeps it off. */
 export const panelNumbersSchema = z.object({
   use: z.enum(PANEL_USES),
-  widthM: z.number().min(0.01).max(10),
-  heightM: z.number().min(0.01).max(10),
+  widthM: z.number().min(0.01, PANEL).max(10, PANEL),
+  heightM: z.number().min(0.01, PANEL).max(10, PANEL),
   colour: colourSchema.default('#ffffff'),
   massKg: statedSchema,
 })
@@ -145,12 +157,21 @@ export type KitBody = z.infer<typeof kitBodySchema>
 export const KIT_KINDS = ['unit', 'lamp', 'modifier', 'gel', 'support', 'panel'] as const
 export type KitKind = (typeof KIT_KINDS)[number]
 
-/** What a kit item says of itself, without identity and version. */
-export const kitInputSchema = z.object({
+/** What a kit item says of itself, without identity and version, as it is read: older ones may break newer rules. */
+export const kitFieldsSchema = z.object({
   name: lineSchema(120),
   /** How many the studio has. */
   quantity: z.number().int().min(0).max(999).default(1),
   note: proseSchema(1000).default(''),
   body: kitBodySchema,
 })
+
+/** Adds what no setup can be computed with to the issues of an item, each at its number. */
+export function refuseFaults({ body }: { body: KitBody }, context: z.RefinementCtx): void {
+  for (const { path, message } of faultsOf(body))
+    context.addIssue({ code: 'custom', path: ['body', 'numbers', ...path], message })
+}
+
+/** What may be written into the kit room: what can be read, and numbers that a setup can be computed with. */
+export const kitInputSchema = kitFieldsSchema.superRefine(refuseFaults)
 export type KitInput = z.infer<typeof kitInputSchema>

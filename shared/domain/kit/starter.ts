@@ -3,6 +3,7 @@ import type { KitInput, ModifierNumbers, PanelNumbers, Stated, SupportNumbers, U
 
 const CLASS = 'typical of this class of head; put in your maker’s figure or a meter reading'
 const GUESS = 'common practice, no source; measure yours'
+const PLATE = 'typical of this class; the plate on yours decides'
 const LIMIT = 'typical; the maker’s label on yours decides'
 
 function assumed(value: number, source: string): Stated {
@@ -20,6 +21,9 @@ type UnitRow = {
   fullRecycleS: number
   massKg: number
   remotePower: boolean
+  mainsWatts?: number
+  sync: string
+  triggers: string
   note: string
 }
 
@@ -39,9 +43,9 @@ function unit(row: UnitRow): KitInput {
         fullRecycleS: assumed(row.fullRecycleS, CLASS),
         massKg: assumed(row.massKg, CLASS),
         remotePower: row.remotePower,
-        mainsWatts: null,
-        sync: '',
-        triggers: '',
+        mainsWatts: row.mainsWatts === undefined ? null : assumed(row.mainsWatts, PLATE),
+        sync: row.sync,
+        triggers: row.triggers,
         metered: [],
       },
     },
@@ -80,33 +84,80 @@ function modifier([name, quantity, shape, widthM, heightM, lossStops, beamDeg, m
   }
 }
 
-function support(
-  name: string,
-  quantity: number,
-  kind: SupportNumbers['kind'],
-  maxHeightM: number,
-  maxLoadKg: number,
-): KitInput {
+type SupportRow = {
+  name: string
+  quantity: number
+  kind: SupportNumbers['kind']
+  maxHeightM: number
+  minHeightM?: number
+  maxLoadKg: number
+  reachM?: number
+  counterReachM?: number
+  armMassKg?: number
+  note?: string
+}
+
+function support(row: SupportRow): KitInput {
+  const known = (value: number | undefined) => (value === undefined ? null : assumed(value, LIMIT))
   return {
-    name,
-    quantity,
-    note: 'Keep to the maker’s limits for height and load; weigh it down before anything goes up.',
+    name: row.name,
+    quantity: row.quantity,
+    note: row.note ?? 'Keep to the maker’s limits for height and load; weigh it down before anything goes up.',
     body: {
       kind: 'support',
       numbers: {
-        kind,
-        maxHeightM: assumed(maxHeightM, LIMIT),
-        maxLoadKg: assumed(maxLoadKg, LIMIT),
-        minHeightM: null,
-        reachM: null,
-        counterReachM: null,
-        armMassKg: null,
+        kind: row.kind,
+        maxHeightM: assumed(row.maxHeightM, LIMIT),
+        maxLoadKg: assumed(row.maxLoadKg, LIMIT),
+        minHeightM: known(row.minHeightM),
+        reachM: known(row.reachM),
+        counterReachM: known(row.counterReachM),
+        armMassKg: known(row.armMassKg),
       },
     },
   }
 }
 
+type LampRow = [
+  name: string,
+  quantity: number,
+  luxAtMetre: number,
+  watts: number,
+  colourK: number,
+  beamDeg: number,
+  minPowerDenominator: number,
+  massKg: number,
+  onMains: boolean,
+  note: string,
+]
+
+function lamp([name, quantity, lux, watts, colourK, beamDeg, minPowerDenominator, massKg, onMains, note]: LampRow) {
+  return {
+    name,
+    quantity,
+    note,
+    body: {
+      kind: 'lamp',
+      numbers: {
+        luxAtMetre: assumed(lux, CLASS),
+        watts: assumed(watts, PLATE),
+        colourK: assumed(colourK, CLASS),
+        beamDeg: assumed(beamDeg, CLASS),
+        minPowerDenominator,
+        massKg: assumed(massKg, CLASS),
+        remotePower: false,
+        onMains,
+      },
+    },
+  } satisfies KitInput
+}
+
 const ON_BATTERIES = 'Guide number at the longest zoom. Pops from four cells.'
+const ORDINARY_SYNC = 'Up to the camera’s sync speed, often 1/200 s; full power is slowest, about 1/300 s (assumed).'
+const FAST_SYNC =
+  'Up to the camera’s sync speed; beyond it only in high-speed sync, with two stops or more less light (assumed).'
+const BY_CELL = 'Sync cable or hot shoe; sees another flash go off (optical cell). Power is set on the head.'
+const BY_RADIO = 'Radio from the camera, in groups; hot shoe; optical cell.'
 const WITH_REFLECTOR = 'Guide number with the standard reflector, which therefore loses nothing here.'
 
 const UNITS: readonly KitInput[] = [
@@ -126,6 +177,8 @@ const UNITS: readonly KitInput[] = [
     fullRecycleS: 4,
     massKg: 0.4,
     remotePower: false,
+    sync: ORDINARY_SYNC,
+    triggers: BY_CELL,
     note: ON_BATTERIES,
   }),
   unit({
@@ -145,6 +198,8 @@ const UNITS: readonly KitInput[] = [
     fullRecycleS: 3.5,
     massKg: 0.55,
     remotePower: true,
+    sync: FAST_SYNC,
+    triggers: BY_RADIO,
     note: ON_BATTERIES,
   }),
   unit({
@@ -157,6 +212,8 @@ const UNITS: readonly KitInput[] = [
     fullRecycleS: 2.1,
     massKg: 0.9,
     remotePower: true,
+    sync: FAST_SYNC,
+    triggers: BY_RADIO,
     note: WITH_REFLECTOR,
   }),
   unit({
@@ -169,6 +226,8 @@ const UNITS: readonly KitInput[] = [
     fullRecycleS: 1.2,
     massKg: 2.1,
     remotePower: true,
+    sync: FAST_SYNC,
+    triggers: BY_RADIO,
     note: WITH_REFLECTOR,
   }),
   unit({
@@ -181,6 +240,9 @@ const UNITS: readonly KitInput[] = [
     fullRecycleS: 1,
     massKg: 2.6,
     remotePower: false,
+    mainsWatts: 1000,
+    sync: ORDINARY_SYNC,
+    triggers: 'Sync cable; optical cell. Power is set on the head.',
     note: `${WITH_REFLECTOR} Runs on mains: the venue’s circuit decides, ask a licensed electrician.`,
   }),
 ]
@@ -250,17 +312,70 @@ const PANELS: readonly KitInput[] = [
   panel('Black panel 1 × 2 m', 2, 'flag', 1, 2, '#1f1c1a', 2),
 ]
 
-const SUPPORTS: readonly KitInput[] = [
-  support('2.4 m stand', 4, 'stand', 2.4, 2.5),
-  support('3.3 m stand', 2, 'stand', 3.3, 6),
-  support('Boom arm', 1, 'boom', 3, 3),
-  support('Floor stand', 2, 'floor stand', 0.6, 4),
-  support('Clamp', 2, 'clamp', 2.5, 1.5),
-  support('Magic arm', 1, 'magic arm', 2.5, 1),
-]
+const SUPPORTS: readonly KitInput[] = (
+  [
+    { name: '2.4 m stand', quantity: 4, kind: 'stand', minHeightM: 0.8, maxHeightM: 2.4, maxLoadKg: 2.5 },
+    { name: '3.3 m stand', quantity: 2, kind: 'stand', minHeightM: 1.1, maxHeightM: 3.3, maxLoadKg: 6 },
+    {
+      name: 'Boom arm',
+      quantity: 1,
+      kind: 'boom',
+      minHeightM: 1,
+      maxHeightM: 3,
+      maxLoadKg: 3,
+      reachM: 1.5,
+      counterReachM: 0.5,
+      armMassKg: 1,
+      note: 'Goes on a stand that carries head, arm and counterweight together. Balance it before it goes up, bag the base, and nobody stands under it. Keep to the makers’ limits.',
+    },
+    { name: 'Floor stand', quantity: 2, kind: 'floor stand', minHeightM: 0.2, maxHeightM: 0.6, maxLoadKg: 4 },
+    {
+      name: 'Floor plate',
+      quantity: 2,
+      kind: 'floor plate',
+      minHeightM: 0.05,
+      maxHeightM: 0.15,
+      maxLoadKg: 3,
+      note: 'Lies where people walk: mark it and tape the cable.',
+    },
+    { name: 'Clamp', quantity: 2, kind: 'clamp', maxHeightM: 2.5, maxLoadKg: 1.5 },
+    { name: 'Magic arm', quantity: 1, kind: 'magic arm', maxHeightM: 2.5, maxLoadKg: 1 },
+    {
+      name: 'Held by hand',
+      quantity: 1,
+      kind: 'hand',
+      minHeightM: 0.3,
+      maxHeightM: 2.2,
+      maxLoadKg: 2,
+      note: 'Somebody holds it: plan a pair of hands for it, and rests.',
+    },
+  ] satisfies SupportRow[]
+).map(support)
+
+const REFLECTOR = 'With the standard reflector.'
+const LAMPS: readonly KitInput[] = (
+  [
+    ['LED lamp 60 W', 1, 5000, 75, 5600, 60, 100, 1.2, false, `${REFLECTOR} About an hour on its battery (assumed).`],
+    ['LED lamp 150 W', 1, 12000, 180, 5600, 60, 100, 2.4, true, REFLECTOR],
+    ['LED panel 30 × 30 cm', 2, 1500, 35, 5600, 110, 100, 1.3, false, ''],
+    [
+      'Tungsten lamp 650 W',
+      1,
+      7000,
+      650,
+      3200,
+      50,
+      1,
+      3,
+      true,
+      'Gets very hot: keep cloth, paper and hands off it. The venue’s circuit decides, ask a licensed electrician.',
+    ],
+    ['Household bulb 9 W', 2, 65, 9, 2700, 200, 1, 0.1, true, 'About 800 lm all round: 800 / 4π is 64 lx at a metre.'],
+  ] satisfies LampRow[]
+).map(lamp)
 
 /**
- * Kit for a studio that has typed none yet: generic heads, modifiers, gels and supports, each number marked as
+ * Kit for a studio that has typed none yet: generic heads, lamps, modifiers, gels, supports and panels, each number marked as
  * published, measured or assumed with its source. Lengths in metres, masses in kg, guide numbers at ISO 100.
  */
-export const STARTER_KIT: readonly KitInput[] = [...UNITS, ...MODIFIERS, ...GELS, ...SUPPORTS, ...PANELS]
+export const STARTER_KIT: readonly KitInput[] = [...UNITS, ...LAMPS, ...MODIFIERS, ...GELS, ...SUPPORTS, ...PANELS]

@@ -11,6 +11,9 @@ type Common = Omit<ComponentProps<'input'>, 'value' | 'onChange' | 'min' | 'max'
   step?: number
   /** Digits after the point that are shown; what was typed is kept as it is. */
   decimals?: number
+  /** Reads and writes the number another way than as a plain one: a length in feet and inches. */
+  read?: (text: string) => number | undefined
+  write?: (value: number) => string
 }
 export type NumberInputProps = Common &
   (
@@ -25,9 +28,6 @@ export function parseTypedNumber(text: string): number | undefined {
   return Number(plain)
 }
 
-function shown(value: number | null, decimals: number): string {
-  return value === null ? '' : String(Number(value.toFixed(decimals)))
-}
 
 /** A number that is taken over on Enter, on leaving, and by the arrow keys. Escape brings the old one back. */
 export function NumberInput(props: NumberInputProps) {
@@ -40,6 +40,8 @@ export function NumberInput(props: NumberInputProps) {
     max = Infinity,
     step = 1,
     decimals = 3,
+    read = parseTypedNumber,
+    write = (number) => String(Number(number.toFixed(decimals))),
     className,
     onBlur,
     onKeyDown,
@@ -60,7 +62,7 @@ export function NumberInput(props: NumberInputProps) {
       setRemark(allowEmpty ? '' : 'A number belongs here; the old one is back.')
       return
     }
-    const typed = parseTypedNumber(text)
+    const typed = read(text)
     if (typed === undefined) {
       setRemark('That is not a number; the old one is back.')
       return
@@ -70,13 +72,13 @@ export function NumberInput(props: NumberInputProps) {
       kept === typed
         ? ''
         : kept === max
-          ? `${shown(max, decimals)} is the most.`
-          : `${shown(min, decimals)} is the least.`,
+          ? `${write(max)} is the most.`
+          : `${write(min)} is the least.`,
     )
     give(kept)
   }
   function nudge(by: number) {
-    const from = (draft === null ? value : parseTypedNumber(draft)) ?? 0
+    const from = (draft === null ? value : read(draft)) ?? 0
     const next = Math.min(max, Math.max(min, Number((from + by).toFixed(6))))
     setDraft(null)
     setRemark('')
@@ -91,7 +93,7 @@ export function NumberInput(props: NumberInputProps) {
         {...useFieldControl()}
         {...rest}
         type="text"
-        value={draft ?? shown(value, decimals)}
+        value={draft ?? (value === null ? '' : write(value))}
         onFocus={(event) => {
           event.currentTarget.select()
           rest.onFocus?.(event)

@@ -10,6 +10,7 @@ import { kitRoutes } from '#server/features/kit/routes.ts'
 import { mailRoutes } from '#server/features/mail/routes.ts'
 import { peopleRoutes } from '#server/features/people/routes.ts'
 import { privateRoutes } from '#server/features/private/routes.ts'
+import { recipesRoutes } from '#server/features/recipes/routes.ts'
 import { shootsRoutes } from '#server/features/shoots/routes.ts'
 import { signOffRoutes } from '#server/features/sign-off/routes.ts'
 import { studiosRoutes } from '#server/features/studios/routes.ts'
@@ -81,6 +82,7 @@ export function createApp(deps: AppDeps): Express {
     peopleRoutes({ auth, invitationsPerMin }),
     shootsRoutes(),
     kitRoutes(),
+    recipesRoutes(),
   )
   api.use(commentsRoutes(), privateRoutes(), uploadsRoutes(uploadsPerMin), signOffRoutes(), versionsRoutes())
   if (letters) api.use(mailRoutes())

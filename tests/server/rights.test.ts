@@ -10,6 +10,7 @@ import {
   type FullWorld,
   SECRETS,
   type Who,
+  RECIPE,
   makeFullWorld,
   pictureForm,
 } from '#tests/support/rights-world.ts'
@@ -143,6 +144,24 @@ const TABLE: readonly Row[] = [
     expected: inStudio(200, 200),
     path: (w) => studio(`/kit/${w.kitId}`)(w),
   },
+  { route: 'GET /api/studios/:studioId/recipes', expected: inStudio(200, 200), path: studio('/recipes') },
+  {
+    route: 'POST /api/studios/:studioId/recipes',
+    expected: inStudio(200, 200),
+    path: studio('/recipes'),
+    body: () => ({ recipe: RECIPE }),
+  },
+  {
+    route: 'PATCH /api/studios/:studioId/recipes/:recipeId',
+    expected: inStudio(200, 200),
+    path: (w) => studio(`/recipes/${w.recipeId}`)(w),
+    body: () => ({ name: 'Quiet morning' }),
+  },
+  {
+    route: 'DELETE /api/studios/:studioId/recipes/:recipeId',
+    expected: inStudio(200, 200),
+    path: (w) => studio(`/recipes/${w.recipeId}`)(w),
+  },
 
   { route: 'GET /api/shoots', expected: signedIn, path: () => '/api/shoots' },
   {
@@ -246,6 +265,7 @@ const TABLE: readonly Row[] = [
   },
 
   { route: 'GET /api/shoots/:shootId/kit', expected: inShoot(anyRole), path: shoot('/kit') },
+  { route: 'GET /api/shoots/:shootId/recipes', expected: inShoot(anyRole), path: shoot('/recipes') },
   { route: 'GET /api/shoots/:shootId/comments', expected: inShoot(anyRole), path: shoot('/comments') },
   {
     route: 'POST /api/shoots/:shootId/comments',

@@ -9,14 +9,17 @@ import { loadKit } from '#server/features/kit/kit-rows.ts'
 import { setPieceCost } from '#server/features/private/set-piece-cost.ts'
 import { setPrivateNote } from '#server/features/private/set-private-note.ts'
 import { setSizes } from '#server/features/private/set-sizes.ts'
+import { keepRecipe } from '#server/features/recipes/keep-recipe.ts'
 import { addDeliverable } from '#server/features/shoots/add-deliverable.ts'
 import { addRoom } from '#server/features/shoots/add-room.ts'
 import { listSignOffs } from '#server/features/sign-off/list-sign-offs.ts'
 import { inviteToStudio } from '#server/features/studios/invite-to-studio.ts'
 import { keepVersion } from '#server/features/versions/keep-version.ts'
+import { toRecipe } from '#shared/domain/recipes/recipe.ts'
 import { deliverableInputSchema, roomInputSchema } from '#shared/domain/shoots/schema.ts'
 import type { TestApp } from '#tests/support/app.ts'
 import { type World, makeWorld } from '#tests/support/factories.ts'
+import { OCTA, light, whole } from '#tests/support/lighting-sample.ts'
 
 export const EVERYBODY = [
   'signed out',
@@ -39,6 +42,11 @@ export const SECRETS = {
   note: 'note-Hb2tL',
 } as const
 
+/** A recipe with one light. */
+export const RECIPE = toRecipe(
+  whole({ lights: [light(1, { purpose: 'main', at: [-1, 2, 1], aim: [0, 1.5, 0], modifier: OCTA })] }),
+)
+
 /** A world with something of everything in it, secrets included. */
 export type FullWorld = World & {
   who: Readonly<Record<Who, Actor | undefined>>
@@ -52,6 +60,7 @@ export type FullWorld = World & {
   commentIds: Readonly<Record<'photographer' | 'stylist' | 'client' | 'crew', string>>
   uploadId: string
   versionId: string
+  recipeId: string
   studioInvitationId: string
 }
 
@@ -108,6 +117,7 @@ export async function makeFullWorld(app: TestApp): Promise<FullWorld> {
   ).send('PUT', `/api/shoots/${shootId}/uploads/${uploadId}`, await pictureForm())
   if (stored.status !== 200) throw new Error(`The picture was not taken: ${stored.text}`)
   const { versions } = await keepVersion(ctx, { shootId, name: 'First idea' })
+  const { recipes } = await keepRecipe(ctx, { studioId, content: RECIPE })
   const { current } = await listSignOffs(ctx, shootId)
   return {
     ...world,
@@ -132,6 +142,7 @@ export async function makeFullWorld(app: TestApp): Promise<FullWorld> {
     commentIds,
     uploadId,
     versionId: versions[0]?.id ?? '',
+    recipeId: recipes[0]?.id ?? '',
     studioInvitationId: invitations[0]?.id ?? '',
   }
 }

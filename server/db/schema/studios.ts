@@ -1,5 +1,5 @@
 import { integer, jsonb, pgTable, primaryKey, text, uuid } from 'drizzle-orm/pg-core'
-import type { StudioId, UserId, KitItemId } from '#shared/ids.ts'
+import type { KitItemId, RecipeId, StudioId, UserId } from '#shared/ids.ts'
 import type { KitInput } from '#shared/domain/kit/schema.ts'
 import type { Minutes } from '#shared/domain/plan/minutes.ts'
 import { STUDIO_ROLES } from '#shared/access/roles.ts'
@@ -47,9 +47,9 @@ export const kitItem = pgTable(
   (table) => [primaryKey({ columns: [table.id, table.version] })],
 )
 
-/** A setup written so that somebody else can rebuild it. */
+/** A setup written so that somebody else can rebuild it; its content is read like a file. */
 export const recipe = pgTable('recipe', {
-  id: uuid('id').primaryKey(),
+  id: uuid('id').$type<RecipeId>().primaryKey(),
   studioId: uuid('studio_id')
     .$type<StudioId>()
     .notNull()

@@ -1,6 +1,7 @@
 import { z } from 'zod'
 import { recipeIdSchema } from '#shared/ids.ts'
 import { lineSchema } from '#shared/domain/text.ts'
+import { LENGTH_UNITS } from '#shared/units/length.ts'
 import { recipeSchema } from '#shared/domain/recipes/schema.ts'
 
 /** Recipes a studio may keep. */
@@ -33,8 +34,6 @@ export type Recipes = z.infer<typeof recipesSchema>
 
 export const PAPERS = ['A4', 'Letter'] as const
 export type Paper = (typeof PAPERS)[number]
-export const LENGTH_UNITS = ['metres', 'feet'] as const
-export type LengthUnit = (typeof LENGTH_UNITS)[number]
 
 /** Pictures a recipe sheet may carry, and the most bytes of one. */
 export const MOST_SHEET_FRAMES = 8

@@ -10,7 +10,7 @@ import { Empty } from '#src/ui/empty.tsx'
 import { ScreenBar } from '#src/ui/screen-bar.tsx'
 import { toast } from '#src/ui/toast.ts'
 import { copyOf, newSetup } from '../new-items.ts'
-import { setupUse } from '../setup-use.ts'
+import { setupUse } from '#shared/domain/lighting/setup-use.ts'
 import { putSetup, removeSetup, restoreSetup } from '../write-setups.ts'
 import { SetupCard } from './setup-card.tsx'
 

@@ -6,7 +6,7 @@ import { count } from '#src/lib/format.ts'
 import { IconButton } from '#src/ui/button.tsx'
 import { Lamp, type LampState } from '#src/ui/lamp.tsx'
 import { Menu } from '#src/ui/menu.tsx'
-import type { SetupUse } from '../setup-use.ts'
+import type { SetupUse } from '#shared/domain/lighting/setup-use.ts'
 import { PlanSketch } from './plan/plan-sketch.tsx'
 
 type SetupCardProps = {

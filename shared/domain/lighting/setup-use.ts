@@ -1,5 +1,5 @@
 import type { Plan, PlannedShot } from '#shared/domain/plan/read-plan.ts'
-import type { Orientation } from '#shared/domain/lighting/frame.ts'
+import type { Orientation } from './frame.ts'
 
 export type SetupUse = {
   shots: PlannedShot[]

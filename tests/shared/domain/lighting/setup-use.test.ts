@@ -3,7 +3,7 @@ import { shotSchema } from '#shared/domain/board/schema.ts'
 import { daySchema, setSchema, shotPlanSchema } from '#shared/domain/plan/schema.ts'
 import { readPlan } from '#shared/domain/plan/read-plan.ts'
 import { briefSchema } from '#shared/domain/shoots/schema.ts'
-import { setupUse, widestOf } from '#src/features/lighting/setup-use.ts'
+import { setupUse, widestOf } from '#shared/domain/lighting/setup-use.ts'
 import { MINUTES, id, whole } from '#tests/support/lighting-sample.ts'
 
 const { setup } = whole({})

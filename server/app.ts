@@ -1,6 +1,7 @@
 import { sql } from 'drizzle-orm'
 import express, { type Express, Router } from 'express'
 import type { Logger } from 'pino'
+import { IMPORT_BYTES_MAX } from '#shared/api/kit.ts'
 import type { Documents } from '#server/adapters/documents.ts'
 import type { Auth } from '#server/auth/auth.ts'
 import { signedIn } from '#server/auth/session.ts'
@@ -73,6 +74,8 @@ export function createApp(deps: AppDeps): Express {
     next()
   })
   api.use(requireOwnOrigin(trustedOrigins))
+  // A whole kit is larger than what other requests may send.
+  api.use('/studios/:studioId/kit/import', express.json({ limit: IMPORT_BYTES_MAX }))
   api.use(express.json({ limit: '1mb' }))
   api.all('/auth/*path', authRoute(auth, publicUrl))
   api.use(withCtx({ db, documents, now, publicUrl, actorOf: (req) => signedIn(auth, req.headers) }))

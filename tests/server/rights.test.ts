@@ -133,6 +133,12 @@ const TABLE: readonly Row[] = [
   { route: 'GET /api/studios/:studioId/kit', expected: inStudio(200, 200), path: studio('/kit') },
   { route: 'POST /api/studios/:studioId/kit', expected: inStudio(200, 200), path: studio('/kit'), body: () => lens },
   {
+    route: 'POST /api/studios/:studioId/kit/import',
+    expected: inStudio(200, 200),
+    path: studio('/kit/import'),
+    body: () => ({ rows: [{ id: '00000000-0000-4000-8000-000000000001', version: null, input: lens }] }),
+  },
+  {
     route: 'PUT /api/studios/:studioId/kit/:kitId',
     expected: inStudio(200, 200),
     path: (w) => studio(`/kit/${w.kitId}`)(w),

@@ -1,10 +1,11 @@
 import { Router } from 'express'
 import { z } from 'zod'
 import { kitItemIdSchema, shootIdSchema, studioIdSchema } from '#shared/ids.ts'
-import { kitListSchema, kitUpdateSchema } from '#shared/api/kit.ts'
+import { kitImportSchema, kitListSchema, kitUpdateSchema } from '#shared/api/kit.ts'
 import { kitInputSchema } from '#shared/domain/kit/schema.ts'
 import { endpoint } from '#server/http/endpoint.ts'
 import { addKitItem } from './add-kit-item.ts'
+import { importKit } from './import-kit.ts'
 import { listKit } from './list-kit.ts'
 import { listShootKit } from './list-shoot-kit.ts'
 import { removeKitItem } from './remove-kit-item.ts'
@@ -26,6 +27,15 @@ export function kitRoutes(): Router {
       body: kitInputSchema,
       response: kitListSchema,
       handle: (ctx, { params, body }) => addKitItem(ctx, { ...params, input: body }),
+    }),
+  )
+  router.post(
+    '/studios/:studioId/kit/import',
+    endpoint({
+      params: inStudio,
+      body: kitImportSchema,
+      response: kitListSchema,
+      handle: (ctx, { params, body }) => importKit(ctx, { ...params, ...body }),
     }),
   )
   router.put(

@@ -1,17 +1,11 @@
 import type { Scene } from './scene.ts'
-import {
-  addEmitter,
-  addMirroredRoom,
-  roomExposure,
-  sent,
-  sheetExposures,
-  sheetFactor,
-  sheetVisible,
-  visibleShare,
-} from './shade.ts'
+import { addEmitter, addMirroredRoom, roomExposure, sent } from './shade.ts'
+import { sheetExposures, sheetFactor, sheetVisible } from './sheet.ts'
 import { FINE, ROUGH, stageOf, type Stage } from './stage.ts'
-import { emptySpot, type Spot, surfaceAt } from './surface.ts'
+import { emptySpot, type Spot } from './spot.ts'
+import { surfaceAt } from './surface.ts'
 import { emptyHit, openness, trace } from './trace.ts'
+import { visibleShare } from './visibility.ts'
 
 /** Name of the layer of the light that is there anyway, for one lx·s of it. */
 export const AMBIENT = 'ambient'

@@ -1,18 +1,15 @@
 import { clamp, ease } from './field.ts'
-import { emptySpot, floorSpot, type Spot, wallSpot } from './surface.ts'
+import { floorSpot, wallSpot } from './room-surface.ts'
+import { emptySpot, type Spot } from './spot.ts'
 import { beamShare, type Stage, type StagedEmitter } from './stage.ts'
-import { isShaded } from './trace.ts'
 
 /** What a spot sends to the lens, as reflectance × exposure: filled in place. */
 export const sent = { r: 0, g: 0, b: 0 }
 
 const DEG = 180 / Math.PI
-/** Emitters that look smaller than this are sampled once. */
-const POINT_SIZE = 0.02
-
 /** Two directions across the way to a ball of light, so that it shows the same face everywhere. */
-const across = { ux: 0, uy: 0, uz: 0, vx: 0, vy: 0, vz: 0 }
-function facing(emitter: StagedEmitter, dx: number, dy: number, dz: number): void {
+export const across = { ux: 0, uy: 0, uz: 0, vx: 0, vy: 0, vz: 0 }
+export function facing(emitter: StagedEmitter, dx: number, dy: number, dz: number): void {
   if (emitter.shape !== 'ball') {
     across.ux = emitter.side[0]
     across.uy = emitter.side[1]
@@ -273,131 +270,4 @@ export function addMirroredRoom(
 export function roomExposure(stage: Stage, emitter: StagedEmitter): number {
   const { areaM2, reflectance } = stage.scene.room
   return (emitter.flux * reflectance) / (areaM2 * (1 - reflectance))
-}
-
-/** Point `index` of an even sequence on a face, half sides (Roberts' R2). */
-const onFace = { u: 0, v: 0 }
-function facePoint(index: number, isRound: boolean): void {
-  const a = (index * 0.7548776662466927 + 0.5) % 1
-  const b = (index * 0.5698402909980532 + 0.5) % 1
-  if (!isRound) {
-    onFace.u = a * 2 - 1
-    onFace.v = b * 2 - 1
-    return
-  }
-  const r = Math.sqrt(a)
-  const turn = b * 2 * Math.PI
-  onFace.u = r * Math.cos(turn)
-  onFace.v = r * Math.sin(turn)
-}
-
-/**
- * Share of an emitter's face that a spot sees, by `rays` rays beginning with number `first` of the sequence, every
- * `stride`th: neighbours take different ones, which are put together afterwards.
- */
-export function visibleShare(
-  stage: Stage,
-  emitter: StagedEmitter,
-  spot: Spot,
-  rays: number,
-  first: number,
-  stride: number,
-): number {
-  const cx = emitter.at[0] - spot.x
-  const cy = emitter.at[1] - spot.y
-  const cz = emitter.at[2] - spot.z
-  const distance = Math.sqrt(cx * cx + cy * cy + cz * cz)
-  if (distance < 1e-4) return 0
-  const size = Math.max(emitter.widthM, emitter.heightM)
-  const slack = size / distance + Math.max(0.05, spot.wrapR)
-  if ((spot.gx * cx + spot.gy * cy + spot.gz * cz) / distance < -slack) return 0
-  if (emitter.shape !== 'ball' && emitter.axis[0] * cx + emitter.axis[1] * cy + emitter.axis[2] * cz >= 0) return 0
-  const px = spot.x + spot.gx * spot.liftM
-  const py = spot.y + spot.gy * spot.liftM
-  const pz = spot.z + spot.gz * spot.liftM
-  facing(emitter, cx / distance, cy / distance, cz / distance)
-  const { ux, uy, uz, vx, vy, vz } = across
-  const halfW = emitter.widthM / 2
-  const halfH = emitter.heightM / 2
-  const many = size / distance < POINT_SIZE ? 1 : rays
-  let open = 0
-  for (let ray = 0; ray < many; ray++) {
-    facePoint(many === 1 ? 0 : first + ray * stride, emitter.shape !== 'rectangle')
-    const u = many === 1 ? 0 : onFace.u * halfW
-    const v = many === 1 ? 0 : onFace.v * halfH
-    const qx = emitter.at[0] + ux * u + vx * v
-    const qy = emitter.at[1] + uy * u + vy * v
-    const qz = emitter.at[2] + uz * u + vz * v
-    if (!isShaded(stage, px, py, pz, qx, qy, qz, -1)) open++
-  }
-  return open / many
-}
-
-/** What each sheet gives back of each light on its two sides, for every sheet: [front, back] exposures, lx·s. */
-export function sheetExposures(stage: Stage): (readonly [number, number])[][] {
-  return stage.sheets.map((sheet, index) =>
-    stage.emitters.map((emitter): readonly [number, number] => {
-      const [nx, , nz] = sheet.normal
-      const side = (emitter.at[0] - sheet.at[0]) * nx + (emitter.at[2] - sheet.at[2]) * nz > 0 ? 1 : -1
-      let sum = 0
-      for (let i = 0; i < 9; i++) {
-        const u = (((i % 3) - 1) / 3) * sheet.widthM
-        const x = sheet.at[0] + sheet.along[0] * u
-        const y = sheet.at[1] + ((Math.floor(i / 3) - 1) / 3) * sheet.heightM
-        const z = sheet.at[2] + sheet.along[2] * u
-        if (isShaded(stage, x, y, z, emitter.at[0], emitter.at[1], emitter.at[2], index)) continue
-        sum += plainExposure(emitter, x, y, z, nx * side, 0, nz * side) / 9
-      }
-      return side > 0 ? [sum, 0] : [0, sum]
-    }),
-  )
-}
-
-/** How much of a matt sheet's light a spot gets: Σ cos·cos·dA/(π·s²) over its face; the sign tells the side. */
-export function sheetFactor(stage: Stage, index: number, spot: Spot): number {
-  const sheet = stage.sheets[index]
-  if (!sheet) return 0
-  const [nx, , nz] = sheet.normal
-  const cells = 4
-  const area = (sheet.widthM * sheet.heightM) / (cells * cells)
-  let sum = 0
-  for (let i = 0; i < cells * cells; i++) {
-    const u = (((i % cells) + 0.5) / cells - 0.5) * sheet.widthM
-    const v = ((Math.floor(i / cells) + 0.5) / cells - 0.5) * sheet.heightM
-    const lx = sheet.at[0] + sheet.along[0] * u - spot.x
-    const ly = sheet.at[1] + v - spot.y
-    const lz = sheet.at[2] + sheet.along[2] * u - spot.z
-    const s2 = lx * lx + ly * ly + lz * lz
-    const facingSheet = spot.nx * lx + spot.ny * ly + spot.nz * lz
-    if (facingSheet <= 0) continue
-    const leaving = -(nx * lx + nz * lz)
-    sum += (facingSheet * leaving * area) / (Math.PI * s2 * s2 + area * s2)
-  }
-  return sum
-}
-
-/** Share of a sheet that a spot sees. */
-export function sheetVisible(
-  stage: Stage,
-  index: number,
-  spot: Spot,
-  rays: number,
-  first: number,
-  stride: number,
-): number {
-  const sheet = stage.sheets[index]
-  if (!sheet) return 0
-  const px = spot.x + spot.gx * spot.liftM
-  const py = spot.y + spot.gy * spot.liftM
-  const pz = spot.z + spot.gz * spot.liftM
-  let open = 0
-  for (let ray = 0; ray < rays; ray++) {
-    facePoint(first + ray * stride, false)
-    const u = (onFace.u * sheet.widthM) / 2
-    const qx = sheet.at[0] + sheet.along[0] * u
-    const qy = sheet.at[1] + (onFace.v * sheet.heightM) / 2
-    const qz = sheet.at[2] + sheet.along[2] * u
-    if (!isShaded(stage, px, py, pz, qx, qy, qz, index)) open++
-  }
-  return open / rays
 }

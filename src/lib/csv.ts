@@ -30,13 +30,24 @@ const DELIMITERS = [
   { sign: '|', words: 'Read with bars between the cells.' },
 ] as const
 
+/** Reads a file somebody chose, without loading one that is too large. */
+export async function readCsvFile(file: Blob, isHead: (cell: string) => boolean): Promise<CsvFile> {
+  if (file.size > MAX_BYTES) return tooLarge
+  try {
+    return readCsv(new Uint8Array(await file.arrayBuffer()), isHead)
+  } catch {
+    return refused(
+      'The file cannot be read: it may have been moved or taken away. Nothing was changed; choose it again.',
+    )
+  }
+}
+
 /**
- * Reads a file somebody chose. The delimiter is the one under which most cells of the first line are heads; lines
+ * Reads the bytes of a file. The delimiter is the one under which most cells of the first line are heads; lines
  * without anything are left out.
  */
 export function readCsv(bytes: Uint8Array, isHead: (cell: string) => boolean): CsvFile {
-  if (bytes.length > MAX_BYTES)
-    return refused(`The file is larger than ${MAX_BYTES / 1e6} MB, which no such table is. Nothing was changed.`)
+  if (bytes.length > MAX_BYTES) return tooLarge
   const decoded = decode(bytes)
   if (decoded === null)
     return refused(
@@ -68,6 +79,7 @@ export function readCsv(bytes: Uint8Array, isHead: (cell: string) => boolean): C
 }
 
 const refused = (message: string): CsvFile => ({ kind: 'refused', message })
+const tooLarge = refused(`The file is larger than ${MAX_BYTES / 1e6} MB, which no such table is. Nothing was changed.`)
 
 function unescape(cell: string): string {
   return ESCAPED.test(cell) ? cell.slice(1) : cell

@@ -12,8 +12,10 @@ export type MeterReading = {
   iso: number
   /** Zoom of the head; null when it has none. */
   zoomMm: number | null
-  /** What is on the head; null: bare. `radiusM` is that of the disc with the area of its face. */
-  modifier: { kitId: KitItemId; name: string; radiusM: number } | null
+  /** What is on the head; null: bare. */
+  modifier: { kitId: KitItemId; name: string } | null
+  /** Radius of the disc with the area of the emitting face, metres; 0: a point. */
+  radiusM?: number
   /** Share of the light on axis that reaches the meter's place, in (0, 1]. */
   beamShare?: number
   /** Stops that gels on the head took while it was read. */
@@ -59,10 +61,14 @@ export function meterFaults(reading: MeterReading, unit: UnitRange): MeterFault[
  * that the number holds at other distances. NaN for what `meterFaults` refuses.
  */
 export function guideNumberOfReading(reading: MeterReading): number {
-  const { fNumber, distanceM, power, iso, modifier, beamShare = 1, gelLossStops = 0 } = reading
-  const radiusM = modifier?.radiusM ?? 0
+  const { fNumber, distanceM, power, iso, radiusM = 0, beamShare = 1, gelLossStops = 0 } = reading
   const disc = distanceM ** 2 / (distanceM ** 2 + radiusM ** 2)
   return (fNumber * distanceM * 2 ** (gelLossStops / 2)) / Math.sqrt((iso / 100) * power * beamShare * disc)
+}
+
+/** Radius of the disc with the same area as a face of this width and height, metres. */
+export function discRadiusM(widthM: number, heightM: number): number {
+  return Math.sqrt((widthM * heightM) / Math.PI)
 }
 
 /** A reading in words: "f/5.6 at 2 m, 1/4, ISO 100, 50 mm, with 90 cm octa, 1 Dec 2026". `when` as it shall read. */

@@ -31,6 +31,7 @@ export const MODIFIER_SHAPES = [
 export const SUPPORT_KINDS = ['stand', 'boom', 'clamp', 'floor stand', 'floor plate', 'hand', 'magic arm'] as const
 export const PANEL_USES = ['panel', 'flag'] as const
 
+const COUNT = 'How many is a whole number from 0 to 999.'
 const FOCAL = 'A zoom setting lies between 10 and 400 mm.'
 const FACE = 'A face is between 0 and 6 m.'
 const PANEL = 'A panel is between 1 cm and 10 m.'
@@ -161,7 +162,7 @@ export type KitKind = (typeof KIT_KINDS)[number]
 export const kitFieldsSchema = z.object({
   name: lineSchema(120),
   /** How many the studio has. */
-  quantity: z.number().int().min(0).max(999).default(1),
+  quantity: z.number().int(COUNT).min(0, COUNT).max(999, COUNT).default(1),
   note: proseSchema(1000).default(''),
   body: kitBodySchema,
 })

@@ -1,4 +1,12 @@
-import type { KitBody, KitInput, KitKind, Provenance, Stated } from '#shared/domain/kit/schema.ts'
+import type {
+  KitBody,
+  KitInput,
+  KitKind,
+  Metered,
+  Provenance,
+  Stated,
+  SupportNumbers,
+} from '#shared/domain/kit/schema.ts'
 
 export const KIND_WORDS: Readonly<Record<KitKind, { one: string; many: string; empty: string }>> = {
   unit: { one: 'Flash unit', many: 'Flash units', empty: 'Heads with their guide number, colour and charge.' },
@@ -17,7 +25,7 @@ export const KIND_WORDS: Readonly<Record<KitKind, { one: string; many: string; e
   support: {
     one: 'Support',
     many: 'Supports',
-    empty: 'Stands, booms and clamps with their height and what they carry.',
+    empty: 'Stands, booms, clamps and floor plates, with their heights and what they carry.',
   },
 }
 
@@ -25,6 +33,17 @@ export const PROVENANCE_WORDS: Readonly<Record<Provenance, string>> = {
   published: 'published',
   measured: 'measured',
   assumed: 'assumed',
+}
+
+/** Supports as people say them. */
+export const SUPPORT_WORDS: Readonly<Record<SupportNumbers['kind'], string>> = {
+  stand: 'stand',
+  boom: 'boom',
+  clamp: 'clamp',
+  'floor stand': 'floor stand',
+  'floor plate': 'floor plate',
+  hand: 'held by hand',
+  'magic arm': 'magic arm',
 }
 
 const assumed = (value: number): Stated => ({ value, from: 'assumed', source: '' })
@@ -123,6 +142,13 @@ export function faceSize(widthM: number, heightM: number): string {
   return widthM === heightM ? `${cm(widthM)} cm` : `${cm(widthM)} × ${cm(heightM)} cm`
 }
 
+const maybe = (label: string, number: Stated | null, show: (value: number) => string, none = '–'): Reading =>
+  number ? stated(label, number, show) : plain(label, none)
+const beam = (number: Stated | null) => maybe('Beam', number, (value) => `${digits(value, 0)}°`, 'unknown')
+const mass = (number: Stated) => stated('Mass', number, (value) => `${digits(value)} kg`)
+const metres = (value: number) => `${digits(value)} m`
+const powers = (denominator: number) => plain('Power', denominator === 1 ? 'full only' : `full to 1/${denominator}`)
+
 /** The numbers of an item in the order people read them. */
 export function readingsOf(body: KitBody): Reading[] {
   switch (body.kind) {
@@ -130,11 +156,24 @@ export function readingsOf(body: KitBody): Reading[] {
       const { numbers } = body
       return [
         stated('Guide number', numbers.guideNumberM, (value) => `${digits(value, 1)} m`),
-        plain('Power', `1/1 to 1/${numbers.minPowerDenominator}`),
+        powers(numbers.minPowerDenominator),
         stated('Colour', numbers.flashColourK, (value) => `${digits(value, 0)} K`),
         stated('Full pops', numbers.fullPops, (value) => digits(value, 0)),
         stated('Recycles in', numbers.fullRecycleS, (value) => `${digits(value, 1)} s`),
-        stated('Mass', numbers.massKg, (value) => `${digits(value)} kg`),
+        maybe('Mains', numbers.mainsWatts, (value) => `${digits(value, 0)} W`, 'battery'),
+        mass(numbers.massKg),
+      ]
+    }
+    case 'lamp': {
+      const { numbers } = body
+      return [
+        stated('At a metre', numbers.luxAtMetre, (value) => `${digits(value, 0)} lx`),
+        stated('Draws', numbers.watts, (value) => `${digits(value, 0)} W`),
+        plain('Runs on', numbers.onMains ? 'mains' : 'battery'),
+        powers(numbers.minPowerDenominator),
+        stated('Colour', numbers.colourK, (value) => `${digits(value, 0)} K`),
+        beam(numbers.beamDeg),
+        mass(numbers.massKg),
       ]
     }
     case 'modifier': {
@@ -143,8 +182,8 @@ export function readingsOf(body: KitBody): Reading[] {
         plain('Shape', numbers.shape),
         plain('Size', numbers.widthM === 0 ? '–' : faceSize(numbers.widthM, numbers.heightM)),
         stated('Takes', numbers.lossStops, (value) => `${digits(value, 1)} stops`),
-        numbers.beamDeg ? stated('Beam', numbers.beamDeg, (value) => `${digits(value, 0)}°`) : plain('Beam', 'unknown'),
-        stated('Mass', numbers.massKg, (value) => `${digits(value)} kg`),
+        beam(numbers.beamDeg),
+        mass(numbers.massKg),
       ]
     }
     case 'gel': {
@@ -158,28 +197,48 @@ export function readingsOf(body: KitBody): Reading[] {
     case 'support': {
       const { numbers } = body
       return [
-        plain('Kind', numbers.kind),
-        stated('Reaches', numbers.maxHeightM, (value) => `${digits(value)} m`),
+        plain('Kind', SUPPORT_WORDS[numbers.kind]),
+        maybe('Lowest', numbers.minHeightM, metres),
+        stated('Goes to', numbers.maxHeightM, metres),
         stated('Carries', numbers.maxLoadKg, (value) => `${digits(value, 1)} kg`),
-      ]
-    }
-    case 'lamp': {
-      const { numbers } = body
-      return [
-        stated('At a metre', numbers.luxAtMetre, (value) => `${digits(value, 0)} lx`),
-        stated('Draws', numbers.watts, (value) => `${digits(value, 0)} W`),
-        stated('Colour', numbers.colourK, (value) => `${digits(value, 0)} K`),
-        numbers.beamDeg ? stated('Beam', numbers.beamDeg, (value) => `${digits(value, 0)}°`) : plain('Beam', 'unknown'),
-        stated('Mass', numbers.massKg, (value) => `${digits(value)} kg`),
+        maybe('Reach', numbers.reachM, metres),
+        maybe('Counterweight at', numbers.counterReachM, metres),
+        maybe('Arm', numbers.armMassKg, (value) => `${digits(value)} kg`),
       ]
     }
     case 'panel': {
       const { numbers } = body
-      return [
-        plain('Use', numbers.use),
-        plain('Size', faceSize(numbers.widthM, numbers.heightM)),
-        stated('Mass', numbers.massKg, (value) => `${digits(value)} kg`),
-      ]
+      return [plain('Use', numbers.use), plain('Size', faceSize(numbers.widthM, numbers.heightM)), mass(numbers.massKg)]
     }
   }
+}
+
+/** What a meter read of a unit, in words: "90 cm octa, 50 mm: guide number 41.2 m". */
+export function meteredWords({ modifierKitId, zoomMm, guideNumberM }: Metered, nameOf: NameOf): string {
+  const on = modifierKitId === null ? 'Bare' : (nameOf(modifierKitId) ?? 'A modifier no longer in the kit')
+  return `${on}${zoomMm === null ? '' : `, ${digits(zoomMm)} mm`}: guide number ${digits(guideNumberM, 1)} m`
+}
+
+/** Name of a modifier in the kit; undefined when it is not there any more. */
+export type NameOf = (kitId: string) => string | undefined
+
+/** What else there is to say of an item, one press away: words first, then what each number rests on. */
+export function detailsOf(body: KitBody, nameOf: NameOf): { label: string; words: string }[] {
+  const details: { label: string; words: string }[] = []
+  const add = (label: string, words: string) => words.trim() !== '' && details.push({ label, words })
+  if (body.kind === 'unit') {
+    const { zoom, sync, triggers, remotePower, metered } = body.numbers
+    add(
+      'Guide number by zoom',
+      zoom.map(({ focalMm, guideNumberM }) => `${digits(focalMm)} mm ${digits(guideNumberM, 1)} m`).join(' · '),
+    )
+    add('Sync', sync)
+    add('Triggers', triggers)
+    add('Power', remotePower ? 'Can be set from the camera.' : 'Is set on the head.')
+    for (const entry of metered) add('Measured', `${meteredWords(entry, nameOf)} (${entry.source})`)
+  }
+  for (const { label, stated: number } of readingsOf(body)) {
+    if (number) add(label, `${PROVENANCE_WORDS[number.from]}${number.source === '' ? '' : `: ${number.source}`}`)
+  }
+  return details
 }

@@ -1,5 +1,5 @@
 import { useMutation, useQueryClient } from '@tanstack/react-query'
-import { type KitItem, kitListSchema } from '#shared/api/kit.ts'
+import { type KitImportRow, type KitItem, kitListSchema } from '#shared/api/kit.ts'
 import type { KitInput } from '#shared/domain/kit/schema.ts'
 import { api } from '#src/lib/api.ts'
 import { kitQueries } from './queries.ts'
@@ -8,6 +8,7 @@ export type KitChange =
   | { kind: 'add'; input: KitInput }
   | { kind: 'update'; item: KitItem; input: KitInput }
   | { kind: 'remove'; item: KitItem }
+  | { kind: 'import'; rows: readonly KitImportRow[] }
 
 function send(studioId: string, change: KitChange) {
   const at = `/studios/${studioId}/kit`
@@ -23,6 +24,8 @@ function send(studioId: string, change: KitChange) {
       })
     case 'remove':
       return api(`${at}/${change.item.id}`, { method: 'DELETE', response })
+    case 'import':
+      return api(`${at}/import`, { method: 'POST', body: { rows: change.rows }, response })
   }
 }
 

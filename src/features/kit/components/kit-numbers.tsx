@@ -1,228 +1,255 @@
-import { type KitBody, MODIFIER_SHAPES, SUPPORT_KINDS } from '#shared/domain/kit/schema.ts'
-import { Checkbox } from '#src/ui/checkbox.tsx'
+import type { KitItem } from '#shared/api/kit.ts'
+import {
+  type GelNumbers,
+  type KitBody,
+  MODIFIER_SHAPES,
+  type ModifierNumbers,
+  PANEL_USES,
+  type PanelNumbers,
+  SUPPORT_KINDS,
+  type SupportNumbers,
+} from '#shared/domain/kit/schema.ts'
 import { Field } from '#src/ui/field.tsx'
-import { Input } from '#src/ui/input.tsx'
 import { NumberInput } from '#src/ui/number-input.tsx'
 import { Select } from '#src/ui/select.tsx'
-import { StatedInput } from './stated-input.tsx'
-import { ZoomTable } from './zoom-table.tsx'
+import { useKitIssue } from '../kit-issues.ts'
+import { SUPPORT_WORDS } from '../kit-words.ts'
+import { DrawnColour, GRID, Size } from './number-fields.tsx'
+import { MaybeStatedInput, StatedInput } from './stated-input.tsx'
+import { LampFields, UnitFields } from './unit-fields.tsx'
 
-export type KitNumbersProps = { body: KitBody; onChange: (body: KitBody) => void }
+export type KitNumbersProps = {
+  body: KitBody
+  /** Modifiers of the kit, which meter readings of a unit name. */
+  modifiers: readonly KitItem[]
+  onChange: (body: KitBody) => void
+}
 
-const GRID = 'grid gap-x-6 gap-y-4 sm:grid-cols-2'
-const POWERS = [1, 2, 4, 8, 16, 32, 64, 128, 256, 512, 1024]
-
-export function KitNumbers({ body, onChange }: KitNumbersProps) {
+/** The numbers of one item, by its kind. */
+export function KitNumbers({ body, modifiers, onChange }: KitNumbersProps) {
   switch (body.kind) {
-    case 'unit': {
-      const { numbers } = body
-      const set = (patch: Partial<typeof numbers>) => onChange({ kind: 'unit', numbers: { ...numbers, ...patch } })
+    case 'unit':
       return (
-        <div className={GRID}>
-          <StatedInput
-            label="Guide number at ISO 100"
-            unit="m"
-            max={500}
-            value={numbers.guideNumberM}
-            onChange={(guideNumberM) => set({ guideNumberM })}
-          />
-          <StatedInput
-            label="Colour of the flash"
-            unit="K"
-            min={2000}
-            max={12000}
-            step={100}
-            value={numbers.flashColourK}
-            onChange={(flashColourK) => set({ flashColourK })}
-          />
-          <StatedInput
-            label="Full pops from one charge"
-            max={5000}
-            step={10}
-            value={numbers.fullPops}
-            onChange={(fullPops) => set({ fullPops })}
-          />
-          <StatedInput
-            label="Ready again after a full pop"
-            unit="s"
-            max={60}
-            step={0.1}
-            value={numbers.fullRecycleS}
-            onChange={(fullRecycleS) => set({ fullRecycleS })}
-          />
-          <StatedInput
-            label="Mass with its power inside"
-            unit="kg"
-            max={60}
-            step={0.1}
-            value={numbers.massKg}
-            onChange={(massKg) => set({ massKg })}
-          />
-          <div className="flex flex-col gap-2">
-            <Field label="Smallest power">
-              <Select
-                options={[...new Set([...POWERS, numbers.minPowerDenominator])]
-                  .sort((a, b) => a - b)
-                  .map((power) => ({ value: String(power), label: `1/${power}` }))}
-                value={String(numbers.minPowerDenominator)}
-                onChange={(power) => set({ minPowerDenominator: Number(power) })}
-              />
-            </Field>
-            <Checkbox checked={numbers.remotePower} onChange={(remotePower) => set({ remotePower })}>
-              Power can be set from the camera
-            </Checkbox>
-          </div>
-          <ZoomTable className="sm:col-span-2" zoom={numbers.zoom} onChange={(zoom) => set({ zoom })} />
-        </div>
+        <UnitFields
+          numbers={body.numbers}
+          modifiers={modifiers}
+          onChange={(patch) => onChange({ kind: 'unit', numbers: { ...body.numbers, ...patch } })}
+        />
       )
-    }
-    case 'modifier': {
-      const { numbers } = body
-      const set = (patch: Partial<typeof numbers>) => onChange({ kind: 'modifier', numbers: { ...numbers, ...patch } })
+    case 'lamp':
       return (
-        <div className={GRID}>
-          <Field label="Shape">
-            <Select
-              options={MODIFIER_SHAPES.map((shape) => ({ value: shape, label: shape }))}
-              value={numbers.shape}
-              onChange={(shape) => set({ shape })}
-            />
-          </Field>
-          <div className="grid grid-cols-2 gap-2">
-            <Field label="Width of the face">
-              <NumberInput
-                unit="m"
-                min={0}
-                max={6}
-                step={0.05}
-                value={numbers.widthM}
-                onChange={(widthM) => set({ widthM })}
-              />
-            </Field>
-            <Field label="Height of the face">
-              <NumberInput
-                unit="m"
-                min={0}
-                max={6}
-                step={0.05}
-                value={numbers.heightM}
-                onChange={(heightM) => set({ heightM })}
-              />
-            </Field>
-          </div>
-          <StatedInput
-            label="Stops it takes, against the bare head"
-            unit="stops"
-            max={12}
-            min={-4}
-            step={0.1}
-            value={numbers.lossStops}
-            onChange={(lossStops) => set({ lossStops })}
-          />
-          <StatedInput
-            label="Mass"
-            unit="kg"
-            max={60}
-            step={0.1}
-            value={numbers.massKg}
-            onChange={(massKg) => set({ massKg })}
-          />
-          <div>
-            <Checkbox
-              checked={numbers.beamDeg !== null}
-              onChange={(known) => set({ beamDeg: known ? { value: 90, from: 'assumed', source: '' } : null })}
-            >
-              The beam’s angle is known
-            </Checkbox>
-            {numbers.beamDeg && (
-              <StatedInput
-                label="Full angle to half the light"
-                unit="°"
-                min={1}
-                max={360}
-                step={5}
-                value={numbers.beamDeg}
-                onChange={(beamDeg) => set({ beamDeg })}
-              />
-            )}
-          </div>
-        </div>
+        <LampFields
+          numbers={body.numbers}
+          onChange={(patch) => onChange({ kind: 'lamp', numbers: { ...body.numbers, ...patch } })}
+        />
       )
-    }
-    case 'gel': {
-      const { numbers } = body
-      const set = (patch: Partial<typeof numbers>) => onChange({ kind: 'gel', numbers: { ...numbers, ...patch } })
+    case 'modifier':
       return (
-        <div className={GRID}>
-          <StatedInput
-            label="Shift; plus is warmer"
-            unit="mired"
-            min={-500}
-            max={500}
-            step={5}
-            value={numbers.miredShift}
-            onChange={(miredShift) => set({ miredShift })}
-          />
-          <StatedInput
-            label="Light it lets through, of 1"
-            min={0.001}
-            max={1}
-            step={0.01}
-            value={numbers.transmission}
-            onChange={(transmission) => set({ transmission })}
-          />
-          <Field label="What the maker prints" hint="Where it differs from the shift computed with.">
-            <NumberInput
-              allowEmpty
-              unit="mired"
-              min={-500}
-              max={500}
-              value={numbers.printedMired}
-              onChange={(printedMired) => set({ printedMired })}
-            />
-          </Field>
-          <Field label="Colour it is drawn with">
-            <Input
-              type="color"
-              className="!h-9 !p-1 max-md:!h-11"
-              value={numbers.colour}
-              onChange={(event) => set({ colour: event.target.value })}
-            />
-          </Field>
-        </div>
+        <ModifierFields
+          numbers={body.numbers}
+          onChange={(patch) => onChange({ kind: 'modifier', numbers: { ...body.numbers, ...patch } })}
+        />
       )
-    }
-    case 'support': {
-      const { numbers } = body
-      const set = (patch: Partial<typeof numbers>) => onChange({ kind: 'support', numbers: { ...numbers, ...patch } })
+    case 'gel':
       return (
-        <div className={GRID}>
-          <Field label="Kind">
-            <Select
-              options={SUPPORT_KINDS.map((kind) => ({ value: kind, label: kind }))}
-              value={numbers.kind}
-              onChange={(kind) => set({ kind })}
-            />
-          </Field>
-          <span className="max-sm:hidden" />
-          <StatedInput
-            label="Reaches"
-            unit="m"
-            max={12}
-            step={0.1}
-            value={numbers.maxHeightM}
-            onChange={(maxHeightM) => set({ maxHeightM })}
-          />
-          <StatedInput
-            label="Carries, as the maker allows"
-            unit="kg"
-            max={200}
-            step={0.5}
-            value={numbers.maxLoadKg}
-            onChange={(maxLoadKg) => set({ maxLoadKg })}
-          />
-        </div>
+        <GelFields
+          numbers={body.numbers}
+          onChange={(patch) => onChange({ kind: 'gel', numbers: { ...body.numbers, ...patch } })}
+        />
       )
-    }
+    case 'support':
+      return (
+        <SupportFields
+          numbers={body.numbers}
+          onChange={(patch) => onChange({ kind: 'support', numbers: { ...body.numbers, ...patch } })}
+        />
+      )
+    case 'panel':
+      return (
+        <PanelFields
+          numbers={body.numbers}
+          onChange={(patch) => onChange({ kind: 'panel', numbers: { ...body.numbers, ...patch } })}
+        />
+      )
   }
+}
+
+type FieldsProps<Numbers> = { numbers: Numbers; onChange: (patch: Partial<Numbers>) => void }
+
+function ModifierFields({ numbers, onChange }: FieldsProps<ModifierNumbers>) {
+  return (
+    <div className={GRID}>
+      <Field label="Shape">
+        <Select
+          options={MODIFIER_SHAPES.map((shape) => ({ value: shape, label: shape }))}
+          value={numbers.shape}
+          onChange={(shape) => onChange({ shape })}
+        />
+      </Field>
+      <Size of="face" widthM={numbers.widthM} heightM={numbers.heightM} onChange={onChange} />
+      <StatedInput
+        name="lossStops"
+        label="Stops it takes, against the bare head"
+        unit="stops"
+        step={0.1}
+        value={numbers.lossStops}
+        onChange={(lossStops) => onChange({ lossStops })}
+      />
+      <StatedInput
+        name="massKg"
+        label="Mass"
+        unit="kg"
+        step={0.1}
+        value={numbers.massKg}
+        onChange={(massKg) => onChange({ massKg })}
+      />
+      <MaybeStatedInput
+        name="beamDeg"
+        label="Full angle to half the light"
+        known="The beam’s angle is known"
+        start={90}
+        unit="°"
+        step={5}
+        value={numbers.beamDeg}
+        onChange={(beamDeg) => onChange({ beamDeg })}
+      />
+    </div>
+  )
+}
+
+function GelFields({ numbers, onChange }: FieldsProps<GelNumbers>) {
+  return (
+    <div className={GRID}>
+      <StatedInput
+        name="miredShift"
+        label="Shift; plus is warmer"
+        unit="mired"
+        step={5}
+        value={numbers.miredShift}
+        onChange={(miredShift) => onChange({ miredShift })}
+      />
+      <StatedInput
+        name="transmission"
+        label="Light it lets through, of 1"
+        step={0.01}
+        value={numbers.transmission}
+        onChange={(transmission) => onChange({ transmission })}
+      />
+      <Field
+        label="What the maker prints"
+        hint="Where it differs from the shift computed with."
+        error={useKitIssue('printedMired')}
+      >
+        <NumberInput
+          allowEmpty
+          unit="mired"
+          value={numbers.printedMired}
+          onChange={(printedMired) => onChange({ printedMired })}
+        />
+      </Field>
+      <DrawnColour value={numbers.colour} onChange={(colour) => onChange({ colour })} />
+    </div>
+  )
+}
+
+function SupportFields({ numbers, onChange }: FieldsProps<SupportNumbers>) {
+  const isBoom = numbers.kind === 'boom'
+  return (
+    <div className={GRID}>
+      <Field label="Kind">
+        <Select
+          options={SUPPORT_KINDS.map((kind) => ({ value: kind, label: SUPPORT_WORDS[kind] }))}
+          value={numbers.kind}
+          onChange={(kind) => onChange({ kind })}
+        />
+      </Field>
+      <span className="max-sm:hidden" />
+      <StatedInput
+        name="maxHeightM"
+        label="Goes up to"
+        unit="m"
+        step={0.1}
+        value={numbers.maxHeightM}
+        onChange={(maxHeightM) => onChange({ maxHeightM })}
+      />
+      <StatedInput
+        name="maxLoadKg"
+        label="Carries, as the maker allows"
+        unit="kg"
+        step={0.5}
+        value={numbers.maxLoadKg}
+        onChange={(maxLoadKg) => onChange({ maxLoadKg })}
+      />
+      <MaybeStatedInput
+        name="minHeightM"
+        label="Goes down to"
+        known="Its lowest height is known"
+        start={0.8}
+        unit="m"
+        step={0.1}
+        value={numbers.minHeightM}
+        onChange={(minHeightM) => onChange({ minHeightM })}
+      />
+      {(isBoom || numbers.reachM) && (
+        <MaybeStatedInput
+          name="reachM"
+          label="The head hangs out by"
+          known="Its reach is known"
+          start={1.5}
+          unit="m"
+          step={0.1}
+          value={numbers.reachM}
+          onChange={(reachM) => onChange({ reachM })}
+        />
+      )}
+      {(isBoom || numbers.counterReachM) && (
+        <MaybeStatedInput
+          name="counterReachM"
+          label="The counterweight sits at"
+          known="Where its counterweight sits is known"
+          start={0.5}
+          unit="m"
+          step={0.1}
+          value={numbers.counterReachM}
+          onChange={(counterReachM) => onChange({ counterReachM })}
+        />
+      )}
+      {(isBoom || numbers.armMassKg) && (
+        <MaybeStatedInput
+          name="armMassKg"
+          label="Mass of the arm"
+          known="The mass of its arm is known"
+          start={1}
+          unit="kg"
+          step={0.1}
+          value={numbers.armMassKg}
+          onChange={(armMassKg) => onChange({ armMassKg })}
+        />
+      )}
+    </div>
+  )
+}
+
+function PanelFields({ numbers, onChange }: FieldsProps<PanelNumbers>) {
+  return (
+    <div className={GRID}>
+      <Field label="Use" hint="A panel gives light back, a flag keeps it off.">
+        <Select
+          options={PANEL_USES.map((use) => ({ value: use, label: use }))}
+          value={numbers.use}
+          onChange={(use) => onChange({ use })}
+        />
+      </Field>
+      <Size of="panel" widthM={numbers.widthM} heightM={numbers.heightM} onChange={onChange} />
+      <DrawnColour value={numbers.colour} onChange={(colour) => onChange({ colour })} />
+      <StatedInput
+        name="massKg"
+        label="Mass"
+        unit="kg"
+        step={0.1}
+        value={numbers.massKg}
+        onChange={(massKg) => onChange({ massKg })}
+      />
+    </div>
+  )
 }

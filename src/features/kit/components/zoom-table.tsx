@@ -1,45 +1,28 @@
 import { X } from 'lucide-react'
 import type { UnitNumbers } from '#shared/domain/kit/schema.ts'
-import { cn } from '#src/lib/cn.ts'
 import { Button, IconButton } from '#src/ui/button.tsx'
+import { Field } from '#src/ui/field.tsx'
 import { NumberInput } from '#src/ui/number-input.tsx'
+import { useKitIssue } from '../kit-issues.ts'
 
-export type ZoomTableProps = {
-  zoom: UnitNumbers['zoom']
-  onChange: (zoom: UnitNumbers['zoom']) => void
-  className?: string
-}
+type ZoomStep = UnitNumbers['zoom'][number]
+export type ZoomTableProps = { zoom: UnitNumbers['zoom']; onChange: (zoom: UnitNumbers['zoom']) => void }
 
 /** Guide numbers by zoom setting, as the maker prints them. */
-export function ZoomTable({ zoom, onChange, className }: ZoomTableProps) {
+export function ZoomTable({ zoom, onChange }: ZoomTableProps) {
   const last = zoom[zoom.length - 1]
   return (
-    <fieldset className={cn('min-w-0', className)}>
+    <fieldset className="min-w-0">
       <legend className="label-small mb-1">Guide number by zoom, as the maker prints it</legend>
       <ul className="flex flex-col gap-1.5">
         {zoom.map((step, index) => (
-          <li key={index} className="flex items-start gap-2">
-            <NumberInput
-              aria-label={`Zoom setting ${index + 1}`}
-              className="w-28"
-              unit="mm"
-              min={10}
-              max={400}
-              value={step.focalMm}
-              onChange={(focalMm) => onChange(zoom.with(index, { ...step, focalMm }))}
+          <li key={index}>
+            <ZoomRow
+              index={index}
+              step={step}
+              onChange={(next) => onChange(zoom.with(index, next))}
+              onRemove={() => onChange(zoom.toSpliced(index, 1))}
             />
-            <NumberInput
-              aria-label={`Guide number at ${step.focalMm} mm`}
-              className="w-28"
-              unit="m"
-              min={0.1}
-              max={500}
-              value={step.guideNumberM}
-              onChange={(guideNumberM) => onChange(zoom.with(index, { ...step, guideNumberM }))}
-            />
-            <IconButton label={`Remove ${step.focalMm} mm`} onClick={() => onChange(zoom.toSpliced(index, 1))}>
-              <X size={15} aria-hidden />
-            </IconButton>
           </li>
         ))}
       </ul>
@@ -57,5 +40,37 @@ export function ZoomTable({ zoom, onChange, className }: ZoomTableProps) {
         Add a zoom setting
       </Button>
     </fieldset>
+  )
+}
+
+type ZoomRowProps = { index: number; step: ZoomStep; onChange: (step: ZoomStep) => void; onRemove: () => void }
+
+function ZoomRow({ index, step, onChange, onRemove }: ZoomRowProps) {
+  return (
+    <div className="flex items-start gap-2">
+      <Field
+        label={`Zoom setting ${index + 1}`}
+        hideLabel
+        className="w-28"
+        error={useKitIssue(`zoom.${index}.focalMm`)}
+      >
+        <NumberInput unit="mm" value={step.focalMm} onChange={(focalMm) => onChange({ ...step, focalMm })} />
+      </Field>
+      <Field
+        label={`Guide number at ${step.focalMm} mm`}
+        hideLabel
+        className="w-28"
+        error={useKitIssue(`zoom.${index}.guideNumberM`)}
+      >
+        <NumberInput
+          unit="m"
+          value={step.guideNumberM}
+          onChange={(guideNumberM) => onChange({ ...step, guideNumberM })}
+        />
+      </Field>
+      <IconButton label={`Remove ${step.focalMm} mm`} onClick={onRemove}>
+        <X size={15} aria-hidden />
+      </IconButton>
+    </div>
   )
 }

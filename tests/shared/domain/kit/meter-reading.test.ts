@@ -3,6 +3,7 @@ import { describe, expect, it } from 'vitest'
 import { kitItemIdSchema } from '#shared/ids.ts'
 import {
   type MeterReading,
+  discRadiusM,
   findMetered,
   guideNumberOfReading,
   meterFaults,
@@ -15,7 +16,7 @@ import { meteredSchema, unitNumbersSchema } from '#shared/domain/kit/schema.ts'
 import { discFactor, fNumberOfExposure, luminousExposure } from '#shared/domain/lighting/exposure.ts'
 import { id, unit } from '#tests/support/lighting-sample.ts'
 
-const OCTA = { kitId: kitItemIdSchema.parse(id(911)), name: '90 cm octa', radiusM: 0.45 }
+const OCTA = { kitId: kitItemIdSchema.parse(id(911)), name: '90 cm octa' }
 const bare = (more: Partial<MeterReading> = {}): MeterReading => ({
   fNumber: 4,
   distanceM: 5,
@@ -45,7 +46,7 @@ describe('guideNumberOfReading', () => {
 
   it('undoes the size of the face: a disc 1 m wide from 2.5 m gives .9615 of a point', () => {
     // d²/(d² + r²), IES definitions 9.1.1 (computations.md, section 5).
-    const reading = bare({ fNumber: 8, distanceM: 2.5, modifier: { ...OCTA, radiusM: 0.5 } })
+    const reading = bare({ fNumber: 8, distanceM: 2.5, radiusM: 0.5, modifier: OCTA })
     expect(guideNumberOfReading(reading)).toBeCloseTo(20 / Math.sqrt(0.961538), 4)
   })
 
@@ -62,11 +63,19 @@ describe('guideNumberOfReading', () => {
           const exposure =
             luminousExposure(guideNumberM * Math.sqrt(power), distanceM) * discFactor(distanceM, radiusM) * beamShare
           const fNumber = fNumberOfExposure(exposure, iso)
-          const reading = bare({ fNumber, distanceM, power, iso, modifier: { ...OCTA, radiusM }, beamShare })
+          const reading = bare({ fNumber, distanceM, power, iso, modifier: OCTA, radiusM, beamShare })
           expect(guideNumberOfReading(reading) / guideNumberM).toBeCloseTo(1, 9)
         },
       ),
     )
+  })
+})
+
+describe('discRadiusM', () => {
+  it('keeps the area: a face of 1 × 1 m is a disc of 0.564 m', () => {
+    // Closed form: √(1/π).
+    expect(discRadiusM(1, 1)).toBeCloseTo(0.5642, 4)
+    expect(discRadiusM(0, 0)).toBe(0)
   })
 })
 

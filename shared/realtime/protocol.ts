@@ -87,8 +87,8 @@ export type Presence = {
   selected?: string[]
   /** Boxes being dragged, by id, wall units. */
   dragging?: Record<string, [number, number, number, number]>
-  /** A light, place or prop being dragged in a plan drawing: id → [x, z] in metres. */
-  moving?: Record<string, [number, number]>
+  /** A part of a setup being dragged in its drawings: id → [x, y, z] in metres. */
+  moving?: Record<string, [number, number, number]>
 }
 
 export const LIMITS = {

@@ -16,7 +16,7 @@ import {
   sitterPlaceSchema,
 } from '#shared/domain/lighting/schema.ts'
 import { fNumberOfThirds } from '#shared/domain/lighting/stops.ts'
-import { appendKey } from '#shared/realtime/order-keys.ts'
+import { appendKey, keyBetween } from '#shared/realtime/order-keys.ts'
 import { newId } from '#src/lib/new-id.ts'
 
 export type NewLight = {
@@ -115,6 +115,17 @@ export function duplicateLight(whole: WholeSetup, id: LightId, random: () => num
       random,
     ),
   }
+}
+
+/** The key that brings a light one place earlier (−1) or later (1) among the others; null at the end of the row. */
+export function shiftedRank(lights: readonly Light[], id: LightId, by: -1 | 1, random: () => number): string | null {
+  const index = lights.findIndex((light) => light.id === id)
+  const near = lights[index + by]
+  if (index < 0 || !near) return null
+  const far = lights[index + 2 * by]?.rank ?? null
+  const [before, after] = by < 0 ? [far, near.rank] : [near.rank, far]
+  // Two lights that got the same key at the same time lie beside each other; behind both is good enough.
+  return keyBetween(before, after === before ? null : after, random)
 }
 
 const PROPS = {

@@ -1,7 +1,8 @@
 import type { WholeSetup } from '#shared/domain/plan/read-plan.ts'
 import type { Light, Point, Prop, SitterPlace } from '#shared/domain/lighting/schema.ts'
 import { distanceBetween, facePoint } from '#shared/domain/lighting/geometry.ts'
-import { metresLabel, purposeWord } from '#shared/domain/lighting/words.ts'
+import { purposeWord } from '#shared/domain/lighting/words.ts'
+import { type LengthUnit, lengthLabel } from '#src/lib/length-unit.ts'
 
 /** What a hand can move in the drawings of a setup. */
 export type Part =
@@ -25,6 +26,19 @@ export function partKey(part: Part): string {
     case 'camera':
       return `${part.setupId}:camera`
   }
+}
+
+/** Everything of a setup that can be moved. */
+export function partsOf(whole: WholeSetup): Part[] {
+  return [
+    { kind: 'camera', setupId: whole.setup.id },
+    ...whole.places.map((place): Part => ({ kind: 'place', place })),
+    ...whole.props.map((prop): Part => ({ kind: 'prop', prop })),
+    ...whole.lights.flatMap((light): Part[] => [
+      { kind: 'light', light },
+      { kind: 'aim', light },
+    ]),
+  ]
 }
 
 /** Where a part stands, metres; a sitter's height is that of the eyes. */
@@ -83,18 +97,37 @@ export function withMoves(whole: WholeSetup, moves: Moves): WholeSetup {
   }
 }
 
-/** To the nearest five centimetres, within the drawing's limits. */
-export function snap(metres: number, min = -50, max = 50): number {
-  return Math.min(max, Math.max(min, Math.round(metres * 20) / 20 + 0))
+export type DrawingKind = 'plan' | 'side'
+
+/** The numbers of a point that a drawing shows and that a hand in it changes; the others stay as they are written. */
+const AXES: Readonly<Record<DrawingKind, readonly (0 | 1 | 2)[]>> = { plan: [0, 2], side: [1, 2] }
+
+/** A written point with the numbers that a hand in this drawing has changed. */
+export function moved(written: Point, at: Point, drawing: DrawingKind): Point {
+  const next: Point = [...written]
+  for (const axis of AXES[drawing]) next[axis] = at[axis]
+  return next
+}
+
+/** How low and how high a part may be, metres: eyes of sitters, everything else. */
+export function heightLimits(part: Part): { min: number; max: number } {
+  return part.kind === 'place' ? { min: 0.3, max: 2.4 } : { min: 0, max: 8 }
+}
+
+/** To the nearest point of a grid, five centimetres by itself, within limits. */
+export function snap(metres: number, { min = -50, max = 50, gridM = 0.05 } = {}): number {
+  // Rounded again, so that a twentieth is written as one.
+  const nearest = Number((Math.round(metres / gridM) * gridM).toFixed(4))
+  return Math.min(max, Math.max(min, nearest)) + 0
 }
 
 /** A point's place as told aloud: "1.2 m left, 1.1 m towards the camera, 1.6 m from the sitter". */
-export function placeWords(point: Point, whole: WholeSetup): string {
+export function placeWords(point: Point, whole: WholeSetup, unit: LengthUnit = 'm'): string {
   const [x, , z] = point
   const parts: string[] = []
-  if (Math.abs(x) >= 0.05) parts.push(`${metresLabel(Math.abs(x))} ${x < 0 ? 'left' : 'right'}`)
+  if (Math.abs(x) >= 0.05) parts.push(`${lengthLabel(Math.abs(x), unit)} ${x < 0 ? 'left' : 'right'}`)
   if (Math.abs(z) >= 0.05)
-    parts.push(`${metresLabel(Math.abs(z))} ${z > 0 ? 'towards the camera' : 'behind the sitter’s mark'}`)
+    parts.push(`${lengthLabel(Math.abs(z), unit)} ${z > 0 ? 'towards the camera' : 'behind the sitter’s mark'}`)
   if (parts.length === 0) parts.push('on the sitter’s mark')
-  return [...parts, `${metresLabel(distanceBetween(point, facePoint(whole)))} from the sitter`].join(', ')
+  return [...parts, `${lengthLabel(distanceBetween(point, facePoint(whole)), unit)} from the sitter`].join(', ')
 }

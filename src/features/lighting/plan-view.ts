@@ -1,7 +1,8 @@
 import { ownColourK } from '#shared/domain/lighting/light-source.ts'
 import type { WholeSetup } from '#shared/domain/plan/read-plan.ts'
-import type { Light } from '#shared/domain/lighting/schema.ts'
+import type { Light, Point } from '#shared/domain/lighting/schema.ts'
 import { shifted, stackGels } from '#shared/domain/lighting/gel.ts'
+import { type BoomForm, type Flat, boomForm } from './light-form.ts'
 
 /** How a drawing lies on the screen: CSS px per metre and where the origin is. */
 export type PlanView = { pxPerM: number; originX: number; originZ: number; width: number; height: number }
@@ -9,24 +10,47 @@ export type PlanView = { pxPerM: number; originX: number; originZ: number; width
 export const toX = (view: PlanView, xM: number) => view.originX + xM * view.pxPerM
 export const toZ = (view: PlanView, zM: number) => view.originZ + zM * view.pxPerM
 
+/** Where a point lies on the screen, CSS px. */
+export type Project = (point: Point) => Flat
+
+export const projectPlan =
+  (view: PlanView): Project =>
+  ([x, , z]) => [toX(view, x), toZ(view, z)]
+
+/** A drawing from the side, wall at the left: CSS px per metre, and where the sitter's mark is. */
+export type SideView = { pxPerM: number; originX: number; floorY: number; width: number; height: number }
+
+export const projectSide =
+  (view: SideView): Project =>
+  ([, y, z]) => [view.originX + z * view.pxPerM, view.floorY - y * view.pxPerM]
+
 type Extent = { minX: number; maxX: number; minZ: number; maxZ: number }
+
+/** A wall at the side or in front that is no further away than this is in the plan as it is fitted, metres. */
+const NEAR_WALL_M = 3.2
+
+const feetOf = (boom: BoomForm | null): Point[] => (boom ? [boom.top, boom.counter] : [])
 
 /** What has to be seen of a setup, metres; a wide wall is cut. */
 function extentOf(whole: WholeSetup): Extent {
-  const { camera, background } = whole.setup
+  const { camera, background, walled } = whole.setup
   const points: [number, number][] = [
     [0, 0],
     [camera.at[0], camera.at[2]],
-    ...whole.lights.map((light): [number, number] => [light.at[0], light.at[2]]),
+    ...whole.lights.flatMap((light): [number, number][] => [
+      [light.at[0], light.at[2]],
+      ...feetOf(boomForm(light, whole)).map(([x, , z]): [number, number] => [x, z]),
+    ]),
     ...whole.places.map((place): [number, number] => [place.at[0], place.at[1]]),
     ...whole.props.map((prop): [number, number] => [prop.at[0], prop.at[2]]),
   ]
   const xs = points.map(([x]) => x)
   const zs = points.map(([, z]) => z)
   const wallHalf = Math.min(background.widthM / 2, 2.2)
+  const near = (metres: number | undefined) => (metres === undefined || metres > NEAR_WALL_M ? 0 : metres + 0.1)
   return {
-    minX: Math.min(...xs, -wallHalf, -1.6),
-    maxX: Math.max(...xs, wallHalf, 1.6),
+    minX: Math.min(...xs, -wallHalf, -1.6, -near(walled?.leftM)),
+    maxX: Math.max(...xs, wallHalf, 1.6, near(walled?.rightM)),
     minZ: Math.min(...zs, background.zM),
     maxZ: Math.max(...zs),
   }
@@ -49,6 +73,30 @@ export function fitPlan(whole: WholeSetup, width: number, height: number, margin
     width,
     height,
   }
+}
+
+/** The largest scale at which everything is seen from the side. */
+export function fitSide(whole: WholeSetup, width: number, height: number): SideView {
+  const { camera, background } = whole.setup
+  const booms = whole.lights.flatMap((light) => feetOf(boomForm(light, whole)))
+  const zs = [
+    camera.at[2] + 0.4,
+    0.6,
+    ...whole.lights.map((light) => light.at[2] + 0.4),
+    ...whole.props.map((prop) => prop.at[2] + 0.3),
+    ...booms.map(([, , z]) => z + 0.2),
+  ]
+  const tops = [
+    camera.at[1] + 0.3,
+    Math.min(background.heightM, 3.2),
+    2,
+    ...whole.lights.map((light) => light.at[1] + (light.modifier?.numbers.heightM ?? 0.2) / 2 + 0.1),
+    ...whole.props.map((prop) => prop.at[1] + prop.heightM / 2),
+  ]
+  const minZ = Math.min(background.zM, ...whole.lights.map((light) => light.at[2]), ...booms.map(([, , z]) => z)) - 0.3
+  const across = Math.max(...zs) - minZ
+  const pxPerM = Math.max(8, Math.min(80, (width - 40) / across, (height - 34) / Math.max(...tops)))
+  return { pxPerM, originX: (width - across * pxPerM) / 2 - minZ * pxPerM, floorY: height - 18, width, height }
 }
 
 /** Tint of a light's beam in a drawing: drawing blue when neutral, amber when warm, a clear blue when cool. */

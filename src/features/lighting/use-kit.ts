@@ -3,7 +3,13 @@ import { useMemo } from 'react'
 import type { KitItemId } from '#shared/ids.ts'
 import type { KitItem } from '#shared/api/kit.ts'
 import type { PanelNumbers } from '#shared/domain/kit/schema.ts'
-import type { LightGel, LightModifier, LightSupport, LightUnit } from '#shared/domain/lighting/schema.ts'
+import {
+  type LightGel,
+  type LightModifier,
+  type LightSupport,
+  type LightUnit,
+  isLamp,
+} from '#shared/domain/lighting/schema.ts'
 import { useShoot } from '#src/realtime/shoot-realtime.tsx'
 import { lightingQueries } from './queries.ts'
 
@@ -20,6 +26,11 @@ export type Kit = {
   /** Newest version in the kit room by id; unknown ids are no longer there. */
   versions: ReadonlyMap<string, number>
   state: 'there' | 'coming' | 'not there'
+}
+
+/** A unit in a list: lamps that burn all the time say so. */
+export function unitWords(unit: LightUnit): string {
+  return isLamp(unit.numbers) ? `${unit.name} · lamp` : unit.name
 }
 
 function sortKit(kit: readonly KitItem[]): Omit<Kit, 'state'> {

@@ -1,11 +1,23 @@
 import { type KeyboardEvent, type PointerEvent, useEffect, useRef, useState } from 'react'
 import type { WholeSetup } from '#shared/domain/plan/read-plan.ts'
 import type { Point } from '#shared/domain/lighting/schema.ts'
+import { type LengthUnit, METRES_PER_INCH, lengthLabel, useLengthUnit } from '#src/lib/length-unit.ts'
 import { useSetPresence } from '#src/realtime/use-presence.ts'
-import { type Part, partKey, partName, placeWords, pointOf, snap } from './parts.ts'
+import {
+  type DrawingKind,
+  type Part,
+  heightLimits,
+  moved,
+  partKey,
+  partName,
+  placeWords,
+  pointOf,
+  snap,
+} from './parts.ts'
+import { FINE_M, type Guide, gridM, snapPoint } from './snapping.ts'
 
 /** How a drawing turns a hand's way into metres. `plan`: x and z; `side`: z and the height. */
-export type Drawing = { kind: 'plan' | 'side'; pxPerM: number }
+export type Drawing = { kind: DrawingKind; pxPerM: number }
 
 export type Held = {
   part: Part
@@ -13,11 +25,17 @@ export type Held = {
   from: Point
   at: Point
   by: 'pointer' | 'keyboard'
-  drawing: Drawing['kind']
+  drawing: DrawingKind
+  guides: readonly Guide[]
 }
 
-const STEP_M = 0.1
-const LARGE_STEP_M = 0.5
+/** A press of an arrow key, alone, with Shift and with Alt: about as far in either unit. */
+const STEPS_M = {
+  m: { normal: 0.1, large: 0.5, fine: FINE_M },
+  ft: { normal: 4 * METRES_PER_INCH, large: 18 * METRES_PER_INCH, fine: METRES_PER_INCH / 2 },
+} as const
+/** A finger or pointer that is nearer than this to a line is meant to be on it, CSS px. */
+const REACH_PX = 8
 /** A press that moves less is a choice, not a drag, CSS px. */
 const SLOP_PX = 3
 
@@ -26,7 +44,8 @@ type MovingInput = {
   mayWrite: boolean
   nameOf: (part: Part) => string
   onChoose: (part: Part) => void
-  onDrop: (part: Part, at: Point) => void
+  /** Where a hand in this drawing has put a part; what the drawing does not show of the point is not the hand's. */
+  onDrop: (part: Part, at: Point, drawing: DrawingKind) => void
 }
 
 export type Moving = {
@@ -47,38 +66,34 @@ export type PartHandlers = {
 
 type Grip = { pointerId: number; x: number; y: number; moved: boolean }
 
-function clampHeight(metres: number): number {
-  return snap(metres, 0, 8)
-}
-
-/** Where a part comes to when a hand went this far, CSS px. */
+/** Where a hand is that went this far, CSS px. */
 function dragged(from: Point, dx: number, dy: number, drawing: Drawing): Point {
   const across = dx / drawing.pxPerM
   const down = dy / drawing.pxPerM
   return drawing.kind === 'plan'
-    ? [snap(from[0] + across), from[1], snap(from[2] + down)]
-    : [from[0], clampHeight(from[1] - down), snap(from[2] + across)]
+    ? [from[0] + across, from[1], from[2] + down]
+    : [from[0], from[1] - down, from[2] + across]
 }
 
-function stepped(at: Point, key: string, step: number, drawing: Drawing['kind']): Point | null {
-  const by = (dx: number, dUp: number, dz: number): Point => [
-    snap(at[0] + dx),
-    clampHeight(at[1] + dUp),
-    snap(at[2] + dz),
-  ]
-  switch (key) {
-    case 'ArrowLeft':
-      return drawing === 'plan' ? by(-step, 0, 0) : by(0, 0, -step)
-    case 'ArrowRight':
-      return drawing === 'plan' ? by(step, 0, 0) : by(0, 0, step)
-    case 'ArrowUp':
-      return drawing === 'plan' ? by(0, 0, -step) : by(0, step, 0)
-    case 'ArrowDown':
-      return drawing === 'plan' ? by(0, 0, step) : by(0, -step, 0)
-    default:
-      return null
-  }
+/** One step of an arrow key, [to the right, down] in the drawing. */
+const ARROWS: Readonly<Record<string, readonly [number, number]>> = {
+  ArrowLeft: [-1, 0],
+  ArrowRight: [1, 0],
+  ArrowUp: [0, -1],
+  ArrowDown: [0, 1],
 }
+
+function stepped({ part, at, drawing }: Held, key: string, stepM: number): Point | null {
+  const arrow = ARROWS[key]
+  if (!arrow) return null
+  const to = dragged(at, arrow[0] * stepM, arrow[1] * stepM, { kind: drawing, pxPerM: 1 })
+  // To a tenth of a millimetre: steps stay steps, wherever they begin.
+  const exact = { gridM: 0.0001 }
+  return moved(at, [snap(to[0], exact), snap(to[1], { ...exact, ...heightLimits(part) }), snap(to[2], exact)], drawing)
+}
+
+const isFreeKey = (event: { altKey: boolean; ctrlKey: boolean; metaKey: boolean }) =>
+  event.altKey || event.ctrlKey || event.metaKey
 
 /**
  * Dragging parts of a setup by pointer, touch or keyboard. While something is held the document is left alone: the
@@ -86,6 +101,7 @@ function stepped(at: Point, key: string, step: number, drawing: Drawing['kind'])
  */
 export function useMoving({ whole, mayWrite, nameOf, onChoose, onDrop }: MovingInput): Moving {
   const setPresence = useSetPresence()
+  const unit = useLengthUnit()
   const [held, setHeld] = useState<Held | null>(null)
   const [said, setSaid] = useState('')
   const grip = useRef<Grip | null>(null)
@@ -94,7 +110,7 @@ export function useMoving({ whole, mayWrite, nameOf, onChoose, onDrop }: MovingI
 
   function hold(next: Held) {
     setHeld(next)
-    setPresence({ moving: { [next.key]: [next.at[0], next.at[2]] } })
+    setPresence({ moving: { [next.key]: next.at } })
   }
   function letGo() {
     grip.current = null
@@ -104,8 +120,8 @@ export function useMoving({ whole, mayWrite, nameOf, onChoose, onDrop }: MovingI
   function drop(current: Held) {
     letGo()
     const unmoved = current.at.every((value, index) => value === current.from[index])
-    setSaid(`${nameOf(current.part)} put down, ${placeWords(current.at, whole)}`)
-    if (!unmoved) onDrop(current.part, current.at)
+    setSaid(`${nameOf(current.part)} put down, ${placeWords(current.at, whole, unit)}`)
+    if (!unmoved) onDrop(current.part, current.at, current.drawing)
   }
   function cancel(current: Held) {
     letGo()
@@ -134,9 +150,17 @@ export function useMoving({ whole, mayWrite, nameOf, onChoose, onDrop }: MovingI
         if (!own.moved && Math.hypot(dx, dy) < SLOP_PX) return
         own.moved = true
         const from = mine?.from ?? pointOf(part, whole)
-        const at = dragged(from, dx, dy, drawing)
+        const { at, guides } = snapPoint({
+          part,
+          raw: dragged(from, dx, dy, drawing),
+          drawing: drawing.kind,
+          whole,
+          gridM: gridM(unit),
+          reachM: REACH_PX / drawing.pxPerM,
+          isFree: isFreeKey(event),
+        })
         if (mine && at.every((value, index) => value === mine.at[index])) return
-        hold({ part, key, from, at, by: 'pointer', drawing: drawing.kind })
+        hold({ part, key, from, at, by: 'pointer', drawing: drawing.kind, guides })
       },
       onPointerUp(event) {
         if (grip.current?.pointerId !== event.pointerId) return
@@ -164,19 +188,20 @@ export function useMoving({ whole, mayWrite, nameOf, onChoose, onDrop }: MovingI
             return
           }
           const at = pointOf(part, whole)
-          hold({ part, key, from: at, at, by: 'keyboard', drawing: drawing.kind })
+          hold({ part, key, from: at, at, by: 'keyboard', drawing: drawing.kind, guides: [] })
           setSaid(
-            `${nameOf(part)} picked up. Arrow keys move it, with Shift further; Enter puts it down, Escape takes it back.`,
+            `${nameOf(part)} picked up. Arrow keys move it, with Shift further, with Alt a little; Enter puts it down, Escape takes it back.`,
           )
           return
         }
         if (!mine) return
-        const at = stepped(mine.at, event.key, event.shiftKey ? LARGE_STEP_M : STEP_M, drawing.kind)
+        const steps = STEPS_M[unit]
+        const at = stepped(mine, event.key, event.shiftKey ? steps.large : isFreeKey(event) ? steps.fine : steps.normal)
         if (!at) return
         event.preventDefault()
         hold({ ...mine, at })
         setSaid(
-          `${nameOf(part)}, ${drawing.kind === 'side' ? `${at[1].toFixed(1)} m up, ` : ''}${placeWords(at, whole)}`,
+          `${nameOf(part)}, ${drawing.kind === 'side' ? `${lengthLabel(at[1], unit)} up, ` : ''}${placeWords(at, whole, unit)}`,
         )
       },
       onBlur() {
@@ -189,6 +214,7 @@ export function useMoving({ whole, mayWrite, nameOf, onChoose, onDrop }: MovingI
 }
 
 /** Name of a part for its handle, with where it stands and what a press does. */
-export function handleLabel(part: Part, whole: WholeSetup, name = partName(part)): string {
-  return `${name}, ${placeWords(pointOf(part, whole), whole)}`
+export function handleLabel(part: Part, whole: WholeSetup, unit: LengthUnit, name = partName(part)): string {
+  const off = part.kind === 'light' && !part.light.isOn ? ', switched off' : ''
+  return `${name}${off}, ${placeWords(pointOf(part, whole), whole, unit)}`
 }

@@ -7,8 +7,8 @@ import type { WholeSetup } from '#shared/domain/plan/read-plan.ts'
 import { newId } from '#src/lib/new-id.ts'
 import { useDoc } from '#src/realtime/shoot-realtime.tsx'
 import { type Undo, useUndo } from '#src/realtime/use-undo.ts'
-import { duplicateLight, newLight, newProp, type NewLight } from './new-items.ts'
-import type { Part } from './parts.ts'
+import { duplicateLight, newLight, newProp, type NewLight, shiftedRank } from './new-items.ts'
+import { type DrawingKind, type Part, moved, partKey, partsOf, pointOf } from './parts.ts'
 
 export type SetupWriter = {
   undo: Undo
@@ -25,8 +25,12 @@ export type SetupWriter = {
   removePlace(id: PlaceId): void
   addProp(kind: (typeof PROP_KINDS)[number]): PropId
   removeProp(id: PropId): void
-  /** Writes where a part was dropped: one change, one step of undo. */
-  drop(part: Part, at: Point): void
+  /** One place earlier (−1) or later (1) in the order of building. */
+  shiftLight(id: LightId, by: -1 | 1): void
+  /** Changes where a part is, from where it is written now: one change, one step of undo. */
+  move(part: Part, change: (written: Point) => Point): void
+  /** Writes where a part was dropped in a drawing; what the drawing does not show stays as somebody has written it. */
+  drop(part: Part, at: Point, drawing: DrawingKind): void
 }
 
 /** Changes of one setup; each is a step of undo of its own. */
@@ -47,6 +51,24 @@ export function useSetupWriter(whole: WholeSetup): SetupWriter {
     const patchPlace = (id: PlaceId, patch: Patch<typeof sitterPlaces>) =>
       step(() => patchItem(doc, sitterPlaces, id, patch))
     const patchProp = (id: PropId, patch: Patch<typeof props>) => step(() => patchItem(doc, props, id, patch))
+    function move(part: Part, change: (written: Point) => Point) {
+      const key = partKey(part)
+      const written = partsOf(whole).find((candidate) => partKey(candidate) === key)
+      if (!written) return
+      const at = change(pointOf(written, whole))
+      switch (written.kind) {
+        case 'light':
+          return patchLight(written.light.id, { at })
+        case 'aim':
+          return patchLight(written.light.id, { aim: at })
+        case 'place':
+          return patchPlace(written.place.id, { at: [at[0], at[2]], eyeHeightM: at[1] })
+        case 'prop':
+          return patchProp(written.prop.id, { at })
+        case 'camera':
+          return patchSetup({ camera: { ...camera, at } })
+      }
+    }
     return {
       patchSetup,
       patchCamera: (patch: Partial<Camera>) => patchSetup({ camera: { ...camera, ...patch } }),
@@ -79,20 +101,12 @@ export function useSetupWriter(whole: WholeSetup): SetupWriter {
         return prop.id
       },
       removeProp: (id: PropId) => step(() => removeItems(doc, props, [id], Date.now())),
-      drop(part: Part, at: Point) {
-        switch (part.kind) {
-          case 'light':
-            return patchLight(part.light.id, { at })
-          case 'aim':
-            return patchLight(part.light.id, { aim: at })
-          case 'place':
-            return patchPlace(part.place.id, { at: [at[0], at[2]] })
-          case 'prop':
-            return patchProp(part.prop.id, { at })
-          case 'camera':
-            return patchSetup({ camera: { ...camera, at } })
-        }
+      shiftLight(id: LightId, by: -1 | 1) {
+        const rank = shiftedRank(whole.lights, id, by, Math.random)
+        if (rank !== null) patchLight(id, { rank })
       },
+      move,
+      drop: (part: Part, at: Point, drawing: DrawingKind) => move(part, (written) => moved(written, at, drawing)),
     }
   }, [doc, stop, whole])
   return { undo, ...changes }

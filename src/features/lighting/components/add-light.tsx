@@ -7,13 +7,15 @@ import { Dialog } from '#src/ui/dialog.tsx'
 import { Field } from '#src/ui/field.tsx'
 import { Select } from '#src/ui/select.tsx'
 import type { NewLight } from '../new-items.ts'
-import type { Kit } from '../use-kit.ts'
+import { type Kit, unitWords } from '../use-kit.ts'
 
 type AddLightProps = {
   open: boolean
   onOpenChange: (open: boolean) => void
   lights: readonly Light[]
   kit: Kit
+  /** What it is for to begin with; absent: what is missing. */
+  purpose?: LightPurpose | null
   onAdd: (light: NewLight) => void
 }
 
@@ -26,10 +28,10 @@ const HINTS: Record<LightPurpose, string> = {
 }
 
 /** Asks what the light is for and what it is made of; it comes to stand at the usual place and is then dragged. */
-export function AddLight({ open, onOpenChange, lights, kit, onAdd }: AddLightProps) {
+export function AddLight({ open, onOpenChange, ...rest }: AddLightProps) {
   return (
     <Dialog open={open} onOpenChange={onOpenChange} title="Add a light">
-      {open && <AddLightForm lights={lights} kit={kit} onAdd={onAdd} onClose={() => onOpenChange(false)} />}
+      {open && <AddLightForm {...rest} onClose={() => onOpenChange(false)} />}
     </Dialog>
   )
 }
@@ -37,12 +39,13 @@ export function AddLight({ open, onOpenChange, lights, kit, onAdd }: AddLightPro
 function AddLightForm({
   lights,
   kit,
+  purpose: wanted = null,
   onAdd,
   onClose,
 }: Omit<AddLightProps, 'open' | 'onOpenChange'> & { onClose: () => void }) {
   const has = (purpose: LightPurpose) => lights.some((light) => light.purpose === purpose)
   const [purpose, setPurpose] = useState<LightPurpose>(
-    () => LIGHT_PURPOSES.find((candidate) => !has(candidate)) ?? 'accent',
+    () => wanted ?? LIGHT_PURPOSES.find((candidate) => !has(candidate)) ?? 'accent',
   )
   const [unitId, setUnitId] = useState(() => lights.at(-1)?.unit.kitId ?? '')
   const [modifierId, setModifierId] = useState('')
@@ -53,7 +56,7 @@ function AddLightForm({
     return (
       <p className="text-base text-ink-soft">
         {kit.state === 'there'
-          ? 'The kit room has no flash unit yet. Put one in there first; its numbers are what the light is worked out from.'
+          ? 'The kit room has no flash unit and no lamp yet. Put one in there first; its numbers are what the light is worked out from.'
           : kit.state === 'coming'
             ? 'The kit is on its way…'
             : 'The kit room cannot be reached. Lights that stand already can still be changed; add new ones when you have a signal.'}
@@ -100,7 +103,7 @@ function AddLightForm({
       </fieldset>
       <Field label="Unit">
         <Select
-          options={kit.units.map((item) => ({ value: String(item.kitId), label: item.name }))}
+          options={kit.units.map((item) => ({ value: String(item.kitId), label: unitWords(item) }))}
           value={unit.kitId}
           onChange={setUnitId}
         />

@@ -1,75 +1,41 @@
 import { useState } from 'react'
-import { useNavigate } from 'react-router-dom'
 import type { WholeSetup } from '#shared/domain/plan/read-plan.ts'
-import { useDoc, useMayWrite, useShoot } from '#src/realtime/shoot-realtime.tsx'
+import { useMayWrite, useShoot } from '#src/realtime/shoot-realtime.tsx'
 import { usePlan } from '#src/realtime/use-plan.ts'
-import { useUndo } from '#src/realtime/use-undo.ts'
 import { Button } from '#src/ui/button.tsx'
 import { Confirm } from '#src/ui/confirm.tsx'
 import { Empty } from '#src/ui/empty.tsx'
 import { ScreenBar } from '#src/ui/screen-bar.tsx'
-import { toast } from '#src/ui/toast.ts'
-import { copyOf, newSetup } from '../new-items.ts'
 import { setupUse } from '#shared/domain/lighting/setup-use.ts'
-import { putSetup, removeSetup, restoreSetup } from '../write-setups.ts'
+import { useSetups } from '../use-setups.ts'
 import { SetupCard } from './setup-card.tsx'
+import { UnitSwitch } from './unit-switch.tsx'
 
 /** All setups of the shoot. */
 export function LightingScreen() {
   const plan = usePlan()
   const shoot = useShoot()
-  const doc = useDoc('lighting')
   const mayWrite = useMayWrite('lighting')
-  const undo = useUndo(['lighting'])
-  const navigate = useNavigate()
+  const setups = useSetups()
   const [removing, setRemoving] = useState<WholeSetup | null>(null)
   const all = [...plan.setups.values()]
   const address = (setupId: string) => `/shoots/${shoot.id}/lighting/${setupId}`
-  const ranks = all.map((whole) => whole.setup.rank)
-
-  function freeName(wanted: string): string {
-    const names = new Set(all.map((whole) => whole.setup.name))
-    if (!names.has(wanted)) return wanted
-    for (let number = 2; ; number++) if (!names.has(`${wanted} ${number}`)) return `${wanted} ${number}`
-  }
-  function step(write: () => void) {
-    undo.stop()
-    write()
-    undo.stop()
-  }
-  function add() {
-    const { setup, place } = newSetup(freeName(`Setup ${all.length + 1}`), ranks, Math.random)
-    step(() => putSetup(doc, { setup, places: [place], lights: [], props: [] }))
-    void navigate(address(setup.id))
-  }
-  function duplicate(whole: WholeSetup) {
-    const copy = copyOf(whole, freeName(`${whole.setup.name}, variation`.slice(0, 76)), ranks, Math.random)
-    step(() => putSetup(doc, copy))
-    toast.say(`“${copy.setup.name}” is a setup of its own now.`)
-  }
-  function remove(whole: WholeSetup) {
-    step(() => removeSetup(doc, whole))
-    setRemoving(null)
-    toast.say(`“${whole.setup.name}” is removed.`, {
-      label: 'Undo',
-      onPress: () => step(() => restoreSetup(doc, whole)),
-    })
-  }
-
   const losing = removing ? setupUse(plan, removing.setup.id).shots : []
   return (
     <>
       <ScreenBar
         title="Lighting"
         sub={all.length === 0 ? undefined : `${all.length} ${all.length === 1 ? 'setup' : 'setups'}`}
-        actions={mayWrite ? [{ label: 'Add a setup', variant: 'primary', onPress: add }] : []}
-      />
+        actions={mayWrite ? [{ label: 'Add a setup', variant: 'primary', onPress: setups.add }] : []}
+      >
+        <UnitSwitch />
+      </ScreenBar>
       {all.length === 0 ? (
         <Empty
           title="No setup yet"
           action={
             mayWrite && (
-              <Button variant="primary" onClick={add}>
+              <Button variant="primary" onClick={setups.add}>
                 Light the first setup
               </Button>
             )
@@ -87,7 +53,7 @@ export function LightingScreen() {
                 use={setupUse(plan, whole.setup.id)}
                 to={address(whole.setup.id)}
                 mayWrite={mayWrite}
-                onDuplicate={() => duplicate(whole)}
+                actions={setups}
                 onRemove={() => setRemoving(whole)}
               />
             </li>
@@ -102,7 +68,8 @@ export function LightingScreen() {
         title={`Remove “${removing?.setup.name ?? ''}”?`}
         action="Remove"
         onConfirm={() => {
-          if (removing) remove(removing)
+          if (removing) setups.remove(removing)
+          setRemoving(null)
         }}
       >
         {losing.length === 0 ? (

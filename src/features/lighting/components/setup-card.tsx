@@ -7,6 +7,7 @@ import { IconButton } from '#src/ui/button.tsx'
 import { Lamp, type LampState } from '#src/ui/lamp.tsx'
 import { Menu } from '#src/ui/menu.tsx'
 import type { SetupUse } from '#shared/domain/lighting/setup-use.ts'
+import { type SetupActions, wholeItems } from '../use-setups.ts'
 import { PlanSketch } from './plan/plan-sketch.tsx'
 
 type SetupCardProps = {
@@ -14,7 +15,7 @@ type SetupCardProps = {
   use: SetupUse
   to: string
   mayWrite: boolean
-  onDuplicate: () => void
+  actions: SetupActions
   onRemove: () => void
 }
 
@@ -26,9 +27,10 @@ function lampOf(whole: WholeSetup, use: SetupUse): { state: LampState; why: stri
   return red === undefined ? { state: 'lit', why: 'Nothing in its way' } : { state: 'half', why: red }
 }
 
-export function SetupCard({ whole, use, to, mayWrite, onDuplicate, onRemove }: SetupCardProps) {
+export function SetupCard({ whole, use, to, mayWrite, actions, onRemove }: SetupCardProps) {
   const { setup, lights } = whole
   const lamp = lampOf(whole, use)
+  const off = lights.filter((light) => !light.isOn).length
   const purposes = lights.map((light) => light.purpose)
   return (
     <article className="relative h-full rounded-r border border-hair bg-paper hover:border-edge has-[a:focus-visible]:border-draft">
@@ -43,6 +45,7 @@ export function SetupCard({ whole, use, to, mayWrite, onDuplicate, onRemove }: S
           <p className="mt-0.5 text-sm text-ink-soft">
             {count(lights.length, 'light')}
             {purposes.length > 0 && `: ${[...new Set(purposes)].join(', ')}`}
+            {off > 0 && ` · ${off} off`}
           </p>
           <p className="text-sm text-ink-soft">{use.words.charAt(0).toUpperCase() + use.words.slice(1)}</p>
           <p className="mt-2 flex items-center gap-2 text-sm">
@@ -58,10 +61,7 @@ export function SetupCard({ whole, use, to, mayWrite, onDuplicate, onRemove }: S
                   <MoreHorizontal size={18} aria-hidden />
                 </IconButton>
               }
-              items={[
-                { label: 'Duplicate as a variation', onSelect: onDuplicate },
-                { label: 'Remove', onSelect: onRemove, danger: true },
-              ]}
+              items={[...wholeItems(whole, actions), 'line', { label: 'Remove', onSelect: onRemove, danger: true }]}
             />
           </div>
         )}

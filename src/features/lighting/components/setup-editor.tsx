@@ -1,10 +1,13 @@
 import type { SetupReading } from '#shared/domain/lighting/readings.ts'
 import type { WholeSetup } from '#shared/domain/plan/read-plan.ts'
+import type { Room } from '#shared/domain/shoots/schema.ts'
 import type { Kit } from '../use-kit.ts'
 import type { SetupWriter } from '../use-setup-writer.ts'
+import { BackgroundEditor } from './editors/background-editor.tsx'
 import { CameraEditor } from './editors/camera-editor.tsx'
 import { LightEditor } from './editors/light-editor.tsx'
-import { BackgroundEditor, PlaceEditor, PropEditor } from './editors/set-editors.tsx'
+import { PlaceEditor, type SitterChoice } from './editors/place-editor.tsx'
+import { PropEditor } from './editors/prop-editor.tsx'
 
 type SetupEditorProps = {
   chosenKey: string
@@ -12,7 +15,9 @@ type SetupEditorProps = {
   reading: SetupReading
   kit: Kit
   writer: SetupWriter
-  sitters: readonly { id: string; label: string }[]
+  sitters: readonly SitterChoice[]
+  /** Rooms of the shots that use the setup. */
+  rooms: readonly Room[]
   mayWrite: boolean
   onChoose: (key: string | null) => void
   /** Whether the way back to the readings is shown here. */

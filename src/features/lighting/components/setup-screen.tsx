@@ -1,7 +1,8 @@
 import { useMemo, useState } from 'react'
+import { MoreHorizontal } from 'lucide-react'
 import { Link } from 'react-router-dom'
 import { cautionsOf } from '#shared/domain/lighting/cautions.ts'
-import { frameSidesMm } from '#shared/domain/lighting/frame.ts'
+import type { LightPurpose } from '#shared/domain/lighting/schema.ts'
 import { readSetup } from '#shared/domain/lighting/readings.ts'
 import { purposeWord } from '#shared/domain/lighting/words.ts'
 import type { Plan, WholeSetup } from '#shared/domain/plan/read-plan.ts'
@@ -10,8 +11,9 @@ import { useMayWrite, useShoot } from '#src/realtime/shoot-realtime.tsx'
 import { useItems } from '#src/realtime/use-items.ts'
 import { usePlan } from '#src/realtime/use-plan.ts'
 import { useUndoKeys } from '#src/realtime/use-undo-keys.ts'
-import { Button, buttonClass } from '#src/ui/button.tsx'
+import { Button, IconButton, buttonClass } from '#src/ui/button.tsx'
 import { Empty } from '#src/ui/empty.tsx'
+import { Menu } from '#src/ui/menu.tsx'
 import { ScreenBar } from '#src/ui/screen-bar.tsx'
 import { Sheet } from '#src/ui/sheet.tsx'
 import { useIsPhone } from '#src/ui/use-media.ts'
@@ -21,11 +23,14 @@ import { useKit } from '../use-kit.ts'
 import { useMoving } from '../use-moving.ts'
 import { usePeerMoves } from '../use-peer-moves.ts'
 import { useSetupWriter } from '../use-setup-writer.ts'
+import { useSetups, wholeItems } from '../use-setups.ts'
 import { AddLight } from './add-light.tsx'
+import { NextStepLine } from './next-step-line.tsx'
 import { PlanDrawing } from './plan/plan-drawing.tsx'
 import { SideDrawing } from './plan/side-drawing.tsx'
 import { Overview } from './readings/overview.tsx'
 import { SetupEditor, isPartOf } from './setup-editor.tsx'
+import { UnitSwitch } from './unit-switch.tsx'
 
 /** One lighting setup: drawn to scale, with its numbers beside. */
 export function SetupScreen({ setupId }: { setupId: string }) {
@@ -57,13 +62,16 @@ function Setup({ plan, whole }: { plan: Plan; whole: WholeSetup }) {
   const sitterItems = useItems('looks', sittersOf)
   const [chosen, setChosen] = useState<string | null>(null)
   const [isSheetOpen, setIsSheetOpen] = useState(false)
-  const [isAdding, setIsAdding] = useState(false)
+  const [adding, setAdding] = useState<LightPurpose | 'any' | null>(null)
+  const setups = useSetups()
   const use = useMemo(() => setupUse(plan, whole.setup.id), [plan, whole.setup.id])
 
   const sitters = [...sitterItems.values()].map((sitter) => ({
     id: sitter.id,
     label: sitter.character === '' ? sitter.name : `${sitter.name}, ${sitter.character}`,
+    looks: [...plan.looks.values()].flatMap(({ look }) => (look.sitterId === sitter.id ? [look] : [])),
   }))
+  const rooms = [...new Map(use.shots.flatMap(({ room }) => (room ? [[room.id, room] as const] : []))).values()]
   const nameOf = (part: Part) => {
     const sitter =
       part.kind === 'place' && part.place.sitterId !== null ? sitterItems.get(part.place.sitterId) : undefined
@@ -118,6 +126,7 @@ function Setup({ plan, whole }: { plan: Plan; whole: WholeSetup }) {
       kit={kit}
       writer={writer}
       sitters={sitters}
+      rooms={rooms}
       mayWrite={mayWrite}
       withBack={!isPhone}
       onChoose={(key) => {
@@ -131,25 +140,32 @@ function Setup({ plan, whole }: { plan: Plan; whole: WholeSetup }) {
     ? [
         { label: 'Undo', variant: 'quiet' as const, disabled: !writer.undo.canUndo, onPress: writer.undo.undo },
         { label: 'Redo', variant: 'quiet' as const, disabled: !writer.undo.canRedo, onPress: writer.undo.redo },
-        { label: 'Add a light', variant: 'primary' as const, onPress: () => setIsAdding(true) },
+        { label: 'Add a light', variant: 'primary' as const, onPress: () => setAdding('any') },
       ]
     : []
 
   return (
     <div className="flex min-h-full flex-col md:h-full">
-      <ScreenBar
-        title={whole.setup.name}
-        sub={mayWrite ? use.words : `${use.words} · to read only`}
-        actions={actions}
-      />
+      <ScreenBar title={whole.setup.name} sub={mayWrite ? use.words : `${use.words} · to read only`} actions={actions}>
+        <UnitSwitch />
+        {mayWrite && (
+          <Menu
+            trigger={
+              <IconButton label="More for this setup">
+                <MoreHorizontal size={18} aria-hidden />
+              </IconButton>
+            }
+            items={wholeItems(whole, setups)}
+          />
+        )}
+      </ScreenBar>
       <div className="grid min-h-0 flex-1 md:grid-cols-[minmax(0,1fr)_minmax(19rem,32%)] xl:grid-cols-[minmax(0,1fr)_25rem]">
         <div className="flex min-w-0 flex-col gap-3 p-2.5 md:min-h-0 md:py-0 md:pr-5 md:pb-3.5 md:pl-6">
+          {mayWrite && (
+            <NextStepLine whole={whole} onAddLight={setAdding} onAddPanel={() => open(writer.addProp('panel'))} />
+          )}
           <div className="h-[min(52dvh,26rem)] md:h-auto md:min-h-0 md:flex-1">
-            <PlanDrawing
-              {...drawing}
-              tanAcross={frameSidesMm(orientation).widthMm / (2 * whole.setup.camera.focalMm)}
-              onChooseNothing={() => setChosen(null)}
-            />
+            <PlanDrawing {...drawing} orientation={orientation} onChooseNothing={() => setChosen(null)} />
           </div>
           {isPhone && chosenKey !== null && (
             <div className="flex items-center gap-3 rounded-r border border-hair bg-paper py-1.5 pr-1.5 pl-3.5 text-base">
@@ -176,8 +192,11 @@ function Setup({ plan, whole }: { plan: Plan; whole: WholeSetup }) {
         </Sheet>
       )}
       <AddLight
-        open={isAdding}
-        onOpenChange={setIsAdding}
+        open={adding !== null}
+        onOpenChange={(isOpen) => {
+          if (!isOpen) setAdding(null)
+        }}
+        purpose={adding === 'any' ? null : adding}
         lights={whole.lights}
         kit={kit}
         onAdd={(light) => setChosen(writer.addLight(light))}

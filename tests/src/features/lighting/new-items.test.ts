@@ -9,7 +9,7 @@ import {
 } from '#shared/domain/lighting/schema.ts'
 import { elevationDeg } from '#shared/domain/lighting/softness.ts'
 import { changeActions } from '#shared/domain/lighting/changeover.ts'
-import { copyOf, duplicateLight, newLight, newProp, newSetup } from '#src/features/lighting/new-items.ts'
+import { copyOf, duplicateLight, newLight, newProp, newSetup, shiftedRank } from '#src/features/lighting/new-items.ts'
 import { MINUTES, OCTA, light, unit, whole } from '#tests/support/lighting-sample.ts'
 
 const make = { unit: lightUnitSchema.parse(unit()), modifier: lightModifierSchema.parse(OCTA), support: null }
@@ -75,5 +75,27 @@ describe('copyOf', () => {
     expect(copy.lights[0]?.setupId).toBe(copy.setup.id)
     expect(copy.lights[0]?.id).not.toBe(setup.lights[0]?.id)
     expect(changeActions(setup, copy, { sameRoom: true, minutes: MINUTES })).toEqual([])
+  })
+})
+
+describe('shiftedRank', () => {
+  const row = ['a0', 'a1', 'a2', 'a3'].map((rank, n) =>
+    light(n + 1, { purpose: 'rim', at: [n, 2, 1], aim: [0, 1.5, 0], rank }),
+  )
+  const orderAfter = (index: number, by: -1 | 1) => {
+    const own = row[index]
+    const rank = own ? shiftedRank(row, own.id, by, half) : null
+    const next = row.map((other) => (other === own && rank !== null ? { ...other, rank } : other))
+    return next.sort((a, b) => (a.rank < b.rank ? -1 : 1)).map((other) => row.findIndex(({ id }) => id === other.id))
+  }
+  it('changes places with the one before or behind', () => {
+    expect(orderAfter(2, -1)).toEqual([0, 2, 1, 3])
+    expect(orderAfter(1, -1)).toEqual([1, 0, 2, 3])
+    expect(orderAfter(1, 1)).toEqual([0, 2, 1, 3])
+    expect(orderAfter(2, 1)).toEqual([0, 1, 3, 2])
+  })
+  it('is null at the ends', () => {
+    expect(orderAfter(0, -1)).toEqual([0, 1, 2, 3])
+    expect(orderAfter(3, 1)).toEqual([0, 1, 2, 3])
   })
 })

@@ -1,5 +1,14 @@
 import { describe, expect, it } from 'vitest'
-import { type Part, partKey, partName, placeWords, pointOf, snap, withMoves } from '#src/features/lighting/parts.ts'
+import {
+  type Part,
+  moved,
+  partKey,
+  partName,
+  placeWords,
+  pointOf,
+  snap,
+  withMoves,
+} from '#src/features/lighting/parts.ts'
 import { light, whole } from '#tests/support/lighting-sample.ts'
 
 const main = light(1, { purpose: 'main', at: [-1.2, 1.9, 1.1], aim: [0, 1.5, 0] })
@@ -12,6 +21,7 @@ describe('placeWords', () => {
   it('tells a place from the sitter as it is read aloud', () => {
     expect(placeWords([-1.2, 1.5, 1.1], setup)).toBe('1.2 m left, 1.1 m towards the camera, 1.6 m from the sitter')
     expect(placeWords([0, 1.5, -2], setup)).toBe('2.0 m behind the sitter’s mark, 2.0 m from the sitter')
+    expect(placeWords([0, 1.5, -2], setup, 'ft')).toBe('6′ 7″ behind the sitter’s mark, 6′ 7″ from the sitter')
     expect(placeWords([0, 2.5, 0], setup)).toBe('on the sitter’s mark, 1.0 m from the sitter')
   })
 })
@@ -21,6 +31,13 @@ describe('snap', () => {
     expect(snap(1.23)).toBeCloseTo(1.25, 9)
     expect(snap(-80)).toBe(-50)
     expect(Object.is(snap(-0.01), 0)).toBe(true)
+  })
+})
+
+describe('moved', () => {
+  it('takes only what the drawing shows: a height somebody else has written meanwhile stays', () => {
+    expect(moved([1, 2.4, 3], [1.5, 1.9, 2], 'plan')).toEqual([1.5, 2.4, 2])
+    expect(moved([1, 2.4, 3], [1.5, 1.9, 2], 'side')).toEqual([1, 1.9, 2])
   })
 })
 

@@ -1,9 +1,10 @@
 import { describe, expect, it } from 'vitest'
 import * as Y from 'yjs'
 import { lights, props, setups, sitterPlaces } from '#shared/realtime/documents.ts'
-import { readAll } from '#shared/realtime/collection.ts'
+import { LOCAL_ORIGIN, patchItem, readAll } from '#shared/realtime/collection.ts'
+import { mirrored } from '#shared/domain/lighting/mirror.ts'
 import { wholeSetups } from '#shared/domain/plan/read-plan.ts'
-import { putSetup, removeSetup, restoreSetup } from '#src/features/lighting/write-setups.ts'
+import { putSetup, removeSetup, restoreSetup, rewriteSetup } from '#src/features/lighting/write-setups.ts'
 import { FULL_WARM, OCTA, light, whole } from '#tests/support/lighting-sample.ts'
 
 const setup = whole({
@@ -36,5 +37,29 @@ describe('restoreSetup', () => {
     expect(read(doc)).toBeUndefined()
     restoreSetup(doc, setup)
     expect(read(doc)).toEqual(setup)
+  })
+})
+
+describe('rewriteSetup', () => {
+  it('mirrors a setup in one change that one undo takes back, and leaves what it does not touch', () => {
+    const doc = new Y.Doc()
+    putSetup(doc, setup)
+    const undo = new Y.UndoManager(
+      [setups, lights, props, sitterPlaces].map((c) => doc.getMap(c.root)),
+      {
+        trackedOrigins: new Set([LOCAL_ORIGIN]),
+        captureTimeout: 0,
+      },
+    )
+    const updates: Uint8Array[] = []
+    doc.on('update', (update: Uint8Array) => updates.push(update))
+    const other = mirrored(setup)
+    rewriteSetup(doc, other)
+    expect(read(doc)).toEqual(other)
+    expect(updates).toHaveLength(1)
+    const id = setup.lights[0]?.id ?? ''
+    patchItem(doc, lights, id, { note: 'sandbag' }, 'somebody else')
+    undo.undo()
+    expect(read(doc)).toEqual({ ...setup, lights: setup.lights.map((entry) => ({ ...entry, note: 'sandbag' })) })
   })
 })

@@ -7,6 +7,8 @@ import { Select } from '#src/ui/select.tsx'
 import type { SetupWriter } from '../../use-setup-writer.ts'
 import { EditorFrame, FieldGroup } from './editor-frame.tsx'
 import { PointFields } from './point-fields.tsx'
+import { facePoint } from '#shared/domain/lighting/geometry.ts'
+import { Button } from '#src/ui/button.tsx'
 
 const F_NUMBERS = Array.from({ length: 31 }, (_, thirds) => fNumberOfThirds(thirds))
 const ISOS = [
@@ -36,6 +38,11 @@ const SHUTTERS = [
   2,
 ]
 
+const SYNCS = [1 / 500, 1 / 400, 1 / 320, 1 / 250, 1 / 200, 1 / 180, 1 / 160, 1 / 125, 1 / 60]
+/** Assumed while nobody has said it. */
+const SYNC_S = 1 / 200
+const UNKNOWN = ''
+
 type CameraEditorProps = { whole: WholeSetup; writer: SetupWriter; mayWrite: boolean; onBack: (() => void) | null }
 
 function options(values: readonly number[], label: (value: number) => string, own: number) {
@@ -47,7 +54,7 @@ function options(values: readonly number[], label: (value: number) => string, ow
 
 /** Camera and exposure of the setup, and the daylight or lamps that are there anyway. */
 export function CameraEditor({ whole, writer, mayWrite, onBack }: CameraEditorProps) {
-  const { camera, ambientLux } = whole.setup
+  const { camera, ambientLux, ambientK } = whole.setup
   const pick =
     (values: readonly number[], label: (value: number) => string, give: (value: number) => void) => (text: string) => {
       const value = values.find((candidate) => label(candidate) === text)
@@ -100,6 +107,17 @@ export function CameraEditor({ whole, writer, mayWrite, onBack }: CameraEditorPr
             onChange={(whiteBalanceK) => writer.patchCamera({ whiteBalanceK })}
           />
         </Field>
+        <Field label="Sync speed" hint={camera.syncS === null ? '1/200 s is assumed' : undefined}>
+          <Select
+            options={[{ value: UNKNOWN, label: 'Not known' }, ...options(SYNCS, shutterLabel, camera.syncS ?? SYNC_S)]}
+            value={camera.syncS === null ? UNKNOWN : shutterLabel(camera.syncS)}
+            onChange={(text) =>
+              text === UNKNOWN
+                ? writer.patchCamera({ syncS: null })
+                : pick(SYNCS, shutterLabel, (syncS) => writer.patchCamera({ syncS }))(text)
+            }
+          />
+        </Field>
         <Field label="Ambient at the sitter" hint="Empty: not measured, left out">
           <NumberInput
             value={ambientLux}
@@ -112,9 +130,44 @@ export function CameraEditor({ whole, writer, mayWrite, onBack }: CameraEditorPr
             onChange={(lux) => writer.patchSetup({ ambientLux: lux })}
           />
         </Field>
+        <Field label="Colour of the ambient" hint="Empty: as the white balance">
+          <NumberInput
+            value={ambientK}
+            allowEmpty
+            unit="K"
+            min={1500}
+            max={20000}
+            step={100}
+            decimals={0}
+            onChange={(kelvin) => writer.patchSetup({ ambientK: kelvin })}
+          />
+        </Field>
       </div>
       <FieldGroup title="Where it stands, from the sitter’s mark">
-        <PointFields point={camera.at} onChange={(at) => writer.patchCamera({ at })} />
+        <PointFields
+          point={camera.at}
+          onChange={(change) => writer.move({ kind: 'camera', setupId: whole.setup.id }, change)}
+        />
+      </FieldGroup>
+      <FieldGroup title="Where it looks">
+        {camera.aim === null ? (
+          <>
+            <p className="text-sm text-ink-soft">At the sitters, eyes a third below the top edge.</p>
+            <Button size="small" className="self-start" onClick={() => writer.patchCamera({ aim: facePoint(whole) })}>
+              Look at a point instead
+            </Button>
+          </>
+        ) : (
+          <>
+            <PointFields
+              point={camera.aim}
+              onChange={(change) => camera.aim && writer.patchCamera({ aim: change(camera.aim) })}
+            />
+            <Button size="small" className="self-start" onClick={() => writer.patchCamera({ aim: null })}>
+              Look at the sitters
+            </Button>
+          </>
+        )}
       </FieldGroup>
     </EditorFrame>
   )

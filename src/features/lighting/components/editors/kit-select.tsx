@@ -12,19 +12,29 @@ type KitSelectProps<Item extends Copied> = {
   kit: Kit
   /** What stands for nothing chosen; absent: something has to be. */
   none?: string
+  /** What an item is called in the list; its name by itself. */
+  wordsFor?: (item: Item) => string
   onChange: (item: Item | null) => void
 }
 
 const NONE = ''
 
 /** Picks from the studio's kit; what is picked is copied, and newer numbers of the kit room are offered. */
-export function KitSelect<Item extends Copied>({ label, items, value, kit, none, onChange }: KitSelectProps<Item>) {
+export function KitSelect<Item extends Copied>({
+  label,
+  items,
+  value,
+  kit,
+  none,
+  wordsFor = (item) => item.name,
+  onChange,
+}: KitSelectProps<Item>) {
   const gone = value !== null && !items.some((item) => item.kitId === value.kitId)
   const newest = value && items.find((item) => item.kitId === value.kitId && item.version > value.version)
   const options = [
     ...(none === undefined ? [] : [{ value: NONE, label: none }]),
-    ...(gone ? [{ value: value.kitId, label: value.name }] : []),
-    ...items.map((item) => ({ value: item.kitId, label: item.name })),
+    ...(gone ? [{ value: value.kitId, label: wordsFor(value) }] : []),
+    ...items.map((item) => ({ value: item.kitId, label: wordsFor(item) })),
   ]
   return (
     <Field

@@ -1,45 +1,32 @@
 import type { Point } from '#shared/domain/lighting/schema.ts'
 import { Field } from '#src/ui/field.tsx'
-import { NumberInput } from '#src/ui/number-input.tsx'
+import { LengthInput } from './length-input.tsx'
 
-type PointFieldsProps = { point: Point; onChange: (point: Point) => void; heightLabel?: string }
+type PointFieldsProps = {
+  point: Point
+  /** What has changed, from whatever is written: the numbers that were not touched stay as others have them. */
+  onChange: (change: (written: Point) => Point) => void
+  heightLabel?: string
+  heights?: { min: number; max: number }
+}
 
 /** A place as three numbers: sideways, towards the camera, height. */
-export function PointFields({ point, onChange, heightLabel = 'Height' }: PointFieldsProps) {
+export function PointFields({ point, onChange, heightLabel = 'Height', heights }: PointFieldsProps) {
   const [x, y, z] = point
   return (
     <div className="grid grid-cols-3 gap-2">
       <Field label="Right (left −)">
-        <NumberInput
-          value={x}
-          unit="m"
-          min={-50}
-          max={50}
-          step={0.1}
-          decimals={2}
-          onChange={(next) => onChange([next, y, z])}
-        />
+        <LengthInput value={x} min={-50} max={50} onChange={(next) => onChange(([, up, deep]) => [next, up, deep])} />
       </Field>
       <Field label="Front (back −)">
-        <NumberInput
-          value={z}
-          unit="m"
-          min={-50}
-          max={50}
-          step={0.1}
-          decimals={2}
-          onChange={(next) => onChange([x, y, next])}
-        />
+        <LengthInput value={z} min={-50} max={50} onChange={(next) => onChange(([across, up]) => [across, up, next])} />
       </Field>
       <Field label={heightLabel}>
-        <NumberInput
+        <LengthInput
           value={y}
-          unit="m"
-          min={0}
-          max={12}
-          step={0.1}
-          decimals={2}
-          onChange={(next) => onChange([x, next, z])}
+          min={heights?.min ?? 0}
+          max={heights?.max ?? 12}
+          onChange={(next) => onChange(([across, , deep]) => [across, next, deep])}
         />
       </Field>
     </div>

@@ -1,0 +1,88 @@
+import type { WholeSetup } from '#shared/domain/plan/read-plan.ts'
+import { distanceBetween, facePoint } from '#shared/domain/lighting/geometry.ts'
+import type { Light, Prop, SitterPlace } from '#shared/domain/lighting/schema.ts'
+import { inSentence } from '#shared/domain/lighting/words.ts'
+import { type LengthUnit, lengthLabel } from '#src/lib/length-unit.ts'
+import { type Label, type PlanView, spreadLabels, toX, toZ } from '../../plan-view.ts'
+
+type PlanLabelsProps = { whole: WholeSetup; view: PlanView; isNarrow: boolean; unit: LengthUnit }
+
+/** What each light and thing is, beside it. */
+export function PlanLabels({ whole, view, isNarrow, unit }: PlanLabelsProps) {
+  const labels = spreadLabels([
+    ...whole.lights.map((light) => lightLabel(light, { whole, view, isNarrow, unit })),
+    ...whole.props.map((prop) => propLabel(prop, whole, view)),
+  ])
+  const off = new Set<string>(whole.lights.filter((light) => !light.isOn).map((light) => light.id))
+  return (
+    <g aria-hidden className="pointer-events-none">
+      {labels.map((label) => (
+        <text
+          key={label.key}
+          x={label.x}
+          y={label.y}
+          textAnchor={label.side === 'left' ? 'end' : 'start'}
+          stroke="#fff"
+          strokeWidth={3}
+          paintOrder="stroke"
+          className={off.has(label.key) ? 'fill-ink-faint text-xs' : 'fill-draft text-xs'}
+        >
+          {label.lines.map((line, index) => (
+            <tspan key={line} x={label.x} dy={index === 0 ? 0 : 15} className={index === 0 ? '' : 'fill-ink-faint'}>
+              {line}
+            </tspan>
+          ))}
+        </text>
+      ))}
+    </g>
+  )
+}
+
+/** About how wide a word is, CSS px a letter, and how much the distances at the left take. */
+const LETTER_PX = 6.4
+const DIMENSION_PX = 76
+
+/** A label beside a point, outwards from the sitter, or inwards where it would be cut off. */
+function besideOf(
+  view: PlanView,
+  xM: number,
+  faceX: number,
+  away: number,
+  lines: readonly string[],
+): Pick<Label, 'x' | 'side'> {
+  const width = Math.max(...lines.map((line) => line.length)) * LETTER_PX
+  const x = toX(view, xM)
+  const left = { x: x - away, side: 'left' } as const
+  const right = { x: x + away, side: 'right' } as const
+  if (xM < faceX) return left.x - width < DIMENSION_PX ? right : left
+  return right.x + width > view.width - 4 ? left : right
+}
+
+function lightLabel(light: Light, { whole, view, isNarrow, unit }: PlanLabelsProps): Label {
+  const face = facePoint(whole)
+  const sizePx = ((light.modifier?.numbers.widthM ?? 0) * view.pxPerM) / 2
+  const name = `${light.group === null ? '' : `${light.group} · `}${light.purpose}${light.isOn ? '' : ', off'}`
+  const made = [light.modifier, ...light.gels].flatMap((part) => (part ? [inSentence(part.name)] : []))
+  const off = lengthLabel(distanceBetween(light.at, face), unit)
+  const lines = isNarrow
+    ? [name]
+    : [[name, ...made].join(', '), `${lengthLabel(light.at[1], unit, true)} up · ${off} off`]
+  const away = Math.max(26, Math.min(60, sizePx + 12))
+  return { key: light.id, ...besideOf(view, light.at[0], face[0], away, lines), y: toZ(view, light.at[2]) + 2, lines }
+}
+
+function propLabel(prop: Prop, whole: WholeSetup, view: PlanView): Label {
+  const turn = prop.kind === 'prop' ? 0 : (prop.turnDeg * Math.PI) / 180
+  const away = Math.max(12, (prop.widthM / 2) * Math.abs(Math.cos(turn)) * view.pxPerM + 10)
+  const beside = besideOf(view, prop.at[0], facePoint(whole)[0], away, [prop.name])
+  return { key: prop.id, ...beside, y: toZ(view, prop.at[2]) + 4, lines: [prop.name] }
+}
+
+/** Where a sitter's name stands: outside at the two ends of a row, above in between. */
+export function placeNameAt(places: readonly SitterPlace[], place: SitterPlace) {
+  const row = [...places].sort((a, b) => a.at[0] - b.at[0] || (a.id < b.id ? -1 : 1))
+  const index = row.findIndex((other) => other.id === place.id)
+  if (index === 0) return { x: -18, y: -16, textAnchor: 'end' as const }
+  if (index === row.length - 1) return { x: 18, y: -16, textAnchor: 'start' as const }
+  return { x: 0, y: -6 - 17 * index, textAnchor: 'middle' as const }
+}

@@ -1,0 +1,31 @@
+import type { WholeSetup } from '#shared/domain/plan/read-plan.ts'
+import { useLengthUnit } from '#src/lib/length-unit.ts'
+import { measureLines } from '../../measures.ts'
+import type { Held } from '../../use-moving.ts'
+
+type ReadoutProps = { held: Held; whole: WholeSetup; name: string; isLow: boolean }
+
+/** Distances and angles of what a hand holds, in a corner where the hand is not. */
+export function Readout({ held, whole, name, isLow }: ReadoutProps) {
+  const unit = useLengthUnit()
+  return (
+    <div
+      data-testid="readout"
+      aria-hidden
+      className={`pointer-events-none absolute right-2 z-10 rounded-r border border-hair bg-paper/95 px-2.5 py-1.5 text-xs max-md:text-[0.8125rem] ${isLow ? 'bottom-2' : 'top-2'}`}
+    >
+      <p className="font-semibold">{name}</p>
+      <dl className="grid grid-cols-[auto_auto] gap-x-3">
+        {measureLines(held.at, whole, unit).map(([label, value]) => (
+          <div key={label} className="contents">
+            <dt className="text-ink-soft">{label}</dt>
+            <dd className="text-right">{value}</dd>
+          </div>
+        ))}
+      </dl>
+      {held.by === 'pointer' && held.guides.length === 0 && (
+        <p className="mt-0.5 text-ink-faint max-md:hidden">Hold Alt or Ctrl to move without snapping</p>
+      )}
+    </div>
+  )
+}

@@ -1,5 +1,4 @@
 import type { PROP_SHAPES, BACKGROUND_SURFACES } from '../schema.ts'
-import type { Point } from '../schema.ts'
 import type { View } from '../frame.ts'
 import type { Cut, Pose } from './body.ts'
 import type { HairStyle } from './head.ts'
@@ -10,10 +9,12 @@ import type { HairStyle } from './head.ts'
  * Colours are linear sRGB reflectances.
  */
 export type Rgb = readonly [number, number, number]
+/** A place, metres. */
+type Place = readonly [number, number, number]
 
 export type Figure = {
   /** Point between the eyes, metres. */
-  eyes: Point
+  eyes: Place
   pose: Pose
   /** Turns of body and, on top of it, head about the upright axis, and the nod, radians. */
   turn: number
@@ -29,7 +30,7 @@ export type Figure = {
 
 export type SceneProp = {
   shape: (typeof PROP_SHAPES)[number]
-  at: Point
+  at: Place
   turn: number
   widthM: number
   heightM: number
@@ -38,13 +39,13 @@ export type SceneProp = {
 }
 
 /** A flat thing that stands by itself: gives back `colour` of what falls on it, and keeps light off what is behind. */
-export type SceneSheet = { at: Point; turn: number; widthM: number; heightM: number; colour: Rgb }
+export type SceneSheet = { at: Place; turn: number; widthM: number; heightM: number; colour: Rgb }
 
 export type Emitter = {
   /** Id of its light: the name of its layer. */
   id: string
-  at: Point
-  aim: Point
+  at: Place
+  aim: Place
   shape: 'disc' | 'rectangle' | 'ball'
   widthM: number
   heightM: number

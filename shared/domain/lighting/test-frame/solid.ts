@@ -7,13 +7,12 @@ export type Part = { field: Field; stuff: Stuff }
 
 /**
  * A body in the scene: parts in coordinates of its own, turned and put into place, with its distances kept on a grid.
- * World to own: q = R·(p − at) + pivot, R orthonormal by rows.
+ * World to own: q = R·(p − at), R orthonormal by rows.
  */
 export type Solid = {
   parts: readonly Part[]
   rows: readonly [number, number, number, number, number, number, number, number, number]
   at: readonly [number, number, number]
-  pivot: readonly [number, number, number]
   low: readonly [number, number, number]
   high: readonly [number, number, number]
   /** Side of a grid cell, metres. */

@@ -95,7 +95,11 @@ function fakeSocket(docs: ShootScreen['docs'], role: Role) {
 }
 
 /** A shoot to show screens in: documents over a socket that ends here, requests answered by the given functions. */
-export function shootScreen(role: Role, api: FakeApi = {}): ShootScreen {
+export function shootScreen(
+  role: Role,
+  api: FakeApi = {},
+  more: { inStudio?: boolean; date?: string } = {},
+): ShootScreen {
   const docs: ShootScreen['docs'] = {
     board: new Y.Doc(),
     plan: new Y.Doc(),
@@ -119,9 +123,16 @@ export function shootScreen(role: Role, api: FakeApi = {}): ShootScreen {
   const shoot = shootSchema.parse({
     id: SHOOT_ID,
     studioId: '00000000-0000-4000-8000-0000000000ab',
-    inStudio: false,
+    inStudio: more.inStudio ?? false,
     role,
-    brief: { title: 'Leaf, Brass & Star', zone: 'Europe/London', location: {}, rooms: [], deliverables: [] },
+    brief: {
+      title: 'Leaf, Brass & Star',
+      zone: 'Europe/London',
+      date: more.date ?? null,
+      location: {},
+      rooms: [],
+      deliverables: [],
+    },
     minutes: DEFAULT_MINUTES,
     epochs: {},
   })

@@ -79,13 +79,13 @@ export function createApp(deps: AppDeps): Express {
   api.use(express.json({ limit: '1mb' }))
   api.all('/auth/*path', authRoute(auth, publicUrl))
   api.use(withCtx({ db, documents, now, publicUrl, actorOf: (req) => signedIn(auth, req.headers) }))
-  const { invitationsPerMin, uploadsPerMin } = limits
+  const { invitationsPerMin, uploadsPerMin, sheetsPerMin } = limits
   api.use(
     studiosRoutes({ letters, invitationsPerMin }),
     peopleRoutes({ auth, invitationsPerMin }),
     shootsRoutes(),
     kitRoutes(),
-    recipesRoutes(),
+    recipesRoutes(sheetsPerMin),
   )
   api.use(commentsRoutes(), privateRoutes(), uploadsRoutes(uploadsPerMin), signOffRoutes(), versionsRoutes())
   if (letters) api.use(mailRoutes())

@@ -8,9 +8,15 @@ export type HttpLimits = {
   invitationsPerMin: number
   uploadsPerMin: number
   signInsPerMin: number
+  sheetsPerMin: number
 }
 
-export const HTTP_LIMITS: HttpLimits = { invitationsPerMin: 30, uploadsPerMin: 240, signInsPerMin: 20 }
+export const HTTP_LIMITS: HttpLimits = {
+  invitationsPerMin: 30,
+  uploadsPerMin: 240,
+  signInsPerMin: 20,
+  sheetsPerMin: 20,
+}
 
 /** Refuses what comes faster than the limit, in words that say how long to wait. */
 export function limitPerMin(limit: number, what: string): RequestHandler {

@@ -13,6 +13,7 @@ import {
   RECIPE,
   makeFullWorld,
   pictureForm,
+  sheetForm,
 } from '#tests/support/rights-world.ts'
 import { routesOf } from '#tests/support/routes.ts'
 
@@ -272,6 +273,12 @@ const TABLE: readonly Row[] = [
 
   { route: 'GET /api/shoots/:shootId/kit', expected: inShoot(anyRole), path: shoot('/kit') },
   { route: 'GET /api/shoots/:shootId/recipes', expected: inShoot(anyRole), path: shoot('/recipes') },
+  {
+    route: 'POST /api/shoots/:shootId/setups/:setupId/recipe-sheet',
+    expected: inShoot(anyRole),
+    path: (w) => shoot(`/setups/${w.setupId}/recipe-sheet`)(w),
+    body: () => sheetForm(),
+  },
   { route: 'GET /api/shoots/:shootId/comments', expected: inShoot(anyRole), path: shoot('/comments') },
   {
     route: 'POST /api/shoots/:shootId/comments',

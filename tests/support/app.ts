@@ -77,7 +77,7 @@ export async function startTestApp(
     clientDir,
     letters: true,
     metrics: { stats: () => quietFigures, loopDelay: () => quietFigures.commitMs, version: '0.0.0' },
-    limits: { invitationsPerMin: GENEROUS, uploadsPerMin: GENEROUS },
+    limits: { invitationsPerMin: GENEROUS, uploadsPerMin: GENEROUS, sheetsPerMin: GENEROUS },
     ...more,
   })
   const server = createServer(app)

@@ -1,8 +1,10 @@
 import { randomUUID } from 'node:crypto'
 import sharp from 'sharp'
+import type * as Y from 'yjs'
 import { lookIdSchema, pieceIdSchema, sitterIdSchema, uploadIdSchema } from '#shared/ids.ts'
+import type { WholeSetup } from '#shared/domain/plan/read-plan.ts'
 import { putItems } from '#shared/realtime/collection.ts'
-import { looks, pieces, sitters } from '#shared/realtime/documents.ts'
+import { lights, looks, pieces, props, setups, sitterPlaces, sitters } from '#shared/realtime/documents.ts'
 import type { Actor } from '#server/context.ts'
 import { addComment } from '#server/features/comments/add-comment.ts'
 import { loadKit } from '#server/features/kit/kit-rows.ts'
@@ -15,7 +17,7 @@ import { addRoom } from '#server/features/shoots/add-room.ts'
 import { listSignOffs } from '#server/features/sign-off/list-sign-offs.ts'
 import { inviteToStudio } from '#server/features/studios/invite-to-studio.ts'
 import { keepVersion } from '#server/features/versions/keep-version.ts'
-import { toRecipe } from '#shared/domain/recipes/recipe.ts'
+import { fromRecipe, toRecipe } from '#shared/domain/recipes/recipe.ts'
 import { deliverableInputSchema, roomInputSchema } from '#shared/domain/shoots/schema.ts'
 import type { TestApp } from '#tests/support/app.ts'
 import { type World, makeWorld } from '#tests/support/factories.ts'
@@ -47,6 +49,21 @@ export const RECIPE = toRecipe(
   whole({ lights: [light(1, { purpose: 'main', at: [-1, 2, 1], aim: [0, 1.5, 0], modifier: OCTA })] }),
 )
 
+/** Puts a setup with all that stands in it into a lighting document. */
+export function putWhole(doc: Y.Doc, whole: WholeSetup): void {
+  putItems(doc, setups, [whole.setup], Math.random)
+  putItems(doc, lights, whole.lights, Math.random)
+  putItems(doc, sitterPlaces, whole.places, Math.random)
+  putItems(doc, props, whole.props, Math.random)
+}
+
+/** What asks for a recipe sheet, without pictures. */
+export function sheetForm(more: Record<string, unknown> = {}): FormData {
+  const form = new FormData()
+  form.set('sheet', JSON.stringify({ paper: 'A4', unit: 'm', ...more }))
+  return form
+}
+
 /** A world with something of everything in it, secrets included. */
 export type FullWorld = World & {
   who: Readonly<Record<Who, Actor | undefined>>
@@ -61,6 +78,7 @@ export type FullWorld = World & {
   uploadId: string
   versionId: string
   recipeId: string
+  setupId: string
   studioInvitationId: string
 }
 
@@ -117,6 +135,8 @@ export async function makeFullWorld(app: TestApp): Promise<FullWorld> {
   ).send('PUT', `/api/shoots/${shootId}/uploads/${uploadId}`, await pictureForm())
   if (stored.status !== 200) throw new Error(`The picture was not taken: ${stored.text}`)
   const { versions } = await keepVersion(ctx, { shootId, name: 'First idea' })
+  const lit = fromRecipe(RECIPE, { newId: randomUUID })
+  await app.documents.write(shootId, 'lighting', photographer.userId, (doc) => putWhole(doc, lit))
   const { recipes } = await keepRecipe(ctx, { studioId, content: RECIPE })
   const { current } = await listSignOffs(ctx, shootId)
   return {
@@ -143,6 +163,7 @@ export async function makeFullWorld(app: TestApp): Promise<FullWorld> {
     uploadId,
     versionId: versions[0]?.id ?? '',
     recipeId: recipes[0]?.id ?? '',
+    setupId: lit.setup.id,
     studioInvitationId: invitations[0]?.id ?? '',
   }
 }

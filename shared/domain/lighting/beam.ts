@@ -17,8 +17,11 @@ export function gaussianProfile(offAxisDeg: number, beamDeg: number): number {
 
 /** cosⁿ profile; 0 from 90° off axis. */
 export function cosineProfile(offAxisDeg: number, beamDeg: number): number {
-  if (offAxisDeg >= 90) return 0
-  return Math.cos((offAxisDeg * Math.PI) / 180) ** cosineExponent(beamDeg)
+  return cosinePower(offAxisDeg, cosineExponent(beamDeg))
+}
+
+function cosinePower(offAxisDeg: number, exponent: number): number {
+  return offAxisDeg >= 90 ? 0 : Math.cos((offAxisDeg * Math.PI) / 180) ** exponent
 }
 
 /** Share of the width of the covered angle over which a bare zoom head fades (assumption). */
@@ -29,31 +32,43 @@ const SOFT_EDGE = 0.35
  * (assumption).
  */
 export function zoomHeadProfile(offAxisDeg: number, zoomMm: number): number {
+  return zoomProfile(zoomMm)(offAxisDeg)
+}
+
+function zoomProfile(zoomMm: number): (offAxisDeg: number) => number {
   const across = angleOfViewDeg(FRAME_LONG_MM, zoomMm)
   const upright = angleOfViewDeg(FRAME_SHORT_MM, zoomMm)
   const half = (across + upright) / 4
   const fade = Math.max(3, half * SOFT_EDGE * 2)
-  const beyond = (offAxisDeg - half + fade / 2) / fade
-  if (beyond <= 0) return 1
-  if (beyond >= 1) return 0
-  return 1 - beyond * beyond * (3 - 2 * beyond)
+  return (offAxisDeg) => {
+    const beyond = (offAxisDeg - half + fade / 2) / fade
+    if (beyond <= 0) return 1
+    if (beyond >= 1) return 0
+    return 1 - beyond * beyond * (3 - 2 * beyond)
+  }
 }
 
 export type BeamKind = 'gaussian' | 'cosine' | 'zoom head' | 'unknown'
 
-/**
- * Share of the intensity on axis that a head gives off axis: from the modifier's beam angle, else from a bare head's
- * zoom, else 1 (unknown; nothing is taken off).
- */
-export function relativeIntensity(
-  offAxisDeg: number,
-  head: { beamDeg: number | null; zoomMm: number | null; bare: boolean },
-): { share: number; kind: BeamKind } {
-  if (head.beamDeg !== null && head.beamDeg > 0 && head.beamDeg < 180) {
-    return head.beamDeg <= 90
-      ? { share: gaussianProfile(offAxisDeg, head.beamDeg), kind: 'gaussian' }
-      : { share: cosineProfile(offAxisDeg, head.beamDeg), kind: 'cosine' }
+/** What is known of a head's beam. */
+export type Beam = { beamDeg: number | null; zoomMm: number | null; bare: boolean }
+
+/** Share of the intensity on axis by the angle off axis in degrees. */
+export type Profile = { kind: BeamKind; shareAt: (offAxisDeg: number) => number }
+
+/** The profile of a head: from its beam angle, else from a bare head's zoom, else 1 (unknown; nothing is taken off). */
+export function profileOf({ beamDeg, zoomMm, bare }: Beam): Profile {
+  if (beamDeg !== null && beamDeg > 0 && beamDeg < 180) {
+    if (beamDeg <= 90) return { kind: 'gaussian', shareAt: (offAxisDeg) => gaussianProfile(offAxisDeg, beamDeg) }
+    const exponent = cosineExponent(beamDeg)
+    return { kind: 'cosine', shareAt: (offAxisDeg) => cosinePower(offAxisDeg, exponent) }
   }
-  if (head.bare && head.zoomMm !== null) return { share: zoomHeadProfile(offAxisDeg, head.zoomMm), kind: 'zoom head' }
-  return { share: offAxisDeg < 90 || !head.bare ? 1 : 0, kind: 'unknown' }
+  if (bare && zoomMm !== null) return { kind: 'zoom head', shareAt: zoomProfile(zoomMm) }
+  return { kind: 'unknown', shareAt: (offAxisDeg) => (offAxisDeg < 90 || !bare ? 1 : 0) }
+}
+
+/** `profileOf` at one angle. */
+export function relativeIntensity(offAxisDeg: number, head: Beam): { share: number; kind: BeamKind } {
+  const { kind, shareAt } = profileOf(head)
+  return { share: shareAt(offAxisDeg), kind }
 }

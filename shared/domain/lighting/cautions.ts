@@ -1,16 +1,18 @@
 import type { WholeSetup } from '#shared/domain/plan/read-plan.ts'
-import type { UnitNumbers } from '#shared/domain/kit/schema.ts'
+import { type BoomBalance, boomBalanceOf, loadKgOf } from './boom.ts'
 import type { Orientation } from './frame.ts'
 import { frameCautions } from './in-frame.ts'
 import { faceOf, faceRadiusM, outputOf } from './light-output.ts'
-import { counterweightKg, fullPopsFor, recycleS } from './power.ts'
+import { LONG_LOAD_SHARE, type MainsLoad } from './mains.ts'
+import { type Supply, suppliesOf } from './power.ts'
 import { type SetupReading, readSetup } from './readings.ts'
-import { type Light, isLamp } from './schema.ts'
+import type { Light } from './schema.ts'
 import { SOCKET_LIMIT_DEG } from './softness.ts'
-import { stopsBetween } from './stops.ts'
+import { shutterLabel, stopsBetween } from './stops.ts'
+import type { Sync } from './sync.ts'
 import { fNumberLabel, inSentence, metresLabel, powerLabel, purposeWord } from './words.ts'
 
-/** `red`: must be put right (in frame, out of balance, over power). `mind`: take care. `fine`: settled, with its number. */
+/** `red`: must be put right (in frame, over load, over power). `mind`: take care. `fine`: settled, with its number. */
 export type Caution = {
   key: string
   tone: 'red' | 'mind' | 'fine'
@@ -33,22 +35,28 @@ const DEFAULTS: CautionOptions = { orientations: ['upright'], frames: null }
 /** Heads above this stand with a bag, metres; faces larger than this catch draughts, m² (assumptions). */
 const BAG_ABOVE_M = 1.8
 const SAIL_M2 = 0.5
-/** Arm, counterweight arm and arm mass of a boom whose own are not known (assumption). */
-const BOOM = { loadArmM: 1.5, weightArmM: 0.5, armMassKg: 1 }
-/** Fastest shutter with ordinary flash when the camera's own is not known, seconds (assumption). */
-const SYNC_S = 1 / 200
 /** Nearer than this a strong flash is unkind to eyes and skin, metres (assumption). */
 const NEAR_M = 0.5
 
-function loadKg(light: Light): number {
-  return light.unit.numbers.massKg.value + (light.modifier?.numbers.massKg.value ?? 0)
+const metresExact = (value: number) => `${Number(value.toFixed(2))} m`
+
+const BOOM_PARTS: Readonly<Record<BoomBalance['assumed'][number], string>> = {
+  reachM: 'reach',
+  counterReachM: 'place of the counterweight',
+  armMassKg: 'mass of the arm',
+}
+
+function boomHow({ reachM, counterReachM, armMassKg, assumed }: BoomBalance): string {
+  const parts = assumed.map((part) => BOOM_PARTS[part])
+  const from = parts.length === 0 ? 'the boom’s own numbers' : `assumed: ${parts.join(', ')}; put in your boom’s own`
+  return `W = (w·a + m(a − b)/2)/b with an arm of ${armMassKg} kg, a = ${metresExact(reachM)}, b = ${metresExact(counterReachM)} (${from}).`
 }
 
 function supportCautions(light: Light): Caution[] {
   const { support } = light
   if (!support) return []
   const name = purposeWord(light.purpose).toLowerCase()
-  const load = loadKg(light)
+  const load = loadKgOf(light)
   const { kind, maxHeightM, maxLoadKg } = support.numbers
   const cautions: Caution[] = []
   const add = (key: string, tone: Caution['tone'], title: string, words: string, how: string) =>
@@ -72,14 +80,15 @@ function supportCautions(light: Light): Caution[] {
       `Support height ${maxHeightM.value} m (${maxHeightM.from}).`,
     )
   }
-  if (kind === 'boom') {
-    const weight = counterweightKg(load, BOOM.loadArmM, BOOM.weightArmM, BOOM.armMassKg)
+  const boom = boomBalanceOf(light)
+  if (boom) {
+    const weight = boom.counterweightKg
     add(
       'boom',
       'mind',
       `Balance and bag the ${name} boom`,
-      `${load.toFixed(1)} kg out at ${BOOM.loadArmM} m wants about ${weight.toFixed(1)} kg at ${BOOM.weightArmM} m, and a bag on the base. Nobody sits under it. The boom maker’s limits and the venue’s rules decide.`,
-      `W = (w·a + m(a − b)/2)/b with an arm of ${BOOM.armMassKg} kg, a = ${BOOM.loadArmM} m, b = ${BOOM.weightArmM} m (assumed: put in your boom’s own). ${massHow}`,
+      `${load.toFixed(1)} kg out at ${metresExact(boom.reachM)} wants about ${weight.toFixed(1)} kg at ${metresExact(boom.counterReachM)}${weight > 0 ? ` (${boom.bags}, slid until it balances)` : ''}, and a bag on the base. Nobody sits under it. The boom maker’s limits and the venue’s rules decide.`,
+      `${boomHow(boom)} ${massHow}`,
     )
   } else if (kind === 'stand') {
     const { widthM, heightM } = faceOf(light)
@@ -118,7 +127,7 @@ function powerCautions(light: Light): Caution[] {
   const closed =
     light.modifier !== null &&
     ['snoot', 'grid', 'softbox', 'octa', 'strip', 'lantern'].includes(light.modifier.numbers.shape)
-  if (light.power >= 0.5 && (light.gels.length > 0 || closed)) {
+  if (light.isOn && light.power >= 0.5 && (light.gels.length > 0 || closed)) {
     cautions.push({
       key: `${light.id}:heat`,
       tone: 'mind',
@@ -133,7 +142,7 @@ function powerCautions(light: Light): Caution[] {
 
 function eyeCautions(reading: SetupReading, whole: WholeSetup): Caution[] {
   const { main } = reading
-  const mainLight = whole.lights.find((light) => light.purpose === 'main')
+  const mainLight = whole.lights.find((light) => light.id === main?.lightId)
   if (!main || !mainLight) return []
   const words = `The main stands ${Math.round(Math.abs(main.elevationDeg))}° ${main.elevationDeg >= 0 ? 'above' : 'below'} the eye line.`
   const how = `atan(rise / distance on the floor). Pupils fall into the brow’s shadow above about ${Math.round(SOCKET_LIMIT_DEG)}°: a rule of thumb from assumed face measures (brow to pupil 12 mm, overhang 15 mm).`
@@ -152,6 +161,7 @@ function eyeCautions(reading: SetupReading, whole: WholeSetup): Caution[] {
   const near = reading.lights.find(
     (light) =>
       light.where === 'sitter' &&
+      light.isOn &&
       light.distanceM - faceRadius(whole, light.lightId) < NEAR_M &&
       light.fullGuideNumberM > 0,
   )
@@ -176,7 +186,7 @@ function faceRadius(whole: WholeSetup, lightId: string): number {
 function exposureCautions(reading: SetupReading, whole: WholeSetup): Caution[] {
   const { camera } = whole.setup
   const cautions: Caution[] = []
-  const main = whole.lights.find((light) => light.purpose === 'main')
+  const main = whole.lights.find((light) => light.id === reading.main?.lightId)
   if (main && reading.mainFNumber !== null && reading.mainFNumber > 0) {
     const short = stopsBetween(camera.fNumber, reading.totalFNumber)
     const room = stopsBetween(1, Math.sqrt(main.power))
@@ -201,59 +211,94 @@ function exposureCautions(reading: SetupReading, whole: WholeSetup): Caution[] {
       })
     }
   }
-  if (whole.lights.length > 0 && camera.shutterS < SYNC_S * 0.95) {
-    cautions.push({
-      key: 'sync',
-      tone: 'mind',
-      title: 'Shutter may be faster than the flash',
-      words: 'Above the camera’s sync speed a part of the frame stays dark.',
-      lightId: null,
-      how: 'Sync speed taken as 1/200 s (assumed; your camera’s own decides).',
-    })
-  }
   return cautions
 }
 
-function batteryCautions(whole: WholeSetup, frames: number): Caution[] {
-  let worst: { light: Light; share: number; numbers: UnitNumbers } | null = null
-  for (const light of whole.lights) {
-    const { numbers } = light.unit
-    if (isLamp(numbers)) continue
-    const share = fullPopsFor(frames, light.power) / numbers.fullPops.value
-    if (!worst || share > worst.share) worst = { light, share, numbers }
-  }
-  if (!worst) return []
-  const { light, share } = worst
-  const { fullPops, fullRecycleS } = worst.numbers
-  const name = purposeWord(light.purpose).toLowerCase()
-  const pops = Math.ceil(fullPopsFor(frames, light.power))
-  const words = `${frames} frames: ${pops} full pops of ${fullPops.value} from the ${name}. Ready again in ${recycleS(fullRecycleS.value, light.power).toFixed(1)} s.`
-  const how = `Frames × power; recycling = full recycle × power (assumption). Pops ${fullPops.from}, recycle ${fullRecycleS.from}. Cells give less when old or cold.`
+function syncCautions(sync: Sync | null): Caution[] {
+  if (!sync?.isTooFast) return []
+  const limit = shutterLabel(sync.limitS)
   return [
-    share > 0.8
-      ? { key: 'power', tone: 'mind', title: 'Bring fresh batteries', words, lightId: light.id, how }
-      : { key: 'power', tone: 'fine', title: 'Power to spare', words, lightId: light.id, how },
+    {
+      key: 'sync',
+      tone: 'mind',
+      title: 'Shutter may be faster than the flash',
+      words: `At ${shutterLabel(sync.shutterS)} a part of the frame stays dark: flash lights all of it up to ${limit}${sync.isAssumed ? ' (assumed)' : ''}.${sync.units.length > 0 ? ` ${sync.units.join('. ')}.` : ''}`,
+      lightId: null,
+      how: sync.isAssumed
+        ? `Sync speed taken as ${limit} s (assumed; your camera’s own decides).`
+        : `Sync speed of the camera as put in: ${limit} s.`,
+    },
   ]
+}
+
+/** From this share of a charge on fresh ones are asked for (assumption). */
+const FRESH_FROM = 0.8
+
+function batteryCautions(whole: WholeSetup, frames: number, supplies: readonly Supply[]): Caution[] {
+  const lights = supplies
+    .flatMap((supply) => {
+      const light = whole.lights.find((candidate) => candidate.id === supply.lightId)
+      return light && supply.charges !== null ? [{ ...supply, light, charges: supply.charges }] : []
+    })
+    .sort((a, b) => b.charges - a.charges)
+  const short = lights.filter(({ charges }) => charges > FRESH_FROM)
+  return (short.length > 0 ? short : lights.slice(0, 1)).map(({ light, charges, pops, popsPerCharge, recycleS }) => {
+    const name = purposeWord(light.purpose).toLowerCase()
+    const sets = charges > 1 ? ` Bring ${Math.ceil(charges)} sets or charges.` : ''
+    const needs = charges > FRESH_FROM
+    return {
+      key: needs ? `${light.id}:power` : 'power',
+      tone: needs ? 'mind' : 'fine',
+      title: needs ? 'Bring fresh batteries' : 'Power to spare',
+      words: `${frames} frames: ${Math.ceil(pops ?? 0)} full pops of ${popsPerCharge} from the ${name}.${sets} Ready again in ${recycleS.toFixed(1)} s.`,
+      lightId: light.id,
+      how: `Frames × power; recycling = full recycle × power (assumption). Cells give less when old or cold.`,
+    }
+  })
+}
+
+function mainsCautions(mains: MainsLoad | null): Caution[] {
+  if (!mains) return []
+  const { circuit } = mains
+  const watts = `${Math.round(mains.watts)} W`
+  const defer = 'A licensed electrician and the venue decide; this is no permit.'
+  const how = `Sum of nameplate watts, every light on the mains at full power, dimmed or not. ${
+    circuit
+      ? `${circuit.volts} V × ${circuit.amps} A = ${Math.round(circuit.watts)} W; for three hours or more ${LONG_LOAD_SHARE * 100} %, ${Math.round(circuit.longWatts)} W (NEC 210.20(A); local code prevails).`
+      : 'Circuit not known: put in its voltage and rating.'
+  }`
+  const caution = (tone: Caution['tone'], title: string, words: string): Caution[] => [
+    { key: 'mains', tone, title, words: `${words} ${defer}`, lightId: null, how },
+  ]
+  if (!circuit) return caution('mind', 'Ask for the circuit', `The lights on the mains draw up to ${watts} together.`)
+  const of = `${watts} (${circuit.drawnA.toFixed(1)} A) of ${Math.round(circuit.watts)} W`
+  if (mains.watts > circuit.watts)
+    return caution('red', 'Too much for one circuit', `${of}: split the lights over circuits.`)
+  if (mains.watts > circuit.longWatts)
+    return caution('mind', 'Close to the circuit’s limit', `${of}: more than is planned on for three hours or more.`)
+  return caution('mind', 'Keep the circuit for the lights', `${of}. Nothing else belongs on it.`)
 }
 
 const TONES = ['red', 'mind', 'fine'] as const
 
 /**
  * What to mind about a setup, worst first: what stands in the picture, supports beyond their limits, power that is not
- * there, eyes, heat, batteries. Where the work can hurt, makers' limits and the venue's rules decide.
+ * there, sync, mains, eyes, heat, batteries. Where the work can hurt, makers' limits and the venue's rules decide.
  */
 export function cautionsOf(
   whole: WholeSetup,
   options: Partial<CautionOptions> = {},
-  reading: SetupReading = readSetup(whole),
+  reading: SetupReading = readSetup(whole, options),
 ): Caution[] {
   const { orientations, frames } = { ...DEFAULTS, ...options }
   const all = [
     ...frameCautions(whole, orientations.length > 0 ? orientations : DEFAULTS.orientations),
     ...whole.lights.flatMap((light) => [...supportCautions(light), ...powerCautions(light)]),
     ...exposureCautions(reading, whole),
+    ...syncCautions(reading.sync),
+    ...mainsCautions(reading.mains),
     ...eyeCautions(reading, whole),
-    ...(frames === null ? [] : batteryCautions(whole, frames)),
+    ...(frames === null ? [] : batteryCautions(whole, frames, suppliesOf(whole.lights, frames))),
   ]
   return TONES.flatMap((tone) => all.filter((caution) => caution.tone === tone))
 }

@@ -7,6 +7,8 @@ import type { UnitNumbers } from '#shared/domain/kit/schema.ts'
 
 /** Incident meter constant C, lx·s: the one all readings here use. */
 export const METER_CONSTANT_C = 250
+/** Reflected-light meter constant K, cd·s/m² (ISO 2720). */
+const METER_CONSTANT_K = 12.5
 
 /** Guide number at another sensitivity: GN₁₀₀·√(ISO/100). */
 export function guideNumberAtIso(guideNumberM: number, iso: number): number {
@@ -61,6 +63,11 @@ export function fNumberOfExposure(exposureLxS: number, iso: number): number {
 /** Luminous exposure that a reading stands for, lx·s: H = C·N²/S. */
 export function exposureOfFNumber(fNumber: number, iso: number): number {
   return (METER_CONSTANT_C * fNumber ** 2) / iso
+}
+
+/** Luminance that a reflected-light meter calls right, cd/m²: L = K·N²/(t·S) (ISO 2720, K = 12.5). */
+export function meteredLuminance(fNumber: number, shutterS: number, iso: number): number {
+  return (METER_CONSTANT_K * fNumber ** 2) / (shutterS * iso)
 }
 
 /** Luminous exposure of a steady light, lx·s: H = E·t. */

@@ -22,15 +22,32 @@ export function frameSidesMm(orientation: Orientation): { widthMm: number; heigh
 /** What a camera sees: its place, unit vectors and the tangents of half the angles of view. */
 export type View = { at: Point; forward: Point; right: Point; up: Point; tanAcross: number; tanUp: number }
 
+/** Nearer to each other than this, camera and aim leave no direction, metres. */
+const NO_DIRECTION_M = 1e-6
+
+/** Looking along `forward` (a unit vector), upright; straight up or down the top of the picture is away from z. */
+function viewAlong(at: Point, forward: Point, tanAcross: number, tanUp: number): View {
+  const flat = Math.hypot(forward[0], forward[2])
+  const away: Point = flat < NO_DIRECTION_M ? [0, 0, -1] : [forward[0] / flat, 0, forward[2] / flat]
+  const up: Point = [-away[0] * forward[1], flat, -away[2] * forward[1]]
+  const right: Point = [-away[2], 0, away[0]]
+  return { at, forward, right, up, tanAcross, tanUp }
+}
+
 /**
- * The camera's view. It looks at the sitters' middle and is tilted so that the eyes lie a third below the top edge
- * (assumption: where it points is not written in the setup).
+ * The camera's view: at its aim, or without one at the sitters' middle, tilted so that the eyes lie a third below the
+ * top edge (assumption).
  */
 export function viewOf(whole: Pick<WholeSetup, 'setup' | 'places'>, orientation: Orientation): View {
-  const { at, focalMm } = whole.setup.camera
+  const { at, focalMm, aim } = whole.setup.camera
   const { widthMm, heightMm } = frameSidesMm(orientation)
   const tanAcross = widthMm / (2 * focalMm)
   const tanUp = heightMm / (2 * focalMm)
+  if (aim) {
+    const [x, y, z] = minus(aim, at)
+    const length = Math.hypot(x, y, z)
+    if (length > NO_DIRECTION_M) return viewAlong(at, [x / length, y / length, z / length], tanAcross, tanUp)
+  }
   const count = whole.places.length
   const mean = (value: (place: WholeSetup['places'][number]) => number, none: number) =>
     count === 0 ? none : whole.places.reduce((sum, place) => sum + value(place), 0) / count
@@ -39,11 +56,35 @@ export function viewOf(whole: Pick<WholeSetup, 'setup' | 'places'>, orientation:
   const flat = Math.hypot(x, z) || 1e-9
   const rise = mean((place) => place.eyeHeightM, ASSUMED_EYE_HEIGHT_M) - at[1]
   const pitch = Math.atan2(rise, flat) - Math.atan(tanUp / 3)
-  const away: Point = [x / flat, 0, z / flat]
-  const forward: Point = [away[0] * Math.cos(pitch), Math.sin(pitch), away[2] * Math.cos(pitch)]
-  const up: Point = [-away[0] * Math.sin(pitch), Math.cos(pitch), -away[2] * Math.sin(pitch)]
-  const right: Point = [-away[2], 0, away[0]]
-  return { at, forward, right, up, tanAcross, tanUp }
+  return viewAlong(at, [(x / flat) * Math.cos(pitch), Math.sin(pitch), (z / flat) * Math.cos(pitch)], tanAcross, tanUp)
+}
+
+/** A point in the picture: across and up from its middle in halves of the picture (±1 are the edges), and its depth. */
+export type Seen = { across: number; up: number; depthM: number }
+
+/** Where a point lies in the picture; null behind the camera. */
+export function projected(view: View, point: Point): Seen | null {
+  const offset = minus(point, view.at)
+  const depthM = dot(offset, view.forward)
+  if (depthM <= NEAREST_M) return null
+  return {
+    across: dot(offset, view.right) / (depthM * view.tanAcross),
+    up: dot(offset, view.up) / (depthM * view.tanUp),
+    depthM,
+  }
+}
+
+/** The direction in which a place of the picture is seen, not of unit length: depth along the axis is 1. */
+export function rayThrough(view: View, across: number, up: number): Point {
+  const along = (axis: 0 | 1 | 2) =>
+    view.forward[axis] + view.right[axis] * across * view.tanAcross + view.up[axis] * up * view.tanUp
+  return [along(0), along(1), along(2)]
+}
+
+/** The point at a place of the picture and a depth along the camera's axis, metres: `projected` turned back. */
+export function unprojected(view: View, { across, up, depthM }: Seen): Point {
+  const ray = rayThrough(view, across, up)
+  return [view.at[0] + ray[0] * depthM, view.at[1] + ray[1] * depthM, view.at[2] + ray[2] * depthM]
 }
 
 /** How far a thing stays outside the picture, metres at its own depth; negative when it is in. */
@@ -78,8 +119,8 @@ export function clearanceOf(view: View, corners: readonly Point[]): Clearance | 
 }
 
 /** Half the width of a sitter's body, and what rises above the eyes, metres (assumed measures). */
-const BODY_HALF_M = 0.2
-const CROWN_M = 0.12
+export const BODY_HALF_M = 0.2
+export const CROWN_M = 0.12
 
 /** Whether a sitter's body hides all corners of a thing behind it, as seen from the camera. */
 export function hiddenBySitter(view: View, places: WholeSetup['places'], corners: readonly Point[]): boolean {

@@ -13,11 +13,17 @@ export function reflectanceOf(colour: string): number {
 }
 
 /**
- * What a panel gives to the face from the mains and fills that light it: an f-number at this ISO. The panel is one
+ * What a panel gives to the face from the mains and fills that light it: an f-number at this ISO,
+ * lamps at this shutter time in seconds. The panel is one
  * matte (Lambertian) patch, E = ρ·E₀·A·cos φ/(π·d² + A) with d from its middle; other walls give nothing (assumption).
  * The face must be on the side that is lit.
  */
-export function panelReading(panel: Prop, lights: readonly Light[], face: Point, iso: number): number {
+export function panelReading(
+  panel: Prop,
+  lights: readonly Light[],
+  face: Point,
+  { iso, shutterS }: { iso: number; shutterS: number },
+): number {
   const normal = panelNormal(panel.turnDeg)
   const toFace = minus(face, panel.at)
   const distanceM = distanceBetween(face, panel.at)
@@ -30,7 +36,7 @@ export function panelReading(panel: Prop, lights: readonly Light[], face: Point,
     const toLight = minus(light.at, panel.at)
     const lightSide = dot(normal, toLight) / Math.max(0.05, Math.hypot(...toLight))
     if (lightSide * faceSide <= 0) continue
-    const onPanel = arrivalAt(light, panel.at, iso).exposureLxS * Math.abs(lightSide)
+    const onPanel = arrivalAt(light, panel.at, iso, shutterS).exposureLxS * Math.abs(lightSide)
     exposureLxS +=
       (reflectanceOf(panel.colour) * onPanel * areaM2 * Math.abs(faceSide)) / (Math.PI * distanceM ** 2 + areaM2)
   }

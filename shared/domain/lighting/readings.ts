@@ -1,22 +1,34 @@
 import type { WholeSetup } from '#shared/domain/plan/read-plan.ts'
+import { isBehindBackground, mainFNumberOf } from './at-sitter.ts'
+import { type BoomBalance, boomBalanceOf } from './boom.ts'
 import { ambientExposure, combineFNumbers, fNumberOfExposure } from './exposure.ts'
-import { shifted, stackGels } from './gel.ts'
+import type { Orientation } from './frame.ts'
+import { type Framing, framingOf } from './framing.ts'
+import { miredOf, shifted, stackGels } from './gel.ts'
 import { distanceBetween, facePoint, floorDistance, mainPlace } from './geometry.ts'
 import { type Depth, depthOfField } from './lens.ts'
-import { type Arrival, arrivalAt, axisOnWall, faceOf, incidenceShare } from './light-output.ts'
+import { type Arrival, NEAREST_M, arrivalAt, axisOnWall, faceOf, incidenceShare } from './light-output.ts'
 import { ownColourK } from './light-source.ts'
+import { type MainsLoad, mainsLoadOf } from './mains.ts'
 import { panelReading } from './panel.ts'
+import { type Supply, suppliesOf } from './power.ts'
+import { type Problem, problemsOf } from './problems.ts'
 import { mainToFill, ratioOfStops } from './ratio.ts'
 import { apparentSizeDeg, elevationDeg, penumbraM } from './softness.ts'
-import type { Light, LightPurpose, Point } from './schema.ts'
+import { type Light, type LightPurpose, type Point, isLamp } from './schema.ts'
 import { stopsBetween } from './stops.ts'
+import { type Sync, syncOf } from './sync.ts'
+import { type Glow, glowOf } from './wall.ts'
 
 export type LightReading = Arrival & {
   lightId: string
   purpose: LightPurpose
+  /** Off: it reads 0. */
+  isOn: boolean
+  isLamp: boolean
   /** Where it is read: at the sitter's eyes, or on the wall where a background light's axis meets it. */
   where: 'sitter' | 'wall'
-  /** Stops under all mains together at the sitter; negative is over. Null without a main. */
+  /** Stops under all mains together at the sitter; negative is over. Null without a main, or when it gives nothing. */
   underMainStops: number | null
   /** Colour of its light behind its gels, kelvin; null when it is bluer than any colour temperature. */
   colourK: number | null
@@ -40,7 +52,21 @@ export type Ratio = {
   fillFNumber: number
 }
 
+export type AmbientReading = {
+  fNumber: number
+  /** Stops under all flash at the sitter (mains, fills, panels); negative is over. Null without flash there. */
+  underFlashStops: number | null
+  kelvin: number
+  /** Its colour is not known: the camera's white balance is taken. */
+  isKelvinAssumed: boolean
+  /** Against the camera's white balance: positive is warmer. */
+  miredFromWhite: number
+}
+
 export type MainReading = {
+  lightId: string
+  /** Of the middle of its face above the eyes, metres. */
+  aboveEyesM: number
   elevationDeg: number
   apparentSizeDeg: number
   /** Soft edge of a shadow thrown from five centimetres, metres. */
@@ -51,6 +77,8 @@ export type WallReading = {
   point: Point
   /** Stops of the mains' spill behind the sitter under the mains at the sitter; null without spill. */
   mainUnderStops: number | null
+  /** The main that spills most on that point: its angle off axis, and the cosine at which it meets the wall. */
+  main: { lightId: string; offAxisDeg: number; cosine: number; distanceM: number } | null
   /** Brightest background light on the wall, stops under the mains; null without one. */
   lightUnderStops: number | null
   /** Colour of that light, kelvin; null without one, or where there is no colour temperature. */
@@ -66,6 +94,7 @@ export type SetupReading = {
   /** All mains together at the sitter; null without a main. */
   mainFNumber: number | null
   ambientFNumber: number | null
+  ambient: AmbientReading | null
   ratio: Ratio | null
   /** Main, fill, panels and ambient together: what a meter at the face shows towards the camera. */
   totalFNumber: number
@@ -74,6 +103,23 @@ export type SetupReading = {
   cameraToSitterM: number
   sitterToWallM: number
   depth: Depth
+  /** Null: the camera sees no lit wall. */
+  glow: Glow | null
+  /** One for each orientation asked for. */
+  framing: Framing[]
+  /** Of each flash that is on. */
+  supplies: Supply[]
+  sync: Sync | null
+  booms: (BoomBalance & { lightId: string })[]
+  mains: MainsLoad | null
+  problems: Problem[]
+}
+
+export type ReadingOptions = {
+  /** Orientations of the shots that use the setup; the first one frames the glow. */
+  orientations: readonly Orientation[]
+  /** Frames of all shots that use the setup; null: no shot. */
+  frames: number | null
 }
 
 /** What stands behind the sitter's head on the camera's line: where the wall is read. */
@@ -96,12 +142,20 @@ function readWall(
   read: readonly LightReading[],
 ): WallReading {
   const point = wallPoint(whole, face)
-  const { iso } = whole.setup.camera
-  const spill = whole.lights
+  const { iso, shutterS } = whole.setup.camera
+  const spills = whole.lights
     .filter((light) => light.purpose === 'main')
-    .map((light) => arrivalAt(light, point, iso).exposureLxS * incidenceShare(light, point, [0, 0, 1]))
-    .reduce((sum, exposure) => sum + exposure, 0)
-  const spillFNumber = fNumberOfExposure(spill, iso)
+    .map((light) => {
+      const { exposureLxS, offAxisDeg, distanceM } = arrivalAt(light, point, iso, shutterS)
+      const cosine = incidenceShare(light, point, [0, 0, 1])
+      return { lightId: light.id, offAxisDeg, cosine, distanceM, exposureLxS: exposureLxS * cosine }
+    })
+    .sort((a, b) => b.exposureLxS - a.exposureLxS)
+  const spillFNumber = fNumberOfExposure(
+    spills.reduce((sum, spill) => sum + spill.exposureLxS, 0),
+    iso,
+  )
+  const [most] = spills
   const onWall = read.filter((reading) => reading.where === 'wall')
   const brightest = onWall.reduce<LightReading | null>(
     (best, next) => (best && best.fNumber >= next.fNumber ? best : next),
@@ -110,6 +164,10 @@ function readWall(
   return {
     point,
     mainUnderStops: mainFNumber === null || spillFNumber < 1e-3 ? null : stopsBetween(mainFNumber, spillFNumber),
+    main:
+      most && most.exposureLxS > 0
+        ? { lightId: most.lightId, offAxisDeg: most.offAxisDeg, cosine: most.cosine, distanceM: most.distanceM }
+        : null,
     lightUnderStops:
       mainFNumber === null || !brightest || brightest.fNumber <= 0
         ? null
@@ -121,55 +179,83 @@ function readWall(
 
 /** A background light is read on the wall where its axis meets it, with the cosine; everything else at the face. */
 function readLight(light: Light, whole: WholeSetup, face: Point): Omit<LightReading, 'underMainStops'> {
-  const { iso } = whole.setup.camera
-  const target = light.purpose === 'background' ? axisOnWall(light, whole.setup.background.zM) : null
-  const arrival = arrivalAt(light, target ?? face, iso)
-  const share = target ? incidenceShare(light, target, [0, 0, 1]) : 1
+  const { background, camera } = whole.setup
+  const target = light.purpose === 'background' ? axisOnWall(light, background.zM) : null
+  const arrival = arrivalAt(light, target ?? face, camera.iso, camera.shutterS)
+  const atFace = isBehindBackground(light, face, background) ? 0 : 1
+  const share = target ? incidenceShare(light, target, [0, 0, 1]) : atFace
   const exposureLxS = arrival.exposureLxS * share
   return {
     ...arrival,
     exposureLxS,
-    fNumber: fNumberOfExposure(exposureLxS, iso),
+    fNumber: fNumberOfExposure(exposureLxS, camera.iso),
     lightId: light.id,
     purpose: light.purpose,
+    isOn: light.isOn,
+    isLamp: isLamp(light.unit.numbers),
     where: target ? 'wall' : 'sitter',
     colourK: shifted(ownColourK(light.unit.numbers), stackGels(light.gels.map((gel) => gel.numbers)).miredShift),
   }
 }
 
+/** The first main that is on; when all are off, the first. */
+function firstMain(whole: WholeSetup): Light | undefined {
+  const mains = whole.lights.filter((light) => light.purpose === 'main')
+  return mains.find((light) => light.isOn) ?? mains[0]
+}
+
 function readMain(whole: WholeSetup, face: Point): MainReading | null {
-  const main = whole.lights.find((light) => light.purpose === 'main')
+  const main = firstMain(whole)
   if (!main) return null
   const { widthM, heightM } = faceOf(main)
-  const distanceM = Math.max(0.05, distanceBetween(main.at, face))
+  const distanceM = Math.max(NEAREST_M, distanceBetween(main.at, face))
   return {
+    lightId: main.id,
+    aboveEyesM: main.at[1] - face[1],
     elevationDeg: elevationDeg(main.at[1] - face[1], floorDistance(main.at, face)),
     apparentSizeDeg: apparentSizeDeg(Math.max(widthM, heightM), distanceM),
     penumbraM: penumbraM(Math.max(widthM, heightM), distanceM, 0.05),
   }
 }
 
+function readAmbient(whole: WholeSetup, flashFNumber: number): AmbientReading | null {
+  const { camera, ambientLux, ambientK } = whole.setup
+  if (ambientLux === null) return null
+  const fNumber = fNumberOfExposure(ambientExposure(ambientLux, camera.shutterS), camera.iso)
+  const kelvin = ambientK ?? camera.whiteBalanceK
+  return {
+    fNumber,
+    underFlashStops: flashFNumber > 0 && fNumber > 0 ? stopsBetween(flashFNumber, fNumber) : null,
+    kelvin,
+    isKelvinAssumed: ambientK === null,
+    miredFromWhite: miredOf(kelvin) - miredOf(camera.whiteBalanceK),
+  }
+}
+
+const DEFAULTS: ReadingOptions = { orientations: ['upright'], frames: null }
+
 /**
  * Everything the numbers of a setup say, at the eyes of the sitter on the origin: readings as f-numbers at the
- * camera's ISO (incident, C = 250), metered towards each light; ratio; what the main spills on the wall; height and
- * softness of the main; depth of field. Lights add linearly. Ambient and panels count as fill. Losses, beams and guide
- * numbers are as good as their sources in the kit.
+ * camera's ISO (incident, C = 250), metered towards each light; ratio; ambient against flash; what the main spills on the
+ * wall and the glow there; height and softness of the main; depth of field, framing; power, sync, booms, mains. Lights
+ * add linearly, those that are off give nothing. Ambient and panels count as fill. Losses, beams and guide numbers are as
+ * good as their sources in the kit. What cannot be worked out is in `problems`, and reads 0.
  */
-export function readSetup(whole: WholeSetup): SetupReading {
-  const { camera, background, ambientLux } = whole.setup
+export function readSetup(whole: WholeSetup, options: Partial<ReadingOptions> = {}): SetupReading {
+  const { orientations, frames } = { ...DEFAULTS, ...options }
+  const framed = orientations.length > 0 ? orientations : DEFAULTS.orientations
+  const { camera, background } = whole.setup
   const face = facePoint(whole)
   const raw = whole.lights.map((light) => readLight(light, whole, face))
   const of = (purpose: LightPurpose) =>
     raw.filter((reading) => reading.purpose === purpose && reading.where === 'sitter').map((reading) => reading.fNumber)
-  const mains = of('main')
-  const mainFNumber = mains.length === 0 ? null : combineFNumbers(mains)
-  const under = (fNumber: number) =>
-    mainFNumber === null || fNumber <= 0 || mainFNumber <= 0 ? null : stopsBetween(mainFNumber, fNumber)
+  const mainFNumber = mainFNumberOf(whole)
+  const under = (fNumber: number) => (mainFNumber === null || fNumber <= 0 ? null : stopsBetween(mainFNumber, fNumber))
   const lights = raw.map((reading) => ({ ...reading, underMainStops: under(reading.fNumber) }))
   const panels = whole.props
     .filter((prop) => prop.kind === 'panel')
     .map((prop) => {
-      const fNumber = panelReading(prop, whole.lights, face, camera.iso)
+      const fNumber = panelReading(prop, whole.lights, face, camera)
       return {
         propId: prop.id,
         name: prop.name,
@@ -178,11 +264,13 @@ export function readSetup(whole: WholeSetup): SetupReading {
         underMainStops: under(fNumber),
       }
     })
-  const ambientFNumber =
-    ambientLux === null ? null : fNumberOfExposure(ambientExposure(ambientLux, camera.shutterS), camera.iso)
+  const flashes = raw.filter(
+    (reading) => !reading.isLamp && reading.where === 'sitter' && ['main', 'fill'].includes(reading.purpose),
+  )
+  const ambient = readAmbient(whole, combineFNumbers([...flashes, ...panels].map((reading) => reading.fNumber)))
+  const ambientFNumber = ambient?.fNumber ?? null
   const fillFNumber = combineFNumbers([...of('fill'), ...panels.map((panel) => panel.fNumber), ambientFNumber ?? 0])
-  const ratioStops =
-    mainFNumber === null || fillFNumber <= 0 || mainFNumber <= 0 ? null : stopsBetween(mainFNumber, fillFNumber)
+  const ratioStops = mainFNumber === null || fillFNumber <= 0 ? null : stopsBetween(mainFNumber, fillFNumber)
   const cameraToSitterM = distanceBetween(camera.at, face)
   return {
     iso: camera.iso,
@@ -191,6 +279,7 @@ export function readSetup(whole: WholeSetup): SetupReading {
     panels,
     mainFNumber,
     ambientFNumber,
+    ambient,
     ratio:
       ratioStops === null
         ? null
@@ -201,5 +290,15 @@ export function readSetup(whole: WholeSetup): SetupReading {
     cameraToSitterM,
     sitterToWallM: (mainPlace(whole.places)?.at[1] ?? 0) - background.zM,
     depth: depthOfField(camera.focalMm, camera.fNumber, Math.max(0.1, cameraToSitterM)),
+    glow: glowOf(whole, framed[0], mainFNumber),
+    framing: framed.map((orientation) => framingOf(whole, orientation)),
+    supplies: suppliesOf(whole.lights, frames),
+    sync: syncOf(whole),
+    booms: whole.lights.flatMap((light) => {
+      const balance = boomBalanceOf(light)
+      return balance ? [{ lightId: light.id, ...balance }] : []
+    }),
+    mains: mainsLoadOf(whole),
+    problems: problemsOf(whole),
   }
 }

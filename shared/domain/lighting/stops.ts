@@ -43,9 +43,12 @@ export function roundToThird(fNumber: number): number {
   return fNumberOfThirds(Math.round(6 * Math.log2(fNumber)))
 }
 
-/** Powers a head can be set to, full first, in thirds of a stop down to 1/`minPowerDenominator`. */
+/** Slack for least powers that are printed rounded: 1/102 counts as 1/101.6, thirds. */
+const PRINTED_THIRDS = 0.03
+
+/** Powers a head can be set to, full first, in thirds of a stop down to 1/`minPowerDenominator` and never below. */
 export function powersOf(minPowerDenominator: number): number[] {
-  const thirds = Math.round(3 * Math.log2(minPowerDenominator))
+  const thirds = Math.floor(3 * Math.log2(Math.max(1, minPowerDenominator)) + PRINTED_THIRDS)
   return Array.from({ length: thirds + 1 }, (_, index) => 2 ** (-index / 3))
 }
 

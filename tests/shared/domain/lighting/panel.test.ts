@@ -29,18 +29,23 @@ describe('reflectanceOf', () => {
 
 describe('panelReading', () => {
   it('gives a fill some stops under the main, less when it is smaller, further off or black', () => {
-    const near = panelReading(panel(), [main], FACE, 100)
+    const near = panelReading(panel(), [main], FACE, { iso: 100, shutterS: 1 })
     expect(near).toBeGreaterThan(1)
     expect(near).toBeLessThan(40 / 1.6)
-    expect(panelReading(panel({ widthM: 0.5 }), [main], FACE, 100)).toBeLessThan(near)
-    expect(panelReading(panel({ at: [2, 1.4, 1.2] }), [main], FACE, 100)).toBeLessThan(near)
-    expect(panelReading(panel({ colour: '#000000' }), [main], FACE, 100)).toBe(0)
+    expect(panelReading(panel({ widthM: 0.5 }), [main], FACE, { iso: 100, shutterS: 1 })).toBeLessThan(near)
+    expect(panelReading(panel({ at: [2, 1.4, 1.2] }), [main], FACE, { iso: 100, shutterS: 1 })).toBeLessThan(near)
+    expect(panelReading(panel({ colour: '#000000' }), [main], FACE, { iso: 100, shutterS: 1 })).toBe(0)
   })
   it('gives nothing when the face is on the side that is not lit', () => {
     // The panel between main and face is lit from behind.
-    expect(panelReading(panel({ at: [-0.6, 1.5, 0.5], turnDeg: -50 }), [main], FACE, 100)).toBe(0)
+    expect(panelReading(panel({ at: [-0.6, 1.5, 0.5], turnDeg: -50 }), [main], FACE, { iso: 100, shutterS: 1 })).toBe(0)
   })
   it('gives nothing back from a rim or background light', () => {
-    expect(panelReading(panel(), [light(2, { purpose: 'rim', at: [-1, 2, -1], aim: FACE })], FACE, 100)).toBe(0)
+    expect(
+      panelReading(panel(), [light(2, { purpose: 'rim', at: [-1, 2, -1], aim: FACE })], FACE, {
+        iso: 100,
+        shutterS: 1,
+      }),
+    ).toBe(0)
   })
 })

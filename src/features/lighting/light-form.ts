@@ -1,3 +1,4 @@
+import { boomBalanceOf } from '#shared/domain/lighting/boom.ts'
 import { faceOf } from '#shared/domain/lighting/light-output.ts'
 import { facePoint } from '#shared/domain/lighting/geometry.ts'
 import { FRAME_LONG_MM, FRAME_SHORT_MM, angleOfViewDeg } from '#shared/domain/lighting/lens.ts'
@@ -161,17 +162,18 @@ export function beamForm(light: Light, whole: WholeSetup): BeamForm | null {
   // A known beam opens from the edges of its face, an unknown one comes together.
   const wide = beamDeg === null ? 0 : 1
   const onWall: Point[] = []
+  const wallHalfM = whole.setup.background.widthM / 2
   const ring = Array.from({ length: 24 }, (_, step): Point => {
     const turn = (step * Math.PI) / 12
     const [cos, sin] = [Math.cos(turn), Math.sin(turn)]
     const from = put(frame, (cos * widthM * wide) / 2, (sin * heightM * wide) / 2, 0)
-    const far = put(frame, cos * Math.tan(spread), sin * Math.tan(spread), 1)
+    const far = put(frame, cos * Math.sin(spread), sin * Math.sin(spread), Math.cos(spread))
     const ray: Point = [far[0] - frame.at[0], far[1] - frame.at[1], far[2] - frame.at[2]]
     const toWall = ray[2] < -1e-6 ? (wallM - from[2]) / ray[2] : Infinity
     const toFloor = ray[1] < -1e-6 ? -from[1] / ray[1] : Infinity
     const run = Math.max(0, Math.min(lengthM, toWall, toFloor))
     const end: Point = [from[0] + ray[0] * run, from[1] + ray[1] * run, from[2] + ray[2] * run]
-    if (run === toWall) onWall.push(end)
+    if (run === toWall) onWall.push([Math.min(wallHalfM, Math.max(-wallHalfM, end[0])), end[1], end[2]])
     return end
   })
   const face = beamDeg === null ? lightForm(light, 0).face : disc(frame, widthM / 2, heightM / 2, 0)
@@ -179,22 +181,19 @@ export function beamForm(light: Light, whole: WholeSetup): BeamForm | null {
   return { points: [...(face.length > 0 ? face : [light.at]), ...ring], onWall, lengthM: Math.max(...ends) }
 }
 
-/** Reach of a boom whose own is not known, metres (assumption). */
-const ASSUMED_REACH_M = 1.2
-
 export type BoomForm = { top: Point; foot: Point; counter: Point }
 
 /** Where a boom stands: its stand lies outwards from the sitter, its weight beyond. Null for what is no boom. */
 export function boomForm(light: Light, whole: WholeSetup): BoomForm | null {
-  const numbers = light.support?.numbers
-  if (numbers?.kind !== 'boom') return null
+  const balance = boomBalanceOf(light)
+  if (!balance) return null
   const eyes = facePoint(whole)
   const [x, z] = [light.at[0] - eyes[0], light.at[2] - eyes[2]]
   const out = Math.hypot(x, z)
   // Right over the head there is no outwards: to the side, out of the picture.
   const [ux, uz] = out < 0.15 ? [light.at[0] < eyes[0] ? -1 : 1, 0] : [x / out, z / out]
-  const reachM = numbers.reachM?.value ?? ASSUMED_REACH_M
-  const counterM = reachM + (numbers.counterReachM?.value ?? reachM / 3)
+  const { reachM } = balance
+  const counterM = reachM + balance.counterReachM
   const along = (far: number, y: number): Point => [light.at[0] + ux * far, y, light.at[2] + uz * far]
   return { top: along(reachM, light.at[1]), foot: along(reachM, 0), counter: along(counterM, light.at[1]) }
 }

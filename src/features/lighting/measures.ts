@@ -3,6 +3,7 @@ import { distanceBetween, facePoint, floorDistance } from '#shared/domain/lighti
 import type { Point } from '#shared/domain/lighting/schema.ts'
 import { elevationDeg } from '#shared/domain/lighting/softness.ts'
 import { type LengthUnit, lengthLabel } from '#src/lib/length-unit.ts'
+import type { Part } from './parts.ts'
 
 /** Where a thing stands as somebody with a tape and a string sees it, from the sitter's eyes. */
 export type Measures = {
@@ -64,13 +65,23 @@ export function eyeLineWords(deg: number): string {
   return whole === 0 ? 'on the eye line' : `${whole}° ${deg < 0 ? 'below' : 'above'} the eye line`
 }
 
-/** What is shown beside the hand, line by line. */
-export function measureLines(at: Point, whole: WholeSetup, unit: LengthUnit): [name: string, value: string][] {
+export type MeasureLine = [name: string, value: string]
+
+/** What is shown beside the hand, line by line: what says nothing about this kind of part is left out. */
+export function measureLines(kind: Part['kind'], at: Point, whole: WholeSetup, unit: LengthUnit): MeasureLine[] {
   const { toEyesM, fromAxisDeg, elevationDeg: upDeg, toWallM } = measuresOf(at, whole)
+  const length = (metres: number) => lengthLabel(metres, unit, true)
+  const wall: MeasureLine = ['To the wall', toWallM < 0 ? 'behind it' : length(toWallM)]
+  if (kind === 'place')
+    return [
+      ['To the camera', length(distanceBetween(at, whole.setup.camera.at))],
+      ['Eyes', `${length(at[1])} up`],
+      wall,
+    ]
   return [
-    ['To the eyes', lengthLabel(toEyesM, unit, true)],
-    ['From the camera', axisWords(fromAxisDeg)],
-    ['Height', `${lengthLabel(at[1], unit, true)}, ${eyeLineWords(upDeg)}`],
-    ['To the wall', toWallM < 0 ? 'behind it' : lengthLabel(toWallM, unit, true)],
+    ['To the eyes', length(toEyesM)],
+    ...(kind === 'camera' ? [] : [['From the camera', axisWords(fromAxisDeg)] satisfies MeasureLine]),
+    ['Height', `${length(at[1])}, ${eyeLineWords(upDeg)}`],
+    wall,
   ]
 }

@@ -1,14 +1,6 @@
 import type * as Y from 'yjs'
 import type { WholeSetup } from '#shared/domain/plan/read-plan.ts'
-import {
-  type Collection,
-  type Item,
-  LOCAL_ORIGIN,
-  patchItem,
-  putItems,
-  removeItems,
-  upsertItem,
-} from '#shared/realtime/collection.ts'
+import { LOCAL_ORIGIN, patchItem, putItems, removeItems, upsertItem } from '#shared/realtime/collection.ts'
 import { lights, props, setups, sitterPlaces } from '#shared/realtime/documents.ts'
 
 /** Puts a setup with everything in it. */

@@ -12,6 +12,8 @@ import {
 import { angleBetweenDeg, distanceBetween, minus } from '#shared/domain/lighting/geometry.ts'
 import { BOOM, GRID, OCTA, light, modifier, unit, whole } from '#tests/support/lighting-sample.ts'
 
+const stated = (value: number) => ({ value, from: 'published' as const })
+
 const span = (points: readonly Point[]) => Math.max(...points.flatMap((a) => points.map((b) => distanceBetween(a, b))))
 
 describe('frameOf', () => {
@@ -72,13 +74,15 @@ describe('beamAngleDeg', () => {
 })
 
 describe('beamForm', () => {
-  it('opens by half its angle to each side, from the edges of its face', () => {
+  it('opens by half its angle to each side, from the edges of its face, as far as the sitter', () => {
     const spot = light(1, { purpose: 'rim', at: [0, 1.5, -2], aim: [0, 1.5, 0], modifier: GRID })
     const form = beamForm(spot, whole({ lights: [spot] }))
     if (!form) throw new Error('it has a length')
-    const ends = form.points.filter(([, , z]) => Math.abs(z) < 1e-6)
-    // The face of the sample's grid is 0.9 m wide; 2 m on, half of 10° adds 2·tan 5°.
-    expect(Math.max(...ends.map(([x]) => x))).toBeCloseTo(0.45 + 2 * Math.tan((5 * Math.PI) / 180), 6)
+    const half = (5 * Math.PI) / 180
+    const wide = Math.max(...form.points.map(([x]) => x))
+    // The face of the sample's grid is 0.9 m wide; half of 10° to each side over two metres.
+    expect(wide).toBeCloseTo(0.45 + 2 * Math.sin(half), 9)
+    expect(Math.max(...form.points.map(([, , z]) => z))).toBeCloseTo(-2 + 2 * Math.cos(half), 9)
   })
   it('ends on the wall, where a background light makes its glow', () => {
     const glow = light(1, {
@@ -107,13 +111,15 @@ describe('beamForm', () => {
 
 describe('boomForm', () => {
   it('reaches from a stand farther out to the head, its weight beyond', () => {
-    const head = light(1, { purpose: 'rim', at: [0.6, 2.3, 0.8], aim: [0, 1.5, 0], support: BOOM })
+    const long = { reachM: stated(2), counterReachM: stated(0.5) }
+    const support = { ...BOOM, numbers: { ...BOOM.numbers, ...long } }
+    const head = light(1, { purpose: 'rim', at: [0.6, 2.3, 0.8], aim: [0, 1.5, 0], support })
     const boom = boomForm(head, whole({ lights: [head] }))
     if (!boom) throw new Error('it is one')
-    expect(distanceBetween(boom.top, head.at)).toBeCloseTo(1.2, 9)
-    expect(Math.hypot(boom.foot[0], boom.foot[2])).toBeCloseTo(1 + 1.2, 9)
+    expect(distanceBetween(boom.top, head.at)).toBeCloseTo(2, 9)
+    expect(Math.hypot(boom.foot[0], boom.foot[2])).toBeCloseTo(1 + 2, 9)
     expect(boom.foot[1]).toBe(0)
-    expect(distanceBetween(boom.counter, head.at)).toBeGreaterThan(1.2)
+    expect(distanceBetween(boom.counter, head.at)).toBeCloseTo(2.5, 9)
   })
   it('is null for a plain stand', () => {
     const head = light(1, { purpose: 'rim', at: [0.6, 2.3, 0.8], aim: [0, 1.5, 0] })

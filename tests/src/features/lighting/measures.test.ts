@@ -59,17 +59,19 @@ describe('what is said of them', () => {
       '3° below the eye line',
       'on the eye line',
     ])
-    expect(measureLines([-1, 1.5, 0], setup, 'm')).toEqual([
+    expect(measureLines('light', [-1, 1.5, 0], setup, 'm')).toEqual([
       ['To the eyes', '1.0 m'],
       ['From the camera', '90° to the left'],
       ['Height', '1.5 m, on the eye line'],
       ['To the wall', '2.0 m'],
     ])
-    expect(measureLines([-1, 1.5, -2.5], setup, 'ft').map(([, value]) => value)).toEqual([
+    expect(measureLines('light', [-1, 1.5, -2.5], setup, 'ft').map(([, value]) => value)).toEqual([
       '8′ 10″',
       '158° to the left',
       '4′ 11″, on the eye line',
       'behind it',
     ])
+    expect(measureLines('camera', [0, 1.5, 3], setup, 'm').map(([name]) => name)).not.toContain('From the camera')
+    expect(measureLines('place', [0, 1.4, 1], setup, 'm')[0]).toEqual(['To the camera', '2.0 m'])
   })
 })

@@ -18,7 +18,7 @@ export function Beam({ light, whole, project, pxPerM }: BeamProps) {
     <g aria-hidden>
       <radialGradient id={fadeId} gradientUnits="userSpaceOnUse" cx={x} cy={y} r={Math.max(1, form.lengthM * pxPerM)}>
         <stop offset="0" stopColor={colour} stopOpacity={opacity * 1.35} />
-        <stop offset="1" stopColor={colour} stopOpacity={opacity * (isBackground ? 0.75 : 0.45)} />
+        <stop offset="1" stopColor={colour} stopOpacity={opacity * (isBackground ? 0.75 : 0.12)} />
       </radialGradient>
       <path d={outline(form.points.map(project))} fill={`url(#${fadeId})`} />
       {isBackground && form.onWall.length > 1 && (

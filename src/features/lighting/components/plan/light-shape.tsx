@@ -11,17 +11,23 @@ type LightShapeProps = {
   chosen: boolean
   /** Somebody else's colour while they move it. */
   peerColour?: string | undefined
+  /** What is smaller is drawn at this size, CSS px. */
+  leastPx?: number
 }
-
-/** What is smaller is drawn at this size, CSS px. */
-const LEAST_PX = 9
 
 /**
  * A light with the middle of its face at 0,0. The face has its true size and turn; housings behind it are signs. One that
  * is switched off is drawn hollow and grey.
  */
-export const LightShape = memo(function LightShape({ light, pxPerM, seen, chosen, peerColour }: LightShapeProps) {
-  const form = lightForm(light, LEAST_PX / pxPerM)
+export const LightShape = memo(function LightShape({
+  light,
+  pxPerM,
+  seen,
+  chosen,
+  peerColour,
+  leastPx = 9,
+}: LightShapeProps) {
+  const form = lightForm(light, leastPx / pxPerM)
   const own = (point: Point): Flat => {
     const [x, y, z] = [point[0] - light.at[0], point[1] - light.at[1], point[2] - light.at[2]]
     return seen === 'plan' ? [x * pxPerM, z * pxPerM] : [z * pxPerM, -y * pxPerM]

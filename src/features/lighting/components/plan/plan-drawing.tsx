@@ -43,9 +43,7 @@ export function PlanDrawing(props: PlanDrawingProps) {
   return (
     <div ref={ref} className="relative h-full overflow-hidden rounded-r border border-hair bg-white">
       {size && size.width > 0 && <Plan {...props} width={size.width} height={size.height} />}
-      {held?.drawing === 'plan' && (
-        <Readout held={held} whole={props.whole} name={props.nameOf(held.part)} isLow={false} />
-      )}
+      {held?.drawing === 'plan' && <Readout held={held} whole={props.whole} name={props.nameOf(held.part)} />}
     </div>
   )
 }
@@ -139,9 +137,6 @@ function Plan({ width, height, written, whole, ...rest }: PlanDrawingProps & { w
         {...common({ kind: 'camera', setupId: whole.setup.id })}
       >
         <rect x={-14} y={-2} width={28} height={15} rx={2} fill="var(--color-ink)" />
-        <text x={22} y={10} className="fill-ink text-xs font-semibold">
-          Camera · {camera.focalMm} mm
-        </text>
       </Handle>
       <Aims whole={whole} chosenKey={chosenKey} project={project} handle={common} />
       {moving.held?.drawing === 'plan' && <Guides guides={moving.held.guides} project={project} />}

@@ -12,8 +12,13 @@ export function PlanLabels({ whole, view, isNarrow, unit }: PlanLabelsProps) {
   const labels = spreadLabels([
     ...whole.lights.map((light) => lightLabel(light, { whole, view, isNarrow, unit })),
     ...whole.props.map((prop) => propLabel(prop, whole, view)),
+    cameraLabel(whole, view),
   ])
   const off = new Set<string>(whole.lights.filter((light) => !light.isOn).map((light) => light.id))
+  const classOf = (label: Label) => {
+    if (label.key === CAMERA) return 'fill-ink text-xs font-semibold'
+    return off.has(label.key) ? 'fill-ink-faint text-xs' : 'fill-draft text-xs'
+  }
   return (
     <g aria-hidden className="pointer-events-none">
       {labels.map((label) => (
@@ -25,7 +30,7 @@ export function PlanLabels({ whole, view, isNarrow, unit }: PlanLabelsProps) {
           stroke="#fff"
           strokeWidth={3}
           paintOrder="stroke"
-          className={off.has(label.key) ? 'fill-ink-faint text-xs' : 'fill-draft text-xs'}
+          className={classOf(label)}
         >
           {label.lines.map((line, index) => (
             <tspan key={line} x={label.x} dy={index === 0 ? 0 : 15} className={index === 0 ? '' : 'fill-ink-faint'}>
@@ -69,6 +74,19 @@ function lightLabel(light: Light, { whole, view, isNarrow, unit }: PlanLabelsPro
     : [[name, ...made].join(', '), `${lengthLabel(light.at[1], unit, true)} up · ${off} off`]
   const away = Math.max(26, Math.min(60, sizePx + 12))
   return { key: light.id, ...besideOf(view, light.at[0], face[0], away, lines), y: toZ(view, light.at[2]) + 2, lines }
+}
+
+const CAMERA = 'camera'
+
+/** Beside the camera, at the left where a light stands close to its right. */
+function cameraLabel({ setup: { camera }, lights }: WholeSetup, view: PlanView): Label {
+  const [x, y] = [toX(view, camera.at[0]), toZ(view, camera.at[2]) + 10]
+  const isTaken = lights.some(({ at }) => {
+    const [right, down] = [toX(view, at[0]) - x, toZ(view, at[2]) - y]
+    return right > 0 && right < 160 && Math.abs(down) < 60
+  })
+  const beside = isTaken ? ({ x: x - 22, side: 'left' } as const) : ({ x: x + 22, side: 'right' } as const)
+  return { key: CAMERA, ...beside, y, lines: [`Camera · ${camera.focalMm} mm`] }
 }
 
 function propLabel(prop: Prop, whole: WholeSetup, view: PlanView): Label {

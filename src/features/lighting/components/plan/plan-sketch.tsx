@@ -35,14 +35,14 @@ export function PlanSketch({ whole }: { whole: WholeSetup }) {
       ))}
       {whole.places.map((place) => (
         <g key={place.id} transform={at(place.at[0], place.at[1])}>
-          <SitterFromAbove place={place} pxPerM={view.pxPerM} />
+          <SitterFromAbove place={place} pxPerM={view.pxPerM} leastHeadPx={5} />
         </g>
       ))}
       {whole.lights.map((light) => (
         <g key={light.id}>
           <Standing light={light} whole={whole} project={project} seen="plan" />
           <g transform={at(light.at[0], light.at[2])}>
-            <LightShape light={light} pxPerM={view.pxPerM} seen="plan" chosen={false} />
+            <LightShape light={light} pxPerM={view.pxPerM} seen="plan" chosen={false} leastPx={6} />
           </g>
         </g>
       ))}

@@ -1,22 +1,26 @@
 import type { WholeSetup } from '#shared/domain/plan/read-plan.ts'
+import { cn } from '#src/lib/cn.ts'
 import { useLengthUnit } from '#src/lib/length-unit.ts'
 import { measureLines } from '../../measures.ts'
 import type { Held } from '../../use-moving.ts'
 
-type ReadoutProps = { held: Held; whole: WholeSetup; name: string; isLow: boolean }
+type ReadoutProps = { held: Held; whole: WholeSetup; name: string }
 
 /** Distances and angles of what a hand holds, in a corner where the hand is not. */
-export function Readout({ held, whole, name, isLow }: ReadoutProps) {
+export function Readout({ held, whole, name }: ReadoutProps) {
   const unit = useLengthUnit()
   return (
     <div
       data-testid="readout"
       aria-hidden
-      className={`pointer-events-none absolute right-2 z-10 rounded-r border border-hair bg-paper/95 px-2.5 py-1.5 text-xs max-md:text-[0.8125rem] ${isLow ? 'bottom-2' : 'top-2'}`}
+      className={cn(
+        'pointer-events-none absolute z-10 rounded-r border border-hair bg-paper/95 px-2.5 py-1.5 text-xs max-md:text-[0.8125rem]',
+        held.drawing === 'plan' ? 'top-2 right-2' : 'top-2 left-2 md:top-auto md:bottom-2',
+      )}
     >
       <p className="font-semibold">{name}</p>
       <dl className="grid grid-cols-[auto_auto] gap-x-3">
-        {measureLines(held.at, whole, unit).map(([label, value]) => (
+        {measureLines(held.part.kind, held.at, whole, unit).map(([label, value]) => (
           <div key={label} className="contents">
             <dt className="text-ink-soft">{label}</dt>
             <dd className="text-right">{value}</dd>

@@ -41,7 +41,7 @@ export function SideDrawing(props: SideDrawingProps) {
   return (
     <div ref={ref} className="relative h-full overflow-hidden rounded-r border border-hair bg-white">
       {size && size.width > 0 && <Side {...props} width={size.width} height={size.height} />}
-      {held?.drawing === 'side' && <Readout held={held} whole={props.whole} name={props.nameOf(held.part)} isLow />}
+      {held?.drawing === 'side' && <Readout held={held} whole={props.whole} name={props.nameOf(held.part)} />}
     </div>
   )
 }

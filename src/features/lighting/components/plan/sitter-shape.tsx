@@ -1,16 +1,16 @@
 import type { SitterPlace } from '#shared/domain/lighting/schema.ts'
 
 type SitterShapeProps = { place: SitterPlace; pxPerM: number }
+type FromAboveProps = SitterShapeProps & { leastHeadPx?: number }
 
 const LINE = { fill: '#fff', stroke: 'var(--color-ink)', strokeWidth: 1.6, strokeLinejoin: 'round' as const }
 /** Measures of a grown-up for the drawings, metres (assumed). */
 const HEAD_M = 0.11
 const SHOULDER_HALF_M = 0.23
-const LEAST_HEAD_PX = 8
 
 /** A sitter from above, the head at 0,0: body and head each turned, thighs and a seat when seated. */
-export function SitterFromAbove({ place, pxPerM }: SitterShapeProps) {
-  const head = Math.max(LEAST_HEAD_PX, HEAD_M * pxPerM)
+export function SitterFromAbove({ place, pxPerM, leastHeadPx = 8 }: FromAboveProps) {
+  const head = Math.max(leastHeadPx, HEAD_M * pxPerM)
   const px = head / HEAD_M
   return (
     <g>

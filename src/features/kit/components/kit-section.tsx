@@ -94,8 +94,7 @@ function KitGrid({ items, ...rest }: KitSectionProps) {
                       aria-hidden
                       className={cn('transition-transform', open.has(item.id) && 'rotate-180')}
                     />
-                    {MORE[item.body.kind]}
-                    <span className="sr-only"> of {item.name}</span>
+                    {MORE[item.body.kind]} <span className="sr-only">of {item.name}</span>
                   </button>
                 </td>
                 <td className="px-3.5 py-2.5 text-right">{item.quantity}</td>
@@ -151,8 +150,7 @@ function KitList({ items, ...rest }: KitSectionProps) {
           <details className="mt-1">
             <summary className="flex min-h-11 cursor-pointer items-center gap-1 text-sm text-ink-soft">
               <ChevronDown size={15} aria-hidden />
-              {MORE[item.body.kind]}
-              <span className="sr-only"> of {item.name}</span>
+              {MORE[item.body.kind]} <span className="sr-only">of {item.name}</span>
             </summary>
             <Details item={item} nameOf={rest.nameOf} />
           </details>

@@ -144,7 +144,7 @@ export type BeamForm = {
 
 /**
  * The way of a light: from its face, as wide as its beam, to the sitter or, for a background light, to the wall. It ends
- * at the wall and the floor. A beam nobody knows narrows to the sitter: a sign, not a promise. Null when it has no length.
+ * at the wall, the floor and the ceiling. A beam nobody knows narrows to the sitter: a sign, not a promise. Null when it has no length.
  */
 export function beamForm(light: Light, whole: WholeSetup): BeamForm | null {
   const frame = frameOf(light)
@@ -154,7 +154,7 @@ export function beamForm(light: Light, whole: WholeSetup): BeamForm | null {
   if (toAimM < 0.05) return null
   const toEyesM = Math.hypot(...([0, 1, 2] as const).map((axis) => eyes[axis] - light.at[axis]))
   const isAtEyes = Math.hypot(...([0, 1, 2] as const).map((axis) => light.aim[axis] - eyes[axis])) < 0.5
-  const lengthM = light.purpose === 'background' ? FARTHEST_M : isAtEyes ? toEyesM : toAimM
+  const lengthM = light.purpose === 'background' ? Math.min(FARTHEST_M, 1.8 * toAimM) : isAtEyes ? toEyesM : toAimM
   const beamDeg = beamAngleDeg(light)
   const spread =
     beamDeg === null ? Math.atan(UNKNOWN_HALF_M / lengthM) : (Math.min(WIDEST_DEG, beamDeg) * Math.PI) / 360
@@ -162,7 +162,8 @@ export function beamForm(light: Light, whole: WholeSetup): BeamForm | null {
   // A known beam opens from the edges of its face, an unknown one comes together.
   const wide = beamDeg === null ? 0 : 1
   const onWall: Point[] = []
-  const wallHalfM = whole.setup.background.widthM / 2
+  const { widthM: wallWidthM, heightM: wallHeightM } = whole.setup.background
+  const ceilingM = whole.setup.walled?.ceilingM ?? Infinity
   const ring = Array.from({ length: 24 }, (_, step): Point => {
     const turn = (step * Math.PI) / 12
     const [cos, sin] = [Math.cos(turn), Math.sin(turn)]
@@ -171,9 +172,15 @@ export function beamForm(light: Light, whole: WholeSetup): BeamForm | null {
     const ray: Point = [far[0] - frame.at[0], far[1] - frame.at[1], far[2] - frame.at[2]]
     const toWall = ray[2] < -1e-6 ? (wallM - from[2]) / ray[2] : Infinity
     const toFloor = ray[1] < -1e-6 ? -from[1] / ray[1] : Infinity
-    const run = Math.max(0, Math.min(lengthM, toWall, toFloor))
+    const toCeiling = ray[1] > 1e-6 ? (ceilingM - from[1]) / ray[1] : Infinity
+    const run = Math.max(0, Math.min(lengthM, toWall, toFloor, toCeiling))
     const end: Point = [from[0] + ray[0] * run, from[1] + ray[1] * run, from[2] + ray[2] * run]
-    if (run === toWall) onWall.push([Math.min(wallHalfM, Math.max(-wallHalfM, end[0])), end[1], end[2]])
+    if (run === toWall)
+      onWall.push([
+        Math.min(wallWidthM / 2, Math.max(-wallWidthM / 2, end[0])),
+        Math.min(wallHeightM, Math.max(0, end[1])),
+        end[2],
+      ])
     return end
   })
   const face = beamDeg === null ? lightForm(light, 0).face : disc(frame, widthM / 2, heightM / 2, 0)

@@ -134,6 +134,39 @@ const PROPS = {
   prop: { name: 'Table', widthM: 0.8, heightM: 0.75, colour: '#8e6a22' },
 } as const
 
+/** Usual widths and heights of the shapes, metres (common practice, no source). */
+const SHAPE_SIZES: Readonly<Record<Prop['shape'], readonly [widthM: number, heightM: number]>> = {
+  block: [0.5, 0.5],
+  ball: [0.3, 0.3],
+  post: [0.35, 1.1],
+  table: [0.8, 0.75],
+  chair: [0.45, 0.9],
+  globe: [0.45, 1.2],
+  books: [0.3, 0.2],
+  cup: [0.1, 0.1],
+  plant: [0.6, 1.1],
+}
+
+const shapeName = (shape: Prop['shape']) => shape.charAt(0).toUpperCase() + shape.slice(1)
+
+/**
+ * A prop in another shape. One that was never named or measured takes the new shape's name and usual size, its foot where
+ * it was; anything somebody wrote stays.
+ */
+export function inShape(prop: Prop, shape: Prop['shape']): Partial<Prop> {
+  const [widthM, heightM] = SHAPE_SIZES[prop.shape]
+  const isNamed = prop.name.replace(/ \d+$/, '') !== shapeName(prop.shape)
+  const isMeasured = prop.widthM !== widthM || prop.heightM !== heightM
+  const [width, height] = SHAPE_SIZES[shape]
+  return {
+    shape,
+    ...(isNamed ? {} : { name: shapeName(shape) }),
+    ...(isMeasured
+      ? {}
+      : { widthM: width, heightM: height, at: [prop.at[0], prop.at[1] + (height - heightM) / 2, prop.at[2]] }),
+  }
+}
+
 export function newProp(whole: WholeSetup, kind: (typeof PROP_KINDS)[number]): Prop {
   const face = facePoint(whole)
   const { name, widthM, heightM, colour } = PROPS[kind]

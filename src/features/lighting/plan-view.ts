@@ -111,15 +111,30 @@ export function beamTint(light: Light, whiteK: number): { colour: string; opacit
 export type Label = { key: string; x: number; y: number; side: 'left' | 'right'; lines: readonly string[] }
 
 const LINE_PX = 15
+/** About how wide a letter is, CSS px. */
+const LETTER_PX = 6.4
 
-/** Moves labels on the same side apart, top to bottom, so that none covers another. */
+/** About how wide words in a drawing are, CSS px. */
+export function wordsWidth(lines: readonly string[]): number {
+  return Math.max(...lines.map((line) => line.length)) * LETTER_PX
+}
+
+/** Moves labels down, top to bottom, so that none covers another. */
 export function spreadLabels(labels: readonly Label[]): Label[] {
+  const spanOf = ({ x, side, lines }: Label) =>
+    side === 'left' ? [x - wordsWidth(lines), x] : [x, x + wordsWidth(lines)]
+  const heightOf = ({ lines }: Label) => lines.length * LINE_PX
   const placed: Label[] = []
   for (const label of [...labels].sort((a, b) => a.y - b.y)) {
-    const heightOf = (other: Label) => other.lines.length * LINE_PX
-    const above = placed.filter((other) => other.side === label.side && Math.abs(other.x - label.x) < 150)
-    const floor = Math.max(-Infinity, ...above.map((other) => other.y + heightOf(other) + 3))
-    placed.push({ ...label, y: Math.max(label.y, floor) })
+    const [from = 0, to = 0] = spanOf(label)
+    const beside = placed.filter((other) => {
+      const [otherFrom = 0, otherTo = 0] = spanOf(other)
+      return from < otherTo && otherFrom < to
+    })
+    let { y } = label
+    for (const other of beside.sort((a, b) => a.y - b.y))
+      if (y < other.y + heightOf(other) + 3 && other.y < y + heightOf(label) + 3) y = other.y + heightOf(other) + 3
+    placed.push({ ...label, y })
   }
   return placed
 }

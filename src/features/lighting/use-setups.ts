@@ -1,10 +1,13 @@
 import { useNavigate } from 'react-router-dom'
 import { mirrored } from '#shared/domain/lighting/mirror.ts'
 import type { WholeSetup } from '#shared/domain/plan/read-plan.ts'
+import { fromRecipe } from '#shared/domain/recipes/recipe.ts'
+import type { Recipe } from '#shared/domain/recipes/schema.ts'
+import { appendKey } from '#shared/realtime/order-keys.ts'
+import { newId } from '#src/lib/new-id.ts'
 import { useDoc, useShoot } from '#src/realtime/shoot-realtime.tsx'
 import { usePlan } from '#src/realtime/use-plan.ts'
 import { useUndo } from '#src/realtime/use-undo.ts'
-import type { MenuItem } from '#src/ui/menu.tsx'
 import { toast } from '#src/ui/toast.ts'
 import { copyOf, newSetup } from './new-items.ts'
 import { putSetup, removeSetup, restoreSetup, rewriteSetup } from './write-setups.ts'
@@ -20,6 +23,8 @@ export type SetupActions = {
   /** Left to right, as a setup of its own. */
   duplicateMirrored(whole: WholeSetup): void
   remove(whole: WholeSetup): void
+  /** A new setup by a recipe. */
+  byRecipe(recipe: Recipe): void
 }
 
 /** What is done with setups as a whole; each is one step of undo. */
@@ -62,6 +67,12 @@ export function useSetups(): SetupActions {
       step(() => rewriteSetup(doc, mirrored(whole)))
       toast.say(`“${whole.setup.name}” is mirrored, left to right.`)
     },
+    byRecipe(recipe) {
+      const rank = appendKey(ranks, Math.random)
+      const made = fromRecipe(recipe, { newId, rank, name: freeName(recipe.name.slice(0, NAME_LENGTH)) })
+      step(() => putSetup(doc, made))
+      void navigate(`/shoots/${shoot.id}/lighting/${made.setup.id}`)
+    },
     remove(whole) {
       step(() => removeSetup(doc, whole))
       toast.say(`“${whole.setup.name}” is removed.`, {
@@ -73,7 +84,7 @@ export function useSetups(): SetupActions {
 }
 
 /** The same three lines in every menu of a setup. */
-export function wholeItems(whole: WholeSetup, actions: SetupActions): MenuItem[] {
+export function wholeItems(whole: WholeSetup, actions: SetupActions): { label: string; onSelect: () => void }[] {
   return [
     { label: 'Duplicate as a variation', onSelect: () => actions.duplicate(whole) },
     { label: 'Mirror, left to right', onSelect: () => actions.mirror(whole) },

@@ -6,10 +6,13 @@ import { Button } from '#src/ui/button.tsx'
 import { Confirm } from '#src/ui/confirm.tsx'
 import { Empty } from '#src/ui/empty.tsx'
 import { ScreenBar } from '#src/ui/screen-bar.tsx'
+import { useIsPhone } from '#src/ui/use-media.ts'
 import { setupUse } from '#shared/domain/lighting/setup-use.ts'
 import { useSetups } from '../use-setups.ts'
+import { UseRecipe } from './recipe/use-recipe.tsx'
+import { useRecipeDialogs } from './recipe/use-recipe-dialogs.tsx'
 import { SetupCard } from './setup-card.tsx'
-import { UnitSwitch } from './unit-switch.tsx'
+import { UnitSwitch, useUnitAction } from './unit-switch.tsx'
 
 /** All setups of the shoot. */
 export function LightingScreen() {
@@ -17,6 +20,10 @@ export function LightingScreen() {
   const shoot = useShoot()
   const mayWrite = useMayWrite('lighting')
   const setups = useSetups()
+  const isPhone = useIsPhone()
+  const unitAction = useUnitAction()
+  const recipes = useRecipeDialogs()
+  const [isUsing, setIsUsing] = useState(false)
   const [removing, setRemoving] = useState<WholeSetup | null>(null)
   const all = [...plan.setups.values()]
   const address = (setupId: string) => `/shoots/${shoot.id}/lighting/${setupId}`
@@ -26,18 +33,24 @@ export function LightingScreen() {
       <ScreenBar
         title="Lighting"
         sub={all.length === 0 ? undefined : `${all.length} ${all.length === 1 ? 'setup' : 'setups'}`}
-        actions={mayWrite ? [{ label: 'Add a setup', variant: 'primary', onPress: setups.add }] : []}
+        actions={[
+          ...(isPhone ? [unitAction] : []),
+          ...(mayWrite ? [{ label: 'Add a setup', variant: 'primary' as const, onPress: setups.add }] : []),
+        ]}
       >
-        <UnitSwitch />
+        {isPhone ? undefined : <UnitSwitch />}
       </ScreenBar>
       {all.length === 0 ? (
         <Empty
           title="No setup yet"
           action={
             mayWrite && (
-              <Button variant="primary" onClick={setups.add}>
-                Light the first setup
-              </Button>
+              <>
+                <Button onClick={() => setIsUsing(true)}>Use a recipe</Button>
+                <Button variant="primary" onClick={setups.add}>
+                  Light the first setup
+                </Button>
+              </>
             )
           }
         >
@@ -54,12 +67,15 @@ export function LightingScreen() {
                 to={address(whole.setup.id)}
                 mayWrite={mayWrite}
                 actions={setups}
+                recipeItems={recipes.itemsOf(whole)}
                 onRemove={() => setRemoving(whole)}
               />
             </li>
           ))}
         </ul>
       )}
+      {recipes.dialogs}
+      <UseRecipe open={isUsing} onOpenChange={setIsUsing} onUse={setups.byRecipe} />
       <Confirm
         open={removing !== null}
         onOpenChange={(open) => {

@@ -12,12 +12,8 @@ export function NextStepLine({ whole, onAddLight, onAddPanel }: NextStepLineProp
   if (!step) return null
   return (
     <div className="flex flex-wrap items-center gap-x-2.5 gap-y-1 text-sm text-ink-soft">
-      <p className="min-w-0 flex-1 basis-48">{step.words}</p>
-      <Button
-        size="small"
-        variant={whole.lights.length === 0 ? 'primary' : 'plain'}
-        onClick={() => onAddLight(step.purpose)}
-      >
+      <p className="min-w-0 flex-1 basis-48 max-md:basis-full">{step.words}</p>
+      <Button size="small" onClick={() => onAddLight(step.purpose)}>
         Add the {purposeWord(step.purpose).toLowerCase()}
       </Button>
       {step.orPanel && (

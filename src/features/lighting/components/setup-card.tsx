@@ -5,7 +5,7 @@ import type { WholeSetup } from '#shared/domain/plan/read-plan.ts'
 import { count } from '#src/lib/format.ts'
 import { IconButton } from '#src/ui/button.tsx'
 import { Lamp, type LampState } from '#src/ui/lamp.tsx'
-import { Menu } from '#src/ui/menu.tsx'
+import { Menu, type MenuItem } from '#src/ui/menu.tsx'
 import type { SetupUse } from '#shared/domain/lighting/setup-use.ts'
 import { type SetupActions, wholeItems } from '../use-setups.ts'
 import { PlanSketch } from './plan/plan-sketch.tsx'
@@ -16,6 +16,7 @@ type SetupCardProps = {
   to: string
   mayWrite: boolean
   actions: SetupActions
+  recipeItems: readonly MenuItem[]
   onRemove: () => void
 }
 
@@ -27,7 +28,7 @@ function lampOf(whole: WholeSetup, use: SetupUse): { state: LampState; why: stri
   return red === undefined ? { state: 'lit', why: 'Nothing in its way' } : { state: 'half', why: red }
 }
 
-export function SetupCard({ whole, use, to, mayWrite, actions, onRemove }: SetupCardProps) {
+export function SetupCard({ whole, use, to, mayWrite, actions, recipeItems, onRemove }: SetupCardProps) {
   const { setup, lights } = whole
   const lamp = lampOf(whole, use)
   const off = lights.filter((light) => !light.isOn).length
@@ -53,18 +54,26 @@ export function SetupCard({ whole, use, to, mayWrite, actions, onRemove }: Setup
             {lamp.why}
           </p>
         </div>
-        {mayWrite && (
-          <div className="relative z-10 -mt-1 -mr-2">
-            <Menu
-              trigger={
-                <IconButton label={`More for ${setup.name}`}>
-                  <MoreHorizontal size={18} aria-hidden />
-                </IconButton>
-              }
-              items={[...wholeItems(whole, actions), 'line', { label: 'Remove', onSelect: onRemove, danger: true }]}
-            />
-          </div>
-        )}
+        <div className="relative z-10 -mt-1 -mr-2">
+          <Menu
+            trigger={
+              <IconButton label={`More for ${setup.name}`}>
+                <MoreHorizontal size={18} aria-hidden />
+              </IconButton>
+            }
+            items={
+              mayWrite
+                ? [
+                    ...wholeItems(whole, actions),
+                    'line',
+                    ...recipeItems,
+                    'line',
+                    { label: 'Remove', onSelect: onRemove, danger: true },
+                  ]
+                : recipeItems
+            }
+          />
+        </div>
       </div>
     </article>
   )

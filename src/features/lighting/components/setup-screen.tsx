@@ -30,7 +30,7 @@ import { PlanDrawing } from './plan/plan-drawing.tsx'
 import { SideDrawing } from './plan/side-drawing.tsx'
 import { Overview } from './readings/overview.tsx'
 import { SetupEditor, isPartOf } from './setup-editor.tsx'
-import { UnitSwitch } from './unit-switch.tsx'
+import { UnitSwitch, useUnitAction } from './unit-switch.tsx'
 
 /** One lighting setup: drawn to scale, with its numbers beside. */
 export function SetupScreen({ setupId }: { setupId: string }) {
@@ -64,6 +64,7 @@ function Setup({ plan, whole }: { plan: Plan; whole: WholeSetup }) {
   const [isSheetOpen, setIsSheetOpen] = useState(false)
   const [adding, setAdding] = useState<LightPurpose | 'any' | null>(null)
   const setups = useSetups()
+  const unitAction = useUnitAction()
   const use = useMemo(() => setupUse(plan, whole.setup.id), [plan, whole.setup.id])
 
   const sitters = [...sitterItems.values()].map((sitter) => ({
@@ -136,27 +137,38 @@ function Setup({ plan, whole }: { plan: Plan; whole: WholeSetup }) {
     />
   )
   const chosenLight = whole.lights.find((light) => chosenKey === light.id || chosenKey === `${light.id}:aim`)
+  const phoneActions = [
+    ...wholeItems(whole, setups).map(({ label, onSelect }) => ({ label, onPress: onSelect })),
+    unitAction,
+  ]
   const actions = mayWrite
     ? [
         { label: 'Undo', variant: 'quiet' as const, disabled: !writer.undo.canUndo, onPress: writer.undo.undo },
         { label: 'Redo', variant: 'quiet' as const, disabled: !writer.undo.canRedo, onPress: writer.undo.redo },
+        ...(isPhone ? phoneActions : []),
         { label: 'Add a light', variant: 'primary' as const, onPress: () => setAdding('any') },
       ]
-    : []
+    : isPhone
+      ? [unitAction]
+      : []
 
   return (
     <div className="flex min-h-full flex-col md:h-full">
       <ScreenBar title={whole.setup.name} sub={mayWrite ? use.words : `${use.words} · to read only`} actions={actions}>
-        <UnitSwitch />
-        {mayWrite && (
-          <Menu
-            trigger={
-              <IconButton label="More for this setup">
-                <MoreHorizontal size={18} aria-hidden />
-              </IconButton>
-            }
-            items={wholeItems(whole, setups)}
-          />
+        {isPhone ? undefined : (
+          <>
+            <UnitSwitch />
+            {mayWrite && (
+              <Menu
+                trigger={
+                  <IconButton label="More for this setup">
+                    <MoreHorizontal size={18} aria-hidden />
+                  </IconButton>
+                }
+                items={wholeItems(whole, setups)}
+              />
+            )}
+          </>
         )}
       </ScreenBar>
       <div className="grid min-h-0 flex-1 md:grid-cols-[minmax(0,1fr)_minmax(19rem,32%)] xl:grid-cols-[minmax(0,1fr)_25rem]">

@@ -1,5 +1,14 @@
 import { chooseLengthUnit, useLengthUnit } from '#src/lib/length-unit.ts'
 import { Button } from '#src/ui/button.tsx'
+import type { ScreenAction } from '#src/ui/screen-bar.tsx'
+
+/** The same switch as a line of a phone's menu. */
+export function useUnitAction(): ScreenAction {
+  const unit = useLengthUnit()
+  return unit === 'm'
+    ? { label: 'Lengths in feet', onPress: () => chooseLengthUnit('ft') }
+    : { label: 'Lengths in metres', onPress: () => chooseLengthUnit('m') }
+}
 
 /** Metres or feet, for this device. */
 export function UnitSwitch() {

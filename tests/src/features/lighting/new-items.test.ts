@@ -9,7 +9,15 @@ import {
 } from '#shared/domain/lighting/schema.ts'
 import { elevationDeg } from '#shared/domain/lighting/softness.ts'
 import { changeActions } from '#shared/domain/lighting/changeover.ts'
-import { copyOf, duplicateLight, newLight, newProp, newSetup, shiftedRank } from '#src/features/lighting/new-items.ts'
+import {
+  copyOf,
+  duplicateLight,
+  inShape,
+  newLight,
+  newProp,
+  newSetup,
+  shiftedRank,
+} from '#src/features/lighting/new-items.ts'
 import { MINUTES, OCTA, light, unit, whole } from '#tests/support/lighting-sample.ts'
 
 const make = { unit: lightUnitSchema.parse(unit()), modifier: lightModifierSchema.parse(OCTA), support: null }
@@ -97,5 +105,19 @@ describe('shiftedRank', () => {
   it('is null at the ends', () => {
     expect(orderAfter(0, -1)).toEqual([0, 1, 2, 3])
     expect(orderAfter(3, 1)).toEqual([0, 1, 2, 3])
+  })
+})
+
+describe('inShape', () => {
+  it('takes name and size of the new shape along while nobody has given its own, the foot where it was', () => {
+    const table = newProp(whole({}), 'prop')
+    const chair = { ...table, ...inShape(table, 'chair') }
+    expect(chair).toMatchObject({ name: 'Chair', shape: 'chair', widthM: 0.45, heightM: 0.9 })
+    expect(chair.at[1] - chair.heightM / 2).toBeCloseTo(table.at[1] - table.heightM / 2, 9)
+    expect(propSchema.parse(chair)).toEqual(chair)
+  })
+  it('leaves what somebody wrote', () => {
+    const own = { ...newProp(whole({}), 'prop'), name: 'Tea chest', widthM: 0.6 }
+    expect(inShape(own, 'block')).toEqual({ shape: 'block' })
   })
 })

@@ -5,6 +5,7 @@ import { ColourInput } from '#src/ui/colour-input.tsx'
 import { Field } from '#src/ui/field.tsx'
 import { NumberInput } from '#src/ui/number-input.tsx'
 import { Select } from '#src/ui/select.tsx'
+import { inShape } from '../../new-items.ts'
 import type { Kit } from '../../use-kit.ts'
 import type { SetupWriter } from '../../use-setup-writer.ts'
 import { CommitInput } from './commit-input.tsx'
@@ -60,7 +61,7 @@ export function PropEditor({ prop, kit, writer, mayWrite, onBack, onGone }: Prop
         </Field>
         {prop.kind === 'prop' && (
           <Field label="Shape" className="col-span-2">
-            <Select options={SHAPES} value={prop.shape} onChange={(shape) => patch({ shape })} />
+            <Select options={SHAPES} value={prop.shape} onChange={(shape) => patch(inShape(prop, shape))} />
           </Field>
         )}
         <Field label="Width">

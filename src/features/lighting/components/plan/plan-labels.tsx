@@ -3,7 +3,7 @@ import { distanceBetween, facePoint } from '#shared/domain/lighting/geometry.ts'
 import type { Light, Prop, SitterPlace } from '#shared/domain/lighting/schema.ts'
 import { inSentence } from '#shared/domain/lighting/words.ts'
 import { type LengthUnit, lengthLabel } from '#src/lib/length-unit.ts'
-import { type Label, type PlanView, spreadLabels, toX, toZ } from '../../plan-view.ts'
+import { type Label, type PlanView, spreadLabels, toX, toZ, wordsWidth } from '../../plan-view.ts'
 
 type PlanLabelsProps = { whole: WholeSetup; view: PlanView; isNarrow: boolean; unit: LengthUnit }
 
@@ -43,8 +43,7 @@ export function PlanLabels({ whole, view, isNarrow, unit }: PlanLabelsProps) {
   )
 }
 
-/** About how wide a word is, CSS px a letter, and how much the distances at the left take. */
-const LETTER_PX = 6.4
+/** How much the distances at the left take, CSS px. */
 const DIMENSION_PX = 76
 
 /** A label beside a point, outwards from the sitter, or inwards where it would be cut off. */
@@ -55,7 +54,7 @@ function besideOf(
   away: number,
   lines: readonly string[],
 ): Pick<Label, 'x' | 'side'> {
-  const width = Math.max(...lines.map((line) => line.length)) * LETTER_PX
+  const width = wordsWidth(lines)
   const x = toX(view, xM)
   const left = { x: x - away, side: 'left' } as const
   const right = { x: x + away, side: 'right' } as const

@@ -25,10 +25,23 @@ type Request<Schema extends z.ZodType> = {
 
 /** Calls `/api<path>` and parses the answer. @throws ApiError */
 export async function api<Schema extends z.ZodType>(path: string, request: Request<Schema>): Promise<z.output<Schema>> {
+  const answer = await send(path, request)
+  const json: unknown = await answer.json().catch(() => undefined)
+  if (answer.ok) return request.response.parse(json)
+  throw refusal(json)
+}
+
+/** Calls `/api<path>` for a file. @throws ApiError */
+export async function apiFile(path: string, request: Omit<Request<z.ZodType>, 'response'>): Promise<Blob> {
+  const answer = await send(path, request)
+  if (answer.ok) return answer.blob()
+  throw refusal(await answer.json().catch(() => undefined))
+}
+
+async function send(path: string, request: Omit<Request<z.ZodType>, 'response'>): Promise<Response> {
   const form = request.body instanceof FormData ? request.body : undefined
-  let response: Response
   try {
-    response = await fetch(`/api${path}`, {
+    return await fetch(`/api${path}`, {
       method: request.method ?? 'GET',
       credentials: 'same-origin',
       ...(request.body === undefined || form ? {} : { headers: { 'content-type': 'application/json' } }),
@@ -42,11 +55,12 @@ export async function api<Schema extends z.ZodType>(path: string, request: Reque
       'Sconce cannot be reached. What you typed is still here; try again when you have a signal.',
     )
   }
-  const json: unknown = await response.json().catch(() => undefined)
-  if (response.ok) return request.response.parse(json)
+}
+
+function refusal(json: unknown): ApiError {
   const envelope = errorEnvelopeSchema.safeParse(json)
   if (!envelope.success)
-    throw new ApiError('INTERNAL', 'Sconce answered with something it should not. Nothing was changed; try again.')
+    return new ApiError('INTERNAL', 'Sconce answered with something it should not. Nothing was changed; try again.')
   const { code, message, issues, details } = envelope.data.error
-  throw new ApiError(code, message, issues, details)
+  return new ApiError(code, message, issues, details)
 }

@@ -1,6 +1,6 @@
-/** Hands a text file to the browser's downloads. */
-export function saveFile(name: string, text: string, type = 'application/json'): void {
-  const url = URL.createObjectURL(new Blob([text], { type }))
+/** Hands a file to the browser's downloads; `type` is of text, a blob has its own. */
+export function saveFile(name: string, content: string | Blob, type = 'application/json'): void {
+  const url = URL.createObjectURL(content instanceof Blob ? content : new Blob([content], { type }))
   const link = document.createElement('a')
   link.href = url
   link.download = name.replace(/[\\/:*?"<>|]/g, ' ')

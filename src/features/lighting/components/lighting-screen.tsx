@@ -35,7 +35,12 @@ export function LightingScreen() {
         sub={all.length === 0 ? undefined : `${all.length} ${all.length === 1 ? 'setup' : 'setups'}`}
         actions={[
           ...(isPhone ? [unitAction] : []),
-          ...(mayWrite ? [{ label: 'Add a setup', variant: 'primary' as const, onPress: setups.add }] : []),
+          ...(mayWrite
+            ? [
+                { label: 'Use a recipe', onPress: () => setIsUsing(true) },
+                { label: 'Add a setup', variant: 'primary' as const, onPress: setups.add },
+              ]
+            : []),
         ]}
       >
         {isPhone ? undefined : <UnitSwitch />}

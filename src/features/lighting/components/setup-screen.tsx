@@ -23,12 +23,16 @@ import { useKit } from '../use-kit.ts'
 import { useMoving } from '../use-moving.ts'
 import { usePeerMoves } from '../use-peer-moves.ts'
 import { useSetupWriter } from '../use-setup-writer.ts'
+import { useFrames } from '../test-frame/use-frames.ts'
 import { useSetups, wholeItems } from '../use-setups.ts'
 import { AddLight } from './add-light.tsx'
+import { FrameStrip } from './frames/frame-strip.tsx'
+import { LargeView } from './frames/large-view.tsx'
 import { NextStepLine } from './next-step-line.tsx'
 import { PlanDrawing } from './plan/plan-drawing.tsx'
 import { SideDrawing } from './plan/side-drawing.tsx'
 import { Overview } from './readings/overview.tsx'
+import { useRecipeDialogs } from './recipe/use-recipe-dialogs.tsx'
 import { SetupEditor, isPartOf } from './setup-editor.tsx'
 import { UnitSwitch, useUnitAction } from './unit-switch.tsx'
 
@@ -63,7 +67,9 @@ function Setup({ plan, whole }: { plan: Plan; whole: WholeSetup }) {
   const [chosen, setChosen] = useState<string | null>(null)
   const [isSheetOpen, setIsSheetOpen] = useState(false)
   const [adding, setAdding] = useState<LightPurpose | 'any' | null>(null)
+  const [openStage, setOpenStage] = useState<string | null>(null)
   const setups = useSetups()
+  const recipes = useRecipeDialogs()
   const unitAction = useUnitAction()
   const use = useMemo(() => setupUse(plan, whole.setup.id), [plan, whole.setup.id])
 
@@ -96,6 +102,7 @@ function Setup({ plan, whole }: { plan: Plan; whole: WholeSetup }) {
     [shown, use, reading],
   )
   const orientation = widestOf(use.orientations)
+  const frames = useFrames(plan, shown, reading, use.orientations[0] ?? 'upright')
   useUndoKeys(writer.undo)
   const drawing = { whole: shown, written: whole, chosenKey, moving, mayWrite, peers: peers.holds, nameOf }
 
@@ -137,10 +144,10 @@ function Setup({ plan, whole }: { plan: Plan; whole: WholeSetup }) {
     />
   )
   const chosenLight = whole.lights.find((light) => chosenKey === light.id || chosenKey === `${light.id}:aim`)
-  const phoneActions = [
-    ...wholeItems(whole, setups).map(({ label, onSelect }) => ({ label, onPress: onSelect })),
-    unitAction,
-  ]
+  const onPhone = (items: readonly { label: string; onSelect: () => void }[]) =>
+    items.map(({ label, onSelect }) => ({ label, onPress: onSelect }))
+  const readerActions = [...onPhone(recipes.itemsOf(whole)), unitAction]
+  const phoneActions = [...onPhone(wholeItems(whole, setups)), ...readerActions]
   const actions = mayWrite
     ? [
         { label: 'Undo', variant: 'quiet' as const, disabled: !writer.undo.canUndo, onPress: writer.undo.undo },
@@ -149,7 +156,7 @@ function Setup({ plan, whole }: { plan: Plan; whole: WholeSetup }) {
         { label: 'Add a light', variant: 'primary' as const, onPress: () => setAdding('any') },
       ]
     : isPhone
-      ? [unitAction]
+      ? readerActions
       : []
 
   return (
@@ -158,21 +165,29 @@ function Setup({ plan, whole }: { plan: Plan; whole: WholeSetup }) {
         {isPhone ? undefined : (
           <>
             <UnitSwitch />
-            {mayWrite && (
-              <Menu
-                trigger={
-                  <IconButton label="More for this setup">
-                    <MoreHorizontal size={18} aria-hidden />
-                  </IconButton>
-                }
-                items={wholeItems(whole, setups)}
-              />
-            )}
+            <Menu
+              trigger={
+                <IconButton label="More for this setup">
+                  <MoreHorizontal size={18} aria-hidden />
+                </IconButton>
+              }
+              items={[...(mayWrite ? [...wholeItems(whole, setups), 'line' as const] : []), ...recipes.itemsOf(whole)]}
+            />
           </>
         )}
       </ScreenBar>
+      {recipes.dialogs}
       <div className="grid min-h-0 flex-1 md:grid-cols-[minmax(0,1fr)_minmax(19rem,32%)] xl:grid-cols-[minmax(0,1fr)_25rem]">
         <div className="flex min-w-0 flex-col gap-3 p-2.5 md:min-h-0 md:py-0 md:pr-5 md:pb-3.5 md:pl-6">
+          <FrameStrip
+            setup={shown.setup}
+            stages={frames.stages}
+            orientation={frames.orientation}
+            frame={frames.frame}
+            chosenId={chosenKey}
+            onChoose={setChosen}
+            onOpen={setOpenStage}
+          />
           {mayWrite && (
             <NextStepLine whole={whole} onAddLight={setAdding} onAddPanel={() => open(writer.addProp('panel'))} />
           )}
@@ -202,6 +217,18 @@ function Setup({ plan, whole }: { plan: Plan; whole: WholeSetup }) {
         <Sheet open={isSheetOpen && chosenKey !== null} onOpenChange={setIsSheetOpen} title="Change">
           {editor}
         </Sheet>
+      )}
+      {frames.stages.some((stage) => stage.light.id === openStage) && openStage !== null && (
+        <LargeView
+          whole={shown}
+          scene={frames.scene}
+          orientation={frames.orientation}
+          stages={frames.stages}
+          under={frames.frame.layers}
+          stageId={openStage}
+          onStage={setOpenStage}
+          onClose={() => setOpenStage(null)}
+        />
       )}
       <AddLight
         open={adding !== null}

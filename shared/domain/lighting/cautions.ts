@@ -114,7 +114,7 @@ function powerCautions(light: Light): Caution[] {
   const { numbers } = light.unit
   const cautions: Caution[] = []
   const least = 1 / numbers.minPowerDenominator
-  if (light.power < least * 0.99) {
+  if (light.power > 0 && light.power < least * 0.99) {
     cautions.push({
       key: `${light.id}:under-power`,
       tone: 'red',

@@ -61,8 +61,9 @@ export function fNumberLabel(fNumber: number): string {
   return label === undefined ? `f/${fNumber < 1 ? fNumber.toFixed(2) : Math.round(fNumber)}` : `f/${label}`
 }
 
-/** Power as a fraction of full, on thirds of a stop: "full", "1/8", "1/8 + ⅓". `power` in (0, 1]. */
+/** Power as a fraction of full, on thirds of a stop: "full", "1/8", "1/8 + ⅓". Without any it is "no power". */
 export function powerLabel(power: number): string {
+  if (!(power > 0)) return 'no power'
   const thirds = Math.min(0, Math.round(3 * Math.log2(power)))
   const whole = Math.floor(thirds / 3)
   const rest = THIRDS[thirds - 3 * whole] ?? ''

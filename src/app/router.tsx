@@ -44,6 +44,7 @@ const routes: RouteObject[] = [
             children: [
               { index: true, ...screen(() => import('./routes/shoots.tsx')) },
               { path: 'studio/:studioId/kit', ...screen(() => import('./routes/kit.tsx')) },
+              { path: 'studio/:studioId/recipes', ...screen(() => import('./routes/recipes.tsx')) },
               { path: 'studio/:studioId/people', ...screen(() => import('./routes/studio-people.tsx')) },
               { path: 'me', ...screen(() => import('./routes/me.tsx')) },
             ],

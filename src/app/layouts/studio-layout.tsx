@@ -1,4 +1,4 @@
-import { Clapperboard, Lightbulb, UserRound, UsersRound } from 'lucide-react'
+import { Clapperboard, Lightbulb, ScrollText, UserRound, UsersRound } from 'lucide-react'
 import { Suspense } from 'react'
 import { Link, Outlet, useNavigate, useParams } from 'react-router-dom'
 import type { Session } from '#shared/api/studios.ts'
@@ -38,6 +38,7 @@ export function StudioLayout() {
           {studio && (
             <>
               <SpineLink to={`/studio/${studio.id}/kit`}>Kit room</SpineLink>
+              <SpineLink to={`/studio/${studio.id}/recipes`}>Recipes</SpineLink>
               <SpineLink to={`/studio/${studio.id}/people`}>People</SpineLink>
             </>
           )}
@@ -59,6 +60,10 @@ export function StudioLayout() {
               <BottomLink to={`/studio/${studio.id}/kit`}>
                 <Lightbulb size={17} aria-hidden className="mx-auto mb-0.5" />
                 Kit room
+              </BottomLink>
+              <BottomLink to={`/studio/${studio.id}/recipes`}>
+                <ScrollText size={17} aria-hidden className="mx-auto mb-0.5" />
+                Recipes
               </BottomLink>
               <BottomLink to={`/studio/${studio.id}/people`}>
                 <UsersRound size={17} aria-hidden className="mx-auto mb-0.5" />

@@ -26,7 +26,7 @@ export async function startVite({ host, port, serverPort, onServerChange }) {
   /** @type {NodeJS.Timeout | undefined} */
   let soon
   vite.watcher.on('all', (_event, path) => {
-    if (!watched.some((folder) => path.startsWith(folder)) || !/\.(ts|json|sql)$/.test(path)) return
+    if (!watched.some((folder) => path.startsWith(folder)) || !/\.(tsx?|json|sql)$/.test(path)) return
     clearTimeout(soon)
     soon = setTimeout(onServerChange, 150)
   })

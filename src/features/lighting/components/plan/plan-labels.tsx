@@ -46,20 +46,22 @@ export function PlanLabels({ whole, view, isNarrow, unit }: PlanLabelsProps) {
 /** How much the distances at the left take, CSS px. */
 const DIMENSION_PX = 76
 
-/** A label beside a point, outwards from the sitter, or inwards where it would be cut off. */
-function besideOf(
-  view: PlanView,
-  xM: number,
-  faceX: number,
-  away: number,
-  lines: readonly string[],
-): Pick<Label, 'x' | 'side'> {
+/** How far over a thing its label stands that has no room beside it, CSS px. */
+const OVER_PX = 24
+
+type Beside = Pick<Label, 'x' | 'side'> & { overPx: number }
+
+/** A label beside a point, outwards from the sitter; over it along the edge where it would be cut off. */
+function besideOf(view: PlanView, xM: number, faceX: number, away: number, lines: readonly string[]): Beside {
   const width = wordsWidth(lines)
   const x = toX(view, xM)
-  const left = { x: x - away, side: 'left' } as const
-  const right = { x: x + away, side: 'right' } as const
-  if (xM < faceX) return left.x - width < DIMENSION_PX ? right : left
-  return right.x + width > view.width - 4 ? left : right
+  if (xM < faceX)
+    return x - away - width < DIMENSION_PX
+      ? { x: DIMENSION_PX, side: 'right', overPx: OVER_PX }
+      : { x: x - away, side: 'left', overPx: 0 }
+  return x + away + width > view.width - 4
+    ? { x: view.width - 4, side: 'left', overPx: OVER_PX }
+    : { x: x + away, side: 'right', overPx: 0 }
 }
 
 function lightLabel(light: Light, { whole, view, isNarrow, unit }: PlanLabelsProps): Label {
@@ -72,7 +74,8 @@ function lightLabel(light: Light, { whole, view, isNarrow, unit }: PlanLabelsPro
     ? [name]
     : [[name, ...made].join(', '), `${lengthLabel(light.at[1], unit, true)} up · ${off} off`]
   const away = Math.max(26, Math.min(60, sizePx + 12))
-  return { key: light.id, ...besideOf(view, light.at[0], face[0], away, lines), y: toZ(view, light.at[2]) + 2, lines }
+  const { overPx, ...beside } = besideOf(view, light.at[0], face[0], away, lines)
+  return { key: light.id, ...beside, y: toZ(view, light.at[2]) + 2 - overPx, lines }
 }
 
 const CAMERA = 'camera'
@@ -91,8 +94,8 @@ function cameraLabel({ setup: { camera }, lights }: WholeSetup, view: PlanView):
 function propLabel(prop: Prop, whole: WholeSetup, view: PlanView): Label {
   const turn = prop.kind === 'prop' ? 0 : (prop.turnDeg * Math.PI) / 180
   const away = Math.max(12, (prop.widthM / 2) * Math.abs(Math.cos(turn)) * view.pxPerM + 10)
-  const beside = besideOf(view, prop.at[0], facePoint(whole)[0], away, [prop.name])
-  return { key: prop.id, ...beside, y: toZ(view, prop.at[2]) + 4, lines: [prop.name] }
+  const { overPx, ...beside } = besideOf(view, prop.at[0], facePoint(whole)[0], away, [prop.name])
+  return { key: prop.id, ...beside, y: toZ(view, prop.at[2]) + 4 - overPx, lines: [prop.name] }
 }
 
 /** Where a sitter's name stands: outside at the two ends of a row, above in between. */

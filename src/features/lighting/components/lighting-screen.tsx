@@ -8,6 +8,8 @@ import { Empty } from '#src/ui/empty.tsx'
 import { ScreenBar } from '#src/ui/screen-bar.tsx'
 import { useIsPhone } from '#src/ui/use-media.ts'
 import { setupUse } from '#shared/domain/lighting/setup-use.ts'
+import { wearingOf } from '#shared/domain/lighting/wearing.ts'
+import { useSheetFrames } from '../test-frame/use-sheet-frames.ts'
 import { useSetups } from '../use-setups.ts'
 import { UseRecipe } from './recipe/use-recipe.tsx'
 import { useRecipeDialogs } from './recipe/use-recipe-dialogs.tsx'
@@ -22,7 +24,7 @@ export function LightingScreen() {
   const setups = useSetups()
   const isPhone = useIsPhone()
   const unitAction = useUnitAction()
-  const recipes = useRecipeDialogs()
+  const recipes = useRecipeDialogs(useSheetFrames(plan))
   const [isUsing, setIsUsing] = useState(false)
   const [removing, setRemoving] = useState<WholeSetup | null>(null)
   const all = [...plan.setups.values()]
@@ -69,6 +71,7 @@ export function LightingScreen() {
               <SetupCard
                 whole={whole}
                 use={setupUse(plan, whole.setup.id)}
+                wearing={wearingOf(plan, whole.setup.id)}
                 to={address(whole.setup.id)}
                 mayWrite={mayWrite}
                 actions={setups}

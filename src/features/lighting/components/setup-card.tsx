@@ -6,13 +6,16 @@ import { count } from '#src/lib/format.ts'
 import { IconButton } from '#src/ui/button.tsx'
 import { Lamp, type LampState } from '#src/ui/lamp.tsx'
 import { Menu, type MenuItem } from '#src/ui/menu.tsx'
+import type { Wearing } from '#shared/domain/lighting/test-frame/scene-of.ts'
 import type { SetupUse } from '#shared/domain/lighting/setup-use.ts'
 import { type SetupActions, wholeItems } from '../use-setups.ts'
+import { CardFrame } from './frames/card-frame.tsx'
 import { PlanSketch } from './plan/plan-sketch.tsx'
 
 type SetupCardProps = {
   whole: WholeSetup
   use: SetupUse
+  wearing: Wearing
   to: string
   mayWrite: boolean
   actions: SetupActions
@@ -28,14 +31,19 @@ function lampOf(whole: WholeSetup, use: SetupUse): { state: LampState; why: stri
   return red === undefined ? { state: 'lit', why: 'Nothing in its way' } : { state: 'half', why: red }
 }
 
-export function SetupCard({ whole, use, to, mayWrite, actions, recipeItems, onRemove }: SetupCardProps) {
+export function SetupCard({ whole, use, to, mayWrite, actions, wearing, recipeItems, onRemove }: SetupCardProps) {
   const { setup, lights } = whole
   const lamp = lampOf(whole, use)
   const off = lights.filter((light) => !light.isOn).length
   const purposes = lights.map((light) => light.purpose)
   return (
     <article className="relative h-full rounded-r border border-hair bg-paper hover:border-edge has-[a:focus-visible]:border-draft">
-      <PlanSketch whole={whole} />
+      <div className="flex">
+        <div className="min-w-0 flex-1">
+          <PlanSketch whole={whole} />
+        </div>
+        <CardFrame whole={whole} orientation={use.orientations[0] ?? 'upright'} wearing={wearing} />
+      </div>
       <div className="flex items-start gap-2 px-3.5 pt-3 pb-3.5">
         <div className="min-w-0 flex-1">
           <h2 className="text-[1.0625rem] leading-snug">

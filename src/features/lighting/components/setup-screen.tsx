@@ -24,6 +24,7 @@ import { useMoving } from '../use-moving.ts'
 import { usePeerMoves } from '../use-peer-moves.ts'
 import { useSetupWriter } from '../use-setup-writer.ts'
 import { useFrames } from '../test-frame/use-frames.ts'
+import { useSheetFrames } from '../test-frame/use-sheet-frames.ts'
 import { useSetups, wholeItems } from '../use-setups.ts'
 import { AddLight } from './add-light.tsx'
 import { FrameStrip } from './frames/frame-strip.tsx'
@@ -69,7 +70,7 @@ function Setup({ plan, whole }: { plan: Plan; whole: WholeSetup }) {
   const [adding, setAdding] = useState<LightPurpose | 'any' | null>(null)
   const [openStage, setOpenStage] = useState<string | null>(null)
   const setups = useSetups()
-  const recipes = useRecipeDialogs()
+  const recipes = useRecipeDialogs(useSheetFrames(plan))
   const unitAction = useUnitAction()
   const use = useMemo(() => setupUse(plan, whole.setup.id), [plan, whole.setup.id])
 

@@ -33,12 +33,14 @@ export function CardFrame({ whole, orientation, wearing }: CardFrameProps) {
   if (!isLit) return null
   const purposes = inBuildOrder(whole.lights).map((light) => light.purpose)
   return (
-    <FrameCanvas
-      width={layers?.width ?? 2}
-      height={layers?.height ?? 3}
-      bytes={bytes}
-      label={`Test frame with ${purposes.join(', ')}`}
-      className="block size-full bg-night-2 object-cover"
-    />
+    <div className="relative w-2/5 flex-none border-b border-hair bg-night">
+      <FrameCanvas
+        width={layers?.width ?? 2}
+        height={layers?.height ?? 3}
+        bytes={bytes}
+        label={`Test frame with ${purposes.join(', ')}`}
+        className="absolute inset-0 size-full object-contain"
+      />
+    </div>
   )
 }

@@ -2,6 +2,7 @@ import { useQuery } from '@tanstack/react-query'
 import { useMemo } from 'react'
 import type { KitItemId } from '#shared/ids.ts'
 import type { KitItem } from '#shared/api/kit.ts'
+import { faultsOf } from '#shared/domain/kit/faults.ts'
 import type { PanelNumbers } from '#shared/domain/kit/schema.ts'
 import {
   type LightGel,
@@ -40,6 +41,8 @@ function sortKit(kit: readonly KitItem[]): Omit<Kit, 'state'> {
   const gels: LightGel[] = []
   const supports: LightSupport[] = []
   for (const { id: kitId, version, name, body } of kit) {
+    // Nothing can be worked out with it: it is kept out until the kit room has its numbers.
+    if (faultsOf(body).length > 0) continue
     const own = { kitId, version, name }
     switch (body.kind) {
       case 'unit':

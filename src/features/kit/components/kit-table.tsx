@@ -36,7 +36,7 @@ export function KitTable({ studioId, mayChange }: KitTableProps) {
           them by itself. <b className="font-semibold text-ink">Assumed</b> is a guess until a meter or a maker’s sheet
           replaces it.
         </p>
-        <div className="flex flex-wrap gap-2">
+        <div className="flex flex-wrap gap-2 md:ml-auto">
           <Button onClick={() => saveFile('Kit room.csv', toCsv(kitTable(data.kit)), 'text/csv')}>Export as CSV</Button>
           {mayChange && <Button onClick={() => setIsImporting(true)}>Import a CSV</Button>}
         </div>

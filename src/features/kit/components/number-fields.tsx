@@ -2,6 +2,7 @@ import { Field } from '#src/ui/field.tsx'
 import { Input } from '#src/ui/input.tsx'
 import { NumberInput } from '#src/ui/number-input.tsx'
 import { Select } from '#src/ui/select.tsx'
+import { Textarea } from '#src/ui/textarea.tsx'
 import { useKitIssue } from '../kit-issues.ts'
 
 /** Boxes that stand side by side where there is room. */
@@ -66,7 +67,7 @@ type WordsProps = { name: string; label: string; hint: string; value: string; on
 export function Words({ name, label, hint, value, onChange }: WordsProps) {
   return (
     <Field label={label} hint={hint} error={useKitIssue(name)}>
-      <Input autoComplete="off" maxLength={200} value={value} onChange={(event) => onChange(event.target.value)} />
+      <Textarea rows={2} maxLength={200} value={value} onChange={(event) => onChange(event.target.value)} />
     </Field>
   )
 }

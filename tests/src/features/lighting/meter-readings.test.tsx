@@ -50,6 +50,7 @@ function Parts({ setup }: { setup: NonNullable<ReturnType<ReturnType<typeof useP
   return (
     <>
       <p>kit {kit.state}</p>
+      <p>{kit.units.length} units to pick</p>
       <NewerNumbers whole={setup} kit={kit} writer={writer} />
       <button type="button" onClick={writer.undo.undo}>
         Undo
@@ -176,6 +177,18 @@ describe('NewerNumbers', () => {
     cleanup()
     show({ stored: newer, role: 'client' })
     await screen.findByText('kit there')
+    expect(screen.queryByText(/newer numbers/)).toBeNull()
+  })
+})
+
+describe('useKit', () => {
+  it('keeps a unit without a guide number out of what can be picked', async () => {
+    show()
+    expect(await screen.findByText('1 units to pick')).toBeTruthy()
+    cleanup()
+    show({ stored: item(2, { guideNumberM: { value: 0, from: 'assumed', source: '' } }) })
+    await screen.findByText('kit there')
+    expect(screen.getByText('0 units to pick')).toBeTruthy()
     expect(screen.queryByText(/newer numbers/)).toBeNull()
   })
 })

@@ -6,6 +6,12 @@ import type { Held } from '../../use-moving.ts'
 
 type ReadoutProps = { held: Held; whole: WholeSetup; name: string }
 
+/** In the plan in the half where the hand is not; from the side over the floor behind the wall. */
+function placeFor(held: Held, { setup: { camera, background } }: WholeSetup): string {
+  if (held.drawing === 'side') return 'top-2 left-2 md:top-auto md:bottom-2'
+  return held.at[2] > (camera.at[2] + background.zM) / 2 ? 'top-2 right-2' : 'right-2 bottom-2'
+}
+
 /** Distances and angles of what a hand holds, in a corner where the hand is not. */
 export function Readout({ held, whole, name }: ReadoutProps) {
   const unit = useLengthUnit()
@@ -15,7 +21,7 @@ export function Readout({ held, whole, name }: ReadoutProps) {
       aria-hidden
       className={cn(
         'pointer-events-none absolute z-10 rounded-r border border-hair bg-paper/95 px-2.5 py-1.5 text-xs max-md:text-[0.8125rem]',
-        held.drawing === 'plan' ? 'top-2 right-2' : 'top-2 left-2 md:top-auto md:bottom-2',
+        placeFor(held, whole),
       )}
     >
       <p className="font-semibold">{name}</p>

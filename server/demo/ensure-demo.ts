@@ -37,7 +37,7 @@ import { demoLighting } from './content/lighting.ts'
 import { demoLooks } from './content/looks.ts'
 import { namedIds } from './content/named-ids.ts'
 import { demoPlan } from './content/plan.ts'
-import { DEMO_CROPS, demoPicture } from './pictures.ts'
+import { DEMO_PICTURES, demoPicture } from './pictures.ts'
 import { DEMO_PEOPLE } from './people.ts'
 
 export type DemoWorld = Omit<Ctx, 'actor'> & {
@@ -125,11 +125,11 @@ type DemoFile = DemoUpload & { bytes: Uint8Array; processed: ProcessedPicture }
 
 async function demoUploads(id: (name: string) => string): Promise<Map<string, DemoFile>> {
   const files = new Map<string, DemoFile>()
-  for (const crop of DEMO_CROPS) {
-    const bytes = await demoPicture(crop)
+  for (const name of DEMO_PICTURES) {
+    const bytes = await demoPicture(name)
     const processed = await processPicture(bytes)
-    files.set(crop.name, {
-      id: id(`upload-${crop.name}`),
+    files.set(name, {
+      id: id(`upload-${name}`),
       bytes,
       processed,
       widthPx: processed.widthPx,

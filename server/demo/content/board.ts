@@ -11,7 +11,7 @@ import { DEMO_SHOTS } from './plan.ts'
 export type DemoUpload = { id: string; widthPx: number; heightPx: number; palette: string[] }
 
 type FrameRow = [
-  crop: string,
+  picture: string,
   x: number,
   y: number,
   width: number,
@@ -23,7 +23,7 @@ type FrameRow = [
 
 const FRAMES: readonly FrameRow[] = [
   ['warm-cool', 24, 44, 216, 'One side warm, one cool', 'IM', 'look-field', 'shot-field'],
-  ['undyed-brass', 258, 44, 208, 'Brass catches the edge', 'SO', 'look-open', 'shot-open'],
+  ['undyed-brass', 262, 44, 172, 'Brass catches the edge', 'SO', 'look-open', 'shot-open'],
   ['one-light', 24, 362, 150, 'Main alone', 'IM'],
   ['cold-light', 190, 362, 150, 'Cold light, cold nose', 'IM', 'look-cape', 'shot-star'],
   ['with-fill', 356, 362, 150, 'And with a little fill', 'IM'],
@@ -41,13 +41,13 @@ const FRAMES: readonly FrameRow[] = [
   ['room-tone', 1080, 590, 180, 'The room’s own tone', 'IM'],
   ['globe', 1278, 704, 140, 'Brass, softly dented', 'IM', undefined, 'shot-bench'],
   ['brass-edge', 1436, 704, 122, 'Edge light on metal', 'IM'],
-  ['knit', 1358, 530, 200, 'Cloth with a hand in it', 'SO', 'look-work'],
+  ['knit', 1358, 522, 200, 'Cloth with a hand in it', 'SO', 'look-work'],
 ]
 
 /** Everything on the wall and the strip of shots below it. */
 export function demoBoard(
   id: NamedIds,
-  upload: (crop: string) => DemoUpload,
+  upload: (picture: string) => DemoUpload,
   made: (initials: 'IM' | 'SO' | 'CW') => Made,
   random: () => number,
 ): Uint8Array {
@@ -65,10 +65,10 @@ export function demoBoard(
   putItems(
     doc,
     frames,
-    FRAMES.map(([crop, x, y, width, caption, by, look, shot], index) => {
-      const file = upload(crop)
+    FRAMES.map(([picture, x, y, width, caption, by, look, shot], index) => {
+      const file = upload(picture)
       return {
-        id: id(`frame-${crop}`),
+        id: id(`frame-${picture}`),
         box: fitPrint([x, y, width, 100], file.widthPx, file.heightPx),
         z: index,
         picture: { uploadId: file.id, state: 'stored' as const, widthPx: file.widthPx, heightPx: file.heightPx },
@@ -122,21 +122,21 @@ export function demoBoard(
     [
       {
         id: id('note-comet'),
-        box: [262, 262, 230, 64],
+        box: [262, 288, 230, 64],
         z: 31,
         text: 'Everyone is waiting for the same comet.',
         made: made('IM'),
       },
       {
         id: id('note-tea'),
-        box: [560, 872, 440, 44],
+        box: [756, 852, 270, 60],
         z: 31,
         text: 'The tea is poured, never drunk.',
         made: made('CW'),
       },
       {
         id: id('note-quiet'),
-        box: [1080, 820, 180, 84],
+        box: [1080, 842, 180, 84],
         z: 31,
         text: 'Quiet pictures. No one smiles before the toast.',
         made: made('IM'),

@@ -44,7 +44,7 @@ const PIECES: readonly PieceRow[] = [
 /** Days after the shoot as a civil date. */
 export type DaysAfter = (days: number) => string | null
 
-/** The three characters, their eight looks and every piece. `pictures` gives upload ids by the crop's name. */
+/** The three characters, their eight looks and every piece. `pictures` gives upload ids by their names. */
 export function demoLooks(
   id: NamedIds,
   picture: (name: string) => string,

@@ -34,6 +34,7 @@ export function guessedAppearance(place: Pick<SitterPlace, 'id' | 'sitterId'>): 
     hair: STYLES[seed % STYLES.length] ?? 'short',
     hairColour: HAIR_COLOURS[(seed >> 1) % HAIR_COLOURS.length] ?? '#2a1c14',
     cut: 'jumper',
+    face: null,
     garmentColour: null,
   }
 }
@@ -55,9 +56,9 @@ export function reflectedRgb(colour: string): [number, number, number] {
  */
 export function skinRgb(itaDeg: number): [number, number, number] {
   const t = Math.min(1, Math.max(0, (itaDeg + 60) / 120))
-  const b = 11.5 + 8.5 * Math.sin(Math.PI * Math.min(1, t + 0.12)) + 1.5 * t
+  const b = 12.5 + 8 * Math.sin(Math.PI * Math.min(1, t + 0.08)) + 4 * t
   const l = Math.min(80, Math.max(22, 50 + b * Math.tan((itaDeg * Math.PI) / 180)))
-  const a = 9.5 + 4 * Math.sin(Math.PI * t)
+  const a = 10 + 4 * Math.sin(Math.PI * t) + 1.5 * t
   const rgb = toRgb({ mode: 'lab65', l, a, b })
   const most = (value: number) => Math.min(0.85, Math.max(0.012, value))
   return [most(rgb.r), most(rgb.g), most(rgb.b)]

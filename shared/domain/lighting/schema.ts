@@ -157,6 +157,8 @@ export const appearanceSchema = z.object({
   hair: z.enum(HAIR_STYLES),
   hairColour: colourSchema,
   cut: z.enum(GARMENT_CUTS),
+  /** Which of the faces there are; null: one that stays the same for the sitter. */
+  face: z.number().int().min(0).max(9999).nullable().default(null),
   /** Null: the colour of the look's first garment. */
   garmentColour: colourSchema.nullable().default(null),
 })

@@ -33,6 +33,8 @@ export type BodyShape = {
 }
 
 const NONE = 1
+/** The trunk was shaped this much too low under its head, metres. */
+const RISE_M = 0.024
 
 type Limb = { elbow: readonly [number, number, number]; wrist: readonly [number, number, number] }
 
@@ -43,9 +45,16 @@ function armOf(pose: Pose): Limb {
     : { elbow: [0.238, -0.52, 0.01], wrist: [0.085, -0.655, 0.235] }
 }
 
+/** A band about the neck: radius R, thickness r, half height h. */
+function capsuleRing(x: number, y: number, z: number, R: number, r: number, h: number): number {
+  const u = Math.sqrt(x * x + z * z) - R
+  const v = Math.max(0, Math.abs(y) - h)
+  return Math.sqrt(u * u + v * v) - r
+}
+
 export function makeBody(seed: number, cut: Cut, pose: Pose, eyeHeightM: number): BodyShape {
   const scale = pose === 'standing' ? clamp(eyeHeightM / 1.55, 0.55, 1.2) : 1
-  const ground = -eyeHeightM / scale
+  const ground = -eyeHeightM / scale - RISE_M
   const { elbow, wrist } = armOf(pose)
   const slim = 0.006 * (hash3(seed, 21, 5) * 2 - 1)
   const phase = hash3(seed, 22, 5) * 40
@@ -164,14 +173,14 @@ export function makeBody(seed: number, cut: Cut, pose: Pose, eyeHeightM: number)
   switch (cut) {
     case 'jumper':
       cloth = (x, y, z) => {
-        const top = plainTop(x, y, z, 0.016, pose === 'seated' ? -0.86 : -0.815, 0.0085)
+        const top = plainTop(x, y, z, 0.016, pose === 'seated' ? -0.86 : -0.815, 0.006)
         const band = smoothMax(trunk(x, y, z, 0.017), Math.abs(y + 0.8) - 0.03, 0.012)
         return smoothMin(smoothMin(top, band, 0.012), collar(x, y, z), 0.014)
       }
       break
     case 'shirt':
       cloth = (x, y, z) => {
-        const top = openNeck(plainTop(x, y, z, 0.011, -0.83, 0.011), x, y, z, 0.06, 0.165)
+        const top = openNeck(plainTop(x, y, z, 0.011, -0.83, 0.0065), x, y, z, 0.06, 0.165)
         // A stand about the neck and two points that fall on the chest.
         const cy = y + 0.19 - z * 0.22
         const stand = smoothMax(
@@ -209,17 +218,14 @@ export function makeBody(seed: number, cut: Cut, pose: Pose, eyeHeightM: number)
         const open = smoothMax(base, -opening, 0.005)
         const lapelOut = edge + 0.05 * ease(-0.5, -0.34, y) * (1 - ease(-0.24, -0.19, y) * 0.4)
         const lapel = z > 0 ? Math.max(base - 0.011, Math.max(edge - ax, ax - lapelOut), -0.49 - y) * 0.9 : 1
-        const stand = smoothMax(
-          Math.abs(Math.sqrt(x * x + (z + 0.03) ** 2) - 0.078) - 0.008,
-          Math.abs(y + 0.185 - z * 0.5) - 0.026,
-          0.01,
-        )
-        const collarCut = z > 0.03 ? ax - edge : 1
-        return smoothMin(smoothMin(open, lapel, 0.004), smoothMax(stand, -collarCut, 0.005), 0.012)
+        // The collar stands behind and beside the neck, rising to the back.
+        const turned = capsuleRing(x, y + 0.212 + (z + 0.03) * 0.42, z + 0.03, 0.079, 0.011, 0.024)
+        const collar = smoothMax(turned, z - 0.03 - 0.35 * clamp(-y - 0.2, 0, 0.1), 0.012)
+        return smoothMin(smoothMin(open, lapel, 0.004), collar, 0.014)
       }
       linen = (x, y, z) => {
         // A shirt with a stand, and a stock wound twice and tied.
-        const shirt = trunk(x, y, z, 0.004)
+        const shirt = smoothMin(trunk(x, y, z, 0.004), throat(x, y, z, 0.006), 0.05)
         const cy = y + 0.172 - z * 0.2
         const wound = smoothMin(
           ring(x, cy, z + 0.022, 0.058, 0.013),
@@ -291,8 +297,7 @@ export function makeBody(seed: number, cut: Cut, pose: Pose, eyeHeightM: number)
       break
     }
   }
-  if (scale === 1) return { cloth, skin, under, linen, metal }
-  const scaled = (field: BodyShape['cloth']) => (x: number, y: number, z: number) =>
-    field(x / scale, y / scale, z / scale) * scale
-  return { cloth: scaled(cloth), skin: scaled(skin), under: scaled(under), linen: scaled(linen), metal: scaled(metal) }
+  const placed = (field: BodyShape['cloth']) => (x: number, y: number, z: number) =>
+    field(x / scale, y / scale - RISE_M, z / scale) * scale
+  return { cloth: placed(cloth), skin: placed(skin), under: placed(under), linen: placed(linen), metal: placed(metal) }
 }

@@ -44,7 +44,7 @@ export function clothSpot(
   const cz = bx * spot.gy - by * spot.gx
   switch (cut) {
     case 'jumper': {
-      const share = seen(0.011, blurM)
+      const share = seen(0.0065, blurM)
       if (share > 0) {
         const e = 0.0006
         const here = knit(u, v)
@@ -62,7 +62,7 @@ export function clothSpot(
       return
     }
     case 'coat': {
-      const fuzz = 0.4 * seen(0.006, blurM)
+      const fuzz = 0.22 * seen(0.003, blurM)
       tilt(
         spot,
         cx,
@@ -74,7 +74,7 @@ export function clothSpot(
         bz,
         fuzz * noise(lx * 420 + 31, ly * 420, lz * 420),
       )
-      const twill = 1 + 0.08 * seen(0.008, blurM) * Math.sin((u * 0.7 + v) * 1900)
+      const twill = 1 + 0.08 * seen(0.0024, blurM) * Math.sin((u * 0.7 + v) * 1900)
       spot.r *= twill
       spot.g *= twill
       spot.b *= twill
@@ -86,7 +86,7 @@ export function clothSpot(
       const crease =
         0.16 * noise(lx * 38 + ly * 20, ly * 46 - lx * 18, lz * 38) + 0.08 * noise(lx * 95, ly * 110, lz * 95)
       tilt(spot, cx, cy, cz, crease, bx, by, bz, crease * 0.8)
-      const weave = 0.16 * seen(0.0035, blurM)
+      const weave = 0.16 * seen(0.0013, blurM)
       tilt(spot, cx, cy, cz, weave * Math.sin(u * 3600), bx, by, bz, weave * Math.sin(v * 3600))
       spot.bloom = 0.05
       spot.mirror = 0.012
@@ -102,7 +102,7 @@ export function clothSpot(
       return
     }
     case 'cape': {
-      const nap = 0.22 * seen(0.004, blurM)
+      const nap = 0.22 * seen(0.0022, blurM)
       tilt(
         spot,
         cx,

@@ -18,7 +18,7 @@ export type HeadShape = {
 
 const EYE = { x: 0.0315, y: 0, z: 0.0752, r: 0.0122 }
 /** Half the width of the opening between the lids, and how high it opens above and below. */
-const LID = { half: 0.015, up: 0.0057, low: 0.0044 }
+const LID = { half: 0.015, up: 0.005, low: 0.0043 }
 
 /** An even number in [−1, 1] for one trait of a seed. */
 function trait(seed: number, which: number): number {
@@ -74,10 +74,10 @@ export function makeHead(seed: number, style: HairStyle): HeadShape {
     const bow = 0.0012 * (1 - ease(0, 0.007, x))
     d = smoothMin(
       d,
-      capsule(x, y + bow, z, 0.003, -0.0684, 0.0972, 0.0245, -0.0718, 0.0893, 0.005 + lipFull, 0.0018),
+      capsule(x, y + bow, z, 0.003, -0.0684, 0.0972, 0.0255, -0.0716, 0.0888, 0.0045 + lipFull, 0.0018),
       0.0042,
     )
-    d = smoothMin(d, capsule(x, y, z, 0, -0.0787, 0.0953, 0.0205, -0.0745, 0.0888, 0.0062 + lipFull, 0.0022), 0.0042)
+    d = smoothMin(d, capsule(x, y, z, 0, -0.0787, 0.0953, 0.0215, -0.0742, 0.0882, 0.0056 + lipFull, 0.0022), 0.0042)
     d = smoothMax(d, -capsule(x, y, z, 0, -0.0731, 0.1042, 0.026, -0.0716, 0.0935, 0.0011, 0.001), 0.003)
     d = smoothMax(d, -capsule(x, y, z, 0, -0.0895, 0.0985, 0.012, -0.088, 0.0955, 0.0034, 0.0024), 0.008)
     // Lids: a shell on the eye with an almond opening.
@@ -114,10 +114,10 @@ export function makeHead(seed: number, style: HairStyle): HeadShape {
   const paint = (sx: number, y: number, z: number) => {
     const x = Math.abs(sx) / wide
     const front = ease(0.055, 0.075, z)
-    const across = clamp(x / 0.0255, 0, 1)
+    const across = clamp(x / 0.0268, 0, 1)
     const mouth = -0.0731 + 0.0015 * across * across
-    const high = 0.0064 * (1 - across * across) - 0.0014 * (1 - ease(0, 0.006, x)) + lipFull
-    const low = 0.0088 * (1 - across * across * 1.1) + lipFull
+    const high = 0.0058 * (1 - across * across) - 0.0014 * (1 - ease(0, 0.006, x)) + lipFull
+    const low = 0.0078 * (1 - across * across * 1.1) + lipFull
     const lips = across < 1 ? ease(0.0012, -0.0006, Math.max(y - mouth - high, mouth - low - y)) * front : 0
     // Brow hair: an arch that thins outwards.
     const t = clamp((x - 0.0105) / 0.041, 0, 1)
@@ -152,8 +152,13 @@ function makeHair(seed: number, style: HairStyle, wide: number): HeadShape['hair
     return smoothMin(front, cheeks, 0.015)
   }
   const nape = (y: number, low: number) => low - y
-  const strands = (x: number, y: number, z: number, size: number) =>
-    noise(x * size, y * size * 0.16, z * size) * 0.6 + noise(x * size * 2.3, y * size * 0.3, z * size * 2.3) * 0.4
+  /** Strands fall from the parting: beside it they keep their depth, behind they keep their side. */
+  const strands = (x: number, y: number, z: number, size: number) => {
+    const back = ease(-0.02, -0.08, z)
+    const u = (z * (1 - back) + x * back) * size
+    const v = (y * 0.1 + Math.abs(x) * 0.05) * size
+    return noise(u, v, back * 3 + seed) * 0.6 + noise(u * 2.3, v * 1.6, back * 3 + seed + 9) * 0.4
+  }
 
   switch (style) {
     case 'cropped':
@@ -207,7 +212,7 @@ function makeHair(seed: number, style: HairStyle, wide: number): HeadShape['hair
           0.012,
         )
         const open = ellipsoid(x, y + 0.09, z - 0.082, 0.0635 + hang * 0.04, 0.165, 0.075)
-        const full = smoothMin(cap, curtain, 0.028) - 0.0026 * strands(sx, y, z, 120) - 0.003 * strands(sx, y, z, 38)
+        const full = smoothMin(cap, curtain, 0.007) - 0.0016 * strands(sx, y, z, 210) - 0.0028 * strands(sx, y, z, 60)
         return smoothMax(smoothMax(full, -face(x, y, z, 0.064), 0.006), -open, 0.008)
       }
     }
@@ -223,7 +228,8 @@ function makeHair(seed: number, style: HairStyle, wide: number): HeadShape['hair
   }
 }
 
-/** How hair shades from strand to strand, −1 … 1. */
+/** How hair shades from strand to strand, −1 … 1; strands run as those of the shape do. */
 export function strandShade(x: number, y: number, z: number): number {
-  return layeredNoise(x * 260, y * 34, z * 260, 3)
+  const back = ease(-0.02, -0.08, z)
+  return layeredNoise((z * (1 - back) + x * back) * 420, y * 26 + Math.abs(x) * 12, back * 3, 3)
 }

@@ -42,7 +42,7 @@ export function eyeSpot(
   qz /= ql
   const turn = Math.acos(clamp((qx * yaw + qy * pitch + qz) / gl, -1, 1))
   const spokes = noise(Math.atan2(qy, qx) * 9, figure.seed, 3) * 0.25
-  const iris = IRIS[Math.floor(hash3(figure.seed, 31, 1) * (figure.skin[1] < 0.16 ? 2 : 4)) % IRIS.length] ?? [
+  const iris = IRIS[Math.floor(hash3(figure.seed, 31, 1) * (figure.skin[1] < 0.26 ? 2 : 4)) % IRIS.length] ?? [
     0.1, 0.07, 0.04,
   ]
   const pupil = 0.19

@@ -58,7 +58,7 @@ function figureOf(place: SitterPlace, wearing: Wearing): Figure {
     hairColour: reflectedRgb(look.hairColour),
     cut: look.cut,
     garment: reflectedRgb(look.garmentColour ?? wearing.garmentColour(place) ?? PLAIN_GARMENT),
-    seed: seedOf(place.sitterId ?? place.id),
+    seed: look.face ?? seedOf(place.sitterId ?? place.id),
   }
 }
 

@@ -49,10 +49,10 @@ const SHORT: Readonly<Record<string, string>> = {
   fullPops: 'full pops',
   fullRecycleS: 's to recycle',
   massKg: 'kg',
-  lossStops: 'stops it takes',
-  beamDeg: '° of beam',
+  lossStops: 'stops',
+  beamDeg: '° beam',
   miredShift: 'mired',
-  transmission: 'of the light let through',
+  transmission: 'let through',
   maxHeightM: 'm high',
   minHeightM: 'm at its lowest',
   maxLoadKg: 'kg carried',
@@ -67,14 +67,14 @@ function isStated(value: unknown): value is Stated {
 
 const tidy = (value: number) => String(Number(value.toFixed(2))).replace('-', '−')
 
-/** The first number that differs, "GN 58 → 52 measured"; else that something else is newer. */
+/** The first number that differs, "GN 58 → 52 measured", "90 cm octa: 2 → 1.7 stops measured"; else that there is more. */
 function difference(own: Copied, newest: Copied): string {
   for (const [key, now] of Object.entries(newest.numbers)) {
     const before = own.numbers[key]
     const short = SHORT[key]
     if (!isStated(now) || !isStated(before) || short === undefined || now.value === before.value) continue
     const change = `${tidy(before.value)} → ${tidy(now.value)}`
-    return `${short === 'GN' ? `GN ${change}` : `${change} ${short}`} ${now.from}`
+    return short === 'GN' ? `GN ${change} ${now.from}` : `${newest.name}: ${change} ${short} ${now.from}`
   }
   return `${newest.name}: newer words or sources`
 }

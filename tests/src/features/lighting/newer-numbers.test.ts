@@ -58,9 +58,9 @@ describe('newerNumbersOf', () => {
     })
     const [first] = newerNumbersOf(setup, { units: [], modifiers: [modifier], gels: [gel], supports: [support] })
     expect(first?.words).toEqual([
-      '0 → 1.7 stops it takes measured',
-      '167 → −160 mired measured',
-      '3 → 2 kg carried measured',
+      '90 cm octa: 0 → 1.7 stops measured',
+      'Full warm +167: 167 → −160 mired measured',
+      '2.4 m stand: 3 → 2 kg carried measured',
     ])
     expect(first?.patch).toEqual({ modifier, gels: [gel], support })
   })

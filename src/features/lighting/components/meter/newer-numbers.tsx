@@ -34,7 +34,7 @@ export function NewerNumbers({ whole, kit, writer }: NewerNumbersProps) {
   return (
     <Caution
       title={`${count(newer.length, 'light has', 'lights have')} newer numbers in the kit room`}
-      className="flex flex-col items-start gap-2"
+      className="mb-3 flex flex-col items-start gap-2"
     >
       <ul className="text-xs max-md:text-[0.8125rem]">
         {newer.map(({ light, words }) => (

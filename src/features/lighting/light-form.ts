@@ -1,8 +1,8 @@
 import { boomBalanceOf } from '#shared/domain/lighting/boom.ts'
-import { faceOf } from '#shared/domain/lighting/light-output.ts'
+import { beamOf, faceOf } from '#shared/domain/lighting/light-output.ts'
 import { facePoint } from '#shared/domain/lighting/geometry.ts'
 import { FRAME_LONG_MM, FRAME_SHORT_MM, angleOfViewDeg } from '#shared/domain/lighting/lens.ts'
-import { type Light, type Point, isLamp } from '#shared/domain/lighting/schema.ts'
+import type { Light, Point } from '#shared/domain/lighting/schema.ts'
 import type { WholeSetup } from '#shared/domain/plan/read-plan.ts'
 
 /** A light in space, metres: its emitting face at its true size, and signs of the housing behind. */
@@ -120,11 +120,10 @@ export function lightForm(light: Light, leastM: number): LightForm {
  * covers; null when nobody has said it.
  */
 export function beamAngleDeg(light: Light): number | null {
-  const { numbers } = light.unit
-  if (light.modifier) return light.modifier.numbers.beamDeg?.value ?? null
-  if (isLamp(numbers)) return numbers.beamDeg?.value ?? null
-  if (light.zoomMm === null) return null
-  return (angleOfViewDeg(FRAME_LONG_MM, light.zoomMm) + angleOfViewDeg(FRAME_SHORT_MM, light.zoomMm)) / 2
+  const { beamDeg, zoomMm, bare } = beamOf(light)
+  if (beamDeg !== null) return beamDeg > 0 ? beamDeg : null
+  if (!bare || zoomMm === null) return null
+  return (angleOfViewDeg(FRAME_LONG_MM, zoomMm) + angleOfViewDeg(FRAME_SHORT_MM, zoomMm)) / 2
 }
 
 /** Wider beams are drawn as wide as this, degrees. */

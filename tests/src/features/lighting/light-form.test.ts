@@ -58,7 +58,11 @@ describe('beamAngleDeg', () => {
     expect(beamAngleDeg(light(1, { ...at, modifier: GRID }))).toBe(10)
     expect(beamAngleDeg(light(1, { ...at, modifier: OCTA }))).toBeNull()
     // 50 mm sees 39.598° × 26.991°: published lens table.
-    expect(beamAngleDeg(light(1, { ...at, zoomMm: 50 }))).toBeCloseTo((39.598 + 26.991) / 2, 2)
+    expect(
+      beamAngleDeg(
+        light(1, { ...at, unit: unit(undefined, { zoom: [{ focalMm: 50, guideNumberM: 36 }] }), zoomMm: 50 }),
+      ),
+    ).toBeCloseTo((39.598 + 26.991) / 2, 2)
     const lamp = {
       ...unit(),
       numbers: {

@@ -209,8 +209,8 @@ export function makeBody(seed: number, cut: Cut, pose: Pose, eyeHeightM: number)
         const t = clamp((-0.72 - y) / 0.45, 0, 1)
         const angle = Math.atan2(x, z)
         const wave = 0.012 * t * Math.sin(angle * 7 + phase + 2 * noise(x * 4, y * 3, z * 4))
-        const skirt = (Math.hypot(x / (0.198 + 0.06 * t), z / (0.145 + 0.06 * t)) - 1) * 0.15 - wave
-        base = smoothMin(base, Math.max(skirt, y + 0.7), 0.05)
+        const skirt = (Math.hypot(x / (0.186 + 0.075 * t), z / (0.138 + 0.07 * t)) - 1) * 0.15 - wave
+        base = smoothMin(base, smoothMax(skirt, y + 0.66, 0.1), 0.03)
         base = smoothMax(base - folds(x, y, z, 0.007), low - y, 0.012)
         // Open at the breast, with lapels that turn back along the opening.
         const edge = 0.008 + clamp(y + 0.5, 0, 0.4) * 0.3
@@ -232,16 +232,9 @@ export function makeBody(seed: number, cut: Cut, pose: Pose, eyeHeightM: number)
           ring(x, cy + 0.022, z + 0.022, 0.062, 0.013),
           0.006,
         )
-        const fall = ellipsoid(
-          x + 0.004 * noise(x * 60, y * 40, 2),
-          y + 0.265,
-          z - 0.088,
-          0.03 + 0.1 * clamp(-y - 0.23, 0, 0.1),
-          0.07,
-          0.016,
-        )
-        const pleat = 0.003 * Math.sin(x * 420 + 6 * noise(x * 20, y * 20, phase))
-        return smoothMin(smoothMin(shirt, wound, 0.015), fall - pleat, 0.01)
+        const knot = ellipsoid(x, cy + 0.012, z - 0.05, 0.024, 0.017, 0.014)
+        const front = z > 0 ? Math.max(shirt - 0.0022, Math.abs(x) - 0.016) : NONE
+        return smoothMin(smoothMin(Math.min(shirt, front), wound, 0.012), knot, 0.005)
       }
       metal = (x, y, z) => {
         let d = NONE

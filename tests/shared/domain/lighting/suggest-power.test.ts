@@ -4,7 +4,7 @@ import { readSetup } from '#shared/domain/lighting/readings.ts'
 import { stopsBetween } from '#shared/domain/lighting/stops.ts'
 import { type PowerWish, suggestPower } from '#shared/domain/lighting/suggest-power.ts'
 import type { WholeSetup } from '#shared/domain/plan/read-plan.ts'
-import { anySetup } from '#tests/support/any-setup.ts'
+import { drawnSetup } from '#tests/support/drawn-setup.ts'
 import { lampUnit } from '#tests/support/lamp-sample.ts'
 import { GRID, OCTA, id, light, unit, whole } from '#tests/support/lighting-sample.ts'
 
@@ -104,7 +104,7 @@ describe('suggestPower', () => {
       fc.record({ againstMainStops: fc.double({ min: -5, max: 2, noNaN: true }) }),
     )
     fc.assert(
-      fc.property(anySetup(), fc.array(wish, { minLength: 5, maxLength: 5 }), (drawn, kinds) => {
+      fc.property(drawnSetup(), fc.array(wish, { minLength: 5, maxLength: 5 }), (drawn, kinds) => {
         const setup = { ...drawn, lights: drawn.lights.map((entry) => ({ ...entry, isOn: true })) }
         const wishes = setup.lights.map((entry, index): PowerWish => {
           const kind = kinds[index] ?? { fNumber: 8 }

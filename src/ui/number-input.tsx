@@ -28,7 +28,6 @@ export function parseTypedNumber(text: string): number | undefined {
   return Number(plain)
 }
 
-
 /** A number that is taken over on Enter, on leaving, and by the arrow keys. Escape brings the old one back. */
 export function NumberInput(props: NumberInputProps) {
   const {
@@ -68,13 +67,7 @@ export function NumberInput(props: NumberInputProps) {
       return
     }
     const kept = Math.min(max, Math.max(min, typed))
-    setRemark(
-      kept === typed
-        ? ''
-        : kept === max
-          ? `${write(max)} is the most.`
-          : `${write(min)} is the least.`,
-    )
+    setRemark(kept === typed ? '' : kept === max ? `${write(max)} is the most.` : `${write(min)} is the least.`)
     give(kept)
   }
   function nudge(by: number) {

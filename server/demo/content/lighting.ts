@@ -1,8 +1,17 @@
 import * as Y from 'yjs'
 import type { KitItem } from '#shared/api/kit.ts'
-import type { Light, LightGel, LightModifier, LightSupport, LightUnit } from '#shared/domain/lighting/schema.ts'
+import type {
+  Appearance,
+  Light,
+  LightGel,
+  LightModifier,
+  LightSupport,
+  LightUnit,
+  Walled,
+} from '#shared/domain/lighting/schema.ts'
 import { putItems } from '#shared/realtime/collection.ts'
 import { lights, props, setups, sitterPlaces } from '#shared/realtime/documents.ts'
+import { STUDY_LOOKS, type StudyPerson } from '../studies/study.ts'
 import type { NamedIds } from './named-ids.ts'
 
 type Point = [number, number, number]
@@ -19,6 +28,12 @@ type LightRow = {
   zoomMm?: number
   note?: string
 }
+
+const CLOCK_WALL = 'Clock wall, ochre lime plaster'
+const DRUM_WALL = 'Dome drum, grey distemper'
+/** The rooms about the mark, as the brief measures them, metres. */
+const GALLERY: Walled = { leftM: 2.6, rightM: 1.9, frontM: 6.4, ceilingM: 3.2 }
+const DOME: Walled = { leftM: 3.6, rightM: 3.9, frontM: 4.7, ceilingM: 6 }
 
 /** Exact f-numbers, N = 2^(Av/2): f/5.6 and f/8 are labels of Av 5 and 6. */
 const F5_6 = 2 ** 2.5
@@ -48,8 +63,9 @@ export function demoLighting(id: NamedIds, kit: readonly KitItem[], random: () =
           name: label,
           rank,
           note,
-          background,
-          camera: { ...camera, iso: 100, shutterS: 1 / 160, whiteBalanceK: 5500 },
+          background: { ...background, surface: 'plaster' },
+          walled: background.what === CLOCK_WALL ? GALLERY : DOME,
+          camera: { ...camera, iso: 100, shutterS: 1 / 160, whiteBalanceK: 5500, syncS: 1 / 200 },
         },
       ],
       random,
@@ -82,7 +98,7 @@ export function demoLighting(id: NamedIds, kit: readonly KitItem[], random: () =
     'Octa left, soft fill',
     'a0',
     { at: [0, 1.35, 3.4], focalMm: 85, fNumber: F6_3 },
-    { zM: -2.6, widthM: 6, heightM: 2.9, colour: '#8a6f56', what: 'Clock wall, ochre lime plaster' },
+    { zM: -2.6, widthM: 6, heightM: 2.9, colour: '#8a6f56', what: CLOCK_WALL },
     [
       {
         purpose: 'main',
@@ -123,7 +139,7 @@ export function demoLighting(id: NamedIds, kit: readonly KitItem[], random: () =
     'Octa close, brass edge',
     'a1',
     { at: [0.1, 1.3, 2.6], focalMm: 85, fNumber: F5_6 },
-    { zM: -2.6, widthM: 6, heightM: 2.9, colour: '#8a6f56', what: 'Clock wall, ochre lime plaster' },
+    { zM: -2.6, widthM: 6, heightM: 2.9, colour: '#8a6f56', what: CLOCK_WALL },
     [
       {
         purpose: 'main',
@@ -155,7 +171,7 @@ export function demoLighting(id: NamedIds, kit: readonly KitItem[], random: () =
     'Window side, cool wall',
     'a2',
     { at: [-0.1, 1.4, 3.1], focalMm: 85, fNumber: F5_6 },
-    { zM: -2.8, widthM: 7, heightM: 3.2, colour: '#6b7076', what: 'Dome drum, grey distemper' },
+    { zM: -2.8, widthM: 7, heightM: 3.2, colour: '#6b7076', what: DRUM_WALL },
     [
       {
         purpose: 'main',
@@ -198,7 +214,7 @@ export function demoLighting(id: NamedIds, kit: readonly KitItem[], random: () =
     'Broad and rim',
     'a3',
     { at: [0, 1.4, 4.6], focalMm: 50, fNumber: F8 },
-    { zM: -2.8, widthM: 7, heightM: 3.2, colour: '#6b7076', what: 'Dome drum, grey distemper' },
+    { zM: -2.8, widthM: 7, heightM: 3.2, colour: '#6b7076', what: DRUM_WALL },
     [
       {
         purpose: 'main',
@@ -234,35 +250,43 @@ export function demoLighting(id: NamedIds, kit: readonly KitItem[], random: () =
     'Room for three and for a raised cup.',
   )
 
+  const place = (
+    name: string,
+    setupName: string,
+    who: StudyPerson['who'],
+    at: [number, number],
+    eyeHeightM: number,
+    cut: Appearance['cut'],
+    how: { pose?: 'seated'; turnDeg: number; headTurnDeg?: number; headNodDeg?: number },
+  ) => ({
+    id: id(name),
+    setupId: id(setupName),
+    sitterId: id(who),
+    at,
+    eyeHeightM,
+    appearance: { ...STUDY_LOOKS[who], cut },
+    ...how,
+  })
   putItems(
     doc,
     sitterPlaces,
     [
-      { id: id('place-octa'), setupId: id('setup-octa'), sitterId: id('clockmaker'), at: [0, 0], eyeHeightM: 1.28 },
-      {
-        id: id('place-octa-2'),
-        setupId: id('setup-octa'),
-        sitterId: id('astronomer'),
-        at: [0.55, -0.2],
-        eyeHeightM: 1.6,
-      },
-      { id: id('place-close'), setupId: id('setup-close'), sitterId: id('clockmaker'), at: [0, 0], eyeHeightM: 1.28 },
-      { id: id('place-window'), setupId: id('setup-window'), sitterId: id('astronomer'), at: [0, 0], eyeHeightM: 1.45 },
-      { id: id('place-broad-1'), setupId: id('setup-broad'), sitterId: id('astronomer'), at: [0, 0], eyeHeightM: 1.6 },
-      {
-        id: id('place-broad-2'),
-        setupId: id('setup-broad'),
-        sitterId: id('clockmaker'),
-        at: [-0.6, 0.1],
-        eyeHeightM: 1.62,
-      },
-      {
-        id: id('place-broad-3'),
-        setupId: id('setup-broad'),
-        sitterId: id('botanist'),
-        at: [0.6, 0.1],
-        eyeHeightM: 1.56,
-      },
+      place('place-octa', 'setup-octa', 'clockmaker', [0, 0], 1.28, 'coat', {
+        pose: 'seated',
+        turnDeg: -14,
+        headTurnDeg: 8,
+      }),
+      place('place-octa-2', 'setup-octa', 'astronomer', [0.55, -0.2], 1.6, 'coat', { turnDeg: -22, headTurnDeg: 8 }),
+      place('place-close', 'setup-close', 'clockmaker', [0, 0], 1.28, 'coat', {
+        pose: 'seated',
+        turnDeg: 18,
+        headTurnDeg: -6,
+        headNodDeg: 8,
+      }),
+      place('place-window', 'setup-window', 'astronomer', [0, 0], 1.55, 'coat', { turnDeg: 24, headTurnDeg: -6 }),
+      place('place-broad-1', 'setup-broad', 'astronomer', [0, 0], 1.6, 'cape', { turnDeg: 4 }),
+      place('place-broad-2', 'setup-broad', 'clockmaker', [-0.6, 0.1], 1.62, 'coat', { turnDeg: 18, headTurnDeg: -8 }),
+      place('place-broad-3', 'setup-broad', 'botanist', [0.6, 0.1], 1.56, 'dress', { turnDeg: -18, headTurnDeg: 10 }),
     ],
     random,
   )
@@ -286,10 +310,11 @@ export function demoLighting(id: NamedIds, kit: readonly KitItem[], random: () =
         setupId: id('setup-window'),
         kind: 'prop',
         name: 'Brass armillary',
-        at: [0.7, 1.1, -0.2],
+        shape: 'globe',
+        at: [0.62, 0.85, -0.2],
         turnDeg: 0,
         widthM: 0.5,
-        heightM: 0.7,
+        heightM: 1.7,
         colour: '#8e6a22',
       },
       {
@@ -297,7 +322,8 @@ export function demoLighting(id: NamedIds, kit: readonly KitItem[], random: () =
         setupId: id('setup-broad'),
         kind: 'prop',
         name: 'Tea table',
-        at: [0, 0.7, 0.6],
+        shape: 'table',
+        at: [0, 0.35, 0.6],
         turnDeg: 0,
         widthM: 1.2,
         heightM: 0.7,

@@ -1,4 +1,4 @@
-import { findMetered } from '#shared/domain/kit/meter-reading.ts'
+import { discRadiusM, findMetered } from '#shared/domain/kit/meter-reading.ts'
 import { type Beam, type BeamKind, type Profile, profileOf } from './beam.ts'
 import {
   METER_CONSTANT_C,
@@ -93,7 +93,7 @@ export function faceOf(light: Light): { widthM: number; heightM: number } {
 /** Radius of the disc with the same area as the emitting face, metres. */
 export function faceRadiusM(light: Light): number {
   const { widthM, heightM } = faceOf(light)
-  return Math.sqrt((widthM * heightM) / Math.PI)
+  return discRadiusM(widthM, heightM)
 }
 
 /** Nearer than this the distance counts as this, metres. */
@@ -169,7 +169,8 @@ function strengthAt(emission: Emission, x: number, y: number, z: number, upright
   // discFactor over the square of the distance.
   const near = counted * counted + emission.radiusM * emission.radiusM
   const strength = (emission.axisLxS * shareOff(emission, offAxisDeg)) / near
-  return upright ? (strength * -dz) / distanceM : strength
+  if (!upright) return strength
+  return distanceM === 0 ? 0 : (strength * -dz) / distanceM
 }
 
 /**

@@ -43,8 +43,8 @@ export function roundToThird(fNumber: number): number {
   return fNumberOfThirds(Math.round(6 * Math.log2(fNumber)))
 }
 
-/** Slack for least powers that are printed rounded: 1/102 counts as 1/101.6, thirds. */
-const PRINTED_THIRDS = 0.03
+/** Slack for least powers that are printed rounded, in thirds of a stop: 1/10 stands for 1/10.08. */
+const PRINTED_THIRDS = 0.04
 
 /** Powers a head can be set to, full first, in thirds of a stop down to 1/`minPowerDenominator` and never below. */
 export function powersOf(minPowerDenominator: number): number[] {

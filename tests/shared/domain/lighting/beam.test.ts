@@ -3,6 +3,7 @@ import {
   cosineExponent,
   cosineProfile,
   gaussianProfile,
+  profileOf,
   relativeIntensity,
   zoomHeadProfile,
 } from '#shared/domain/lighting/beam.ts'
@@ -53,5 +54,21 @@ describe('relativeIntensity', () => {
     expect(share(120, null, false).kind).toBe('cosine')
     expect(share(null, 50, true).kind).toBe('zoom head')
     expect(share(null, null, false)).toEqual({ share: 1, kind: 'unknown' })
+  })
+})
+
+describe('profileOf', () => {
+  it('is what relativeIntensity says at every angle', () => {
+    for (const head of [
+      { beamDeg: 40, zoomMm: null, bare: false },
+      { beamDeg: 120, zoomMm: null, bare: false },
+      { beamDeg: null, zoomMm: 50, bare: true },
+      { beamDeg: null, zoomMm: null, bare: true },
+    ])
+      for (const deg of [0, 5, 25, 60, 89, 91])
+        expect({ share: profileOf(head).shareAt(deg), kind: profileOf(head).kind }).toEqual(
+          relativeIntensity(deg, head),
+        )
+    expect(profileOf({ beamDeg: null, zoomMm: null, bare: true }).shareAt(91)).toBe(0)
   })
 })

@@ -1,5 +1,6 @@
 import { describe, expect, it } from 'vitest'
 import { cautionsOf, redCautions } from '#shared/domain/lighting/cautions.ts'
+import { lampUnit } from '#tests/support/lamp-sample.ts'
 import { BOOM, FULL_WARM, OCTA, STAND, light, modifier, support, unit, whole } from '#tests/support/lighting-sample.ts'
 
 const FACE: [number, number, number] = [0, 1.5, 0]
@@ -100,5 +101,64 @@ describe('redCautions', () => {
   it('is one sentence each for what must be put right', () => {
     const rim = light(2, { purpose: 'rim', at: [0.5, 1.6, -1], aim: FACE, support: null })
     expect(redCautions(whole({ lights: [main(), rim], camera: right(6) }))).toEqual(['The rim is in the picture'])
+  })
+})
+
+describe('cautions of what the setup knows', () => {
+  const stated = (value: number) => ({ value, from: 'assumed' as const, source: 'sample' })
+  const words = (setup: ReturnType<typeof whole>, key: string) =>
+    cautionsOf(setup, { frames: 40 }).find((caution) => caution.key.endsWith(key))
+
+  it('balances a boom with its own arm and names the bags', () => {
+    const own = { reachM: stated(2), counterReachM: stated(1), armMassKg: stated(0) }
+    const support = { ...BOOM, numbers: { ...BOOM.numbers, ...own } }
+    const boom = words(whole({ lights: [main({ support, modifier: OCTA })], camera: right(6) }), ':boom')
+    // 1.5 kg · 2 m / 1 m.
+    expect(boom?.words).toContain('1.5 kg out at 2 m wants about 3.0 kg at 1 m (a 5 kg bag, slid until it balances)')
+    expect(boom?.how).toContain('the boom’s own numbers')
+  })
+
+  it('takes the camera’s own sync speed', () => {
+    const at = (shutterS: number, syncS: number | null) =>
+      words(whole({ lights: [main()], camera: { fNumber: 6, shutterS, syncS } }), 'sync')
+    expect(at(1 / 250, null)?.words).toContain('up to 1/200 (assumed)')
+    expect(at(1 / 250, 1 / 250)).toBeUndefined()
+    expect(at(1 / 200, 1 / 160)?.words).toContain('up to 1/160.')
+  })
+
+  it('minds the mains and never permits', () => {
+    const lamps = (watts: number, circuit: { volts: number; amps: number } | null) => {
+      const setup = whole({ lights: [main({ unit: lampUnit(4000, { watts: stated(watts) }) })], camera: right(1.4) })
+      setup.setup.circuit = circuit
+      return words(setup, 'mains')
+    }
+    // NEC 210.20(A): 20 A at 120 V, 1920 W for three hours or more.
+    expect(lamps(1900, { volts: 120, amps: 20 })).toMatchObject({
+      tone: 'mind',
+      title: 'Keep the circuit for the lights',
+    })
+    expect(lamps(1930, { volts: 120, amps: 20 })).toMatchObject({ tone: 'mind', title: 'Close to the circuit’s limit' })
+    expect(lamps(2500, { volts: 120, amps: 20 })).toMatchObject({ tone: 'red', title: 'Too much for one circuit' })
+    expect(lamps(1900, null)?.title).toBe('Ask for the circuit')
+    expect(lamps(1900, { volts: 120, amps: 20 })?.how).toContain('1920 W (NEC 210.20(A)')
+    expect(lamps(100, { volts: 230, amps: 16 })?.words).toContain('no permit')
+  })
+
+  it('asks for fresh batteries for each light that wants them', () => {
+    const weak = unit(undefined, { fullPops: stated(2) })
+    const both = [main({ unit: weak }), light(2, { purpose: 'fill', at: [1.4, 1.7, 1.4], aim: FACE, unit: weak })]
+    const asked = cautionsOf(whole({ lights: both, camera: right(6) }), { frames: 40 }).filter((caution) =>
+      caution.key.endsWith(':power'),
+    )
+    expect(asked.map((caution) => caution.lightId)).toEqual([both[1]?.id, both[0]?.id])
+    expect(asked[0]?.words).toContain('Bring 5 sets or charges.')
+  })
+
+  it('asks nothing of power, heat and shutter of a light that is off', () => {
+    const off = main({ isOn: false, power: 1, gels: [FULL_WARM] })
+    expect(titles(whole({ lights: [off], camera: { fNumber: 8, shutterS: 1 / 500 } }), { frames: 40 })).toEqual([
+      'Out of frame',
+      'Eyes stay open',
+    ])
   })
 })

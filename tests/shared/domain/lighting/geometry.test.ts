@@ -5,6 +5,7 @@ import {
   dot,
   facePoint,
   floorDistance,
+  lengthOf,
   mainPlace,
   minus,
   panelNormal,
@@ -60,5 +61,12 @@ describe('panelNormal', () => {
     const [x, , z] = panelNormal(0)
     expect([x, z]).toEqual([0, 1])
     expect(panelNormal(90)[0]).toBeCloseTo(1, 9)
+  })
+})
+
+describe('lengthOf', () => {
+  it('is Pythagoras in three dimensions', () => {
+    expect(lengthOf([2, 3, 6])).toBe(7)
+    expect(lengthOf([0, 0, 0])).toBe(0)
   })
 })

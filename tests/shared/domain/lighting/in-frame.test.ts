@@ -1,6 +1,6 @@
 import { describe, expect, it } from 'vitest'
 import { frameCautions, sightsOf } from '#shared/domain/lighting/in-frame.ts'
-import { GRID, light, whole } from '#tests/support/lighting-sample.ts'
+import { BOOM, GRID, OCTA, STAND, light, whole } from '#tests/support/lighting-sample.ts'
 
 const rim = (x: number) => light(2, { purpose: 'rim', at: [x, 1.9, -1], aim: [0, 1.5, 0], modifier: GRID })
 
@@ -35,5 +35,42 @@ describe('frameCautions', () => {
   })
   it('says nothing of an empty setup', () => {
     expect(frameCautions(whole({}), ['upright'])).toEqual([])
+  })
+})
+
+describe('a boom', () => {
+  const boom = (at: [number, number, number], more: object = {}) =>
+    light(1, {
+      purpose: 'main',
+      at,
+      aim: [0, 1.5, 0],
+      modifier: OCTA,
+      support: { ...BOOM, numbers: { ...BOOM.numbers, ...more } },
+    })
+  it('keeps its arm and stand out on the side that clears best', () => {
+    // The head is high over the picture; a plain stand under it would be in the middle.
+    const over: [number, number, number] = [0, 3.2, 0.4]
+    expect(sightsOf(whole({ lights: [boom(over)] }), ['upright'])[0]?.clearance.marginM).toBeGreaterThan(0)
+    const onStand = light(1, { purpose: 'main', at: over, aim: [0, 1.5, 0], modifier: OCTA, support: STAND })
+    expect(sightsOf(whole({ lights: [onStand] }), ['upright'])[0]?.clearance.marginM).toBeLessThan(0)
+  })
+  it('is in the picture when its arm is too short to keep the stand out', () => {
+    const short = {
+      reachM: { value: 0.3, from: 'assumed', source: '' },
+      counterReachM: { value: 0.3, from: 'assumed', source: '' },
+    }
+    const [sight] = sightsOf(whole({ lights: [boom([0, 3.2, 0.4], short)] }), ['across'])
+    expect(sight?.name).toBe('main’s boom')
+    expect(sight?.clearance.marginM).toBeLessThan(0)
+  })
+})
+
+describe('a camera with an aim', () => {
+  it('decides what is in frame', () => {
+    const lights = [rim(1.3)]
+    const margin = (aim: [number, number, number] | null) =>
+      sightsOf(whole({ lights, camera: { aim } }), ['across'])[0]?.clearance.marginM ?? NaN
+    expect(margin(null)).toBeGreaterThan(0)
+    expect(margin([0.8, 1.5, 0])).toBeLessThan(0)
   })
 })

@@ -1,5 +1,7 @@
 import { describe, expect, it } from 'vitest'
-import { counterweightKg, fullPopsFor, recycleS } from '#shared/domain/lighting/power.ts'
+import { counterweightKg, fullPopsFor, recycleS, suppliesOf } from '#shared/domain/lighting/power.ts'
+import { lampUnit } from '#tests/support/lamp-sample.ts'
+import { id, light } from '#tests/support/lighting-sample.ts'
 
 describe('counterweightKg', () => {
   it.each([
@@ -23,5 +25,20 @@ describe('fullPopsFor', () => {
 describe('recycleS', () => {
   it('is the share of the full recycle', () => {
     expect(recycleS(3.6, 0.25)).toBeCloseTo(0.9, 9)
+  })
+})
+
+describe('suppliesOf', () => {
+  const head = (n: number, more: object = {}) => light(n, { purpose: 'main', at: [0, 2, 1], aim: [0, 1, 0], ...more })
+  it('counts pops and charges of each flash that is on', () => {
+    const supplies = suppliesOf([head(1, { power: 1 }), head(2), head(3, { isOn: false })], 300)
+    expect(supplies.map(({ lightId, pops, charges, recycleS: seconds }) => [lightId, pops, charges, seconds])).toEqual([
+      [id(1), 300, 2, 3.5],
+      [id(2), 75, 0.5, 0.875],
+    ])
+  })
+  it('says only how fast without a shot, and leaves lamps out', () => {
+    expect(suppliesOf([head(1)], null)[0]).toMatchObject({ pops: null, charges: null, recycleS: 0.875 })
+    expect(suppliesOf([head(1, { unit: lampUnit(4000) })], 300)).toEqual([])
   })
 })

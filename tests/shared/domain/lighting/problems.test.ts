@@ -1,8 +1,10 @@
+import fc from 'fast-check'
 import { describe, expect, it } from 'vitest'
 import { cautionsOf } from '#shared/domain/lighting/cautions.ts'
 import { problemsOf } from '#shared/domain/lighting/problems.ts'
 import { readSetup } from '#shared/domain/lighting/readings.ts'
 import type { Light } from '#shared/domain/lighting/schema.ts'
+import { anySetup } from '#tests/support/any-setup.ts'
 import { lampUnit } from '#tests/support/lamp-sample.ts'
 import { gel, light, modifier, unit, whole } from '#tests/support/lighting-sample.ts'
 
@@ -113,5 +115,18 @@ describe('problemsOf', () => {
     const past = { ...whole({ lights: [main, rim({ at: [3, 2, -3] })], background: { widthM: 1 } }) }
     expect(problemsOf(past)).toEqual([])
     expect(readSetup(past).lights[1]?.fNumber).toBeGreaterThan(0)
+  })
+  it('leaves no reading that is not a number, whatever the setup', () => {
+    fc.assert(
+      fc.property(anySetup, (setup) => {
+        expect(everyNumber(readSetup(setup, { frames: 40 })).filter(Number.isNaN)).toEqual([])
+        expect(
+          cautionsOf(setup, { frames: 40 })
+            .flatMap(({ words, how }) => [words, how])
+            .join(' '),
+        ).not.toMatch(/NaN|Infinity/)
+      }),
+      { numRuns: 300 },
+    )
   })
 })

@@ -1,5 +1,13 @@
+import fc from 'fast-check'
 import { describe, expect, it } from 'vitest'
+import { distanceBetween } from '#shared/domain/lighting/geometry.ts'
+import { arrivalAt } from '#shared/domain/lighting/light-output.ts'
 import { readSetup } from '#shared/domain/lighting/readings.ts'
+import type { Stated } from '#shared/domain/kit/schema.ts'
+import { type Light, type Point, isLamp } from '#shared/domain/lighting/schema.ts'
+import { METRES_PER_FOOT } from '#shared/units/length.ts'
+import { drawnSetup } from '#tests/support/drawn-setup.ts'
+import { lampUnit } from '#tests/support/lamp-sample.ts'
 import { GRID, HALF_BLUE, light, whole } from '#tests/support/lighting-sample.ts'
 
 const FACE: [number, number, number] = [0, 1.5, 0]
@@ -85,3 +93,87 @@ describe('readSetup', () => {
     expect(reading.ratio?.value).toBeGreaterThan(2)
   })
 })
+
+describe('readSetup of a whole setup', () => {
+  const main = at2m(1, 'main', 1)
+  it('counts lamps by the shutter, and lights that are off not at all', () => {
+    const lamp = light(2, { purpose: 'fill', at: [0, 1.5, 2], aim: FACE, unit: lampUnit(4000), power: 1 })
+    const at = (shutterS: number) => readSetup(whole({ lights: [main, lamp], camera: { shutterS } }))
+    expect((at(1 / 80).lights[1]?.fNumber ?? 0) / (at(1 / 160).lights[1]?.fNumber ?? 1)).toBeCloseTo(Math.SQRT2, 9)
+    expect(at(1 / 80).lights[0]?.fNumber).toBe(at(1 / 160).lights[0]?.fNumber)
+    const off = readSetup(whole({ lights: [{ ...main, isOn: false }, lamp] }))
+    expect(off).toMatchObject({ mainFNumber: null, ratio: null })
+    expect(off.lights[0]).toMatchObject({ isOn: false, fNumber: 0, underMainStops: null })
+    expect(off.main?.lightId).toBe(main.id)
+  })
+
+  it('sets ambient against flash and its colour against the white balance', () => {
+    // Flash f/8, daylight exactly f/11.3: a stop over it.
+    const lux = (250 * 11.3137 ** 2 * 160) / 100
+    const setup = whole({ lights: [at2m(1, 'main', 0.16)], ambientLux: lux })
+    expect(readSetup(setup).ambient?.underFlashStops).toBeCloseTo(-1, 2)
+    expect(readSetup(setup).ambient).toMatchObject({ isKelvinAssumed: true, miredFromWhite: 0 })
+    setup.setup.ambientK = 3200
+    // 10⁶/3200 − 10⁶/5500.
+    expect(readSetup(setup).ambient?.miredFromWhite).toBeCloseTo(130.68, 2)
+    expect(readSetup(whole({ ambientLux: 100 })).ambient?.underFlashStops).toBeNull()
+    expect(readSetup(whole({})).ambient).toBeNull()
+  })
+
+  it('has the angle and the cosine of the main’s spill on the wall', () => {
+    const oblique = light(1, { purpose: 'main', at: [-2, 1.5, 0.5], aim: FACE, power: 1 })
+    const reading = readSetup(whole({ lights: [oblique], camera: { at: [0, 1.5, 3] } }))
+    // The wall point is straight behind the head, at (0, 1.5, −2): 2 m across and 2.5 m along.
+    expect(reading.wall.main?.cosine).toBeCloseTo(2.5 / Math.hypot(2, 2.5), 9)
+    const offAxis = (Math.atan2(2.5, 2) - Math.atan2(0.5, 2)) * (180 / Math.PI)
+    expect(reading.wall.main?.offAxisDeg).toBeCloseTo(offAxis, 9)
+    expect(reading.wall.main?.lightId).toBe(oblique.id)
+  })
+
+  it('carries framing, supplies, sync, booms, mains, glow and problems', () => {
+    const reading = readSetup(whole({ lights: [main] }), { orientations: ['across', 'square'], frames: 300 })
+    expect(reading.framing.map((framing) => framing.orientation)).toEqual(['across', 'square'])
+    expect(reading.supplies[0]).toMatchObject({ lightId: main.id, pops: 300, charges: 2 })
+    expect(reading.sync).toMatchObject({ isAssumed: true })
+    expect(reading.booms).toEqual([])
+    expect(reading.mains).toBeNull()
+    expect(reading.problems).toEqual([])
+    expect(reading.glow?.shares).toEqual([{ lightId: main.id, share: 1 }])
+    expect(reading.main?.aboveEyesM).toBe(0)
+    expect(readSetup(whole({}), { orientations: [] }).framing).toHaveLength(1)
+  })
+
+  it('is the same in feet: with all lengths and guide numbers by a factor, everything reads as before', () => {
+    // N = GN/d has no length left in it; illuminance at a metre goes with the square.
+    const scale = 1 / METRES_PER_FOOT
+    const long = ([x, y, z]: Point): Point => [x * scale, y * scale, z * scale]
+    const inFeet = (entry: Light): Light => {
+      const numbers = isLamp(entry.unit.numbers)
+        ? { ...entry.unit.numbers, luxAtMetre: times(entry.unit.numbers.luxAtMetre, scale ** 2) }
+        : { ...entry.unit.numbers, guideNumberM: times(entry.unit.numbers.guideNumberM, scale) }
+      const face = entry.modifier?.numbers
+      const modifier = entry.modifier && {
+        ...entry.modifier,
+        numbers: {
+          ...entry.modifier.numbers,
+          widthM: (face?.widthM ?? 0) * scale,
+          heightM: (face?.heightM ?? 0) * scale,
+        },
+      }
+      return { ...entry, at: long(entry.at), aim: long(entry.aim), unit: { ...entry.unit, numbers }, modifier }
+    }
+    fc.assert(
+      fc.property(drawnSetup(), ({ lights }) => {
+        for (const entry of lights.filter((each) => each.modifier && distanceBetween(each.at, FACE) > 0.1)) {
+          const [metres, feet] = [arrivalAt(entry, FACE, 100), arrivalAt(inFeet(entry), long(FACE), 100)]
+          expect(feet.fNumber).toBeCloseTo(metres.fNumber, 6)
+          expect(feet.distanceM * METRES_PER_FOOT).toBeCloseTo(metres.distanceM, 9)
+          expect(feet.offAxisDeg).toBeCloseTo(metres.offAxisDeg, 4)
+        }
+      }),
+      { numRuns: 60 },
+    )
+  })
+})
+
+const times = (stated: Stated, factor: number): Stated => ({ ...stated, value: stated.value * factor })

@@ -122,6 +122,13 @@ describe('powersOf', () => {
     expect(powers[3]).toBeCloseTo(0.5, 9)
     expect(powers.at(-1)).toBeCloseTo(1 / 128, 9)
   })
+  it('never goes below the least, and takes printed thirds for what they are', () => {
+    expect(powersOf(100).at(-1)).toBeCloseTo(2 ** (-19 / 3), 9)
+    // 1/102 is how thirds print 1/101.6, 1/10 what they print for 1/10.08.
+    expect(powersOf(102).at(-1)).toBeCloseTo(2 ** (-20 / 3), 9)
+    expect(powersOf(10).at(-1)).toBeCloseTo(2 ** (-10 / 3), 9)
+    expect(powersOf(1)).toEqual([1])
+  })
 })
 
 describe('shutterLabel', () => {

@@ -49,6 +49,9 @@ describe('powerLabel', () => {
   ])('labels %d as %s', (power, label) => {
     expect(powerLabel(power)).toBe(label)
   })
+  it('has words for none', () => {
+    expect([0, -0.5, NaN].map(powerLabel)).toEqual(['no power', 'no power', 'no power'])
+  })
 })
 
 describe('stopsLabel', () => {

@@ -11,6 +11,7 @@ import type { WholeSetup } from '#shared/domain/plan/read-plan.ts'
 import { fromRecipe, toRecipe } from '#shared/domain/recipes/recipe.ts'
 import { SHEET_DEFERS } from '#shared/domain/recipes/sheet.ts'
 import { makeRecipeSheet } from '#server/features/recipes/make-recipe-sheet.ts'
+import { requireSetup } from '#server/features/recipes/require-setup.ts'
 import { type TestApp, startTestApp } from '#tests/support/app.ts'
 import { clockAt } from '#tests/support/clock.ts'
 import { type World, makeWorld } from '#tests/support/factories.ts'
@@ -198,6 +199,18 @@ describe('makeRecipeSheet', () => {
     await expect(makeRecipeSheet(app.ctxOf(world.stranger), { ...asked, frames: [] })).rejects.toMatchObject({
       code: 'NOT_FOUND',
     })
+  })
+})
+
+describe('requireSetup', () => {
+  it('lets every role of the shoot through to a setup that is there', async () => {
+    const { setup } = await put(SETUP)
+    const asked = { shootId: world.shootId, setupId: setup.id }
+    for (const actor of [world.photographer, world.stylist, world.client, world.crew])
+      await expect(requireSetup(app.ctxOf(actor), asked)).resolves.toBeUndefined()
+    await expect(requireSetup(app.ctxOf(world.studioMember), asked)).rejects.toMatchObject({ code: 'NOT_FOUND' })
+    const gone = { ...asked, setupId: fromRecipe(toRecipe(SETUP), { newId: randomUUID }).setup.id }
+    await expect(requireSetup(app.ctxOf(world.crew), gone)).rejects.toMatchObject({ code: 'NOT_FOUND' })
   })
 })
 

@@ -6,8 +6,8 @@ import { sheetOf } from '#shared/domain/recipes/sheet.ts'
 import type { Ctx } from '#server/context.ts'
 import { AppError } from '#server/errors.ts'
 import { readShootPlan } from '#server/features/plan/read-shoot-plan.ts'
-import { queueOf } from '#server/features/uploads/queue.ts'
 import { readFrames } from './frame-pictures.ts'
+import { layOut } from './sheet-thread.ts'
 
 export type MakeRecipeSheet = RecipeSheetInput & {
   shootId: ShootId
@@ -15,9 +15,6 @@ export type MakeRecipeSheet = RecipeSheetInput & {
   /** Pictures in the order of `captions`. */
   frames: readonly Uint8Array[]
 }
-
-/** Laying a sheet out keeps the process busy: one at a time. */
-const queue = queueOf(1)
 
 /**
  * The recipe sheet of a setup as it stands: bytes of a PDF, and a name for the file. For whoever may read the shoot.
@@ -37,21 +34,17 @@ export async function makeRecipeSheet(
     )
   const use = setupUse(plan, setupId)
   const date = new Intl.DateTimeFormat('en-GB', { dateStyle: 'long', timeZone: plan.brief.zone }).format(ctx.now())
-  const pdf = await queue(async () => {
-    const pictures = await readFrames(frames.map((bytes, index) => ({ caption: captions[index] ?? '', bytes })))
-    // Fetched when the first sheet is asked for: it takes as long as the rest of the start.
-    const { renderRecipeSheet } = await import('./recipe-sheet.tsx')
-    return renderRecipeSheet({
-      paper,
-      unit,
-      shoot: plan.brief.title,
-      date,
-      used: use.words.charAt(0).toUpperCase() + use.words.slice(1),
-      orientation: widestOf(use.orientations),
-      whole,
-      sheet: sheetOf(whole, use, unit),
-      frames: pictures,
-    })
+  const pictures = await readFrames(frames.map((bytes, index) => ({ caption: captions[index] ?? '', bytes })))
+  const pdf = await layOut({
+    paper,
+    unit,
+    shoot: plan.brief.title,
+    date,
+    used: use.words.charAt(0).toUpperCase() + use.words.slice(1),
+    orientation: widestOf(use.orientations),
+    whole,
+    sheet: sheetOf(whole, use, unit),
+    frames: pictures,
   })
-  return { pdf, fileName: recipeFileName(whole.setup.name).replace(/\.json$/, '.pdf') }
+  return { pdf: Buffer.from(pdf), fileName: recipeFileName(whole.setup.name).replace(/\.json$/, '.pdf') }
 }

@@ -10,7 +10,7 @@ import { TEXT_FONT, TITLE_FONT, loadFonts } from '#server/features/pdf/fonts.ts'
 import { PlanOnPaper } from './plan-on-paper.tsx'
 import { SideOnPaper } from './side-on-paper.tsx'
 
-export type SheetFrame = { caption: string; jpeg: Buffer; widthPx: number; heightPx: number }
+export type SheetFrame = { caption: string; jpeg: Uint8Array; widthPx: number; heightPx: number }
 
 export type RecipeSheetContent = {
   paper: Paper
@@ -255,7 +255,7 @@ function Frames({
     <View style={{ flexDirection: 'row', gap, marginTop: 10 }} wrap={false}>
       {frames.map((frame, index) => (
         <View key={index} style={{ width: height * (shares[index] ?? 1) }}>
-          <Image src={{ data: frame.jpeg, format: 'jpg' }} style={{ width: '100%', height }} />
+          <Image src={{ data: Buffer.from(frame.jpeg), format: 'jpg' }} style={{ width: '100%', height }} />
           <Text style={[styles.small, { marginTop: 2 }]}>{print(frame.caption)}</Text>
         </View>
       ))}

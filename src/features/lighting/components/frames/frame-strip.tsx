@@ -87,8 +87,8 @@ export function FrameStrip({ setup, stages, orientation, frame, chosenId, onChoo
               >
                 <span
                   className={cn(
-                    'block border-2 border-transparent p-0.5 group-hover:border-night-edge',
-                    stage === outlined && 'border-glow-lit group-hover:border-glow-lit',
+                    'block rounded-sm border-2 p-1',
+                    stage === outlined ? 'border-glow-lit' : 'border-transparent group-hover:border-night-edge',
                   )}
                 >
                   <FrameCanvas

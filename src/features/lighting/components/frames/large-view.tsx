@@ -128,15 +128,11 @@ export function LargeView(props: LargeViewProps) {
               <p aria-live="off" className="min-h-[3.2em] text-sm">
                 {reading ? (
                   <>
-                    <span className="font-display text-lg font-semibold">
-                      {Number.isFinite(reading.stops)
-                        ? `${stopsLabel(reading.stops)} ${Math.abs(reading.stops) < 1.17 && Math.abs(reading.stops) > 0.83 ? 'stop' : 'stops'}`
-                        : 'Black'}
-                    </span>
+                    <span className="font-display text-lg font-semibold">{stopsWords(reading.stops)}</span>
                     <br />
                     <span className="text-ink-soft">
                       {reading.fNumber > 0
-                        ? `middle grey at ${fNumberLabel(reading.fNumber)}`
+                        ? `would be middle grey at ${fNumberLabel(reading.fNumber)}`
                         : 'no light comes from here'}
                     </span>
                   </>
@@ -184,6 +180,12 @@ export function LargeView(props: LargeViewProps) {
   )
 }
 
+function stopsWords(stops: number): string {
+  if (!Number.isFinite(stops)) return 'Black'
+  const label = stopsLabel(stops)
+  return label === '0' ? 'Middle grey' : `${label} ${/^[−+](1|⅓|⅔)$/.test(label) ? 'stop' : 'stops'}`
+}
+
 function StopLegend() {
   return (
     <ul aria-label="Stops against middle grey" className="flex flex-col gap-px text-sm">
@@ -215,10 +217,15 @@ function Making({ large }: { large: ReturnType<typeof useLargeFrame> }) {
   if (large.share >= 1) return <p className="text-sm text-ink-soft">In full.</p>
   return (
     <div className="flex flex-col items-start gap-1.5 text-sm text-ink-soft">
-      <label className="w-full">
-        {large.isStopped ? 'Stopped; what is there stays.' : 'Working out the large picture…'}
-        <progress value={large.share} max={1} className="mt-1 block h-2 w-full accent-ink" />
-      </label>
+      <p>{large.isStopped ? 'Stopped; what is there stays.' : 'Working out the large picture…'}</p>
+      <div
+        role="progressbar"
+        aria-label="Large picture"
+        aria-valuenow={Math.round(large.share * 100)}
+        className="h-1.5 w-full rounded-sm bg-hair"
+      >
+        <div className="h-full rounded-sm bg-ink-soft" style={{ width: `${large.share * 100}%` }} />
+      </div>
       <Button size="small" onClick={large.isStopped ? large.goOn : large.stop}>
         {large.isStopped ? 'Go on' : 'Stop'}
       </Button>

@@ -1,6 +1,5 @@
-import { useMemo } from 'react'
+import { useId, useMemo } from 'react'
 import { type Orientation, rayThrough, viewOf } from '#shared/domain/lighting/frame.ts'
-import { mainPlace } from '#shared/domain/lighting/geometry.ts'
 import type { Point } from '#shared/domain/lighting/schema.ts'
 import { SHOULDERS_BELOW_EYES_M, type WallMap, glowOf, wallMap } from '#shared/domain/lighting/wall.ts'
 import { wallContours } from '#shared/domain/lighting/wall-contours.ts'
@@ -9,33 +8,46 @@ import type { WholeSetup } from '#shared/domain/plan/read-plan.ts'
 
 /** Greys of the wall by how far it is under the main, brightest first; the last one is all below. */
 const STEPS = [
-  { below: -0.5, colour: '#ffffff', words: 'brighter than the main' },
-  { below: 0.5, colour: '#e9e6e0', words: 'as the main' },
-  { below: 1.5, colour: '#c9c5bd', words: '−1' },
-  { below: 2.5, colour: '#a39e96', words: '−2' },
-  { below: 3.5, colour: '#7c7770', words: '−3' },
-  { below: 4.5, colour: '#58544e', words: '−4' },
-  { below: 5.5, colour: '#383532', words: '−5' },
+  { below: 0, colour: '#ffffff', words: 'over the main' },
+  { below: 1, colour: '#e4e1da', words: '0 to −1' },
+  { below: 2, colour: '#c2beb6', words: '−1 to −2' },
+  { below: 3, colour: '#9b968e', words: '−2 to −3' },
+  { below: 4, colour: '#75706a', words: '−3 to −4' },
+  { below: 5, colour: '#524e49', words: '−4 to −5' },
+  { below: 6, colour: '#353230', words: '−5 to −6' },
   { below: Infinity, colour: '#1b1918', words: 'darker' },
 ] as const
 
 const stepOf = (stops: number) => STEPS.find((step) => stops < step.below) ?? STEPS[STEPS.length - 1]
 
 /** Points of the map across and down. */
-const COLUMNS = 60
-const ROWS = 75
+const COLUMNS = 96
+const ROWS = 120
 /** Half widths of a head and of shoulders, and the crown above the eyes, metres (assumed measures). */
 const HEAD_HALF_M = 0.09
 const SHOULDER_HALF_M = 0.22
 const CROWN_M = 0.13
 const CHIN_M = 0.11
 
+type Row = WallMap['underMainStops'][number]
+
+/** A row whose ends are taken from beside them, so that the picture's slanted edge can cut it. */
+function filled(row: Row): Row {
+  const first = row.findIndex((value) => value !== null)
+  const last = row.findLastIndex((value) => value !== null)
+  return first < 0 ? row : row.map((_, index) => row[Math.min(last, Math.max(first, index))] ?? null)
+}
+
 /** Cells of one step as one path: runs of neighbours in a row are one rectangle. */
 function cellPaths(map: WallMap): { colour: string; path: string }[] {
   const cellX = ((map.xM.at(-1) ?? 0) - (map.xM[0] ?? 0)) / (COLUMNS - 1)
   const cellY = ((map.yM[0] ?? 0) - (map.yM.at(-1) ?? 0)) / (ROWS - 1)
   const paths = new Map<string, string[]>()
-  map.underMainStops.forEach((row, rowIndex) => {
+  const seen = map.underMainStops.map(filled)
+  const firstSeen = seen.findIndex((row) => row.some((value) => value !== null))
+  const lastSeen = seen.findLastIndex((row) => row.some((value) => value !== null))
+  seen.forEach((own, rowIndex) => {
+    const row = seen[Math.min(lastSeen, Math.max(firstSeen, rowIndex))] ?? own
     const y = -(map.yM[rowIndex] ?? 0) - cellY / 2
     let from = 0
     for (let column = 1; column <= row.length; column++) {
@@ -61,6 +73,7 @@ type WallViewProps = { whole: WholeSetup; orientation: Orientation }
 
 /** What the lights make of the wall that the camera sees, in stops against the main, with the sitter before it. */
 export function WallView({ whole, orientation }: WallViewProps) {
+  const clipId = useId()
   const map = useMemo(() => wallMap(whole, { columns: COLUMNS, rows: ROWS, orientation }), [whole, orientation])
   const cells = useMemo(() => (map ? cellPaths(map) : []), [map])
   const contours = useMemo(() => (map ? wallContours(map) : []), [map])
@@ -91,10 +104,11 @@ export function WallView({ whole, orientation }: WallViewProps) {
     const ray = rayThrough(view, across, up)
     return onWall([view.at[0] + ray[0], view.at[1] + ray[1], view.at[2] + ray[2]])
   })
-  const place = mainPlace(whole.places)
-  const sitter = place && place.at[1] < view.at[2] - 0.1 ? outline(place.at[0], place.eyeHeightM, place.at[1]) : []
-  const [left, right] = [map.xM[0] ?? 0, map.xM.at(-1) ?? 0]
-  const [top, bottom] = [map.yM[0] ?? 0, map.yM.at(-1) ?? 0]
+  const sitters = whole.places.filter((place) => place.at[1] < view.at[2] - 0.1)
+  const halfX = ((map.xM.at(-1) ?? 0) - (map.xM[0] ?? 0)) / (COLUMNS - 1) / 2
+  const halfY = ((map.yM[0] ?? 0) - (map.yM.at(-1) ?? 0)) / (ROWS - 1) / 2
+  const [left, right] = [(map.xM[0] ?? 0) - halfX, (map.xM.at(-1) ?? 0) + halfX]
+  const [top, bottom] = [(map.yM[0] ?? 0) + halfY, (map.yM.at(-1) ?? 0) - halfY]
   const pad = Math.max(0.04, (right - left) * 0.04)
   const box = [left - pad, -top - pad, right - left + 2 * pad, top - bottom + 2 * pad]
   const thin = (right - left) / 320
@@ -108,9 +122,17 @@ export function WallView({ whole, orientation }: WallViewProps) {
         glow && glow.underMainStops !== null ? `; brightest ${stopsLabel(-glow.underMainStops)}` : ''
       }`}
     >
-      {cells.map(({ colour, path }) => (
-        <path key={colour} d={path} fill={colour} />
-      ))}
+      <clipPath id={clipId}>
+        <path d={`M${corners.join('L')}Z`} clipPath={`url(#${clipId}-wall)`} />
+      </clipPath>
+      <clipPath id={`${clipId}-wall`}>
+        <rect x={left} y={-top} width={right - left} height={top - bottom} />
+      </clipPath>
+      <g clipPath={`url(#${clipId})`}>
+        {cells.map(({ colour, path }) => (
+          <path key={colour} d={path} fill={colour} />
+        ))}
+      </g>
       {contours.map(({ stops, pieces }) => (
         <path
           key={stops}
@@ -145,16 +167,18 @@ export function WallView({ whole, orientation }: WallViewProps) {
         )
       })}
       <path d={`M${corners.join('L')}Z`} fill="none" stroke="#1f1c1a" strokeWidth={thin * 2} />
-      {sitter.length > 0 && (
+      {sitters.map((place) => (
         <path
-          d={`M${sitter.map(onWall).join('L')}Z`}
+          key={place.id}
+          clipPath={`url(#${clipId})`}
+          d={`M${outline(place.at[0], place.eyeHeightM, place.at[1]).map(onWall).join('L')}Z`}
           fill="#d8d7d4"
-          fillOpacity={0.55}
+          fillOpacity={0.5}
           stroke="#1f1c1a"
           strokeWidth={thin * 1.5}
           strokeDasharray={`${thin * 6} ${thin * 4}`}
         />
-      )}
+      ))}
       {peak && glow && (
         <g>
           <path

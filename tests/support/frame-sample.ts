@@ -10,9 +10,7 @@ export function emitter(more: Partial<Emitter> = {}): Emitter {
     widthM: 0.02,
     heightM: 0.02,
     axisIntensity: 1000,
-    beamDeg: null,
-    zoomMm: null,
-    isBare: true,
+    beam: { beamDeg: null, zoomMm: null, bare: true },
     ...more,
   }
 }
@@ -32,6 +30,11 @@ export function figure(more: Partial<Figure> = {}): Figure {
     seed: 7,
     ...more,
   }
+}
+
+/** A beam of this angle. */
+export function beam(beamDeg: number) {
+  return { beamDeg, zoomMm: null, bare: false }
 }
 
 /** A wide grey paper two metres behind the mark, the lens three metres before it, no room about them. */

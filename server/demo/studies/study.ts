@@ -87,9 +87,7 @@ function emitterOf(light: StudyLight, index: number): Emitter {
     widthM,
     heightM,
     axisIntensity: 1,
-    beamDeg: light.beamDeg ?? (widthM > 0.3 ? 105 : 60),
-    zoomMm: null,
-    isBare: false,
+    beam: { beamDeg: light.beamDeg ?? (widthM > 0.3 ? 105 : 60), zoomMm: null, bare: false },
   }
 }
 

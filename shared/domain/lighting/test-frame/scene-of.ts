@@ -2,9 +2,8 @@ import type { WholeSetup } from '#shared/domain/plan/read-plan.ts'
 import { guessedAppearance, reflectedRgb, seedOf, skinRgb } from '../appearance.ts'
 import { type Orientation, viewOf } from '../frame.ts'
 import { distanceBetween, facePoint } from '../geometry.ts'
-import { arrivalAt, faceOf } from '../light-output.ts'
-import { zoomTableOf } from '../light-source.ts'
-import type { Appearance, Light, Point, SitterPlace } from '../schema.ts'
+import { beamOf, emissionOf, faceOf } from '../light-output.ts'
+import type { Appearance, Light, SitterPlace } from '../schema.ts'
 import type { Emitter, Figure, Scene } from './scene.ts'
 
 /** What a setup alone does not know of its sitters. */
@@ -20,17 +19,10 @@ const PLAIN_GARMENT = '#5b6470'
 const FLOOR_COLOUR = '#5a4636'
 const ROOM_M = { width: 6, depth: 5, ceiling: 3 }
 const ROOM_REFLECTANCE = 0.3
-/** Far enough that a face counts as a point: where its intensity is read, metres. */
-const FAR_M = 40
 
 function emitterOf(light: Light): Emitter {
   const { widthM, heightM } = faceOf(light)
   const shape = light.modifier?.numbers.shape
-  const length = Math.max(0.01, distanceBetween(light.at, light.aim))
-  const along = (axis: 0 | 1 | 2) => light.at[axis] + ((light.aim[axis] - light.at[axis]) * FAR_M) / length
-  const far: Point = [along(0), along(1), along(2)]
-  // At full power without gels: power and gels only weigh the layer. One second of a lamp.
-  const arrival = arrivalAt({ ...light, power: 1, gels: [], isOn: true }, far, 100)
   return {
     id: light.id,
     at: light.at,
@@ -38,10 +30,9 @@ function emitterOf(light: Light): Emitter {
     shape: shape === 'lantern' ? 'ball' : shape === 'softbox' || shape === 'strip' ? 'rectangle' : 'disc',
     widthM,
     heightM,
-    axisIntensity: (arrival.exposureLxS * FAR_M ** 2) / Math.max(1e-9, arrival.beamShare * arrival.discShare),
-    beamDeg: light.modifier?.numbers.beamDeg?.value ?? null,
-    zoomMm: zoomTableOf(light.unit.numbers).length > 0 ? light.zoomMm : null,
-    isBare: light.modifier === null,
+    // Power, gels and the switch only weigh the layer; a lamp burns for a second.
+    axisIntensity: emissionOf({ ...light, power: 1, gels: [], isOn: true }).axisLxS,
+    beam: beamOf(light),
   }
 }
 

@@ -1,4 +1,5 @@
 import type { PROP_SHAPES, BACKGROUND_SURFACES } from '../schema.ts'
+import type { Beam } from '../beam.ts'
 import type { View } from '../frame.ts'
 import type { Cut, Pose } from './body.ts'
 import type { HairStyle } from './head.ts'
@@ -51,9 +52,7 @@ export type Emitter = {
   heightM: number
   /** Intensity on its axis at full power without gels: lx·s·m² for a flash, cd for a lamp. */
   axisIntensity: number
-  beamDeg: number | null
-  zoomMm: number | null
-  isBare: boolean
+  beam: Beam
 }
 
 export type Scene = {

@@ -1,7 +1,7 @@
 import { clamp, ease } from './field.ts'
 import { floorSpot, wallSpot } from './room-surface.ts'
 import { emptySpot, type Spot } from './spot.ts'
-import { beamShare, type Stage, type StagedEmitter } from './stage.ts'
+import type { Stage, StagedEmitter } from './stage.ts'
 
 /** What a spot sends to the lens, as reflectance × exposure: filled in place. */
 export const sent = { r: 0, g: 0, b: 0 }
@@ -51,7 +51,7 @@ export function addEmitter(
   const [ax, ay, az] = emitter.axis
   const onAxis = -(ax * cx + ay * cy + az * cz) / distance
   if (onAxis <= 0 && !ball) return
-  const share = beamShare(emitter, Math.acos(clamp(onAxis, -1, 1)) * DEG)
+  const share = emitter.profile.shareAt(Math.acos(clamp(onAxis, -1, 1)) * DEG)
   if (share < 1e-6) return
   facing(emitter, cx / distance, cy / distance, cz / distance)
   const normal = ball ? 1 : Math.max(0.05, onAxis)
@@ -221,7 +221,9 @@ export function plainExposure(
   const onAxis = -(emitter.axis[0] * cx + emitter.axis[1] * cy + emitter.axis[2] * cz) / distance
   if (onAxis <= 0 && emitter.shape !== 'ball') return 0
   const r2 = emitter.areaM2 / Math.PI
-  return (emitter.axisIntensity * beamShare(emitter, Math.acos(clamp(onAxis, -1, 1)) * DEG) * facingLight) / (s2 + r2)
+  return (
+    (emitter.axisIntensity * emitter.profile.shareAt(Math.acos(clamp(onAxis, -1, 1)) * DEG) * facingLight) / (s2 + r2)
+  )
 }
 
 const mirrored = emptySpot()

@@ -1,4 +1,4 @@
-import { relativeIntensity } from '../beam.ts'
+import { type Profile, profileOf } from '../beam.ts'
 import { makeBody } from './body.ts'
 import { clamp } from './field.ts'
 import { makeHead, type HeadShape } from './head.ts'
@@ -26,6 +26,7 @@ export type StagedEmitter = Emitter & {
   side: readonly [number, number, number]
   up: readonly [number, number, number]
   areaM2: number
+  profile: Profile
   /** All the light it gives, axisIntensity × sr. */
   flux: number
   /** Points on its face for shading, as x and y in half sides, spread evenly; more the larger it looks. */
@@ -128,16 +129,11 @@ export function stageOf(scene: Scene, fineness: Fineness): Stage {
   }
 }
 
-/** Share of the intensity on axis at an angle off it, degrees. */
-export function beamShare(emitter: Emitter, offAxisDeg: number): number {
-  return relativeIntensity(offAxisDeg, { beamDeg: emitter.beamDeg, zoomMm: emitter.zoomMm, bare: emitter.isBare }).share
-}
-
-function fluxOf(emitter: Emitter): number {
+function fluxOf(emitter: Emitter, profile: Profile): number {
   const most = emitter.shape === 'ball' ? 180 : 90
   let sum = 0
   for (let deg = 0.5; deg < most; deg++) {
-    sum += beamShare(emitter, deg) * Math.sin((deg * Math.PI) / 180) * (Math.PI / 180)
+    sum += profile.shareAt(deg) * Math.sin((deg * Math.PI) / 180) * (Math.PI / 180)
   }
   return emitter.axisIntensity * 2 * Math.PI * sum
 }
@@ -176,6 +172,7 @@ function stageEmitter(emitter: Emitter): StagedEmitter {
     side[2] * axis[0] - side[0] * axis[2],
     side[0] * axis[1] - side[1] * axis[0],
   ]
+  const profile = profileOf(emitter.beam)
   const area = emitter.shape === 'rectangle' ? 1 : Math.PI / 4
   return {
     ...emitter,
@@ -183,7 +180,8 @@ function stageEmitter(emitter: Emitter): StagedEmitter {
     side,
     up,
     areaM2: emitter.widthM * emitter.heightM * area,
-    flux: fluxOf(emitter),
+    profile,
+    flux: fluxOf(emitter, profile),
     points: facePoints(emitter, length),
   }
 }

@@ -7,7 +7,7 @@ import {
   renderRows,
 } from '#shared/domain/lighting/test-frame/render.ts'
 import type { Scene } from '#shared/domain/lighting/test-frame/scene.ts'
-import { emitter, figure, scene } from '#tests/support/frame-sample.ts'
+import { beam, emitter, figure, scene } from '#tests/support/frame-sample.ts'
 
 function layerOf(layers: Layers, id: string): Float32Array {
   const layer = layers.layers[layers.ids.indexOf(id)]
@@ -34,15 +34,13 @@ describe('renderFrame', () => {
   it('gives a point off the axis the share of its beam', () => {
     // cos⁴-like: 20° off a Gaussian of 40° is half, times cos³ for slant and distance (computations 5).
     const off = Math.tan((20 * Math.PI) / 180) * 2
-    const lit = middle(
-      scene({ emitters: [emitter({ at: [off, 1.5, 0], aim: [off, 1.5, -2], beamDeg: 40, isBare: false })] }),
-    )
+    const lit = middle(scene({ emitters: [emitter({ at: [off, 1.5, 0], aim: [off, 1.5, -2], beam: beam(40) })] }))
     expect(lit / (250 * 0.5 * Math.cos((20 * Math.PI) / 180) ** 3)).toBeCloseTo(1, 2)
   })
 
   it('gives a disc on its axis d²/(d² + r²) of a point, within 2 %', () => {
     // 1 m wide from 2.5 m: .9615 (computations 5, IES definitions 9.1.1); 1 m from 1 m: .8.
-    const disc = { widthM: 1, heightM: 1, isBare: false, beamDeg: 120 }
+    const disc = { widthM: 1, heightM: 1, beam: beam(120) }
     const far = middle(scene({ emitters: [emitter({ ...disc, at: [0, 1.5, 0.5] })] }))
     expect(Math.abs(far / ((1000 / 2.5 ** 2) * 0.9615) - 1)).toBeLessThan(0.02)
     const near = middle(scene({ emitters: [emitter({ ...disc, at: [0, 1.5, -1] })] }))
@@ -50,7 +48,7 @@ describe('renderFrame', () => {
   })
 
   it('loses two stops when a distance of ten radii and more is doubled', () => {
-    const disc = { widthM: 0.2, heightM: 0.2, isBare: false, beamDeg: 120 }
+    const disc = { widthM: 0.2, heightM: 0.2, beam: beam(120) }
     const at = (z: number) => middle(scene({ emitters: [emitter({ ...disc, at: [0, 1.5, z - 2] })] }))
     expect(Math.abs(Math.log2(at(1) / at(2)) - 2)).toBeLessThan(0.02)
     expect(Math.abs(Math.log2(at(2) / at(4)) - 2)).toBeLessThan(0.02)
@@ -94,7 +92,7 @@ describe('renderFrame', () => {
 
   it('has no noise on an evenly lit wall: σ at most 1 %', () => {
     const of = scene({
-      emitters: [emitter({ at: [0, 1.5, 8], aim: [0, 1.5, -2], widthM: 1, heightM: 1, beamDeg: 120, isBare: false })],
+      emitters: [emitter({ at: [0, 1.5, 8], aim: [0, 1.5, -2], widthM: 1, heightM: 1, beam: beam(120) })],
     })
     const layers = renderFrame(of, 'fine', 48, 48)
     const lit = layerOf(layers, 'a')

@@ -22,7 +22,7 @@ describe('sceneOf', () => {
 
   it('keeps the beam for the picture and out of the intensity', () => {
     const [only] = sceneOf(whole({ lights: [main({ modifier: GRID })] }), 'upright', NOBODY).emitters
-    expect(only?.beamDeg).toBe(10)
+    expect(only?.beam.beamDeg).toBe(10)
     expect((only?.axisIntensity ?? NaN) / 4000).toBeCloseTo(1, 6)
   })
 

@@ -2,7 +2,7 @@ import { describe, expect, it } from 'vitest'
 import { addEmitter, plainExposure, roomExposure, sent } from '#shared/domain/lighting/test-frame/shade.ts'
 import { emptySpot } from '#shared/domain/lighting/test-frame/spot.ts'
 import { FINE, stageOf } from '#shared/domain/lighting/test-frame/stage.ts'
-import { emitter, scene } from '#tests/support/frame-sample.ts'
+import { beam, emitter, scene } from '#tests/support/frame-sample.ts'
 
 function staged(more: Parameters<typeof emitter>[0]) {
   const stage = stageOf(scene({ emitters: [emitter(more)], room: { areaM2: 100, reflectance: 0.5 } }), FINE)
@@ -50,7 +50,7 @@ describe('addEmitter', () => {
 
 describe('plainExposure', () => {
   it('is I/(d² + r²) on the axis', () => {
-    const { only } = staged({ widthM: 1, heightM: 1, beamDeg: 120, isBare: false })
+    const { only } = staged({ widthM: 1, heightM: 1, beam: beam(120) })
     expect(plainExposure(only, 0, 1.5, -2, 0, 0, 1)).toBeCloseTo(1000 / (4 + 0.25), 6)
     expect(plainExposure(only, 0, 1.5, -2, 0, 0, -1)).toBe(0)
   })
@@ -59,7 +59,7 @@ describe('plainExposure', () => {
 describe('roomExposure', () => {
   it('is flux·ρ/(surface·(1 − ρ)): the integrating sphere', () => {
     // cosⁿ of 120° is cos¹, flux π·I₀ (computations 5).
-    const { stage, only } = staged({ beamDeg: 120, isBare: false })
+    const { stage, only } = staged({ beam: beam(120) })
     expect(roomExposure(stage, only)).toBeCloseTo((Math.PI * 1000 * 0.5) / (100 * 0.5), 0)
   })
 })

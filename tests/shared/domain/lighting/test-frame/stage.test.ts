@@ -1,6 +1,6 @@
 import { describe, expect, it } from 'vitest'
-import { FINE, ROUGH, beamShare, stageOf } from '#shared/domain/lighting/test-frame/stage.ts'
-import { emitter, figure, scene } from '#tests/support/frame-sample.ts'
+import { FINE, ROUGH, stageOf } from '#shared/domain/lighting/test-frame/stage.ts'
+import { beam, emitter, figure, scene } from '#tests/support/frame-sample.ts'
 
 describe('stageOf', () => {
   it('knows the flux of cosⁿ beams', () => {
@@ -9,10 +9,7 @@ describe('stageOf', () => {
       [30, 0.29929],
       [120, Math.PI],
     ] as const) {
-      const [only] = stageOf(
-        scene({ emitters: [emitter({ beamDeg, isBare: false, axisIntensity: 1 })] }),
-        ROUGH,
-      ).emitters
+      const [only] = stageOf(scene({ emitters: [emitter({ beam: beam(beamDeg), axisIntensity: 1 })] }), ROUGH).emitters
       // Up to 90° the profile is a Gaussian, whose tails hold a little more than cosⁿ.
       expect(Math.abs((only?.flux ?? 0) / flux - 1)).toBeLessThan(beamDeg < 90 ? 0.025 : 0.002)
     }
@@ -42,12 +39,5 @@ describe('stageOf', () => {
         expect(shape === 'disc' ? Math.hypot(u, v) : Math.max(Math.abs(u), Math.abs(v))).toBeLessThan(1)
       expect(points.reduce((sum, [u]) => sum + u, 0) / points.length).toBeCloseTo(0, 0)
     }
-  })
-})
-
-describe('beamShare', () => {
-  it('is a half at half the beam angle', () => {
-    expect(beamShare(emitter({ beamDeg: 40, isBare: false }), 20)).toBeCloseTo(0.5, 12)
-    expect(beamShare(emitter({ beamDeg: 110, isBare: false }), 55)).toBeCloseTo(0.5, 12)
   })
 })

@@ -29,12 +29,14 @@ export function FullDialog({ open, onOpenChange, title, description, actions, ch
               <Base.Title className="truncate text-xl">{title}</Base.Title>
               <Base.Description className="text-sm text-ink-soft">{description}</Base.Description>
             </div>
-            {actions}
             <Base.Close asChild>
-              <IconButton label="Close">
+              <IconButton label="Close" className="md:order-last">
                 <X size={18} aria-hidden />
               </IconButton>
             </Base.Close>
+            {actions !== undefined && (
+              <div className="flex items-center gap-x-3 gap-y-1.5 max-md:w-full max-md:flex-wrap">{actions}</div>
+            )}
           </header>
           {children}
         </Base.Content>

@@ -70,7 +70,7 @@ export function FrameStrip({ setup, stages, orientation, frame, chosenId, onChoo
           {stages.map((stage, index) => (
             <li
               key={stage.light.id}
-              className="flex min-w-28 flex-1 snap-start flex-col"
+              className="flex min-w-26 flex-1 snap-start flex-col"
               style={{ maxWidth: Math.max(112, Math.round(MOST_HIGH_PX * aspect)) }}
             >
               <button

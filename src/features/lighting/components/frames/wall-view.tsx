@@ -145,27 +145,6 @@ export function WallView({ whole, orientation }: WallViewProps) {
           fill="none"
         />
       ))}
-      {contours.map(({ stops, pieces }) => {
-        const middle = pieces[Math.floor(pieces.length / 2)]
-        return (
-          middle && (
-            <text
-              key={stops}
-              x={middle[0]}
-              y={-middle[1]}
-              fontSize={thin * 11}
-              textAnchor="middle"
-              dominantBaseline="middle"
-              fill={stops < 3 ? '#1f1c1a' : '#f3eee6'}
-              stroke={stepOf(stops)?.colour}
-              strokeWidth={thin * 4}
-              paintOrder="stroke"
-            >
-              {stopsLabel(-stops)}
-            </text>
-          )
-        )
-      })}
       <path d={`M${corners.join('L')}Z`} fill="none" stroke="#1f1c1a" strokeWidth={thin * 2} />
       {sitters.map((place) => (
         <path
@@ -179,6 +158,27 @@ export function WallView({ whole, orientation }: WallViewProps) {
           strokeDasharray={`${thin * 6} ${thin * 4}`}
         />
       ))}
+      {contours.map(({ stops, pieces }) => {
+        const middle = pieces[Math.floor(pieces.length / 2)]
+        return (
+          middle && (
+            <text
+              key={stops}
+              x={middle[0]}
+              y={-middle[1]}
+              fontSize={thin * 11}
+              textAnchor="middle"
+              dominantBaseline="middle"
+              fill={stops < 3 ? '#1f1c1a' : '#f3eee6'}
+              stroke={stops < 3 ? '#e4e1da' : '#353230'}
+              strokeWidth={thin * 4}
+              paintOrder="stroke"
+            >
+              {stopsLabel(-stops)}
+            </text>
+          )
+        )
+      })}
       {peak && glow && (
         <g>
           <path

@@ -1,5 +1,6 @@
 import { createRequire } from 'node:module'
 import { Font } from '@react-pdf/renderer'
+import { wellFormed } from '#shared/domain/text.ts'
 
 // A .woff2 cannot be embedded; each .woff is one subset, so that a family is a stack of them, looked through sign by sign.
 const fileOf = (name: string) => createRequire(import.meta.url).resolve(name)
@@ -61,7 +62,7 @@ export async function loadFonts(): Promise<(text: string) => string> {
   loading ??= load()
   const fonts = await loading
   return (text) =>
-    [...text.toWellFormed().normalize('NFC')]
+    [...wellFormed(text).normalize('NFC')]
       .map((sign) => {
         if (sign === '\n') return sign
         if (/[\p{Cc}\u2028\u2029]/u.test(sign)) return ' '

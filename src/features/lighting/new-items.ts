@@ -229,10 +229,12 @@ export function newSetup(
 /** Everything of a setup with new ids under a new name: a variation. */
 export function copyOf(whole: WholeSetup, name: string, ranks: readonly string[], random: () => number): WholeSetup {
   const setupId: SetupId = setupIdSchema.parse(newId())
+  // Which of two sitters is read hangs on the order of their ids: new ones are handed out in the order of the old.
+  const placeIds = whole.places.map(() => newId()).sort()
   return {
     setup: { ...whole.setup, id: setupId, name, rank: appendKey(ranks, random) },
     lights: whole.lights.map((light) => ({ ...light, id: lightIdSchema.parse(newId()), setupId })),
-    places: whole.places.map((place) => ({ ...place, id: placeIdSchema.parse(newId()), setupId })),
+    places: whole.places.map((place, index) => ({ ...place, id: placeIdSchema.parse(placeIds[index]), setupId })),
     props: whole.props.map((prop) => ({ ...prop, id: propIdSchema.parse(newId()), setupId })),
   }
 }

@@ -1,4 +1,5 @@
 import type { WholeSetup } from '#shared/domain/plan/read-plan.ts'
+import { type LengthUnit, METRES_PER_FOOT, lengthLabel } from '#shared/units/length.ts'
 import { type BoomBalance, boomBalanceOf, loadKgOf } from './boom.ts'
 import type { Orientation } from './frame.ts'
 import { frameCautions } from './in-frame.ts'
@@ -10,7 +11,7 @@ import type { Light } from './schema.ts'
 import { SOCKET_LIMIT_DEG } from './softness.ts'
 import { shutterLabel, stopsBetween } from './stops.ts'
 import type { Sync } from './sync.ts'
-import { fNumberLabel, inSentence, metresLabel, powerLabel, purposeWord } from './words.ts'
+import { fNumberLabel, inSentence, powerLabel, purposeWord } from './words.ts'
 
 /** `red`: must be put right (in frame, over load, over power). `mind`: take care. `fine`: settled, with its number. */
 export type Caution = {
@@ -28,9 +29,11 @@ export type CautionOptions = {
   orientations: readonly Orientation[]
   /** Frames of all shots that use the setup; null leaves batteries out. */
   frames: number | null
+  /** What lengths are said in. */
+  unit: LengthUnit
 }
 
-const DEFAULTS: CautionOptions = { orientations: ['upright'], frames: null }
+const DEFAULTS: CautionOptions = { orientations: ['upright'], frames: null, unit: 'm' }
 
 /** Heads above this stand with a bag, metres; faces larger than this catch draughts, m² (assumptions). */
 const BAG_ABOVE_M = 1.8
@@ -38,7 +41,10 @@ const SAIL_M2 = 0.5
 /** Nearer than this a strong flash is unkind to eyes and skin, metres (assumption). */
 const NEAR_M = 0.5
 
-const metresExact = (value: number) => `${Number(value.toFixed(2))} m`
+const exactLabel = (metres: number, unit: LengthUnit) =>
+  unit === 'm' ? `${Number(metres.toFixed(2))} m` : lengthLabel(metres, unit, true)
+const areaLabel = (squareM: number, unit: LengthUnit) =>
+  unit === 'm' ? `${squareM} m²` : `${(squareM / METRES_PER_FOOT ** 2).toFixed(1)} sq ft`
 
 const BOOM_PARTS: Readonly<Record<BoomBalance['assumed'][number], string>> = {
   reachM: 'reach',
@@ -46,13 +52,13 @@ const BOOM_PARTS: Readonly<Record<BoomBalance['assumed'][number], string>> = {
   armMassKg: 'mass of the arm',
 }
 
-function boomHow({ reachM, counterReachM, armMassKg, assumed }: BoomBalance): string {
+function boomHow({ reachM, counterReachM, armMassKg, assumed }: BoomBalance, unit: LengthUnit): string {
   const parts = assumed.map((part) => BOOM_PARTS[part])
   const from = parts.length === 0 ? 'the boom’s own numbers' : `assumed: ${parts.join(', ')}; put in your boom’s own`
-  return `W = (w·a + m(a − b)/2)/b with an arm of ${armMassKg} kg, a = ${metresExact(reachM)}, b = ${metresExact(counterReachM)} (${from}).`
+  return `W = (w·a + m(a − b)/2)/b with an arm of ${armMassKg} kg, a = ${exactLabel(reachM, unit)}, b = ${exactLabel(counterReachM, unit)} (${from}).`
 }
 
-function supportCautions(light: Light): Caution[] {
+function supportCautions(light: Light, unit: LengthUnit): Caution[] {
   const { support } = light
   if (!support) return []
   const name = purposeWord(light.purpose).toLowerCase()
@@ -76,8 +82,8 @@ function supportCautions(light: Light): Caution[] {
       'height',
       'red',
       `Higher than its ${inSentence(support.name)} goes`,
-      `The ${name} is drawn at ${metresLabel(light.at[1])}; the support goes to ${metresLabel(maxHeightM.value)}. Never extend past the maker’s mark.`,
-      `Support height ${maxHeightM.value} m (${maxHeightM.from}).`,
+      `The ${name} is drawn at ${lengthLabel(light.at[1], unit)}; the support goes to ${lengthLabel(maxHeightM.value, unit)}. Never extend past the maker’s mark.`,
+      `Support height ${exactLabel(maxHeightM.value, unit)} (${maxHeightM.from}).`,
     )
   }
   const boom = boomBalanceOf(light)
@@ -87,22 +93,22 @@ function supportCautions(light: Light): Caution[] {
       'boom',
       'mind',
       `Balance and bag the ${name} boom`,
-      `${load.toFixed(1)} kg out at ${metresExact(boom.reachM)} wants about ${weight.toFixed(1)} kg at ${metresExact(boom.counterReachM)}${weight > 0 ? ` (${boom.bags}, slid until it balances)` : ''}, and a bag on the base. Nobody sits under it. The boom maker’s limits and the venue’s rules decide.`,
-      `${boomHow(boom)} ${massHow}`,
+      `${load.toFixed(1)} kg out at ${exactLabel(boom.reachM, unit)} wants about ${weight.toFixed(1)} kg at ${exactLabel(boom.counterReachM, unit)}${weight > 0 ? ` (${boom.bags}, slid until it balances)` : ''}, and a bag on the base. Nobody sits under it. The boom maker’s limits and the venue’s rules decide.`,
+      `${boomHow(boom, unit)} ${massHow}`,
     )
   } else if (kind === 'stand') {
     const { widthM, heightM } = faceOf(light)
     const large = widthM * heightM >= SAIL_M2
     if (light.at[1] >= BAG_ABOVE_M || large) {
       const why = large
-        ? `A ${metresLabel(Math.max(widthM, heightM))} face is a sail`
-        : `A head at ${metresLabel(light.at[1])} on a light stand tips easily`
+        ? `A ${lengthLabel(Math.max(widthM, heightM), unit)} face is a sail`
+        : `A head at ${lengthLabel(light.at[1], unit)} on a light stand tips easily`
       add(
         'bag',
         'mind',
         `Bag the ${name} stand`,
         `${why}. Bag it, tape the cable. Follow the stand maker’s limits and the venue’s rules.`,
-        `Asked from ${BAG_ABOVE_M} m up or ${SAIL_M2} m² of face (assumptions).`,
+        `Asked from ${exactLabel(BAG_ABOVE_M, unit)} up or ${areaLabel(SAIL_M2, unit)} of face (assumptions).`,
       )
     }
   }
@@ -140,7 +146,7 @@ function powerCautions(light: Light): Caution[] {
   return cautions
 }
 
-function eyeCautions(reading: SetupReading, whole: WholeSetup): Caution[] {
+function eyeCautions(reading: SetupReading, whole: WholeSetup, unit: LengthUnit): Caution[] {
   const { main } = reading
   const mainLight = whole.lights.find((light) => light.id === main?.lightId)
   if (!main || !mainLight) return []
@@ -170,9 +176,9 @@ function eyeCautions(reading: SetupReading, whole: WholeSetup): Caution[] {
       key: `${near.lightId}:near`,
       tone: 'mind',
       title: `The ${purposeWord(near.purpose).toLowerCase()} is close to the face`,
-      words: `${metresLabel(near.distanceM)} from the eyes. Tell the sitter before it flashes, begin low, and mind hair and lashes near a hot head.`,
+      words: `${lengthLabel(near.distanceM, unit)} from the eyes. Tell the sitter before it flashes, begin low, and mind hair and lashes near a hot head.`,
       lightId: near.lightId,
-      how: `Asked under ${NEAR_M} m (assumption).`,
+      how: `Asked under ${exactLabel(NEAR_M, unit)} (assumption).`,
     })
   }
   return cautions
@@ -290,14 +296,14 @@ export function cautionsOf(
   options: Partial<CautionOptions> = {},
   reading: SetupReading = readSetup(whole, options),
 ): Caution[] {
-  const { orientations, frames } = { ...DEFAULTS, ...options }
+  const { orientations, frames, unit } = { ...DEFAULTS, ...options }
   const all = [
-    ...frameCautions(whole, orientations.length > 0 ? orientations : DEFAULTS.orientations),
-    ...whole.lights.flatMap((light) => [...supportCautions(light), ...powerCautions(light)]),
+    ...frameCautions(whole, orientations.length > 0 ? orientations : DEFAULTS.orientations, unit),
+    ...whole.lights.flatMap((light) => [...supportCautions(light, unit), ...powerCautions(light)]),
     ...exposureCautions(reading, whole),
     ...syncCautions(reading.sync),
     ...mainsCautions(reading.mains),
-    ...eyeCautions(reading, whole),
+    ...eyeCautions(reading, whole, unit),
     ...(frames === null ? [] : batteryCautions(whole, frames, suppliesOf(whole.lights, frames))),
   ]
   return TONES.flatMap((tone) => all.filter((caution) => caution.tone === tone))

@@ -1,8 +1,8 @@
 import type { WholeSetup } from '#shared/domain/plan/read-plan.ts'
+import { type LengthUnit, lengthLabel } from '#shared/units/length.ts'
 import { BODY_HALF_M, CROWN_M, type Orientation, type View, projected, rayThrough, viewOf } from './frame.ts'
 import { facePoint, minus, dot } from './geometry.ts'
 import type { Point, SitterPlace } from './schema.ts'
-import { metresLabel } from './words.ts'
 
 export const CROPS = [
   'face',
@@ -70,7 +70,7 @@ function edgeHeightM(view: View, up: number, at: Point): number {
   return flat < 1e-9 ? view.at[1] : view.at[1] + (ray[1] / flat) * away
 }
 
-function sitterFraming(view: View, place: SitterPlace): SitterFraming | null {
+function sitterFraming(view: View, place: SitterPlace, unit: LengthUnit): SitterFraming | null {
   const eyes: Point = [place.at[0], place.eyeHeightM, place.at[1]]
   const seen = projected(view, eyes)
   if (!seen) return null
@@ -79,21 +79,21 @@ function sitterFraming(view: View, place: SitterPlace): SitterFraming | null {
   const topM = edgeHeightM(view, 1, eyes) - (place.eyeHeightM + CROWN_M)
   const leftM = half + across - BODY_HALF_M
   const rightM = half - across - BODY_HALF_M
-  return { placeId: place.id, leftM, rightM, topM, words: sitterWords(leftM, rightM, topM) }
+  return { placeId: place.id, leftM, rightM, topM, words: sitterWords(leftM, rightM, topM, unit) }
 }
 
-function sitterWords(leftM: number, rightM: number, topM: number): string {
+function sitterWords(leftM: number, rightM: number, topM: number, unit: LengthUnit): string {
   const cut = [...(topM < 0 ? ['top'] : []), ...(leftM < 0 ? ['left'] : []), ...(rightM < 0 ? ['right'] : [])]
   if (leftM < -2 * BODY_HALF_M || rightM < -2 * BODY_HALF_M) return 'Out of the picture.'
   if (cut.length > 0) return `Cut at the ${cut.join(' and ')}.`
-  return `${metresLabel(leftM)} free at the left, ${metresLabel(rightM)} at the right.`
+  return `${lengthLabel(leftM, unit)} free at the left, ${lengthLabel(rightM, unit)} at the right.`
 }
 
 /**
  * What the camera frames in an orientation: its field at the sitter on the mark, the crop in words (limits are
- * assumptions), head room, and how each sitter stands in it.
+ * assumptions), head room, and how each sitter stands in it. Words say lengths in `unit`.
  */
-export function framingOf(whole: WholeSetup, orientation: Orientation): Framing {
+export function framingOf(whole: WholeSetup, orientation: Orientation, unit: LengthUnit = 'm'): Framing {
   const view = viewOf(whole, orientation)
   const face = facePoint(whole)
   const place = whole.places.find((candidate) => candidate.at[0] === face[0] && candidate.at[1] === face[2]) ?? null
@@ -102,7 +102,7 @@ export function framingOf(whole: WholeSetup, orientation: Orientation): Framing 
   const bottomM = edgeHeightM(view, -1, face)
   const headRoomM = topM - face[1] - CROWN_M
   const crop = cropOf(place, face[1], bottomM)
-  const room = headRoomM < 0 ? 'the top edge cuts the head' : `${metresLabel(headRoomM)} above the head`
+  const room = headRoomM < 0 ? 'the top edge cuts the head' : `${lengthLabel(headRoomM, unit)} above the head`
   return {
     orientation,
     widthM: 2 * distanceM * view.tanAcross,
@@ -112,7 +112,7 @@ export function framingOf(whole: WholeSetup, orientation: Orientation): Framing 
     distanceM,
     crop,
     headRoomM,
-    sitters: whole.places.flatMap((entry) => sitterFraming(view, entry) ?? []),
+    sitters: whole.places.flatMap((entry) => sitterFraming(view, entry, unit) ?? []),
     words: `${crop[0]?.toUpperCase()}${crop.slice(1)}, ${room}.`,
   }
 }

@@ -1,11 +1,12 @@
 import type { WholeSetup } from '#shared/domain/plan/read-plan.ts'
+import { type LengthUnit, lengthLabel } from '#shared/units/length.ts'
 import { boomBalanceOf } from './boom.ts'
 import type { Caution } from './cautions.ts'
 import { type Clearance, type Orientation, type View, clearanceOf, hiddenBySitter, viewOf } from './frame.ts'
 import { faceOf } from './light-output.ts'
 import { minus, panelNormal } from './geometry.ts'
 import type { Light, Point, Prop } from './schema.ts'
-import { inSentence, metresLabel, purposeWord } from './words.ts'
+import { inSentence, purposeWord } from './words.ts'
 
 /** How near one thing and its stand come to the picture. */
 export type Sight = { id: string; lightId: string | null; name: string; clearance: Clearance }
@@ -145,11 +146,15 @@ export function sightsOf(whole: WholeSetup, orientations: readonly Orientation[]
   return [...worst.values()].sort((a, b) => a.clearance.marginM - b.clearance.marginM)
 }
 
-const HOW =
-  'Every head, panel, stand and boom is projected through the camera by its corners. Assumed: a head reaches 25 cm behind its face; a boom’s arm is level and turned to where it clears best; a camera without an aim looks at the sitters with the eyes a third below the top edge; a body hides what stands right behind it.'
+const howInFrame = (unit: LengthUnit) =>
+  `Every head, panel, stand and boom is projected through the camera by its corners. Assumed: a head reaches ${lengthLabel(HEAD_DEPTH_M, unit, true)} behind its face; a boom’s arm is level and turned to where it clears best; a camera without an aim looks at the sitters with the eyes a third below the top edge; a body hides what stands right behind it.`
 
 /** What stands in the picture (red, one each), or else how far the nearest thing clears it (fine). */
-export function frameCautions(whole: WholeSetup, orientations: readonly Orientation[]): Caution[] {
+export function frameCautions(
+  whole: WholeSetup,
+  orientations: readonly Orientation[],
+  unit: LengthUnit = 'm',
+): Caution[] {
   const sights = sightsOf(whole, orientations)
   const lens = `${whole.setup.camera.focalMm} mm`
   const inside = sights.filter((sight) => sight.clearance.marginM < 0)
@@ -158,13 +163,22 @@ export function frameCautions(whole: WholeSetup, orientations: readonly Orientat
       key: `${id}:in-frame`,
       tone: 'red',
       title: `The ${name} is in the picture`,
-      words: `It reaches ${metresLabel(Math.max(0.1, -clearance.marginM))} past the ${clearance.edge} edge at ${lens}. Move it out, or come closer with the camera.`,
+      words: `It reaches ${lengthLabel(Math.max(0.1, -clearance.marginM), unit)} past the ${clearance.edge} edge at ${lens}. Move it out, or come closer with the camera.`,
       lightId,
-      how: HOW,
+      how: howInFrame(unit),
     }))
   }
   const nearest = sights[0]
   if (!nearest) return []
-  const words = `The ${nearest.name} clears the ${nearest.clearance.edge} edge by ${metresLabel(nearest.clearance.marginM)} at ${lens}.`
-  return [{ key: 'out-of-frame', tone: 'fine', title: 'Out of frame', words, lightId: nearest.lightId, how: HOW }]
+  const words = `The ${nearest.name} clears the ${nearest.clearance.edge} edge by ${lengthLabel(nearest.clearance.marginM, unit)} at ${lens}.`
+  return [
+    {
+      key: 'out-of-frame',
+      tone: 'fine',
+      title: 'Out of frame',
+      words,
+      lightId: nearest.lightId,
+      how: howInFrame(unit),
+    },
+  ]
 }

@@ -1,4 +1,5 @@
 import type { WholeSetup } from '#shared/domain/plan/read-plan.ts'
+import { type LengthUnit, lengthLabel } from '#shared/units/length.ts'
 import { isBehindBackground } from './at-sitter.ts'
 import { shifted, stackGels } from './gel.ts'
 import { distanceBetween, facePoint } from './geometry.ts'
@@ -65,14 +66,14 @@ function gelProblems(light: Light, name: string): Problem[] {
   return problems
 }
 
-function placeProblems(light: Light, whole: WholeSetup, name: string): Problem[] {
+function placeProblems(light: Light, whole: WholeSetup, name: string, unit: LengthUnit): Problem[] {
   const face = facePoint(whole)
   const problems: Problem[] = []
   const add = (key: ProblemKey, words: string) => problems.push({ lightId: light.id, key, words })
   if (distanceBetween(light.at, face) < NEAREST_M)
     add(
       'distance',
-      `The ${name} stands on the sitter’s eyes: move one of them. It is read as from ${NEAREST_M * 100} cm.`,
+      `The ${name} stands on the sitter’s eyes: move one of them. It is read as from ${unit === 'm' ? `${NEAREST_M * 100} cm` : lengthLabel(NEAREST_M, unit, true)}.`,
     )
   if (distanceBetween(light.at, light.aim) < 1e-6)
     add(
@@ -89,9 +90,9 @@ function placeProblems(light: Light, whole: WholeSetup, name: string): Problem[]
  * no distance or direction, behind the wall, no colour temperature. Such a light reads 0 or is taken as its sentence
  * says; all others are read as ever.
  */
-export function problemsOf(whole: WholeSetup): Problem[] {
+export function problemsOf(whole: WholeSetup, unit: LengthUnit = 'm'): Problem[] {
   return whole.lights.flatMap((light) => {
     const name = purposeWord(light.purpose).toLowerCase()
-    return [...numberProblems(light, name), ...gelProblems(light, name), ...placeProblems(light, whole, name)]
+    return [...numberProblems(light, name), ...gelProblems(light, name), ...placeProblems(light, whole, name, unit)]
   })
 }

@@ -1,4 +1,5 @@
 import type { WholeSetup } from '#shared/domain/plan/read-plan.ts'
+import type { LengthUnit } from '#shared/units/length.ts'
 import { isBehindBackground, mainFNumberOf } from './at-sitter.ts'
 import { type BoomBalance, boomBalanceOf } from './boom.ts'
 import { ambientExposure, combineFNumbers, fNumberOfExposure } from './exposure.ts'
@@ -120,6 +121,8 @@ export type ReadingOptions = {
   orientations: readonly Orientation[]
   /** Frames of all shots that use the setup; null: no shot. */
   frames: number | null
+  /** What the words of glow, framing and problems say lengths in. */
+  unit: LengthUnit
 }
 
 /** What stands behind the sitter's head on the camera's line: where the wall is read. */
@@ -232,7 +235,7 @@ function readAmbient(whole: WholeSetup, flashFNumber: number): AmbientReading | 
   }
 }
 
-const DEFAULTS: ReadingOptions = { orientations: ['upright'], frames: null }
+const DEFAULTS: ReadingOptions = { orientations: ['upright'], frames: null, unit: 'm' }
 
 /**
  * Everything the numbers of a setup say, at the eyes of the sitter on the origin: readings as f-numbers at the
@@ -242,7 +245,7 @@ const DEFAULTS: ReadingOptions = { orientations: ['upright'], frames: null }
  * good as their sources in the kit. What cannot be worked out is in `problems`, and reads 0.
  */
 export function readSetup(whole: WholeSetup, options: Partial<ReadingOptions> = {}): SetupReading {
-  const { orientations, frames } = { ...DEFAULTS, ...options }
+  const { orientations, frames, unit } = { ...DEFAULTS, ...options }
   const framed = orientations.length > 0 ? orientations : DEFAULTS.orientations
   const { camera, background } = whole.setup
   const face = facePoint(whole)
@@ -290,8 +293,8 @@ export function readSetup(whole: WholeSetup, options: Partial<ReadingOptions> = 
     cameraToSitterM,
     sitterToWallM: (mainPlace(whole.places)?.at[1] ?? 0) - background.zM,
     depth: depthOfField(camera.focalMm, camera.fNumber, Math.max(0.1, cameraToSitterM)),
-    glow: glowOf(whole, framed[0], mainFNumber),
-    framing: framed.map((orientation) => framingOf(whole, orientation)),
+    glow: glowOf(whole, framed[0], mainFNumber, unit),
+    framing: framed.map((orientation) => framingOf(whole, orientation, unit)),
     supplies: suppliesOf(whole.lights, frames),
     sync: syncOf(whole),
     booms: whole.lights.flatMap((light) => {
@@ -299,6 +302,6 @@ export function readSetup(whole: WholeSetup, options: Partial<ReadingOptions> = 
       return balance ? [{ lightId: light.id, ...balance }] : []
     }),
     mains: mainsLoadOf(whole),
-    problems: problemsOf(whole),
+    problems: problemsOf(whole, unit),
   }
 }

@@ -1,11 +1,12 @@
 import type { WholeSetup } from '#shared/domain/plan/read-plan.ts'
+import { type LengthUnit, lengthLabel } from '#shared/units/length.ts'
 import { isBehindBackground } from './at-sitter.ts'
 import { combineFNumbers, exposureOfFNumber, fNumberOfExposure } from './exposure.ts'
 import { facePoint } from './geometry.ts'
 import { arrivalAt, axisOnWall, incidenceShare } from './light-output.ts'
 import type { Light } from './schema.ts'
 import { powersOf, stopsBetween } from './stops.ts'
-import { fNumberLabel, metresLabel, powerLabel, purposeWord } from './words.ts'
+import { fNumberLabel, powerLabel, purposeWord } from './words.ts'
 
 /** What a light shall read where it is read (at the sitter, or on the wall): an f-number, or stops against the mains. */
 export type PowerWish = { lightId: string } & (
@@ -52,13 +53,13 @@ function nearestPower(light: Light, share: number): number {
   )
 }
 
-function wordsFor({ light, name, distanceM }: Ready, offStops: number): string | null {
+function wordsFor({ light, name, distanceM }: Ready, offStops: number, unit: LengthUnit): string | null {
   const stops = Math.abs(offStops)
   if (offStops < -WITHIN_STOPS)
-    return `At full power the ${name} stays ${stops.toFixed(1)} stops under: move it to about ${metresLabel(distanceM * 2 ** (-stops / 2))}, or raise the ISO.`
+    return `At full power the ${name} stays ${stops.toFixed(1)} stops under: move it to about ${lengthLabel(distanceM * 2 ** (-stops / 2), unit)}, or raise the ISO.`
   if (offStops > WITHIN_STOPS) {
     const least = powerLabel(1 / light.unit.numbers.minPowerDenominator)
-    return `At ${least}, its least, the ${name} is ${stops.toFixed(1)} stops over: move it back to about ${metresLabel(distanceM * 2 ** (stops / 2))}, put a gel or diffuser before it, or lower the ISO.`
+    return `At ${least}, its least, the ${name} is ${stops.toFixed(1)} stops over: move it back to about ${lengthLabel(distanceM * 2 ** (stops / 2), unit)}, put a gel or diffuser before it, or lower the ISO.`
   }
   return light.isOn ? null : `The ${name} is off: switch it on.`
 }
@@ -69,7 +70,7 @@ type Target = { fNumber: number | null; words: string | null }
  * Sets a light as near as its unit can to a target; without one it stays as it is and its words say why. Its power is
  * then what the other readings are taken with.
  */
-function settled(ready: Ready, target: Target, iso: number): PowerSuggestion {
+function settled(ready: Ready, target: Target, iso: number, unit: LengthUnit): PowerSuggestion {
   const { light, name, fullLxS } = ready
   const asItIs = (words: string): PowerSuggestion => ({
     lightId: light.id,
@@ -93,7 +94,7 @@ function settled(ready: Ready, target: Target, iso: number): PowerSuggestion {
     readsFNumber,
     readsAgainstMainStops: null,
     offStops,
-    words: wordsFor(ready, offStops),
+    words: wordsFor(ready, offStops, unit),
   }
 }
 
@@ -101,9 +102,13 @@ function settled(ready: Ready, target: Target, iso: number): PowerSuggestion {
  * The power settings of the units (thirds down to their least) that come nearest to the wishes, with what each light
  * then reads. Wishes against the mains are measured against what the mains will really read, all together: those with
  * an f-number as they are set here, and those without a wish as they are. Each light stands alone in its wish; panels
- * follow their lights and are not set. Nothing is written: whoever asks takes the settings over.
+ * follow their lights and are not set. Nothing is written: whoever asks takes the settings over. Words say lengths in `unit`.
  */
-export function suggestPower(whole: WholeSetup, wishes: readonly PowerWish[]): PowerSuggestion[] {
+export function suggestPower(
+  whole: WholeSetup,
+  wishes: readonly PowerWish[],
+  unit: LengthUnit = 'm',
+): PowerSuggestion[] {
   const { iso } = whole.setup.camera
   const wishOf = new Map(wishes.map((wish) => [wish.lightId, wish]))
   const lights = whole.lights.map((light) => readyAt(light, whole))
@@ -113,7 +118,7 @@ export function suggestPower(whole: WholeSetup, wishes: readonly PowerWish[]): P
     if (!wish || !('fNumber' in wish)) continue
     const isGiven = Number.isFinite(wish.fNumber) && wish.fNumber > 0
     const words = isGiven ? null : `${fNumberLabel(0)} is no f-number to reach: put in one above 0, such as 5.6.`
-    settledBy.set(ready.light.id, settled(ready, { fNumber: isGiven ? wish.fNumber : null, words }, iso))
+    settledBy.set(ready.light.id, settled(ready, { fNumber: isGiven ? wish.fNumber : null, words }, iso, unit))
   }
   const mains = lights.flatMap(({ light, fullLxS }) => {
     const set = settledBy.get(light.id)
@@ -131,7 +136,7 @@ export function suggestPower(whole: WholeSetup, wishes: readonly PowerWish[]): P
     const isGiven = main > 0 && Number.isFinite(wish.againstMainStops)
     settledBy.set(
       ready.light.id,
-      settled(ready, { fNumber: isGiven ? main * 2 ** (wish.againstMainStops / 2) : null, words }, iso),
+      settled(ready, { fNumber: isGiven ? main * 2 ** (wish.againstMainStops / 2) : null, words }, iso, unit),
     )
   }
   return lights.flatMap(({ light }) => {

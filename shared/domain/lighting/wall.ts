@@ -1,4 +1,5 @@
 import type { WholeSetup } from '#shared/domain/plan/read-plan.ts'
+import { type LengthUnit, lengthLabel } from '#shared/units/length.ts'
 import { mainFNumberOf } from './at-sitter.ts'
 import { exposureOfFNumber, fNumberOfExposure } from './exposure.ts'
 import { type Orientation, type View, projected, rayThrough, viewOf } from './frame.ts'
@@ -7,7 +8,6 @@ import { mainPlace } from './geometry.ts'
 import { type Emission, axisOnWall, emissionOf, exposureOnWall } from './light-output.ts'
 import { ownColourK } from './light-source.ts'
 import type { Point } from './schema.ts'
-import { metresLabel } from './words.ts'
 
 /** The part of the wall that the camera sees, as an upright rectangle about it, metres. */
 type Span = { leftM: number; rightM: number; bottomM: number; topM: number }
@@ -200,7 +200,7 @@ function patchOf(wall: Wall, span: Span, peak: Peak, stops: number): Patch {
   return { leftM, rightM, bottomM, topM, widthM: rightM - leftM, heightM: topM - bottomM, isCut }
 }
 
-function shouldersOf(whole: WholeSetup, patch: Patch): Glow['shoulders'] {
+function shouldersOf(whole: WholeSetup, patch: Patch, unit: LengthUnit): Glow['shoulders'] {
   const place = mainPlace(whole.places)
   const { camera, background } = whole.setup
   if (!place) return null
@@ -208,14 +208,15 @@ function shouldersOf(whole: WholeSetup, patch: Patch): Glow['shoulders'] {
   if (run <= 1e-6) return null
   const share = (camera.at[2] - background.zM) / run
   const y = camera.at[1] + (place.eyeHeightM - SHOULDERS_BELOW_EYES_M - camera.at[1]) * share
-  return { heightOnWallM: y, words: shoulderWords(patch, y) }
+  return { heightOnWallM: y, words: shoulderWords(patch, y, unit) }
 }
 
-function shoulderWords({ bottomM, topM }: Patch, shouldersM: number): string {
+function shoulderWords({ bottomM, topM }: Patch, shouldersM: number, unit: LengthUnit): string {
   const part = 'The part within a stop of its peak'
-  if (bottomM > shouldersM + 0.05) return `${part} stays ${metresLabel(bottomM - shouldersM)} above the shoulders.`
+  if (bottomM > shouldersM + 0.05)
+    return `${part} stays ${lengthLabel(bottomM - shouldersM, unit)} above the shoulders.`
   if (topM < shouldersM)
-    return `${part} lies behind the body, ${metresLabel(shouldersM - topM)} under the line of the shoulders.`
+    return `${part} lies behind the body, ${lengthLabel(shouldersM - topM, unit)} under the line of the shoulders.`
   const above = Math.round(((topM - shouldersM) / (topM - bottomM)) * 10) * 10
   return above >= 100
     ? `${part} rises from the shoulders.`
@@ -224,13 +225,14 @@ function shoulderWords({ bottomM, topM }: Patch, shouldersM: number): string {
 
 /**
  * The glow on the wall as the camera sees it: its brightest point, how large the part within one and two stops of it
- * is, its colour, and how it meets the shoulders of the sitter on the mark. Computed as `wallMap` is. Null where the
- * camera sees no lit wall.
+ * is, its colour, and how it meets the shoulders of the sitter on the mark. Computed as `wallMap` is; words say
+ * lengths in `unit`. Null where the camera sees no lit wall.
  */
 export function glowOf(
   whole: WholeSetup,
   orientation: Orientation = 'upright',
   mainFNumber: number | null = mainFNumberOf(whole),
+  unit: LengthUnit = 'm',
 ): Glow | null {
   const wall = wallOf(whole, orientation)
   const span = seenSpan(wall)
@@ -261,6 +263,6 @@ export function glowOf(
     kelvin: mired > 0 ? 1e6 / mired : null,
     mired,
     miredFromWhite: mired - miredOf(whiteBalanceK),
-    shoulders: shouldersOf(whole, withinOneStop),
+    shoulders: shouldersOf(whole, withinOneStop, unit),
   }
 }

@@ -261,7 +261,7 @@ export function sheetOf(whole: WholeSetup, use: Pick<SetupUse, 'orientations' | 
     readings: readingLines(whole, reading, unit),
     camera: cameraLines(whole, reading, unit),
     kit: kitList(whole),
-    cautions: cautionsOf(whole, { orientations: use.orientations, frames: use.frames }, reading).map(
+    cautions: cautionsOf(whole, { orientations: use.orientations, frames: use.frames, unit }, reading).map(
       ({ key, tone, title, words }) => ({ key, tone, title, words }),
     ),
   }

@@ -92,6 +92,17 @@ describe('cautionsOf', () => {
     )
   })
 
+  it('says every length in feet when asked to', () => {
+    const high = main({ at: [-1.2, 2.6, 1.2], modifier: OCTA })
+    const boomed = light(2, { purpose: 'fill', at: [0.2, 1.6, 0.3], aim: FACE, support: BOOM })
+    const all = cautionsOf(whole({ lights: [high, boomed], camera: right(6) }), { frames: 40, unit: 'ft' })
+    const text = all.map(({ words, how }) => `${words} ${how}`).join(' ')
+    // 2.6 m and 2.4 m in whole inches of 0.0254 m (NIST SP 811).
+    expect(text).toContain('drawn at 8′ 6″; the support goes to 7′ 10″')
+    expect(text).toContain('sq ft')
+    expect(text).not.toMatch(/\d (m|cm|m²)\b/)
+  })
+
   it('says nothing of an empty setup', () => {
     expect(cautionsOf(whole({}), { frames: 40 })).toEqual([])
   })

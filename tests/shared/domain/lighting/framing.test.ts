@@ -52,6 +52,8 @@ describe('framingOf', () => {
     expect(close.headRoomM).toBeLessThan(0)
     expect(close.words).toBe('Face, the top edge cuts the head.')
     expect(framingOf(level(3), 'upright').words).toBe('Half length, 0.5 m above the head.')
+    // 0.5 m in whole inches.
+    expect(framingOf(level(3), 'upright', 'ft').words).toMatch(/^Half length, 1′ \d+″ above the head\.$/)
     const setup = level(3)
     const beside = { id: id(802), setupId: setup.setup.id, eyeHeightM: 1.5 }
     setup.places.push(sitterPlaceSchema.parse({ ...beside, at: [0.4, 0] }))

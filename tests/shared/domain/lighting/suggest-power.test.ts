@@ -46,6 +46,13 @@ describe('suggestPower', () => {
     expect(only).toMatchObject({ power: 1 })
     expect(only?.offStops).toBeCloseTo(-2, 2)
     expect(only?.words).toBe('At full power the main stays 2.0 stops under: move it to about 1.0 m, or raise the ISO.')
+    const [inFeet] = suggestPower(
+      whole({ lights: [main({ modifier: null })] }),
+      [{ lightId: id(1), fNumber: 40 }],
+      'ft',
+    )
+    // 1 m is 39.4 inches.
+    expect(inFeet?.words).toContain('move it to about 3′ 3″,')
   })
 
   it('says how much it is too strong at its least', () => {

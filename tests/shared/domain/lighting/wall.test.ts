@@ -156,6 +156,9 @@ describe('glowOf', () => {
     expect(at(1.5 - (0.22 * 5) / 3)?.shoulders?.words).toMatch(
       /meets the shoulders: 50 % of its height shows above them\.$/,
     )
+    const high = setupOf([window({ at: [0, 2, -1], aim: [0, 2, -2], modifier: NARROW })])
+    // 0.8 m is 31 inches and a half.
+    expect(glowOf(high, 'upright', null, 'ft')?.shoulders?.words).toMatch(/stays 2′ \d″ above the shoulders\.$/)
     const nobody = setupOf([window()])
     expect(glowOf({ ...nobody, places: [] })?.shoulders).toBeNull()
   })

@@ -74,11 +74,11 @@ export function makeHead(seed: number, style: HairStyle): HeadShape {
     const bow = 0.0012 * (1 - ease(0, 0.007, x))
     d = smoothMin(
       d,
-      capsule(x, y + bow, z, 0.003, -0.0684, 0.0972, 0.0255, -0.0716, 0.0888, 0.0045 + lipFull, 0.0018),
+      capsule(x, y + bow, z, 0, -0.0686, 0.0958, 0.0262, -0.0703, 0.0868, 0.0043 + lipFull, 0.0018),
       0.0042,
     )
-    d = smoothMin(d, capsule(x, y, z, 0, -0.0787, 0.0953, 0.0215, -0.0742, 0.0882, 0.0056 + lipFull, 0.0022), 0.0042)
-    d = smoothMax(d, -capsule(x, y, z, 0, -0.0731, 0.1042, 0.026, -0.0716, 0.0935, 0.0011, 0.001), 0.003)
+    d = smoothMin(d, capsule(x, y, z, 0, -0.0783, 0.0943, 0.0222, -0.0731, 0.0868, 0.0054 + lipFull, 0.0022), 0.0042)
+    d = smoothMax(d, -capsule(x, y, z, 0, -0.0731, 0.1028, 0.027, -0.0702, 0.0915, 0.0011, 0.001), 0.003)
     d = smoothMax(d, -capsule(x, y, z, 0, -0.0895, 0.0985, 0.012, -0.088, 0.0955, 0.0034, 0.0024), 0.008)
     // Lids: a shell on the eye with an almond opening.
     const u = x - EYE.x
@@ -95,7 +95,7 @@ export function makeHead(seed: number, style: HairStyle): HeadShape {
     d = smoothMin(d, fold, 0.0042)
     if (w > 0) d = smoothMax(d, -Math.max(opening * 0.85, -0.012), 0.0012)
     // Ears.
-    const ex = x - 0.0765
+    const ex = x - 0.0745
     const ey = y + 0.012
     const ez = z + 0.006
     const ear = ellipsoid(ex + ez * 0.35, ey - ez * 0.25, ez + ey * 0.2, 0.0065, 0.029, 0.0165)
@@ -115,7 +115,7 @@ export function makeHead(seed: number, style: HairStyle): HeadShape {
     const x = Math.abs(sx) / wide
     const front = ease(0.055, 0.075, z)
     const across = clamp(x / 0.0268, 0, 1)
-    const mouth = -0.0731 + 0.0015 * across * across
+    const mouth = -0.0731 + 0.0029 * across * across
     const high = 0.0058 * (1 - across * across) - 0.0014 * (1 - ease(0, 0.006, x)) + lipFull
     const low = 0.0078 * (1 - across * across * 1.1) + lipFull
     const lips = across < 1 ? ease(0.0012, -0.0006, Math.max(y - mouth - high, mouth - low - y)) * front : 0
@@ -204,15 +204,18 @@ function makeHair(seed: number, style: HairStyle, wide: number): HeadShape['hair
         // A curtain down both sides and the back.
         const hang = clamp(-y, 0, 0.26)
         const bulge = isLong ? 0.012 * hang : 0.05 * hang * (1 - hang * 6)
-        const rad = Math.hypot(x / (0.0825 + bulge), (z + 0.01) / (0.1 + bulge * 0.4))
-        const shell = (rad - 1) * 0.075
+        // Above the ears it follows the skull, so that it grows out of the cap without an edge.
+        const over = clamp(y - 0.02, 0, 0.1) / 0.11
+        const drawn = Math.sqrt(1 - over * over)
+        const rad = Math.hypot(x / ((0.0868 + bulge) * drawn), (z + 0.01) / ((0.1 + bulge * 0.4) * drawn))
+        const shell = (rad - 1) * 0.07
         const curtain = smoothMax(
-          Math.max(shell, y - 0.045),
+          smoothMax(shell, y - 0.085, 0.03),
           low - y + (isLong ? 0.02 * noise(sx * 30, 0, z * 30) : 0),
           0.012,
         )
         const open = ellipsoid(x, y + 0.09, z - 0.082, 0.0635 + hang * 0.04, 0.165, 0.075)
-        const full = smoothMin(cap, curtain, 0.007) - 0.0016 * strands(sx, y, z, 210) - 0.0028 * strands(sx, y, z, 60)
+        const full = smoothMin(cap, curtain, 0.016) - 0.0016 * strands(sx, y, z, 210) - 0.0028 * strands(sx, y, z, 60)
         return smoothMax(smoothMax(full, -face(x, y, z, 0.064), 0.006), -open, 0.008)
       }
     }

@@ -2,7 +2,7 @@ import { useMemo } from 'react'
 import { placeIdSchema, type LightId, type PlaceId, type PropId, type SetupId } from '#shared/ids.ts'
 import type { Background, Camera, Point, PROP_KINDS } from '#shared/domain/lighting/schema.ts'
 import { lights, props, setups, sitterPlaces } from '#shared/realtime/documents.ts'
-import { type Patch, patchItem, putItems, removeItems } from '#shared/realtime/collection.ts'
+import { LOCAL_ORIGIN, type Patch, patchItem, putItems, removeItems } from '#shared/realtime/collection.ts'
 import type { WholeSetup } from '#shared/domain/plan/read-plan.ts'
 import { newId } from '#src/lib/new-id.ts'
 import { useDoc } from '#src/realtime/shoot-realtime.tsx'
@@ -10,12 +10,16 @@ import { type Undo, useUndo } from '#src/realtime/use-undo.ts'
 import { duplicateLight, newLight, newProp, type NewLight, shiftedRank } from './new-items.ts'
 import { type DrawingKind, type Part, moved, partKey, partsOf, pointOf } from './parts.ts'
 
+export type LightPatch = { id: LightId; patch: Patch<typeof lights> }
+
 export type SetupWriter = {
   undo: Undo
   patchSetup(patch: Patch<typeof setups>): void
   patchCamera(patch: Partial<Camera>): void
   patchBackground(patch: Partial<Background>): void
   patchLight(id: LightId, patch: Patch<typeof lights>): void
+  /** Several lights at once, as one step of undo. */
+  patchLights(patches: readonly LightPatch[]): void
   patchPlace(id: PlaceId, patch: Patch<typeof sitterPlaces>): void
   patchProp(id: PropId, patch: Patch<typeof props>): void
   addLight(light: NewLight): LightId
@@ -48,6 +52,12 @@ export function useSetupWriter(whole: WholeSetup): SetupWriter {
     }
     const patchSetup = (patch: Patch<typeof setups>) => step(() => patchItem(doc, setups, setupId, patch))
     const patchLight = (id: LightId, patch: Patch<typeof lights>) => step(() => patchItem(doc, lights, id, patch))
+    const patchLights = (patches: readonly LightPatch[]) =>
+      step(() =>
+        doc.transact(() => {
+          for (const { id, patch } of patches) patchItem(doc, lights, id, patch)
+        }, LOCAL_ORIGIN),
+      )
     const patchPlace = (id: PlaceId, patch: Patch<typeof sitterPlaces>) =>
       step(() => patchItem(doc, sitterPlaces, id, patch))
     const patchProp = (id: PropId, patch: Patch<typeof props>) => step(() => patchItem(doc, props, id, patch))
@@ -74,6 +84,7 @@ export function useSetupWriter(whole: WholeSetup): SetupWriter {
       patchCamera: (patch: Partial<Camera>) => patchSetup({ camera: { ...camera, ...patch } }),
       patchBackground: (patch: Partial<Background>) => patchSetup({ background: { ...background, ...patch } }),
       patchLight,
+      patchLights,
       patchPlace,
       patchProp,
       addLight(input: NewLight) {

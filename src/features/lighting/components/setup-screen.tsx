@@ -7,6 +7,7 @@ import { readSetup } from '#shared/domain/lighting/readings.ts'
 import { purposeWord } from '#shared/domain/lighting/words.ts'
 import type { Plan, WholeSetup } from '#shared/domain/plan/read-plan.ts'
 import { sitters as sittersOf } from '#shared/realtime/documents.ts'
+import { useLengthUnit } from '#src/lib/length-unit.ts'
 import { useMayWrite, useShoot } from '#src/realtime/shoot-realtime.tsx'
 import { useItems } from '#src/realtime/use-items.ts'
 import { usePlan } from '#src/realtime/use-plan.ts'
@@ -29,10 +30,13 @@ import { useSetups, wholeItems } from '../use-setups.ts'
 import { AddLight } from './add-light.tsx'
 import { FrameStrip } from './frames/frame-strip.tsx'
 import { LargeView } from './frames/large-view.tsx'
+import { MeterReadings } from './meter/meter-readings.tsx'
+import { NewerNumbers } from './meter/newer-numbers.tsx'
 import { NextStepLine } from './next-step-line.tsx'
 import { PlanDrawing } from './plan/plan-drawing.tsx'
 import { SideDrawing } from './plan/side-drawing.tsx'
 import { Overview } from './readings/overview.tsx'
+import { useOpenGroups } from './readings/use-open-groups.ts'
 import { useRecipeDialogs } from './recipe/use-recipe-dialogs.tsx'
 import { SetupEditor, isPartOf } from './setup-editor.tsx'
 import { UnitSwitch, useUnitAction } from './unit-switch.tsx'
@@ -68,6 +72,9 @@ function Setup({ plan, whole }: { plan: Plan; whole: WholeSetup }) {
   const [chosen, setChosen] = useState<string | null>(null)
   const [isSheetOpen, setIsSheetOpen] = useState(false)
   const [adding, setAdding] = useState<LightPurpose | 'any' | null>(null)
+  const [isMetering, setIsMetering] = useState(false)
+  const groups = useOpenGroups()
+  const lengthUnit = useLengthUnit()
   const [openStage, setOpenStage] = useState<string | null>(null)
   const setups = useSetups()
   const recipes = useRecipeDialogs(useSheetFrames(plan))
@@ -97,11 +104,12 @@ function Setup({ plan, whole }: { plan: Plan; whole: WholeSetup }) {
   const peers = usePeerMoves(whole)
   const ownMoves = useMemo(() => new Map(moving.held ? [[moving.held.key, moving.held.at]] : []), [moving.held])
   const shown = useMemo(() => withMoves(withMoves(whole, peers.moves), ownMoves), [whole, peers.moves, ownMoves])
-  const reading = useMemo(() => readSetup(shown), [shown])
-  const cautions = useMemo(
-    () => cautionsOf(shown, { orientations: use.orientations, frames: use.frames }, reading),
-    [shown, use, reading],
+  const asked = useMemo(
+    () => ({ orientations: use.orientations, frames: use.frames, unit: lengthUnit }),
+    [use, lengthUnit],
   )
+  const reading = useMemo(() => readSetup(shown, asked), [shown, asked])
+  const cautions = useMemo(() => cautionsOf(shown, asked, reading), [shown, asked, reading])
   const orientation = widestOf(use.orientations)
   const frames = useFrames(plan, shown, reading, use.orientations[0] ?? 'upright')
   useUndoKeys(writer.undo)
@@ -116,6 +124,8 @@ function Setup({ plan, whole }: { plan: Plan; whole: WholeSetup }) {
     <Overview
       whole={shown}
       reading={reading}
+      use={use}
+      groups={groups}
       cautions={cautions}
       writer={writer}
       mayWrite={mayWrite}
@@ -147,12 +157,14 @@ function Setup({ plan, whole }: { plan: Plan; whole: WholeSetup }) {
   const chosenLight = whole.lights.find((light) => chosenKey === light.id || chosenKey === `${light.id}:aim`)
   const onPhone = (items: readonly { label: string; onSelect: () => void }[]) =>
     items.map(({ label, onSelect }) => ({ label, onPress: onSelect }))
+  const meterAction = { label: 'Meter readings', variant: 'quiet' as const, onPress: () => setIsMetering(true) }
   const readerActions = [...onPhone(recipes.itemsOf(whole)), unitAction]
   const phoneActions = [...onPhone(wholeItems(whole, setups)), ...readerActions]
   const actions = mayWrite
     ? [
         { label: 'Undo', variant: 'quiet' as const, disabled: !writer.undo.canUndo, onPress: writer.undo.undo },
         { label: 'Redo', variant: 'quiet' as const, disabled: !writer.undo.canRedo, onPress: writer.undo.redo },
+        meterAction,
         ...(isPhone ? phoneActions : []),
         { label: 'Add a light', variant: 'primary' as const, onPress: () => setAdding('any') },
       ]
@@ -211,6 +223,7 @@ function Setup({ plan, whole }: { plan: Plan; whole: WholeSetup }) {
           aria-label="Numbers of the setup"
           className="bg-paper px-[18px] py-4 md:min-h-0 md:overflow-y-auto md:border-l md:border-hair md:px-5 md:py-3.5"
         >
+          {(isPhone || editor === false) && <NewerNumbers whole={whole} kit={kit} writer={writer} />}
           {isPhone || editor === false ? overview : editor}
         </aside>
       </div>
@@ -231,6 +244,14 @@ function Setup({ plan, whole }: { plan: Plan; whole: WholeSetup }) {
           onClose={() => setOpenStage(null)}
         />
       )}
+      <MeterReadings
+        whole={whole}
+        reading={reading}
+        kit={kit}
+        writer={writer}
+        open={isMetering}
+        onOpenChange={setIsMetering}
+      />
       <AddLight
         open={adding !== null}
         onOpenChange={(isOpen) => {

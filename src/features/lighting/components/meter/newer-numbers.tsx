@@ -1,10 +1,8 @@
 import { useMemo } from 'react'
 import { purposeWord } from '#shared/domain/lighting/words.ts'
 import type { WholeSetup } from '#shared/domain/plan/read-plan.ts'
-import { LOCAL_ORIGIN, patchItem } from '#shared/realtime/collection.ts'
-import { lights } from '#shared/realtime/documents.ts'
 import { count, today } from '#src/lib/format.ts'
-import { useDoc, useMayWrite } from '#src/realtime/shoot-realtime.tsx'
+import { useMayWrite } from '#src/realtime/shoot-realtime.tsx'
 import { usePlan } from '#src/realtime/use-plan.ts'
 import { Button } from '#src/ui/button.tsx'
 import { Caution } from '#src/ui/caution.tsx'
@@ -16,20 +14,11 @@ type NewerNumbersProps = { whole: WholeSetup; kit: Kit; writer: SetupWriter }
 
 /** Offers what the kit room says newer of a setup's lights, as one step of undo; shoots that are past keep theirs. */
 export function NewerNumbers({ whole, kit, writer }: NewerNumbersProps) {
-  const doc = useDoc('lighting')
   const mayWrite = useMayWrite('lighting')
   const { date } = usePlan().brief
   const newer = useMemo(() => newerNumbersOf(whole, kit), [whole, kit])
   const isPast = date !== null && date < today()
   if (newer.length === 0 || !mayWrite || isPast) return null
-
-  function takeOver() {
-    writer.undo.stop()
-    doc.transact(() => {
-      for (const { light, patch } of newer) patchItem(doc, lights, light.id, patch)
-    }, LOCAL_ORIGIN)
-    writer.undo.stop()
-  }
 
   return (
     <Caution
@@ -44,7 +33,10 @@ export function NewerNumbers({ whole, kit, writer }: NewerNumbersProps) {
           </li>
         ))}
       </ul>
-      <Button size="small" onClick={takeOver}>
+      <Button
+        size="small"
+        onClick={() => writer.patchLights(newer.map(({ light, patch }) => ({ id: light.id, patch })))}
+      >
         Take them over
       </Button>
     </Caution>

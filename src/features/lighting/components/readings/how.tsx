@@ -30,7 +30,7 @@ export function How({ label, value, children }: HowProps) {
   )
 }
 
-export type InputRow = [name: string, value: ReactNode, from?: string]
+export type InputRow = [name: string, value: ReactNode, from?: string | undefined]
 
 /** Formula at the top, then what went in, then where it comes from. */
 export function Workings({

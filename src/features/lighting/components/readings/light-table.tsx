@@ -1,17 +1,17 @@
-import type { LightReading, SetupReading } from '#shared/domain/lighting/readings.ts'
-import type { Light } from '#shared/domain/lighting/schema.ts'
-import {
-  fNumberLabel,
-  inSentence,
-  metresLabel,
-  powerLabel,
-  purposeWord,
-  stopsLabel,
-} from '#shared/domain/lighting/words.ts'
+import { type ReactNode, useId } from 'react'
+import type { LightId } from '#shared/ids.ts'
+import { reflectanceOf } from '#shared/domain/lighting/panel.ts'
+import type { LightReading, PanelReading, SetupReading } from '#shared/domain/lighting/readings.ts'
+import { type Light, isLamp } from '#shared/domain/lighting/schema.ts'
+import { fNumberLabel, inSentence, powerLabel, stopsLabel } from '#shared/domain/lighting/words.ts'
 import type { WholeSetup } from '#shared/domain/plan/read-plan.ts'
+import { lightNames } from '#shared/domain/recipes/sheet.ts'
 import { cn } from '#src/lib/cn.ts'
+import { lengthLabel, useLengthUnit } from '#src/lib/length-unit.ts'
+import { listed, provenanceOf, sizeLabel } from '../../reading-words.ts'
 import { GroupLetter } from '../group-letter.tsx'
-import { How, Workings } from './how.tsx'
+import { How, type InputRow, Workings } from './how.tsx'
+import { LightSwitch } from './light-switch.tsx'
 import { LightWorkings } from './light-workings.tsx'
 
 type LightTableProps = {
@@ -19,74 +19,61 @@ type LightTableProps = {
   reading: SetupReading
   chosenKey: string | null
   onChoose: (key: string) => void
+  /** Left out for those who only read. */
+  onSwitch?: ((id: LightId, isOn: boolean) => void) | undefined
+  /** At the end of the title's line. */
+  aside?: ReactNode
 }
 
+type Row = { light: Light; own: LightReading; name: string }
+
 /** Each light with what it gives, and panels with what they give back. */
-export function LightTable({ whole, reading, chosenKey, onChoose }: LightTableProps) {
-  const rows = whole.lights.flatMap((light) => {
+export function LightTable({ whole, reading, chosenKey, onChoose, onSwitch, aside }: LightTableProps) {
+  const names = lightNames(whole.lights)
+  const rows = whole.lights.flatMap((light, index): Row[] => {
     const own = reading.lights.find((entry) => entry.lightId === light.id)
-    return own ? [{ light, own }] : []
+    return own ? [{ light, own, name: names[index] ?? '' }] : []
   })
   const atSitter = rows.filter(({ own }) => own.where === 'sitter')
   const onWall = rows.filter(({ own }) => own.where === 'wall')
   const panels = reading.panels.filter((panel) => panel.fNumber > 0)
+  const row = (entry: Row) => (
+    <LightRow
+      key={entry.light.id}
+      {...entry}
+      whole={whole}
+      reading={reading}
+      chosen={chosenKey === entry.light.id}
+      onChoose={onChoose}
+      onSwitch={onSwitch}
+    />
+  )
+  const guessed = rows.filter(({ light, own }) => own.isOn && provenanceOf(light, own) === 'assumed')
   return (
     <>
       {(atSitter.length > 0 || panels.length > 0) && (
         <section aria-labelledby="at-the-sitter">
-          <h2 id="at-the-sitter" className="mb-1 text-[1.1875rem]">
-            At the sitter
-          </h2>
-          <table className="w-full text-sm">
+          <div className="mb-1 flex min-h-8 items-center justify-between gap-3">
+            <h2 id="at-the-sitter" className="text-[1.1875rem]">
+              At the sitter
+            </h2>
+            {aside}
+          </div>
+          <div role="table" aria-labelledby="at-the-sitter" className="text-sm">
             <Head />
-            <tbody>
-              {atSitter.map(({ light, own }) => (
-                <LightRow
-                  key={light.id}
-                  light={light}
-                  own={own}
-                  iso={reading.iso}
-                  chosen={chosenKey === light.id}
-                  onChoose={onChoose}
-                />
-              ))}
-              {panels.map((panel) => (
-                <tr
-                  key={panel.propId}
-                  className={cn('border-t border-hair-soft', chosenKey === panel.propId && 'bg-draft-wash/60')}
-                >
-                  <td className="py-1.5 pr-2">
-                    <GroupLetter group={null} />
-                  </td>
-                  <td className="py-1.5 pr-2">
-                    <RowButton
-                      onPress={() => onChoose(panel.propId)}
-                      title={panel.name}
-                      sub={`${metresLabel(panel.distanceM)} off`}
-                    />
-                  </td>
-                  <td className="py-1.5 pr-2 text-right text-ink-faint" title="It has no power of its own">
-                    –
-                  </td>
-                  <td className="py-1.5 pr-2 text-right">
-                    <How label={`${panel.name} reads`} value={fNumberLabel(panel.fNumber)}>
-                      <Workings
-                        formula="E = ρ · E₀ · A · cos φ / (π · d² + A)"
-                        inputs={[
-                          ['Distance to the eyes, d', `${panel.distanceM.toFixed(2)} m`],
-                          ['Reads', `f/${panel.fNumber.toFixed(2)}`],
-                        ]}
-                        note="One matte patch of its own colour, lit by main and fill; walls and ceiling give nothing back (assumed). A meter decides."
-                      />
-                    </How>
-                  </td>
-                  <td className="py-1.5 text-right">
-                    {panel.underMainStops === null ? '' : stopsLabel(-panel.underMainStops)}
-                  </td>
-                </tr>
-              ))}
-            </tbody>
-          </table>
+            {atSitter.map(row)}
+            {panels.map((panel) => (
+              <PanelRow
+                key={panel.propId}
+                panel={panel}
+                whole={whole}
+                reading={reading}
+                chosen={chosenKey === panel.propId}
+                onChoose={onChoose}
+              />
+            ))}
+            <TotalRow whole={whole} reading={reading} />
+          </div>
         </section>
       )}
       {onWall.length > 0 && (
@@ -94,79 +81,231 @@ export function LightTable({ whole, reading, chosenKey, onChoose }: LightTablePr
           <h2 id="on-the-wall" className="mb-1 text-[1.1875rem]">
             On the wall
           </h2>
-          <table className="w-full text-sm">
+          <div role="table" aria-labelledby="on-the-wall" className="text-sm">
             <Head hidden />
-            <tbody>
-              {onWall.map(({ light, own }) => (
-                <LightRow
-                  key={light.id}
-                  light={light}
-                  own={own}
-                  iso={reading.iso}
-                  chosen={chosenKey === light.id}
-                  onChoose={onChoose}
-                />
-              ))}
-            </tbody>
-          </table>
+            {onWall.map(row)}
+          </div>
         </section>
+      )}
+      {guessed.length > 0 && (
+        <p className="mt-1.5 text-xs text-ink-soft">
+          Assumed numbers in {listed(guessed.map(({ name }) => inSentence(name)))}: a meter reading takes their place.
+        </p>
       )}
     </>
   )
 }
 
+/** Columns: group, light, power, reads, vs main, switch. What a light is made of runs under its numbers. */
+const ROW =
+  'relative grid grid-cols-[1.75rem_minmax(0,1fr)_auto_3.1rem_2.9rem_2.25rem] items-center gap-x-2 max-md:grid-cols-[1.75rem_minmax(0,1fr)_auto_3.1rem_2.6rem_2.75rem]'
+const NUMBER = 'relative z-[1] justify-self-end text-right whitespace-nowrap max-md:-my-2.5'
+
 function Head({ hidden = false }: { hidden?: boolean }) {
   return (
-    <thead className={hidden ? 'sr-only' : ''}>
-      <tr className="text-xs whitespace-nowrap text-ink-soft [&>th]:pb-1.5 [&>th]:font-semibold">
-        <th className="w-8">
+    <div role="rowgroup" className={hidden ? 'sr-only' : ''}>
+      <div role="row" className={cn(ROW, 'pb-1.5 text-xs font-semibold whitespace-nowrap text-ink-soft')}>
+        <span role="columnheader">
           <span className="sr-only">Group</span>
-        </th>
-        <th className="text-left">Light</th>
-        <th className="pr-2 text-right">Power</th>
-        <th className="pr-2 text-right">Reads</th>
-        <th className="text-right">vs main</th>
-      </tr>
-    </thead>
+        </span>
+        <span role="columnheader">Light</span>
+        <span role="columnheader" className="text-right">
+          Power
+        </span>
+        <span role="columnheader" className="text-right">
+          Reads
+        </span>
+        <span role="columnheader" className="text-right">
+          vs main
+        </span>
+        <span role="columnheader">
+          <span className="sr-only">On or off</span>
+        </span>
+      </div>
+    </div>
   )
 }
 
-type LightRowProps = { light: Light; own: LightReading; iso: number; chosen: boolean; onChoose: (key: string) => void }
+type LightRowProps = Row &
+  Pick<LightTableProps, 'whole' | 'reading' | 'onChoose' | 'onSwitch'> & {
+    chosen: boolean
+  }
 
-function LightRow({ light, own, iso, chosen, onChoose }: LightRowProps) {
+function LightRow({ light, own, name, whole, reading, chosen, onChoose, onSwitch }: LightRowProps) {
+  const unit = useLengthUnit()
+  const { camera } = whole.setup
   const made = [light.modifier, ...light.gels].flatMap((part) => (part ? [inSentence(part.name)] : []))
-  const sub = [...(made.length === 0 ? ['bare'] : made), metresLabel(own.distanceM)].join(' · ')
-  const name = purposeWord(light.purpose)
+  const sub = [
+    ...(made.length === 0 ? ['bare'] : made),
+    lengthLabel(own.distanceM, unit),
+    ...(own.measured === null || isLamp(light.unit.numbers) ? [] : ['measured']),
+  ].join(' · ')
+  const problems = reading.problems.filter((problem) => problem.lightId === light.id)
   return (
-    <tr className={cn('border-t border-hair-soft align-middle', chosen && 'bg-draft-wash/60')}>
-      <td className="py-1.5 pr-2">
+    <div
+      role="row"
+      className={cn(
+        ROW,
+        'border-t border-hair-soft py-1.5',
+        chosen && 'bg-draft-wash/60',
+        !own.isOn && 'text-ink-faint',
+      )}
+    >
+      <span role="cell" className="row-span-2">
         <GroupLetter group={light.group} />
-      </td>
-      <td className="min-w-0 py-1.5 pr-2">
-        <RowButton onPress={() => onChoose(light.id)} title={name} sub={sub} />
-      </td>
-      <td className="py-1.5 pr-2 text-right whitespace-nowrap">{powerLabel(light.power)}</td>
-      <td className="py-1.5 pr-2 text-right whitespace-nowrap">
-        <How label={`${name} reads`} value={fNumberLabel(own.fNumber)}>
-          <LightWorkings light={light} reading={own} iso={iso} />
-        </How>
-      </td>
-      <td className="py-1.5 text-right whitespace-nowrap">
-        {own.underMainStops === null ? '' : stopsLabel(-own.underMainStops)}
-      </td>
-    </tr>
+      </span>
+      <RowHead title={name} sub={sub} onPress={() => onChoose(light.id)}>
+        {problems.map((problem) => (
+          <span
+            key={problem.key}
+            className="col-start-2 col-end-7 border-l-2 border-velvet pl-2 text-xs leading-snug text-velvet"
+          >
+            {problem.words}
+          </span>
+        ))}
+      </RowHead>
+      <span role="cell" className={cn(NUMBER, 'col-start-3 row-start-1')}>
+        {powerLabel(light.power)}
+      </span>
+      <span role="cell" className={cn(NUMBER, 'col-start-4 row-start-1')}>
+        {own.isOn ? (
+          <How label={`${name} reads`} value={fNumberLabel(own.fNumber)}>
+            <LightWorkings light={light} reading={own} iso={camera.iso} shutterS={camera.shutterS} />
+          </How>
+        ) : (
+          'off'
+        )}
+      </span>
+      <span role="cell" className={cn(NUMBER, 'col-start-5 row-start-1')}>
+        {own.underMainStops !== null && reading.mainFNumber !== null && (
+          <AgainstMain
+            label={name}
+            underStops={own.underMainStops}
+            fNumber={own.fNumber}
+            mainFNumber={reading.mainFNumber}
+          />
+        )}
+      </span>
+      <span role="cell" className="relative z-[1] col-start-6 row-span-2 row-start-1 -mr-1.5 justify-self-end">
+        {onSwitch && <LightSwitch name={name} isOn={own.isOn} onChange={(isOn) => onSwitch(light.id, isOn)} />}
+      </span>
+    </div>
   )
 }
 
-/** The words of a row; pressing them opens what it stands for. */
-export function RowButton({ onPress, title, sub }: { onPress: () => void; title: string; sub: string }) {
+function AgainstMain(props: { label: string; underStops: number; fNumber: number; mainFNumber: number }) {
+  const { label, underStops, fNumber, mainFNumber } = props
   return (
-    <button
-      type="button"
-      onClick={onPress}
-      className="block w-full rounded-r text-left hover:text-draft max-md:min-h-11"
-    >
-      {title} <span className="block text-xs text-ink-soft">{sub}</span>
-    </button>
+    <How label={`${label} vs main`} value={stopsLabel(-underStops)}>
+      <Workings
+        formula={`${(-underStops).toFixed(2).replace('-', '−')} stops = 2 · log₂(N / N main)`}
+        inputs={[
+          ['It reads, N', `f/${fNumber.toFixed(2)}`],
+          ['All mains at the sitter, N main', `f/${mainFNumber.toFixed(2)}`],
+        ]}
+        note="Shown on thirds of a stop."
+      />
+    </How>
+  )
+}
+
+type PanelRowProps = Pick<LightTableProps, 'whole' | 'reading' | 'onChoose'> & { panel: PanelReading; chosen: boolean }
+
+function PanelRow({ panel, whole, reading, chosen, onChoose }: PanelRowProps) {
+  const unit = useLengthUnit()
+  const prop = whole.props.find(({ id }) => id === panel.propId)
+  const main = whole.lights.find((light) => light.purpose === 'main' && light.isOn)
+  return (
+    <div role="row" className={cn(ROW, 'border-t border-hair-soft py-1.5', chosen && 'bg-draft-wash/60')}>
+      <span role="cell" className="row-span-2">
+        <GroupLetter group={null} />
+      </span>
+      <RowHead
+        title={panel.name}
+        sub={`gives light back · ${lengthLabel(panel.distanceM, unit)}`}
+        onPress={() => onChoose(panel.propId)}
+      />
+      <span role="cell" className={cn(NUMBER, 'col-start-3 row-start-1 text-ink-faint')}>
+        from {main?.group ?? 'main'}
+      </span>
+      <span role="cell" className={cn(NUMBER, 'col-start-4 row-start-1')}>
+        <How label={`${panel.name} reads`} value={fNumberLabel(panel.fNumber)}>
+          <Workings
+            formula="E = ρ · E₀ · A · cos φ / (π · d² + A)"
+            inputs={[
+              ['Distance to the eyes, d', lengthLabel(panel.distanceM, unit, true)],
+              ...(prop
+                ? ([
+                    ['Size, A', sizeLabel(prop.widthM, prop.heightM, unit)],
+                    ['Gives back, ρ', `${Math.round(reflectanceOf(prop.colour) * 100)} %`, 'by its colour'],
+                  ] satisfies InputRow[])
+                : []),
+              ['Reads', `f/${panel.fNumber.toFixed(2)}`],
+            ]}
+            note="One matte patch of its own colour, lit by main and fill; walls and ceiling give nothing back (assumed). A meter decides."
+          />
+        </How>
+      </span>
+      <span role="cell" className={cn(NUMBER, 'col-start-5 row-start-1')}>
+        {panel.underMainStops !== null && reading.mainFNumber !== null && (
+          <AgainstMain
+            label={panel.name}
+            underStops={panel.underMainStops}
+            fNumber={panel.fNumber}
+            mainFNumber={reading.mainFNumber}
+          />
+        )}
+      </span>
+    </div>
+  )
+}
+
+function TotalRow({ whole, reading }: Pick<LightTableProps, 'whole' | 'reading'>) {
+  const { camera } = whole.setup
+  if (reading.totalFNumber <= 0) return null
+  return (
+    <div role="row" className={cn(ROW, 'border-t border-hair py-1.5')}>
+      <span role="rowheader" className="col-start-2 col-end-4 font-semibold">
+        All together
+      </span>
+      <span role="cell" className={cn(NUMBER, 'col-start-4 font-semibold')}>
+        <How label="All together" value={fNumberLabel(reading.totalFNumber)}>
+          <Workings
+            formula={`f/${reading.totalFNumber.toFixed(2)} = √(Σ N²)`}
+            inputs={[
+              ['Main', reading.mainFNumber === null ? 'none' : fNumberLabel(reading.mainFNumber)],
+              ['Fill, panels, ambient', reading.ratio ? fNumberLabel(reading.ratio.fillFNumber) : 'none'],
+              [
+                'Ambient alone',
+                reading.ambientFNumber === null ? 'not measured' : fNumberLabel(reading.ambientFNumber),
+              ],
+              ['Camera', `${fNumberLabel(camera.fNumber)}, ISO ${camera.iso}`],
+            ]}
+            note="Lights add linearly. Rim, accent and background lights are left out. Incident, C = 250."
+          />
+        </How>
+      </span>
+    </div>
+  )
+}
+
+/** The words of a row of numbers; pressing anywhere on the row that is not a number opens what it stands for. */
+function RowHead(props: { title: string; sub: string; onPress: () => void; children?: ReactNode }) {
+  const id = useId()
+  return (
+    <span role="rowheader" className="contents">
+      <button
+        type="button"
+        aria-labelledby={`${id}-title ${id}-sub`}
+        onClick={props.onPress}
+        className="col-start-2 row-start-1 rounded-r text-left after:absolute after:inset-0 hover:text-draft"
+      >
+        <span id={`${id}-title`}>{props.title}</span>
+      </button>
+      <span id={`${id}-sub`} className="col-start-2 col-end-6 row-start-2 text-xs text-ink-soft">
+        {props.sub}
+      </span>
+      {props.children}
+    </span>
   )
 }

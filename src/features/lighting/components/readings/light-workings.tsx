@@ -1,6 +1,8 @@
 import type { LightReading } from '#shared/domain/lighting/readings.ts'
 import { type Light, isLamp } from '#shared/domain/lighting/schema.ts'
+import { shutterLabel } from '#shared/domain/lighting/stops.ts'
 import { fNumberLabel, powerLabel } from '#shared/domain/lighting/words.ts'
+import { lengthLabel, useLengthUnit } from '#src/lib/length-unit.ts'
 import { type InputRow, Workings, stated } from './how.tsx'
 
 const BEAMS: Record<LightReading['beamKind'], string> = {
@@ -14,36 +16,49 @@ function stops(value: number): string {
   return value === 0 ? '0' : `−${value.toFixed(2)} stops`
 }
 
-/** Where a light's reading comes from, step by step. */
-export function LightWorkings({ light, reading, iso }: { light: Light; reading: LightReading; iso: number }) {
+/** What the unit gives: a lamp's lux, what a meter read of head and modifier together, or the guide number by the kit. */
+function sourceRows(light: Light, reading: LightReading, guideNumber: (metres: number) => string): InputRow[] {
   const { numbers } = light.unit
+  const loss: InputRow[] = light.modifier
+    ? [[light.modifier.name, stops(reading.modifierLossStops), stated(light.modifier.numbers.lossStops)]]
+    : []
+  if (isLamp(numbers)) return [['Lux at a metre', numbers.luxAtMetre.value, stated(numbers.luxAtMetre)], ...loss]
+  const full = guideNumber(reading.fullGuideNumberM)
+  if (reading.measured !== null)
+    return [[light.modifier ? 'Guide number with the modifier' : 'Guide number', full, `measured: ${reading.measured}`]]
+  const name = light.zoomMm !== null && numbers.zoom.length > 0 ? `Guide number at ${light.zoomMm} mm` : 'Guide number'
+  return [[name, full, stated(numbers.guideNumberM)], ...loss]
+}
+
+type LightWorkingsProps = { light: Light; reading: LightReading; iso: number; shutterS: number }
+
+/** Where a light's reading comes from, step by step. */
+export function LightWorkings({ light, reading, iso, shutterS }: LightWorkingsProps) {
+  const unit = useLengthUnit()
+  const exact = (metres: number) => lengthLabel(metres, unit, true)
+  const guideNumber = (metres: number) => (unit === 'm' ? `${metres.toFixed(1)} m` : exact(metres))
   const inputs: InputRow[] = [
-    isLamp(numbers)
-      ? ['Lux at a metre', numbers.luxAtMetre.value, stated(numbers.luxAtMetre)]
-      : [
-          light.zoomMm !== null && numbers.zoom.length > 0 ? `Guide number at ${light.zoomMm} mm` : 'Guide number',
-          `${reading.fullGuideNumberM.toFixed(1)} m`,
-          stated(numbers.guideNumberM),
-        ],
+    ...sourceRows(light, reading, guideNumber),
     ['Power', powerLabel(light.power)],
-  ]
-  if (light.modifier)
-    inputs.push([light.modifier.name, stops(reading.modifierLossStops), stated(light.modifier.numbers.lossStops)])
-  for (const gel of light.gels)
-    inputs.push([
-      gel.name,
-      `${Math.round(gel.numbers.transmission.value * 100)} % through`,
-      stated(gel.numbers.transmission),
-    ])
-  inputs.push(
-    ['Guide number that is left', `${reading.guideNumberM.toFixed(1)} m`],
-    [reading.where === 'wall' ? 'Distance to the wall' : 'Distance to the eyes', `${reading.distanceM.toFixed(2)} m`],
+    ...light.gels.map(({ name, numbers }): InputRow => [
+      name,
+      `${Math.round(numbers.transmission.value * 100)} % through`,
+      stated(numbers.transmission),
+    ]),
+    reading.luxAtMetre === null
+      ? ['Guide number that is left', guideNumber(reading.guideNumberM)]
+      : [`Lux at a metre that is left, for ${shutterLabel(shutterS)}`, Math.round(reading.luxAtMetre)],
+    [reading.where === 'wall' ? 'Distance to the wall' : 'Distance to the eyes', exact(reading.distanceM)],
     [`${reading.offAxisDeg.toFixed(0)}° off its axis`, `× ${reading.beamShare.toFixed(2)}`, BEAMS[reading.beamKind]],
     ['Size of its face, near', `× ${reading.discShare.toFixed(2)}`, 'd²/(d² + r²)'],
-  )
+  ]
   return (
     <Workings
-      formula={`${fNumberLabel(reading.fNumber)} (exactly ${reading.fNumber.toFixed(2)}) = √(H · ISO / 250)`}
+      formula={
+        reading.isOn
+          ? `${fNumberLabel(reading.fNumber)} (exactly ${reading.fNumber.toFixed(2)}) = √(H · ISO / 250)`
+          : 'It is off: it gives nothing.'
+      }
       inputs={[...inputs, ['Light on the spot, H', `${reading.exposureLxS.toPrecision(3)} lx·s`], ['ISO', iso]]}
       note={
         reading.where === 'wall'

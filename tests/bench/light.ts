@@ -1,13 +1,18 @@
 import { performance } from 'node:perf_hooks'
 import { parseArgs } from 'node:util'
+import { benchFramesInBrowser } from './light/frames-in-browser.ts'
+import { benchFrames } from './light/frames.ts'
 import { type Clock, benchReadings } from './light/readings.ts'
 
 /**
- * What the light of a setup costs to compute. One JSON line a measurement; the names of some (`readings`) measure
- * only those. `--cpu` counts this process's CPU time instead of the wall clock, for a machine that has other work to do.
+ * What the light of a setup costs to compute. One JSON line a measurement; the names of some (`readings`, `frames`,
+ * `frames-in-browser`) measure only those. `--cpu` counts this process's CPU time instead of the wall clock, for a
+ * machine that has other work to do.
  */
-const MEASUREMENTS: Readonly<Record<string, (nowMs: Clock) => Iterable<object>>> = {
+const MEASUREMENTS: Readonly<Record<string, (nowMs: Clock) => Iterable<object> | AsyncIterable<object>>> = {
   readings: benchReadings,
+  frames: benchFrames,
+  'frames-in-browser': benchFramesInBrowser,
 }
 
 const { values, positionals } = parseArgs({
@@ -22,6 +27,6 @@ for (const name of chosen) {
     process.stderr.write(`Name some of: ${Object.keys(MEASUREMENTS).join(', ')}\n`)
     process.exit(2)
   }
-  for (const line of measure(nowMs))
+  for await (const line of measure(nowMs))
     process.stdout.write(`${JSON.stringify({ bench: 'light', measurement: name, ...line })}\n`)
 }

@@ -28,6 +28,9 @@ export const URGENCY = { rough: 3, strip: 2, large: 1, card: 0 } as const
 export const NO_FRAMES =
   'Test frames cannot be computed in this browser just now. Drawings and numbers are not affected.'
 
+/** From one screen with pictures to the next, workers and what they know of the sitters stay, ms. */
+const LINGER_MS = 1000
+
 type Job = {
   id: number
   /** The picture with only the lights that are not known yet. */
@@ -47,8 +50,9 @@ type Hand = { worker: FrameWorker; jobId: number | null; isBusy: boolean }
 const BAND_ROWS = 24
 
 /** The rows about the eyes first: that is where people look. */
-function bandsOf({ quality, height }: FrameAsk, hands: number): Job['bands'] {
-  const rows = quality === 'rough' ? Math.ceil(height / hands) : BAND_ROWS
+function bandsOf({ quality, height }: FrameAsk): Job['bands'] {
+  // Two workers would both work out the sitter's body first, which takes as long as the rest of a rough picture.
+  const rows = quality === 'rough' ? height : BAND_ROWS
   const bands = Array.from({ length: Math.ceil(height / rows) }, (_, index): Job['bands'][number] => [
     index * rows,
     Math.min(height, (index + 1) * rows),
@@ -86,13 +90,16 @@ export function createFrameRenderer({ startWorker, hands: handCount, isSeen, onS
     end()
     for (const job of failed) job.listener.onFail(NO_FRAMES)
   }
-  function start(): boolean {
-    if (hands.length > 0) return true
+  /** A worker that waits for work; another is started only for work there is. Null: all are busy, or none can start. */
+  function idleHand(): Hand | null {
+    const idle = hands.find((hand) => !hand.isBusy)
+    if (idle || hands.length >= handCount) return idle ?? null
     try {
-      hands = Array.from({ length: handCount }, () => started(startWorker()))
-      return true
+      const hand = started(startWorker())
+      hands.push(hand)
+      return hand
     } catch {
-      return false
+      return null
     }
   }
   function started(worker: FrameWorker): Hand {
@@ -132,16 +139,17 @@ export function createFrameRenderer({ startWorker, hands: handCount, isSeen, onS
     listener.onDone(layers)
   }
   function pump() {
-    if (!isSeen() || jobs.length === 0) return
-    if (isBroken || !start()) {
-      fail()
-      return
-    }
-    for (const hand of hands) {
-      if (hand.isBusy) continue
+    if (!isSeen()) return
+    for (;;) {
       const job = jobs.find((candidate) => candidate.bands.length > 0)
-      const band = job?.bands.shift()
-      if (!job || !band) return
+      if (!job) return
+      const hand = isBroken ? null : idleHand()
+      if (!hand) {
+        if (hands.length === 0) fail()
+        return
+      }
+      const band = job.bands.shift()
+      if (!band) return
       if (hand.jobId !== job.id) post(hand, { kind: 'begin', job: job.id, ...job.ask })
       hand.jobId = job.id
       hand.isBusy = true
@@ -159,7 +167,10 @@ export function createFrameRenderer({ startWorker, hands: handCount, isSeen, onS
       holders += 1
       return () => {
         holders -= 1
-        if (holders === 0) end()
+        if (holders > 0) return
+        setTimeout(() => {
+          if (holders === 0) end()
+        }, LINGER_MS)
       }
     },
     tryAgain() {
@@ -192,7 +203,7 @@ export function createFrameRenderer({ startWorker, hands: handCount, isSeen, onS
           ),
         },
         urgency,
-        bands: bandsOf(whole, handCount),
+        bands: bandsOf(whole),
         open: whole.height,
         listener,
       }

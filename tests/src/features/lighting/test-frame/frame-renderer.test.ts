@@ -122,14 +122,21 @@ describe('createFrameRenderer', () => {
     expect(heard.onDone).toHaveBeenCalledTimes(1)
   })
 
-  it('ends its workers when the last picture leaves the screen', () => {
+  it('ends its workers a second after the last picture has left the screen, unless there is another', () => {
+    vi.useFakeTimers()
     const { made, workers } = renderer({ hands: 2 })
     const [first, second] = [made.hold(), made.hold()]
     made.ask(askOf(), URGENCY.strip, listener())
     first()
     expect(workers.ended()).toBe(0)
     second()
+    const third = made.hold()
+    vi.advanceTimersByTime(2000)
+    expect(workers.ended()).toBe(0)
+    third()
+    vi.advanceTimersByTime(2000)
     expect(workers.ended()).toBe(2)
+    vi.useRealTimers()
   })
 
   it('says so in a plain sentence when a worker cannot start or breaks, and tries again when told to', () => {

@@ -62,6 +62,7 @@ async function measure(hands: number): Promise<Times> {
   const rough = await timed(renderer, ask('rough'))
   const dragged = await timed(renderer, ask('rough', 0.1))
   const fine = await timed(renderer, ask('fine'))
+  const pauseMs = pauses()
   const { setup, lights } = frameSetup()
   const order = frameStages(frameSetup(), readSetup(frameSetup())).map((stage) => stage.light.id)
   const canvases = order.map(() => new OffscreenCanvas(fine.layers.width, fine.layers.height).getContext('2d'))
@@ -74,7 +75,6 @@ async function measure(hands: number): Promise<Times> {
     return performance.now() - startedMs
   })
   const power = times.sort((a, b) => a - b)[times.length >> 1] ?? 0
-  const pauseMs = pauses()
   const large = await timed(renderer, { ...ask('fine'), ...pictureSize('upright', LARGE_PIXELS) })
   release()
   return { hands, rough: rough.ms, dragged: dragged.ms, fine: fine.ms, power, large: large.ms, pauseMs }

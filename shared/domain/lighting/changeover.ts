@@ -21,6 +21,7 @@ export type ActionKind =
   | 'aim'
   | 'modifier'
   | 'gel'
+  | 'switch'
   | 'power'
   | 'zoom'
   | 'support'
@@ -103,7 +104,9 @@ function lightActions(before: Light, after: Light, around: Around): ChangeAction
   }
   const byHand = after.unit.numbers.remotePower ? minutes.powerRemote : minutes.powerByHand
   const how = after.unit.numbers.remotePower ? 'by remote' : 'by hand'
-  if (powerLabel(before.power) !== powerLabel(after.power)) {
+  if (before.isOn !== after.isOn) add('switch', `${name}: switch ${after.isOn ? 'on' : 'off'}`, how, byHand)
+  // What is off has no power to be seen: it is set when it is switched on.
+  if (after.isOn && powerLabel(before.power) !== powerLabel(after.power)) {
     add('power', `${name} to ${powerLabel(after.power)}`, `from ${powerLabel(before.power)}, ${how}`, byHand)
   }
   if (before.zoomMm !== after.zoomMm) {

@@ -1,10 +1,11 @@
 import { type Caution, cautionsOf } from '#shared/domain/lighting/cautions.ts'
 import { kelvinLabel } from '#shared/domain/lighting/gel.ts'
 import { distanceBetween, facePoint, minus } from '#shared/domain/lighting/geometry.ts'
+import { kitListOf } from '#shared/domain/lighting/kit-list.ts'
 import { axisOnWall } from '#shared/domain/lighting/light-output.ts'
 import { ratioLabel } from '#shared/domain/lighting/ratio.ts'
 import { type LightReading, type SetupReading, readSetup } from '#shared/domain/lighting/readings.ts'
-import { type Light, type Point, isLamp } from '#shared/domain/lighting/schema.ts'
+import type { Light, Point } from '#shared/domain/lighting/schema.ts'
 import type { SetupUse } from '#shared/domain/lighting/setup-use.ts'
 import { shutterLabel } from '#shared/domain/lighting/stops.ts'
 import { fNumberLabel, inSentence, powerLabel, purposeWord, stopsLabel } from '#shared/domain/lighting/words.ts'
@@ -221,19 +222,6 @@ function cameraLines(whole: WholeSetup, reading: SetupReading, unit: LengthUnit)
   return lines
 }
 
-function kitList(whole: WholeSetup): Sheet['kit'] {
-  const counts = new Map<string, number>()
-  const add = (name: string) => counts.set(name, (counts.get(name) ?? 0) + 1)
-  add(`Camera with ${whole.setup.camera.focalMm} mm`)
-  for (const light of whole.lights) {
-    add(isLamp(light.unit.numbers) ? `${light.unit.name} (burns all the time)` : light.unit.name)
-    for (const part of [light.modifier, ...light.gels, light.support]) if (part) add(part.name)
-  }
-  for (const prop of whole.props) add(prop.name)
-  if (whole.setup.background.what !== '') add(whole.setup.background.what)
-  return [...counts].map(([name, count]) => ({ count, name }))
-}
-
 /** The words of a setup's recipe sheet: the same numbers that the screen shows, lengths in the wanted unit. */
 export function sheetOf(whole: WholeSetup, use: Pick<SetupUse, 'orientations' | 'frames'>, unit: LengthUnit): Sheet {
   const reading = readSetup(whole)
@@ -260,7 +248,7 @@ export function sheetOf(whole: WholeSetup, use: Pick<SetupUse, 'orientations' | 
       })),
     readings: readingLines(whole, reading, unit),
     camera: cameraLines(whole, reading, unit),
-    kit: kitList(whole),
+    kit: kitListOf([whole]).map(({ count, name }) => ({ count, name })),
     cautions: cautionsOf(whole, { orientations: use.orientations, frames: use.frames, unit }, reading).map(
       ({ key, tone, title, words }) => ({ key, tone, title, words }),
     ),

@@ -26,6 +26,8 @@ export type Kit = {
   supports: LightSupport[]
   /** Newest version in the kit room by id; unknown ids are no longer there. */
   versions: ReadonlyMap<string, number>
+  /** How many the studio has, by id. */
+  quantities: ReadonlyMap<string, number>
   state: 'there' | 'coming' | 'not there'
 }
 
@@ -65,7 +67,15 @@ function sortKit(kit: readonly KitItem[]): Omit<Kit, 'state'> {
         break
     }
   }
-  return { units, modifiers, panels, gels, supports, versions: new Map(kit.map((item) => [item.id, item.version])) }
+  return {
+    units,
+    modifiers,
+    panels,
+    gels,
+    supports,
+    versions: new Map(kit.map((item) => [item.id, item.version])),
+    quantities: new Map(kit.map((item) => [item.id, item.quantity])),
+  }
 }
 
 /** The studio's kit, sorted into what a light is made of. */

@@ -10,7 +10,9 @@ import { useIsPhone } from '#src/ui/use-media.ts'
 import { setupUse } from '#shared/domain/lighting/setup-use.ts'
 import { wearingOf } from '#shared/domain/lighting/wearing.ts'
 import { useSheetFrames } from '../test-frame/use-sheet-frames.ts'
+import { useKit } from '../use-kit.ts'
 import { useSetups } from '../use-setups.ts'
+import { BringList } from './bring-list.tsx'
 import { UseRecipe } from './recipe/use-recipe.tsx'
 import { useRecipeDialogs } from './recipe/use-recipe-dialogs.tsx'
 import { SetupCard } from './setup-card.tsx'
@@ -29,6 +31,8 @@ export function LightingScreen() {
   const [removing, setRemoving] = useState<WholeSetup | null>(null)
   const all = [...plan.setups.values()]
   const address = (setupId: string) => `/shoots/${shoot.id}/lighting/${setupId}`
+  const kit = useKit()
+  const used = all.filter((whole) => setupUse(plan, whole.setup.id).shots.length > 0)
   const losing = removing ? setupUse(plan, removing.setup.id).shots : []
   return (
     <>
@@ -82,6 +86,7 @@ export function LightingScreen() {
           ))}
         </ul>
       )}
+      {used.length > 0 && <BringList setups={used} kit={kit} />}
       {recipes.dialogs}
       <UseRecipe open={isUsing} onOpenChange={setIsUsing} onUse={setups.byRecipe} />
       <Confirm

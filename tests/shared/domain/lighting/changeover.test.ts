@@ -57,6 +57,16 @@ describe('changeActions', () => {
     expect(changeActions(two, one, here)).toMatchObject([{ kind: 'strike', minutes: 1.5, what: 'Rim: strike' }])
   })
 
+  it('switches a light by remote for nothing, by hand for half a minute, and asks nothing of one that is off', () => {
+    const both = whole({ lights: [main(), rim()] })
+    const off = whole({ lights: [main({ isOn: false, power: 1 / 16 }), rim({ isOn: false })] })
+    expect(changeActions(both, off, here)).toMatchObject([
+      { kind: 'switch', what: 'Main: switch off', minutes: 0 },
+      { kind: 'switch', what: 'Rim: switch off', minutes: 0.5 },
+    ])
+    expect(changeActions(off, both, here).map((action) => action.kind)).toEqual(['switch', 'power', 'switch'])
+  })
+
   it('names each thing that changes on one light, one action each', () => {
     const to = whole({
       lights: [

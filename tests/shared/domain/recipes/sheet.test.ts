@@ -76,9 +76,9 @@ describe('sheetOf', () => {
       { count: 1, name: 'Camera with 85 mm' },
       { count: 4, name: 'Small flash' },
       { count: 1, name: '90 cm octa' },
-      { count: 3, name: '2.4 m stand' },
-      { count: 1, name: 'Half blue −68' },
       { count: 1, name: '10° grid' },
+      { count: 1, name: 'Half blue −68' },
+      { count: 3, name: '2.4 m stand' },
       { count: 1, name: 'grey wall' },
     ])
   })

@@ -46,6 +46,8 @@ export function createFrameFollower(renderer: FrameRenderer, nowMs: () => number
   /** What of the rough picture is under way; a newer one waits for it, so that something is always shown. */
   let takeBackRough: (() => void) | null = null
   let takeBackFine: (() => void) | null = null
+  /** The very first picture: its fine one is begun when the rough one is there, so that nothing holds that up. */
+  let isFineNext = false
 
   function show(next: Partial<FollowedFrame>) {
     state = { ...state, ...next }
@@ -67,6 +69,7 @@ export function createFrameFollower(renderer: FrameRenderer, nowMs: () => number
         takeBackRough = null
         if (!(state.isFine && wanted === own)) show({ layers, isFine: false, failure: null })
         if (wanted !== own) planRough()
+        else if (isFineNext) startFine()
       },
       onFail,
     })
@@ -81,6 +84,7 @@ export function createFrameFollower(renderer: FrameRenderer, nowMs: () => number
     roughTimer = setTimeout(startRough, Math.max(0, roughAtMs + ROUGH_EVERY_MS - nowMs()))
   }
   function startFine() {
+    isFineNext = false
     if (!wanted) return
     const own = wanted
     takeBackFine = renderer.ask(own.fine, URGENCY.strip, {
@@ -92,6 +96,7 @@ export function createFrameFollower(renderer: FrameRenderer, nowMs: () => number
     })
   }
   function leaveFine() {
+    isFineNext = false
     clearTimeout(fineTimer)
     takeBackFine?.()
     takeBackFine = null
@@ -115,7 +120,9 @@ export function createFrameFollower(renderer: FrameRenderer, nowMs: () => number
       const isOnlyLens = before?.withoutLens === wanted.withoutLens && state.layers !== null
       if (state.isFine) state = { ...state, isFine: false }
       if (!isOnlyLens) planRough()
-      fineTimer = setTimeout(startFine, before ? REST_MS : 0)
+      if (before) fineTimer = setTimeout(startFine, REST_MS)
+      else if (roughTimer === undefined) startFine()
+      else isFineNext = true
     },
     snapshot: () => state,
     subscribe(listener) {

@@ -119,12 +119,12 @@ export function wordsWidth(lines: readonly string[]): number {
   return Math.max(...lines.map((line) => line.length)) * LETTER_PX
 }
 
-/** Moves labels down, top to bottom, so that none covers another. */
-export function spreadLabels(labels: readonly Label[]): Label[] {
+/** Moves labels down, top to bottom, so that none covers another or one of those that stay where they are. */
+export function spreadLabels(labels: readonly Label[], fixed: readonly Label[] = []): Label[] {
   const spanOf = ({ x, side, lines }: Label) =>
     side === 'left' ? [x - wordsWidth(lines), x] : [x, x + wordsWidth(lines)]
   const heightOf = ({ lines }: Label) => lines.length * LINE_PX
-  const placed: Label[] = []
+  const placed: Label[] = [...fixed]
   for (const label of [...labels].sort((a, b) => a.y - b.y)) {
     const [from = 0, to = 0] = spanOf(label)
     const beside = placed.filter((other) => {
@@ -136,5 +136,5 @@ export function spreadLabels(labels: readonly Label[]): Label[] {
       if (y < other.y + heightOf(other) + 3 && other.y < y + heightOf(label) + 3) y = other.y + heightOf(other) + 3
     placed.push({ ...label, y })
   }
-  return placed
+  return placed.slice(fixed.length)
 }

@@ -140,7 +140,13 @@ function Plan({ width, height, written, whole, ...rest }: PlanDrawingProps & { w
       </Handle>
       <Aims whole={whole} chosenKey={chosenKey} project={project} handle={common} />
       {moving.held?.drawing === 'plan' && <Guides guides={moving.held.guides} project={project} />}
-      <PlanLabels whole={whole} view={view} isNarrow={isNarrow} unit={unit} />
+      <PlanLabels
+        whole={whole}
+        view={view}
+        isNarrow={isNarrow}
+        unit={unit}
+        nameOf={(place) => nameOf({ kind: 'place', place })}
+      />
     </svg>
   )
 }

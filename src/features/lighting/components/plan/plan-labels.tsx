@@ -5,15 +5,22 @@ import { inSentence } from '#shared/domain/lighting/words.ts'
 import { type LengthUnit, lengthLabel } from '#src/lib/length-unit.ts'
 import { type Label, type PlanView, spreadLabels, toX, toZ, wordsWidth } from '../../plan-view.ts'
 
-type PlanLabelsProps = { whole: WholeSetup; view: PlanView; isNarrow: boolean; unit: LengthUnit }
+type Around = { whole: WholeSetup; view: PlanView; isNarrow: boolean; unit: LengthUnit }
+type PlanLabelsProps = Around & {
+  /** The name that stands at a sitter's place: other words keep clear of it. */
+  nameOf: (place: SitterPlace) => string
+}
 
 /** What each light and thing is, beside it. */
-export function PlanLabels({ whole, view, isNarrow, unit }: PlanLabelsProps) {
-  const labels = spreadLabels([
-    ...whole.lights.map((light) => lightLabel(light, { whole, view, isNarrow, unit })),
-    ...whole.props.map((prop) => propLabel(prop, whole, view)),
-    cameraLabel(whole, view),
-  ])
+export function PlanLabels({ whole, view, isNarrow, unit, nameOf }: PlanLabelsProps) {
+  const labels = spreadLabels(
+    [
+      ...whole.lights.map((light) => lightLabel(light, { whole, view, isNarrow, unit })),
+      ...whole.props.map((prop) => propLabel(prop, whole, view)),
+      cameraLabel(whole, view),
+    ],
+    whole.places.map((place) => nameLabel(place, whole.places, nameOf(place), view)),
+  )
   const off = new Set<string>(whole.lights.filter((light) => !light.isOn).map((light) => light.id))
   const classOf = (label: Label) => {
     if (label.key === CAMERA) return 'fill-ink text-xs font-semibold'
@@ -64,7 +71,7 @@ function besideOf(view: PlanView, xM: number, faceX: number, away: number, lines
     : { x: x + away, side: 'right', overPx: 0 }
 }
 
-function lightLabel(light: Light, { whole, view, isNarrow, unit }: PlanLabelsProps): Label {
+function lightLabel(light: Light, { whole, view, isNarrow, unit }: Around): Label {
   const face = facePoint(whole)
   const sizePx = ((light.modifier?.numbers.widthM ?? 0) * view.pxPerM) / 2
   const name = `${light.group === null ? '' : `${light.group} · `}${light.purpose}${light.isOn ? '' : ', off'}`
@@ -105,4 +112,16 @@ export function placeNameAt(places: readonly SitterPlace[], place: SitterPlace) 
   if (index === 0) return { x: -18, y: -16, textAnchor: 'end' as const }
   if (index === row.length - 1) return { x: 18, y: -16, textAnchor: 'start' as const }
   return { x: 0, y: -6 - 17 * index, textAnchor: 'middle' as const }
+}
+
+function nameLabel(place: SitterPlace, places: readonly SitterPlace[], name: string, view: PlanView): Label {
+  const { x, y, textAnchor } = placeNameAt(places, place)
+  const from = toX(view, place.at[0]) + x
+  return {
+    key: place.id,
+    x: textAnchor === 'middle' ? from - wordsWidth([name]) / 2 : from,
+    side: textAnchor === 'end' ? 'left' : 'right',
+    y: toZ(view, place.at[1]) + y,
+    lines: [name],
+  }
 }

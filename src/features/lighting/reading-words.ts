@@ -25,11 +25,11 @@ export function underWords(underStops: number, what: string): string {
   return `${label} ${isOne ? 'stop' : 'stops'} ${underStops > 0 ? 'under' : 'over'} ${what}`
 }
 
-/** A difference from what was wished, to a tenth: "+0.1 stop", "−1.3 stops", "as wished". */
+/** A difference from what was wished, to a tenth: "+0.1 stop off", "−1.3 stops off", "as wished". */
 export function offWords(offStops: number): string {
   const tenths = Math.round(Math.abs(offStops) * 10)
   if (tenths === 0) return 'as wished'
-  return `${offStops > 0 ? '+' : '−'}${(tenths / 10).toFixed(1)} ${tenths <= 10 ? 'stop' : 'stops'}`
+  return `${offStops > 0 ? '+' : '−'}${(tenths / 10).toFixed(1)} ${tenths <= 10 ? 'stop' : 'stops'} off`
 }
 
 /** A length shorter than a hand: "30 mm", "1.2″". */

@@ -140,7 +140,7 @@ function Suggestion({ light, suggestion }: { light: Light; suggestion: PowerSugg
           <b className="font-semibold">{powerLabel(power)}</b>
           {powerLabel(power) === powerLabel(light.power) ? ' as it is' : ` instead of ${powerLabel(light.power)}`}
           <span className="block">
-            reads {reads}: {offWords(offStops)}
+            reads {reads}; {offWords(offStops)}
           </span>
         </p>
       )}

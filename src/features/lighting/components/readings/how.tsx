@@ -19,7 +19,7 @@ export function How({ label, value, children }: HowProps) {
         <button
           type="button"
           aria-label={`${label}: how it is worked out`}
-          className="group rounded-r whitespace-nowrap max-md:min-h-11 max-md:min-w-9"
+          className="group rounded-r text-right whitespace-nowrap max-md:min-h-11 max-md:min-w-9"
         >
           <span className="border-b border-dotted border-edge group-hover:border-ink">{value}</span>
         </button>

@@ -186,7 +186,10 @@ function LightRow({ light, own, name, whole, reading, chosen, onChoose, onSwitch
           />
         )}
       </span>
-      <span role="cell" className="relative z-[1] col-start-6 row-span-2 row-start-1 -mr-1.5 justify-self-end">
+      <span
+        role="cell"
+        className="relative z-[1] col-start-6 row-span-2 row-start-1 -mr-1 justify-self-end max-md:-mr-2"
+      >
         {onSwitch && <LightSwitch name={name} isOn={own.isOn} onChange={(isOn) => onSwitch(light.id, isOn)} />}
       </span>
     </div>

@@ -53,6 +53,9 @@ function figureOf(place: SitterPlace, wearing: Wearing): Figure {
   }
 }
 
+/** More of anything than a shoot has is left out: a picture has to come to an end, whatever a document holds. */
+const MOST = { figures: 16, props: 40, sheets: 20, emitters: 32 }
+
 /** The scene of a setup's test frame, framed as its shots are. */
 export function sceneOf(whole: WholeSetup, orientation: Orientation, wearing: Wearing): Scene {
   const { setup, places, props } = whole
@@ -60,6 +63,8 @@ export function sceneOf(whole: WholeSetup, orientation: Orientation, wearing: We
   const room = walled
     ? { width: walled.leftM + walled.rightM, depth: walled.frontM - background.zM, ceiling: walled.ceilingM }
     : ROOM_M
+  const set = props.filter((prop) => prop.kind === 'prop')
+  const upright = props.filter((prop) => prop.kind !== 'prop')
   return {
     view: viewOf(whole, orientation),
     lens: {
@@ -74,28 +79,24 @@ export function sceneOf(whole: WholeSetup, orientation: Orientation, wearing: We
       surface: background.surface,
     },
     floor: reflectedRgb(FLOOR_COLOUR),
-    figures: places.map((place) => figureOf(place, wearing)),
-    props: props
-      .filter((prop) => prop.kind === 'prop')
-      .map((prop) => ({
-        shape: prop.shape,
-        at: prop.at,
-        turn: prop.turnDeg * RAD,
-        widthM: prop.widthM,
-        heightM: prop.heightM,
-        colour: reflectedRgb(prop.colour),
-        seed: seedOf(prop.id),
-      })),
-    sheets: props
-      .filter((prop) => prop.kind !== 'prop')
-      .map((prop) => ({
-        at: prop.at,
-        turn: prop.turnDeg * RAD,
-        widthM: prop.widthM,
-        heightM: prop.heightM,
-        colour: reflectedRgb(prop.kind === 'flag' ? '#1a1918' : prop.colour),
-      })),
-    emitters: whole.lights.map(emitterOf),
+    figures: places.slice(0, MOST.figures).map((place) => figureOf(place, wearing)),
+    props: set.slice(0, MOST.props).map((prop) => ({
+      shape: prop.shape,
+      at: prop.at,
+      turn: prop.turnDeg * RAD,
+      widthM: prop.widthM,
+      heightM: prop.heightM,
+      colour: reflectedRgb(prop.colour),
+      seed: seedOf(prop.id),
+    })),
+    sheets: upright.slice(0, MOST.sheets).map((prop) => ({
+      at: prop.at,
+      turn: prop.turnDeg * RAD,
+      widthM: prop.widthM,
+      heightM: prop.heightM,
+      colour: reflectedRgb(prop.kind === 'flag' ? '#1a1918' : prop.colour),
+    })),
+    emitters: whole.lights.slice(0, MOST.emitters).map(emitterOf),
     room: {
       areaM2: Math.max(20, 2 * (room.width * room.depth + room.width * room.ceiling + room.depth * room.ceiling)),
       reflectance: ROOM_REFLECTANCE,

@@ -117,6 +117,21 @@ export function sampleGrid(grid: Grid, x: number, y: number, z: number): number 
   return ab + (cd - ab) * fw
 }
 
+/** Corners a grid has at most: beyond it the cells grow, whatever size somebody has written down. */
+const MOST_CORNERS = 1_200_000
+
+/** The side of a cell, metres, at which a box has no more corners than a grid may have. */
+function affordable(cellM: number, low: Solid['low'], high: Solid['high']): number {
+  let side = cellM
+  const corners = () =>
+    [0, 1, 2].reduce(
+      (product, axis) => product * (Math.ceil(((high[axis] ?? 0) - (low[axis] ?? 0)) / side / BLOCK) * BLOCK),
+      1,
+    )
+  while (corners() > MOST_CORNERS) side *= 1.25
+  return side
+}
+
 /** A solid with its grid baked. */
 export function makeSolid(input: Omit<Solid, 'grid' | 'distance'>): Solid {
   const fields = input.parts.map((part) => part.field)
@@ -128,7 +143,8 @@ export function makeSolid(input: Omit<Solid, 'grid' | 'distance'>): Solid {
     }
     return d
   }
-  return { ...input, distance, grid: bake(distance, input.low, input.high, input.cellM) }
+  const cellM = affordable(input.cellM, input.low, input.high)
+  return { ...input, cellM, distance, grid: bake(distance, input.low, input.high, cellM) }
 }
 
 const NOTHING: Part = { field: () => Infinity, stuff: 'paint' }

@@ -1,7 +1,8 @@
 import { describe, expect, it } from 'vitest'
 import { reflectedRgb } from '#shared/domain/lighting/appearance.ts'
 import { sceneOf } from '#shared/domain/lighting/test-frame/scene-of.ts'
-import { FULL_WARM, GRID, OCTA, light, whole } from '#tests/support/lighting-sample.ts'
+import { lightIdSchema } from '#shared/ids.ts'
+import { FULL_WARM, GRID, OCTA, id, light, whole } from '#tests/support/lighting-sample.ts'
 
 const NOBODY = { garmentColour: () => null }
 const PLACED = { purpose: 'main', at: [-1, 2, 1], aim: [0, 1.5, 0], modifier: OCTA } as const
@@ -40,5 +41,12 @@ describe('sceneOf', () => {
     })
     expect(of.figures[0]?.garment).toEqual(reflectedRgb('#804020'))
     expect([of.sheets.length, of.props.length]).toEqual([1, 1])
+  })
+
+  it('leaves out what no shoot has so many of', () => {
+    const crowd = whole({
+      lights: Array.from({ length: 90 }, (_, n) => ({ ...MAIN, id: lightIdSchema.parse(id(n + 1)) })),
+    })
+    expect(sceneOf(crowd, 'upright', NOBODY).emitters.length).toBe(32)
   })
 })

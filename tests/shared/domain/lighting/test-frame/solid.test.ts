@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest'
-import { sphere } from '#shared/domain/lighting/test-frame/field.ts'
+import { roundBox, sphere } from '#shared/domain/lighting/test-frame/field.ts'
 import { bake, makeSolid, partAt, sampleGrid } from '#shared/domain/lighting/test-frame/solid.ts'
 
 const BALL = (x: number, y: number, z: number) => sphere(x, y, z, 0.3)
@@ -37,5 +37,19 @@ describe('makeSolid', () => {
     expect(solid.distance(0.6, 0, 0)).toBeCloseTo(-0.1, 12)
     expect(partAt(solid, 0.6, 0, 0).stuff).toBe('hair')
     expect(partAt(solid, 0, 0.29, 0).stuff).toBe('skin')
+  })
+
+  it('grows its cells for what is very large and thin, so that a picture comes to an end', () => {
+    const solid = makeSolid({
+      parts: [{ field: (x, y, z) => roundBox(x, y, z, 5, 5, 0.4, 0.001), stuff: 'wood' }],
+      rows: [1, 0, 0, 0, 1, 0, 0, 0, 1],
+      at: [0, 0, 0],
+      low: [-5.5, -5.5, -5.5],
+      high: [5.5, 5.5, 5.5],
+      cellM: 0.002,
+      of: { kind: 'prop', index: 0 },
+    })
+    expect(solid.grid.values.length).toBeLessThanOrEqual(1_200_000)
+    expect(solid.cellM).toBe(solid.grid.cellM)
   })
 })

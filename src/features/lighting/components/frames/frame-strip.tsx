@@ -20,7 +20,7 @@ type FrameStripProps = {
 }
 
 /** How high pictures stand in the strip at most, CSS px. */
-const MOST_HIGH_PX = 158
+const MOST_HIGH_PX = 190
 
 /** The picture being built up, light by light. */
 export function FrameStrip({ setup, stages, orientation, frame, chosenId, onChoose, onOpen }: FrameStripProps) {

@@ -5,6 +5,7 @@ import { cautionsOf } from '#shared/domain/lighting/cautions.ts'
 import { lightUnitSchema } from '#shared/domain/lighting/schema.ts'
 import { readSetup } from '#shared/domain/lighting/readings.ts'
 import { CautionList } from '#src/features/lighting/components/readings/caution-list.tsx'
+import { Figures } from '#src/features/lighting/components/readings/figures.tsx'
 import { KitGroups } from '#src/features/lighting/components/readings/kit-groups.tsx'
 import { LightGroups } from '#src/features/lighting/components/readings/light-groups.tsx'
 import { LightTable } from '#src/features/lighting/components/readings/light-table.tsx'
@@ -82,6 +83,18 @@ describe('LightTable', () => {
       fireEvent.keyDown(screen.getByRole('dialog'), { key: 'Escape' })
     }
     expect(screen.getByRole('row', { name: /White panel/ }).textContent).toContain('from A')
+  })
+})
+
+describe('Figures', () => {
+  it('open the wall’s colour to head and gels, each with where its number comes from', () => {
+    const back = light(4, { purpose: 'background', at: [0.8, 0.6, -1], aim: [0, 1.4, -2], gels: [HALF_BLUE] })
+    const other = whole({ lights: [main, back] })
+    render(<Figures whole={other} reading={readSetup(other)} />)
+    // 5500 K with −68 mired: 10⁶ / (181.8 − 68) = 8787 K.
+    expect(screen.getByText('8800 K')).toBeTruthy()
+    fireEvent.click(screen.getByRole('button', { name: 'Wall light: how it is worked out' }))
+    expect(screen.getByRole('dialog').textContent).toMatch(/Small flash, Tassumed: sample5500 K.*−68 mired/)
   })
 })
 

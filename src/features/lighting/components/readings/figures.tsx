@@ -2,11 +2,12 @@ import type { ReactNode } from 'react'
 import { kelvinLabel } from '#shared/domain/lighting/gel.ts'
 import { ratioLabel } from '#shared/domain/lighting/ratio.ts'
 import type { SetupReading } from '#shared/domain/lighting/readings.ts'
+import { isLamp } from '#shared/domain/lighting/schema.ts'
 import { fNumberLabel, stopsLabel } from '#shared/domain/lighting/words.ts'
 import type { WholeSetup } from '#shared/domain/plan/read-plan.ts'
 import { lengthLabel, useLengthUnit } from '#src/lib/length-unit.ts'
 import { Figure } from '#src/ui/figure.tsx'
-import { type InputRow, Workings } from './how.tsx'
+import { type InputRow, Workings, stated } from './how.tsx'
 
 type ReadingProps = { whole: WholeSetup; reading: SetupReading }
 
@@ -33,22 +34,43 @@ export function Figures({ whole, reading }: ReadingProps) {
         <Figure
           label="Wall light"
           value={wall.colourK === null ? 'deep blue' : kelvinLabel(wall.colourK)}
-          detail={
-            <Workings
-              formula="10⁶ / (10⁶ / T + shifts)"
-              inputs={[['White balance', `${whole.setup.camera.whiteBalanceK} K`]]}
-              note={
-                wall.colourK === null
-                  ? 'Bluer than any colour temperature.'
-                  : 'Colour of the brightest background light behind its gels; the wall’s own colour comes on top.'
-              }
-            />
-          }
+          detail={<ColourWorkings whole={whole} reading={reading} />}
         />
       )}
     </div>
   )
 }
+
+/** Colour of the brightest background light: its own, and what its gels shift. */
+function ColourWorkings({ whole, reading }: ReadingProps) {
+  const [brightest] = reading.lights
+    .filter((own) => own.where === 'wall' && own.fNumber > 0)
+    .sort((a, b) => b.fNumber - a.fNumber)
+  const light = whole.lights.find(({ id }) => id === brightest?.lightId)
+  const inputs: InputRow[] = []
+  if (light) {
+    const { numbers } = light.unit
+    const own = isLamp(numbers) ? numbers.colourK : numbers.flashColourK
+    inputs.push([`${light.unit.name}, T`, `${own.value} K`, stated(own)])
+    for (const { name, numbers: gel } of light.gels) {
+      const printed = gel.printedMired === null ? '' : ` (printed ${signed(gel.printedMired)})`
+      inputs.push([name, `${signed(gel.miredShift.value)} mired${printed}`, stated(gel.miredShift)])
+    }
+  }
+  return (
+    <Workings
+      formula="10⁶ / (10⁶ / T + shifts)"
+      inputs={[...inputs, ['White balance', `${whole.setup.camera.whiteBalanceK} K`]]}
+      note={
+        reading.wall.colourK === null
+          ? 'Bluer than any colour temperature.'
+          : 'Colour of the brightest background light behind its gels; the wall’s own colour comes on top.'
+      }
+    />
+  )
+}
+
+const signed = (value: number) => `${value < 0 ? '−' : '+'}${Math.abs(value)}`
 
 export function RatioWorkings({
   reading,

@@ -1,5 +1,8 @@
 import { kelvinLabel } from '#shared/domain/lighting/gel.ts'
+import { floorDistance } from '#shared/domain/lighting/geometry.ts'
+import { faceOf } from '#shared/domain/lighting/light-output.ts'
 import { ratioLabel } from '#shared/domain/lighting/ratio.ts'
+import { sizeLabel, smallLabel, underWords, whiteWords } from '#shared/domain/lighting/reading-words.ts'
 import type { AmbientReading, MainReading, SetupReading } from '#shared/domain/lighting/readings.ts'
 import { SOCKET_LIMIT_DEG } from '#shared/domain/lighting/softness.ts'
 import { shutterLabel } from '#shared/domain/lighting/stops.ts'
@@ -9,9 +12,8 @@ import type { WholeSetup } from '#shared/domain/plan/read-plan.ts'
 import { lightNames } from '#shared/domain/recipes/sheet.ts'
 import { lengthLabel, useLengthUnit } from '#src/lib/length-unit.ts'
 import { eyeLineWords } from '../../measures.ts'
-import { sizeLabel, smallLabel, underWords, whiteWords } from '../../reading-words.ts'
 import { RatioWorkings } from './figures.tsx'
-import { Workings } from './how.tsx'
+import { type InputRow, Workings } from './how.tsx'
 import { Group, Line, type OpenGroups } from './lines.tsx'
 
 type LightGroupsProps = { whole: WholeSetup; reading: SetupReading; groups: OpenGroups }
@@ -206,9 +208,12 @@ function GlowLines({ whole, reading, glow }: { whole: WholeSetup; reading: Setup
 function MainLines({ whole, reading, main }: { whole: WholeSetup; reading: SetupReading; main: MainReading }) {
   const unit = useLengthUnit()
   const own = reading.lights.find(({ lightId }) => lightId === main.lightId)
-  const modifier = whole.lights.find(({ id }) => id === main.lightId)?.modifier
+  const light = whole.lights.find(({ id }) => id === main.lightId)
+  const modifier = light?.modifier
+  const face = light ? faceOf(light) : { widthM: 0, heightM: 0 }
   const exact = (metres: number) => lengthLabel(metres, unit, true)
-  const made = modifier ? inSentence(modifier.name) : 'a bare head, 6 cm (assumed)'
+  const smallSize = (metres: number) => (metres < 0.2 ? smallLabel(metres, unit) : exact(metres))
+  const made = modifier ? inSentence(modifier.name) : 'a bare head'
   return (
     <>
       <Line
@@ -220,6 +225,9 @@ function MainLines({ whole, reading, main }: { whole: WholeSetup; reading: Setup
           formula="atan(rise / distance on the floor)"
           inputs={[
             ['Rise', exact(main.aboveEyesM)],
+            ...(light
+              ? [['Distance on the floor', exact(floorDistance(light.at, reading.face))] satisfies InputRow]
+              : []),
             ['Pupils in shadow from about', `${Math.round(SOCKET_LIMIT_DEG)}°`, 'assumed: a rule of thumb'],
           ]}
           note="A start in the manuals: 26.6° (NAVEDTRA 14209). The test frame is the evidence."
@@ -233,10 +241,14 @@ function MainLines({ whole, reading, main }: { whole: WholeSetup; reading: Setup
         <Workings
           formula="2 · atan(D / 2d)"
           inputs={[
+            [
+              'Longer side of its face, D',
+              smallSize(Math.max(face.widthM, face.heightM)),
+              modifier ? 'of the modifier' : 'assumed',
+            ],
             ['Distance, d', own ? exact(own.distanceM) : ''],
             ['It covers', `${main.apparentSizeDeg.toFixed(1)}°`],
           ]}
-          note="D is the longer side of its face."
         />
       </Line>
       <Line
@@ -247,6 +259,7 @@ function MainLines({ whole, reading, main }: { whole: WholeSetup; reading: Setup
         <Workings
           formula="D · b / a"
           inputs={[
+            ['Longer side of its face, D', smallSize(Math.max(face.widthM, face.heightM))],
             ['From the edge to the skin, b', smallLabel(0.05, unit), 'assumed: nose or brim'],
             ['From the light to the edge, a', own ? exact(own.distanceM) : ''],
           ]}

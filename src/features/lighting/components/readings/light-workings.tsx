@@ -30,6 +30,12 @@ function sourceRows(light: Light, reading: LightReading, guideNumber: (metres: n
   return [[name, full, stated(numbers.guideNumberM)], ...loss]
 }
 
+/** The beam angle where it is known, with its source. */
+function beamRows({ unit: { numbers }, modifier }: Light): InputRow[] {
+  const beam = modifier ? modifier.numbers.beamDeg : isLamp(numbers) ? numbers.beamDeg : null
+  return beam ? [['Beam angle', `${beam.value}°`, stated(beam)]] : []
+}
+
 type LightWorkingsProps = { light: Light; reading: LightReading; iso: number; shutterS: number }
 
 /** Where a light's reading comes from, step by step. */
@@ -49,6 +55,7 @@ export function LightWorkings({ light, reading, iso, shutterS }: LightWorkingsPr
       ? ['Guide number that is left', guideNumber(reading.guideNumberM)]
       : [`Lux at a metre that is left, for ${shutterLabel(shutterS)}`, Math.round(reading.luxAtMetre)],
     [reading.where === 'wall' ? 'Distance to the wall' : 'Distance to the eyes', exact(reading.distanceM)],
+    ...beamRows(light),
     [`${reading.offAxisDeg.toFixed(0)}° off its axis`, `× ${reading.beamShare.toFixed(2)}`, BEAMS[reading.beamKind]],
     ['Size of its face, near', `× ${reading.discShare.toFixed(2)}`, 'd²/(d² + r²)'],
   ]

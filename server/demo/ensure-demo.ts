@@ -2,6 +2,8 @@ import { randomUUID } from 'node:crypto'
 import { eq } from 'drizzle-orm'
 import { DateTime } from 'luxon'
 import { initialsOf } from '#shared/domain/people/face.ts'
+import { toRecipe } from '#shared/domain/recipes/recipe.ts'
+import { wholeSetups } from '#shared/domain/plan/read-plan.ts'
 import { fingerprintOf, freezeLook } from '#shared/domain/sign-off/fingerprint.ts'
 import type { Role } from '#shared/access/roles.ts'
 import {
@@ -18,6 +20,7 @@ import {
 } from '#shared/ids.ts'
 import { patchItem } from '#shared/realtime/collection.ts'
 import { looks, pieces } from '#shared/realtime/documents.ts'
+import { lightingPart } from '#shared/realtime/plan-parts.ts'
 import type { Actor, Ctx } from '#server/context.ts'
 import type { Tx } from '#server/db/client.ts'
 import { user } from '#server/db/schema/auth.ts'
@@ -26,6 +29,7 @@ import { pieceCost, privateNote, sitterPrivate } from '#server/db/schema/private
 import { deliverable, location, room, shoot, shootMember } from '#server/db/schema/shoots.ts'
 import { studioMember } from '#server/db/schema/studios.ts'
 import { listKit } from '#server/features/kit/list-kit.ts'
+import { keepRecipe } from '#server/features/recipes/keep-recipe.ts'
 import { createShoot } from '#server/features/shoots/create-shoot.ts'
 import { answerLook } from '#server/features/sign-off/answer-look.ts'
 import { readLookVersions } from '#server/features/sign-off/look-version-rows.ts'
@@ -70,7 +74,7 @@ export async function ensureDemo(world: DemoWorld): Promise<boolean> {
 
   const id = namedIds(randomUUID)
   const date = nextThursday(world.now())
-  const shootId = await world.db.transaction(async (tx) => {
+  const { shootId, studioId } = await world.db.transaction(async (tx) => {
     const studio = await createStudio(ctxOf('photographer', tx), { name: 'Lantern Row Studio' })
     await addMember(tx, studio.id, actors.get('stylist'))
     const { kit } = await listKit(ctxOf('photographer', tx), studio.id)
@@ -100,10 +104,11 @@ export async function ensureDemo(world: DemoWorld): Promise<boolean> {
         processed: picture.processed,
       })
     }
-    return created.id
+    return { shootId: created.id, studioId: studio.id }
   })
 
   await signOffLooks(ctxOf('client'), shootId, id)
+  await keepSetups(ctxOf('photographer'), { shootId, studioId, setupIds: [id('setup-octa'), id('setup-window')] })
   // What the client saw was black kid; the stylist has found grey wool since.
   const stylist = actors.get('stylist')
   if (stylist) {
@@ -119,6 +124,18 @@ export async function ensureDemo(world: DemoWorld): Promise<boolean> {
 function nextThursday(now: Date): string {
   const from = DateTime.fromJSDate(now, { zone: 'utc' }).plus({ weeks: 3 })
   return from.plus({ days: (4 - from.weekday + 7) % 7 }).toISODate() ?? ''
+}
+
+/** Keeps two of the setups as recipes of the studio. */
+async function keepSetups(
+  ctx: Ctx,
+  { shootId, studioId, setupIds }: { shootId: ShootId; studioId: StudioId; setupIds: readonly string[] },
+): Promise<void> {
+  const setups = await ctx.documents.read(shootId, 'lighting', (doc) => wholeSetups(lightingPart(doc)))
+  for (const setupId of setupIds) {
+    const whole = setups.get(setupId)
+    if (whole) await keepRecipe(ctx, { studioId, content: toRecipe(whole) })
+  }
 }
 
 type DemoFile = DemoUpload & { bytes: Uint8Array; processed: ProcessedPicture }

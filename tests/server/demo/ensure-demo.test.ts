@@ -1,9 +1,13 @@
 import { afterAll, beforeAll, describe, expect, it } from 'vitest'
+import { redCautions } from '#shared/domain/lighting/cautions.ts'
+import { problemsOf } from '#shared/domain/lighting/problems.ts'
+import { setupUse } from '#shared/domain/lighting/setup-use.ts'
 import { orderProblem } from '#shared/domain/order/problem.ts'
 import { schedule } from '#shared/domain/order/schedule.ts'
 import { readAll } from '#shared/realtime/collection.ts'
 import { COLLECTIONS, DOCUMENT_KINDS, frames, looks, setups, shots } from '#shared/realtime/documents.ts'
 import { DEMO_PEOPLE } from '#server/demo/people.ts'
+import { listShootRecipes } from '#server/features/recipes/list-shoot-recipes.ts'
 import { listShoots } from '#server/features/shoots/list-shoots.ts'
 import { readShootPlan } from '#server/features/plan/read-shoot-plan.ts'
 import { listSignOffs } from '#server/features/sign-off/list-sign-offs.ts'
@@ -54,6 +58,26 @@ describe('ensureDemo', () => {
     )
     expect(stands.broken.map(({ words }) => words)).toEqual([])
     expect(stands.wrapMin).toBeLessThanOrEqual(day.day.hardOutMin)
+  })
+
+  it('keeps two setups as recipes of the studio', async () => {
+    const { recipes } = await listShootRecipes(site.ctx('photographer'), site.shootId)
+    expect(recipes.map(({ name }) => name).sort()).toEqual(['Octa left, soft fill', 'Window side, cool wall'])
+  })
+
+  it('has setups without a red caution or a problem, none of them a main from above with a warm wall and a narrow fill', async () => {
+    const plan = await readShootPlan(site.ctx('photographer'), site.shootId)
+    for (const whole of plan.setups.values()) {
+      expect(redCautions(whole, setupUse(plan, whole.setup.id)), whole.setup.name).toEqual([])
+      expect(problemsOf(whole)).toEqual([])
+      const fromAbove = whole.lights.some(
+        ({ purpose, support }) => purpose === 'main' && support?.numbers.kind === 'boom',
+      )
+      const warmWall = whole.lights.some(
+        ({ purpose, gels }) => purpose === 'background' && gels.some((gel) => gel.numbers.miredShift.value > 0),
+      )
+      expect(fromAbove && warmWall).toBe(false)
+    }
   })
 
   it('has a look that changed after the client signed it off', async () => {

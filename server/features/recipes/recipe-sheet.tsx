@@ -4,7 +4,8 @@ import type { ReactElement, ReactNode } from 'react'
 import type { Paper } from '#shared/api/recipes.ts'
 import type { Orientation } from '#shared/domain/lighting/frame.ts'
 import type { WholeSetup } from '#shared/domain/plan/read-plan.ts'
-import { SHEET_DEFERS, type Sheet, type SheetLight, type SheetLine } from '#shared/domain/recipes/sheet.ts'
+import type { SheetLine } from '#shared/domain/recipes/sheet-groups.ts'
+import { SHEET_DEFERS, type Sheet, type SheetLight } from '#shared/domain/recipes/sheet.ts'
 import type { LengthUnit } from '#shared/units/length.ts'
 import { TEXT_FONT, TITLE_FONT, loadFonts } from '#server/features/pdf/fonts.ts'
 import { PlanOnPaper } from './plan-on-paper.tsx'
@@ -172,8 +173,8 @@ function LightTable({ lights, print }: { lights: readonly SheetLight[]; print: P
 function Readings({ lines, print }: { lines: readonly SheetLine[]; print: Print }): ReactElement {
   return (
     <View style={{ flexDirection: 'row', flexWrap: 'wrap', columnGap: 10, rowGap: 6 }}>
-      {lines.map((line) => (
-        <View key={line.label} style={{ width: '18%' }} wrap={false}>
+      {lines.map((line, index) => (
+        <View key={index} style={{ width: '18%' }} wrap={false}>
           <Text style={styles.small}>{print(line.label)}</Text>
           <Text style={styles.value} hyphenationPenalty={LATE}>
             {print(line.value)}
@@ -309,6 +310,12 @@ function RecipeSheet({ content, print }: { content: RecipeSheetContent; print: P
         )}
         <Heading>Readings</Heading>
         <Readings lines={sheet.readings} print={print} />
+        {sheet.groups.map((group) => (
+          <View key={group.title}>
+            <Heading>{group.title}</Heading>
+            <Readings lines={group.lines} print={print} />
+          </View>
+        ))}
         <Heading>Camera and set</Heading>
         <Lines lines={sheet.camera} print={print} />
         <Heading>Kit</Heading>

@@ -11,6 +11,7 @@ import { shutterLabel } from '#shared/domain/lighting/stops.ts'
 import { fNumberLabel, inSentence, powerLabel, purposeWord, stopsLabel } from '#shared/domain/lighting/words.ts'
 import type { WholeSetup } from '#shared/domain/plan/read-plan.ts'
 import { type LengthUnit, lengthLabel } from '#shared/units/length.ts'
+import { type SheetGroup, type SheetLine, sheetGroups, shadowLine, sitterName } from './sheet-groups.ts'
 
 /** A light as a row of the sheet, all in words. */
 export type SheetLight = {
@@ -37,13 +38,13 @@ export type SheetLight = {
   note: string
 }
 
-export type SheetLine = { label: string; value: string; more: string }
-
 /** What a recipe sheet says, in words; whoever prints it draws the plan and the side. */
 export type Sheet = {
   lights: SheetLight[]
   panels: SheetLine[]
   readings: SheetLine[]
+  /** What else there is to read, under headings. */
+  groups: SheetGroup[]
   camera: SheetLine[]
   /** Counted: what to bring. */
   kit: { count: number; name: string }[]
@@ -131,8 +132,7 @@ function lightRow(light: Light, name: string, own: LightReading | undefined, who
 }
 
 function readingLines(whole: WholeSetup, reading: SetupReading, unit: LengthUnit): SheetLine[] {
-  const { ratio, wall, main, depth } = reading
-  const length = (metres: number) => lengthLabel(metres, unit, true)
+  const { ratio, wall, main } = reading
   const lines: SheetLine[] = []
   const add = (label: string, value: string, more = '') => lines.push({ label, value, more })
   if (ratio)
@@ -161,15 +161,15 @@ function readingLines(whole: WholeSetup, reading: SetupReading, unit: LengthUnit
     )
   if (main) {
     const deg = Math.round(main.elevationDeg)
-    add('Main and the eye line', `${Math.abs(deg)}° ${deg < 0 ? 'below' : 'above'}`)
+    const rise = lengthLabel(Math.abs(main.aboveEyesM), unit, true)
+    add(
+      'Main and the eye line',
+      `${Math.abs(deg)}° ${deg < 0 ? 'below' : 'above'}`,
+      `its middle is ${rise} ${main.aboveEyesM < 0 ? 'lower' : 'higher'} than the eyes`,
+    )
     add('Softness', `${Math.round(main.apparentSizeDeg)}°`, 'the main, seen from the skin')
   }
-  add(
-    'In focus',
-    depth.farM === null ? `${length(depth.nearM)} on` : `${length(depth.nearM)} to ${length(depth.farM)}`,
-    'from the camera; circle of confusion 0.030 mm',
-  )
-  return lines
+  return [...lines, ...shadowLine({ reading, unit })]
 }
 
 function cameraLines(whole: WholeSetup, reading: SetupReading, unit: LengthUnit): SheetLine[] {
@@ -187,9 +187,9 @@ function cameraLines(whole: WholeSetup, reading: SetupReading, unit: LengthUnit)
       more: `${length(background.widthM)} × ${length(background.heightM)}, ${background.colour}, ${length(-background.zM)} behind the sitter’s mark`,
     },
   ]
-  whole.places.forEach((place, index) => {
+  whole.places.forEach((place) => {
     lines.push({
-      label: whole.places.length > 1 ? `Sitter ${index + 1}` : 'Sitter',
+      label: sitterName(whole, place.id),
       value: place.pose,
       more: [
         floorWords([place.at[0], 0, place.at[1]], unit),
@@ -224,7 +224,8 @@ function cameraLines(whole: WholeSetup, reading: SetupReading, unit: LengthUnit)
 
 /** The words of a setup's recipe sheet: the same numbers that the screen shows, lengths in the wanted unit. */
 export function sheetOf(whole: WholeSetup, use: Pick<SetupUse, 'orientations' | 'frames'>, unit: LengthUnit): Sheet {
-  const reading = readSetup(whole)
+  const asked = { orientations: use.orientations, frames: use.frames, unit }
+  const reading = readSetup(whole, asked)
   const names = lightNames(whole.lights)
   return {
     lights: whole.lights.map((light, index) =>
@@ -247,10 +248,9 @@ export function sheetOf(whole: WholeSetup, use: Pick<SetupUse, 'orientations' | 
         ].join(', '),
       })),
     readings: readingLines(whole, reading, unit),
+    groups: sheetGroups({ whole, reading, use, unit, names }),
     camera: cameraLines(whole, reading, unit),
     kit: kitListOf([whole]).map(({ count, name }) => ({ count, name })),
-    cautions: cautionsOf(whole, { orientations: use.orientations, frames: use.frames, unit }, reading).map(
-      ({ key, tone, title, words }) => ({ key, tone, title, words }),
-    ),
+    cautions: cautionsOf(whole, asked, reading).map(({ key, tone, title, words }) => ({ key, tone, title, words })),
   }
 }

@@ -101,6 +101,6 @@ describe('sheetOf', () => {
   it('is there for a setup with nothing in it', () => {
     const empty = sheetOf({ ...whole({}), places: [] }, { orientations: [], frames: null }, 'm')
     expect(empty.lights).toEqual([])
-    expect(empty.readings.map(({ label }) => label)).toEqual(['Ambient', 'In focus'])
+    expect(empty.readings.map(({ label }) => label)).toEqual(['Ambient'])
   })
 })

@@ -1,0 +1,39 @@
+import { type LengthUnit, METRES_PER_INCH, lengthLabel } from '#shared/units/length.ts'
+import { stopsLabel } from './words.ts'
+
+/** Steps by which a colour is called off from the white balance, mired (assumptions). */
+const SAME_MIRED = 10
+const LITTLE_MIRED = 40
+const CLEAR_MIRED = 100
+
+/** How light looks to a camera, by its mired from the white balance: positive is warmer. */
+export function whiteWords(miredFromWhite: number): string {
+  const off = Math.abs(miredFromWhite)
+  if (off < SAME_MIRED) return 'as white as the camera is set'
+  const much = off < LITTLE_MIRED ? 'a little' : off < CLEAR_MIRED ? 'clearly' : 'much'
+  return `${much} ${miredFromWhite > 0 ? 'warmer' : 'cooler'} than the camera is set`
+}
+
+/** "2 stops under the main", "⅓ stop over the flash", "level with the main". Positive is under. */
+export function underWords(underStops: number, what: string): string {
+  const label = stopsLabel(underStops).slice(1)
+  if (label === '') return `level with ${what}`
+  const isOne = /^[1⅓⅔]$/.test(label)
+  return `${label} ${isOne ? 'stop' : 'stops'} ${underStops > 0 ? 'under' : 'over'} ${what}`
+}
+
+/** A length in metres shorter than a hand: "30 mm", "1.2″". */
+export function smallLabel(metres: number, unit: LengthUnit): string {
+  return unit === 'm' ? `${Math.round(metres * 1000)} mm` : `${(metres / METRES_PER_INCH).toFixed(1)}″`
+}
+
+/** A length in metres that may be short: "18 cm", "1.4 m", "0′ 7″". */
+export function depthLabel(metres: number, unit: LengthUnit): string {
+  return unit === 'm' && metres < 1 ? `${Math.round(metres * 100)} cm` : lengthLabel(metres, unit)
+}
+
+/** Two lengths in metres: "1.2 × 0.9 m", "3′ 11″ × 2′ 11″". */
+export function sizeLabel(widthM: number, heightM: number, unit: LengthUnit): string {
+  const [width, height] = [lengthLabel(widthM, unit), lengthLabel(heightM, unit)]
+  return `${unit === 'm' ? width.replace(' m', '') : width} × ${height}`
+}

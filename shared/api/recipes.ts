@@ -6,6 +6,8 @@ import { recipeSchema } from '#shared/domain/recipes/schema.ts'
 
 /** Recipes a studio may keep. */
 export const MOST_RECIPES = 200
+/** Most bytes all of them may have as JSON: every list of them carries all. */
+export const RECIPES_MAX_BYTES = 8 * 1024 * 1024
 
 export const recipeNameSchema = lineSchema(80)
 

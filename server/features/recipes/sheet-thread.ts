@@ -1,4 +1,5 @@
 import { Worker } from 'node:worker_threads'
+import { AppError } from '#server/errors.ts'
 import { queueOf } from '#server/features/uploads/queue.ts'
 import type { RecipeSheetContent } from './recipe-sheet.tsx'
 import type { SheetAnswer } from './sheet-worker.ts'
@@ -33,24 +34,31 @@ function letGo(which: Worker): void {
   void which.terminate()
 }
 
+const givenUp = (what: string, cause?: unknown) =>
+  new AppError('INTERNAL', `${what} No sheet was made, and nothing was changed; try again.`, { cause })
+
 function lay(content: RecipeSheetContent): Promise<Uint8Array> {
   clearTimeout(idle)
   const current = (worker ??= start())
   return new Promise((resolve, reject) => {
-    const tooLong = setTimeout(() => letGo(current), SHEET_MS)
+    const tooLong = setTimeout(() => {
+      end()
+      letGo(current)
+      reject(givenUp(`The sheet was given up after ${SHEET_MS / 1000} seconds.`))
+    }, SHEET_MS)
     const onMessage = (answer: SheetAnswer) => {
       end()
       if ('pdf' in answer) resolve(answer.pdf)
-      else reject(new Error(`A sheet could not be laid out: ${answer.failed}`))
+      else reject(givenUp('The sheet could not be laid out.', new Error(answer.failed)))
     }
     const onError = (error: unknown) => {
       letGo(current)
       end()
-      reject(new Error('A sheet could not be laid out.', { cause: error }))
+      reject(givenUp('The sheet could not be laid out.', error))
     }
     const onExit = () => {
       end()
-      reject(new Error('The thread that lays sheets out ended.'))
+      reject(givenUp('The sheet could not be laid out.', new Error('the thread that lays sheets out ended')))
     }
     current.on('message', onMessage).on('error', onError).on('exit', onExit)
     current.postMessage(content)

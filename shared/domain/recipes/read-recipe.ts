@@ -1,5 +1,12 @@
 import type { z } from 'zod'
-import { RECIPE_FORMAT, RECIPE_MAX_BYTES, RECIPE_VERSION, type Recipe, recipeSchema } from './schema.ts'
+import {
+  RECIPE_FORMAT,
+  RECIPE_MAX_BYTES,
+  RECIPE_MOST_NUMBER,
+  RECIPE_VERSION,
+  type Recipe,
+  recipeSchema,
+} from './schema.ts'
 
 /** A recipe, or why there is none, in one plain sentence that names what is wrong and where. */
 export type RecipeRead = { recipe: Recipe; problem: null } | { recipe: null; problem: string }
@@ -46,7 +53,13 @@ export function checkRecipe(content: unknown): RecipeRead {
     )
   }
   const parsed = recipeSchema.safeParse(content)
-  if (parsed.success) return { recipe: parsed.data, problem: null }
+  if (parsed.success) {
+    const beyond = pathBeyond(parsed.data)
+    if (!beyond) return { recipe: parsed.data, problem: null }
+    return refused(
+      `This recipe cannot be read: ${placeOf(beyond)} is ${shown(beyond.reduce<unknown>(at, parsed.data))}, more than anything here can be. Nothing was changed.`,
+    )
+  }
   const issues = parsed.error.issues.map(nearest)
   const [first] = issues
   const more = issues.length - 1
@@ -54,6 +67,17 @@ export function checkRecipe(content: unknown): RecipeRead {
   return refused(
     `This recipe cannot be read: ${first ? sentence(first, content) : 'it is damaged'}.${others} Nothing was changed.`,
   )
+}
+
+/** Where the first number stands that is larger than any setup's, above or below zero. */
+function pathBeyond(value: unknown): PropertyKey[] | null {
+  if (typeof value === 'number') return Math.abs(value) > RECIPE_MOST_NUMBER ? [] : null
+  if (typeof value !== 'object' || value === null) return null
+  for (const [key, part] of Object.entries(value)) {
+    const rest = pathBeyond(part)
+    if (rest) return [Array.isArray(value) ? Number(key) : key, ...rest]
+  }
+  return null
 }
 
 type Issue = z.core.$ZodIssue

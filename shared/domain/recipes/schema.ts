@@ -10,8 +10,10 @@ export const RECIPE_FORMAT = 'sconce recipe'
 /** Raised when a recipe written before could not be read any more. What is only added has a default instead. */
 export const RECIPE_VERSION = 1
 
-/** A larger file is no recipe. */
-export const RECIPE_MAX_BYTES = 2 * 1024 * 1024
+/** A larger file is no recipe: what keeps one in the studio carries no more. */
+export const RECIPE_MAX_BYTES = 1024 * 1024
+/** No number of a recipe is larger, above or below zero; what nobody could have meant is refused. */
+export const RECIPE_MOST_NUMBER = 10_000_000
 /** Most parts of a recipe, by kind. */
 export const RECIPE_MOST = { lights: 60, places: 40, props: 100 } as const
 

@@ -1,7 +1,7 @@
 import { eq } from 'drizzle-orm'
 import { afterAll, beforeAll, beforeEach, describe, expect, it } from 'vitest'
 import { recipeIdSchema } from '#shared/ids.ts'
-import { MOST_RECIPES } from '#shared/api/recipes.ts'
+import { MOST_RECIPES, RECIPES_MAX_BYTES } from '#shared/api/recipes.ts'
 import type { Ctx } from '#server/context.ts'
 import { auditEvent } from '#server/db/schema/people.ts'
 import { recipe } from '#server/db/schema/studios.ts'
@@ -85,6 +85,23 @@ describe('keepRecipe', () => {
       })),
     )
     await expect(keep('One more')).rejects.toMatchObject({ code: 'CONFLICT' })
+  })
+
+  it('keeps so much and no more: every list carries all of it', async () => {
+    const heavy = { ...RECIPE, lights: Array(60).fill({ ...RECIPE.lights[0], note: 'x'.repeat(500) }) }
+    const bytes = JSON.stringify(heavy).length
+    await app.db.insert(recipe).values(
+      Array.from({ length: Math.floor(RECIPES_MAX_BYTES / bytes) }, (_, index) => ({
+        id: recipeIdSchema.parse(crypto.randomUUID()),
+        studioId: world.studioId,
+        name: `Recipe ${index}`,
+        content: heavy,
+      })),
+    )
+    await expect(keepRecipe(ctx, { studioId: world.studioId, content: heavy })).rejects.toMatchObject({
+      code: 'CONFLICT',
+      message: expect.stringContaining('take 8 MB, as much as they can'),
+    })
   })
 })
 

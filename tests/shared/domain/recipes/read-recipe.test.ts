@@ -74,6 +74,23 @@ describe('readRecipe', () => {
     expect(problemOf(['note'], 'x'.repeat(3000))).toContain('note is longer than 2000 characters')
   })
 
+  it('refuses numbers that nobody can have meant, and lets those through that only a kit room refuses', () => {
+    const guide = ['lights', 0, 'unit', 'numbers', 'guideNumberM', 'value']
+    expect(problemOf(guide, 1e300)).toBe(
+      'This recipe cannot be read: light 1, unit, guide number is 1e+300, more than anything here can be. Nothing was changed.',
+    )
+    expect(problemOf(['lights', 0, 'gels', 0, 'numbers', 'miredShift', 'value'], -1e9)).toContain('−1000000000')
+    // A setup may have such a light and says so; its recipe is the same setup.
+    for (const value of [0, -40]) expect(problemOf(guide, value)).toBeNull()
+  })
+
+  it('is not held up by lists without end', () => {
+    const endless = (key: string) =>
+      JSON.stringify({ ...recipe, [key]: [] }).replace(`"${key}":[]`, `"${key}":[${'0,'.repeat(400_000)}0]`)
+    for (const key of ['lights', 'places', 'props']) expect(readRecipe(endless(key)).problem).toContain('are 400001')
+    expect(readRecipe('['.repeat(400_000) + ']'.repeat(400_000)).problem).toContain('not a recipe')
+  })
+
   it('counts the places that do not fit beside the first', () => {
     const two = damaged(['lights', 0, 'power'], 7) as Loose
     expect(checkRecipe({ ...two, name: '' }).problem).toContain('One more place does not fit.')
@@ -97,6 +114,6 @@ describe('readRecipe', () => {
 describe('recipeTooLarge', () => {
   it('says how large a file is beside how large it may be', () => {
     expect(recipeTooLarge(RECIPE_MAX_BYTES)).toBeNull()
-    expect(recipeTooLarge(3 * 1024 * 1024)).toContain('3.0 MB, where 2 MB')
+    expect(recipeTooLarge(3 * 1024 * 1024)).toContain('3.0 MB, where 1 MB')
   })
 })

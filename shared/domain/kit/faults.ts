@@ -3,6 +3,9 @@ import type { KitBody, ModifierNumbers, Stated, SupportNumbers, UnitNumbers } fr
 /** What is wrong with one number of a kit item: where it stands within `body.numbers`, and what to do. */
 export type KitFault = { path: (string | number)[]; message: string }
 
+/** No head has more, with whatever is on it. */
+export const MOST_GUIDE_NUMBER_M = 500
+
 type Limits = {
   /** Least that is taken; with `above` it has to be more than that. */
   least: number
@@ -40,7 +43,7 @@ function unitFaults(numbers: UnitNumbers): KitFault[] {
     ...outside('guideNumberM', numbers.guideNumberM, {
       least: 0,
       above: true,
-      most: 500,
+      most: MOST_GUIDE_NUMBER_M,
       unit: 'm',
       what: 'A guide number',
       tooLittle: 'Without a guide number nothing can be worked out: put in the maker’s figure or measure it.',
@@ -68,10 +71,17 @@ function unitFaults(numbers: UnitNumbers): KitFault[] {
     if (focals.has(focalMm))
       faults.push({ path: ['zoom', index, 'focalMm'], message: `${focalMm} mm is there twice: one of them is enough.` })
     focals.add(focalMm)
-    if (guideNumberM > 500)
+    if (guideNumberM > MOST_GUIDE_NUMBER_M)
       faults.push({
         path: ['zoom', index, 'guideNumberM'],
-        message: 'A guide number of more than 500 m is not taken: check the unit.',
+        message: `A guide number of more than ${MOST_GUIDE_NUMBER_M} m is not taken: check the unit.`,
+      })
+  })
+  numbers.metered.forEach(({ guideNumberM }, index) => {
+    if (guideNumberM > MOST_GUIDE_NUMBER_M)
+      faults.push({
+        path: ['metered', index, 'guideNumberM'],
+        message: `A reading that makes a guide number of more than ${MOST_GUIDE_NUMBER_M} m is not taken: check distance and power.`,
       })
   })
   return faults

@@ -1,5 +1,6 @@
 import type { KitItemId } from '#shared/ids.ts'
 import { fNumberLabel, powerLabel } from '#shared/domain/lighting/words.ts'
+import { MOST_GUIDE_NUMBER_M } from './faults.ts'
 import type { Metered, UnitNumbers } from './schema.ts'
 
 /** One reading of a light with a flash meter: incident, on its axis unless `beamShare` says otherwise. */
@@ -29,6 +30,8 @@ type UnitRange = Pick<UnitNumbers, 'minPowerDenominator' | 'zoom'>
 
 const F_LEAST = 0.7
 const F_MOST = 128
+/** Kept to two decimals: less would be nothing. */
+const LEAST_GUIDE_NUMBER_M = 0.01
 
 /**
  * What is wrong with a reading, each with a sentence for its field; none: a guide number can be worked out. Limits of
@@ -52,6 +55,12 @@ export function meterFaults(reading: MeterReading, unit: UnitRange): MeterFault[
   if (!(iso >= 12 && iso <= 409_600)) add('iso', 'The meter’s ISO lies between 12 and 409 600.')
   if (zoomMm !== null && !(zoomMm >= 10 && zoomMm <= 400)) add('zoomMm', 'A zoom setting lies between 10 and 400 mm.')
   else if (zoomMm === null && unit.zoom.length > 0) add('zoomMm', 'This head zooms: say at which setting it was read.')
+  const guideNumberM = guideNumberOfReading(reading)
+  if (faults.length === 0 && !(guideNumberM >= LEAST_GUIDE_NUMBER_M && guideNumberM <= MOST_GUIDE_NUMBER_M))
+    add(
+      'fNumber',
+      `That would be a guide number of ${Number(guideNumberM.toPrecision(3))} m, which no head has: check distance, power and ISO.`,
+    )
   return faults
 }
 

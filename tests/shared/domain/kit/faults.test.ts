@@ -36,6 +36,12 @@ describe('faultsOf', () => {
       },
       '50 mm is there twice',
     ],
+    [
+      'unit',
+      'metered.0.guideNumberM',
+      { metered: [{ modifierKitId: null, guideNumberM: 1e300 }] },
+      'more than 500 m is not taken',
+    ],
     ['lamp', 'luxAtMetre.value', { luxAtMetre: stated(0) }, 'measure it'],
     ['lamp', 'watts.value', { watts: stated(-60) }, 'more than 0 W'],
     ['lamp', 'beamDeg.value', { beamDeg: stated(400) }, 'more than 360 degrees'],

@@ -92,6 +92,8 @@ describe('meterFaults', () => {
     [{ power: 0 }, 'power', 'a part of full'],
     [{ iso: 0 }, 'iso', 'between 12'],
     [{ zoomMm: 5 }, 'zoomMm', 'between 10 and 400'],
+    [{ fNumber: 128, distanceM: 50, power: 1 / 100 }, 'fNumber', 'a guide number of 64000 m, which no head has'],
+    [{ fNumber: 0.7, distanceM: 0.1, iso: 409_600 }, 'fNumber', 'which no head has'],
   ])('refuses %o', (more, field, words) => {
     expect(meterFaults(bare(more), numbers)).toEqual([{ field, message: expect.stringContaining(words) }])
   })

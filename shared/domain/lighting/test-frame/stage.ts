@@ -35,7 +35,7 @@ export type StagedEmitter = Emitter & {
 
 /** How finely distances are kept, metres. */
 export type Fineness = { headM: number; bodyM: number; propM: number }
-export const ROUGH: Fineness = { headM: 0.012, bodyM: 0.03, propM: 0.03 }
+export const ROUGH: Fineness = { headM: 0.016, bodyM: 0.04, propM: 0.04 }
 export const FINE: Fineness = { headM: 0.0045, bodyM: 0.013, propM: 0.012 }
 
 type Rows = Solid['rows']

@@ -37,7 +37,7 @@ describe('createFrameFollower', () => {
     follow(sceneWith())
     vi.advanceTimersByTime(1)
     workers.work()
-    expect(made.snapshot()).toMatchObject({ isFine: false, layers: { width: 55, height: 82 } })
+    expect(made.snapshot()).toMatchObject({ isFine: false, layers: { width: 44, height: 66 } })
     workers.workAll()
     expect(made.snapshot()).toMatchObject({ isFine: true, layers: { width: 219, height: 329 } })
   })

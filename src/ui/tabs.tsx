@@ -24,7 +24,7 @@ export function Tabs<Value extends string>({ label, tabs, value, onChange }: Tab
           <Base.Trigger
             key={tab.value}
             value={tab.value}
-            className="-mb-px border-b-2 border-transparent px-0.5 pt-1.5 pb-2 text-base font-semibold whitespace-nowrap text-ink-soft hover:text-ink data-[state=active]:border-velvet data-[state=active]:text-ink max-md:min-h-11"
+            className="-mb-px border-b-2 border-transparent px-0.5 pt-1.5 pb-2 text-base font-semibold whitespace-nowrap text-ink-soft hover:text-ink data-[state=active]:border-velvet data-[state=active]:text-ink max-md:min-h-11 max-md:min-w-11"
           >
             {tab.label}
           </Base.Trigger>

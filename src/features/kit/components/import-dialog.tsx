@@ -96,7 +96,7 @@ export function ImportDialog({ studioId, kit, onClose }: ImportDialogProps) {
             Only add what is new; leave what is there as it is
           </Checkbox>
         )}
-        <Part title="Cannot be taken" rows={rows.filter((row) => row.kind === 'bad')}>
+        <Part title="Cannot be taken" rows={rows.filter((row) => row.kind === 'bad')} most={IMPORT_ROWS_MAX}>
           {(row) => row.kind === 'bad' && <span className="text-velvet">{row.messages.join(' ')}</span>}
         </Part>
         {!onlyNew && (
@@ -132,12 +132,12 @@ function Remarks({ remarks, leftOut }: { remarks: readonly string[]; leftOut: re
   return all.length === 0 ? null : <Caution tone="draft">{all.join(' ')}</Caution>
 }
 
-/** Rows that are shown of each part; the file has the others. */
+/** Rows that are shown of a part unless it says otherwise; the file has the others. */
 const SHOWN = 200
 
-type PartProps = { title: string; rows: readonly KitRow[]; children: (row: KitRow) => ReactNode }
+type PartProps = { title: string; rows: readonly KitRow[]; most?: number; children: (row: KitRow) => ReactNode }
 
-function Part({ title, rows, children }: PartProps) {
+function Part({ title, rows, most = SHOWN, children }: PartProps) {
   const id = useId()
   if (rows.length === 0) return null
   return (
@@ -146,7 +146,7 @@ function Part({ title, rows, children }: PartProps) {
         {title}
       </h3>
       <ul className="rounded-r border border-hair text-sm">
-        {rows.slice(0, SHOWN).map((row) => (
+        {rows.slice(0, most).map((row) => (
           <li
             key={row.line}
             className="grid grid-cols-[4.5rem_minmax(0,1fr)] gap-x-2 border-t border-hair-soft px-3 py-1.5 first:border-t-0 sm:grid-cols-[4.5rem_minmax(0,2fr)_minmax(0,3fr)]"
@@ -157,7 +157,7 @@ function Part({ title, rows, children }: PartProps) {
           </li>
         ))}
       </ul>
-      {rows.length > SHOWN && <p className="mt-1 text-sm text-ink-soft">And {rows.length - SHOWN} more.</p>}
+      {rows.length > most && <p className="mt-1 text-sm text-ink-soft">And {rows.length - most} more.</p>}
     </section>
   )
 }

@@ -200,7 +200,7 @@ function Name({ item, mayChange, onEdit }: Pick<RowProps, 'item' | 'mayChange' |
     <button
       type="button"
       onClick={() => onEdit(item)}
-      className="rounded-r text-left font-semibold max-md:min-h-11 underline decoration-hair underline-offset-3 hover:decoration-ink"
+      className="rounded-r text-left font-semibold max-md:min-h-11 max-md:min-w-11 underline decoration-hair underline-offset-3 hover:decoration-ink"
     >
       {item.name}
     </button>

@@ -13,6 +13,8 @@ export const kitListSchema = z.object({ kit: z.array(kitItemSchema) })
 /** `version` is the one the editor saw: 409 CONFLICT when somebody changed it meanwhile. */
 export const kitUpdateSchema = kitFieldsSchema.extend({ version: versionSchema }).superRefine(refuseFaults)
 
+/** Most items of a studio's kit: every list of it carries all. */
+export const KIT_ITEMS_MAX = 5000
 /** Most rows of one import. */
 export const IMPORT_ROWS_MAX = 2000
 /** Largest body of an import, bytes. */

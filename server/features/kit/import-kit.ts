@@ -8,7 +8,7 @@ import { withTransaction } from '#server/db/client.ts'
 import { kitItem } from '#server/db/schema/studios.ts'
 import { AppError } from '#server/errors.ts'
 import { lockStudio } from '#server/features/studios/studio-rows.ts'
-import { announceKit, loadKit } from './kit-rows.ts'
+import { announceKit, loadKit, requireRoom } from './kit-rows.ts'
 
 /** Rows a statement: PostgreSQL takes 65,535 parameters. */
 const CHUNK = 1000
@@ -17,7 +17,7 @@ const CHUNK = 1000
  * Writes the agreed rows of a file: new items, and new versions of items that are there; all of them or none. Meter
  * readings that name a new item of the same file get its real id.
  *
- * @throws SIGNED_OUT, NOT_FOUND; BAD_REQUEST when a row is there twice; CONFLICT when an item was changed or taken out since the file was looked at
+ * @throws SIGNED_OUT, NOT_FOUND; BAD_REQUEST when a row is there twice; CONFLICT when an item was changed or taken out since the file was looked at, or the kit is full
  */
 export async function importKit(
   ctx: Ctx,
@@ -32,6 +32,7 @@ export async function importKit(
   await withTransaction(ctx.db, async (tx) => {
     await lockStudio(tx, studioId)
     const stored = new Map((await loadKit(tx, studioId)).map((item) => [item.id, item]))
+    requireRoom(stored.size, newIds.size)
     const at = ctx.now()
     const values = rows.map(({ id, version, input }) => {
       if (version !== null && stored.get(id)?.version !== version)

@@ -1,9 +1,10 @@
 import { and, asc, desc, eq, sql } from 'drizzle-orm'
 import type { KitItemId, StudioId } from '#shared/ids.ts'
-import { type KitItem, kitItemSchema } from '#shared/api/kit.ts'
+import { KIT_ITEMS_MAX, type KitItem, kitItemSchema } from '#shared/api/kit.ts'
 import type { Ctx } from '#server/context.ts'
 import type { Db, Tx } from '#server/db/client.ts'
 import { kitItem } from '#server/db/schema/studios.ts'
+import { AppError } from '#server/errors.ts'
 import { announceToStudio } from '#server/features/studios/studio-rows.ts'
 
 /** A studio's kit as it stands: the newest version of each item, without what was removed, by name. */
@@ -36,6 +37,15 @@ export async function findKitItem(tx: Tx, studioId: StudioId, id: KitItemId): Pr
   return (
     row && { item: kitItemSchema.parse({ ...row.input, id, version: row.version }), isRemoved: row.removedAt !== null }
   )
+}
+
+/** That so many items still go into a kit. @throws CONFLICT */
+export function requireRoom(has: number, more: number): void {
+  if (has + more > KIT_ITEMS_MAX)
+    throw new AppError(
+      'CONFLICT',
+      `The kit room holds ${KIT_ITEMS_MAX} items, as many as it can; ${has} are there. Nothing was changed; remove what nobody lights with any more.`,
+    )
 }
 
 /** Tells everyone who has one of the studio's shoots open that its kit changed. */

@@ -1,10 +1,18 @@
 import { asc, eq } from 'drizzle-orm'
 import { afterAll, beforeAll, beforeEach, describe, expect, it } from 'vitest'
 import { kitItemIdSchema } from '#shared/ids.ts'
-import { IMPORT_ROWS_MAX, type KitImportRow, type KitItem, kitImportRowSchema, kitListSchema } from '#shared/api/kit.ts'
+import {
+  IMPORT_ROWS_MAX,
+  KIT_ITEMS_MAX,
+  type KitImportRow,
+  type KitItem,
+  kitImportRowSchema,
+  kitListSchema,
+} from '#shared/api/kit.ts'
 import { STARTER_KIT } from '#shared/domain/kit/starter.ts'
 import type { Ctx } from '#server/context.ts'
 import { kitItem } from '#server/db/schema/studios.ts'
+import { addKitItem } from '#server/features/kit/add-kit-item.ts'
 import { importKit } from '#server/features/kit/import-kit.ts'
 import { listKit } from '#server/features/kit/list-kit.ts'
 import { removeKitItem } from '#server/features/kit/remove-kit-item.ts'
@@ -91,6 +99,16 @@ describe('importKit', () => {
     await expect(send([changed(kit[0], 'Once'), changed(kit[0], 'Twice')])).rejects.toMatchObject({
       code: 'BAD_REQUEST',
     })
+  })
+
+  it('fills a kit room and then says that it is full', async () => {
+    await send(Array.from({ length: KIT_ITEMS_MAX - kit.length }, (_, index) => fresh(index + 1, `Gel ${index}`)))
+    const full = { code: 'CONFLICT', message: expect.stringContaining('holds 5000 items') }
+    await expect(send([fresh(1, 'One more')])).rejects.toMatchObject(full)
+    const { input } = fresh(1, 'One more')
+    await expect(addKitItem(ctx, { studioId: world.studioId, input })).rejects.toMatchObject(full)
+    const { kit: stored } = await send([changed(kit[3], 'Another name')])
+    expect(stored).toHaveLength(KIT_ITEMS_MAX)
   })
 
   it('is for people of the studio', async () => {

@@ -15,7 +15,7 @@ export type MeterReading = {
   zoomMm: number | null
   /** What is on the head; null: bare. */
   modifier: { kitId: KitItemId; name: string } | null
-  /** Radius of the disc with the area of the emitting face, metres; 0: a point. */
+  /** Radius of the disc that the emitting face counts as, metres; 0: a point. */
   radiusM?: number
   /** Share of the light on axis that reaches the meter's place, in (0, 1]. */
   beamShare?: number
@@ -73,11 +73,6 @@ export function guideNumberOfReading(reading: MeterReading): number {
   const { fNumber, distanceM, power, iso, radiusM = 0, beamShare = 1, gelLossStops = 0 } = reading
   const disc = distanceM ** 2 / (distanceM ** 2 + radiusM ** 2)
   return (fNumber * distanceM * 2 ** (gelLossStops / 2)) / Math.sqrt((iso / 100) * power * beamShare * disc)
-}
-
-/** Radius of the disc with the same area as a face of this width and height, metres. */
-export function discRadiusM(widthM: number, heightM: number): number {
-  return Math.sqrt((widthM * heightM) / Math.PI)
 }
 
 /** A reading in words: "f/5.6 at 2 m, 1/4, ISO 100, 50 mm, with 90 cm octa, 1 Dec 2026". `when` as it shall read. */

@@ -1,4 +1,5 @@
-import { discRadiusM, findMetered } from '#shared/domain/kit/meter-reading.ts'
+import { discRadiusM } from '#shared/domain/kit/face-form.ts'
+import { findMetered } from '#shared/domain/kit/meter-reading.ts'
 import { type Beam, type BeamKind, type Profile, profileOf } from './beam.ts'
 import {
   METER_CONSTANT_C,
@@ -32,9 +33,23 @@ export type Output = {
   luxAtMetre: number | null
 }
 
-/** Whether a number can be worked with as an amount of light: finite and above 0. */
+/** More than this no number about light is (a guard, no source): beyond it squares would run out of numbers. */
+const MOST = 1e9
+
+/** Whether a number can be worked with as an amount of light: above 0 and of this world. */
 export function isAmount(value: number): boolean {
-  return Number.isFinite(value) && value > 0
+  return value > 0 && value <= MOST
+}
+
+/** Whether a loss in stops can be worked with: a modifier neither takes nor gives more (a guard, no source). */
+export function isLoss(stops: number): boolean {
+  return Math.abs(stops) <= 30
+}
+
+/** Share of its light that a light's gels let through together; 0 where one of them lets nothing through. */
+export function gelShareOf(light: Light): number {
+  const gels = light.gels.map((gel) => gel.numbers)
+  return gels.every((gel) => isAmount(gel.transmission.value)) ? 2 ** -stackGels(gels).lossStops : 0
 }
 
 const amount = (value: number) => (isAmount(value) ? value : 0)
@@ -61,11 +76,10 @@ export function outputOf(light: Light, shutterS = 1): Output {
     : guideNumberAtZoom(numbers, zoomOf(light))
   const fullGuideNumberM = amount(metered?.guideNumberM ?? bare)
   const loss = metered ? 0 : (light.modifier?.numbers.lossStops.value ?? 0)
-  const modifierLossStops = Number.isFinite(loss) ? loss : 0
-  const gels = light.gels.map((gel) => gel.numbers)
-  const letsThrough = gels.every((gel) => isAmount(gel.transmission.value))
-  const gelLossStops = letsThrough ? stackGels(gels).lossStops : 0
-  const power = letsThrough ? amount(light.power) : 0
+  const modifierLossStops = isLoss(loss) ? loss : 0
+  const gelShare = gelShareOf(light)
+  const gelLossStops = gelShare > 0 ? -Math.log2(gelShare) : 0
+  const power = gelShare > 0 ? amount(light.power) : 0
   const guideNumberM = guideNumberAfterLoss(
     guideNumberAtPower(fullGuideNumberM, power),
     modifierLossStops + gelLossStops,
@@ -90,10 +104,9 @@ export function faceOf(light: Light): { widthM: number; heightM: number } {
   return { widthM: numbers.widthM, heightM: numbers.heightM }
 }
 
-/** Radius of the disc with the same area as the emitting face, metres. */
+/** Radius of the disc that the emitting face counts as, metres; 0 for a ball. */
 export function faceRadiusM(light: Light): number {
-  const { widthM, heightM } = faceOf(light)
-  return discRadiusM(widthM, heightM)
+  return discRadiusM({ shape: light.modifier?.numbers.shape ?? 'bare', ...faceOf(light) })
 }
 
 /** Nearer than this the distance counts as this, metres. */
@@ -175,7 +188,8 @@ function strengthAt(emission: Emission, x: number, y: number, z: number, upright
 
 /**
  * A light at a point, metered towards it, at a sensitivity: H = 2.5·GN²/d² on axis, times the beam's share off axis
- * (nothing behind the face, save of a lantern), times d²/(d² + r²) for a face of the same area as a disc of radius r.
+ * (nothing behind the face, save of a lantern), times d²/(d² + r²) for a face that counts as a disc of radius r. That is
+ * exact on a disc's axis; close to a large face and far off its axis, as behind one that is turned away, more arrives.
  */
 export function arrivalOf(emission: Emission, point: Point, iso: number): Arrival {
   const { light, output } = emission

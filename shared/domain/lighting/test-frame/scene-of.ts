@@ -1,3 +1,4 @@
+import { faceFormOf } from '#shared/domain/kit/face-form.ts'
 import type { WholeSetup } from '#shared/domain/plan/read-plan.ts'
 import { guessedAppearance, reflectedRgb, seedOf, skinRgb } from '../appearance.ts'
 import { type Orientation, viewOf } from '../frame.ts'
@@ -22,12 +23,11 @@ const ROOM_REFLECTANCE = 0.3
 
 function emitterOf(light: Light): Emitter {
   const { widthM, heightM } = faceOf(light)
-  const shape = light.modifier?.numbers.shape
   return {
     id: light.id,
     at: light.at,
     aim: light.aim,
-    shape: shape === 'lantern' ? 'ball' : shape === 'softbox' || shape === 'strip' ? 'rectangle' : 'disc',
+    shape: faceFormOf(light.modifier?.numbers.shape ?? 'bare'),
     widthM,
     heightM,
     // Power, gels and the switch only weigh the layer; a lamp burns for a second.

@@ -1,3 +1,4 @@
+import type { FaceForm } from '#shared/domain/kit/face-form.ts'
 import type { PROP_SHAPES, BACKGROUND_SURFACES } from '../schema.ts'
 import type { Beam } from '../beam.ts'
 import type { View } from '../frame.ts'
@@ -47,7 +48,7 @@ export type Emitter = {
   id: string
   at: Place
   aim: Place
-  shape: 'disc' | 'rectangle' | 'ball'
+  shape: FaceForm
   widthM: number
   heightM: number
   /** Intensity on its axis at full power without gels: lx·s·m² for a flash, cd for a lamp. */

@@ -30,8 +30,8 @@ export function facing(emitter: StagedEmitter, dx: number, dy: number, dz: numbe
 
 /**
  * Adds one light's exposure of a spot, sent towards the eye at v (unit, from the spot). The face is taken point by
- * point: H = I(θ)·cos φ/d² from each, which on the axis of a disc gives d²/(d² + r²). `visible`: share of its face
- * that the spot sees.
+ * point: H = I(θ)·cos φ/d² from each, which on the axis of a disc gives d²/(d² + r²), and of a ball as much as from its
+ * middle. `visible`: share of its face that the spot sees.
  */
 export function addEmitter(
   emitter: StagedEmitter,
@@ -54,7 +54,8 @@ export function addEmitter(
   const share = emitter.profile.shareAt(Math.acos(clamp(onAxis, -1, 1)) * DEG)
   if (share < 1e-6) return
   facing(emitter, cx / distance, cy / distance, cz / distance)
-  const normal = ball ? 1 : Math.max(0.05, onAxis)
+  const normal = Math.max(0.05, onAxis)
+  const ballShare = 1 / distance ** 3
   const halfW = emitter.widthM / 2
   const halfH = emitter.heightM / 2
   const { nx, ny, nz, wrapR, wrapG, wrapB } = spot
@@ -83,7 +84,7 @@ export function addEmitter(
     const lz = lz0 * inverse
     const leaving = ball ? 1 : -(ax * lx + ay * ly + az * lz)
     if (leaving <= 0) continue
-    const weight = leaving / normal / s2
+    const weight = ball ? s2 * inverse * ballShare : leaving / normal / s2
     const facingLight = nx * lx + ny * ly + nz * lz
     if (isWrapped) {
       const wr = (facingLight + wrapR) / (1 + wrapR)
@@ -220,7 +221,7 @@ export function plainExposure(
   if (facingLight <= 0) return 0
   const onAxis = -(emitter.axis[0] * cx + emitter.axis[1] * cy + emitter.axis[2] * cz) / distance
   if (onAxis <= 0 && emitter.shape !== 'ball') return 0
-  const r2 = emitter.areaM2 / Math.PI
+  const r2 = emitter.shape === 'ball' ? 0 : emitter.areaM2 / Math.PI
   return (
     (emitter.axisIntensity * emitter.profile.shareAt(Math.acos(clamp(onAxis, -1, 1)) * DEG) * facingLight) / (s2 + r2)
   )

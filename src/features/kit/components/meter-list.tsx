@@ -1,9 +1,9 @@
 import { X } from 'lucide-react'
 import { useState } from 'react'
 import type { KitItem } from '#shared/api/kit.ts'
+import { discRadiusM } from '#shared/domain/kit/face-form.ts'
 import {
   type MeterReading,
-  discRadiusM,
   guideNumberOfReading,
   meterFaults,
   meteredOf,
@@ -113,8 +113,7 @@ function MeterEntry({ numbers, modifiers, onAdd, onCancel }: MeterEntryProps) {
           onChange={(kitId) => {
             const item = modifiers.find(({ id }) => id === kitId)
             if (item?.body.kind !== 'modifier') return set({ modifier: null, radiusM: 0 })
-            const { widthM, heightM } = item.body.numbers
-            set({ modifier: { kitId: item.id, name: item.name }, radiusM: discRadiusM(widthM, heightM) })
+            set({ modifier: { kitId: item.id, name: item.name }, radiusM: discRadiusM(item.body.numbers) })
           }}
         />
       </Field>

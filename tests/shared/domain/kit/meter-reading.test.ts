@@ -3,7 +3,6 @@ import { describe, expect, it } from 'vitest'
 import { kitItemIdSchema } from '#shared/ids.ts'
 import {
   type MeterReading,
-  discRadiusM,
   findMetered,
   guideNumberOfReading,
   meterFaults,
@@ -68,14 +67,6 @@ describe('guideNumberOfReading', () => {
         },
       ),
     )
-  })
-})
-
-describe('discRadiusM', () => {
-  it('keeps the area: a face of 1 × 1 m is a disc of 0.564 m', () => {
-    // Closed form: √(1/π).
-    expect(discRadiusM(1, 1)).toBeCloseTo(0.5642, 4)
-    expect(discRadiusM(0, 0)).toBe(0)
   })
 })
 

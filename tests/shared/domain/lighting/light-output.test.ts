@@ -8,8 +8,10 @@ import {
   exposureOnWall,
   faceOf,
   faceRadiusM,
+  gelShareOf,
   incidenceShare,
   isAmount,
+  isLoss,
   outputOf,
   zoomOf,
 } from '#shared/domain/lighting/light-output.ts'
@@ -17,7 +19,7 @@ import type { Point } from '#shared/domain/lighting/schema.ts'
 import { guideNumberOfReading } from '#shared/domain/kit/meter-reading.ts'
 import { kitItemIdSchema } from '#shared/ids.ts'
 import { lampUnit } from '#tests/support/lamp-sample.ts'
-import { FULL_WARM, GRID, OCTA, light, modifier, unit } from '#tests/support/lighting-sample.ts'
+import { FULL_WARM, GRID, OCTA, gel, light, modifier, unit } from '#tests/support/lighting-sample.ts'
 
 const bare = (more: object = {}) => light(1, { purpose: 'main', at: [0, 1.5, 2], aim: [0, 1.5, 0], power: 1, ...more })
 const FACE: Point = [0, 1.5, 0]
@@ -40,8 +42,12 @@ describe('faceOf', () => {
 })
 
 describe('faceRadiusM', () => {
-  it('is the radius of a disc of the same area', () => {
-    expect(faceRadiusM(bare({ modifier: OCTA }))).toBeCloseTo(0.9 / Math.sqrt(Math.PI), 9)
+  it('is half of what is round, that of a rectangle’s area, and nothing for a ball', () => {
+    const shaped = (shape: string) => faceRadiusM(bare({ modifier: modifier(972, 'Face', { shape }) }))
+    expect(shaped('octa')).toBeCloseTo(0.45, 9)
+    expect(shaped('softbox')).toBeCloseTo(0.9 / Math.sqrt(Math.PI), 9)
+    expect(shaped('lantern')).toBe(0)
+    expect(faceRadiusM(bare())).toBeCloseTo(0.03, 9)
   })
 })
 
@@ -187,7 +193,21 @@ describe('zoomOf', () => {
 })
 
 describe('isAmount', () => {
-  it('is above 0 and finite', () => {
-    expect([1, 0, -1, NaN, Infinity].map(isAmount)).toEqual([true, false, false, false, false])
+  it('is above 0 and of this world', () => {
+    expect([1, 0, -1, NaN, Infinity, 1e300].map(isAmount)).toEqual([true, false, false, false, false, false])
+  })
+})
+
+describe('isLoss', () => {
+  it('is a number of stops that something before a light may take', () => {
+    expect([2.3, -1, NaN, -1e6].map(isLoss)).toEqual([true, true, false, false])
+  })
+})
+
+describe('gelShareOf', () => {
+  it('multiplies what gels let through, and is nothing where one lets nothing through', () => {
+    expect(gelShareOf(bare())).toBe(1)
+    expect(gelShareOf(bare({ gels: [FULL_WARM, FULL_WARM] }))).toBeCloseTo(0.47 ** 2, 9)
+    expect(gelShareOf(bare({ gels: [FULL_WARM, gel(960, 'Tin foil', 0, -1)] }))).toBe(0)
   })
 })

@@ -33,7 +33,7 @@ describe('wallMap', () => {
     }
     const map = wallMap(setupOf([main, window]), { columns: 12, rows: 8 })
     // The main's spill is 4 m off: the same bare head, even to all sides (beam not known), cos³ over d².
-    const disc = (0.06 * 0.06) / Math.PI
+    const disc = 0.03 ** 2
     const expected = (x: number, y: number) => {
       const near = (x - 0.5) ** 2 + (y - 1.5) ** 2
       const own = 2.5 * 40 ** 2 * 0.25 * (1 / (1 + near)) ** 2

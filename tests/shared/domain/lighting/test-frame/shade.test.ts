@@ -32,6 +32,13 @@ function lit(more: Parameters<typeof emitter>[0], normal: [number, number, numbe
 }
 
 describe('addEmitter', () => {
+  it('gives of a ball as much as from its middle, and of a disc d²/(d² + r²)', () => {
+    // Closed forms: a Lambertian sphere, a disc on its axis (IES definitions 9.1.1); 1 m off, 0.65 m wide.
+    const size = { at: [0, 1.5, -1] as const, aim: [0, 1.5, -2] as const, widthM: 0.65, heightM: 0.65 }
+    expect(lit({ ...size, shape: 'ball' }, [0, 0, 1])).toBeCloseTo(1000, 6)
+    expect(plainExposure(staged({ ...size, shape: 'ball' }).only, 0, 1.5, -2, 0, 0, 1)).toBeCloseTo(1000, 6)
+    expect(lit({ ...size, shape: 'disc' }, [0, 0, 1]) / (1000 / (1 + 0.325 ** 2))).toBeCloseTo(1, 2)
+  })
   it('follows the cosine of the slant: 1000 cd at 2 m, 30° are 216.5064 lx', () => {
     // E = I·cos θ/d² (IES 9.1.2; check values, topic 06).
     const slanted: [number, number, number] = [Math.sin(Math.PI / 6), 0, Math.cos(Math.PI / 6)]

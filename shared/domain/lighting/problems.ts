@@ -3,8 +3,8 @@ import { type LengthUnit, lengthLabel } from '#shared/units/length.ts'
 import { isBehindBackground } from './at-sitter.ts'
 import { shifted, stackGels } from './gel.ts'
 import { distanceBetween, facePoint } from './geometry.ts'
-import { NEAREST_M, isAmount, outputOf } from './light-output.ts'
-import { ownColourK } from './light-source.ts'
+import { NEAREST_M, isAmount, isLoss, outputOf } from './light-output.ts'
+import { ASSUMED_COLOUR_K, hasColour, ownColourK } from './light-source.ts'
 import { type Light, isLamp } from './schema.ts'
 import { inSentence, purposeWord } from './words.ts'
 
@@ -13,6 +13,7 @@ export type ProblemKey =
   | 'lux'
   | 'power'
   | 'modifier-loss'
+  | 'colour'
   | 'gel-transmission'
   | 'gel-colour'
   | 'distance'
@@ -26,8 +27,8 @@ function numberProblems(light: Light, name: string): Problem[] {
   const { numbers } = light.unit
   const problems: Problem[] = []
   const add = (key: ProblemKey, words: string) => problems.push({ lightId: light.id, key, words })
+  const unit = inSentence(light.unit.name)
   if (outputOf(light).fullGuideNumberM === 0) {
-    const unit = inSentence(light.unit.name)
     if (isLamp(numbers))
       add(
         'lux',
@@ -45,9 +46,17 @@ function numberProblems(light: Light, name: string): Problem[] {
       light.power > 1 ? 'Nothing gives more than full power, 1.' : 'Power is above 0: until then it reads nothing.'
     add('power', `The ${name} ${set}. ${what}`)
   }
+  if (!hasColour(numbers))
+    add(
+      'colour',
+      `The ${name}’s unit, ${unit}, has no colour temperature: put in the maker’s figure. Until then ${ASSUMED_COLOUR_K} K is taken.`,
+    )
   const loss = light.modifier?.numbers.lossStops.value ?? 0
-  if (light.modifier && !Number.isFinite(loss))
-    add('modifier-loss', `The loss of the ${inSentence(light.modifier.name)} is not a number: it is taken as 0 stops.`)
+  if (light.modifier && !isLoss(loss))
+    add(
+      'modifier-loss',
+      `The loss of the ${inSentence(light.modifier.name)} is no number of stops to work with: it is taken as 0 stops.`,
+    )
   return problems
 }
 
@@ -87,7 +96,7 @@ function placeProblems(light: Light, whole: WholeSetup, name: string, unit: Leng
 
 /**
  * What cannot be worked out about a setup, each with a sentence for its light: no guide number, power or transmission,
- * no distance or direction, behind the wall, no colour temperature. Such a light reads 0 or is taken as its sentence
+ * no distance or direction, behind the wall, no colour temperature of its own or behind its gels. Such a light reads 0 or is taken as its sentence
  * says; all others are read as ever.
  */
 export function problemsOf(whole: WholeSetup, unit: LengthUnit = 'm'): Problem[] {

@@ -1,7 +1,7 @@
 import type { WholeSetup } from '#shared/domain/plan/read-plan.ts'
 import { facePoint } from './geometry.ts'
 import { shifted, stackGels } from './gel.ts'
-import { axisOnWall } from './light-output.ts'
+import { axisOnWall, beamOf } from './light-output.ts'
 import { ownColourK } from './light-source.ts'
 import type { Light, Point } from './schema.ts'
 
@@ -210,8 +210,9 @@ function beamMark(light: Light, whole: WholeSetup, at: (x: number, z: number) =>
   const dz = target[2] - light.at[2]
   const length = Math.hypot(dx, dz)
   if (length < 0.05 || !light.isOn) return null
-  const beamDeg = light.modifier?.numbers.beamDeg?.value ?? null
-  const spread = beamDeg === null || beamDeg >= 170 ? Infinity : Math.tan((beamDeg * Math.PI) / 360) * length
+  const { beamDeg } = beamOf(light)
+  const isKnown = beamDeg !== null && beamDeg > 0 && beamDeg < 170
+  const spread = isKnown ? Math.tan((beamDeg * Math.PI) / 360) * length : Infinity
   const widest = wall ? 0.9 : light.purpose === 'main' || light.purpose === 'fill' ? 0.26 : 0.18
   const half = Math.min(spread, widest)
   const looksAtFace = !wall && Math.hypot(target[0] - face[0], target[2] - face[2]) < 0.5

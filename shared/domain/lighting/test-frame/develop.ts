@@ -1,5 +1,6 @@
 import { METER_CONSTANT_C } from '../exposure.ts'
 import { miredOf, stackGels } from '../gel.ts'
+import { gelShareOf } from '../light-output.ts'
 import { ownColourK } from '../light-source.ts'
 import { type Light, type Setup, isLamp } from '../schema.ts'
 import { lightColour } from './light-colour.ts'
@@ -17,10 +18,10 @@ function cameraScale(camera: Setup['camera']): number {
 /** What a light's layer weighs: power, gels, colour against the white balance, the camera. Off: 0. */
 export function lightWeight(light: Light, camera: Setup['camera']): Rgb {
   if (!light.isOn || !(light.power > 0)) return [0, 0, 0]
-  const gels = stackGels(light.gels.map((gel) => gel.numbers))
-  const colour = lightColour(miredOf(ownColourK(light.unit.numbers)) + gels.miredShift, camera.whiteBalanceK)
+  const { miredShift } = stackGels(light.gels.map((gel) => gel.numbers))
+  const colour = lightColour(miredOf(ownColourK(light.unit.numbers)) + miredShift, camera.whiteBalanceK)
   const amount =
-    light.power * gels.transmission * (isLamp(light.unit.numbers) ? camera.shutterS : 1) * cameraScale(camera)
+    light.power * gelShareOf(light) * (isLamp(light.unit.numbers) ? camera.shutterS : 1) * cameraScale(camera)
   return [colour[0] * amount, colour[1] * amount, colour[2] * amount]
 }
 

@@ -26,9 +26,12 @@ function matching(nm: number): [number, number, number] {
   ]
 }
 
-/** XYZ with Y = 1 of a full radiator; `mired` at least 1, where its colour hardly changes any more. */
+/** Up to here, 200 K, there are numbers for how little of it is seen; nothing glows visibly below. */
+const MOST_MIRED = 5000
+
+/** XYZ with Y = 1 of a full radiator; `mired` from 1, where its colour hardly changes any more, to 5000. */
 export function radiatorXyz(mired: number): [number, number, number] {
-  const perMired = C2_NM_K * (Math.max(1, mired) / 1e6)
+  const perMired = C2_NM_K * (Math.min(MOST_MIRED, Math.max(1, mired)) / 1e6)
   let x = 0
   let y = 0
   let z = 0

@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest'
-import { ownColourK, zoomTableOf } from '#shared/domain/lighting/light-source.ts'
+import { ASSUMED_COLOUR_K, hasColour, ownColourK, zoomTableOf } from '#shared/domain/lighting/light-source.ts'
 import { lampUnit } from '#tests/support/lamp-sample.ts'
 import { light, unit } from '#tests/support/lighting-sample.ts'
 
@@ -10,6 +10,15 @@ describe('ownColourK', () => {
   it('is a head’s flash colour or a lamp’s colour', () => {
     expect(ownColourK(numbersOf(unit()))).toBe(5500)
     expect(ownColourK(numbersOf(lampUnit(4000)))).toBe(5600)
+  })
+})
+
+describe('hasColour', () => {
+  it('knows a colour temperature from a number that is none, for which daylight is taken', () => {
+    const of = (value: number) =>
+      numbersOf(unit(undefined, { flashColourK: { value, from: 'assumed', source: 'sample' } }))
+    expect([3200, 0, -5600, 1e-300].map((value) => hasColour(of(value)))).toEqual([true, false, false, false])
+    expect(ownColourK(of(0))).toBe(ASSUMED_COLOUR_K)
   })
 })
 

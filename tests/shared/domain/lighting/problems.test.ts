@@ -76,6 +76,27 @@ const ODD: [string, Light, string, RegExp, number | null][] = [
   ['a light that looks at itself', rim({ aim: [1, 2, -1] }), 'aim', /^The rim looks at the point it stands on/, null],
   ['a light behind the wall', rim({ at: [1, 2, -3] }), 'behind-wall', /^The rim stands behind the wall/, 0],
   [
+    'a unit of no colour',
+    rim({ unit: unit(undefined, { flashColourK: stated(0) }) }),
+    'colour',
+    /^The rim’s unit, small flash, has no colour temperature: .* 5500 K is taken/,
+    null,
+  ],
+  [
+    'a guide number of another world',
+    rim({ unit: unit(undefined, { guideNumberM: stated(1e300) }) }),
+    'guide-number',
+    /no guide number/,
+    0,
+  ],
+  [
+    'a gain of another world',
+    rim({ modifier: modifier(962, 'Old box', { lossStops: stated(-1e6) }) }),
+    'modifier-loss',
+    /^The loss of the old box is no number of stops/,
+    null,
+  ],
+  [
     'a loss that is no number',
     {
       ...rim(),
@@ -85,7 +106,7 @@ const ODD: [string, Light, string, RegExp, number | null][] = [
       },
     } as Light,
     'modifier-loss',
-    /^The loss of the old box is not a number/,
+    /^The loss of the old box is no number of stops/,
     null,
   ],
 ]

@@ -11,7 +11,7 @@ import {
   weightsOf,
 } from '#shared/domain/lighting/test-frame/develop.ts'
 import { AMBIENT, type Layers } from '#shared/domain/lighting/test-frame/render.ts'
-import { FULL_WARM, light, whole } from '#tests/support/lighting-sample.ts'
+import { FULL_WARM, gel, light, unit, whole } from '#tests/support/lighting-sample.ts'
 
 const LAYERS: Layers = {
   width: 2,
@@ -44,6 +44,19 @@ describe('lightWeight', () => {
     const luminance = (x: number, y: number, z: number) => 0.2126729 * x + 0.7151522 * y + 0.072175 * z
     expect(luminance(r, g, b) / luminance(r0, g0, b0)).toBeCloseTo(0.47, 6)
     expect(r / b).toBeGreaterThan(r0 / b0)
+  })
+})
+
+describe('lightWeight of what cannot be worked with', () => {
+  it('is what the readings take: nothing behind a gel that lets nothing through, daylight for no colour', () => {
+    const odd = (more: object) => light(1, { purpose: 'main', at: [0, 1, 1], aim: [0, 1, 0], power: 1, ...more })
+    const foil = gel(960, 'Tin foil', 0, -0.5)
+    expect(lightWeight(odd({ gels: [foil] }), SETUP.camera)).toEqual([0, 0, 0])
+    expect(lightWeight(odd({ gels: [foil, foil] }), SETUP.camera)).toEqual([0, 0, 0])
+    const none = unit(undefined, { flashColourK: { value: 0, from: 'assumed', source: 'sample' } })
+    expect(lightWeight(odd({ unit: none }), SETUP.camera)).toEqual(lightWeight(odd({}), SETUP.camera))
+    const red = gel(961, 'Deepest', 1e6, 0.5)
+    expect(lightWeight(odd({ gels: [red] }), SETUP.camera).every(Number.isFinite)).toBe(true)
   })
 })
 

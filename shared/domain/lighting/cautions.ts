@@ -3,11 +3,11 @@ import { type LengthUnit, METRES_PER_FOOT, lengthLabel } from '#shared/units/len
 import { type BoomBalance, boomBalanceOf, loadKgOf } from './boom.ts'
 import type { Orientation } from './frame.ts'
 import { frameCautions } from './in-frame.ts'
-import { faceOf, faceRadiusM, outputOf } from './light-output.ts'
+import { faceOf, outputOf } from './light-output.ts'
 import { LONG_LOAD_SHARE, type MainsLoad } from './mains.ts'
 import { type Supply, suppliesOf } from './power.ts'
 import { type SetupReading, readSetup } from './readings.ts'
-import type { Light } from './schema.ts'
+import { type Light, isLamp } from './schema.ts'
 import { SOCKET_LIMIT_DEG } from './softness.ts'
 import { shutterLabel, stopsBetween } from './stops.ts'
 import type { Sync } from './sync.ts'
@@ -120,12 +120,12 @@ function powerCautions(light: Light): Caution[] {
   const { numbers } = light.unit
   const cautions: Caution[] = []
   const least = 1 / numbers.minPowerDenominator
-  if (light.power > 0 && light.power < least * 0.99) {
+  if (light.isOn && light.power > 0 && light.power < least * 0.99) {
     cautions.push({
       key: `${light.id}:under-power`,
       tone: 'red',
       title: `The ${name} cannot go that low`,
-      words: `It is set to ${powerLabel(light.power)}; the head goes down to ${powerLabel(least)}. Move it back, or add a gel or a diffuser.`,
+      words: `It is set to ${powerLabel(light.power)}; the ${isLamp(numbers) ? 'lamp' : 'head'} goes down to ${powerLabel(least)}. Move it back, or add a gel or a diffuser.`,
       lightId: light.id,
       how: `Least power of ${light.unit.name}: 1/${numbers.minPowerDenominator}.`,
     })
@@ -138,9 +138,9 @@ function powerCautions(light: Light): Caution[] {
       key: `${light.id}:heat`,
       tone: 'mind',
       title: `The ${name} gets hot`,
-      words: `${powerLabel(light.power) === 'full' ? 'Full power' : `${powerLabel(light.power)} power`} behind ${light.gels.length > 0 ? 'a gel' : 'a closed modifier'} heats head, gel and bulb. Keep the pace the maker allows, let it cool before touching, and keep cloth off it.`,
+      words: `${powerLabel(light.power) === 'full' ? 'Full power' : `${powerLabel(light.power)} power`} behind ${light.gels.length > 0 ? 'a gel' : 'a closed modifier'} heats ${isLamp(numbers) ? 'lamp and gel. Keep to the maker’s limits' : 'head, gel and bulb. Keep the pace the maker allows'}, let it cool before touching, and keep cloth off it.`,
       lightId: light.id,
-      how: 'Asked from half power with a gel or a closed modifier (assumption). The maker’s limit on pops in a row decides.',
+      how: `Asked from half power with a gel or a closed modifier (assumption). The maker’s limit ${isLamp(numbers) ? 'of what may be before it' : 'on pops in a row'} decides.`,
     })
   }
   return cautions
@@ -164,29 +164,32 @@ function eyeCautions(reading: SetupReading, whole: WholeSetup, unit: LengthUnit)
         }
       : { key: 'eyes', tone: 'fine', title: 'Eyes stay open', words, lightId: mainLight.id, how },
   ]
-  const near = reading.lights.find(
+  const near = reading.lights.filter(
     (light) =>
       light.where === 'sitter' &&
       light.isOn &&
-      light.distanceM - faceRadius(whole, light.lightId) < NEAR_M &&
+      light.distanceM - halfFaceM(whole, light.lightId) < NEAR_M &&
       light.fullGuideNumberM > 0,
   )
-  if (near) {
-    cautions.push({
-      key: `${near.lightId}:near`,
+  return [
+    ...cautions,
+    ...near.map((light): Caution => ({
+      key: `${light.lightId}:near`,
       tone: 'mind',
-      title: `The ${purposeWord(near.purpose).toLowerCase()} is close to the face`,
-      words: `${lengthLabel(near.distanceM, unit)} from the eyes. Tell the sitter before it flashes, begin low, and mind hair and lashes near a hot head.`,
-      lightId: near.lightId,
-      how: `Asked under ${exactLabel(NEAR_M, unit)} (assumption).`,
-    })
-  }
-  return cautions
+      title: `The ${purposeWord(light.purpose).toLowerCase()} is close to the face`,
+      words: `${lengthLabel(light.distanceM, unit)} from the eyes. Tell the sitter before it ${light.isLamp ? 'is switched on' : 'flashes'}, begin low, and mind hair and lashes near a hot ${light.isLamp ? 'lamp' : 'head'}.`,
+      lightId: light.lightId,
+      how: `Asked under ${exactLabel(NEAR_M, unit)} from the edge of its face (assumption).`,
+    })),
+  ]
 }
 
-function faceRadius(whole: WholeSetup, lightId: string): number {
+/** From its middle to the edge of a light's face, metres. */
+function halfFaceM(whole: WholeSetup, lightId: string): number {
   const light = whole.lights.find((candidate) => candidate.id === lightId)
-  return light ? faceRadiusM(light) : 0
+  if (!light) return 0
+  const { widthM, heightM } = faceOf(light)
+  return Math.max(widthM, heightM) / 2
 }
 
 function exposureCautions(reading: SetupReading, whole: WholeSetup): Caution[] {

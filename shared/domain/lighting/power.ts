@@ -23,11 +23,11 @@ export type Supply = {
   power: number
   /** Seconds until it is ready again at its power. */
   recycleS: number
-  /** Full pops in one charge or set of cells. */
-  popsPerCharge: number
+  /** Full pops in one charge or set of cells; null: it runs on the mains. */
+  popsPerCharge: number | null
   /** Full pops that all frames cost; null when no shot uses the setup. */
   pops: number | null
-  /** Charges or sets of cells that takes, unrounded; null likewise. */
+  /** Charges or sets of cells that takes, unrounded; null likewise, and on the mains. */
   charges: number | null
 }
 
@@ -41,8 +41,8 @@ export function suppliesOf(lights: readonly Light[], frames: number | null): Sup
     if (isLamp(numbers) || !light.isOn) return []
     const power = Math.max(0, light.power)
     const pops = frames === null ? null : fullPopsFor(frames, power)
-    const popsPerCharge = numbers.fullPops.value
-    const charges = pops === null || !(popsPerCharge > 0) ? null : pops / popsPerCharge
+    const popsPerCharge = numbers.mainsWatts === null ? numbers.fullPops.value : null
+    const charges = pops === null || popsPerCharge === null || !(popsPerCharge > 0) ? null : pops / popsPerCharge
     return [
       { lightId: light.id, power, recycleS: recycleS(numbers.fullRecycleS.value, power), popsPerCharge, pops, charges },
     ]

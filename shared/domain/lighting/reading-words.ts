@@ -37,3 +37,8 @@ export function sizeLabel(widthM: number, heightM: number, unit: LengthUnit): st
   const [width, height] = [lengthLabel(widthM, unit), lengthLabel(heightM, unit)]
   return `${unit === 'm' ? width.replace(' m', '') : width} × ${height}`
 }
+
+/** Full pops against those of a charge: "12 of 150", or "12" from the mains. */
+export function popsWords(pops: number, popsPerCharge: number | null): string {
+  return popsPerCharge === null ? `${Math.ceil(pops)}` : `${Math.ceil(pops)} of ${popsPerCharge}`
+}

@@ -1,7 +1,14 @@
 import { loadKgOf } from '#shared/domain/lighting/boom.ts'
 import { kelvinLabel } from '#shared/domain/lighting/gel.ts'
 import { sightsOf } from '#shared/domain/lighting/in-frame.ts'
-import { depthLabel, sizeLabel, smallLabel, underWords, whiteWords } from '#shared/domain/lighting/reading-words.ts'
+import {
+  depthLabel,
+  popsWords,
+  sizeLabel,
+  smallLabel,
+  underWords,
+  whiteWords,
+} from '#shared/domain/lighting/reading-words.ts'
 import type { SetupReading } from '#shared/domain/lighting/readings.ts'
 import type { SetupUse } from '#shared/domain/lighting/setup-use.ts'
 import { shutterLabel } from '#shared/domain/lighting/stops.ts'
@@ -126,7 +133,7 @@ function lensLines({ whole, reading, use, unit }: SheetGroupsInput): SheetLine[]
 function supplyLines({ whole, reading, use, names }: SheetGroupsInput): SheetLine[] {
   return reading.supplies.map(({ lightId, recycleS, pops, popsPerCharge, charges }) => ({
     label: names[whole.lights.findIndex((light) => light.id === lightId)] ?? 'Light',
-    value: pops === null ? `${recycleS.toFixed(1)} s` : `${Math.ceil(pops)} of ${popsPerCharge}`,
+    value: pops === null ? `${recycleS.toFixed(1)} s` : popsWords(pops, popsPerCharge),
     more:
       pops === null
         ? `until it is ready again; no shot uses this setup yet`

@@ -83,6 +83,19 @@ describe('cautionsOf', () => {
     expect(titles(whole({ lights: [weak], camera: right(6) }), { frames: 40 })).toContain('Bring fresh batteries')
   })
 
+  it('says of each light that it is close, of a lamp that it is switched on, and asks nobody to set what is off', () => {
+    const near = (n: number, more: object) =>
+      light(n, { purpose: 'fill', at: [0.3, 1.6, 0.3], aim: FACE, support: null, ...more })
+    const lights = [main({ at: [-0.3, 1.6, 0.3] }), near(2, { unit: lampUnit(4000), power: 1, gels: [FULL_WARM] })]
+    const found = cautionsOf(whole({ lights, camera: right(22.6) }))
+    expect(
+      found.filter(({ key }) => key.endsWith(':near')).map(({ words }) => /before it (\w+)/.exec(words)?.[1]),
+    ).toEqual(['flashes', 'is'])
+    expect(found.find(({ key }) => key.endsWith(':heat'))?.words).not.toMatch(/pace|head/)
+    const low = near(3, { power: 1 / 1024, isOn: false })
+    expect(titles(whole({ lights: [main(), low], camera: right(8) }))).not.toContain('The fill cannot go that low')
+  })
+
   it('puts red first and good news last', () => {
     const tones = cautionsOf(whole({ lights: [main({ at: [-1.2, 2, 1.2], power: 1 / 256 })], camera: right(1.4) })).map(
       (caution) => caution.tone,

@@ -1,7 +1,7 @@
 import { describe, expect, it } from 'vitest'
 import { counterweightKg, fullPopsFor, recycleS, suppliesOf } from '#shared/domain/lighting/power.ts'
 import { lampUnit } from '#tests/support/lamp-sample.ts'
-import { id, light } from '#tests/support/lighting-sample.ts'
+import { id, light, unit } from '#tests/support/lighting-sample.ts'
 
 describe('counterweightKg', () => {
   it.each([
@@ -36,6 +36,11 @@ describe('suppliesOf', () => {
       [id(1), 300, 2, 3.5],
       [id(2), 75, 0.5, 0.875],
     ])
+  })
+  it('knows no charge of a head on the mains', () => {
+    const mainsWatts = { value: 1000, from: 'assumed', source: 'sample' }
+    const [supply] = suppliesOf([head(1, { power: 1, unit: unit(undefined, { mainsWatts }) })], 300)
+    expect(supply).toMatchObject({ pops: 300, popsPerCharge: null, charges: null })
   })
   it('says only how fast without a shot, and leaves lamps out', () => {
     expect(suppliesOf([head(1)], null)[0]).toMatchObject({ pops: null, charges: null, recycleS: 0.875 })

@@ -1,5 +1,12 @@
 import { describe, expect, it } from 'vitest'
-import { depthLabel, sizeLabel, smallLabel, underWords, whiteWords } from '#shared/domain/lighting/reading-words.ts'
+import {
+  depthLabel,
+  popsWords,
+  sizeLabel,
+  smallLabel,
+  underWords,
+  whiteWords,
+} from '#shared/domain/lighting/reading-words.ts'
 
 describe('whiteWords', () => {
   it('names steps from the white balance, warmer above it', () => {
@@ -46,5 +53,11 @@ describe('depthLabel', () => {
 describe('sizeLabel', () => {
   it('says the unit once where that is clear', () => {
     expect([sizeLabel(1.2, 0.9, 'm'), sizeLabel(1.2192, 0.9144, 'ft')]).toEqual(['1.2 × 0.9 m', '4′ 0″ × 3′ 0″'])
+  })
+})
+
+describe('popsWords', () => {
+  it('counts against a charge where there is one', () => {
+    expect([popsWords(11.2, 150), popsWords(11.2, null)]).toEqual(['12 of 150', '12'])
   })
 })

@@ -2,7 +2,7 @@ import { loadKgOf } from '#shared/domain/lighting/boom.ts'
 import { sightsOf } from '#shared/domain/lighting/in-frame.ts'
 import { LONG_LOAD_SHARE, type MainsLoad } from '#shared/domain/lighting/mains.ts'
 import type { Supply } from '#shared/domain/lighting/power.ts'
-import { depthLabel, sizeLabel } from '#shared/domain/lighting/reading-words.ts'
+import { depthLabel, popsWords, sizeLabel } from '#shared/domain/lighting/reading-words.ts'
 import type { SetupReading } from '#shared/domain/lighting/readings.ts'
 import { type Light, isLamp } from '#shared/domain/lighting/schema.ts'
 import type { SetupUse } from '#shared/domain/lighting/setup-use.ts'
@@ -193,13 +193,15 @@ function SupplyLine({ whole, supply, frames }: { whole: WholeSetup; supply: Supp
   const inputs: InputRow[] = [
     ['Power', powerLabel(light.power)],
     ['Frames of its shots', frames ?? 'no shot yet'],
-    ['Full pops in a charge', popsPerCharge, stated(numbers.fullPops)],
+    ...(popsPerCharge === null
+      ? []
+      : [['Full pops in a charge', popsPerCharge, stated(numbers.fullPops)] satisfies InputRow]),
     ['Full recycle', `${numbers.fullRecycleS.value} s`, stated(numbers.fullRecycleS)],
   ]
   return (
     <Line
       label={name}
-      value={pops === null ? `${supply.recycleS.toFixed(1)} s` : `${Math.ceil(pops)} of ${popsPerCharge}`}
+      value={pops === null ? `${supply.recycleS.toFixed(1)} s` : popsWords(pops, popsPerCharge)}
       words={
         pops === null
           ? `${pace}; no shot uses this setup yet`

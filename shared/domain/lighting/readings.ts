@@ -1,6 +1,6 @@
 import type { WholeSetup } from '#shared/domain/plan/read-plan.ts'
 import type { LengthUnit } from '#shared/units/length.ts'
-import { isBehindBackground, mainFNumberOf } from './at-sitter.ts'
+import { type ReadArrival, isBehindBackground, mainFNumberOf, readArrivalOf } from './at-sitter.ts'
 import { type BoomBalance, boomBalanceOf } from './boom.ts'
 import { ambientExposure, combineFNumbers, fNumberOfExposure } from './exposure.ts'
 import type { Orientation } from './frame.ts'
@@ -8,7 +8,7 @@ import { type Framing, framingOf } from './framing.ts'
 import { miredOf, shifted, stackGels } from './gel.ts'
 import { distanceBetween, facePoint, floorDistance, mainPlace } from './geometry.ts'
 import { type Depth, depthOfField } from './lens.ts'
-import { type Arrival, NEAREST_M, arrivalAt, axisOnWall, faceOf, incidenceShare } from './light-output.ts'
+import { NEAREST_M, arrivalAt, faceOf, incidenceShare } from './light-output.ts'
 import { ownColourK } from './light-source.ts'
 import { type MainsLoad, mainsLoadOf } from './mains.ts'
 import { panelReading } from './panel.ts'
@@ -21,14 +21,12 @@ import { stopsBetween } from './stops.ts'
 import { type Sync, syncOf } from './sync.ts'
 import { type Glow, glowOf } from './wall.ts'
 
-export type LightReading = Arrival & {
+export type LightReading = ReadArrival & {
   lightId: string
   purpose: LightPurpose
   /** Off: it reads 0. */
   isOn: boolean
   isLamp: boolean
-  /** Where it is read: at the sitter's eyes, or on the wall where a background light's axis meets it. */
-  where: 'sitter' | 'wall'
   /** Stops under all mains together at the sitter; negative is over. Null without a main, or when it gives nothing. */
   underMainStops: number | null
   /** Colour of its light behind its gels, kelvin; null when it is bluer than any colour temperature. */
@@ -180,23 +178,13 @@ function readWall(
   }
 }
 
-/** A background light is read on the wall where its axis meets it, with the cosine; everything else at the face. */
-function readLight(light: Light, whole: WholeSetup, face: Point): Omit<LightReading, 'underMainStops'> {
-  const { background, camera } = whole.setup
-  const target = light.purpose === 'background' ? axisOnWall(light, background.zM) : null
-  const arrival = arrivalAt(light, target ?? face, camera.iso, camera.shutterS)
-  const atFace = isBehindBackground(light, face, background) ? 0 : 1
-  const share = target ? incidenceShare(light, target, [0, 0, 1]) : atFace
-  const exposureLxS = arrival.exposureLxS * share
+function readLight(light: Light, whole: WholeSetup): Omit<LightReading, 'underMainStops'> {
   return {
-    ...arrival,
-    exposureLxS,
-    fNumber: fNumberOfExposure(exposureLxS, camera.iso),
+    ...readArrivalOf(light, whole),
     lightId: light.id,
     purpose: light.purpose,
     isOn: light.isOn,
     isLamp: isLamp(light.unit.numbers),
-    where: target ? 'wall' : 'sitter',
     colourK: shifted(ownColourK(light.unit.numbers), stackGels(light.gels.map((gel) => gel.numbers)).miredShift),
   }
 }
@@ -235,13 +223,31 @@ function readAmbient(whole: WholeSetup, flashFNumber: number): AmbientReading | 
   }
 }
 
+/** All flash at the eyes, mains and fills with what panels give back of it; lamps are left out. */
+function flashFNumberOf(whole: WholeSetup, read: readonly Omit<LightReading, 'underMainStops'>[]): number {
+  const { camera, background } = whole.setup
+  const face = facePoint(whole)
+  const isFlash = (reading: (typeof read)[number]) =>
+    !reading.isLamp && reading.where === 'sitter' && (reading.purpose === 'main' || reading.purpose === 'fill')
+  const flashes = whole.lights.filter((light) => !isLamp(light.unit.numbers))
+  const panels = whole.props.filter((prop) => prop.kind === 'panel')
+  return combineFNumbers([
+    ...read.filter(isFlash).map((reading) => reading.fNumber),
+    ...panels.map((panel) => {
+      const lit = flashes.filter((light) => !isBehindBackground(light, panel.at, background))
+      return panelReading(panel, lit, face, camera)
+    }),
+  ])
+}
+
 const DEFAULTS: ReadingOptions = { orientations: ['upright'], frames: null, unit: 'm' }
 
 /**
  * Everything the numbers of a setup say, at the eyes of the sitter on the origin: readings as f-numbers at the
  * camera's ISO (incident, C = 250), metered towards each light; ratio; ambient against flash; what the main spills on the
  * wall and the glow there; height and softness of the main; depth of field, framing; power, sync, booms, mains. Lights
- * add linearly, those that are off give nothing. Ambient and panels count as fill. Losses, beams and guide numbers are as
+ * add linearly, those that are off give nothing. Ambient and panels count as fill. What flags, bodies and props keep off
+ * is left out: test frames show it. Losses, beams and guide numbers are as
  * good as their sources in the kit. What cannot be worked out is in `problems`, and reads 0.
  */
 export function readSetup(whole: WholeSetup, options: Partial<ReadingOptions> = {}): SetupReading {
@@ -249,7 +255,7 @@ export function readSetup(whole: WholeSetup, options: Partial<ReadingOptions> = 
   const framed = orientations.length > 0 ? orientations : DEFAULTS.orientations
   const { camera, background } = whole.setup
   const face = facePoint(whole)
-  const raw = whole.lights.map((light) => readLight(light, whole, face))
+  const raw = whole.lights.map((light) => readLight(light, whole))
   const of = (purpose: LightPurpose) =>
     raw.filter((reading) => reading.purpose === purpose && reading.where === 'sitter').map((reading) => reading.fNumber)
   const mainFNumber = mainFNumberOf(whole)
@@ -258,7 +264,8 @@ export function readSetup(whole: WholeSetup, options: Partial<ReadingOptions> = 
   const panels = whole.props
     .filter((prop) => prop.kind === 'panel')
     .map((prop) => {
-      const fNumber = panelReading(prop, whole.lights, face, camera)
+      const lit = whole.lights.filter((light) => !isBehindBackground(light, prop.at, background))
+      const fNumber = panelReading(prop, lit, face, camera)
       return {
         propId: prop.id,
         name: prop.name,
@@ -267,10 +274,7 @@ export function readSetup(whole: WholeSetup, options: Partial<ReadingOptions> = 
         underMainStops: under(fNumber),
       }
     })
-  const flashes = raw.filter(
-    (reading) => !reading.isLamp && reading.where === 'sitter' && ['main', 'fill'].includes(reading.purpose),
-  )
-  const ambient = readAmbient(whole, combineFNumbers([...flashes, ...panels].map((reading) => reading.fNumber)))
+  const ambient = readAmbient(whole, flashFNumberOf(whole, raw))
   const ambientFNumber = ambient?.fNumber ?? null
   const fillFNumber = combineFNumbers([...of('fill'), ...panels.map((panel) => panel.fNumber), ambientFNumber ?? 0])
   const ratioStops = mainFNumber === null || fillFNumber <= 0 ? null : stopsBetween(mainFNumber, fillFNumber)

@@ -1,7 +1,8 @@
 import type { WholeSetup } from '#shared/domain/plan/read-plan.ts'
+import { wallTargetOf } from './at-sitter.ts'
 import { facePoint } from './geometry.ts'
 import { shifted, stackGels } from './gel.ts'
-import { axisOnWall, beamOf } from './light-output.ts'
+import { beamOf } from './light-output.ts'
 import { ownColourK } from './light-source.ts'
 import type { Light, Point } from './schema.ts'
 
@@ -204,7 +205,7 @@ function lightMarks(light: Light, { at, turnRad, perM, across }: Pose): Mark[] {
 function beamMark(light: Light, whole: WholeSetup, at: (x: number, z: number) => Flat): Mark | null {
   const { background, camera } = whole.setup
   const face = facePoint(whole)
-  const wall = light.purpose === 'background' ? axisOnWall(light, background.zM) : null
+  const wall = wallTargetOf(light, background)
   const target: Point = wall ?? light.aim
   const dx = target[0] - light.at[0]
   const dz = target[2] - light.at[2]

@@ -1,9 +1,7 @@
 import type { WholeSetup } from '#shared/domain/plan/read-plan.ts'
 import { type LengthUnit, lengthLabel } from '#shared/units/length.ts'
-import { isBehindBackground } from './at-sitter.ts'
+import { readArrivalOf } from './at-sitter.ts'
 import { combineFNumbers, exposureOfFNumber, fNumberOfExposure } from './exposure.ts'
-import { facePoint } from './geometry.ts'
-import { arrivalAt, axisOnWall, incidenceShare } from './light-output.ts'
 import type { Light } from './schema.ts'
 import { powersOf, stopsBetween } from './stops.ts'
 import { fNumberLabel, powerLabel, purposeWord } from './words.ts'
@@ -36,14 +34,8 @@ type Ready = { light: Light; name: string; fullLxS: number; distanceM: number }
 
 /** A light as its reading is taken, switched on at full power. */
 function readyAt(light: Light, whole: WholeSetup): Ready {
-  const { background, camera } = whole.setup
-  const face = facePoint(whole)
-  const target = light.purpose === 'background' ? axisOnWall(light, background.zM) : null
-  const full = arrivalAt({ ...light, isOn: true, power: 1 }, target ?? face, camera.iso, camera.shutterS)
-  const atFace = isBehindBackground(light, face, background) ? 0 : 1
-  const share = target ? incidenceShare(light, target, [0, 0, 1]) : atFace
-  const name = purposeWord(light.purpose).toLowerCase()
-  return { light, name, fullLxS: full.exposureLxS * share, distanceM: full.distanceM }
+  const { exposureLxS, distanceM } = readArrivalOf({ ...light, isOn: true, power: 1 }, whole)
+  return { light, name: purposeWord(light.purpose).toLowerCase(), fullLxS: exposureLxS, distanceM }
 }
 
 function nearestPower(light: Light, share: number): number {

@@ -1,8 +1,8 @@
+import { wallTargetOf } from '#shared/domain/lighting/at-sitter.ts'
 import { type Caution, cautionsOf } from '#shared/domain/lighting/cautions.ts'
 import { kelvinLabel } from '#shared/domain/lighting/gel.ts'
 import { distanceBetween, facePoint, minus } from '#shared/domain/lighting/geometry.ts'
 import { kitListOf } from '#shared/domain/lighting/kit-list.ts'
-import { axisOnWall } from '#shared/domain/lighting/light-output.ts'
 import { ratioLabel } from '#shared/domain/lighting/ratio.ts'
 import { type LightReading, type SetupReading, readSetup } from '#shared/domain/lighting/readings.ts'
 import type { Light, Point } from '#shared/domain/lighting/schema.ts'
@@ -48,6 +48,7 @@ export type Sheet = {
   camera: SheetLine[]
   /** Counted: what to bring. */
   kit: { count: number; name: string }[]
+  /** What cannot be worked out stands first, as what is to be put right. */
   cautions: Pick<Caution, 'key' | 'tone' | 'title' | 'words'>[]
 }
 
@@ -58,7 +59,7 @@ export const SHEET_DEFERS =
 /** Nearer than this to a point a light looks at it, metres. */
 const AT_POINT_M = 0.15
 
-/** "45° camera left", "in front", "overhead": round the sitter from the camera's axis, on the floor. */
+/** "45° camera left", "straight behind", "overhead": round the sitter from the camera's axis, on the floor. */
 export function axisAngleWords(at: Point, whole: WholeSetup): string {
   const face = facePoint(whole)
   const [x, , z] = minus(at, face)
@@ -67,6 +68,7 @@ export function axisAngleWords(at: Point, whole: WholeSetup): string {
   const turn = ((Math.atan2(x, z) - Math.atan2(cameraX, cameraZ)) * 180) / Math.PI
   const deg = Math.round(turn - 360 * Math.round(turn / 360))
   if (deg === 0) return 'on the camera’s axis'
+  if (Math.abs(deg) === 180) return 'straight behind'
   return `${Math.abs(deg)}° camera ${deg < 0 ? 'left' : 'right'}`
 }
 
@@ -83,7 +85,7 @@ export function floorWords(at: Point, unit: LengthUnit): string {
 function aimPlace(light: Light, whole: WholeSetup, unit: LengthUnit): string {
   const face = facePoint(whole)
   if (distanceBetween(light.aim, face) < AT_POINT_M) return 'at the eyes'
-  const wall = light.purpose === 'background' ? axisOnWall(light, whole.setup.background.zM) : null
+  const wall = wallTargetOf(light, whole.setup.background)
   if (!wall) return `${floorWords(light.aim, unit)}, ${lengthLabel(light.aim[1], unit, true)} up`
   const [x, y] = wall
   const side = Math.abs(x) < 0.02 ? '' : `, ${lengthLabel(Math.abs(x), unit, true)} ${x < 0 ? 'left' : 'right'}`
@@ -251,6 +253,14 @@ export function sheetOf(whole: WholeSetup, use: Pick<SetupUse, 'orientations' | 
     groups: sheetGroups({ whole, reading, use, unit, names }),
     camera: cameraLines(whole, reading, unit),
     kit: kitListOf([whole]).map(({ count, name }) => ({ count, name })),
-    cautions: cautionsOf(whole, asked, reading).map(({ key, tone, title, words }) => ({ key, tone, title, words })),
+    cautions: [
+      ...reading.problems.map((problem) => ({
+        key: `${problem.lightId}:${problem.key}`,
+        tone: 'red' as const,
+        title: names[whole.lights.findIndex((light) => light.id === problem.lightId)] ?? 'Light',
+        words: problem.words,
+      })),
+      ...cautionsOf(whole, asked, reading).map(({ key, tone, title, words }) => ({ key, tone, title, words })),
+    ],
   }
 }

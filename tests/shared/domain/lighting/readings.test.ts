@@ -107,6 +107,17 @@ describe('readSetup of a whole setup', () => {
     expect(off.main?.lightId).toBe(main.id)
   })
 
+  it('takes nothing from a panel that the wall keeps dark, and no lamp’s light off a panel for flash', () => {
+    const panel = { at: [1, 1.4, 0.6] as [number, number, number], turnDeg: -60 }
+    const beyond = light(1, { purpose: 'main', at: [-1.2, 1.9, -3], aim: [1, 1.4, 0.6], power: 1 })
+    const turned = { ...panel, turnDeg: 180 }
+    expect(readSetup(whole({ lights: [beyond], props: [turned] })).panels[0]?.fNumber).toBe(0)
+    const lamp = light(1, { purpose: 'main', at: [-1.2, 1.9, 1], aim: FACE, unit: lampUnit(4000), power: 1 })
+    const lit = readSetup(whole({ lights: [lamp], props: [panel], ambientLux: 100 }))
+    expect(lit.panels[0]?.fNumber).toBeGreaterThan(0)
+    expect(lit.ambient?.underFlashStops).toBeNull()
+  })
+
   it('sets ambient against flash and its colour against the white balance', () => {
     // Flash f/8, daylight exactly f/11.3: a stop over it.
     const lux = (250 * 11.3137 ** 2 * 160) / 100

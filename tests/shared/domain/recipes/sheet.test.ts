@@ -1,6 +1,6 @@
 import { describe, expect, it } from 'vitest'
 import { axisAngleWords, floorWords, lightNames, sheetOf } from '#shared/domain/recipes/sheet.ts'
-import { GRID, HALF_BLUE, OCTA, light, whole } from '#tests/support/lighting-sample.ts'
+import { GRID, HALF_BLUE, OCTA, light, unit, whole } from '#tests/support/lighting-sample.ts'
 
 const face: [number, number, number] = [0, 1.5, 0]
 const main = light(1, { purpose: 'main', group: 'A', at: [-1, 2.5, 1], aim: face, modifier: OCTA, zoomMm: 50 })
@@ -19,6 +19,7 @@ describe('axisAngleWords', () => {
     expect(axisAngleWords([1, 2, -1], setup)).toBe('135° camera right')
     expect(axisAngleWords([0, 2, 2], setup)).toBe('on the camera’s axis')
     expect(axisAngleWords([0, 2.6, 0.05], setup)).toBe('overhead')
+    expect(axisAngleWords([0, 2, -2], setup)).toBe('straight behind')
   })
 
   it('follows the camera when it stands aside', () => {
@@ -96,6 +97,21 @@ describe('sheetOf', () => {
     expect(camera.map(({ label, value }) => `${label}: ${value}`)).toEqual(
       expect.arrayContaining(['Room: ceiling 2.6 m', 'Mains circuit: 230 V, 16 A']),
     )
+  })
+
+  it('puts what cannot be worked out before the cautions, by the name of its light', () => {
+    const blank = unit(undefined, { guideNumberM: { value: 0, from: 'assumed', source: 'sample' } })
+    const rims = [
+      light(2, { purpose: 'rim', at: [1, 1.5, -1], aim: face }),
+      light(3, { purpose: 'rim', at: [2, 1.5, 0], aim: face, unit: blank }),
+    ]
+    const [first] = sheetOf(
+      whole({ lights: [main, ...rims] }),
+      { orientations: ['upright'], frames: null },
+      'm',
+    ).cautions
+    expect(first).toMatchObject({ tone: 'red', title: 'Rim 2' })
+    expect(first?.words).toMatch(/^The rim’s unit, small flash, has no guide number/)
   })
 
   it('is there for a setup with nothing in it', () => {

@@ -124,11 +124,17 @@ export type Arrival = Output & {
   fNumber: number
 }
 
+/** Whether a light shines to all sides: a lantern, or a bare lamp with a beam of more than 180°, such as a bulb. */
+export function isAllRound({ modifier, unit }: Light): boolean {
+  if (modifier) return modifier.numbers.shape === 'lantern'
+  return isLamp(unit.numbers) && (unit.numbers.beamDeg?.value ?? 0) > 180
+}
+
 /** What is known of a light's beam: the modifier's angle, a bare lamp's own, or the zoom of a bare head. */
 export function beamOf(light: Light): Beam {
   const { numbers } = light.unit
   const own = light.modifier ? light.modifier.numbers.beamDeg : isLamp(numbers) ? numbers.beamDeg : null
-  return { beamDeg: own?.value ?? null, zoomMm: zoomOf(light), bare: light.modifier === null }
+  return { beamDeg: own?.value ?? null, zoomMm: zoomOf(light), bare: light.modifier === null && !isAllRound(light) }
 }
 
 /** A light made ready to be read at many points. */
@@ -156,7 +162,7 @@ export function emissionOf(light: Light, shutterS = 1): Emission {
     axis: [x / length, y / length, z / length],
     profile: profileOf(beamOf(light)),
     radiusM: faceRadiusM(light),
-    reachDeg: light.modifier?.numbers.shape === 'lantern' ? 180 : 90,
+    reachDeg: isAllRound(light) ? 180 : 90,
     axisLxS: light.isOn ? luminousExposure(output.guideNumberM, 1) : 0,
   }
 }
@@ -188,7 +194,7 @@ function strengthAt(emission: Emission, x: number, y: number, z: number, upright
 
 /**
  * A light at a point, metered towards it, at a sensitivity: H = 2.5·GN²/d² on axis, times the beam's share off axis
- * (nothing behind the face, save of a lantern), times d²/(d² + r²) for a face that counts as a disc of radius r. That is
+ * (nothing behind the face, save of what shines to all sides), times d²/(d² + r²) for a face that counts as a disc of radius r. That is
  * exact on a disc's axis; close to a large face and far off its axis, as behind one that is turned away, more arrives.
  */
 export function arrivalOf(emission: Emission, point: Point, iso: number): Arrival {

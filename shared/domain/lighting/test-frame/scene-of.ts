@@ -3,7 +3,7 @@ import type { WholeSetup } from '#shared/domain/plan/read-plan.ts'
 import { guessedAppearance, reflectedRgb, seedOf, skinRgb } from '../appearance.ts'
 import { type Orientation, viewOf } from '../frame.ts'
 import { distanceBetween, facePoint } from '../geometry.ts'
-import { beamOf, emissionOf, faceOf } from '../light-output.ts'
+import { beamOf, emissionOf, faceOf, isAllRound } from '../light-output.ts'
 import type { Appearance, Light, SitterPlace } from '../schema.ts'
 import type { Emitter, Figure, Scene } from './scene.ts'
 
@@ -27,7 +27,7 @@ function emitterOf(light: Light): Emitter {
     id: light.id,
     at: light.at,
     aim: light.aim,
-    shape: faceFormOf(light.modifier?.numbers.shape ?? 'bare'),
+    shape: isAllRound(light) ? 'ball' : faceFormOf(light.modifier?.numbers.shape ?? 'bare'),
     widthM,
     heightM,
     // Power, gels and the switch only weigh the layer; a lamp burns for a second.

@@ -10,6 +10,7 @@ import {
   faceRadiusM,
   gelShareOf,
   incidenceShare,
+  isAllRound,
   isAmount,
   isLoss,
   outputOf,
@@ -172,6 +173,21 @@ describe('emissionOf', () => {
     const lantern = modifier(971, 'Paper ball', { shape: 'lantern' })
     expect(arrivalAt(bare({ modifier: OCTA }), behind, 100).fNumber).toBe(0)
     expect(arrivalAt(bare({ modifier: lantern }), behind, 100).fNumber).toBeGreaterThan(0)
+  })
+})
+
+describe('isAllRound', () => {
+  it('is a lantern, or a bare bulb: it lights what it does not look at too', () => {
+    const behind: Point = [0, 1.5, 4]
+    const bulb = (more: object = {}) =>
+      bare({ unit: lampUnit(64, { beamDeg: { value: 360, from: 'assumed', source: '' } }), ...more })
+    expect([bulb(), bulb({ modifier: OCTA }), bare({ unit: lampUnit(64) })].map(isAllRound)).toEqual([
+      true,
+      false,
+      false,
+    ])
+    expect(arrivalAt(bulb(), behind, 100).exposureLxS).toBeCloseTo(arrivalAt(bulb(), FACE, 100).exposureLxS, 9)
+    expect(arrivalAt(bulb({ modifier: OCTA }), behind, 100).exposureLxS).toBe(0)
   })
 })
 

@@ -6,8 +6,13 @@ import {
   renderFrame,
   renderRows,
 } from '#shared/domain/lighting/test-frame/render.ts'
+import { sceneOf } from '#shared/domain/lighting/test-frame/scene-of.ts'
 import type { Scene } from '#shared/domain/lighting/test-frame/scene.ts'
+import { sumLayers, weightsOf } from '#shared/domain/lighting/test-frame/develop.ts'
+import { readSetup } from '#shared/domain/lighting/readings.ts'
 import { beam, emitter, figure, scene } from '#tests/support/frame-sample.ts'
+import { lampUnit } from '#tests/support/lamp-sample.ts'
+import { FULL_WARM, GRID, OCTA, SOFTBOX, light, modifier, unit, whole } from '#tests/support/lighting-sample.ts'
 
 function layerOf(layers: Layers, id: string): Float32Array {
   const layer = layers.layers[layers.ids.indexOf(id)]
@@ -145,5 +150,38 @@ describe('renderFrame', () => {
       sheets: [{ ...sheet, at: [0, 1.5, 0] as [number, number, number], colour: [0.9, 0.9, 0.9] as const }],
     }
     expect(middle(white)).toBeGreaterThan(5)
+  })
+})
+
+describe('a grey patch at the eyes, turned to the light', () => {
+  const eyes: [number, number, number] = [0, 1.5, 0]
+  const lantern = modifier(971, 'Lantern', { shape: 'lantern', widthM: 0.65, heightM: 0.65 })
+  const zoom = [{ focalMm: 50, guideNumberM: 42 }]
+  const bulb = lampUnit(64, { beamDeg: { value: 360, from: 'assumed', source: 'sample' } })
+  it.each([
+    ['a bare zoom head off its axis', { unit: unit(undefined, { zoom }), zoomMm: 50, aim: [0.3, 1.5, 0] }],
+    ['an octa close by', { modifier: OCTA }],
+    ['a softbox behind a gel', { modifier: SOFTBOX, gels: [FULL_WARM], power: 0.1 }],
+    ['a grid off its axis', { modifier: GRID, aim: [0.05, 1.5, 0] }],
+    ['a lantern that looks away', { modifier: lantern, aim: [2, 1.5, 3] }],
+    ['a lamp', { unit: lampUnit(4000), power: 0.5 }],
+    ['a bulb that looks away', { unit: bulb, aim: [2, 1.5, 3] }],
+  ])('has the exposure that is read of $0, within 2 %', (_, more) => {
+    const one = light(1, { purpose: 'main', at: [0.6, 1.5, 0.8], aim: eyes, ...(more as object) })
+    const setup = whole({ lights: [one], camera: { at: [0, 1.5, 4], aim: eyes, focalMm: 200, whiteBalanceK: 5600 } })
+    const patch = {
+      at: eyes,
+      turn: Math.atan2(0.6, 0.8),
+      widthM: 0.12,
+      heightM: 0.12,
+      colour: [0.5, 0.5, 0.5] as const,
+    }
+    const of = { ...sceneOf(setup, 'square', { garmentColour: () => null }), figures: [], sheets: [patch] }
+    const layers = renderFrame({ ...of, room: { areaM2: 126, reflectance: 0 } }, 'fine', 21, 21)
+    const [r = NaN, g = NaN, b = NaN] = sumLayers(layers, weightsOf(setup.setup, [one])).slice(220 * 3, 221 * 3)
+    const { fNumber, iso } = setup.setup.camera
+    // N² = H·S/C (ISO 2720): a value of ρ is the camera's own exposure.
+    const exposureLxS = (((0.2126729 * r + 0.7151522 * g + 0.072175 * b) / 0.5) * 250 * fNumber ** 2) / iso
+    expect(Math.abs(exposureLxS / (readSetup(setup).lights[0]?.exposureLxS ?? NaN) - 1)).toBeLessThan(0.02)
   })
 })

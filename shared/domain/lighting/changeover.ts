@@ -269,7 +269,7 @@ export function changeActions(
       ...light.gels.map((gel) => inSentence(gel.name)),
       ...(light.support ? [inSentence(light.support.name)] : []),
       `${light.at[1].toFixed(1)} m up`,
-      powerLabel(light.power),
+      light.isOn ? powerLabel(light.power) : 'off',
     ].join(' · ')
     const what = addWords(purposeWord(light.purpose), light.at, around.to)
     actions.push({ key: `${light.id}:add`, kind: 'add', group: light.group, what, detail, minutes: minutes.add })

@@ -3,6 +3,7 @@ import { describe, expect, it } from 'vitest'
 import { changeActions, changesLight, lightingMinutes } from '#shared/domain/lighting/changeover.ts'
 import { lightSchema, type Light } from '#shared/domain/lighting/schema.ts'
 import type { WholeSetup } from '#shared/domain/plan/read-plan.ts'
+import { lampUnit } from '#tests/support/lamp-sample.ts'
 import {
   BOOM,
   FULL_WARM,
@@ -65,6 +66,14 @@ describe('changeActions', () => {
       { kind: 'switch', what: 'Rim: switch off', minutes: 0.5 },
     ])
     expect(changeActions(off, both, here).map((action) => action.kind)).toEqual(['switch', 'power', 'switch'])
+  })
+
+  it('adds a light that is off as off, and takes a lamp for a unit of its own', () => {
+    const [added] = changeActions(whole({ lights: [main()] }), whole({ lights: [main(), rim({ isOn: false })] }), here)
+    expect(added?.detail).toMatch(/ · off$/)
+    const lamp = lightSchema.parse({ ...main(), unit: lampUnit(4000) })
+    expect(kinds(whole({ lights: [main()] }), whole({ lights: [lamp] }))).toEqual(['strike', 'add'])
+    expect(kinds(whole({ lights: [lamp] }), whole({ lights: [{ ...lamp, at: [-2, 1.9, 1] }] }))).toEqual(['move'])
   })
 
   it('names each thing that changes on one light, one action each', () => {

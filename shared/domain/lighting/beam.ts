@@ -15,12 +15,8 @@ export function gaussianProfile(offAxisDeg: number, beamDeg: number): number {
   return 2 ** -(((2 * offAxisDeg) / beamDeg) ** 2)
 }
 
-/** cosⁿ profile; 0 from 90° off axis. */
-export function cosineProfile(offAxisDeg: number, beamDeg: number): number {
-  return cosinePower(offAxisDeg, cosineExponent(beamDeg))
-}
-
-function cosinePower(offAxisDeg: number, exponent: number): number {
+/** cosⁿ; 0 from 90° off axis. */
+export function cosinePower(offAxisDeg: number, exponent: number): number {
   return offAxisDeg >= 90 ? 0 : Math.cos((offAxisDeg * Math.PI) / 180) ** exponent
 }
 
@@ -31,10 +27,6 @@ const SOFT_EDGE = 0.35
  * A bare zoom head: even over what an N mm lens sees (its mean angle, since the head's roll is not known), then fading
  * (assumption).
  */
-export function zoomHeadProfile(offAxisDeg: number, zoomMm: number): number {
-  return zoomProfile(zoomMm)(offAxisDeg)
-}
-
 function zoomProfile(zoomMm: number): (offAxisDeg: number) => number {
   const across = angleOfViewDeg(FRAME_LONG_MM, zoomMm)
   const upright = angleOfViewDeg(FRAME_SHORT_MM, zoomMm)
@@ -65,10 +57,4 @@ export function profileOf({ beamDeg, zoomMm, bare }: Beam): Profile {
   }
   if (bare && zoomMm !== null) return { kind: 'zoom head', shareAt: zoomProfile(zoomMm) }
   return { kind: 'unknown', shareAt: (offAxisDeg) => (offAxisDeg < 90 || !bare ? 1 : 0) }
-}
-
-/** `profileOf` at one angle. */
-export function relativeIntensity(offAxisDeg: number, head: Beam): { share: number; kind: BeamKind } {
-  const { kind, shareAt } = profileOf(head)
-  return { share: shareAt(offAxisDeg), kind }
 }

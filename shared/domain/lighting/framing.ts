@@ -1,7 +1,7 @@
 import type { WholeSetup } from '#shared/domain/plan/read-plan.ts'
 import { type LengthUnit, lengthLabel } from '#shared/units/length.ts'
 import { BODY_HALF_M, CROWN_M, type Orientation, type View, projected, rayThrough, viewOf } from './frame.ts'
-import { facePoint, minus, dot } from './geometry.ts'
+import { dot, facePoint, mainPlace, minus } from './geometry.ts'
 import type { Point, SitterPlace } from './schema.ts'
 
 export const CROPS = [
@@ -96,7 +96,7 @@ function sitterWords(leftM: number, rightM: number, topM: number, unit: LengthUn
 export function framingOf(whole: WholeSetup, orientation: Orientation, unit: LengthUnit = 'm'): Framing {
   const view = viewOf(whole, orientation)
   const face = facePoint(whole)
-  const place = whole.places.find((candidate) => candidate.at[0] === face[0] && candidate.at[1] === face[2]) ?? null
+  const place = mainPlace(whole.places)
   const distanceM = Math.max(0, dot(minus(face, view.at), view.forward))
   const topM = edgeHeightM(view, 1, face)
   const bottomM = edgeHeightM(view, -1, face)

@@ -1,12 +1,5 @@
 import { describe, expect, it } from 'vitest'
-import {
-  cosineExponent,
-  cosineProfile,
-  gaussianProfile,
-  profileOf,
-  relativeIntensity,
-  zoomHeadProfile,
-} from '#shared/domain/lighting/beam.ts'
+import { cosineExponent, cosinePower, gaussianProfile, profileOf } from '#shared/domain/lighting/beam.ts'
 
 describe('cosineExponent', () => {
   it.each([
@@ -22,10 +15,10 @@ describe('cosineExponent', () => {
   })
 })
 
-describe('cosineProfile', () => {
+describe('cosinePower', () => {
   it('is half at half the beam and nothing from 90° on', () => {
-    expect(cosineProfile(15, 30)).toBeCloseTo(0.5, 9)
-    expect(cosineProfile(90, 120)).toBe(0)
+    expect(cosinePower(15, cosineExponent(30))).toBeCloseTo(0.5, 9)
+    expect(cosinePower(90, cosineExponent(120))).toBe(0)
   })
 })
 
@@ -37,38 +30,19 @@ describe('gaussianProfile', () => {
   })
 })
 
-describe('zoomHeadProfile', () => {
-  it('is even over the covered angle, then fades to nothing', () => {
-    expect(zoomHeadProfile(0, 50)).toBe(1)
-    expect(zoomHeadProfile(5, 50)).toBe(1)
-    expect(zoomHeadProfile(60, 50)).toBe(0)
-    expect(zoomHeadProfile(16.6, 50)).toBeGreaterThan(0.3)
-  })
-})
-
-describe('relativeIntensity', () => {
-  it('takes a Gaussian up to 90°, a cosine above, a zoom head bare, and nothing off when unknown', () => {
-    const share = (beamDeg: number | null, zoomMm: number | null, bare: boolean) =>
-      relativeIntensity(20, { beamDeg, zoomMm, bare })
-    expect(share(40, null, false)).toEqual({ share: 0.5, kind: 'gaussian' })
-    expect(share(120, null, false).kind).toBe('cosine')
-    expect(share(null, 50, true).kind).toBe('zoom head')
-    expect(share(null, null, false)).toEqual({ share: 1, kind: 'unknown' })
-  })
-})
-
 describe('profileOf', () => {
-  it('is what relativeIntensity says at every angle', () => {
-    for (const head of [
-      { beamDeg: 40, zoomMm: null, bare: false },
-      { beamDeg: 120, zoomMm: null, bare: false },
-      { beamDeg: null, zoomMm: 50, bare: true },
-      { beamDeg: null, zoomMm: null, bare: true },
-    ])
-      for (const deg of [0, 5, 25, 60, 89, 91])
-        expect({ share: profileOf(head).shareAt(deg), kind: profileOf(head).kind }).toEqual(
-          relativeIntensity(deg, head),
-        )
-    expect(profileOf({ beamDeg: null, zoomMm: null, bare: true }).shareAt(91)).toBe(0)
+  const of = (beamDeg: number | null, zoomMm: number | null, bare: boolean) => profileOf({ beamDeg, zoomMm, bare })
+  it('takes a Gaussian up to 90°, a cosine above, a zoom head bare, and nothing off when unknown', () => {
+    expect([of(40, null, false).kind, of(40, null, false).shareAt(20)]).toEqual(['gaussian', 0.5])
+    expect(of(120, null, false).kind).toBe('cosine')
+    // Half at half the beam, whatever the profile: the definition of a beam.
+    expect(of(120, null, false).shareAt(60)).toBeCloseTo(0.5, 9)
+    expect(of(null, 50, true).kind).toBe('zoom head')
+    expect([of(null, null, false).kind, of(null, null, false).shareAt(20)]).toEqual(['unknown', 1])
+    expect(of(null, null, true).shareAt(91)).toBe(0)
+  })
+  it('is even over the angle that a bare zoom head covers, then fades to nothing', () => {
+    expect([0, 5, 60].map(of(null, 50, true).shareAt)).toEqual([1, 1, 0])
+    expect(of(null, 50, true).shareAt(16.6)).toBeGreaterThan(0.3)
   })
 })

@@ -1,6 +1,6 @@
 import { describe, expect, it } from 'vitest'
 import { GEL_ROWS } from '#shared/domain/kit/gels.ts'
-import { cosineExponent, cosineProfile, gaussianProfile } from '#shared/domain/lighting/beam.ts'
+import { cosineExponent, cosinePower, gaussianProfile } from '#shared/domain/lighting/beam.ts'
 import { combineFNumbers, fNumberAt, meteredLuminance } from '#shared/domain/lighting/exposure.ts'
 import { shiftBetween, shifted } from '#shared/domain/lighting/gel.ts'
 import { angleOfViewDeg, depthOfField, fieldM } from '#shared/domain/lighting/lens.ts'
@@ -262,7 +262,8 @@ describe('light on a surface', () => {
   ])(
     'a beam of %d° has the field %d and flux %d as cosⁿ, %d and %d as a Gaussian',
     (beam, field, flux, gField, gFlux) => {
-      expect(cosineProfile(field / 2, beam)).toBeCloseTo(0.1, 4)
+      const cosine = (deg: number, beamDeg: number) => cosinePower(deg, cosineExponent(beamDeg))
+      expect(cosine(field / 2, beam)).toBeCloseTo(0.1, 4)
       expect((2 * Math.acos(0.1 ** (1 / cosineExponent(beam)))) / RAD).toBeCloseTo(field, 2)
       expect(gaussianProfile(gField / 2, beam)).toBeCloseTo(0.1, 4)
       const integrated = (profile: (deg: number, beamDeg: number) => number) => {
@@ -274,7 +275,7 @@ describe('light on a surface', () => {
         }
         return sum
       }
-      expect(integrated(cosineProfile) / flux).toBeCloseTo(1, 3)
+      expect(integrated(cosine) / flux).toBeCloseTo(1, 3)
       expect(integrated(gaussianProfile) / gFlux).toBeCloseTo(1, 3)
     },
   )

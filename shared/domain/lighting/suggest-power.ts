@@ -45,18 +45,26 @@ function nearestPower(light: Light, share: number): number {
   )
 }
 
-function wordsFor({ light, name, distanceM }: Ready, offStops: number, unit: LengthUnit): string | null {
+/** What is too little or too much, and ways out; the ISO is one only where an f-number is wished for. */
+function wordsFor(
+  { light, name, distanceM }: Ready,
+  offStops: number,
+  isAgainstMain: boolean,
+  unit: LengthUnit,
+): string | null {
   const stops = Math.abs(offStops)
   if (offStops < -WITHIN_STOPS)
-    return `At full power the ${name} stays ${stops.toFixed(1)} stops under: move it to about ${lengthLabel(distanceM * 2 ** (-stops / 2), unit)}, or raise the ISO.`
+    return `At full power the ${name} stays ${stops.toFixed(1)} stops under: move it to about ${lengthLabel(distanceM * 2 ** (-stops / 2), unit)}, or ${isAgainstMain ? 'take the main down' : 'raise the ISO'}.`
   if (offStops > WITHIN_STOPS) {
-    const least = powerLabel(1 / light.unit.numbers.minPowerDenominator)
-    return `At ${least}, its least, the ${name} is ${stops.toFixed(1)} stops over: move it back to about ${lengthLabel(distanceM * 2 ** (stops / 2), unit)}, put a gel or diffuser before it, or lower the ISO.`
+    const { minPowerDenominator } = light.unit.numbers
+    const least =
+      minPowerDenominator > 1 ? `At ${powerLabel(1 / minPowerDenominator)}, its least,` : 'It cannot be dimmed:'
+    return `${least} the ${name} is ${stops.toFixed(1)} stops over: move it back to about ${lengthLabel(distanceM * 2 ** (stops / 2), unit)}, put a gel or diffuser before it, or ${isAgainstMain ? 'take the main up' : 'lower the ISO'}.`
   }
   return light.isOn ? null : `The ${name} is off: switch it on.`
 }
 
-type Target = { fNumber: number | null; words: string | null }
+type Target = { fNumber: number | null; words: string | null; isAgainstMain: boolean }
 
 /**
  * Sets a light as near as its unit can to a target; without one it stays as it is and its words say why. Its power is
@@ -86,7 +94,7 @@ function settled(ready: Ready, target: Target, iso: number, unit: LengthUnit): P
     readsFNumber,
     readsAgainstMainStops: null,
     offStops,
-    words: wordsFor(ready, offStops, unit),
+    words: wordsFor(ready, offStops, target.isAgainstMain, unit),
   }
 }
 
@@ -110,7 +118,10 @@ export function suggestPower(
     if (!wish || !('fNumber' in wish)) continue
     const isGiven = Number.isFinite(wish.fNumber) && wish.fNumber > 0
     const words = isGiven ? null : `${fNumberLabel(0)} is no f-number to reach: put in one above 0, such as 5.6.`
-    settledBy.set(ready.light.id, settled(ready, { fNumber: isGiven ? wish.fNumber : null, words }, iso, unit))
+    settledBy.set(
+      ready.light.id,
+      settled(ready, { fNumber: isGiven ? wish.fNumber : null, words, isAgainstMain: false }, iso, unit),
+    )
   }
   const mains = lights.flatMap(({ light, fullLxS }) => {
     const set = settledBy.get(light.id)
@@ -128,7 +139,12 @@ export function suggestPower(
     const isGiven = main > 0 && Number.isFinite(wish.againstMainStops)
     settledBy.set(
       ready.light.id,
-      settled(ready, { fNumber: isGiven ? main * 2 ** (wish.againstMainStops / 2) : null, words }, iso, unit),
+      settled(
+        ready,
+        { fNumber: isGiven ? main * 2 ** (wish.againstMainStops / 2) : null, words, isAgainstMain: true },
+        iso,
+        unit,
+      ),
     )
   }
   return lights.flatMap(({ light }) => {

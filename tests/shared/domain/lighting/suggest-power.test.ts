@@ -72,7 +72,14 @@ describe('suggestPower', () => {
     expect(suggestPower(whole({ lights: [lamp(100)] }), wish)[0]?.power).toBeCloseTo(0.5, 9)
     const fixed = suggestPower(whole({ lights: [lamp(1)] }), wish)[0]
     expect(fixed).toMatchObject({ power: 1 })
-    expect(fixed?.words).toMatch(/1\.0 stops over/)
+    expect(fixed?.words).toMatch(/^It cannot be dimmed: the main is 1\.0 stops over/)
+  })
+
+  it('sends nobody to the ISO for stops against the main, which it does not change', () => {
+    const words = (againstMainStops: number) =>
+      suggestPower(whole({ lights: [main(), fill] }), [{ lightId: id(2), againstMainStops }])[0]?.words
+    expect(words(9)).toMatch(/stops under: .*, or take the main down\.$/)
+    expect(words(-15)).toMatch(/stops over: .*, or take the main up\.$/)
   })
 
   it('sets several lights of one purpose apart, and measures against all mains together', () => {

@@ -106,11 +106,11 @@ describe('KitTable', () => {
     expect(dialog.getByRole('button', { name: 'Take the reading' })).toHaveProperty('disabled', true)
     type(dialog.getByLabelText('At a distance of'), '2')
     fireEvent.click(dialog.getByRole('button', { name: 'Take the reading' }))
-    // 5.6 · 2 m · √(1 + r²/4) with the disc of a 0.9 m square face, r² = 0.81/π.
-    expect(dialog.getByText(/90 cm octa, 105 mm: guide number 11\.6 m/)).toBeTruthy()
+    // 5.6 · 2 m · √(1 + r²/4) with the disc of a round face 0.9 m wide, r = 0.45 m.
+    expect(dialog.getByText(/90 cm octa, 105 mm: guide number 11\.5 m/)).toBeTruthy()
     fireEvent.click(dialog.getByRole('button', { name: 'Save' }))
     await waitFor(() => expect(sent).toHaveLength(1))
-    expect(sent[0]).toMatchObject({ body: { body: { numbers: { metered: [{ zoomMm: 105, guideNumberM: 11.56 }] } } } })
+    expect(sent[0]).toMatchObject({ body: { body: { numbers: { metered: [{ zoomMm: 105, guideNumberM: 11.48 }] } } } })
   })
 
   it('shows what a file would do and writes it in one request once somebody agrees', async () => {

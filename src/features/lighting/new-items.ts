@@ -1,8 +1,10 @@
 import { lightIdSchema, placeIdSchema, propIdSchema, setupIdSchema, type LightId, type SetupId } from '#shared/ids.ts'
 import type { WholeSetup } from '#shared/domain/plan/read-plan.ts'
+import { guessedAppearance, seedOf } from '#shared/domain/lighting/appearance.ts'
 import { facePoint } from '#shared/domain/lighting/geometry.ts'
 import { zoomTableOf } from '#shared/domain/lighting/light-source.ts'
 import {
+  type Appearance,
   type Light,
   type LightModifier,
   type LightPurpose,
@@ -226,6 +228,13 @@ export function newSetup(
   }
 }
 
+/** The guess about somebody without a name hangs on the id of the place: a copy has another, and keeps the person. */
+function keptAppearance(place: SitterPlace): Appearance | null {
+  const { appearance, sitterId } = place
+  if (sitterId !== null || (appearance && appearance.face !== null)) return appearance
+  return { ...(appearance ?? guessedAppearance(place)), face: seedOf(place.id) }
+}
+
 /** Everything of a setup with new ids under a new name: a variation. */
 export function copyOf(whole: WholeSetup, name: string, ranks: readonly string[], random: () => number): WholeSetup {
   const setupId: SetupId = setupIdSchema.parse(newId())
@@ -234,7 +243,12 @@ export function copyOf(whole: WholeSetup, name: string, ranks: readonly string[]
   return {
     setup: { ...whole.setup, id: setupId, name, rank: appendKey(ranks, random) },
     lights: whole.lights.map((light) => ({ ...light, id: lightIdSchema.parse(newId()), setupId })),
-    places: whole.places.map((place, index) => ({ ...place, id: placeIdSchema.parse(placeIds[index]), setupId })),
+    places: whole.places.map((place, index) => ({
+      ...place,
+      id: placeIdSchema.parse(placeIds[index]),
+      setupId,
+      appearance: keptAppearance(place),
+    })),
     props: whole.props.map((prop) => ({ ...prop, id: propIdSchema.parse(newId()), setupId })),
   }
 }

@@ -1,4 +1,5 @@
 import { describe, expect, it } from 'vitest'
+import { guessedAppearance } from '#shared/domain/lighting/appearance.ts'
 import {
   lightModifierSchema,
   lightSchema,
@@ -9,6 +10,9 @@ import {
 } from '#shared/domain/lighting/schema.ts'
 import { elevationDeg } from '#shared/domain/lighting/softness.ts'
 import { changeActions } from '#shared/domain/lighting/changeover.ts'
+import { sceneOf } from '#shared/domain/lighting/test-frame/scene-of.ts'
+import type { WholeSetup } from '#shared/domain/plan/read-plan.ts'
+import { sitterIdSchema } from '#shared/ids.ts'
 import {
   copyOf,
   duplicateLight,
@@ -18,7 +22,7 @@ import {
   newSetup,
   shiftedRank,
 } from '#src/features/lighting/new-items.ts'
-import { MINUTES, OCTA, light, unit, whole } from '#tests/support/lighting-sample.ts'
+import { MINUTES, OCTA, id, light, unit, whole } from '#tests/support/lighting-sample.ts'
 
 const make = { unit: lightUnitSchema.parse(unit()), modifier: lightModifierSchema.parse(OCTA), support: null }
 const half = () => 0.5
@@ -83,6 +87,20 @@ describe('copyOf', () => {
     expect(copy.lights[0]?.setupId).toBe(copy.setup.id)
     expect(copy.lights[0]?.id).not.toBe(setup.lights[0]?.id)
     expect(changeActions(setup, copy, { sameRoom: true, minutes: MINUTES })).toEqual([])
+  })
+  it('shows the same person, also one without a name', () => {
+    const figures = (setup: WholeSetup) => sceneOf(setup, 'upright', { garmentColour: () => null }).figures
+    const nameless = whole({})
+    const plain = nameless.places.map((place) => ({ ...place, sitterId: null, appearance: null }))
+    const brown = plain.map((place) => ({ ...place, appearance: { ...guessedAppearance(place), skinItaDeg: -12 } }))
+    for (const places of [plain, brown]) {
+      const setup = { ...nameless, places }
+      const copy = copyOf(setup, 'Variation', [], half)
+      expect(figures(copy)).toEqual(figures(setup))
+      expect(figures(copyOf(copy, 'Another', [], half))).toEqual(figures(setup))
+    }
+    const named = { ...nameless, places: plain.map((place) => ({ ...place, sitterId: sitterIdSchema.parse(id(77)) })) }
+    expect(copyOf(named, 'Variation', [], half).places[0]?.appearance).toBeNull()
   })
 })
 

@@ -147,6 +147,17 @@ describe('MeterReadings', () => {
     expect(screen.getByRole('button', { name: 'Take readings over' })).toHaveProperty('disabled', true)
   })
 
+  it('takes back what was wrong with the first key, so that nothing moves under a press', async () => {
+    show()
+    await type('Main', '1000')
+    const main = within(await row('Main'))
+    const field = main.getByLabelText('The meter reads f/')
+    fireEvent.input(field, { target: { value: '4' } })
+    expect(main.queryByText(/A meter reads between/)).toBeNull()
+    fireEvent.blur(field)
+    expect(screen.getByRole('button', { name: 'Take 1 reading over' })).toHaveProperty('disabled', false)
+  })
+
   it('is only looked at by who may not change the light', async () => {
     show({ role: 'client' })
     await screen.findByText('kit there')

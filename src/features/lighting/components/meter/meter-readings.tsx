@@ -202,6 +202,10 @@ function MeterFields({
               step={0.1}
               inputMode="decimal"
               value={draft.fNumber}
+              // What is wrong goes with the first key: were it to go on leaving, the dialog would shrink under a press.
+              onInput={() => {
+                if (faults.length > 0) onChange({ ...draft, fNumber: null })
+              }}
               onChange={(fNumber) => onChange({ ...draft, fNumber })}
             />
           </Field>

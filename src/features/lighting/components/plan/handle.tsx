@@ -33,6 +33,8 @@ export function Handle({ x, y, label, handlers, held, chosen, mayWrite, peer, ri
       {...handlers}
     >
       <circle r={22} fill="transparent" />
+      {children}
+      {/* Over the shape: a large one would hide where the focus is. */}
       <circle
         r={ringPx}
         fill={held || chosen ? 'rgb(47 79 112 / 0.07)' : 'none'}
@@ -41,7 +43,6 @@ export function Handle({ x, y, label, handlers, held, chosen, mayWrite, peer, ri
         strokeDasharray={held ? '3 3' : undefined}
         className={cn(!held && !chosen && 'opacity-0 group-hover:opacity-35', 'group-focus-visible:opacity-100')}
       />
-      {children}
       {peer && (
         <text y={-ringPx - 5} textAnchor="middle" className="text-xs font-semibold" style={{ fill: peer.colour }}>
           {peer.name}

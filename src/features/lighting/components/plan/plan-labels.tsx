@@ -100,9 +100,12 @@ function cameraLabel({ setup: { camera }, lights }: WholeSetup, view: PlanView):
 
 function propLabel(prop: Prop, whole: WholeSetup, view: PlanView): Label {
   const turn = prop.kind === 'prop' ? 0 : (prop.turnDeg * Math.PI) / 180
-  const away = Math.max(12, (prop.widthM / 2) * Math.abs(Math.cos(turn)) * view.pxPerM + 10)
+  const halfPx = (prop.widthM / 2) * view.pxPerM
+  const away = Math.max(12, halfPx * Math.abs(Math.cos(turn)) + 10)
   const { overPx, ...beside } = besideOf(view, prop.at[0], facePoint(whole)[0], away, [prop.name])
-  return { key: prop.id, ...beside, y: toZ(view, prop.at[2]) + 4 - overPx, lines: [prop.name] }
+  // Over all of a panel that stands in depth, not over its middle.
+  const clearPx = overPx === 0 ? 0 : Math.max(overPx, halfPx * Math.abs(Math.sin(turn)) + 12)
+  return { key: prop.id, ...beside, y: toZ(view, prop.at[2]) + 4 - clearPx, lines: [prop.name] }
 }
 
 /** Where a sitter's name stands: outside at the two ends of a row, above in between. */

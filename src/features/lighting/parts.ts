@@ -129,5 +129,7 @@ export function placeWords(point: Point, whole: WholeSetup, unit: LengthUnit = '
   if (Math.abs(z) >= 0.05)
     parts.push(`${lengthLabel(Math.abs(z), unit)} ${z > 0 ? 'towards the camera' : 'behind the sitter’s mark'}`)
   if (parts.length === 0) parts.push('on the sitter’s mark')
-  return [...parts, `${lengthLabel(distanceBetween(point, facePoint(whole)), unit)} from the sitter`].join(', ')
+  const fromFaceM = distanceBetween(point, facePoint(whole))
+  if (fromFaceM >= 0.05) parts.push(`${lengthLabel(fromFaceM, unit)} from the sitter`)
+  return parts.join(', ')
 }

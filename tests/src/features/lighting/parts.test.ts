@@ -23,6 +23,7 @@ describe('placeWords', () => {
     expect(placeWords([0, 1.5, -2], setup)).toBe('2.0 m behind the sitter’s mark, 2.0 m from the sitter')
     expect(placeWords([0, 1.5, -2], setup, 'ft')).toBe('6′ 7″ behind the sitter’s mark, 6′ 7″ from the sitter')
     expect(placeWords([0, 2.5, 0], setup)).toBe('on the sitter’s mark, 1.0 m from the sitter')
+    expect(placeWords([0, 1.5, 0], setup)).toBe('on the sitter’s mark')
   })
 })
 

@@ -92,9 +92,11 @@ export function LargeView(props: LargeViewProps) {
               { value: 'wall', label: 'Wall' },
             ]}
           />
-          <Button onClick={save} disabled={look === 'wall' || read === null}>
-            Save as PNG
-          </Button>
+          {look !== 'wall' && (
+            <Button onClick={save} disabled={read === null}>
+              Save as PNG
+            </Button>
+          )}
         </>
       }
     >

@@ -213,7 +213,7 @@ export function useMoving({ whole, mayWrite, nameOf, onChoose, onDrop }: MovingI
   return { held, said, handlers }
 }
 
-/** Name of a part for its handle, with where it stands and what a press does. */
+/** Name of a part for its handle, with where it stands. */
 export function handleLabel(part: Part, whole: WholeSetup, unit: LengthUnit, name = partName(part)): string {
   const off = part.kind === 'light' && !part.light.isOn ? ', switched off' : ''
   return `${name}${off}, ${placeWords(pointOf(part, whole), whole, unit)}`

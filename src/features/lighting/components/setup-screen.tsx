@@ -1,9 +1,9 @@
 import { useMemo, useState } from 'react'
-import { MoreHorizontal } from 'lucide-react'
 import { Link } from 'react-router-dom'
 import { cautionsOf } from '#shared/domain/lighting/cautions.ts'
 import type { LightPurpose } from '#shared/domain/lighting/schema.ts'
 import { readSetup } from '#shared/domain/lighting/readings.ts'
+import { setupUse, widestOf } from '#shared/domain/lighting/setup-use.ts'
 import { purposeWord } from '#shared/domain/lighting/words.ts'
 import type { Plan, WholeSetup } from '#shared/domain/plan/read-plan.ts'
 import { sitters as sittersOf } from '#shared/realtime/documents.ts'
@@ -12,21 +12,17 @@ import { useMayWrite, useShoot } from '#src/realtime/shoot-realtime.tsx'
 import { useItems } from '#src/realtime/use-items.ts'
 import { usePlan } from '#src/realtime/use-plan.ts'
 import { useUndoKeys } from '#src/realtime/use-undo-keys.ts'
-import { Button, IconButton, buttonClass } from '#src/ui/button.tsx'
+import { Button, buttonClass } from '#src/ui/button.tsx'
 import { Empty } from '#src/ui/empty.tsx'
-import { Menu } from '#src/ui/menu.tsx'
-import { ScreenBar } from '#src/ui/screen-bar.tsx'
 import { Sheet } from '#src/ui/sheet.tsx'
 import { useIsPhone } from '#src/ui/use-media.ts'
 import { type Part, partKey, partName, withMoves } from '../parts.ts'
-import { setupUse, widestOf } from '#shared/domain/lighting/setup-use.ts'
 import { useKit } from '../use-kit.ts'
 import { useMoving } from '../use-moving.ts'
 import { usePeerMoves } from '../use-peer-moves.ts'
 import { useSetupWriter } from '../use-setup-writer.ts'
 import { useFrames } from '../test-frame/use-frames.ts'
 import { useSheetFrames } from '../test-frame/use-sheet-frames.ts'
-import { useSetups, wholeItems } from '../use-setups.ts'
 import { AddLight } from './add-light.tsx'
 import { FrameStrip } from './frames/frame-strip.tsx'
 import { LargeView } from './frames/large-view.tsx'
@@ -38,8 +34,8 @@ import { SideDrawing } from './plan/side-drawing.tsx'
 import { Overview } from './readings/overview.tsx'
 import { useOpenGroups } from './readings/use-open-groups.ts'
 import { useRecipeDialogs } from './recipe/use-recipe-dialogs.tsx'
+import { SetupBar } from './setup-bar.tsx'
 import { SetupEditor, isPartOf } from './setup-editor.tsx'
-import { UnitSwitch, useUnitAction } from './unit-switch.tsx'
 
 /** One lighting setup: drawn to scale, with its numbers beside. */
 export function SetupScreen({ setupId }: { setupId: string }) {
@@ -76,9 +72,7 @@ function Setup({ plan, whole }: { plan: Plan; whole: WholeSetup }) {
   const groups = useOpenGroups()
   const lengthUnit = useLengthUnit()
   const [openStage, setOpenStage] = useState<string | null>(null)
-  const setups = useSetups()
   const recipes = useRecipeDialogs(useSheetFrames(plan))
-  const unitAction = useUnitAction()
   const use = useMemo(() => setupUse(plan, whole.setup.id), [plan, whole.setup.id])
 
   const sitters = [...sitterItems.values()].map((sitter) => ({
@@ -155,40 +149,18 @@ function Setup({ plan, whole }: { plan: Plan; whole: WholeSetup }) {
     />
   )
   const chosenLight = whole.lights.find((light) => chosenKey === light.id || chosenKey === `${light.id}:aim`)
-  const onPhone = (items: readonly { label: string; onSelect: () => void }[]) =>
-    items.map(({ label, onSelect }) => ({ label, onPress: onSelect }))
-  const meterAction = { label: 'Meter readings', variant: 'quiet' as const, onPress: () => setIsMetering(true) }
-  const readerActions = [...onPhone(recipes.itemsOf(whole)), unitAction]
-  const phoneActions = [...onPhone(wholeItems(whole, setups)), ...readerActions]
-  const actions = mayWrite
-    ? [
-        { label: 'Undo', variant: 'quiet' as const, disabled: !writer.undo.canUndo, onPress: writer.undo.undo },
-        { label: 'Redo', variant: 'quiet' as const, disabled: !writer.undo.canRedo, onPress: writer.undo.redo },
-        meterAction,
-        ...(isPhone ? phoneActions : []),
-        { label: 'Add a light', variant: 'primary' as const, onPress: () => setAdding('any') },
-      ]
-    : isPhone
-      ? readerActions
-      : []
 
   return (
     <div className="flex min-h-full flex-col md:h-full">
-      <ScreenBar title={whole.setup.name} sub={mayWrite ? use.words : `${use.words} · to read only`} actions={actions}>
-        {isPhone ? undefined : (
-          <>
-            <UnitSwitch />
-            <Menu
-              trigger={
-                <IconButton label="More for this setup">
-                  <MoreHorizontal size={18} aria-hidden />
-                </IconButton>
-              }
-              items={[...(mayWrite ? [...wholeItems(whole, setups), 'line' as const] : []), ...recipes.itemsOf(whole)]}
-            />
-          </>
-        )}
-      </ScreenBar>
+      <SetupBar
+        whole={whole}
+        usedWords={use.words}
+        mayWrite={mayWrite}
+        undo={writer.undo}
+        recipeItems={recipes.itemsOf(whole)}
+        onMeter={() => setIsMetering(true)}
+        onAddLight={() => setAdding('any')}
+      />
       {recipes.dialogs}
       <div className="grid min-h-0 flex-1 md:grid-cols-[minmax(0,1fr)_minmax(19rem,32%)] xl:grid-cols-[minmax(0,1fr)_25rem]">
         <div className="flex min-w-0 flex-col gap-3 p-2.5 md:min-h-0 md:py-0 md:pr-5 md:pb-3.5 md:pl-6">

@@ -2,7 +2,7 @@ import { chooseLengthUnit, useLengthUnit } from '#src/lib/length-unit.ts'
 import { Button } from '#src/ui/button.tsx'
 import type { ScreenAction } from '#src/ui/screen-bar.tsx'
 
-/** The same switch as a line of a phone's menu. */
+/** The switch between metres and feet as a line of a phone’s menu. */
 export function useUnitAction(): ScreenAction {
   const unit = useLengthUnit()
   return unit === 'm'

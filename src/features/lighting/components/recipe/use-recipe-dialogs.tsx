@@ -9,10 +9,8 @@ import { RecipeSheetDialog } from './recipe-sheet-dialog.tsx'
 
 type Open = { what: 'keep' | 'sheet'; whole: WholeSetup }
 
-const noFrames = async (): Promise<SheetPicture[]> => []
-
 /** What is done with a setup as a recipe: lines for its menu, and the dialogs they open. */
-export function useRecipeDialogs(framesOf: (whole: WholeSetup) => Promise<SheetPicture[]> = noFrames): {
+export function useRecipeDialogs(framesOf: (whole: WholeSetup) => Promise<SheetPicture[]>): {
   itemsOf: (whole: WholeSetup) => { label: string; onSelect: () => void }[]
   dialogs: ReactNode
 } {

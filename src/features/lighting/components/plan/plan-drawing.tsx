@@ -1,16 +1,14 @@
 import type { WholeSetup } from '#shared/domain/plan/read-plan.ts'
 import type { Orientation } from '#shared/domain/lighting/frame.ts'
 import { useLengthUnit } from '#src/lib/length-unit.ts'
-import { type Part, partKey } from '../../parts.ts'
 import { fitPlan, projectPlan, toX, toZ } from '../../plan-view.ts'
-import { type Moving, handleLabel } from '../../use-moving.ts'
-import type { PeerHold } from '../../use-peer-moves.ts'
 import { holdTouch } from '../../hold-touch.ts'
 import { useFrozen } from '../../use-frozen.ts'
 import { useSize } from '../../use-size.ts'
 import { Aims } from './aims.tsx'
 import { Beam } from './beam.tsx'
 import { Guides } from './guides.tsx'
+import { type MovableSetup, handlePropsIn } from './handle-props.ts'
 import { Handle } from './handle.tsx'
 import { LightShape } from './light-shape.tsx'
 import { PlanGround } from './plan-ground.tsx'
@@ -20,17 +18,10 @@ import { Readout } from './readout.tsx'
 import { SitterFromAbove } from './sitter-shape.tsx'
 import { Standing } from './standing.tsx'
 
-export type PlanDrawingProps = {
-  /** The setup as it is shown: with what hands hold. */
-  whole: WholeSetup
+export type PlanDrawingProps = MovableSetup & {
   /** The setup as it is written: the scale follows this one, so that nothing slides under a hand. */
   written: WholeSetup
   orientation: Orientation
-  chosenKey: string | null
-  moving: Moving
-  mayWrite: boolean
-  peers: ReadonlyMap<string, PeerHold>
-  nameOf: (part: Part) => string
   onChooseNothing: () => void
 }
 
@@ -48,8 +39,8 @@ export function PlanDrawing(props: PlanDrawingProps) {
   )
 }
 
-function Plan({ width, height, written, whole, ...rest }: PlanDrawingProps & { width: number; height: number }) {
-  const { moving, mayWrite, chosenKey, peers, nameOf } = rest
+function Plan({ width, height, written, ...rest }: PlanDrawingProps & { width: number; height: number }) {
+  const { whole, moving, chosenKey, nameOf } = rest
   const unit = useLengthUnit()
   const isNarrow = width < NARROW_PX
   const margins = isNarrow
@@ -57,19 +48,8 @@ function Plan({ width, height, written, whole, ...rest }: PlanDrawingProps & { w
     : { left: 150, right: 165, top: 40, bottom: 42 }
   const view = useFrozen(fitPlan(written, width, height, margins), moving.held !== null)
   const project = projectPlan(view)
-  const drawing = { kind: 'plan', pxPerM: view.pxPerM } as const
   const { camera } = whole.setup
-  const common = (part: Part) => {
-    const key = partKey(part)
-    return {
-      label: handleLabel(part, whole, unit, nameOf(part)),
-      handlers: moving.handlers(part, drawing),
-      held: moving.held?.key === key,
-      chosen: chosenKey === key,
-      peer: peers.get(key),
-      mayWrite,
-    }
-  }
+  const common = handlePropsIn(rest, { kind: 'plan', pxPerM: view.pxPerM }, unit)
   return (
     <svg
       ref={holdTouch}

@@ -4,16 +4,15 @@ import { facePoint } from '#shared/domain/lighting/geometry.ts'
 import type { SetupReading } from '#shared/domain/lighting/readings.ts'
 import { useLengthUnit } from '#src/lib/length-unit.ts'
 import { eyeLineWords } from '../../measures.ts'
-import { type Part, partKey, pointOf } from '../../parts.ts'
+import { type Part, pointOf } from '../../parts.ts'
 import { type Project, fitSide, projectSide } from '../../plan-view.ts'
-import { type Moving, handleLabel } from '../../use-moving.ts'
-import type { PeerHold } from '../../use-peer-moves.ts'
 import { holdTouch } from '../../hold-touch.ts'
 import { useFrozen } from '../../use-frozen.ts'
 import { useSize } from '../../use-size.ts'
 import { Aims } from './aims.tsx'
 import { Beam } from './beam.tsx'
 import { Guides } from './guides.tsx'
+import { type MovableSetup, handlePropsIn } from './handle-props.ts'
 import { Handle } from './handle.tsx'
 import { LightShape } from './light-shape.tsx'
 import { PropShape } from './prop-shape.tsx'
@@ -22,17 +21,7 @@ import { SideGround } from './side-ground.tsx'
 import { SitterFromSide } from './sitter-shape.tsx'
 import { Standing } from './standing.tsx'
 
-export type SideDrawingProps = {
-  whole: WholeSetup
-  written: WholeSetup
-  reading: SetupReading
-  orientation: Orientation
-  chosenKey: string | null
-  moving: Moving
-  mayWrite: boolean
-  peers: ReadonlyMap<string, PeerHold>
-  nameOf: (part: Part) => string
-}
+export type SideDrawingProps = MovableSetup & { written: WholeSetup; reading: SetupReading; orientation: Orientation }
 
 /** The setup from the side, wall at the left, camera at the right: heights are dragged here. */
 export function SideDrawing(props: SideDrawingProps) {
@@ -46,27 +35,16 @@ export function SideDrawing(props: SideDrawingProps) {
   )
 }
 
-function Side({ whole, written, width, height, ...rest }: SideDrawingProps & { width: number; height: number }) {
-  const { reading, orientation, chosenKey, moving, mayWrite, peers, nameOf } = rest
+function Side({ written, width, height, ...rest }: SideDrawingProps & { width: number; height: number }) {
+  const { whole, reading, orientation, chosenKey, moving } = rest
   const unit = useLengthUnit()
   const view = useFrozen(fitSide(written, width, height), moving.held !== null)
   const project = projectSide(view)
-  const drawing = { kind: 'side', pxPerM: view.pxPerM } as const
   const at = (part: Part) => {
     const [x, y] = project(pointOf(part, whole))
     return { x, y }
   }
-  const common = (part: Part) => {
-    const key = partKey(part)
-    return {
-      label: `${handleLabel(part, whole, unit, nameOf(part))}, seen from the side`,
-      handlers: moving.handlers(part, drawing),
-      held: moving.held?.key === key,
-      chosen: chosenKey === key,
-      peer: peers.get(key),
-      mayWrite,
-    }
-  }
+  const common = handlePropsIn(rest, { kind: 'side', pxPerM: view.pxPerM }, unit)
   const places = whole.places.map((place): Part & { kind: 'place' } => ({ kind: 'place', place }))
   const props = whole.props.map((prop): Part & { kind: 'prop' } => ({ kind: 'prop', prop }))
   const lights = whole.lights.map((light): Part & { kind: 'light' } => ({ kind: 'light', light }))

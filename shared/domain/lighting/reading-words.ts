@@ -1,4 +1,5 @@
 import { type LengthUnit, METRES_PER_INCH, lengthLabel } from '#shared/units/length.ts'
+import type { Orientation } from './frame.ts'
 import { stopsLabel } from './words.ts'
 
 /** Steps by which a colour is called off from the white balance, mired (assumptions). */
@@ -41,4 +42,15 @@ export function sizeLabel(widthM: number, heightM: number, unit: LengthUnit): st
 /** Full pops against those of a charge: "12 of 150", or "12" from the mains. */
 export function popsWords(pops: number, popsPerCharge: number | null): string {
   return popsPerCharge === null ? `${Math.ceil(pops)}` : `${Math.ceil(pops)} of ${popsPerCharge}`
+}
+
+const FRAME_WORDS: Readonly<Record<Orientation, string>> = {
+  upright: 'Upright frame',
+  across: 'Frame across',
+  square: 'Square frame',
+}
+
+/** What a frame of this orientation is called: "Upright frame". */
+export function frameWords(orientation: Orientation): string {
+  return FRAME_WORDS[orientation]
 }

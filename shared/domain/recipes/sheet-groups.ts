@@ -3,6 +3,7 @@ import { kelvinLabel } from '#shared/domain/lighting/gel.ts'
 import { sightsOf } from '#shared/domain/lighting/in-frame.ts'
 import {
   depthLabel,
+  frameWords,
   popsWords,
   sizeLabel,
   smallLabel,
@@ -93,7 +94,7 @@ function lensLines({ whole, reading, use, unit }: SheetGroupsInput): SheetLine[]
   const exact = (metres: number) => lengthLabel(metres, unit, true)
   return [
     ...framing.map(({ orientation, widthM, heightM, words }) => ({
-      label: orientation === 'upright' ? 'Upright frame' : 'Frame across',
+      label: frameWords(orientation),
       value: sizeLabel(widthM, heightM, unit),
       more: words,
     })),

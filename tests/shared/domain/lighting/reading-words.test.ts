@@ -1,6 +1,7 @@
 import { describe, expect, it } from 'vitest'
 import {
   depthLabel,
+  frameWords,
   popsWords,
   sizeLabel,
   smallLabel,
@@ -59,5 +60,15 @@ describe('sizeLabel', () => {
 describe('popsWords', () => {
   it('counts against a charge where there is one', () => {
     expect([popsWords(11.2, 150), popsWords(11.2, null)]).toEqual(['12 of 150', '12'])
+  })
+})
+
+describe('frameWords', () => {
+  it('knows a square from a frame across', () => {
+    expect((['upright', 'across', 'square'] as const).map(frameWords)).toEqual([
+      'Upright frame',
+      'Frame across',
+      'Square frame',
+    ])
   })
 })

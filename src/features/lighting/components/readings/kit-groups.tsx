@@ -2,7 +2,7 @@ import { loadKgOf } from '#shared/domain/lighting/boom.ts'
 import { sightsOf } from '#shared/domain/lighting/in-frame.ts'
 import { LONG_LOAD_SHARE, type MainsLoad } from '#shared/domain/lighting/mains.ts'
 import type { Supply } from '#shared/domain/lighting/power.ts'
-import { depthLabel, popsWords, sizeLabel } from '#shared/domain/lighting/reading-words.ts'
+import { depthLabel, frameWords, popsWords, sizeLabel } from '#shared/domain/lighting/reading-words.ts'
 import type { SetupReading } from '#shared/domain/lighting/readings.ts'
 import { type Light, isLamp } from '#shared/domain/lighting/schema.ts'
 import type { SetupUse } from '#shared/domain/lighting/setup-use.ts'
@@ -65,7 +65,7 @@ function LensLines({ whole, reading, use, nameOfPlace }: Omit<KitGroupsProps, 'g
       {framing.map((frame) => (
         <Line
           key={frame.orientation}
-          label={frame.orientation === 'upright' ? 'Upright frame' : 'Frame across'}
+          label={frameWords(frame.orientation)}
           value={sizeLabel(frame.widthM, frame.heightM, unit)}
           words={frame.words}
         >

@@ -6,6 +6,7 @@ import { frameCautions } from './in-frame.ts'
 import { faceOf, outputOf } from './light-output.ts'
 import { LONG_LOAD_SHARE, type MainsLoad } from './mains.ts'
 import { type Supply, suppliesOf } from './power.ts'
+import type { ProblemKey } from './problems.ts'
 import { type SetupReading, readSetup } from './readings.ts'
 import { type Light, isLamp } from './schema.ts'
 import { SOCKET_LIMIT_DEG } from './softness.ts'
@@ -312,9 +313,18 @@ export function cautionsOf(
   return TONES.flatMap((tone) => all.filter((caution) => caution.tone === tone))
 }
 
-/** The red cautions of a setup, one sentence each: what keeps the section's lamp from being lit. */
+/** Colours that no temperature tells are a matter of taste: they keep no lamp from being lit. */
+const TASTE: ReadonlySet<ProblemKey> = new Set(['colour', 'gel-colour'])
+
+/**
+ * What keeps the section's lamp from being lit, one sentence each: what cannot be worked out, then the red cautions.
+ */
 export function redCautions(whole: WholeSetup, options: Partial<CautionOptions> = {}): string[] {
-  return cautionsOf(whole, options)
-    .filter((caution) => caution.tone === 'red')
-    .map((caution) => caution.title)
+  const reading = readSetup(whole, options)
+  return [
+    ...reading.problems.filter(({ key }) => !TASTE.has(key)).map(({ words }) => words),
+    ...cautionsOf(whole, options, reading)
+      .filter((caution) => caution.tone === 'red')
+      .map((caution) => caution.title),
+  ]
 }

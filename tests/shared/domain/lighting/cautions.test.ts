@@ -1,7 +1,18 @@
 import { describe, expect, it } from 'vitest'
 import { cautionsOf, redCautions } from '#shared/domain/lighting/cautions.ts'
 import { lampUnit } from '#tests/support/lamp-sample.ts'
-import { BOOM, FULL_WARM, OCTA, STAND, light, modifier, support, unit, whole } from '#tests/support/lighting-sample.ts'
+import {
+  BOOM,
+  FULL_WARM,
+  OCTA,
+  STAND,
+  gel,
+  light,
+  modifier,
+  support,
+  unit,
+  whole,
+} from '#tests/support/lighting-sample.ts'
 
 const FACE: [number, number, number] = [0, 1.5, 0]
 const main = (more: object = {}) =>
@@ -38,6 +49,15 @@ describe('cautionsOf', () => {
     expect(redCautions(whole({ lights: [main({ support: low })], camera: right(6) }))).toEqual([
       'Higher than its low stand goes',
     ])
+  })
+
+  it('counts what cannot be worked out as red, and a gel without a colour temperature as taste', () => {
+    const none = unit(undefined, { guideNumberM: { value: 0, from: 'assumed', source: '' } })
+    const [first, ...others] = redCautions(whole({ lights: [main({ unit: none })], camera: right(6) }))
+    expect(first).toContain('guide number')
+    expect(others).toEqual([])
+    const blue = gel(940, 'Double full blue', -260, 0.13)
+    expect(redCautions(whole({ lights: [main({ gels: [blue] })], camera: right(2.8) }))).toEqual([])
   })
 
   it('works out the counterweight of a boom from the lever', () => {

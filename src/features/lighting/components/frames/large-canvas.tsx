@@ -6,8 +6,8 @@ import { canvasOf } from '../../test-frame/picture-blob.ts'
 import type { LargeFrame, Rows } from '../../test-frame/use-large-frame.ts'
 
 export type LargeLook = 'picture' | 'false colour'
-/** A place of the picture, in shares of it from the top left. */
-export type Spot = { across: number; down: number }
+/** A place of the picture, in shares of it from the top left; whoever moves it by keys is told aloud what it reads. */
+export type Spot = { across: number; down: number; byKeys: boolean }
 
 type LargeCanvasProps = {
   /** The small picture, shown until the large one is there. */
@@ -68,7 +68,8 @@ export function LargeCanvas({ under, large, weights, look, label, spot, onSpot }
 
   function handlePointer(event: PointerEvent<HTMLElement>) {
     const box = event.currentTarget.getBoundingClientRect()
-    onSpot({ across: (event.clientX - box.left) / box.width, down: (event.clientY - box.top) / box.height })
+    const across = (event.clientX - box.left) / box.width
+    onSpot({ across, down: (event.clientY - box.top) / box.height, byKeys: false })
   }
   function handleKeys(event: KeyboardEvent) {
     const arrow = { ArrowLeft: [-1, 0], ArrowRight: [1, 0], ArrowUp: [0, -1], ArrowDown: [0, 1] }[event.key]
@@ -76,7 +77,7 @@ export function LargeCanvas({ under, large, weights, look, label, spot, onSpot }
     event.preventDefault()
     const from = spot ?? { across: 0.5, down: 1 / 3 }
     const moved = (value: number, by: number | undefined) => Math.min(0.999, Math.max(0, value + (by ?? 0) * STEP))
-    onSpot({ across: moved(from.across, arrow[0]), down: moved(from.down, arrow[1]) })
+    onSpot({ across: moved(from.across, arrow[0]), down: moved(from.down, arrow[1]), byKeys: true })
   }
 
   return (

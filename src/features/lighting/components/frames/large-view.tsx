@@ -127,7 +127,7 @@ export function LargeView(props: LargeViewProps) {
             </>
           ) : (
             <>
-              <p aria-live="off" className="min-h-[3.2em] text-sm">
+              <p aria-live={spot?.byKeys ? 'polite' : 'off'} className="min-h-[3.2em] text-sm">
                 {reading ? (
                   <>
                     <span className="font-display text-lg font-semibold">{stopsWords(reading.stops)}</span>

@@ -109,7 +109,7 @@ function supportCautions(light: Light, unit: LengthUnit): Caution[] {
         'mind',
         `Bag the ${name} stand`,
         `${why}. Bag it, tape the cable. Follow the stand maker’s limits and the venue’s rules.`,
-        `Asked from ${exactLabel(BAG_ABOVE_M, unit)} up or ${areaLabel(SAIL_M2, unit)} of face (assumptions).`,
+        `Said from ${exactLabel(BAG_ABOVE_M, unit)} up or ${areaLabel(SAIL_M2, unit)} of face (assumptions).`,
       )
     }
   }
@@ -141,7 +141,7 @@ function powerCautions(light: Light): Caution[] {
       title: `The ${name} gets hot`,
       words: `${powerLabel(light.power) === 'full' ? 'Full power' : `${powerLabel(light.power)} power`} behind ${light.gels.length > 0 ? 'a gel' : 'a closed modifier'} heats ${isLamp(numbers) ? 'lamp and gel. Keep to the maker’s limits' : 'head, gel and bulb. Keep the pace the maker allows'}, let it cool before touching, and keep cloth off it.`,
       lightId: light.id,
-      how: `Asked from half power with a gel or a closed modifier (assumption). The maker’s limit ${isLamp(numbers) ? 'of what may be before it' : 'on pops in a row'} decides.`,
+      how: `Said from half power with a gel or a closed modifier (assumption). The maker’s limit ${isLamp(numbers) ? 'of what may be before it' : 'on pops in a row'} decides.`,
     })
   }
   return cautions
@@ -180,7 +180,7 @@ function eyeCautions(reading: SetupReading, whole: WholeSetup, unit: LengthUnit)
       title: `The ${purposeWord(light.purpose).toLowerCase()} is close to the face`,
       words: `${lengthLabel(light.distanceM, unit)} from the eyes. Tell the sitter before it ${light.isLamp ? 'is switched on' : 'flashes'}, begin low, and mind hair and lashes near a hot ${light.isLamp ? 'lamp' : 'head'}.`,
       lightId: light.lightId,
-      how: `Asked under ${exactLabel(NEAR_M, unit)} from the edge of its face (assumption).`,
+      how: `Said under ${exactLabel(NEAR_M, unit)} from the edge of its face (assumption).`,
     })),
   ]
 }

@@ -15,6 +15,7 @@ type Screen = { name: string; path: string; see: RegExp; role: Role }
 const SCREENS: readonly Screen[] = [
   { name: 'shoots', path: '/', see: /^Shoots$/, role: 'photographer' },
   { name: 'kit-room', path: '/studio/:studio/kit', see: /Kit room/, role: 'photographer' },
+  { name: 'recipes', path: '/studio/:studio/recipes', see: /Recipes/, role: 'photographer' },
   { name: 'studio-people', path: '/studio/:studio/people', see: /People/, role: 'photographer' },
   { name: 'me', path: '/me', see: /Ines Marlow|You/, role: 'photographer' },
   { name: 'brief', path: 'brief', see: /^Brief$/, role: 'photographer' },
@@ -31,6 +32,23 @@ const SCREENS: readonly Screen[] = [
 async function settle(page: Page): Promise<void> {
   await page.waitForLoadState('networkidle')
   await page.evaluate(() => document.fonts.ready.then(() => undefined))
+}
+
+/** Pictures that are computed on the screen are there in full, as far as there are any. */
+async function settleFrames(page: Page): Promise<void> {
+  const strip = page.getByRole('region', { name: 'Test frames' })
+  if (await strip.isVisible()) await expect(strip).toHaveAttribute('data-quality', 'fine', { timeout: 30_000 })
+}
+
+/** The test frame of the setup on the screen, in large. */
+async function inspectLarge(page: Page, size: string): Promise<void> {
+  await page.getByRole('region', { name: 'Test frames' }).getByRole('button', { name: /Main/ }).click()
+  const dialog = page.getByRole('dialog')
+  await expect(dialog.getByText('A study from the numbers, not a promise.')).toBeVisible()
+  if (FOLDER !== undefined) await expect(dialog.getByText('In full.')).toBeVisible({ timeout: 90_000 })
+  await inspect(page, 'test-frame')
+  await take(page, 'test-frame', size)
+  await page.keyboard.press('Escape')
 }
 
 /** Nothing serious by axe, and nothing wider than the screen. */
@@ -79,8 +97,10 @@ for (const [size, viewport] of [
           await page.goto(path.startsWith('/') ? path : `${shoot}/${path}`)
           await expect(page.getByRole('heading', { name: screen.see }).first()).toBeVisible()
           await settle(page)
+          await settleFrames(page)
           await inspect(page, screen.name)
           await take(page, screen.name, size)
+          if (screen.name === 'setup') await inspectLarge(page, size)
         }
         expect(errors).toEqual([])
         await context.close()

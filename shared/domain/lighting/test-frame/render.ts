@@ -82,6 +82,8 @@ export function renderFrame(scene: Scene, quality: Quality, width: number, heigh
 }
 
 const hit = emptyHit()
+/** Spots of the band at work, filled anew for every one: making them anew would keep the collector busy. */
+const spots: Spot[] = []
 
 function look(stage: Stage, into: Layers, column: number, row: number, spot: Spot): { depth: number; mark: number } {
   const { view, lens } = stage.scene
@@ -185,8 +187,9 @@ function renderBand(
   const top = Math.max(0, fromRow - SHARE_PX)
   const bottom = Math.min(height, toRow + SHARE_PX)
   const count = width * (bottom - top)
+  while (spots.length < count) spots.push(emptySpot())
   const band: Band = {
-    spots: Array.from({ length: count }, emptySpot),
+    spots,
     seen: new Uint8Array(count),
     depth: new Float32Array(count),
     mark: new Int32Array(count),
@@ -277,7 +280,7 @@ function sharedVisibility(
   toRow: number,
   see: (spot: Spot, first: number) => number,
 ): Float32Array {
-  const raw = new Float32Array(band.spots.length)
+  const raw = new Float32Array(band.seen.length)
   for (let row = top; row < bottom; row++) {
     for (let column = 0; column < width; column++) {
       const at = (row - top) * width + column

@@ -173,7 +173,7 @@ test('two people drag different lights at once and both see both', async ({ brow
   const crew = await inLighting(browser, baseURL ?? '', DESK, 'crew')
   await crew.page.goto(path)
   await expect(part(crew.page, 'Main')).toBeVisible()
-  await lead.page.getByRole('button', { name: 'Readings' }).click()
+  await lead.page.getByRole('button', { name: 'Readings', exact: true }).click()
   const stood = {
     main: (await labelOf(lead.page, 'Main')) ?? '',
     background: (await labelOf(lead.page, 'Background light')) ?? '',
@@ -198,7 +198,7 @@ test('two people drag different lights at once and both see both', async ({ brow
 
   await test.step('a drop in the plan leaves the height that somebody else types meanwhile', async () => {
     await hold(lead.page, part(lead.page, 'Main'), 20, 20)
-    await crew.page.locator('aside').getByRole('button', { name: 'Readings' }).click()
+    await crew.page.locator('aside').getByRole('button', { name: 'Readings', exact: true }).click()
     await part(crew.page, 'Main', 'side').click()
     const height = crew.page.getByRole('group', { name: 'Where it stands' }).getByLabel('Height')
     await height.fill('2.35')

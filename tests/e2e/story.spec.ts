@@ -62,7 +62,7 @@ test('four people plan a shoot from nothing and follow it on a phone', async () 
       .first()
       .fill('44')
     await dialog.getByRole('button', { name: 'Save', exact: true }).click()
-    await expect(lead.getByText('Pocket flash, guide number 44')).toBeVisible()
+    await expect(lead.getByRole('button', { name: 'Pocket flash, guide number 44', exact: true })).toBeVisible()
   })
 
   await test.step('starts a shoot and writes the brief', async () => {

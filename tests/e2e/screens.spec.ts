@@ -34,8 +34,9 @@ async function settle(page: Page): Promise<void> {
   await page.evaluate(() => document.fonts.ready.then(() => undefined))
 }
 
-/** Pictures that are computed on the screen are there in full, as far as there are any. */
+/** For the README: pictures that are computed on the screen are there in full, as far as there are any. */
 async function settleFrames(page: Page): Promise<void> {
+  if (FOLDER === undefined) return
   const strip = page.getByRole('region', { name: 'Test frames' })
   if (await strip.isVisible()) await expect(strip).toHaveAttribute('data-quality', 'fine', { timeout: 30_000 })
 }
@@ -100,7 +101,8 @@ for (const [size, viewport] of [
           await settleFrames(page)
           await inspect(page, screen.name)
           await take(page, screen.name, size)
-          if (screen.name === 'setup') await inspectLarge(page, size)
+          // One size is enough for axe; the picture is being computed meanwhile.
+          if (screen.name === 'setup' && (FOLDER !== undefined || size === 'phone')) await inspectLarge(page, size)
         }
         expect(errors).toEqual([])
         await context.close()

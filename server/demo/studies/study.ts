@@ -1,3 +1,4 @@
+import { viewAlong } from '#shared/domain/lighting/frame.ts'
 import { reflectedRgb, skinRgb } from '#shared/domain/lighting/appearance.ts'
 import type { Appearance, Background, Point, Prop } from '#shared/domain/lighting/schema.ts'
 import { lightColour } from '#shared/domain/lighting/test-frame/light-colour.ts'
@@ -63,18 +64,11 @@ function viewOf({ camera, size }: Study): Scene['view'] {
   const [x, y, z] = camera.aim.map((value, axis) => value - (camera.at[axis] ?? 0))
   const length = Math.hypot(x ?? 0, y ?? 0, z ?? 0)
   const forward: Point = [(x ?? 0) / length, (y ?? 0) / length, (z ?? 0) / length]
-  const flat = Math.hypot(forward[0], forward[2])
-  const right: Point = [-forward[2] / flat, 0, forward[0] / flat]
-  const up: Point = [
-    right[1] * forward[2] - right[2] * forward[1],
-    right[2] * forward[0] - right[0] * forward[2],
-    right[0] * forward[1] - right[1] * forward[0],
-  ]
   const [width, height] = size
   // The long side of the frame along the long side of the picture.
   const half = 18 / camera.focalMm
   const most = Math.max(width, height)
-  return { at: camera.at, forward, right, up, tanAcross: (half * width) / most, tanUp: (half * height) / most }
+  return viewAlong(camera.at, forward, (half * width) / most, (half * height) / most)
 }
 
 function emitterOf(light: StudyLight, index: number): Emitter {

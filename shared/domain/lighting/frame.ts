@@ -26,7 +26,7 @@ export type View = { at: Point; forward: Point; right: Point; up: Point; tanAcro
 const NO_DIRECTION_M = 1e-6
 
 /** Looking along `forward` (a unit vector), upright; straight up or down the top of the picture is away from z. */
-function viewAlong(at: Point, forward: Point, tanAcross: number, tanUp: number): View {
+export function viewAlong(at: Point, forward: Point, tanAcross: number, tanUp: number): View {
   const flat = Math.hypot(forward[0], forward[2])
   const away: Point = flat < NO_DIRECTION_M ? [0, 0, -1] : [forward[0] / flat, 0, forward[2] / flat]
   const up: Point = [-away[0] * forward[1], flat, -away[2] * forward[1]]

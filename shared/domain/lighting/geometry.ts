@@ -36,6 +36,30 @@ export function angleBetweenDeg(a: Point, b: Point): number {
   return (Math.acos(Math.min(1, Math.max(-1, dot(a, b) / lengths))) * 180) / Math.PI
 }
 
+export type Axes = { look: Point; side: Point; up: Point }
+
+/**
+ * Unit vectors of something at `at` that looks at `aim`: where it looks, to its side, and up along its face. Without a
+ * direction it looks along `otherwise`; looking straight up or down its side is +x.
+ */
+export function axesOf(
+  at: readonly [number, number, number],
+  aim: readonly [number, number, number],
+  otherwise: Point,
+): Axes {
+  const [dx, dy, dz] = [aim[0] - at[0], aim[1] - at[1], aim[2] - at[2]]
+  const length = Math.hypot(dx, dy, dz)
+  const look: Point = length < 1e-6 ? otherwise : [dx / length, dy / length, dz / length]
+  const flat = Math.hypot(look[0], look[2])
+  const side: Point = flat < 1e-6 ? [1, 0, 0] : [-look[2] / flat, 0, look[0] / flat]
+  const up: Point = [
+    side[1] * look[2] - side[2] * look[1],
+    side[2] * look[0] - side[0] * look[2],
+    side[0] * look[1] - side[1] * look[0],
+  ]
+  return { look, side, up }
+}
+
 /** The place on the origin (the nearest to it, ties by id), or null when the setup has no sitter. */
 export function mainPlace(places: readonly SitterPlace[]): SitterPlace | null {
   const reach = (place: SitterPlace) => Math.hypot(place.at[0], place.at[1])

@@ -4,7 +4,7 @@ import { boomBalanceOf } from './boom.ts'
 import type { Caution } from './cautions.ts'
 import { type Clearance, type Orientation, type View, clearanceOf, hiddenBySitter, viewOf } from './frame.ts'
 import { faceOf } from './light-output.ts'
-import { minus, panelNormal } from './geometry.ts'
+import { axesOf, minus, panelNormal } from './geometry.ts'
 import type { Light, Point, Prop } from './schema.ts'
 import { inSentence, purposeWord } from './words.ts'
 
@@ -20,16 +20,7 @@ const HEAD_HALF_M = 0.08
 
 /** Corners of a head: its face turned to its aim, and the housing behind. */
 function headCorners(light: Light): Point[] {
-  const [dx, dy, dz] = minus(light.aim, light.at)
-  const length = Math.hypot(dx, dy, dz) || 1
-  const flat = Math.hypot(dx, dz)
-  const look: Point = [dx / length, dy / length, dz / length]
-  const side: Point = flat < 1e-6 ? [1, 0, 0] : [-dz / flat, 0, dx / flat]
-  const up: Point = [
-    side[1] * look[2] - side[2] * look[1],
-    side[2] * look[0] - side[0] * look[2],
-    side[0] * look[1] - side[1] * look[0],
-  ]
+  const { look, side, up } = axesOf(light.at, light.aim, [0, 0, 0])
   const { widthM, heightM } = faceOf(light)
   const corner = (across: number, upward: number, back: number): Point => [
     light.at[0] + side[0] * across + up[0] * upward - look[0] * back,

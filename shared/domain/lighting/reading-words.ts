@@ -1,5 +1,8 @@
 import { type LengthUnit, METRES_PER_INCH, lengthLabel } from '#shared/units/length.ts'
-import type { Orientation } from './frame.ts'
+import type { BoomBalance } from './boom.ts'
+import type { Clearance, Orientation } from './frame.ts'
+import { shutterLabel } from './stops.ts'
+import type { Sync } from './sync.ts'
 import { stopsLabel } from './words.ts'
 
 /** Steps by which a colour is called off from the white balance, mired (assumptions). */
@@ -21,6 +24,23 @@ export function underWords(underStops: number, what: string): string {
   if (label === '') return `level with ${what}`
   const isOne = /^[1⅓⅔]$/.test(label)
   return `${label} ${isOne ? 'stop' : 'stops'} ${underStops > 0 ? 'under' : 'over'} ${what}`
+}
+
+/** Whether flash lights the whole frame at the shutter time, against the fastest at which it does. */
+export function syncWords({ isTooFast, isAssumed, limitS }: Sync): string {
+  const limit = shutterLabel(limitS)
+  if (isTooFast) return `faster than ${limit}: a part of the frame stays dark`
+  return `flash lights the whole frame up to ${limit}${isAssumed ? ' (assumed)' : ''}`
+}
+
+/** Where a thing stands against the edge of the picture it is nearest to. */
+export function sightWords({ marginM, edge }: Clearance): string {
+  return marginM < 0 ? `in the picture, past the ${edge} edge` : `clears the ${edge} edge`
+}
+
+/** How a boom's counterweight is made up. */
+export function counterweightWords({ counterweightKg, bags }: Pick<BoomBalance, 'counterweightKg' | 'bags'>): string {
+  return counterweightKg > 0 ? `${bags}, slid until it balances` : 'its own arm is enough'
 }
 
 /** A length in metres shorter than a hand: "30 mm", "1.2″". */

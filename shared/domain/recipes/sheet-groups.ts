@@ -2,11 +2,14 @@ import { loadKgOf } from '#shared/domain/lighting/boom.ts'
 import { kelvinLabel } from '#shared/domain/lighting/gel.ts'
 import { sightsOf } from '#shared/domain/lighting/in-frame.ts'
 import {
+  counterweightWords,
   depthLabel,
   frameWords,
   popsWords,
+  sightWords,
   sizeLabel,
   smallLabel,
+  syncWords,
   underWords,
   whiteWords,
 } from '#shared/domain/lighting/reading-words.ts'
@@ -112,19 +115,17 @@ function lensLines({ whole, reading, use, unit }: SheetGroupsInput): SheetLine[]
         more: words,
       })),
     ),
-    ...sightsOf(whole, use.orientations).map(({ name, clearance: { marginM, edge } }) => ({
+    ...sightsOf(whole, use.orientations).map(({ name, clearance }) => ({
       label: upper(name),
-      value: exact(Math.abs(marginM)),
-      more: marginM < 0 ? `in the picture, past the ${edge} edge` : `clears the ${edge} edge`,
+      value: exact(Math.abs(clearance.marginM)),
+      more: sightWords(clearance),
     })),
     ...(sync
       ? [
           {
             label: 'Shutter against sync',
             value: shutterLabel(sync.shutterS),
-            more: sync.isTooFast
-              ? `faster than ${shutterLabel(sync.limitS)}: a part of the frame stays dark`
-              : `flash lights the whole frame up to ${shutterLabel(sync.limitS)}${sync.isAssumed ? ' (assumed)' : ''}`,
+            more: syncWords(sync),
           },
         ]
       : []),
@@ -161,7 +162,7 @@ function carryLines({ whole, reading, unit, names }: SheetGroupsInput): SheetLin
             {
               label: `Counterweight of the ${(names[index] ?? 'light').toLowerCase()}`,
               value: `${boom.counterweightKg.toFixed(1)} kg`,
-              more: boom.counterweightKg > 0 ? `${boom.bags}, slid until it balances` : 'its own arm is enough',
+              more: counterweightWords(boom),
             },
           ]
         : []),

@@ -1,6 +1,6 @@
 import { boomBalanceOf } from '#shared/domain/lighting/boom.ts'
 import { beamOf, faceOf } from '#shared/domain/lighting/light-output.ts'
-import { facePoint } from '#shared/domain/lighting/geometry.ts'
+import { type Axes, axesOf, facePoint } from '#shared/domain/lighting/geometry.ts'
 import { FRAME_LONG_MM, FRAME_SHORT_MM, angleOfViewDeg } from '#shared/domain/lighting/lens.ts'
 import type { Light, Point } from '#shared/domain/lighting/schema.ts'
 import type { WholeSetup } from '#shared/domain/plan/read-plan.ts'
@@ -14,21 +14,11 @@ export type LightForm = {
   ballM: number | null
 }
 
-type Frame = { at: Point; look: Point; side: Point; up: Point }
+type Frame = Axes & { at: Point }
 
 /** Unit vectors of a light: where it looks, to its side, and up along its face. */
 export function frameOf(light: Light): Frame {
-  const [dx, dy, dz] = [light.aim[0] - light.at[0], light.aim[1] - light.at[1], light.aim[2] - light.at[2]]
-  const length = Math.hypot(dx, dy, dz)
-  const look: Point = length < 1e-6 ? [0, 0, 1] : [dx / length, dy / length, dz / length]
-  const flat = Math.hypot(look[0], look[2])
-  const side: Point = flat < 1e-6 ? [1, 0, 0] : [-look[2] / flat, 0, look[0] / flat]
-  const up: Point = [
-    side[1] * look[2] - side[2] * look[1],
-    side[2] * look[0] - side[0] * look[2],
-    side[0] * look[1] - side[1] * look[0],
-  ]
-  return { at: light.at, look, side, up }
+  return { at: light.at, ...axesOf(light.at, light.aim, [0, 0, 1]) }
 }
 
 function put({ at, look, side, up }: Frame, across: number, upward: number, forward: number): Point {

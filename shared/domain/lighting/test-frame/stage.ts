@@ -1,4 +1,5 @@
 import { type Profile, profileOf } from '../beam.ts'
+import { axesOf } from '../geometry.ts'
 import { makeBody } from './body.ts'
 import { clamp } from './field.ts'
 import { makeHead, type HeadShape } from './head.ts'
@@ -160,18 +161,8 @@ function facePoints(emitter: Emitter, distanceM: number): (readonly [number, num
 }
 
 function stageEmitter(emitter: Emitter): StagedEmitter {
-  const dx = emitter.aim[0] - emitter.at[0]
-  const dy = emitter.aim[1] - emitter.at[1]
-  const dz = emitter.aim[2] - emitter.at[2]
-  const length = Math.hypot(dx, dy, dz)
-  const axis: [number, number, number] = length < 1e-6 ? [0, 0, -1] : [dx / length, dy / length, dz / length]
-  const flat = Math.hypot(axis[0], axis[2])
-  const side: [number, number, number] = flat < 1e-6 ? [1, 0, 0] : [-axis[2] / flat, 0, axis[0] / flat]
-  const up: [number, number, number] = [
-    side[1] * axis[2] - side[2] * axis[1],
-    side[2] * axis[0] - side[0] * axis[2],
-    side[0] * axis[1] - side[1] * axis[0],
-  ]
+  const { look: axis, side, up } = axesOf(emitter.at, emitter.aim, [0, 0, -1])
+  const length = Math.hypot(...emitter.aim.map((value, index) => value - (emitter.at[index] ?? 0)))
   const profile = profileOf(emitter.beam)
   const area = emitter.shape === 'rectangle' ? 1 : Math.PI / 4
   return {

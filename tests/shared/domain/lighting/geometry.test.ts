@@ -1,6 +1,7 @@
 import { describe, expect, it } from 'vitest'
 import {
   angleBetweenDeg,
+  axesOf,
   distanceBetween,
   dot,
   facePoint,
@@ -68,5 +69,27 @@ describe('lengthOf', () => {
   it('is Pythagoras in three dimensions', () => {
     expect(lengthOf([2, 3, 6])).toBe(7)
     expect(lengthOf([0, 0, 0])).toBe(0)
+  })
+})
+
+describe('axesOf', () => {
+  it('gives unit vectors at right angles, the side level and to the right of where it looks', () => {
+    for (const aim of [
+      [1, 2, 3],
+      [-2, 0.5, -1],
+      [0, 0, -4],
+      [3, -1, 0],
+    ] as const) {
+      const { look, side, up } = axesOf([0, 1, 0], aim, [0, 0, 1])
+      for (const axis of [look, side, up]) expect(lengthOf(axis)).toBeCloseTo(1, 12)
+      for (const product of [dot(look, side), dot(side, up), dot(up, look), side[1]]) expect(product).toBeCloseTo(0, 12)
+      expect(up[1]).toBeGreaterThan(0)
+    }
+    expect(axesOf([0, 0, 0], [0, 0, -2], [0, 0, 1]).side).toEqual([1, 0, 0])
+  })
+
+  it('has a side also straight down, and a direction where it looks at its own place', () => {
+    expect(axesOf([0, 2, 0], [0, 0, 0], [0, 0, 1])).toMatchObject({ look: [0, -1, 0], side: [1, 0, 0] })
+    expect(axesOf([1, 1, 1], [1, 1, 1], [0, 0, -1]).look).toEqual([0, 0, -1])
   })
 })

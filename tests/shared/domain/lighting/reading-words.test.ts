@@ -1,10 +1,13 @@
 import { describe, expect, it } from 'vitest'
 import {
+  counterweightWords,
   depthLabel,
   frameWords,
   popsWords,
+  sightWords,
   sizeLabel,
   smallLabel,
+  syncWords,
   underWords,
   whiteWords,
 } from '#shared/domain/lighting/reading-words.ts'
@@ -70,5 +73,19 @@ describe('frameWords', () => {
       'Frame across',
       'Square frame',
     ])
+  })
+})
+
+describe('syncWords, sightWords, counterweightWords', () => {
+  it('say what the number beside them means', () => {
+    const sync = { shutterS: 1 / 160, limitS: 1 / 200, isAssumed: true, isTooFast: false, units: [] }
+    expect(syncWords(sync)).toBe('flash lights the whole frame up to 1/200 (assumed)')
+    expect(syncWords({ ...sync, isTooFast: true })).toBe('faster than 1/200: a part of the frame stays dark')
+    expect(sightWords({ marginM: 0.2, edge: 'left' })).toBe('clears the left edge')
+    expect(sightWords({ marginM: -0.1, edge: 'top' })).toBe('in the picture, past the top edge')
+    expect(counterweightWords({ counterweightKg: 5.5, bags: 'a bag of 5 kg' })).toBe(
+      'a bag of 5 kg, slid until it balances',
+    )
+    expect(counterweightWords({ counterweightKg: 0, bags: '' })).toBe('its own arm is enough')
   })
 })

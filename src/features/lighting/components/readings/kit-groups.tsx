@@ -2,7 +2,15 @@ import { loadKgOf } from '#shared/domain/lighting/boom.ts'
 import { sightsOf } from '#shared/domain/lighting/in-frame.ts'
 import { LONG_LOAD_SHARE, type MainsLoad } from '#shared/domain/lighting/mains.ts'
 import type { Supply } from '#shared/domain/lighting/power.ts'
-import { depthLabel, frameWords, popsWords, sizeLabel } from '#shared/domain/lighting/reading-words.ts'
+import {
+  counterweightWords,
+  depthLabel,
+  frameWords,
+  popsWords,
+  sightWords,
+  sizeLabel,
+  syncWords,
+} from '#shared/domain/lighting/reading-words.ts'
 import type { SetupReading } from '#shared/domain/lighting/readings.ts'
 import { type Light, isLamp } from '#shared/domain/lighting/schema.ts'
 import type { SetupUse } from '#shared/domain/lighting/setup-use.ts'
@@ -131,15 +139,15 @@ function LensLines({ whole, reading, use, nameOfPlace }: Omit<KitGroupsProps, 'g
 
 function SightLines({ whole, use }: Pick<KitGroupsProps, 'whole' | 'use'>) {
   const unit = useLengthUnit()
-  return sightsOf(whole, use.orientations).map(({ id, name, clearance: { marginM, edge } }) => {
-    const isIn = marginM < 0
+  return sightsOf(whole, use.orientations).map(({ id, name, clearance }) => {
+    const { marginM } = clearance
     return (
       <Line
         key={id}
         label={`${name.charAt(0).toUpperCase()}${name.slice(1)}`}
         value={lengthLabel(Math.abs(marginM), unit, true)}
-        words={isIn ? `in the picture, past the ${edge} edge` : `clears the ${edge} edge`}
-        tone={isIn ? 'velvet' : 'ink'}
+        words={sightWords(clearance)}
+        tone={marginM < 0 ? 'velvet' : 'ink'}
       >
         <Workings
           formula="corners projected through the camera"
@@ -157,11 +165,7 @@ function SyncLine({ sync }: { sync: Sync }) {
     <Line
       label="Shutter against sync"
       value={shutterLabel(sync.shutterS)}
-      words={
-        sync.isTooFast
-          ? `faster than ${limit}: a part of the frame stays dark`
-          : `flash lights the whole frame up to ${limit}${sync.isAssumed ? ' (assumed)' : ''}`
-      }
+      words={syncWords(sync)}
       tone={sync.isTooFast ? 'velvet' : 'ink'}
     >
       <Workings
@@ -264,7 +268,7 @@ function SupportLines({ whole, reading }: Pick<KitGroupsProps, 'whole' | 'readin
               key={`${light.id}:boom`}
               label={`Counterweight of the ${name.toLowerCase()}`}
               value={`${boom.counterweightKg.toFixed(1)} kg`}
-              words={boom.counterweightKg > 0 ? `${boom.bags}, slid until it balances` : 'its own arm is enough'}
+              words={counterweightWords(boom)}
             >
               <Workings
                 formula="W = (w·a + m(a − b)/2) / b"
